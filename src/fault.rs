@@ -1,0 +1,56 @@
+//! Every message a user can get: what was found, where, and what to write instead.
+//!
+//! Faults carry data; their wording lives here and nowhere else.
+
+mod cell;
+mod file;
+mod rule;
+
+pub use cell::{CellFault, CellFaultKind};
+pub use file::FileFault;
+pub use rule::{RuleFault, RuleFaults};
+
+/// Why nothing could be written.
+#[derive(Debug, thiserror::Error)]
+pub enum Refusal {
+    /// The inventory or the output could not be used.
+    #[error(transparent)]
+    File(#[from] FileFault),
+    /// A rule file means nothing that can be applied.
+    #[error(transparent)]
+    Rules(#[from] RuleFaults),
+    /// The command line asks for something that is not there.
+    #[error("{0}")]
+    Usage(String),
+}
+
+/// The known word closest to one that is not known, if any is close.
+pub fn nearest<'word>(unknown: &str, known: impl IntoIterator<Item = &'word str>) -> Option<&'word str> {
+    known
+        .into_iter()
+        .map(|word| (strsim::damerau_levenshtein(unknown, word), word))
+        .filter(|(distance, word)| *distance <= 1 + word.len() / 4)
+        .min()
+        .map(|(_, word)| word)
+}
+
+/// A noun with its number: `1 row`, `2 rows`.
+pub fn count(number: usize, singular: &str, plural: &str) -> String {
+    if number == 1 {
+        format!("1 {singular}")
+    } else {
+        format!("{number} {plural}")
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::nearest;
+
+    #[test]
+    fn only_a_close_word_is_suggested() {
+        let known = ["eu-reach-pbt", "eu-clp-pbt-pmt", "un-stockholm-annex-d"];
+        assert_eq!(nearest("eu-reach-pbr", known), Some("eu-reach-pbt"));
+        assert_eq!(nearest("kinetics", known), None);
+    }
+}

@@ -1,0 +1,107 @@
+//! EC numbers and their check digit.
+
+use std::fmt;
+
+/// An EC number (or list number) whose check digit is right, written `NNN-NNN-R`.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord, Hash)]
+pub struct EcNumber([u8; 7]);
+
+/// Why a text is no EC number.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, thiserror::Error)]
+pub enum EcError {
+    /// Not three, three and one characters.
+    #[error("an EC number has three, three and one characters, for example 200-024-3")]
+    Form,
+    /// The check digit does not fit.
+    #[error("the check digit should be {expected}")]
+    CheckDigit {
+        /// The digit that would fit.
+        expected: u8,
+    },
+    /// The first six characters leave a remainder of 10, for which no digit exists.
+    #[error("no EC number starts with these six characters")]
+    NoSuchNumber,
+}
+
+impl EcNumber {
+    /// The number written with hyphens.
+    ///
+    /// (N1 + 2 N2 + 3 N3 + 4 N4 + 5 N5 + 6 N6) mod 11 is the check digit. Where the remainder is 10, numbers of the
+    /// 4xx series were issued with check digit 1 (second-hand). Letters count A = 10, B = 11, ... without I, L and O.
+    pub fn parse(text: &str) -> Result<Self, EcError> {
+        let bytes: Vec<u8> = text.bytes().map(|byte| byte.to_ascii_uppercase()).collect();
+        let [a, b, c, b'-', d, e, f, b'-', check] = bytes.as_slice() else {
+            return Err(EcError::Form);
+        };
+        let body = [*a, *b, *c, *d, *e, *f];
+        let mut sum = 0;
+        for (factor, byte) in (1u32..).zip(body) {
+            sum += factor * character_value(byte).ok_or(EcError::Form)?;
+        }
+        if !check.is_ascii_digit() {
+            return Err(EcError::Form);
+        }
+        let found = check - b'0';
+        let expected = u8::try_from(sum % 11).unwrap_or(10);
+        let issued_with_one = expected == 10 && *a == b'4' && found == 1;
+        if expected == found || issued_with_one {
+            Ok(Self([*a, *b, *c, *d, *e, *f, *check]))
+        } else if expected == 10 {
+            Err(EcError::NoSuchNumber)
+        } else {
+            Err(EcError::CheckDigit { expected })
+        }
+    }
+}
+
+fn character_value(byte: u8) -> Option<u32> {
+    const LETTERS: &[u8] = b"ABCDEFGHJKMNPQRSTUVWXYZ";
+    if byte.is_ascii_digit() {
+        return Some(u32::from(byte - b'0'));
+    }
+    let position = LETTERS.iter().position(|letter| *letter == byte)?;
+    u32::try_from(position).ok().map(|place| place + 10)
+}
+
+impl fmt::Display for EcNumber {
+    fn fmt(&self, formatter: &mut fmt::Formatter<'_>) -> fmt::Result {
+        let [a, b, c, d, e, f, check] = self.0.map(char::from);
+        write!(formatter, "{a}{b}{c}-{d}{e}{f}-{check}")
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::{EcError, EcNumber};
+
+    #[test]
+    fn well_known_numbers_are_read_and_written_the_same() {
+        // Formaldehyde, DDT, DEHP; a list number with a letter as published in the agency's announcement.
+        for text in ["200-001-8", "200-024-3", "204-211-0", "A00-001-5"] {
+            assert_eq!(EcNumber::parse(text).unwrap().to_string(), text);
+        }
+    }
+
+    #[test]
+    fn a_wrong_check_digit_is_refused_with_the_right_one() {
+        assert_eq!(
+            EcNumber::parse("200-024-4"),
+            Err(EcError::CheckDigit { expected: 3 })
+        );
+    }
+
+    #[test]
+    fn a_remainder_of_ten_is_accepted_with_one_in_the_4xx_series_only() {
+        // 4 + 0 + 0 + 0 + 0 + 6 x 1 = 10.
+        assert!(EcNumber::parse("400-001-1").is_ok());
+        // 2 + 2 + 0 + 0 + 0 + 6 x 1 = 10.
+        assert_eq!(EcNumber::parse("210-001-1"), Err(EcError::NoSuchNumber));
+    }
+
+    #[test]
+    fn other_forms_are_refused() {
+        for text in ["", "200-024", "200-024-33", "2OO-024-3", "200/024/3"] {
+            assert_eq!(EcNumber::parse(text), Err(EcError::Form), "{text}");
+        }
+    }
+}
