@@ -3,6 +3,10 @@
 //!
 //! Equations and their numbers live in `rules/relations.toml`; this module applies them. It ranks and judges nothing.
 
+mod estimate;
+
+pub use estimate::{Estimate, Ionisation, LogKow};
+
 use crate::quantity::Interval;
 use crate::rules::Checked;
 use crate::substance::{Basis, Property};
@@ -67,4 +71,47 @@ pub struct DefaultSd {
     pub sd: f64,
     /// Where it comes from, or `assumed`.
     pub source: String,
+}
+
+impl Relations {
+    /// The default standard deviation of a value, log units; 0.3 where no line of the file fits.
+    pub fn default_sd(&self, property: Property, basis: Basis, value: f64) -> f64 {
+        const WHERE_NOTHING_FITS: f64 = 0.3;
+        let family = family(property);
+        self.default_sds
+            .iter()
+            .find(|line| {
+                (line.property == property.id() || line.property == family || line.property == "any")
+                    && (line.bases.is_empty() || line.bases.contains(&basis))
+                    && line.above.is_none_or(|above| value > above)
+            })
+            .map_or(WHERE_NOTHING_FITS, |line| line.sd)
+    }
+}
+
+/// The name under which a group of properties shares a default standard deviation.
+fn family(property: Property) -> &'static str {
+    match property {
+        Property::HalfLife(_)
+        | Property::HydrolysisHalfLife
+        | Property::PhotolysisHalfLife
+        | Property::DissipationHalfLife => "half-life",
+        Property::LongTermToxicity | Property::AcuteToxicity => "toxicity",
+        Property::LogKow
+        | Property::LogD
+        | Property::LogKoa
+        | Property::WaterSolubility
+        | Property::MeltingPoint
+        | Property::BoilingPoint
+        | Property::VapourPressure
+        | Property::HenryConstant
+        | Property::PkaAcid
+        | Property::PkaBase
+        | Property::Koc
+        | Property::Bcf
+        | Property::Baf
+        | Property::Bmf
+        | Property::Tmf
+        | Property::MolarMass => property.id(),
+    }
 }

@@ -51,3 +51,10 @@ pub enum Blocks {
     /// A clearing by these, and by every value derived from them. May be empty.
     Subjects(BTreeSet<Subject>),
 }
+
+impl Caution {
+    /// What in the substance raises the caution, if anything does.
+    pub fn is_raised_by(&self, _substance: &crate::substance::Substance) -> Option<String> {
+        None
+    }
+}

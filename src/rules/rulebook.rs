@@ -26,6 +26,8 @@ pub struct Rulebook {
     pub out_of_scope: Vec<String>,
     /// Content in a mixture from which a component counts, %.
     pub mixture_limit: Option<f64>,
+    /// BCF of fish with a stated lipid content is compared at this content, %; `None` compares it as reported.
+    pub bcf_at_lipid: Option<f64>,
     /// Half-lives are compared at this temperature; `None` compares them as reported.
     pub half_life_at: Option<HalfLifeReference>,
     /// The criteria, in file order.

@@ -1,0 +1,150 @@
+//! From the row's readings to evidence, and from its log Kow to estimates.
+
+use crate::evidence::{Evidence, EvidenceSet, Origin, Standing, best_ranked};
+use crate::quantity::{Bound, Interval, Unit};
+use crate::relations::{Estimate, Ionisation, LogKow, Relations};
+use crate::substance::{Basis, Conditions, Property, Reading, Substance};
+
+/// Everything the row says and everything the relations make of it.
+pub fn gather_evidence(substance: &Substance, relations: &Relations) -> EvidenceSet {
+    let mut evidence = EvidenceSet::default();
+    for (property, readings) in &substance.readings {
+        for reading in readings {
+            evidence.push(from_reading(*property, reading, substance, relations));
+        }
+    }
+    for (property, end) in [(Property::Bcf, End::High), (Property::Koc, End::Low), (Property::AcuteToxicity, End::High)] {
+        if let Some(estimate) = estimate(property, end, &evidence, substance, relations) {
+            evidence.push(estimate);
+        }
+    }
+    evidence
+}
+
+/// Whether a pKa of the row puts more than a tenth of the substance into its ionised form somewhere from pH 4 to 9.
+pub fn ionisation(substance: &Substance) -> Ionisation {
+    let acid = substance.readings_of(Property::PkaAcid).iter().any(|reading| may_lie_below(reading, 10.0));
+    let base = substance.readings_of(Property::PkaBase).iter().any(|reading| may_lie_above(reading, 3.0));
+    if acid || base { Ionisation::Ionisable } else { Ionisation::Unknown }
+}
+
+fn may_lie_below(reading: &Reading, limit: f64) -> bool {
+    reading.quantity.interval.low().number().is_none_or(|low| low < limit)
+}
+
+fn may_lie_above(reading: &Reading, limit: f64) -> bool {
+    reading.quantity.interval.high().number().is_none_or(|high| high > limit)
+}
+
+fn from_reading(property: Property, reading: &Reading, substance: &Substance, relations: &Relations) -> Evidence {
+    let mut interval = reading.quantity.interval;
+    let mut lower_bound_by_ionisation = None;
+    if property == Property::LogKow
+        && let Some(neutral) = neutral_share(reading, substance)
+        && neutral < LEAST_NEUTRAL_SHARE
+        && let Ok(opened) = Interval::new(interval.low(), Bound::Unbounded)
+    {
+        interval = opened;
+        lower_bound_by_ionisation = Some(neutral);
+    }
+    Evidence {
+        property,
+        interval,
+        sd: interval.single().map(|value| standard_deviation(property, reading, value, relations)),
+        basis: reading.basis,
+        origin: Origin::Cell(reading.cell.clone()),
+        standing: match reading.conditions.reliability {
+            Some(score) if score >= 3 => Standing::SupportingOnly,
+            Some(_) | None => Standing::Full,
+        },
+        conditions: reading.conditions.clone(),
+        reported: reading.quantity.reported.clone(),
+        lower_bound_by_ionisation,
+    }
+}
+
+/// Below this neutral share a measured log Kow is only a lower bound of that of the neutral form (common practice).
+const LEAST_NEUTRAL_SHARE: f64 = 0.9;
+
+/// The share of the neutral form at the pH of the measurement, where the row gives that pH and a pKa.
+///
+/// Acid 1 / (1 + 10^(pH - pKa)), base 1 / (1 + 10^(pKa - pH)): the mass action law for one group.
+fn neutral_share(reading: &Reading, substance: &Substance) -> Option<f64> {
+    let ph = reading.conditions.ph?;
+    let pka = |property| substance.readings_of(property).iter().find_map(|reading| reading.quantity.single());
+    let acid = pka(Property::PkaAcid).map(|pka| 1.0 / (1.0 + 10f64.powf(ph - pka)));
+    let base = pka(Property::PkaBase).map(|pka| 1.0 / (1.0 + 10f64.powf(pka - ph)));
+    match (acid, base) {
+        (Some(acid), Some(base)) => Some(acid.min(base)),
+        (acid, base) => acid.or(base),
+    }
+}
+
+/// The SD in log units: as written with `±`, else the default, doubled for `~` and `ca.`.
+fn standard_deviation(property: Property, reading: &Reading, value: f64, relations: &Relations) -> f64 {
+    let written = reading.quantity.written_sd.and_then(|sd| log_sd(property, reading.quantity.unit, sd, value));
+    written.unwrap_or_else(|| {
+        let default = relations.default_sd(property, reading.basis, value);
+        if reading.quantity.approximate { 2.0 * default } else { default }
+    })
+}
+
+fn log_sd(property: Property, unit: Unit, written: f64, value: f64) -> Option<f64> {
+    if property.is_logarithmic() || unit == Unit::LogLitrePerKilogram {
+        return Some(written);
+    }
+    // A standard deviation converts like the value itself, since every unit of these properties is a plain factor.
+    let converted = unit.to_canonical(written, None)?;
+    (value > 0.0).then(|| converted / value / std::f64::consts::LN_10)
+}
+
+/// Which end of several log Kow values points to more concern for the target.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+enum End {
+    Low,
+    High,
+}
+
+fn estimate(
+    property: Property,
+    end: End,
+    known: &EvidenceSet,
+    substance: &Substance,
+    relations: &Relations,
+) -> Option<Evidence> {
+    let log_kow = match end {
+        End::High => known.log_kow_used()?,
+        End::Low => best_ranked(known.of(Property::LogKow))
+            .min_by(|one, other| one.lower_value().total_cmp(&other.lower_value()))?,
+    };
+    let entered = LogKow { interval: log_kow.interval, sd: log_kow.sd };
+    let estimate = relations.estimate(property, entered, ionisation(substance))?;
+    let relation = relations.relations.get(estimate.leading)?;
+    let shift = if relation.molar { molar_shift(substance)? } else { 0.0 };
+    let Origin::Cell(log_kow_cell) = &log_kow.origin else { return None };
+    let Estimate { leading, log_value, sd, others, low_side } = estimate;
+    Some(Evidence {
+        property,
+        interval: log_value.map_increasing(|log| 10f64.powf(log + shift)).ok()?,
+        sd,
+        basis: Basis::Estimated,
+        origin: Origin::Relation {
+            relation: leading,
+            log_kow: log_kow.interval,
+            log_kow_sd: log_kow.sd,
+            log_kow_cell: log_kow_cell.clone(),
+            others: others.into_iter().map(|(index, value)| (index, value + shift)).collect(),
+            low_side: low_side.map(|(index, value)| (index, value + shift)),
+        },
+        standing: Standing::Full,
+        conditions: Conditions::default(),
+        reported: String::new(),
+        lower_bound_by_ionisation: None,
+    })
+}
+
+/// log10 of the factor from mol/L to mg/L, where the row gives the molar mass.
+fn molar_shift(substance: &Substance) -> Option<f64> {
+    let molar_mass = substance.readings_of(Property::MolarMass).iter().find_map(|reading| reading.quantity.single())?;
+    (molar_mass > 0.0).then(|| molar_mass.log10() + 3.0)
+}

@@ -1,0 +1,340 @@
+//! One test of a step: which value counts, how it stands to the limit, and what a clear by it could not stand against.
+
+use crate::evidence::{Evidence, Origin, Standing};
+use crate::judge::compare::{hold_against, outcome_of};
+use crate::judge::{Answer, Carries, Closeness, Context, Stop, TestJudgement, TestOutcome, Used};
+use crate::quantity::{Interval, Outcome};
+use crate::rules::{Checked, Limit, Step, Subject, Test, Weight, WhenMissing};
+use crate::substance::{Basis, Compartment, DegradationKind, DegradationTest, Property};
+
+/// Judges one test of a step.
+pub(crate) fn judge_test(context: Context, step: &Step, test: &Test) -> TestJudgement {
+    let judged = match test.subject {
+        Subject::Property(property) => judge_number(context, step, test, property),
+        Subject::ReadyBiodegradability => judge_ready(context, test),
+        Subject::InherentBiodegradability => judge_inherent(context, test),
+        Subject::HazardStatements => judge_statements(context, test),
+    };
+    match (judged, test.missing) {
+        (Some(judged), _) => judged,
+        (None, WhenMissing::Open) => without_value(TestOutcome::Missing),
+        (None, WhenMissing::Fires) => without_value(TestOutcome::Fired),
+    }
+}
+
+fn without_value(outcome: TestOutcome) -> TestJudgement {
+    TestJudgement {
+        outcome,
+        used: Vec::new(),
+        answer: None,
+        closeness: Closeness::Clear,
+        carries: Carries::Screening,
+        stops: Vec::new(),
+    }
+}
+
+// Numbers
+
+fn judge_number(context: Context, step: &Step, test: &Test, property: Property) -> Option<TestJudgement> {
+    let mut used: Vec<Used> = match property {
+        Property::HalfLife(Compartment::Water) => together(context, step, test, &WATERS),
+        Property::HalfLife(Compartment::Sediment) => together(context, step, test, &SEDIMENTS),
+        _ => {
+            let own = most_concerning(context, step, test, property, |interval| outcome_of(test, interval));
+            own.or_else(|| unspecified(context, step, test, property)).into_iter().collect()
+        }
+    };
+    used.sort_by(|one, other| concern(test, other).total_cmp(&concern(test, one)));
+    used.sort_by_key(|value| std::cmp::Reverse(outcome_rank(value.outcome)));
+    let deciding = used.first()?;
+    let outcome = match deciding.outcome {
+        Outcome::Fired => TestOutcome::Fired,
+        Outcome::Undecided => TestOutcome::Undecided,
+        Outcome::Clear => TestOutcome::Clear,
+    };
+    let closeness = deciding.closeness;
+    let carries = carries(context, test, outcome, &used);
+    let stops = stops(context, test, &used);
+    Some(TestJudgement { outcome, used, answer: None, closeness, carries, stops })
+}
+
+const WATERS: [Property; 3] = [
+    Property::HalfLife(Compartment::FreshWater),
+    Property::HalfLife(Compartment::MarineWater),
+    Property::HalfLife(Compartment::Water),
+];
+const SEDIMENTS: [Property; 3] = [
+    Property::HalfLife(Compartment::FreshSediment),
+    Property::HalfLife(Compartment::MarineSediment),
+    Property::HalfLife(Compartment::Sediment),
+];
+
+/// The value of each compartment that has one.
+fn together(context: Context, step: &Step, test: &Test, compartments: &[Property; 3]) -> Vec<Used> {
+    compartments
+        .iter()
+        .filter_map(|property| {
+            most_concerning(context, step, test, *property, |interval| outcome_of(test, interval))
+        })
+        .collect()
+}
+
+/// A half-life in a compartment not further specified stands for each such compartment that has no value of its own:
+/// beyond the highest limit it could stand for it fires, within the lowest it is clear.
+fn unspecified(context: Context, step: &Step, test: &Test, property: Property) -> Option<Used> {
+    let (unspecified, group) = match property {
+        Property::HalfLife(Compartment::FreshWater | Compartment::MarineWater) => {
+            (Property::HalfLife(Compartment::Water), WATERS)
+        }
+        Property::HalfLife(Compartment::FreshSediment | Compartment::MarineSediment) => {
+            (Property::HalfLife(Compartment::Sediment), SEDIMENTS)
+        }
+        _ => return None,
+    };
+    let standing_for: Vec<&Test> = step
+        .tests
+        .iter()
+        .filter(|other| match other.subject {
+            Subject::Property(other_property) => {
+                group.contains(&other_property) && counted(context, step, other, other_property).next().is_none()
+            }
+            Subject::ReadyBiodegradability | Subject::InherentBiodegradability | Subject::HazardStatements => false,
+        })
+        .collect();
+    most_concerning(context, step, test, unspecified, |interval| {
+        let outcomes: Vec<Outcome> = standing_for.iter().map(|other| outcome_of(other, interval)).collect();
+        if outcomes.iter().all(|outcome| *outcome == Outcome::Fired) {
+            Outcome::Fired
+        } else if outcomes.iter().all(|outcome| *outcome == Outcome::Clear) {
+            Outcome::Clear
+        } else {
+            Outcome::Undecided
+        }
+    })
+}
+
+/// The values of a property that the test accepts, those of the best basis only.
+fn counted<'run>(
+    context: Context<'run>,
+    step: &Step,
+    test: &Test,
+    property: Property,
+) -> impl Iterator<Item = (usize, &'run Evidence)> {
+    let bases = test.bases.clone();
+    let weight = step.weight;
+    let accepted = move |evidence: &Evidence| {
+        bases.contains(&evidence.basis)
+            && match (evidence.standing, weight) {
+                (Standing::Full, _) | (Standing::SupportingOnly, Weight::Supporting) => true,
+                (Standing::SupportingOnly, Weight::Concern | Weight::Screening | Weight::Definitive) => false,
+            }
+    };
+    let values = context.evidence.of(property);
+    let best = values.iter().filter(|evidence| accepted(evidence)).map(|evidence| evidence.basis).min();
+    values
+        .iter()
+        .enumerate()
+        .filter(move |(_, evidence)| accepted(evidence) && Some(evidence.basis) == best)
+}
+
+/// Of several values of the best basis, the one that points to more concern for this test.
+fn most_concerning(
+    context: Context,
+    step: &Step,
+    test: &Test,
+    property: Property,
+    outcome: impl Fn(Interval) -> Outcome,
+) -> Option<Used> {
+    counted(context, step, test, property)
+        .map(|(index, evidence)| hold_against(context, test, index, evidence, &outcome))
+        .max_by(|one, other| {
+            outcome_rank(one.outcome)
+                .cmp(&outcome_rank(other.outcome))
+                .then(concern(test, one).total_cmp(&concern(test, other)))
+                // `max_by` keeps the last of equals; the first column is the one to name.
+                .then(other.index.cmp(&one.index))
+        })
+}
+
+fn outcome_rank(outcome: Outcome) -> u8 {
+    match outcome {
+        Outcome::Clear => 0,
+        Outcome::Undecided => 1,
+        Outcome::Fired => 2,
+    }
+}
+
+/// How far a value reaches towards the limit's concerning side.
+fn concern(test: &Test, used: &Used) -> f64 {
+    let upward = match &test.limit {
+        Limit::Number { comparison, .. } => comparison.looks_upward(),
+        Limit::Between { .. } | Limit::AnyOfWords(_) | Limit::Is(_) => true,
+    };
+    if upward {
+        used.compared.high().number().unwrap_or(f64::INFINITY)
+    } else {
+        -used.compared.low().number().unwrap_or(f64::NEG_INFINITY)
+    }
+}
+
+/// The evidence behind a used value.
+fn evidence_of<'run>(context: Context<'run>, used: &Used) -> Option<&'run Evidence> {
+    context.evidence.of(used.property).get(used.index)
+}
+
+fn derived_from(evidence: &Evidence) -> Option<Subject> {
+    match evidence.origin {
+        Origin::Cell(_) => None,
+        Origin::Relation { .. } => Some(Subject::Property(Property::LogKow)),
+    }
+}
+
+fn carries(context: Context, test: &Test, outcome: TestOutcome, used: &[Used]) -> Carries {
+    let strong = |value: &Used| {
+        evidence_of(context, value).is_some_and(|evidence| {
+            evidence.basis == Basis::Measured
+                && match outcome {
+                    TestOutcome::Fired => {
+                        let subject = Subject::Property(evidence.property);
+                        !context.fires_as_screening_only(subject, derived_from(evidence))
+                    }
+                    TestOutcome::Clear => {
+                        let half_life = matches!(evidence.property, Property::HalfLife(_));
+                        !half_life || evidence.conditions.degradation == DegradationKind::Ultimate
+                    }
+                    TestOutcome::Undecided | TestOutcome::Missing => false,
+                }
+        })
+    };
+    let fired = |value: &&Used| value.outcome == Outcome::Fired;
+    let carried = match outcome {
+        TestOutcome::Fired => used.iter().filter(fired).any(strong),
+        TestOutcome::Clear => used.iter().all(strong),
+        TestOutcome::Undecided | TestOutcome::Missing => false,
+    };
+    if carried && test.checked != Checked::Memory { Carries::Definitive } else { Carries::Screening }
+}
+
+fn stops(context: Context, test: &Test, used: &[Used]) -> Vec<Stop> {
+    let mut stops = limit_stops(test);
+    for value in used {
+        let Some(evidence) = evidence_of(context, value) else { continue };
+        if let Some(caution) = context.blocking(Subject::Property(evidence.property), derived_from(evidence)) {
+            stops.push(Stop::Caution(caution));
+        }
+        let modelled = matches!(evidence.basis, Basis::Calculated | Basis::Estimated);
+        if modelled && value.closeness == Closeness::CloseCall {
+            stops.push(Stop::WithinOneSd);
+        }
+        if let Origin::Relation { relation, low_side, .. } = &evidence.origin {
+            if context.rules.relations.relations.get(*relation).is_some_and(|line| line.checked == Checked::Memory) {
+                stops.push(Stop::RelationFromMemory(*relation));
+            }
+            stops.extend(low_side.and_then(|(line, log_value)| low_side_stop(test, line, log_value)));
+        }
+    }
+    stops.dedup();
+    stops
+}
+
+/// For limits that look downward, such as mobility: the lowest line that could apply must clear as well.
+fn low_side_stop(test: &Test, relation: usize, log_value: f64) -> Option<Stop> {
+    let Limit::Number { comparison, .. } = test.limit else { return None };
+    let lowest = Interval::point(10f64.powf(log_value)).ok()?;
+    let clears = outcome_of(test, lowest) == Outcome::Clear;
+    (!comparison.looks_upward() && !clears).then_some(Stop::LowSide { relation, log_value })
+}
+
+pub(crate) fn limit_stops(test: &Test) -> Vec<Stop> {
+    match test.checked {
+        Checked::Memory => vec![Stop::LimitFromMemory],
+        Checked::Seen | Checked::SecondHand => Vec::new(),
+    }
+}
+
+// Words
+
+fn in_words(context: Context, test: &Test, outcome: TestOutcome, answer: Answer, carries: Carries) -> TestJudgement {
+    let mut stops = limit_stops(test);
+    stops.extend(context.blocking(test.subject, None).map(Stop::Caution));
+    let carries = if test.checked == Checked::Memory { Carries::Screening } else { carries };
+    TestJudgement {
+        outcome,
+        used: Vec::new(),
+        answer: Some(answer),
+        closeness: Closeness::from_condition(outcome == TestOutcome::Undecided),
+        carries,
+        stops,
+    }
+}
+
+fn carried_by(basis: Basis) -> Carries {
+    match basis {
+        Basis::Measured => Carries::Definitive,
+        Basis::Unstated | Basis::Calculated | Basis::Estimated => Carries::Screening,
+    }
+}
+
+fn judge_ready(context: Context, test: &Test) -> Option<TestJudgement> {
+    let Limit::Is(wanted) = test.limit else { return None };
+    let entries = &context.substance.ready;
+    let accepted = |basis: Basis| test.bases.contains(&basis);
+    let best = entries.iter().map(|entry| entry.value.basis).filter(|basis| accepted(*basis)).min()?;
+    entries
+        .iter()
+        .enumerate()
+        .filter(|(_, entry)| entry.value.basis == best)
+        .map(|(index, entry)| (ready_outcome(entry.value.result, wanted), std::cmp::Reverse(index)))
+        .max()
+        .map(|(outcome, std::cmp::Reverse(index))| {
+            in_words(context, test, outcome, Answer::Ready(index), carried_by(best))
+        })
+}
+
+fn ready_outcome(found: DegradationTest, wanted: DegradationTest) -> TestOutcome {
+    match found {
+        DegradationTest::Open => TestOutcome::Undecided,
+        DegradationTest::Ready | DegradationTest::NotReady if found == wanted => TestOutcome::Fired,
+        DegradationTest::Ready | DegradationTest::NotReady => TestOutcome::Clear,
+    }
+}
+
+/// An inherent test counts only if it followed the guideline and the level was reached, or missed, in time.
+fn judge_inherent(context: Context, test: &Test) -> Option<TestJudgement> {
+    let guideline = test.guideline.as_deref();
+    context
+        .substance
+        .inherent
+        .iter()
+        .enumerate()
+        .filter(|(_, entry)| test.bases.contains(&entry.value.basis))
+        .filter(|(_, entry)| guideline.is_none_or(|wanted| entry.value.guideline.as_deref() == Some(wanted)))
+        .filter_map(|(index, entry)| {
+            let outcome = outcome_of(test, entry.value.degraded?);
+            let in_time = test.within.is_none_or(|within| entry.value.days.is_some_and(|days| days <= within));
+            let outcome = match (outcome, in_time) {
+                (Outcome::Clear, true) => TestOutcome::Clear,
+                (Outcome::Clear, false) | (Outcome::Undecided, _) => TestOutcome::Undecided,
+                (Outcome::Fired, _) => TestOutcome::Fired,
+            };
+            Some((outcome, std::cmp::Reverse(index), entry.value.basis))
+        })
+        .max()
+        .map(|(outcome, std::cmp::Reverse(index), basis)| {
+            in_words(context, test, outcome, Answer::Inherent(index), carried_by(basis))
+        })
+}
+
+/// A filled cell that lacks the codes is clear; an empty cell says nothing.
+fn judge_statements(context: Context, test: &Test) -> Option<TestJudgement> {
+    let Limit::AnyOfWords(codes) = &test.limit else { return None };
+    let statements = &context.substance.hazard_statements.as_ref()?.value;
+    let found = codes.iter().find_map(|code| statements.find(code));
+    Some(match found {
+        // The classification in force is itself what the instruments ask for, so a stated one counts in full.
+        Some(code) => {
+            in_words(context, test, TestOutcome::Fired, Answer::Statement(code.to_owned()), Carries::Definitive)
+        }
+        None => in_words(context, test, TestOutcome::Clear, Answer::NoStatement, Carries::Screening),
+    })
+}
