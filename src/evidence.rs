@@ -86,11 +86,15 @@ impl EvidenceSet {
 
     /// The log Kow used for bioaccumulation: of the best basis, the highest.
     pub fn log_kow_used(&self) -> Option<&Evidence> {
-        best_ranked(self.of(Property::LogKow)).max_by(|one, other| one.upper_value().total_cmp(&other.upper_value()))
+        best_ranked(self.of(Property::LogKow))
+            .max_by(|one, other| one.upper_value().total_cmp(&other.upper_value()))
     }
 
     fn push(&mut self, evidence: Evidence) {
-        self.by_property.entry(evidence.property).or_default().push(evidence);
+        self.by_property
+            .entry(evidence.property)
+            .or_default()
+            .push(evidence);
     }
 }
 
@@ -110,5 +114,8 @@ impl Evidence {
 pub fn best_ranked(values: &[Evidence]) -> impl Iterator<Item = &Evidence> {
     let full = |evidence: &&Evidence| evidence.standing == Standing::Full;
     let best = values.iter().filter(full).map(|evidence| evidence.basis).min();
-    values.iter().filter(full).filter(move |evidence| Some(evidence.basis) == best)
+    values
+        .iter()
+        .filter(full)
+        .filter(move |evidence| Some(evidence.basis) == best)
 }

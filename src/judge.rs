@@ -333,10 +333,13 @@ impl Context<'_> {
     /// The first raised caution that keeps the subject, or a value derived from `derived_from`, from clearing.
     pub(crate) fn blocking(&self, subject: Subject, derived_from: Option<Subject>) -> Option<usize> {
         self.cautions.iter().map(|raised| raised.caution).find(|index| {
-            self.rules.cautions.get(*index).is_some_and(|caution| match &caution.blocks {
-                Blocks::Everything => true,
-                Blocks::Subjects(subjects) => covers(subjects, subject, derived_from),
-            })
+            self.rules
+                .cautions
+                .get(*index)
+                .is_some_and(|caution| match &caution.blocks {
+                    Blocks::Everything => true,
+                    Blocks::Subjects(subjects) => covers(subjects, subject, derived_from),
+                })
         })
     }
 
@@ -359,22 +362,41 @@ pub fn judge(substance: &Substance, evidence: &EvidenceSet, rules: &RuleSet) -> 
         .cautions
         .iter()
         .enumerate()
-        .filter_map(|(caution, rule)| rule.is_raised_by(substance).map(|reason| RaisedCaution { caution, reason }))
+        .filter_map(|(caution, rule)| {
+            rule.is_raised_by(substance)
+                .map(|reason| RaisedCaution { caution, reason })
+        })
         .collect();
     let rulebooks = rules
         .rulebooks
         .iter()
-        .map(|rulebook| judge_rulebook(Context { substance, evidence, rules, rulebook, cautions: &cautions }))
+        .map(|rulebook| {
+            judge_rulebook(Context {
+                substance,
+                evidence,
+                rules,
+                rulebook,
+                cautions: &cautions,
+            })
+        })
         .collect();
     Judgement { cautions, rulebooks }
 }
 
 fn judge_rulebook(context: Context) -> RulebookJudgement {
-    let criteria: Vec<_> =
-        context.rulebook.criteria.iter().map(|criterion| criterion::judge_criterion(context, criterion)).collect();
+    let criteria: Vec<_> = context
+        .rulebook
+        .criteria
+        .iter()
+        .map(|criterion| criterion::judge_criterion(context, criterion))
+        .collect();
     let designations = designation::judge_designations(context, &criteria);
     let headline = headline(context, &criteria, &designations);
-    RulebookJudgement { headline, criteria, designations }
+    RulebookJudgement {
+        headline,
+        criteria,
+        designations,
+    }
 }
 
 fn headline(
@@ -382,7 +404,12 @@ fn headline(
     criteria: &[CriterionJudgement],
     designations: &[DesignationJudgement],
 ) -> Headline {
-    if let Some(listing) = context.rulebook.listings.iter().position(|listing| is_listed(context.substance, listing)) {
+    if let Some(listing) = context
+        .rulebook
+        .listings
+        .iter()
+        .position(|listing| is_listed(context.substance, listing))
+    {
         return Headline::Listed(listing);
     }
     let worst_designation = first_worst(designations.iter().map(|designation| designation.verdict));

@@ -32,7 +32,11 @@ enum Imagined {
 }
 
 /// Searches sets of one, two and three data; among sets of one size those that spare animals come first.
-pub(crate) fn find_deciding_data(context: Context, criterion: &Criterion, judged: &CriterionJudgement) -> Deciding {
+pub(crate) fn find_deciding_data(
+    context: Context,
+    criterion: &Criterion,
+    judged: &CriterionJudgement,
+) -> Deciding {
     let mut candidates = candidates(criterion, judged);
     candidates.sort_by_key(|subject| burden(*subject));
     (1..=LARGEST_SET)
@@ -75,7 +79,8 @@ fn candidates(criterion: &Criterion, judged: &CriterionJudgement) -> Vec<Subject
     let mut subjects = Vec::new();
     for (step, judged_step) in criterion.steps.iter().zip(&judged.steps) {
         for (test, judged_test) in step.tests.iter().zip(&judged_step.tests) {
-            let settled = judged_test.outcome == TestOutcome::Fired || judged_test.carries == Carries::Definitive;
+            let settled =
+                judged_test.outcome == TestOutcome::Fired || judged_test.carries == Carries::Definitive;
             if step.weight > Weight::Concern && !settled && !subjects.contains(&test.subject) {
                 subjects.push(test.subject);
             }
@@ -101,7 +106,10 @@ fn sets(candidates: &[Subject], size: usize) -> Vec<Vec<Subject>> {
 
 /// Whether every combination of results of the imagined data gives an answer.
 fn settles(context: Context, criterion: &Criterion, judged: &CriterionJudgement, set: &[Subject]) -> bool {
-    let results: Vec<Vec<Imagined>> = set.iter().map(|subject| possible_results(criterion, *subject)).collect();
+    let results: Vec<Vec<Imagined>> = set
+        .iter()
+        .map(|subject| possible_results(criterion, *subject))
+        .collect();
     combinations(&results).iter().all(|combination| {
         let imagined_for = |test: &Test| {
             let place = set.iter().position(|subject| *subject == test.subject)?;
@@ -129,21 +137,33 @@ fn combinations(results: &[Vec<Imagined>]) -> Vec<Vec<Imagined>> {
     results.iter().fold(vec![Vec::new()], |so_far, choices| {
         so_far
             .iter()
-            .flat_map(|begun| choices.iter().map(|choice| [begun.as_slice(), &[*choice]].concat()))
+            .flat_map(|begun| {
+                choices
+                    .iter()
+                    .map(|choice| [begun.as_slice(), &[*choice]].concat())
+            })
             .collect()
     })
 }
 
 /// A value below all limits the subject is held against, one between each two of them, and one above all.
 fn possible_results(criterion: &Criterion, subject: Subject) -> Vec<Imagined> {
-    let tests = || criterion.steps.iter().flat_map(|step| &step.tests).filter(|test| test.subject == subject);
+    let tests = || {
+        criterion
+            .steps
+            .iter()
+            .flat_map(|step| &step.tests)
+            .filter(|test| test.subject == subject)
+    };
     if !matches!(subject, Subject::Property(_)) {
         return vec![Imagined::Fires, Imagined::Clears];
     }
     let mut limits: Vec<f64> = tests().flat_map(numbers).collect();
     limits.sort_by(f64::total_cmp);
     limits.dedup_by(|one, other| one.total_cmp(other).is_eq());
-    let (Some(lowest), Some(highest)) = (limits.first(), limits.last()) else { return Vec::new() };
+    let (Some(lowest), Some(highest)) = (limits.first(), limits.last()) else {
+        return Vec::new();
+    };
     let beyond = highest.abs() + 1.0;
     let between = limits.windows(2).filter_map(|pair| match pair {
         [low, high] => Some(f64::midpoint(*low, *high)),

@@ -17,9 +17,15 @@ pub struct DesignationJudgement {
 }
 
 /// Judges the designations of a rulebook, in file order.
-pub(crate) fn judge_designations(context: Context, criteria: &[CriterionJudgement]) -> Vec<DesignationJudgement> {
+pub(crate) fn judge_designations(
+    context: Context,
+    criteria: &[CriterionJudgement],
+) -> Vec<DesignationJudgement> {
     let designations = &context.rulebook.designations;
-    designations.iter().map(|designation| judge_designation(context, designation, criteria)).collect()
+    designations
+        .iter()
+        .map(|designation| judge_designation(context, designation, criteria))
+        .collect()
 }
 
 /// Designations never go round in circles (validation refuses that), so the recursion ends.
@@ -41,9 +47,9 @@ fn judge_designation(
         .iter()
         .filter_map(|part| {
             let (verdict, closeness) = match *part {
-                DesignationPart::Criterion(index) => {
-                    criteria.get(index).map(|criterion| (criterion.verdict, criterion.closeness))?
-                }
+                DesignationPart::Criterion(index) => criteria
+                    .get(index)
+                    .map(|criterion| (criterion.verdict, criterion.closeness))?,
                 DesignationPart::Designation(index) => {
                     let other = context.rulebook.designations.get(index)?;
                     let judged = judge_designation(context, other, criteria);
@@ -73,7 +79,11 @@ fn judge_designation(
 
 fn stated(context: Context, designation: &Designation) -> Option<String> {
     let statements = &context.substance.hazard_statements.as_ref()?.value;
-    designation.stated_by.iter().find_map(|code| statements.find(code)).map(str::to_owned)
+    designation
+        .stated_by
+        .iter()
+        .find_map(|code| statements.find(code))
+        .map(str::to_owned)
 }
 
 /// All-of: any `out of scope`, else any `not fulfilled`, else any `screens out`, else anything unanswered, else any
@@ -85,8 +95,18 @@ pub(crate) fn combined(combine: Combine, verdicts: impl Iterator<Item = Verdict>
         return Verdict::OutOfScope;
     }
     let (first, second, fourth, last) = match combine {
-        Combine::All => (Verdict::NotFulfilled, Verdict::ScreensOut, Verdict::ScreensIn, Verdict::Fulfilled),
-        Combine::Any => (Verdict::Fulfilled, Verdict::ScreensIn, Verdict::ScreensOut, Verdict::NotFulfilled),
+        Combine::All => (
+            Verdict::NotFulfilled,
+            Verdict::ScreensOut,
+            Verdict::ScreensIn,
+            Verdict::Fulfilled,
+        ),
+        Combine::Any => (
+            Verdict::Fulfilled,
+            Verdict::ScreensIn,
+            Verdict::ScreensOut,
+            Verdict::NotFulfilled,
+        ),
     };
     if any(first) {
         first
@@ -103,20 +123,32 @@ pub(crate) fn combined(combine: Combine, verdicts: impl Iterator<Item = Verdict>
 
 /// Where one part is enough for the verdict, it is a close call only if every such part is; where all are needed, if
 /// any is.
-fn closeness(combine: Combine, verdict: Verdict, deciding: &[&(DesignationPart, Verdict, Closeness)]) -> bool {
-    let mut close = deciding.iter().map(|(_, _, closeness)| *closeness == Closeness::CloseCall);
+fn closeness(
+    combine: Combine,
+    verdict: Verdict,
+    deciding: &[&(DesignationPart, Verdict, Closeness)],
+) -> bool {
+    let mut close = deciding
+        .iter()
+        .map(|(_, _, closeness)| *closeness == Closeness::CloseCall);
     let one_is_enough = match verdict {
         Verdict::NotFulfilled | Verdict::ScreensOut => combine == Combine::All,
         Verdict::Fulfilled | Verdict::ScreensIn => combine == Combine::Any,
         Verdict::Unresolved | Verdict::NoData | Verdict::OutOfScope => false,
     };
-    if one_is_enough { !deciding.is_empty() && close.all(|close| close) } else { close.any(|close| close) }
+    if one_is_enough {
+        !deciding.is_empty() && close.all(|close| close)
+    } else {
+        close.any(|close| close)
+    }
 }
 
 #[cfg(test)]
 mod tests {
     use super::combined;
-    use crate::judge::Verdict::{self, Fulfilled, NoData, NotFulfilled, OutOfScope, ScreensIn, ScreensOut, Unresolved};
+    use crate::judge::Verdict::{
+        self, Fulfilled, NoData, NotFulfilled, OutOfScope, ScreensIn, ScreensOut, Unresolved,
+    };
     use crate::rules::Combine;
 
     #[test]
@@ -136,7 +168,11 @@ mod tests {
             (&[OutOfScope, NotFulfilled, Fulfilled], OutOfScope),
         ];
         for (parts, expected) in table {
-            assert_eq!(combined(Combine::All, parts.iter().copied()), expected, "{parts:?}");
+            assert_eq!(
+                combined(Combine::All, parts.iter().copied()),
+                expected,
+                "{parts:?}"
+            );
         }
     }
 
@@ -154,7 +190,11 @@ mod tests {
             (&[OutOfScope, OutOfScope], OutOfScope),
         ];
         for (parts, expected) in table {
-            assert_eq!(combined(Combine::Any, parts.iter().copied()), expected, "{parts:?}");
+            assert_eq!(
+                combined(Combine::Any, parts.iter().copied()),
+                expected,
+                "{parts:?}"
+            );
         }
     }
 
@@ -162,8 +202,14 @@ mod tests {
     fn an_unanswered_part_never_lets_an_all_of_designation_be_fulfilled_nor_an_any_of_one_be_cleared() {
         for unanswered in [Unresolved, NoData] {
             for other in Verdict::ALL {
-                assert!(!matches!(combined(Combine::All, [unanswered, other].into_iter()), Fulfilled | ScreensIn));
-                assert!(!matches!(combined(Combine::Any, [unanswered, other].into_iter()), NotFulfilled | ScreensOut));
+                assert!(!matches!(
+                    combined(Combine::All, [unanswered, other].into_iter()),
+                    Fulfilled | ScreensIn
+                ));
+                assert!(!matches!(
+                    combined(Combine::Any, [unanswered, other].into_iter()),
+                    NotFulfilled | ScreensOut
+                ));
             }
         }
     }

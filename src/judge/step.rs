@@ -28,7 +28,12 @@ pub(crate) fn judge_step(step: &Step, tests: Vec<TestJudgement>) -> StepJudgemen
     };
     let by = responsible(state, step, &tests);
     let closeness = closeness(state, step, &by, &tests);
-    StepJudgement { state, closeness, by, tests }
+    StepJudgement {
+        state,
+        closeness,
+        by,
+        tests,
+    }
 }
 
 /// In a screening step an undecided test counts as fired, as a close call.
@@ -82,12 +87,20 @@ fn responsible(state: StepState, step: &Step, tests: &[TestJudgement]) -> Vec<us
         StepState::Undecided => TestOutcome::Undecided,
         StepState::Partial | StepState::Empty | StepState::Skipped => TestOutcome::Missing,
     };
-    tests.iter().enumerate().filter(|(_, test)| outcome(step, test) == wanted).map(|(index, _)| index).collect()
+    tests
+        .iter()
+        .enumerate()
+        .filter(|(_, test)| outcome(step, test) == wanted)
+        .map(|(index, _)| index)
+        .collect()
 }
 
 /// A step is a close call if its outcome rests on close tests: one far beyond the limit makes an `any` step safe.
 fn closeness(state: StepState, step: &Step, by: &[usize], tests: &[TestJudgement]) -> Closeness {
-    let mut close = by.iter().filter_map(|index| tests.get(*index)).map(|test| test.closeness == Closeness::CloseCall);
+    let mut close = by
+        .iter()
+        .filter_map(|index| tests.get(*index))
+        .map(|test| test.closeness == Closeness::CloseCall);
     Closeness::from_condition(match (state, step.combine) {
         (StepState::Undecided, _) => true,
         (StepState::Fired, Combine::Any) | (StepState::Clear, Combine::All) => close.all(|close| close),

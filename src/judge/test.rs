@@ -40,8 +40,12 @@ fn judge_number(context: Context, step: &Step, test: &Test, property: Property) 
         Property::HalfLife(Compartment::Water) => together(context, step, test, &WATERS),
         Property::HalfLife(Compartment::Sediment) => together(context, step, test, &SEDIMENTS),
         _ => {
-            let own = most_concerning(context, step, test, property, |interval| outcome_of(test, interval));
-            own.or_else(|| unspecified(context, step, test, property)).into_iter().collect()
+            let own = most_concerning(context, step, test, property, |interval| {
+                outcome_of(test, interval)
+            });
+            own.or_else(|| unspecified(context, step, test, property))
+                .into_iter()
+                .collect()
         }
     };
     used.sort_by(|one, other| concern(test, other).total_cmp(&concern(test, one)));
@@ -55,7 +59,14 @@ fn judge_number(context: Context, step: &Step, test: &Test, property: Property) 
     let closeness = deciding.closeness;
     let carries = carries(context, test, outcome, &used);
     let stops = stops(context, test, &used);
-    Some(TestJudgement { outcome, used, answer: None, closeness, carries, stops })
+    Some(TestJudgement {
+        outcome,
+        used,
+        answer: None,
+        closeness,
+        carries,
+        stops,
+    })
 }
 
 const WATERS: [Property; 3] = [
@@ -74,7 +85,9 @@ fn together(context: Context, step: &Step, test: &Test, compartments: &[Property
     compartments
         .iter()
         .filter_map(|property| {
-            most_concerning(context, step, test, *property, |interval| outcome_of(test, interval))
+            most_concerning(context, step, test, *property, |interval| {
+                outcome_of(test, interval)
+            })
         })
         .collect()
 }
@@ -96,13 +109,19 @@ fn unspecified(context: Context, step: &Step, test: &Test, property: Property) -
         .iter()
         .filter(|other| match other.subject {
             Subject::Property(other_property) => {
-                group.contains(&other_property) && counted(context, step, other, other_property).next().is_none()
+                group.contains(&other_property)
+                    && counted(context, step, other, other_property).next().is_none()
             }
-            Subject::ReadyBiodegradability | Subject::InherentBiodegradability | Subject::HazardStatements => false,
+            Subject::ReadyBiodegradability
+            | Subject::InherentBiodegradability
+            | Subject::HazardStatements => false,
         })
         .collect();
     most_concerning(context, step, test, unspecified, |interval| {
-        let outcomes: Vec<Outcome> = standing_for.iter().map(|other| outcome_of(other, interval)).collect();
+        let outcomes: Vec<Outcome> = standing_for
+            .iter()
+            .map(|other| outcome_of(other, interval))
+            .collect();
         if outcomes.iter().all(|outcome| *outcome == Outcome::Fired) {
             Outcome::Fired
         } else if outcomes.iter().all(|outcome| *outcome == Outcome::Clear) {
@@ -130,7 +149,11 @@ fn counted<'run>(
             }
     };
     let values = context.evidence.of(property);
-    let best = values.iter().filter(|evidence| accepted(evidence)).map(|evidence| evidence.basis).min();
+    let best = values
+        .iter()
+        .filter(|evidence| accepted(evidence))
+        .map(|evidence| evidence.basis)
+        .min();
     values
         .iter()
         .enumerate()
@@ -212,22 +235,38 @@ fn carries(context: Context, test: &Test, outcome: TestOutcome, used: &[Used]) -
         TestOutcome::Clear => used.iter().all(strong),
         TestOutcome::Undecided | TestOutcome::Missing => false,
     };
-    if carried && test.checked != Checked::Memory { Carries::Definitive } else { Carries::Screening }
+    if carried && test.checked != Checked::Memory {
+        Carries::Definitive
+    } else {
+        Carries::Screening
+    }
 }
 
 fn stops(context: Context, test: &Test, used: &[Used]) -> Vec<Stop> {
     let mut stops = limit_stops(test);
     for value in used {
-        let Some(evidence) = evidence_of(context, value) else { continue };
-        if let Some(caution) = context.blocking(Subject::Property(evidence.property), derived_from(evidence)) {
+        let Some(evidence) = evidence_of(context, value) else {
+            continue;
+        };
+        if let Some(caution) = context.blocking(Subject::Property(evidence.property), derived_from(evidence))
+        {
             stops.push(Stop::Caution(caution));
         }
         let modelled = matches!(evidence.basis, Basis::Calculated | Basis::Estimated);
         if modelled && value.closeness == Closeness::CloseCall {
             stops.push(Stop::WithinOneSd);
         }
-        if let Origin::Relation { relation, low_side, .. } = &evidence.origin {
-            if context.rules.relations.relations.get(*relation).is_some_and(|line| line.checked == Checked::Memory) {
+        if let Origin::Relation {
+            relation, low_side, ..
+        } = &evidence.origin
+        {
+            if context
+                .rules
+                .relations
+                .relations
+                .get(*relation)
+                .is_some_and(|line| line.checked == Checked::Memory)
+            {
                 stops.push(Stop::RelationFromMemory(*relation));
             }
             stops.extend(low_side.and_then(|(line, log_value)| low_side_stop(test, line, log_value)));
@@ -239,7 +278,9 @@ fn stops(context: Context, test: &Test, used: &[Used]) -> Vec<Stop> {
 
 /// For limits that look downward, such as mobility: the lowest line that could apply must clear as well.
 fn low_side_stop(test: &Test, relation: usize, log_value: f64) -> Option<Stop> {
-    let Limit::Number { comparison, .. } = test.limit else { return None };
+    let Limit::Number { comparison, .. } = test.limit else {
+        return None;
+    };
     let lowest = Interval::point(10f64.powf(log_value)).ok()?;
     let clears = outcome_of(test, lowest) == Outcome::Clear;
     (!comparison.looks_upward() && !clears).then_some(Stop::LowSide { relation, log_value })
@@ -254,10 +295,20 @@ pub(crate) fn limit_stops(test: &Test) -> Vec<Stop> {
 
 // Words
 
-fn in_words(context: Context, test: &Test, outcome: TestOutcome, answer: Answer, carries: Carries) -> TestJudgement {
+fn in_words(
+    context: Context,
+    test: &Test,
+    outcome: TestOutcome,
+    answer: Answer,
+    carries: Carries,
+) -> TestJudgement {
     let mut stops = limit_stops(test);
     stops.extend(context.blocking(test.subject, None).map(Stop::Caution));
-    let carries = if test.checked == Checked::Memory { Carries::Screening } else { carries };
+    let carries = if test.checked == Checked::Memory {
+        Carries::Screening
+    } else {
+        carries
+    };
     TestJudgement {
         outcome,
         used: Vec::new(),
@@ -276,15 +327,26 @@ fn carried_by(basis: Basis) -> Carries {
 }
 
 fn judge_ready(context: Context, test: &Test) -> Option<TestJudgement> {
-    let Limit::Is(wanted) = test.limit else { return None };
+    let Limit::Is(wanted) = test.limit else {
+        return None;
+    };
     let entries = &context.substance.ready;
     let accepted = |basis: Basis| test.bases.contains(&basis);
-    let best = entries.iter().map(|entry| entry.value.basis).filter(|basis| accepted(*basis)).min()?;
+    let best = entries
+        .iter()
+        .map(|entry| entry.value.basis)
+        .filter(|basis| accepted(*basis))
+        .min()?;
     entries
         .iter()
         .enumerate()
         .filter(|(_, entry)| entry.value.basis == best)
-        .map(|(index, entry)| (ready_outcome(entry.value.result, wanted), std::cmp::Reverse(index)))
+        .map(|(index, entry)| {
+            (
+                ready_outcome(entry.value.result, wanted),
+                std::cmp::Reverse(index),
+            )
+        })
         .max()
         .map(|(outcome, std::cmp::Reverse(index))| {
             in_words(context, test, outcome, Answer::Ready(index), carried_by(best))
@@ -311,7 +373,9 @@ fn judge_inherent(context: Context, test: &Test) -> Option<TestJudgement> {
         .filter(|(_, entry)| guideline.is_none_or(|wanted| entry.value.guideline.as_deref() == Some(wanted)))
         .filter_map(|(index, entry)| {
             let outcome = outcome_of(test, entry.value.degraded?);
-            let in_time = test.within.is_none_or(|within| entry.value.days.is_some_and(|days| days <= within));
+            let in_time = test
+                .within
+                .is_none_or(|within| entry.value.days.is_some_and(|days| days <= within));
             let outcome = match (outcome, in_time) {
                 (Outcome::Clear, true) => TestOutcome::Clear,
                 (Outcome::Clear, false) | (Outcome::Undecided, _) => TestOutcome::Undecided,
@@ -327,14 +391,26 @@ fn judge_inherent(context: Context, test: &Test) -> Option<TestJudgement> {
 
 /// A filled cell that lacks the codes is clear; an empty cell says nothing.
 fn judge_statements(context: Context, test: &Test) -> Option<TestJudgement> {
-    let Limit::AnyOfWords(codes) = &test.limit else { return None };
+    let Limit::AnyOfWords(codes) = &test.limit else {
+        return None;
+    };
     let statements = &context.substance.hazard_statements.as_ref()?.value;
     let found = codes.iter().find_map(|code| statements.find(code));
     Some(match found {
         // The classification in force is itself what the instruments ask for, so a stated one counts in full.
-        Some(code) => {
-            in_words(context, test, TestOutcome::Fired, Answer::Statement(code.to_owned()), Carries::Definitive)
-        }
-        None => in_words(context, test, TestOutcome::Clear, Answer::NoStatement, Carries::Screening),
+        Some(code) => in_words(
+            context,
+            test,
+            TestOutcome::Fired,
+            Answer::Statement(code.to_owned()),
+            Carries::Definitive,
+        ),
+        None => in_words(
+            context,
+            test,
+            TestOutcome::Clear,
+            Answer::NoStatement,
+            Carries::Screening,
+        ),
     })
 }

@@ -66,3 +66,8 @@ pub fn parse_limit(_text: &str, _dimension: Dimension) -> Result<f64, QuantityFa
 pub fn format_number(number: f64) -> String {
     format!("{number}")
 }
+
+/// The interval as a reader writes it.
+pub fn format_interval(_interval: crate::quantity::Interval, _unit: Unit) -> String {
+    String::new()
+}

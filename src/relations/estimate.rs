@@ -42,7 +42,10 @@ pub struct Estimate {
 impl Relation {
     /// log10 of the target at a log Kow.
     pub fn log_value(&self, log_kow: f64) -> f64 {
-        self.coefficients.iter().rev().fold(0.0, |sum, coefficient| sum * log_kow + coefficient)
+        self.coefficients
+            .iter()
+            .rev()
+            .fold(0.0, |sum, coefficient| sum * log_kow + coefficient)
     }
 
     fn slope(&self, log_kow: f64) -> f64 {
@@ -52,7 +55,11 @@ impl Relation {
             weighted.push(power * coefficient);
             power += 1.0;
         }
-        weighted.iter().skip(1).rev().fold(0.0, |sum, coefficient| sum * log_kow + coefficient)
+        weighted
+            .iter()
+            .skip(1)
+            .rev()
+            .fold(0.0, |sum, coefficient| sum * log_kow + coefficient)
     }
 
     fn is_curved(&self) -> bool {
@@ -75,8 +82,9 @@ impl Relation {
             let share = f64::from(step) / f64::from(STEPS);
             self.log_value(low + (high - low) * share)
         });
-        let (smallest, largest) =
-            values.fold((f64::INFINITY, f64::NEG_INFINITY), |(small, large), value| (small.min(value), large.max(value)));
+        let (smallest, largest) = values.fold((f64::INFINITY, f64::NEG_INFINITY), |(small, large), value| {
+            (small.min(value), large.max(value))
+        });
         Interval::new(Bound::Included(smallest), Bound::Included(largest)).ok()
     }
 }
@@ -86,7 +94,12 @@ impl Relations {
     ///
     /// For a molar relation the caller adds the logarithm of the molar mass in mg/mmol.
     pub fn estimate(&self, to: Property, log_kow: LogKow, ionisation: Ionisation) -> Option<Estimate> {
-        let of_target = || self.relations.iter().enumerate().filter(move |(_, relation)| relation.to == to);
+        let of_target = || {
+            self.relations
+                .iter()
+                .enumerate()
+                .filter(move |(_, relation)| relation.to == to)
+        };
         let (leading, relation) = of_target()
             .find(|(_, relation)| relation.side == Side::Central && relation.holds_for(log_kow.interval))?;
         let log_value = match log_kow.interval.single() {
@@ -103,7 +116,11 @@ impl Relations {
         Some(Estimate {
             leading,
             log_value,
-            sd: log_kow.interval.single().zip(log_kow.sd).map(|(value, sd)| (relation.slope(value) * sd).hypot(relation.sd)),
+            sd: log_kow
+                .interval
+                .single()
+                .zip(log_kow.sd)
+                .map(|(value, sd)| (relation.slope(value) * sd).hypot(relation.sd)),
             others,
             low_side: self.low_side(to, log_kow.interval, ionisation),
         })
@@ -164,7 +181,9 @@ impl Relations {
         }
         self.relations
             .iter()
-            .find(|other| other.to == relation.to && other.side == Side::Central && other.domain.contains(log_kow))
+            .find(|other| {
+                other.to == relation.to && other.side == Side::Central && other.domain.contains(log_kow)
+            })
             .map(|other| (other.log_value(log_kow), other.sd))
     }
 }
@@ -205,7 +224,10 @@ mod tests {
     }
 
     fn point(value: f64, sd: f64) -> LogKow {
-        LogKow { interval: Interval::point(value).unwrap(), sd: Some(sd) }
+        LogKow {
+            interval: Interval::point(value).unwrap(),
+            sd: Some(sd),
+        }
     }
 
     #[test]
@@ -220,21 +242,34 @@ mod tests {
 
     #[test]
     fn an_open_interval_gives_no_estimate() {
-        let open = LogKow { interval: Interval::new(Bound::Excluded(6.0), Bound::Unbounded).unwrap(), sd: None };
-        assert_eq!(relations().estimate(Property::Bcf, open, Ionisation::Unknown), None);
+        let open = LogKow {
+            interval: Interval::new(Bound::Excluded(6.0), Bound::Unbounded).unwrap(),
+            sd: None,
+        };
+        assert_eq!(
+            relations().estimate(Property::Bcf, open, Ionisation::Unknown),
+            None
+        );
     }
 
     #[test]
     fn a_range_over_the_top_of_a_curve_reaches_the_top() {
-        let range = LogKow { interval: Interval::new(Bound::Included(6.2), Bound::Included(7.5)).unwrap(), sd: None };
-        let estimate = relations().estimate(Property::Bcf, range, Ionisation::Unknown).unwrap();
+        let range = LogKow {
+            interval: Interval::new(Bound::Included(6.2), Bound::Included(7.5)).unwrap(),
+            sd: None,
+        };
+        let estimate = relations()
+            .estimate(Property::Bcf, range, Ionisation::Unknown)
+            .unwrap();
         // The parabola's maximum is -4.72 + 2.74^2 / (4 x 0.20) = 4.6645 at 6.85.
         assert!((estimate.log_value.high().number().unwrap() - 4.6645).abs() < 1e-4);
     }
 
     #[test]
     fn the_low_side_is_the_lowest_line_in_domain_less_its_error() {
-        let estimate = relations().estimate(Property::Bcf, point(4.0, 0.2), Ionisation::Unknown).unwrap();
+        let estimate = relations()
+            .estimate(Property::Bcf, point(4.0, 0.2), Ionisation::Unknown)
+            .unwrap();
         let (index, lowest) = estimate.low_side.unwrap();
         assert_eq!(index, 2);
         assert!((lowest - (0.39 * 4.0 + 0.5 - 0.4)).abs() < 1e-12);
@@ -244,11 +279,28 @@ mod tests {
     fn the_chance_over_a_limit_is_as_computed_independently() {
         // Computed with a straight line 0.85 L - 0.70 and a relation error of 0.5: BCF 2000 and 5000.
         let relations = relations();
-        let cases = [(4.5, 0.2, 0.369, 0.139), (4.5, 0.5, 0.394, 0.191), (5.0, 0.2, 0.681, 0.389), (4.0, 0.5, 0.180, 0.064)];
+        let cases = [
+            (4.5, 0.2, 0.369, 0.139),
+            (4.5, 0.5, 0.394, 0.191),
+            (5.0, 0.2, 0.681, 0.389),
+            (4.0, 0.5, 0.180, 0.064),
+        ];
         for (log_kow, sd, above_2000, above_5000) in cases {
-            let chance = |limit: f64| relations.chance_of_estimate(0, log_kow, sd, limit.log10()).unwrap();
-            assert!((chance(2000.0) - above_2000).abs() < 6e-4, "{log_kow} {sd}: {}", chance(2000.0));
-            assert!((chance(5000.0) - above_5000).abs() < 6e-4, "{log_kow} {sd}: {}", chance(5000.0));
+            let chance = |limit: f64| {
+                relations
+                    .chance_of_estimate(0, log_kow, sd, limit.log10())
+                    .unwrap()
+            };
+            assert!(
+                (chance(2000.0) - above_2000).abs() < 6e-4,
+                "{log_kow} {sd}: {}",
+                chance(2000.0)
+            );
+            assert!(
+                (chance(5000.0) - above_5000).abs() < 6e-4,
+                "{log_kow} {sd}: {}",
+                chance(5000.0)
+            );
         }
     }
 

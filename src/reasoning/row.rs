@@ -1,0 +1,83 @@
+//! The cells that sum up a row: the log Kow used, the cautions, the deciding data.
+
+use crate::judge::{Deciding, Decision, Verdict};
+use crate::quantity::{Unit, format_interval};
+use crate::reasoning::Told;
+use crate::reasoning::value::{basis_phrase, listed, titles};
+
+/// The three log Kow cells: value, SD, basis. Empty where no log Kow is known.
+#[derive(Debug, Clone, PartialEq, Default)]
+pub struct LogKowCells {
+    /// A single value.
+    pub number: Option<f64>,
+    /// A range or an open interval.
+    pub text: String,
+    /// Its standard deviation.
+    pub sd: Option<f64>,
+    /// Its basis and cell.
+    pub basis: String,
+}
+
+/// The log Kow used in the bioaccumulation direction.
+pub fn log_kow_cells(told: Told) -> LogKowCells {
+    let Some(evidence) = told.evidence.log_kow_used() else {
+        return LogKowCells::default();
+    };
+    let number = evidence.interval.single();
+    LogKowCells {
+        number,
+        text: if number.is_some() {
+            String::new()
+        } else {
+            format_interval(evidence.interval, Unit::One)
+        },
+        sd: evidence.sd,
+        basis: basis_phrase(evidence.basis).to_owned(),
+    }
+}
+
+/// The sentences of the cautions that the row raises.
+pub fn cautions_text(told: Told) -> String {
+    let sentences: Vec<String> = told
+        .judgement
+        .cautions
+        .iter()
+        .filter_map(|raised| {
+            let caution = told.rules.cautions.get(raised.caution)?;
+            Some(format!(
+                "{}: {} ({})",
+                caution.id,
+                caution.sentence.trim_end_matches('.'),
+                raised.reason
+            ))
+        })
+        .collect();
+    sentences.join("; ")
+}
+
+/// What would settle the row's open criteria, and which: `BCF (REACH B, REACH vB); ...`.
+pub fn deciding_text(told: Told) -> String {
+    let mut groups: Vec<(String, Vec<String>)> = Vec::new();
+    for book in told.books() {
+        for (criterion, judged) in book.criteria() {
+            let open = matches!(judged.verdict, Verdict::Unresolved | Verdict::NoData);
+            if !open || matches!(judged.decision, Decision::Assess | Decision::Rating) {
+                continue;
+            }
+            let data = match &judged.deciding {
+                Some(Deciding::Data(subjects)) => listed(&titles(subjects.iter().copied())),
+                Some(Deciding::ExpertJudgement) | None => "expert judgement".to_owned(),
+            };
+            let name = format!("{} {}", book.rulebook.short, criterion.id);
+            match groups.iter_mut().find(|(known, _)| *known == data) {
+                Some((_, names)) => names.push(name),
+                None => groups.push((data, vec![name])),
+            }
+        }
+    }
+    let parts: Vec<String> = groups
+        .into_iter()
+        .map(|(data, names)| format!("{data} ({})", names.join(", ")))
+        .collect();
+    parts.join("; ")
+}

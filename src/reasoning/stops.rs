@@ -1,0 +1,99 @@
+//! What kept a clearing from standing, in words.
+
+use crate::judge::{CriterionJudgement, Stop, StoppedClear};
+use crate::quantity::format_number;
+use crate::reasoning::Told;
+use crate::reasoning::value::{listed, short_citation, test_brief, titles};
+use crate::rules::Criterion;
+
+/// Why a clear by a step did not stand.
+pub(crate) fn stops_phrase(
+    told: Told,
+    criterion: &Criterion,
+    judged: &CriterionJudgement,
+    stopped: &StoppedClear,
+) -> String {
+    let phrases: Vec<String> = stopped
+        .stops
+        .iter()
+        .map(|stop| stop_phrase(told, criterion, judged, *stop))
+        .collect();
+    listed(&phrases)
+}
+
+fn stop_phrase(told: Told, criterion: &Criterion, judged: &CriterionJudgement, stop: Stop) -> String {
+    match stop {
+        Stop::Caution(index) => {
+            let id = told
+                .rules
+                .cautions
+                .get(index)
+                .map_or("", |caution| caution.id.as_str());
+            format!("the caution `{id}` does not let this value clear")
+        }
+        Stop::WithinOneSd => {
+            "the value is modelled and the limit lies within one standard deviation of it".to_owned()
+        }
+        Stop::RelationFromMemory(relation) => {
+            format!("the coefficients of {} are from memory", citation(told, relation))
+        }
+        Stop::LimitFromMemory => {
+            "the limit is from memory: check the current text before relying on it".to_owned()
+        }
+        Stop::LowSide { relation, log_value } => format!(
+            "{} could give a value as low as {} for a substance of its kind",
+            citation(told, relation),
+            format_number(10f64.powf(log_value))
+        ),
+        Stop::Guard(step) => format!(
+            "{} points the other way",
+            guard_brief(told, criterion, judged, step)
+        ),
+        Stop::OpenGuard(step) => {
+            let missing = guard_missing(criterion, judged, step);
+            format!("{} could point the other way and is not known", listed(&missing))
+        }
+        Stop::EarlierDoubt => "an earlier step had already left doubt".to_owned(),
+    }
+}
+
+fn citation(told: Told, relation: usize) -> String {
+    let citation = told
+        .rules
+        .relations
+        .relations
+        .get(relation)
+        .map_or("", |line| line.citation.as_str());
+    short_citation(citation).to_owned()
+}
+
+fn guard_brief(told: Told, criterion: &Criterion, judged: &CriterionJudgement, step: usize) -> String {
+    let (Some(rule), Some(came_out)) = (criterion.steps.get(step), judged.steps.get(step)) else {
+        return String::new();
+    };
+    let briefs: Vec<String> = came_out
+        .by
+        .iter()
+        .filter_map(|index| {
+            Some(test_brief(
+                told,
+                rule.tests.get(*index)?,
+                came_out.tests.get(*index)?,
+            ))
+        })
+        .collect();
+    listed(&briefs)
+}
+
+fn guard_missing(criterion: &Criterion, judged: &CriterionJudgement, step: usize) -> Vec<String> {
+    let (Some(rule), Some(came_out)) = (criterion.steps.get(step), judged.steps.get(step)) else {
+        return Vec::new();
+    };
+    titles(
+        came_out
+            .by
+            .iter()
+            .filter_map(|index| rule.tests.get(*index))
+            .map(|test| test.subject),
+    )
+}
