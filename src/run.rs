@@ -1,1 +1,168 @@
-//! (being built)
+//! A run: the row's way in order.
+//!
+//! One thread reads rows, the rayon pool judges a batch at a time, and this thread writes them in the order they were
+//! read. Rows are judged alone, so the number of threads changes no byte of the output.
+
+mod judged_row;
+mod output;
+mod plan;
+
+use std::collections::BTreeMap;
+use std::path::PathBuf;
+use std::sync::mpsc::{Receiver, SyncSender, sync_channel};
+
+use rayon::iter::{IntoParallelIterator, ParallelIterator};
+
+pub use judged_row::JudgedRow;
+pub use plan::{RecognisedSheet, recognise_columns};
+
+use crate::columns::ColumnOverride;
+use crate::fault::{CellFault, FileFault, Refusal};
+use crate::judge::Verdict;
+use crate::quantity::Date;
+use crate::report::ReasoningMode;
+use crate::rules::{RuleSet, load_rule_set};
+use crate::substance::UnstatedBasis;
+use crate::workbook::{Inventory, Overwrite, Row, open_inventory};
+use judged_row::judge_row;
+use output::Output;
+use plan::{Plan, SheetPlan};
+
+/// What a run is asked to do.
+#[derive(Debug, Clone)]
+pub struct ScreenSettings {
+    /// The inventory.
+    pub inventory: PathBuf,
+    /// The annotated workbook.
+    pub output: PathBuf,
+    /// What happens to an output that exists.
+    pub overwrite: Overwrite,
+    /// Rulebooks by id, file or folder; empty for the default set.
+    pub rulebooks: Vec<String>,
+    /// Names of the sheets to screen; empty for every sheet with a recognised header.
+    pub sheets: Vec<String>,
+    /// What columns hold, as the user says.
+    pub columns: Vec<ColumnOverride>,
+    /// What a value without a word on its basis counts as.
+    pub unstated: UnstatedBasis,
+    /// Which lines the Reasoning sheet holds.
+    pub reasoning: ReasoningChoice,
+    /// Threads that judge; none for one a core.
+    pub threads: Option<usize>,
+    /// The day of the run.
+    pub date: Date,
+}
+
+/// Which lines the Reasoning sheet shall hold.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub enum ReasoningChoice {
+    /// All lines up to 200,000, else those at `unresolved` or above.
+    Auto,
+    /// This, whatever the size.
+    Always(ReasoningMode),
+}
+
+/// What came out of a run.
+#[derive(Debug, Clone, PartialEq)]
+pub struct Summary {
+    /// The annotated workbook.
+    pub output: PathBuf,
+    /// Rows that were screened.
+    pub screened: usize,
+    /// Sheets that were screened and sheets that were copied.
+    pub sheets: (usize, usize),
+    /// For each rulebook, its short name and how many headlines have each verdict; listed rows apart.
+    pub headlines: Vec<(String, BTreeMap<Verdict, usize>, usize)>,
+    /// Tests that no row's data reached: rulebook, criterion and property.
+    pub unreached: Vec<String>,
+    /// Remarks on columns: sheet and remark.
+    pub column_remarks: Vec<(String, String)>,
+    /// What could not be carried over.
+    pub not_carried: Vec<String>,
+    /// Cells that could not be read, the first of them.
+    pub faults: Vec<CellFault>,
+    /// How many cells could not be read.
+    pub fault_total: usize,
+}
+
+/// Rows that travel together.
+const ROWS_A_BATCH: usize = 512;
+/// Batches that may wait between two stages.
+const BATCHES_WAITING: usize = 4;
+
+/// Screens an inventory and writes it back, annotated.
+pub fn screen(settings: &ScreenSettings) -> Result<Summary, Refusal> {
+    let rules = load_rule_set(&settings.rulebooks)?;
+    let inventory = open_inventory(&settings.inventory)?;
+    let plan = Plan::new(&inventory, &rules, settings)?;
+    let mut output = Output::create(settings, &inventory, &plan, &rules)?;
+    let pool = rayon::ThreadPoolBuilder::new()
+        .num_threads(settings.threads.unwrap_or(0))
+        .build()
+        .map_err(|error| Refusal::Usage(format!("the threads could not be started ({error}); try --threads 1")))?;
+    for sheet in &plan.sheets {
+        stream_sheet(&inventory, sheet, &plan, &rules, &pool, &mut output)?;
+    }
+    output.finish(settings, &inventory, &plan, &rules)
+}
+
+/// Reads, judges and writes one sheet, the three at the same time.
+fn stream_sheet(
+    inventory: &Inventory,
+    sheet: &SheetPlan,
+    plan: &Plan,
+    rules: &RuleSet,
+    pool: &rayon::ThreadPool,
+    output: &mut Output,
+) -> Result<(), Refusal> {
+    std::thread::scope(|scope| {
+        let (to_judge, rows) = sync_channel(BATCHES_WAITING);
+        let (to_write, judged) = sync_channel(BATCHES_WAITING);
+        scope.spawn(move || read_batches(inventory, sheet, &to_judge));
+        scope.spawn(move || judge_batches(&rows, sheet, plan, rules, pool, &to_write));
+        for batch in judged {
+            for row in batch? {
+                output.write_row(sheet, row)?;
+            }
+        }
+        Ok(())
+    })
+}
+
+type Batch<T> = Result<Vec<T>, FileFault>;
+
+/// A closed channel means that a later stage gave up, with the reason on its own way to the user.
+fn read_batches(inventory: &Inventory, sheet: &SheetPlan, to_judge: &SyncSender<Batch<Row>>) {
+    let mut batch = Vec::with_capacity(ROWS_A_BATCH);
+    let read = inventory.stream_rows(sheet.index, |row| {
+        batch.push(row);
+        if batch.len() < ROWS_A_BATCH {
+            return std::ops::ControlFlow::Continue(());
+        }
+        match to_judge.send(Ok(std::mem::replace(&mut batch, Vec::with_capacity(ROWS_A_BATCH)))) {
+            Ok(()) => std::ops::ControlFlow::Continue(()),
+            Err(_) => std::ops::ControlFlow::Break(()),
+        }
+    });
+    let _ = to_judge.send(read.map(|()| batch));
+}
+
+fn judge_batches(
+    rows: &Receiver<Batch<Row>>,
+    sheet: &SheetPlan,
+    plan: &Plan,
+    rules: &RuleSet,
+    pool: &rayon::ThreadPool,
+    to_write: &SyncSender<Batch<JudgedRow>>,
+) {
+    for batch in rows {
+        let judged = batch.map(|rows| {
+            pool.install(|| {
+                rows.into_par_iter().map(|row| judge_row(row, sheet, plan.reasoning, rules)).collect::<Vec<_>>()
+            })
+        });
+        if to_write.send(judged).is_err() {
+            return;
+        }
+    }
+}

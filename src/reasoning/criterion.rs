@@ -36,6 +36,8 @@ pub struct Line {
     pub cautions: String,
     /// Paragraph of the legal text and how the limit was checked.
     pub source: String,
+    /// The data that would settle it, where it is open.
+    pub would_settle: String,
 }
 
 /// The line of one criterion.
@@ -44,6 +46,7 @@ pub fn criterion_line(book: Book, criterion: &Criterion, judged: &CriterionJudge
         verdict: verdict_text(criterion, judged),
         sentence: sentence(book, criterion, judged),
         cautions: cautions(book.told, judged),
+        would_settle: would_settle(judged),
         ..Line::default()
     };
     if let Some((test, came_out)) = shown_test(criterion, judged) {
@@ -56,6 +59,14 @@ pub fn criterion_line(book: Book, criterion: &Criterion, judged: &CriterionJudge
         fill_value(&mut line, book.told, rated);
     }
     line
+}
+
+fn would_settle(judged: &CriterionJudgement) -> String {
+    match &judged.deciding {
+        Some(Deciding::Data(subjects)) => listed(&titles(subjects.iter().copied())),
+        Some(Deciding::ExpertJudgement) => "expert judgement".to_owned(),
+        None => String::new(),
+    }
 }
 
 fn fill_value(line: &mut Line, told: Told, used: &Used) {

@@ -96,7 +96,7 @@ pub(crate) fn value_phrase(told: Told, used: &Used) -> String {
 }
 
 /// The limit as a reader knows it: `> 2000 L/kg`, `H350 or H340`, `not readily biodegradable`.
-pub(crate) fn limit_phrase(test: &Test) -> String {
+pub fn limit_phrase(test: &Test) -> String {
     match &test.limit {
         Limit::Number { comparison, .. } => format!("{} {}", comparison.sign(), test.limit_text),
         Limit::Between { .. } => test.limit_text.clone(),

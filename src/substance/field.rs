@@ -1,5 +1,6 @@
 //! What a column may hold.
 
+use crate::quantity::Unit;
 use crate::substance::Property;
 
 /// The meaning of a column.
@@ -171,6 +172,17 @@ impl Field {
     /// The field a rule file or `--column` names.
     pub fn from_id(id: &str) -> Option<Self> {
         Self::all().find(|field| field.id() == id)
+    }
+
+    /// The unit assumed where neither cell nor header names one, for fields that hold numbers.
+    pub fn default_unit(self) -> Option<Unit> {
+        match self {
+            Self::Property(property) => Some(property.default_unit()),
+            Self::BcfLipid | Self::Content => Some(Unit::Percent),
+            Self::LogKowTemperature | Self::HalfLifeTemperature => Some(Unit::Celsius),
+            Self::Tonnage => Some(Unit::TonnePerYear),
+            _ => None,
+        }
     }
 
     /// Whether the column alone makes a sheet an inventory.

@@ -1,0 +1,154 @@
+//! What the terminal shows: summaries on stdout, faults and refusals on stderr. The only place that prints.
+
+use std::io::{self, Write};
+
+use kowledger::fault::{Refusal, count};
+use kowledger::judge::Verdict;
+use kowledger::rules::RulebookSummary;
+use kowledger::run::{RecognisedSheet, Summary};
+use kowledger::workbook::column_letters;
+
+/// Faults that are shown one by one; the total follows.
+const FAULTS_SHOWN: usize = 20;
+
+/// How much a run says.
+pub(crate) struct Console {
+    quiet: bool,
+}
+
+impl Console {
+    pub(crate) fn new(quiet: bool) -> Self {
+        Self { quiet }
+    }
+
+    /// What came out of a run.
+    pub(crate) fn summary(&self, summary: &Summary) {
+        show_faults(summary);
+        if self.quiet {
+            return;
+        }
+        let mut lines = vec![format!(
+            "Screened {} on {}; {} copied.",
+            count(summary.screened, "row", "rows"),
+            count(summary.sheets.0, "sheet", "sheets"),
+            count(summary.sheets.1, "other sheet", "other sheets")
+        )];
+        lines.extend(summary.headlines.iter().map(|(short, counts, listed)| {
+            let mut parts: Vec<String> = Verdict::ALL
+                .iter()
+                .filter_map(|verdict| counts.get(verdict).map(|number| format!("{number} {}", verdict.words())))
+                .collect();
+            if *listed > 0 {
+                parts.insert(0, format!("{listed} listed"));
+            }
+            format!("  {short}: {}", parts.join(", "))
+        }));
+        lines.extend(summary.column_remarks.iter().map(|(sheet, remark)| format!("Sheet {sheet}: {remark}")));
+        if !summary.unreached.is_empty() {
+            lines.push(format!("No row had a value for: {}.", summary.unreached.join("; ")));
+        }
+        if !summary.not_carried.is_empty() {
+            lines.push(format!("Not carried over: {}.", summary.not_carried.join("; ")));
+        }
+        lines.push(format!("Written: {}", summary.output.display()));
+        lines.push(
+            "A screening, not a decision: unresolved and no data are open questions, and a qualified person must confirm every verdict."
+                .to_owned(),
+        );
+        print(&lines);
+    }
+}
+
+fn show_faults(summary: &Summary) {
+    let mut lines: Vec<String> = summary.faults.iter().take(FAULTS_SHOWN).map(ToString::to_string).collect();
+    if summary.fault_total > FAULTS_SHOWN {
+        lines.push(format!(
+            "... and {} more; each stands in the Cautions cell of its row.",
+            summary.fault_total - FAULTS_SHOWN
+        ));
+    }
+    if summary.fault_total > 0 {
+        lines.push(format!(
+            "{} could not be read; the rows were screened with what remains.",
+            count(summary.fault_total, "cell", "cells")
+        ));
+    }
+    print_error(&lines);
+}
+
+/// Why nothing was written.
+pub(crate) fn refuse(refusal: &Refusal) {
+    print_error(&[refusal.to_string()]);
+}
+
+/// What was recognised on each sheet, and why.
+pub(crate) fn columns(sheets: &[RecognisedSheet]) {
+    let mut lines = Vec::new();
+    for sheet in sheets {
+        let Some(recognised) = &sheet.recognised else {
+            lines.push(format!("{}: no header recognised; the sheet would be copied.", sheet.name));
+            continue;
+        };
+        lines.push(format!("{}: header in row {}.", sheet.name, recognised.header_row + 1));
+        lines.extend(recognised.columns.iter().map(|column| {
+            format!(
+                "  {:<4}{:<34}{:<28}{}",
+                column_letters(column.index),
+                column.header.replace('\n', " "),
+                column.field.id(),
+                column.reason
+            )
+        }));
+        lines.extend(recognised.unknown.iter().map(|(index, header)| {
+            format!("  {:<4}{:<34}not recognised", column_letters(*index), header.replace('\n', " "))
+        }));
+        lines.extend(recognised.remarks.iter().map(|remark| format!("  {remark}")));
+    }
+    print(&lines);
+}
+
+/// The built-in rulebooks.
+pub(crate) fn rulebooks(summaries: &[RulebookSummary]) {
+    let lines: Vec<String> = summaries.iter().map(rulebook_line).collect();
+    print(&lines);
+}
+
+/// Rule files that are in order.
+pub(crate) fn checked(summaries: &[RulebookSummary]) {
+    let mut lines: Vec<String> = summaries.iter().map(rulebook_line).collect();
+    lines.push(format!("{} in order.", count(summaries.len(), "rulebook is", "rulebooks are")));
+    print(&lines);
+}
+
+fn rulebook_line(summary: &RulebookSummary) -> String {
+    format!(
+        "{:<28}{:<12}{}, edition {}: {}; limits seen {}, second-hand {}, from memory {}",
+        summary.id,
+        summary.short,
+        summary.title,
+        summary.edition,
+        count(summary.criteria, "criterion", "criteria"),
+        summary.seen,
+        summary.second_hand,
+        summary.memory
+    )
+}
+
+/// A reader that went away is no fault of ours.
+fn print(lines: &[String]) {
+    let mut out = io::stdout().lock();
+    for line in lines {
+        if writeln!(out, "{line}").is_err() {
+            return;
+        }
+    }
+}
+
+fn print_error(lines: &[String]) {
+    let mut out = io::stderr().lock();
+    for line in lines {
+        if writeln!(out, "{line}").is_err() {
+            return;
+        }
+    }
+}

@@ -1,0 +1,82 @@
+//! The Reasoning sheet: a line per row, rulebook and criterion.
+
+use crate::judge::Verdict;
+use crate::reasoning::{Told, criterion_line};
+use crate::report::Entry;
+use crate::report::added::shade;
+use crate::workbook::Look;
+
+/// Which lines the Reasoning sheet holds.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub enum ReasoningMode {
+    /// All.
+    All,
+    /// Those at `unresolved` or above.
+    Concern,
+    /// None.
+    None,
+}
+
+/// Headers and widths of the Reasoning sheet.
+pub const REASONING_COLUMNS: [(&str, f64); 19] = [
+    ("Sheet", 14.0),
+    ("Row", 7.0),
+    ("CAS number", 13.0),
+    ("Name", 28.0),
+    ("Rulebook", 12.0),
+    ("Criterion", 10.0),
+    ("Verdict", 20.0),
+    ("Value", 12.0),
+    ("Unit", 8.0),
+    ("SD (log units)", 9.0),
+    ("Basis", 14.0),
+    ("Origin", 26.0),
+    ("Limit", 16.0),
+    ("Beyond the limit by (log units)", 12.0),
+    ("Chance beyond the limit", 10.0),
+    ("Reasoning", 90.0),
+    ("Cautions that stopped a clear", 20.0),
+    ("Source of the limit", 40.0),
+    ("Would settle it", 30.0),
+];
+
+/// The lines of one row.
+pub fn reasoning_entries(told: Told, mode: ReasoningMode) -> Vec<Vec<Entry>> {
+    let mut lines = Vec::new();
+    for book in told.books() {
+        for (criterion, judged) in book.criteria() {
+            let shown = match mode {
+                ReasoningMode::All => true,
+                ReasoningMode::Concern => judged.verdict >= Verdict::Unresolved,
+                ReasoningMode::None => false,
+            };
+            if !shown {
+                continue;
+            }
+            let line = criterion_line(book, criterion, judged);
+            let substance = told.substance;
+            lines.push(vec![
+                Entry::text(substance.sheet.to_string(), Look::Text),
+                Entry::number(Some(f64::from(substance.row + 1)), Look::Text),
+                Entry::text(substance.cas.as_ref().map_or(String::new(), |cas| cas.value.to_string()), Look::Text),
+                Entry::text(substance.name.as_ref().map_or("", |name| name.value.as_str()), Look::Text),
+                Entry::text(book.rulebook.short.as_str(), Look::Text),
+                Entry::text(criterion.id.as_str(), Look::Text),
+                Entry::text(line.verdict, Look::Verdict(shade(judged.verdict))),
+                Entry::text(line.value, Look::Text),
+                Entry::text(line.unit, Look::Text),
+                Entry::number(line.sd, Look::Number),
+                Entry::text(line.basis, Look::Text),
+                Entry::text(line.origin, Look::Text),
+                Entry::text(line.limit, Look::Text),
+                Entry::number(line.margin, Look::Number),
+                Entry::number(line.chance, Look::Number),
+                Entry::text(line.sentence, Look::Wrapped),
+                Entry::text(line.cautions, Look::Text),
+                Entry::text(line.source, Look::Text),
+                Entry::text(line.would_settle, Look::Text),
+            ]);
+        }
+    }
+    lines
+}

@@ -1,0 +1,138 @@
+//! The Run record: what was read, with what, and what was left out.
+
+use crate::columns::Recognised;
+use crate::quantity::Date;
+use crate::report::{CAUTIONS_OF_USE, Entry, Table};
+use crate::rules::RuleSet;
+use crate::workbook::{Look, column_letters};
+
+/// What is known of a run when its rows are done.
+#[derive(Debug, Clone, PartialEq)]
+pub struct RunFacts {
+    /// The day of the run.
+    pub date: Date,
+    /// The inventory's file name, without its folder.
+    pub inventory: String,
+    /// SHA-256 of the inventory.
+    pub fingerprint: String,
+    /// Options that can change a cell, as `name`, `value`.
+    pub options: Vec<(&'static str, String)>,
+    /// SHA-256 of each rule file: name and fingerprint.
+    pub rule_fingerprints: Vec<(String, String)>,
+    /// The sheets, in order.
+    pub sheets: Vec<SheetFacts>,
+    /// What could not be carried over.
+    pub not_carried: Vec<String>,
+    /// Which lines the Reasoning sheet holds, in words.
+    pub reasoning: String,
+    /// The cells that could not be read, as told, the first of them.
+    pub faults: Vec<String>,
+    /// How many cells could not be read.
+    pub fault_total: usize,
+}
+
+/// One sheet of the inventory.
+#[derive(Debug, Clone, PartialEq)]
+pub struct SheetFacts {
+    /// Its name.
+    pub name: String,
+    /// Rows that were screened.
+    pub screened: usize,
+    /// What its columns hold; none where it was copied only.
+    pub recognised: Option<Recognised>,
+    /// Why it was copied only.
+    pub copied_because: String,
+}
+
+/// Lays out the Run record.
+pub fn run_record_table(facts: &RunFacts, rules: &RuleSet) -> Table {
+    let mut rows = vec![title("Run record")];
+    rows.push(pair("Screened with", format!("kowledger {}", env!("CARGO_PKG_VERSION"))));
+    rows.push(pair("Date of the run", facts.date.to_string()));
+    rows.push(pair("Inventory", facts.inventory.clone()));
+    rows.push(pair("SHA-256 of the inventory", facts.fingerprint.clone()));
+    rows.extend(facts.options.iter().map(|(name, value)| pair(name, value.clone())));
+    rows.push(pair("Reasoning sheet", facts.reasoning.clone()));
+    rows.push(title("Cautions of use"));
+    rows.extend(CAUTIONS_OF_USE.iter().map(|sentence| pair("", (*sentence).to_owned())));
+    rows.push(title("Rulebooks applied"));
+    rows.extend(rules.rulebooks.iter().map(|rulebook| {
+        pair(&rulebook.short, format!("{} — {}, edition {}", rulebook.title, rulebook.source, rulebook.edition))
+    }));
+    rows.push(title("SHA-256 of the rule files"));
+    rows.extend(facts.rule_fingerprints.iter().map(|(name, hash)| pair(name, hash.clone())));
+    for sheet in &facts.sheets {
+        rows.extend(sheet_rows(sheet));
+    }
+    rows.push(title("Not carried over"));
+    if facts.not_carried.is_empty() {
+        rows.push(pair("", "Nothing was found that is not carried over.".to_owned()));
+    }
+    rows.extend(facts.not_carried.iter().map(|text| pair("", text.clone())));
+    rows.extend(fault_rows(facts));
+    rows.push(title("Lists not consulted"));
+    rows.push(pair("", lists_not_consulted(rules)));
+    Table { name: "Run record", widths: vec![34.0, 120.0], frozen_rows: 0, rows }
+}
+
+fn lists_not_consulted(rules: &RuleSet) -> String {
+    let lists: Vec<&str> =
+        rules.rulebooks.iter().flat_map(|rulebook| &rulebook.listings).map(|listing| listing.title.as_str()).collect();
+    let consulted = if lists.is_empty() {
+        "No list of named substances was consulted".to_owned()
+    } else {
+        format!("Only these lists of named substances were consulted: {}", lists.join(", "))
+    };
+    format!(
+        "{consulted}. Candidate and authorisation lists, annexes of treaties, harmonised classifications and national inventories have to be looked up separately."
+    )
+}
+
+fn sheet_rows(sheet: &SheetFacts) -> Vec<Vec<Entry>> {
+    let mut rows = vec![title(&format!("Sheet: {}", sheet.name))];
+    let Some(recognised) = &sheet.recognised else {
+        rows.push(pair("Copied only", sheet.copied_because.clone()));
+        return rows;
+    };
+    rows.push(pair("Rows screened", sheet.screened.to_string()));
+    rows.push(pair("Header in row", (recognised.header_row + 1).to_string()));
+    for column in &recognised.columns {
+        let unit = match column.unit {
+            Some(unit) => format!("; unit of the header: {}", unit.symbol()),
+            None => column.field.default_unit().map_or(String::new(), |unit| {
+                format!("; no unit in the header: {} where the cell names none", unit_word(unit.symbol()))
+            }),
+        };
+        rows.push(pair(
+            &format!("{} {}", column_letters(column.index), column.header),
+            format!("{}{unit}. {}", column.field.id(), column.reason),
+        ));
+    }
+    rows.extend(recognised.unknown.iter().map(|(index, header)| {
+        pair(&format!("{} {header}", column_letters(*index)), "not recognised; carried along only".to_owned())
+    }));
+    rows.extend(recognised.remarks.iter().map(|remark| pair("Remark", remark.clone())));
+    rows
+}
+
+fn unit_word(symbol: &str) -> &str {
+    if symbol.is_empty() { "no unit" } else { symbol }
+}
+
+fn fault_rows(facts: &RunFacts) -> Vec<Vec<Entry>> {
+    let mut rows = vec![title(&format!("Cells that could not be read: {}", facts.fault_total))];
+    rows.extend(facts.faults.iter().map(|fault| pair("", fault.clone())));
+    if facts.fault_total > facts.faults.len() {
+        let rest = facts.fault_total - facts.faults.len();
+        rows.push(pair("", format!("and {rest} more; each stands in the Cautions cell of its row")));
+    }
+    rows
+}
+
+fn title(text: &str) -> Vec<Entry> {
+    vec![Entry::text(text, Look::Title)]
+}
+
+fn pair(name: &str, value: String) -> Vec<Entry> {
+    vec![Entry::text(name, Look::Text), Entry::text(value, Look::Wrapped)]
+}

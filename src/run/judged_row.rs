@@ -1,0 +1,82 @@
+//! One row from cells to the cells, lines and counts that come out of it.
+
+use crate::evidence::gather_evidence;
+use crate::fault::CellFault;
+use crate::judge::{Judgement, TestOutcome, Verdict, judge};
+use crate::reasoning::{Told, headline_verdict};
+use crate::report::{Entry, ReasoningMode, added_entries, reasoning_entries, record_entries};
+use crate::rules::RuleSet;
+use crate::run::plan::SheetPlan;
+use crate::workbook::{CellContent, Row};
+
+/// A row with what is written for it.
+#[derive(Debug)]
+pub struct JudgedRow {
+    /// The user's cells.
+    pub(crate) row: Row,
+    /// What is added; none for rows above the data, blank rows and sheets that are only copied.
+    pub(crate) added: Option<Added>,
+}
+
+/// What is added for a screened row.
+#[derive(Debug)]
+pub(crate) struct Added {
+    /// The added cells.
+    pub(crate) entries: Vec<Entry>,
+    /// The lines of the Reasoning sheet.
+    pub(crate) lines: Vec<Vec<Entry>>,
+    /// The line of the Record.
+    pub(crate) record: Vec<Entry>,
+    /// The verdict of each rulebook's headline; none where the row is listed.
+    pub(crate) headlines: Vec<Option<Verdict>>,
+    /// For each test of the rule set, in order, whether the row had a value for it.
+    pub(crate) reached: Vec<bool>,
+    /// Cells that could not be read.
+    pub(crate) faults: Vec<CellFault>,
+}
+
+/// Takes one row its whole way.
+pub(crate) fn judge_row(row: Row, sheet: &SheetPlan, reasoning: ReasoningMode, rules: &RuleSet) -> JudgedRow {
+    let Some(screened) = &sheet.screened else { return JudgedRow { row, added: None } };
+    let holds_data = row.index >= screened.recognised.first_data_row
+        && screened.recognised.columns.iter().any(|column| is_filled(&row, column.index));
+    if !holds_data {
+        return JudgedRow { row, added: None };
+    }
+    let substance = screened.reader.read(&row);
+    let evidence = gather_evidence(&substance, &rules.relations);
+    let judgement = judge(&substance, &evidence, rules);
+    let told = Told { substance: &substance, evidence: &evidence, rules, judgement: &judgement };
+    let added = Added {
+        entries: added_entries(told, &substance.faults),
+        lines: reasoning_entries(told, reasoning),
+        record: record_entries(told),
+        headlines: told.books().map(headline_verdict).collect(),
+        reached: reached(rules, &judgement),
+        faults: Vec::new(),
+    };
+    JudgedRow { row, added: Some(Added { faults: substance.faults, ..added }) }
+}
+
+fn is_filled(row: &Row, column: u16) -> bool {
+    row.cell(column).is_some_and(|cell| match &cell.content {
+        CellContent::Empty => false,
+        CellContent::Text(text) => !text.trim().is_empty(),
+        CellContent::Number(_) | CellContent::Boolean(_) | CellContent::DateTime(_) | CellContent::Error(_) => true,
+    })
+}
+
+/// Which tests found a value, in the order of the rule set; a criterion that took no steps reached none of its tests.
+fn reached(rules: &RuleSet, judgement: &Judgement) -> Vec<bool> {
+    let mut reached = Vec::new();
+    for (rulebook, judged) in rules.rulebooks.iter().zip(&judgement.rulebooks) {
+        for (criterion, judged) in rulebook.criteria.iter().zip(&judged.criteria) {
+            for (number, step) in criterion.steps.iter().enumerate() {
+                let tests = judged.steps.get(number).map_or(&[][..], |step| step.tests.as_slice());
+                let found = |place: usize| tests.get(place).is_some_and(|test| test.outcome != TestOutcome::Missing);
+                reached.extend((0..step.tests.len()).map(found));
+            }
+        }
+    }
+    reached
+}

@@ -1,0 +1,344 @@
+//! Writing a run: the user's sheets row by row, then the added sheets.
+
+use std::collections::BTreeMap;
+
+use crate::fault::{CellFault, FileFault, Refusal};
+use crate::judge::Verdict;
+use crate::report::{
+    Entry, EntryContent, REASONING_COLUMNS, ReasoningMode, RunFacts, SheetFacts, Table, record_head, rulebooks_table,
+    run_record_table,
+};
+use crate::rules::RuleSet;
+use crate::run::judged_row::{Added, JudgedRow};
+use crate::run::plan::{Plan, SheetPlan};
+use crate::run::{ScreenSettings, Summary};
+use crate::substance::UnstatedBasis;
+use crate::workbook::{
+    AnnotatedWorkbook, Inventory, Look, Overwrite, SheetId, Value, Visibility, fingerprint_of_text,
+};
+
+/// Faults that are kept with their wording; the others are counted.
+const FAULTS_KEPT: usize = 1_000;
+/// Rows of a sheet, less the header.
+const LINES_A_SHEET: u32 = 1_048_575;
+
+/// The annotated workbook in the making, and the counts of the run.
+pub(crate) struct Output {
+    workbook: AnnotatedWorkbook,
+    sheets: Vec<SheetId>,
+    reasoning: Option<SheetWriter>,
+    record: SheetWriter,
+    screened: Vec<usize>,
+    headlines: Vec<(BTreeMap<Verdict, usize>, usize)>,
+    reached: Vec<bool>,
+    faults: Vec<CellFault>,
+    fault_total: usize,
+}
+
+/// A sheet of ours that grows row by row, and goes on in another at the format's row limit.
+struct SheetWriter {
+    name: &'static str,
+    sheet: SheetId,
+    next_row: u32,
+    part: u32,
+}
+
+impl Output {
+    pub(crate) fn create(
+        settings: &ScreenSettings,
+        inventory: &Inventory,
+        plan: &Plan,
+        rules: &RuleSet,
+    ) -> Result<Self, Refusal> {
+        FileFault::refuse_same_file(&settings.inventory, &settings.output)?;
+        let appearances = inventory.appearances();
+        let mut workbook =
+            AnnotatedWorkbook::create(&settings.output, settings.overwrite, settings.date, &appearances)?;
+        let mut sheets = Vec::new();
+        for (sheet, survey) in plan.sheets.iter().zip(inventory.sheets()) {
+            let id = workbook.add_sheet(&sheet.name, survey.visibility)?;
+            for width in &survey.column_widths {
+                workbook.set_column_width(id, width.first, width.last, width.width)?;
+                if width.hidden {
+                    workbook.hide_columns(id, width.first, width.last)?;
+                }
+            }
+            lay_out_added(&mut workbook, id, sheet)?;
+            sheets.push(id);
+        }
+        let reasoning = match plan.reasoning {
+            ReasoningMode::All | ReasoningMode::Concern => Some(new_reasoning_sheet(&mut workbook, 1)?),
+            ReasoningMode::None => None,
+        };
+        let record = SheetWriter {
+            name: "Record",
+            sheet: workbook.add_sheet("Record", Visibility::VeryHidden)?,
+            next_row: 0,
+            part: 1,
+        };
+        let mut output = Self {
+            workbook,
+            sheets,
+            reasoning,
+            record,
+            screened: vec![0; plan.sheets.len()],
+            headlines: vec![(BTreeMap::new(), 0); rules.rulebooks.len()],
+            reached: Vec::new(),
+            faults: Vec::new(),
+            fault_total: 0,
+        };
+        let spans: Vec<_> = plan.sheets.iter().filter_map(span).collect();
+        for row in record_head(rules, &spans) {
+            output.write_record(&row)?;
+        }
+        Ok(output)
+    }
+
+    pub(crate) fn write_row(&mut self, sheet: &SheetPlan, row: JudgedRow) -> Result<(), Refusal> {
+        let Some(id) = self.sheets.get(sheet.index).copied() else { return Ok(()) };
+        let index = row.row.index;
+        self.workbook.write_row(id, &row.row)?;
+        let Some(screened) = &sheet.screened else { return Ok(()) };
+        if index == screened.recognised.header_row {
+            for (column, header) in (screened.first_added..).zip(&screened.added.headers) {
+                self.workbook.write(id, index, column, &Value::Text(header), Look::Header)?;
+            }
+        }
+        if let Some(added) = row.added {
+            if let Some(count) = self.screened.get_mut(sheet.index) {
+                *count += 1;
+            }
+            for (column, entry) in (screened.first_added..).zip(&added.entries) {
+                write_entry(&mut self.workbook, id, index, column, entry)?;
+            }
+            self.count(added)?;
+        }
+        Ok(())
+    }
+
+    fn count(&mut self, added: Added) -> Result<(), Refusal> {
+        for line in &added.lines {
+            self.write_reasoning(line)?;
+        }
+        self.write_record(&added.record)?;
+        for ((counts, listed), verdict) in self.headlines.iter_mut().zip(added.headlines) {
+            match verdict {
+                Some(verdict) => *counts.entry(verdict).or_default() += 1,
+                None => *listed += 1,
+            }
+        }
+        if self.reached.len() < added.reached.len() {
+            self.reached.resize(added.reached.len(), false);
+        }
+        for (so_far, reached) in self.reached.iter_mut().zip(added.reached) {
+            *so_far |= reached;
+        }
+        self.fault_total += added.faults.len();
+        let room = FAULTS_KEPT.saturating_sub(self.faults.len());
+        self.faults.extend(added.faults.into_iter().take(room));
+        Ok(())
+    }
+
+    fn write_reasoning(&mut self, line: &[Entry]) -> Result<(), Refusal> {
+        let Some(writer) = &mut self.reasoning else { return Ok(()) };
+        if writer.next_row > LINES_A_SHEET {
+            *writer = new_reasoning_sheet(&mut self.workbook, writer.part + 1)?;
+        }
+        write_line(&mut self.workbook, writer, line)
+    }
+
+    fn write_record(&mut self, line: &[Entry]) -> Result<(), Refusal> {
+        if self.record.next_row > LINES_A_SHEET {
+            let part = self.record.part + 1;
+            let sheet = self.workbook.add_sheet(&format!("{} {part}", self.record.name), Visibility::VeryHidden)?;
+            self.record = SheetWriter { name: self.record.name, sheet, next_row: 0, part };
+        }
+        write_line(&mut self.workbook, &mut self.record, line)
+    }
+
+    /// Writes the added sheets, puts the workbook in its place and sums the run up.
+    pub(crate) fn finish(
+        mut self,
+        settings: &ScreenSettings,
+        inventory: &Inventory,
+        plan: &Plan,
+        rules: &RuleSet,
+    ) -> Result<Summary, Refusal> {
+        write_table(&mut self.workbook, &rulebooks_table(rules))?;
+        let facts = self.facts(settings, inventory, plan, rules);
+        write_table(&mut self.workbook, &run_record_table(&facts, rules))?;
+        self.workbook.finish()?;
+        let copied = plan.sheets.iter().filter(|sheet| sheet.screened.is_none()).count();
+        Ok(Summary {
+            output: settings.output.clone(),
+            screened: self.screened.iter().sum(),
+            sheets: (plan.sheets.len() - copied, copied),
+            headlines: rules
+                .rulebooks
+                .iter()
+                .zip(self.headlines)
+                .map(|(rulebook, (counts, listed))| (rulebook.short.clone(), counts, listed))
+                .collect(),
+            unreached: unreached(rules, &self.reached),
+            column_remarks: column_remarks(plan),
+            not_carried: facts.not_carried,
+            faults: self.faults,
+            fault_total: self.fault_total,
+        })
+    }
+
+    fn facts(&self, settings: &ScreenSettings, inventory: &Inventory, plan: &Plan, rules: &RuleSet) -> RunFacts {
+        let file_name = settings.inventory.file_name().map(|name| name.to_string_lossy().into_owned());
+        RunFacts {
+            date: settings.date,
+            inventory: file_name.unwrap_or_default(),
+            fingerprint: inventory.fingerprint(),
+            options: options(settings),
+            rule_fingerprints: rules
+                .texts
+                .iter()
+                .map(|rule| (rule.name.clone(), fingerprint_of_text(&rule.text)))
+                .collect(),
+            sheets: plan
+                .sheets
+                .iter()
+                .zip(&self.screened)
+                .map(|(sheet, screened)| SheetFacts {
+                    name: sheet.name.to_string(),
+                    screened: *screened,
+                    recognised: sheet.screened.as_ref().map(|screened| screened.recognised.clone()),
+                    copied_because: sheet.copied_because.clone(),
+                })
+                .collect(),
+            not_carried: inventory.not_carried(),
+            reasoning: match plan.reasoning {
+                ReasoningMode::All => "a line for every row, rulebook and criterion".to_owned(),
+                ReasoningMode::Concern => {
+                    "only lines at `unresolved` or above; `--reasoning all` writes every line".to_owned()
+                }
+                ReasoningMode::None => "not written (`--reasoning none`)".to_owned(),
+            },
+            faults: self.faults.iter().map(ToString::to_string).collect(),
+            fault_total: self.fault_total,
+        }
+    }
+}
+
+fn options(settings: &ScreenSettings) -> Vec<(&'static str, String)> {
+    let mut options = Vec::new();
+    let unstated = match settings.unstated {
+        UnstatedBasis::Measured => "measured",
+        UnstatedBasis::Unstated => "unstated (a rank of its own)",
+        UnstatedBasis::Calculated => "calculated",
+    };
+    options.push(("Values without a word on how they were obtained count as", unstated.to_owned()));
+    if !settings.sheets.is_empty() {
+        options.push(("Sheets named", settings.sheets.join(", ")));
+    }
+    for column in &settings.columns {
+        let field = column.field.map_or("ignore", crate::substance::Field::id);
+        options.push(("Column named", format!("{}={field}", column.header)));
+    }
+    options
+}
+
+fn column_remarks(plan: &Plan) -> Vec<(String, String)> {
+    plan.sheets
+        .iter()
+        .filter_map(|sheet| Some((sheet, sheet.screened.as_ref()?)))
+        .flat_map(|(sheet, screened)| {
+            screened.recognised.remarks.iter().map(|remark| (sheet.name.to_string(), remark.clone()))
+        })
+        .collect()
+}
+
+/// Tests that found no value in any row, so that a rule nobody's data reach does not go unnoticed.
+fn unreached(rules: &RuleSet, reached: &[bool]) -> Vec<String> {
+    let tests = rules.rulebooks.iter().flat_map(|rulebook| {
+        rulebook.criteria.iter().flat_map(move |criterion| {
+            criterion.steps.iter().flat_map(move |step| {
+                step.tests
+                    .iter()
+                    .map(move |test| format!("{} {}: {}", rulebook.short, criterion.id, test.subject.title()))
+            })
+        })
+    });
+    let mut names: Vec<String> = Vec::new();
+    for (name, reached) in tests.zip(reached) {
+        if !reached && !names.contains(&name) {
+            names.push(name);
+        }
+    }
+    names
+}
+
+fn span(sheet: &SheetPlan) -> Option<(String, u32, u16, Vec<String>)> {
+    let screened = sheet.screened.as_ref()?;
+    let headers = screened.added.headers.clone();
+    Some((sheet.name.to_string(), screened.recognised.header_row, screened.first_added, headers))
+}
+
+fn lay_out_added(workbook: &mut AnnotatedWorkbook, id: SheetId, sheet: &SheetPlan) -> Result<(), FileFault> {
+    let Some(screened) = &sheet.screened else { return Ok(()) };
+    for (column, width) in (screened.first_added..).zip(&screened.added.widths) {
+        workbook.set_column_width(id, column, column, *width)?;
+    }
+    for (first, last) in &screened.added.folded {
+        let place = |offset: usize| u16::try_from(usize::from(screened.first_added) + offset).ok();
+        if let (Some(first), Some(last)) = (place(*first), place(*last)) {
+            workbook.group_columns(id, first, last)?;
+        }
+    }
+    workbook.freeze_rows(id, screened.recognised.header_row + 1)
+}
+
+fn new_reasoning_sheet(workbook: &mut AnnotatedWorkbook, part: u32) -> Result<SheetWriter, FileFault> {
+    let name = "Reasoning";
+    let title = if part == 1 { name.to_owned() } else { format!("{name} {part}") };
+    let sheet = workbook.add_sheet(&title, Visibility::Visible)?;
+    for (column, (header, width)) in (0u16..).zip(REASONING_COLUMNS) {
+        workbook.set_column_width(sheet, column, column, width)?;
+        workbook.write(sheet, 0, column, &Value::Text(header), Look::Header)?;
+    }
+    workbook.freeze_rows(sheet, 1)?;
+    Ok(SheetWriter { name, sheet, next_row: 1, part })
+}
+
+fn write_line(workbook: &mut AnnotatedWorkbook, writer: &mut SheetWriter, line: &[Entry]) -> Result<(), Refusal> {
+    for (column, entry) in (0u16..).zip(line) {
+        write_entry(workbook, writer.sheet, writer.next_row, column, entry)?;
+    }
+    writer.next_row += 1;
+    Ok(())
+}
+
+fn write_table(workbook: &mut AnnotatedWorkbook, table: &Table) -> Result<(), FileFault> {
+    let sheet = workbook.add_sheet(table.name, Visibility::Visible)?;
+    for (column, width) in (0u16..).zip(&table.widths) {
+        workbook.set_column_width(sheet, column, column, *width)?;
+    }
+    if table.frozen_rows > 0 {
+        workbook.freeze_rows(sheet, table.frozen_rows)?;
+    }
+    for (row, entries) in (0u32..).zip(&table.rows) {
+        for (column, entry) in (0u16..).zip(entries) {
+            write_entry(workbook, sheet, row, column, entry)?;
+        }
+    }
+    Ok(())
+}
+
+fn write_entry(
+    workbook: &mut AnnotatedWorkbook,
+    sheet: SheetId,
+    row: u32,
+    column: u16,
+    entry: &Entry,
+) -> Result<(), FileFault> {
+    let value = match &entry.content {
+        EntryContent::Empty => Value::Empty,
+        EntryContent::Text(text) => Value::Text(text),
+        EntryContent::Number(number) => Value::Number(*number),
+    };
+    workbook.write(sheet, row, column, &value, entry.look)
+}

@@ -1,0 +1,169 @@
+//! What is known before the first row is judged: which sheets are screened and what their columns hold.
+
+use std::path::Path;
+use std::sync::Arc;
+
+use crate::columns::{ColumnOverride, ColumnWords, Recognised, recognise};
+use crate::fault::{FileFault, Refusal, nearest};
+use crate::report::{AddedColumns, ReasoningMode, added_columns};
+use crate::rules::RuleSet;
+use crate::run::{ReasoningChoice, ScreenSettings};
+use crate::substance::RowReader;
+use crate::workbook::{CellContent, Inventory, Row, open_inventory};
+
+/// Rows at the top of a sheet in which a header is looked for and decimal styles are sampled.
+const ROWS_LOOKED_AT: usize = 200;
+/// Above this number of lines the Reasoning sheet holds only what is of concern.
+const LINES_IN_FULL: usize = 200_000;
+
+/// What each sheet is.
+#[derive(Debug)]
+pub(crate) struct Plan {
+    /// The sheets, in order.
+    pub(crate) sheets: Vec<SheetPlan>,
+    /// Which lines the Reasoning sheet holds.
+    pub(crate) reasoning: ReasoningMode,
+}
+
+/// One sheet.
+#[derive(Debug)]
+pub(crate) struct SheetPlan {
+    /// Its place in the inventory.
+    pub(crate) index: usize,
+    /// Its name.
+    pub(crate) name: Arc<str>,
+    /// How it is screened; none where it is only copied.
+    pub(crate) screened: Option<Screened>,
+    /// Why it is only copied.
+    pub(crate) copied_because: String,
+}
+
+/// How a sheet is screened.
+#[derive(Debug)]
+pub(crate) struct Screened {
+    /// Its header and columns.
+    pub(crate) recognised: Recognised,
+    /// Reads its rows.
+    pub(crate) reader: RowReader,
+    /// The added columns.
+    pub(crate) added: AddedColumns,
+    /// The first added column.
+    pub(crate) first_added: u16,
+}
+
+/// A sheet and what was recognised on it, for `kowledger columns`.
+#[derive(Debug, Clone, PartialEq)]
+pub struct RecognisedSheet {
+    /// The sheet's name.
+    pub name: String,
+    /// Its header and columns, if it has any that are known.
+    pub recognised: Option<Recognised>,
+}
+
+/// What the columns of an inventory hold, and why.
+pub fn recognise_columns(
+    inventory: &Path,
+    overrides: &[ColumnOverride],
+) -> Result<Vec<RecognisedSheet>, Refusal> {
+    let inventory = open_inventory(inventory)?;
+    let words = ColumnWords::built_in().map_err(Refusal::Usage)?;
+    let mut sheets = Vec::new();
+    for (index, sheet) in inventory.sheets().iter().enumerate() {
+        let first_rows = inventory.first_rows(index, ROWS_LOOKED_AT)?;
+        let recognised = recognise(&sheet.name, &first_rows, &words, overrides);
+        sheets.push(RecognisedSheet { name: sheet.name.to_string(), recognised });
+    }
+    Ok(sheets)
+}
+
+impl Plan {
+    pub(crate) fn new(inventory: &Inventory, rules: &RuleSet, settings: &ScreenSettings) -> Result<Self, Refusal> {
+        refuse_unknown_sheets(inventory, settings)?;
+        let words = ColumnWords::built_in().map_err(Refusal::Usage)?;
+        let mut sheets = Vec::new();
+        let mut lines = 0;
+        let lines_a_row: usize = rules.rulebooks.iter().map(|rulebook| rulebook.criteria.len()).sum();
+        for (index, survey) in inventory.sheets().iter().enumerate() {
+            let wanted = settings.sheets.is_empty() || settings.sheets.iter().any(|name| **name == *survey.name);
+            let mut sheet = SheetPlan {
+                index,
+                name: survey.name.clone(),
+                screened: None,
+                copied_because: "not among the sheets named with --sheet".to_owned(),
+            };
+            if wanted {
+                let first_rows = inventory.first_rows(index, ROWS_LOOKED_AT)?;
+                match recognise(&survey.name, &first_rows, &words, &settings.columns) {
+                    Some(recognised) => {
+                        let taken = headers(&first_rows, recognised.header_row);
+                        let added = added_columns(rules, &taken);
+                        let first_added = survey.used_columns;
+                        refuse_overwide(&survey.name, first_added, added.headers.len())?;
+                        let reader = RowReader::new(survey.name.clone(), &recognised, settings.unstated);
+                        sheet.screened = Some(Screened { recognised, reader, added, first_added });
+                        lines += usize::try_from(survey.last_row).unwrap_or(usize::MAX).saturating_mul(lines_a_row);
+                    }
+                    None => sheet.copied_because = NO_HEADER.to_owned(),
+                }
+            }
+            sheets.push(sheet);
+        }
+        if sheets.iter().all(|sheet| sheet.screened.is_none()) {
+            return Err(FileFault::NoHeader {
+                path: settings.inventory.display().to_string(),
+                sheets: sheets.iter().map(|sheet| sheet.name.to_string()).collect(),
+            }
+            .into());
+        }
+        let reasoning = match settings.reasoning {
+            ReasoningChoice::Always(mode) => mode,
+            ReasoningChoice::Auto if lines <= LINES_IN_FULL => ReasoningMode::All,
+            ReasoningChoice::Auto => ReasoningMode::Concern,
+        };
+        Ok(Self { sheets, reasoning })
+    }
+}
+
+const NO_HEADER: &str =
+    "no header was recognised: a column for a CAS number, EC number or structure, or a name beside another known column";
+
+fn headers(first_rows: &[Row], header_row: u32) -> Vec<String> {
+    first_rows
+        .iter()
+        .filter(|row| row.index == header_row)
+        .flat_map(|row| &row.cells)
+        .filter_map(|cell| match &cell.content {
+            CellContent::Text(text) => Some(text.clone()),
+            CellContent::Empty
+            | CellContent::Number(_)
+            | CellContent::Boolean(_)
+            | CellContent::DateTime(_)
+            | CellContent::Error(_) => None,
+        })
+        .collect()
+}
+
+fn refuse_unknown_sheets(inventory: &Inventory, settings: &ScreenSettings) -> Result<(), Refusal> {
+    let names: Vec<&str> = inventory.sheets().iter().map(|sheet| &*sheet.name).collect();
+    for wanted in &settings.sheets {
+        if !names.contains(&wanted.as_str()) {
+            let hint = nearest(wanted, names.iter().copied())
+                .map_or(String::new(), |name| format!(" Did you mean `{name}`?"));
+            return Err(Refusal::Usage(format!(
+                "--sheet {wanted}: the inventory has no sheet of that name; it has {}.{hint}",
+                names.join(", ")
+            )));
+        }
+    }
+    Ok(())
+}
+
+/// A sheet has 16,384 columns.
+const COLUMNS_A_SHEET: usize = 16_384;
+
+fn refuse_overwide(sheet: &str, first_added: u16, added: usize) -> Result<(), Refusal> {
+    if usize::from(first_added) + added <= COLUMNS_A_SHEET {
+        return Ok(());
+    }
+    Err(FileFault::NoRoom { sheet: sheet.to_owned(), used: usize::from(first_added), needed: added }.into())
+}
