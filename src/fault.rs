@@ -8,7 +8,7 @@ mod rule;
 
 pub use cell::{CellFault, CellFaultKind};
 pub use file::FileFault;
-pub use rule::{RuleFault, RuleFaults};
+pub use rule::{Drawing, OwnerKind, RuleFault, RuleFaults, RuleMistake};
 
 /// Why nothing could be written.
 #[derive(Debug, thiserror::Error)]

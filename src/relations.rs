@@ -3,6 +3,10 @@
 //!
 //! Equations and their numbers live in `rules/relations.toml`; this module applies them. It ranks and judges nothing.
 
+mod file;
+
+pub(crate) use file::read_relations;
+
 use crate::quantity::Interval;
 use crate::rules::Checked;
 use crate::substance::{Basis, Property};
@@ -14,6 +18,19 @@ pub struct Relations {
     pub relations: Vec<Relation>,
     /// Default standard deviations, in file order: the first that fits counts.
     pub default_sds: Vec<DefaultSd>,
+}
+
+/// The standard deviation of a value for which no default is given, log units (assumed).
+const ASSUMED_SD: f64 = 0.3;
+
+impl Relations {
+    /// The standard deviation, in log units, of a value of which only property and basis are known.
+    pub fn default_sd(&self, property: Property, basis: Basis, value: f64) -> f64 {
+        self.default_sds
+            .iter()
+            .find(|default| default.holds_for(property, basis, value))
+            .map_or(ASSUMED_SD, |default| default.sd)
+    }
 }
 
 /// A published equation: log10 of `to` as a polynomial of `from`.
@@ -57,7 +74,7 @@ pub enum Side {
 /// The standard deviation of a value of which only property and basis are known.
 #[derive(Debug, Clone, PartialEq)]
 pub struct DefaultSd {
-    /// The property; half-lives by their family, see [`Property::id`] without the compartment.
+    /// The property by its [`Property::id`]; `half-life` for every half-life, `any` for every property.
     pub property: String,
     /// The bases it holds for; all when empty.
     pub bases: Vec<Basis>,
@@ -67,4 +84,36 @@ pub struct DefaultSd {
     pub sd: f64,
     /// Where it comes from, or `assumed`.
     pub source: String,
+}
+
+impl DefaultSd {
+    fn holds_for(&self, property: Property, basis: Basis, value: f64) -> bool {
+        let family = match property {
+            Property::HalfLife(_)
+            | Property::HydrolysisHalfLife
+            | Property::PhotolysisHalfLife
+            | Property::DissipationHalfLife => "half-life",
+            Property::LogKow
+            | Property::LogD
+            | Property::LogKoa
+            | Property::WaterSolubility
+            | Property::MeltingPoint
+            | Property::BoilingPoint
+            | Property::VapourPressure
+            | Property::HenryConstant
+            | Property::PkaAcid
+            | Property::PkaBase
+            | Property::Koc
+            | Property::Bcf
+            | Property::Baf
+            | Property::Bmf
+            | Property::Tmf
+            | Property::LongTermToxicity
+            | Property::AcuteToxicity
+            | Property::MolarMass => property.id(),
+        };
+        let names_it = self.property == "any" || self.property == family || self.property == property.id();
+        let knows_it = self.bases.is_empty() || self.bases.contains(&basis);
+        names_it && knows_it && self.above.is_none_or(|above| value > above)
+    }
 }
