@@ -44,8 +44,11 @@ impl RuleSource {
             mistake,
         };
         let bytes = std::fs::read(path).map_err(|error| {
-            fault(RuleMistake::Unreadable {
-                reason: error.to_string(),
+            fault(match error.kind() {
+                std::io::ErrorKind::NotFound => RuleMistake::NoSuchFile,
+                _ => RuleMistake::Unreadable {
+                    reason: error.to_string(),
+                },
             })
         })?;
         let text = String::from_utf8(bytes).map_err(|error| {
@@ -83,8 +86,15 @@ impl RuleSource {
         let faults = FaultList::new(self);
         let (tree, errors) = DeTable::parse_recoverable(&self.text);
         for error in errors {
+            let span = error.span().unwrap_or(0..0);
             let reason = error.message().to_owned();
-            faults.report(error.span().unwrap_or(0..0), RuleMistake::Syntax { reason });
+            let found = faults.text(span.clone()).to_owned();
+            let mistake = if reason.starts_with("invalid date") {
+                RuleMistake::NotADay { found }
+            } else {
+                RuleMistake::Syntax { reason }
+            };
+            faults.report(span, mistake);
         }
         // A tree mended by the parser would only give faults that nobody wrote.
         if !faults.is_empty() {

@@ -289,9 +289,9 @@ fn looks_like_a_path(choice: &str) -> bool {
 
 fn unknown_choice(choice: &str) -> String {
     let ids = BUILT_IN.map(|(id, _)| id);
-    let hint = nearest(choice, ids).map_or_else(String::new, |id| format!("did you mean `{id}`? "));
+    let hint = nearest(choice, ids).map_or_else(String::new, |id| format!(" Did you mean `{id}`?"));
     format!(
-        "`{choice}` is no rulebook, file or folder; {hint}the built-in rulebooks are {}, and `all` takes them all",
+        "`{choice}` is no rulebook, file or folder.{hint} Built in are {}; `all` takes them all.",
         ids.map(|id| format!("`{id}`")).join(", ")
     )
 }

@@ -1,1 +1,4 @@
-//! (being built)
+//! Rule files: the built-in ones against the published criteria, and what a faulty one is answered.
+
+mod faults;
+mod loading;

@@ -8,6 +8,8 @@ pub enum RuleMistake {
         /// What the system says.
         reason: String,
     },
+    /// There is no file of that name.
+    NoSuchFile,
     /// The bytes are not UTF-8.
     NotUtf8 {
         /// The line of the first wrong byte, counted from 1.

@@ -7,6 +7,7 @@ impl RuleMistake {
     pub(super) fn message(&self) -> String {
         match self {
             Self::Unreadable { reason } => format!("the file cannot be read: {reason}"),
+            Self::NoSuchFile => "there is no such file or folder".into(),
             Self::NotUtf8 { line } => format!("line {line} is not UTF-8 text"),
             Self::NoRulebooks => "the folder holds no rulebook".into(),
             Self::Syntax { reason } => format!("this is not TOML: {reason}"),
@@ -107,14 +108,17 @@ impl RuleMistake {
             Self::BadPattern { .. } => "cannot be used".into(),
             Self::NoTrigger { .. } => "never raised".into(),
             Self::NoDefaultSd => "the last of these lacks `property = \"any\"`".into(),
-            Self::Unreadable { .. } | Self::NotUtf8 { .. } | Self::NoRulebooks => String::new(),
+            Self::Unreadable { .. } | Self::NoSuchFile | Self::NotUtf8 { .. } | Self::NoRulebooks => {
+                String::new()
+            }
         }
     }
 
     /// What to write instead.
     pub(super) fn help(&self) -> Option<String> {
         Some(match self {
-            Self::Unreadable { .. } => "check the path and who may read it".into(),
+            Self::Unreadable { .. } => "check who may read it, and that it is a file".into(),
+            Self::NoSuchFile => "check the path".into(),
             Self::NotUtf8 { .. } => "save the file again with the encoding UTF-8".into(),
             Self::NoRulebooks => "a rulebook is a file that ends in .toml and starts with `[rulebook]`".into(),
             Self::Syntax { .. } => {
@@ -170,7 +174,7 @@ impl RuleMistake {
             }
             Self::NameTaken { .. } => "change it, or select only one of the two files".into(),
             Self::UnknownPart { nearest: Some(nearest), .. } => format!("did you mean `{nearest}`?"),
-            Self::UnknownPart { nearest: None, known, .. } => format!("this rulebook has {}", listed(known)),
+            Self::UnknownPart { nearest: None, known, .. } => format!("it may be {}", listed(known)),
             Self::BandedPart { .. } => "name a criterion that has steps".into(),
             Self::Circular { .. } => "let the chain end at criteria".into(),
             Self::AllOrAny => "keep `all-of` if every part is needed, `any-of` if one is enough".into(),

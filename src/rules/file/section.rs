@@ -3,6 +3,7 @@
 //! A reader gives `None` both for an absent key and for a faulty one: a file with a fault is refused as a whole, so
 //! whatever stands in for the faulty value is never applied.
 
+use std::cell::RefCell;
 use std::ops::Range;
 
 use toml::Spanned;
@@ -34,6 +35,8 @@ pub(crate) struct Section<'file> {
     table: &'file DeTable<'file>,
     span: Range<usize>,
     title: &'static str,
+    /// The known keys that unknown ones were probably meant to be.
+    misspelt: RefCell<Vec<&'static str>>,
 }
 
 impl<'file> Section<'file> {
@@ -43,6 +46,7 @@ impl<'file> Section<'file> {
             table: tree.get_ref(),
             span: 0..0,
             title: "the file",
+            misspelt: RefCell::new(Vec::new()),
         }
     }
 
@@ -65,16 +69,22 @@ impl<'file> Section<'file> {
     pub fn allow(&self, known: &[&'static str]) {
         for key in self.table.keys() {
             let name: &str = key.get_ref();
-            if !known.contains(&name) {
-                let mistake = RuleMistake::UnknownKey {
-                    key: name.to_owned(),
-                    table: self.title,
-                    nearest: nearest(name, known.iter().copied())
-                        .and_then(|near| known.iter().find(|word| **word == near).copied()),
-                    known: known.to_vec(),
-                };
-                self.report(key.span(), mistake);
+            if known.contains(&name) {
+                continue;
             }
+            let near = nearest(name, known.iter().copied());
+            let near = known
+                .iter()
+                .copied()
+                .find(|word| Some(*word) == near && self.value(word).is_none());
+            self.misspelt.borrow_mut().extend(near);
+            let mistake = RuleMistake::UnknownKey {
+                key: name.to_owned(),
+                table: self.title,
+                nearest: near,
+                known: known.to_vec(),
+            };
+            self.report(key.span(), mistake);
         }
     }
 
@@ -93,10 +103,19 @@ impl<'file> Section<'file> {
             .map(|(_, value)| value)
     }
 
-    /// Reports that the key in `example` is missing, where it is.
+    /// Whether the key stands there under a wrong spelling, which is reported already.
+    pub fn is_misspelt(&self, key: &str) -> bool {
+        self.misspelt.borrow().contains(&key)
+    }
+
+    /// Reports that the key in `example` is missing, where it is; to be asked after [`Self::allow`].
     pub fn need(&self, example: &'static str) {
-        let key = example.split(" = ").next().unwrap_or(example);
-        if self.value(key.trim_matches(['[', ']'])).is_none() {
+        let key = example
+            .split(" = ")
+            .next()
+            .unwrap_or(example)
+            .trim_matches(['[', ']']);
+        if self.value(key).is_none() && !self.is_misspelt(key) {
             self.report(
                 self.span(),
                 RuleMistake::MissingKey {
@@ -218,7 +237,12 @@ impl<'file> Section<'file> {
         let items = self.list(key, WANTED)?;
         let value = self.value(key)?;
         let [low, high] = items else {
-            self.wrong_kind(key, WANTED, value);
+            let mistake = RuleMistake::WrongKind {
+                key: key.to_owned(),
+                wanted: WANTED,
+                found: "a list of another length",
+            };
+            self.report(value.span(), mistake);
             return None;
         };
         let ends = [self.scalar_of(key, low)?, self.scalar_of(key, high)?];
@@ -329,6 +353,7 @@ impl<'file> Section<'file> {
             table,
             span,
             title,
+            misspelt: RefCell::new(Vec::new()),
         }
     }
 }
@@ -350,7 +375,10 @@ fn number(value: &DeValue<'_>) -> Option<f64> {
 fn kind_of(value: &DeValue<'_>) -> &'static str {
     match value {
         DeValue::String(_) => "a text",
-        DeValue::Integer(_) | DeValue::Float(_) => "a number",
+        DeValue::Integer(_) | DeValue::Float(_) => match number(value) {
+            Some(_) => "a number",
+            None => "no finite decimal number",
+        },
         DeValue::Boolean(_) => "true or false",
         DeValue::Datetime(_) => "a date",
         DeValue::Array(_) => "a list",

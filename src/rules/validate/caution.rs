@@ -139,12 +139,20 @@ fn read_subjects(section: &Section<'_>, key: &str) -> BTreeSet<Subject> {
 }
 
 fn read_blocks(section: &Section<'_>) -> Blocks {
-    if section.is_text("blocks") {
-        let _everything = section.word("blocks", &[("everything", ())]);
-        return Blocks::Everything;
-    }
     if section.is_empty_list("blocks") {
         return Blocks::Subjects(BTreeSet::new());
     }
-    Blocks::Subjects(read_subjects(section, "blocks"))
+    if !section.is_text("blocks") {
+        return Blocks::Subjects(read_subjects(section, "blocks"));
+    }
+    if let Some(text) = section.text("blocks").filter(|text| text.value != "everything") {
+        let mistake = RuleMistake::UnknownWord {
+            key: "blocks".to_owned(),
+            nearest: None,
+            found: text.value,
+            known: vec!["\"everything\"".to_owned(), "[\"log-kow\", \"bcf\"]".to_owned()],
+        };
+        section.report(text.span, mistake);
+    }
+    Blocks::Everything
 }

@@ -47,7 +47,14 @@ pub(super) fn read_designations(file: &Section<'_>, criteria: &[Criterion]) -> O
         .collect();
     let designations = designations?;
     for (index, draft) in drafts.iter().enumerate() {
-        if let Some(path) = way_back(index, &designations) {
+        // Each circle is told once, at its first designation.
+        if let Some(circle) =
+            way_back(index, &designations).filter(|circle| circle.iter().all(|part| *part >= index))
+        {
+            let path = circle
+                .iter()
+                .filter_map(|part| Some(drafts.get(*part)?.id.clone()))
+                .collect();
             let span = draft
                 .parts
                 .first()
@@ -139,8 +146,8 @@ fn resolve_part(
     }
 }
 
-/// The names on the way from a designation back to itself, if there is such a way.
-fn way_back(start: usize, designations: &[Designation]) -> Option<Vec<String>> {
+/// The places on the way from a designation back to itself, if there is such a way.
+fn way_back(start: usize, designations: &[Designation]) -> Option<Vec<usize>> {
     let mut ways = vec![vec![start]];
     let mut seen = vec![start];
     while let Some(way) = ways.pop() {
@@ -152,8 +159,7 @@ fn way_back(start: usize, designations: &[Designation]) -> Option<Vec<String>> {
             let mut longer = way.clone();
             longer.push(*next);
             if *next == start {
-                let names = longer.iter().filter_map(|index| designations.get(*index));
-                return Some(names.map(|designation| designation.id.clone()).collect());
+                return Some(longer);
             }
             if !seen.contains(next) {
                 seen.push(*next);

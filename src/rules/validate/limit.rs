@@ -63,6 +63,7 @@ pub(super) fn read_limit(test: &Section<'_>, subject: Subject) -> Option<(Limit,
         .filter(|key| test.key_span(key).is_some())
         .collect();
     match keys.as_slice() {
+        [] if LIMIT_KEYS.iter().any(|key| test.is_misspelt(key)) => None,
         [] => {
             let example = example_of(subject);
             test.report(test.span(), RuleMistake::NoLimit { example });
