@@ -14,7 +14,9 @@ const ELEMENTS: &str = " H He Li Be B C N O F Ne Na Mg Al Si P S Cl Ar K Ca Sc T
 const NOT_METALS: &str = " H He B C N O F Ne Si P S Cl Ar As Se Br Kr Te I Xe At Rn ";
 
 /// Formulas in capitals alone that are substances and no words.
-const CAPITALS: [&str; 9] = ["HF", "KF", "KI", "HI", "KH", "KOH", "KCN", "HCN", "KSCN"];
+const CAPITALS: [&str; 15] = [
+    "HF", "KF", "FK", "KI", "IK", "HI", "KH", "KOH", "HKO", "KCN", "CKN", "HCN", "CHN", "CKNS", "KSCN",
+];
 
 /// A symbol and the number written behind it.
 type Atom<'formula> = (&'formula str, u32);
@@ -147,7 +149,8 @@ mod tests {
             "CO",
             "CaC2",
             "SiC",
-            "WC",
+            "W2C",
+            "KSCN",
             "KSCN",
             "CKNS",
             "NaOCN",
