@@ -8,7 +8,7 @@ mod rule;
 
 pub use cell::{CellFault, CellFaultKind};
 pub use file::FileFault;
-pub use rule::{RuleFault, RuleFaults};
+pub use rule::{Drawing, OwnerKind, RuleFault, RuleFaults, RuleMistake};
 
 /// Why nothing could be written.
 #[derive(Debug, thiserror::Error)]
@@ -29,7 +29,7 @@ pub fn nearest<'word>(unknown: &str, known: impl IntoIterator<Item = &'word str>
     known
         .into_iter()
         .map(|word| (strsim::damerau_levenshtein(unknown, word), word))
-        .filter(|(distance, word)| *distance <= 1 + word.len() / 4)
+        .filter(|(distance, word)| *distance <= 1 + word.len() / 4 && *distance < unknown.len())
         .min()
         .map(|(_, word)| word)
 }
@@ -52,5 +52,6 @@ mod tests {
         let known = ["eu-reach-pbt", "eu-clp-pbt-pmt", "un-stockholm-annex-d"];
         assert_eq!(nearest("eu-reach-pbr", known), Some("eu-reach-pbt"));
         assert_eq!(nearest("kinetics", known), None);
+        assert_eq!(nearest("T", ["P", "B"]), None);
     }
 }

@@ -4,8 +4,10 @@
 //! Equations and their numbers live in `rules/relations.toml`; this module applies them. It ranks and judges nothing.
 
 mod estimate;
+mod file;
 
 pub use estimate::{Estimate, Ionisation, LogKow};
+pub(crate) use file::read_relations;
 
 use crate::quantity::Interval;
 use crate::rules::Checked;
@@ -18,6 +20,19 @@ pub struct Relations {
     pub relations: Vec<Relation>,
     /// Default standard deviations, in file order: the first that fits counts.
     pub default_sds: Vec<DefaultSd>,
+}
+
+/// The standard deviation of a value for which no default is given, log units (assumed).
+const ASSUMED_SD: f64 = 0.3;
+
+impl Relations {
+    /// The standard deviation, in log units, of a value of which only property and basis are known.
+    pub fn default_sd(&self, property: Property, basis: Basis, value: f64) -> f64 {
+        self.default_sds
+            .iter()
+            .find(|default| default.holds_for(property, basis, value))
+            .map_or(ASSUMED_SD, |default| default.sd)
+    }
 }
 
 /// A published equation: log10 of `to` as a polynomial of `from`.
@@ -61,7 +76,7 @@ pub enum Side {
 /// The standard deviation of a value of which only property and basis are known.
 #[derive(Debug, Clone, PartialEq)]
 pub struct DefaultSd {
-    /// The property; half-lives by their family, see [`Property::id`] without the compartment.
+    /// The property by its [`Property::id`]; `half-life` for every half-life, `any` for every property.
     pub property: String,
     /// The bases it holds for; all when empty.
     pub bases: Vec<Basis>,
@@ -73,45 +88,34 @@ pub struct DefaultSd {
     pub source: String,
 }
 
-impl Relations {
-    /// The default standard deviation of a value, log units; 0.3 where no line of the file fits.
-    pub fn default_sd(&self, property: Property, basis: Basis, value: f64) -> f64 {
-        const WHERE_NOTHING_FITS: f64 = 0.3;
-        let family = family(property);
-        self.default_sds
-            .iter()
-            .find(|line| {
-                (line.property == property.id() || line.property == family || line.property == "any")
-                    && (line.bases.is_empty() || line.bases.contains(&basis))
-                    && line.above.is_none_or(|above| value > above)
-            })
-            .map_or(WHERE_NOTHING_FITS, |line| line.sd)
-    }
-}
-
-/// The name under which a group of properties shares a default standard deviation.
-fn family(property: Property) -> &'static str {
-    match property {
-        Property::HalfLife(_)
-        | Property::HydrolysisHalfLife
-        | Property::PhotolysisHalfLife
-        | Property::DissipationHalfLife => "half-life",
-        Property::LongTermToxicity | Property::AcuteToxicity => "toxicity",
-        Property::LogKow
-        | Property::LogD
-        | Property::LogKoa
-        | Property::WaterSolubility
-        | Property::MeltingPoint
-        | Property::BoilingPoint
-        | Property::VapourPressure
-        | Property::HenryConstant
-        | Property::PkaAcid
-        | Property::PkaBase
-        | Property::Koc
-        | Property::Bcf
-        | Property::Baf
-        | Property::Bmf
-        | Property::Tmf
-        | Property::MolarMass => property.id(),
+impl DefaultSd {
+    fn holds_for(&self, property: Property, basis: Basis, value: f64) -> bool {
+        let family = match property {
+            Property::HalfLife(_)
+            | Property::HydrolysisHalfLife
+            | Property::PhotolysisHalfLife
+            | Property::DissipationHalfLife => "half-life",
+            Property::LogKow
+            | Property::LogD
+            | Property::LogKoa
+            | Property::WaterSolubility
+            | Property::MeltingPoint
+            | Property::BoilingPoint
+            | Property::VapourPressure
+            | Property::HenryConstant
+            | Property::PkaAcid
+            | Property::PkaBase
+            | Property::Koc
+            | Property::Bcf
+            | Property::Baf
+            | Property::Bmf
+            | Property::Tmf
+            | Property::LongTermToxicity
+            | Property::AcuteToxicity
+            | Property::MolarMass => property.id(),
+        };
+        let names_it = self.property == "any" || self.property == family || self.property == property.id();
+        let knows_it = self.bases.is_empty() || self.bases.contains(&basis);
+        names_it && knows_it && self.above.is_none_or(|above| value > above)
     }
 }

@@ -1,12 +1,21 @@
 //! The rule set of a run: criteria as data.
 //!
-//! [`file`] turns TOML into these types and collects every fault; whatever stands here has been checked and can be
-//! applied without further questions. It decides nothing about substances.
+//! `file` reads TOML, `validate` turns it into these types and collects every fault; whatever stands here has been
+//! checked and can be applied without further questions. It decides nothing about substances.
 
 mod caution;
+pub(crate) mod file;
+mod formula;
+mod load;
 mod rulebook;
+pub(crate) mod validate;
 
 pub use caution::{Blocks, Caution, Triggers};
+pub use file::RuleSource;
+pub use load::{
+    RuleSources, RulebookSummary, built_in_rule_files, built_in_rulebooks, check_paths, load_rule_set,
+    summaries,
+};
 pub use rulebook::{
     Band, Checked, ClearsOn, Combine, Criterion, Decides, Designation, DesignationPart, Guards,
     HalfLifeReference, Limit, Listing, ListingEntry, OnlyIf, Rulebook, Step, Subject, Test, Weight,

@@ -58,8 +58,27 @@ pub fn parse_quantity(_text: &str, _read_as: ReadAs) -> Result<Parsed, QuantityF
 }
 
 /// Reads a limit of a rule file: one number and its unit, no qualifier, no range.
-pub fn parse_limit(_text: &str, _dimension: Dimension) -> Result<f64, QuantityFault> {
-    Err(QuantityFault::NoNumber)
+pub fn parse_limit(text: &str, dimension: Dimension) -> Result<f64, QuantityFault> {
+    let (number, word) = text.trim().split_once(' ').unwrap_or((text.trim(), ""));
+    let number: f64 = number.parse().map_err(|_| QuantityFault::NoNumber)?;
+    let unit = match word {
+        "" => Unit::One,
+        "h" => Unit::Hour,
+        "d" | "days" => Unit::Day,
+        "month" | "months" => Unit::Month,
+        "mg/L" => Unit::MilligramPerLitre,
+        "L/kg" => Unit::LitrePerKilogram,
+        "Pa" => Unit::Pascal,
+        "°C" => Unit::Celsius,
+        "g/mol" => Unit::GramPerMole,
+        "%" => Unit::Percent,
+        "kJ/mol" => Unit::KilojoulePerMole,
+        unknown => return Err(QuantityFault::UnknownUnit(unknown.to_owned())),
+    };
+    if unit.dimension() != dimension {
+        return Err(QuantityFault::WrongDimension(unit));
+    }
+    unit.to_canonical(number, None).ok_or(QuantityFault::NoNumber)
 }
 
 /// A number as a reader writes it: four significant digits, no trailing zeros, thousands not grouped.

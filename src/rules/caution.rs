@@ -4,8 +4,9 @@ use std::collections::BTreeSet;
 
 use regex::Regex;
 
+use super::formula::is_inorganic;
 use crate::rules::Subject;
-use crate::substance::{Identity, RowType, SubstanceType};
+use crate::substance::{Identity, Property, RowType, Substance, SubstanceType};
 
 /// A sentence for the user and what it stops.
 #[derive(Debug, Clone)]
@@ -52,9 +53,98 @@ pub enum Blocks {
     Subjects(BTreeSet<Subject>),
 }
 
+/// Decades of pH above its pKa at which 10 % of a group is left in the other form: log10(9).
+const NINE_TO_ONE: f64 = 0.954_242_509_439_324_9;
+/// The environment's pH, lowest and highest, as rulebooks on mobility take it.
+const PH_RANGE: (f64, f64) = (4.0, 9.0);
+
 impl Caution {
-    /// What in the substance raises the caution, if anything does.
-    pub fn is_raised_by(&self, _substance: &crate::substance::Substance) -> Option<String> {
-        None
+    /// What of the substance raises the caution, in words; `None` if nothing does.
+    pub fn is_raised_by(&self, substance: &Substance) -> Option<String> {
+        let triggers = &self.triggers;
+        self.stated_type(substance)
+            .or_else(|| {
+                triggers
+                    .row_types
+                    .contains(&substance.row_type)
+                    .then(|| row_reason(substance))
+            })
+            .or_else(|| {
+                let identity = substance.identity;
+                triggers
+                    .identities
+                    .contains(&identity)
+                    .then(|| identity_reason(identity))
+            })
+            .or_else(|| triggers.name_reason(substance))
+            .or_else(|| triggers.formula_reason(substance))
+            .or_else(|| triggers.ionisation_reason(substance))
     }
+
+    fn stated_type(&self, substance: &Substance) -> Option<String> {
+        let stated = substance.substance_type.as_ref()?;
+        self.triggers
+            .substance_types
+            .contains(&stated.value)
+            .then(|| format!("the substance type is `{}`", stated.value.id()))
+    }
+}
+
+impl Triggers {
+    fn name_reason(&self, substance: &Substance) -> Option<String> {
+        let name = substance.name.as_ref()?.value.trim();
+        let found = self.name_pattern.as_ref()?.find(name)?;
+        let excepted = self
+            .unless_name
+            .as_ref()
+            .is_some_and(|unless| unless.is_match(name));
+        (!excepted).then(|| format!("the name holds `{}`", found.as_str().trim()))
+    }
+
+    fn formula_reason(&self, substance: &Substance) -> Option<String> {
+        let formula = substance.formula.as_ref()?.value.as_str();
+        (self.inorganic_formula && is_inorganic(formula)).then(|| format!("the formula is `{formula}`"))
+    }
+
+    /// A pKa at which more than 10 % is ionised somewhere in the range of pH.
+    fn ionisation_reason(&self, substance: &Substance) -> Option<String> {
+        if !self.ionisable {
+            return None;
+        }
+        let acid = substance.readings_of(Property::PkaAcid).iter().find(|reading| {
+            let low = reading.quantity.interval.low().number();
+            low.is_none_or(|low| low < PH_RANGE.1 + NINE_TO_ONE)
+        });
+        let base = substance.readings_of(Property::PkaBase).iter().find(|reading| {
+            let high = reading.quantity.interval.high().number();
+            high.is_none_or(|high| high > PH_RANGE.0 - NINE_TO_ONE)
+        });
+        let (property, reading) = acid
+            .map(|reading| (Property::PkaAcid, reading))
+            .or_else(|| base.map(|reading| (Property::PkaBase, reading)))?;
+        Some(format!(
+            "the {} is {}",
+            property.title(),
+            reading.quantity.reported
+        ))
+    }
+}
+
+fn row_reason(substance: &Substance) -> String {
+    let word = match substance.row_type {
+        RowType::NotStated | RowType::Substance => "substance",
+        RowType::Mixture => "mixture",
+        RowType::Article => "article",
+    };
+    format!("the row is of the type `{word}`")
+}
+
+fn identity_reason(identity: Identity) -> String {
+    match identity {
+        Identity::Identified => "the row names one substance",
+        Identity::RepairedDate => "the CAS number was read back from a date",
+        Identity::NameAlone => "the row has a name or a number of its own only",
+        Identity::NotIdentified => "the row does not say which one substance it means",
+    }
+    .to_owned()
 }

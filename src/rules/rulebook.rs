@@ -40,6 +40,16 @@ pub struct Rulebook {
     pub note: Option<String>,
 }
 
+impl Rulebook {
+    /// Every test of its steps and bands, in file order.
+    pub fn tests(&self) -> impl Iterator<Item = &Test> {
+        self.criteria.iter().flat_map(|criterion| {
+            let in_steps = criterion.steps.iter().flat_map(|step| &step.tests);
+            in_steps.chain(criterion.bands.iter().map(|band| &band.test))
+        })
+    }
+}
+
 /// The temperature at which half-lives are compared, and how they get there.
 #[derive(Debug, Clone, Copy, PartialEq)]
 pub struct HalfLifeReference {
