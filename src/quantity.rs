@@ -12,7 +12,10 @@ mod unit;
 pub use chance::{chance_beyond, normal_cumulative};
 pub use date::Date;
 pub use interval::{Bound, Comparison, Interval, IntervalError, Outcome};
-pub use parse::{DecimalStyle, Parsed, QuantityFault, ReadAs, format_number, parse_limit, parse_quantity};
+pub use parse::{
+    DecimalStyle, Parsed, QuantityFault, ReadAs, format_interval, format_number, is_missing, parse_limit,
+    parse_quantity, parse_unit, plain_words, quantity_of_number, tidy, unit_words,
+};
 pub use unit::{DAYS_PER_MONTH, Dimension, Unit};
 
 /// A value as it was written, in the canonical unit of its dimension.
