@@ -4,7 +4,7 @@
 //! rows of a sheet only and changes no cell.
 
 use crate::quantity::{DecimalStyle, Unit};
-use crate::substance::{Basis, Conditions, Field};
+use crate::substance::{Basis, Conditions, Field, Property};
 
 /// A column whose meaning was recognised.
 #[derive(Debug, Clone, PartialEq)]
@@ -21,6 +21,9 @@ pub struct Column {
     pub basis: Option<Basis>,
     /// Conditions the header names.
     pub conditions: Conditions,
+    /// The property of which a column of reliability, guidelines or temperatures speaks, where its header or its place
+    /// tells.
+    pub about: Option<Property>,
     /// Decimal point or comma, from the header's column or the sheet.
     pub decimal: DecimalStyle,
     /// Why it was taken for this field, in words.
