@@ -3,8 +3,18 @@
 //! Found from `rules/columns.toml` by field words plus compartment and qualifier words. It reads headers and the first
 //! rows of a sheet only and changes no cell.
 
+mod choice;
+mod decimals;
+mod header;
+mod header_row;
+mod words;
+
+pub use words::{BUILT_IN_COLUMN_WORDS, ColumnWords};
+
 use crate::quantity::{DecimalStyle, Unit};
-use crate::substance::{Basis, Conditions, Field};
+use crate::substance::{Basis, Conditions, Field, Property};
+use crate::workbook::Row;
+use header::header_words;
 
 /// A column whose meaning was recognised.
 #[derive(Debug, Clone, PartialEq)]
@@ -21,6 +31,9 @@ pub struct Column {
     pub basis: Option<Basis>,
     /// Conditions the header names.
     pub conditions: Conditions,
+    /// The property of which a column of reliability, guidelines or temperatures speaks, where its header or its place
+    /// tells.
+    pub about: Option<Property>,
     /// Decimal point or comma, from the header's column or the sheet.
     pub decimal: DecimalStyle,
     /// Why it was taken for this field, in words.
@@ -49,4 +62,49 @@ pub struct ColumnOverride {
     pub header: String,
     /// The field; `None` leaves the column aside (`--column 'Header=ignore'`).
     pub field: Option<Field>,
+}
+
+impl ColumnOverride {
+    /// Reads `Header=field` or `Header=ignore`; what is wrong with it in words.
+    pub fn parse(text: &str) -> Result<Self, String> {
+        let example = "write --column 'Header=field', for example --column 'Stoff=name', or 'Header=ignore'";
+        let (header, field) = text
+            .rsplit_once('=')
+            .ok_or_else(|| format!("`{text}` names no field; {example}"))?;
+        if header_words(header).is_empty() {
+            return Err(format!("`{text}` names no header; {example}"));
+        }
+        let id = field.trim();
+        let field = match id {
+            "ignore" => None,
+            _ => Some(Field::from_id(id).ok_or_else(|| words::unknown_field(id))?),
+        };
+        Ok(Self {
+            header: header.trim().to_owned(),
+            field,
+        })
+    }
+
+    /// Whether this speaks of a header.
+    pub fn is_for(&self, header: &str) -> bool {
+        header_words(&self.header) == header_words(header)
+    }
+}
+
+/// The header of a sheet and its columns; `None` if the sheet is no inventory.
+///
+/// A sheet is an inventory if a column holds a CAS number, EC number, SMILES or InChI key, or if one holds the row's
+/// own number or a name and another one any other field. `first_rows` are the first rows of the sheet, at least some
+/// dozens, so that the columns' decimal style can be seen.
+pub fn recognise(
+    sheet: &str,
+    first_rows: &[Row],
+    words: &ColumnWords,
+    overrides: &[ColumnOverride],
+) -> Option<Recognised> {
+    let found = header_row::find(first_rows, words, overrides)?;
+    let data: Vec<&Row> = first_rows.iter().filter(|row| row.index > found.row).collect();
+    let mut recognised = choice::choose(sheet, found, words);
+    decimals::set_styles(&mut recognised.columns, &data);
+    Some(recognised)
 }

@@ -13,7 +13,8 @@ pub use chance::{chance_beyond, normal_cumulative};
 pub use date::Date;
 pub use interval::{Bound, Comparison, Interval, IntervalError, Outcome};
 pub use parse::{
-    DecimalStyle, Parsed, QuantityFault, ReadAs, format_interval, format_number, parse_limit, parse_quantity,
+    DecimalStyle, Parsed, QuantityFault, ReadAs, format_interval, format_number, is_missing, parse_limit,
+    parse_quantity, parse_unit, plain_words, quantity_of_number, tidy, unit_words,
 };
 pub use unit::{DAYS_PER_MONTH, Dimension, Unit};
 

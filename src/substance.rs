@@ -19,8 +19,9 @@ pub use cas::{CasError, CasNumber};
 pub use degradability::{DegradationTest, InherentBiodegradability, ReadyBiodegradability};
 pub use ec::{EcError, EcNumber};
 pub use field::Field;
-pub use hazard::HazardStatements;
+pub use hazard::{Completeness, HazardStatements};
 pub use kind::{RowType, SubstanceType};
+pub(crate) use parse::Said;
 pub use parse::{RowReader, UnstatedBasis};
 pub use property::{Compartment, Property};
 

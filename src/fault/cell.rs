@@ -2,6 +2,7 @@
 
 use std::fmt;
 
+use crate::quantity::Unit;
 use crate::workbook::CellRef;
 
 /// A cell that could not be read as what its column promises.
@@ -25,15 +26,312 @@ pub enum CellFaultKind {
         /// What could stand there, for example `40 d`.
         example: &'static str,
     },
+    /// A word such as `miscible` where a number is needed.
+    WordNoNumber {
+        /// The field's title.
+        what: &'static str,
+        /// What could stand there.
+        example: &'static str,
+    },
+    /// Digits that make no number, such as `1.2.3`.
+    BadNumber {
+        /// What could stand there.
+        example: &'static str,
+    },
+    /// More than one value, and no range.
+    SeveralValues {
+        /// The field's title.
+        what: &'static str,
+    },
+    /// A word where the unit should be that is no unit.
+    UnknownUnit {
+        /// The word.
+        word: String,
+        /// The unit it may have been meant to be.
+        nearest: Option<&'static str>,
+        /// What could stand there.
+        example: &'static str,
+    },
+    /// A unit that does not measure this.
+    WrongUnit {
+        /// The unit.
+        unit: Unit,
+        /// The field's title.
+        what: &'static str,
+        /// What could stand there.
+        example: &'static str,
+    },
+    /// A molar concentration in a row without a molar mass.
+    NeedsMolarMass,
+    /// A range whose ends are the wrong way round, or a number out of any sense.
+    BadRange {
+        /// The field's title.
+        what: &'static str,
+    },
+    /// A negative number of something that cannot be negative.
+    Negative {
+        /// The field's title.
+        what: &'static str,
+    },
+    /// A zero of something that cannot be zero; exports write it for a missing value.
+    Zero {
+        /// The field's title.
+        what: &'static str,
+        /// What could stand there where the value lies below what can be measured.
+        example: &'static str,
+    },
+    /// A date where a number is needed, for which spreadsheets mistake `4.5` or `1-2`.
+    BecameDate {
+        /// The field's title.
+        what: &'static str,
+    },
+    /// A text too long to be a value.
+    TooLong,
+    /// The spreadsheet shows an error.
+    SheetError,
+    /// A number whose check digit is wrong.
+    CheckDigit {
+        /// `CAS number` or `EC number`.
+        what: &'static str,
+        /// The digit that would fit.
+        expected: u8,
+        /// The number with that digit.
+        corrected: String,
+    },
+    /// No EC number starts with these characters.
+    NoSuchEcNumber,
+    /// A date in the CAS column that is no CAS number either.
+    DateIsNoCas,
+    /// More than one CAS or EC number in a cell.
+    SeveralIdentities {
+        /// `CAS numbers` or `EC numbers`.
+        what: &'static str,
+    },
+    /// A row that describes a mixture.
+    MixtureRow,
+    /// A row that describes an article.
+    ArticleRow,
+    /// The bare word `inherently` where ready biodegradability is asked for.
+    InherentlySettlesNothing,
+    /// A number from 0 to 1 that may be a fraction or a percentage.
+    FractionOrPercent,
+    /// The words of a cell say one thing and its number another.
+    WordsAgainstNumber,
+    /// A text without code, class or word for none where hazard statements are asked for.
+    NoStatement,
+    /// A hazard class without its category.
+    ClassWithoutCategory {
+        /// The class as found, for example `Carc.`.
+        class: String,
+    },
 }
 
 impl fmt::Display for CellFault {
     fn fmt(&self, formatter: &mut fmt::Formatter<'_>) -> fmt::Result {
-        write!(formatter, "{}: `{}` ", self.cell, self.found)?;
-        match &self.kind {
-            CellFaultKind::NotA { what, example } => {
-                write!(formatter, "is not a {what}; write, for example, `{example}`")
+        write!(
+            formatter,
+            "{}: `{}` {}",
+            self.cell,
+            shortened(&self.found),
+            self.kind
+        )
+    }
+}
+
+/// A cell may hold 32,767 characters; a message shows the first ones.
+fn shortened(found: &str) -> String {
+    const SHOWN: usize = 60;
+    if found.chars().count() <= SHOWN {
+        return found.to_owned();
+    }
+    let mut start: String = found.chars().take(SHOWN).collect();
+    start.push('…');
+    start
+}
+
+impl fmt::Display for CellFaultKind {
+    fn fmt(&self, formatter: &mut fmt::Formatter<'_>) -> fmt::Result {
+        match self {
+            Self::NotA { what, example } => {
+                write!(formatter, "is no {what}; write, for example, `{example}`")
             }
+            Self::WordNoNumber { what, example } => write!(
+                formatter,
+                "is a word and no number for {what}; write a value or a bound, for example `{example}`"
+            ),
+            Self::BadNumber { example } => write!(
+                formatter,
+                "cannot be read as one number; write it with one decimal separator, for example `{example}`"
+            ),
+            Self::SeveralValues { what } => write!(
+                formatter,
+                "holds more than one value of {what}; write one, a range such as `3–5`, or use a column for each"
+            ),
+            Self::UnknownUnit {
+                word,
+                nearest: Some(unit),
+                ..
+            } => {
+                write!(formatter, "has the unknown unit `{word}`; did you mean `{unit}`?")
+            }
+            Self::UnknownUnit {
+                word,
+                nearest: None,
+                example,
+            } => write!(
+                formatter,
+                "has the unknown unit `{word}`; write, for example, `{example}`, and remarks in brackets"
+            ),
+            Self::WrongUnit { unit, what, example } => write!(
+                formatter,
+                "is in {}, which does not measure {what}; write, for example, `{example}`",
+                unit.symbol()
+            ),
+            Self::NeedsMolarMass => write!(
+                formatter,
+                "is in moles, but the row has no molar mass; add a molar mass in g/mol or write it in mg/L"
+            ),
+            Self::BadRange { what } => write!(
+                formatter,
+                "is no sensible {what}: its ends are the wrong way round or the number is out of any range; \
+                 write the lower end first and check the unit"
+            ),
+            Self::Negative { what } => {
+                write!(
+                    formatter,
+                    "is negative, which {what} cannot be; check the sign or leave the cell empty"
+                )
+            }
+            Self::Zero { what, example } => write!(
+                formatter,
+                "is zero, which {what} cannot be; leave the cell empty if there is no value, or write the bound \
+                 that was measured, for example `{example}`"
+            ),
+            Self::BecameDate { what } => write!(
+                formatter,
+                "is a date; a spreadsheet may have made it of a number such as `4.5`. Format the column as text or \
+                 number and write the {what} again"
+            ),
+            Self::TooLong => write!(
+                formatter,
+                "is too long to be a value; write the value alone and keep the rest in a column of its own"
+            ),
+            Self::SheetError => {
+                write!(
+                    formatter,
+                    "is an error of the spreadsheet; correct the formula or leave the cell empty"
+                )
+            }
+            Self::CheckDigit {
+                what,
+                expected,
+                corrected,
+            } => write!(
+                formatter,
+                "is no {what}: its check digit should be {expected}; write `{corrected}` if the other digits are \
+                 right, or correct them"
+            ),
+            Self::NoSuchEcNumber => write!(
+                formatter,
+                "is no EC number: none starts with these six characters; write, for example, `200-024-3`"
+            ),
+            Self::DateIsNoCas => write!(
+                formatter,
+                "is a date and gives no CAS number when read back; format the column as text and write the number \
+                 again, for example `50-29-3`"
+            ),
+            Self::SeveralIdentities { what } => write!(
+                formatter,
+                "holds several {what}, so the row is not identified; write one a row"
+            ),
+            Self::MixtureRow => write!(
+                formatter,
+                "says that the row is a mixture; mixtures are screened by their components: give each a row of its own"
+            ),
+            Self::ArticleRow => write!(
+                formatter,
+                "says that the row is an article; articles are screened by their substances: give each a row of its own"
+            ),
+            Self::InherentlySettlesNothing => write!(
+                formatter,
+                "speaks of inherent biodegradability, which does not settle ready biodegradability; write `ready`, \
+                 `not ready` or the result, for example `82 %, 28 d, OECD 301B`"
+            ),
+            Self::FractionOrPercent => write!(
+                formatter,
+                "may be a fraction or a percentage; write it with its sign, for example `82 %`"
+            ),
+            Self::WordsAgainstNumber => write!(
+                formatter,
+                "says one thing in words and another in its number; it counts as open: correct one of them"
+            ),
+            Self::NoStatement => write!(
+                formatter,
+                "names no hazard statement; write the codes, for example `H350; H361d`, or `none`"
+            ),
+            Self::ClassWithoutCategory { class } => write!(
+                formatter,
+                "names the hazard class `{class}` without its category; write, for example, `Carc. 1B` or `H350`"
+            ),
         }
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::{CellFault, CellFaultKind};
+    use crate::quantity::Unit;
+    use crate::workbook::CellRef;
+
+    fn message(found: &str, kind: CellFaultKind) -> String {
+        let cell = CellRef {
+            sheet: "Substances".into(),
+            row: 6,
+            column: 2,
+        };
+        CellFault {
+            cell,
+            found: found.to_owned(),
+            kind,
+        }
+        .to_string()
+    }
+
+    #[test]
+    fn a_message_says_where_what_and_what_to_write_instead() {
+        let what = "half-life in soil";
+        let example = "40 d";
+        assert_eq!(
+            message("soon", CellFaultKind::NotA { what, example }),
+            "Substances!C7: `soon` is no half-life in soil; write, for example, `40 d`"
+        );
+        assert_eq!(
+            message(
+                "12 wekks",
+                CellFaultKind::UnknownUnit {
+                    word: "wekks".to_owned(),
+                    nearest: Some("weeks"),
+                    example
+                }
+            ),
+            "Substances!C7: `12 wekks` has the unknown unit `wekks`; did you mean `weeks`?"
+        );
+        assert_eq!(
+            message(
+                "3 mg/L",
+                CellFaultKind::WrongUnit {
+                    unit: Unit::MilligramPerLitre,
+                    what,
+                    example
+                }
+            ),
+            "Substances!C7: `3 mg/L` is in mg/L, which does not measure half-life in soil; write, for example, `40 d`"
+        );
+    }
+
+    #[test]
+    fn a_long_text_is_shortened_in_the_message() {
+        let text = message(&"x".repeat(30_000), CellFaultKind::TooLong);
+        assert!(text.len() < 250, "{text}");
     }
 }

@@ -1,0 +1,123 @@
+//! Decimal point or comma, from what the cells of a column show.
+
+use std::sync::LazyLock;
+
+use regex::Regex;
+
+use super::Column;
+use super::choice::dimension_of;
+use crate::quantity::{DecimalStyle, tidy};
+use crate::workbook::{CellContent, Row};
+
+/// Digits with separators; numbers of three dotted parts and the like show nothing.
+static NUMBER: LazyLock<Option<Regex>> = LazyLock::new(|| Regex::new(r"\d*(?:[.,]\d+)+").ok());
+
+/// How many numbers show one style.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
+struct Shown {
+    points: usize,
+    commas: usize,
+}
+
+impl Shown {
+    fn style(self) -> Option<DecimalStyle> {
+        match self.commas.cmp(&self.points) {
+            std::cmp::Ordering::Greater => Some(DecimalStyle::Comma),
+            std::cmp::Ordering::Less => Some(DecimalStyle::Point),
+            std::cmp::Ordering::Equal => None,
+        }
+    }
+
+    fn add(&mut self, style: DecimalStyle) {
+        match style {
+            DecimalStyle::Point => self.points += 1,
+            DecimalStyle::Comma => self.commas += 1,
+        }
+    }
+}
+
+/// Sets each column's style: what its own text cells show, else what the sheet's show, else the point.
+pub(super) fn set_styles(columns: &mut [Column], data: &[&Row]) {
+    let mut sheet = Shown::default();
+    let mut own = Vec::with_capacity(columns.len());
+    for column in columns.iter() {
+        let mut shown = Shown::default();
+        if dimension_of(column.field).is_some() {
+            for row in data {
+                if let Some(CellContent::Text(text)) = row.cell(column.index).map(|cell| &cell.content) {
+                    count(text, &mut shown);
+                }
+            }
+        }
+        sheet.points += shown.points;
+        sheet.commas += shown.commas;
+        own.push(shown);
+    }
+    for (column, shown) in columns.iter_mut().zip(own) {
+        let by_column = shown.style();
+        column.decimal = by_column.or_else(|| sheet.style()).unwrap_or_default();
+        if column.decimal == DecimalStyle::Comma {
+            let whose = if by_column.is_some() { "column" } else { "sheet" };
+            column
+                .reason
+                .push_str(&format!("; decimal comma as in the {whose}'s cells"));
+        }
+    }
+}
+
+fn count(text: &str, shown: &mut Shown) {
+    let Some(number) = NUMBER.as_ref() else {
+        return;
+    };
+    for found in number.find_iter(&tidy(text)) {
+        if let Some(style) = style_of(found.as_str()) {
+            shown.add(style);
+        }
+    }
+}
+
+/// The style a number can only have; a separator before exactly three digits shows none.
+fn style_of(number: &str) -> Option<DecimalStyle> {
+    let points = number.matches('.').count();
+    let commas = number.matches(',').count();
+    let last = number.rfind(['.', ','])?;
+    let (whole, decimals) = (number.get(..last)?, number.get(last + 1..)?);
+    let could_group = decimals.len() == 3 && !whole.is_empty() && !whole.starts_with('0') && whole.len() <= 3;
+    let style_of_last = if number.get(last..=last)? == "," {
+        DecimalStyle::Comma
+    } else {
+        DecimalStyle::Point
+    };
+    match (points, commas) {
+        (1, 0) | (0, 1) if could_group => None,
+        (1, 0) | (0, 1) => Some(style_of_last),
+        // Both kinds: the last is the decimal separator. Several of one kind group thousands.
+        (1.., 1) | (1, 1..) => Some(style_of_last),
+        (2.., 0) => Some(DecimalStyle::Comma).filter(|_| decimals.len() == 3),
+        (0, 2..) => Some(DecimalStyle::Point).filter(|_| decimals.len() == 3),
+        (_, _) => None,
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::style_of;
+    use crate::quantity::DecimalStyle;
+
+    #[test]
+    fn only_numbers_that_can_be_read_one_way_show_a_style() {
+        for (number, style) in [
+            ("4,5", Some(DecimalStyle::Comma)),
+            ("4.5", Some(DecimalStyle::Point)),
+            ("1.234,5", Some(DecimalStyle::Comma)),
+            ("1,234.5", Some(DecimalStyle::Point)),
+            ("0,125", Some(DecimalStyle::Comma)),
+            ("1.234.567", Some(DecimalStyle::Comma)),
+            ("1.234", None),
+            ("1,234", None),
+            ("1234,567", Some(DecimalStyle::Comma)),
+        ] {
+            assert_eq!(style_of(number), style, "{number}");
+        }
+    }
+}

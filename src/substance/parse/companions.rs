@@ -1,0 +1,278 @@
+//! Columns that speak of other columns' values: method, guideline, temperature, pH, lipid, reliability.
+
+use std::sync::LazyLock;
+
+use regex::Regex;
+
+use super::cell::{self, Expected};
+use super::pattern::fixed;
+use super::remark::{Said, basis_in};
+use crate::columns::Column;
+use crate::fault::CellFaultKind;
+use crate::quantity::{Quantity, plain_words};
+use crate::substance::{Basis, Compartment, Field, Property, Reading};
+use crate::workbook::CellContent;
+
+static TEST_NUMBER: LazyLock<Regex> =
+    LazyLock::new(|| fixed(r"\b(?:oecd|tg|guideline)[a-z ]*(\d{3})[a-z]?\b"));
+static STUDY_WORD: LazyLock<Regex> = LazyLock::new(|| fixed(r"\b(study|studie|test|versuch)\b"));
+static SCORE: LazyLock<Regex> =
+    LazyLock::new(|| fixed(r"^(?:\D*[\s=:(])?([1-4])[a-e]?(?:\.0)?(?:\W.*)?$|^rl ?([1-4])$"));
+
+/// What one companion column says, and of which property, if its header tells.
+#[derive(Debug, Clone, PartialEq)]
+struct Speaking<T> {
+    about: Option<Property>,
+    value: T,
+}
+
+/// A guideline as written and the number of the test, if it names one.
+#[derive(Debug, Clone, PartialEq)]
+struct Guideline {
+    said: Said,
+    number: Option<String>,
+}
+
+/// The companion columns of a row.
+#[derive(Debug, Clone, PartialEq, Default)]
+pub(super) struct Companions {
+    method: Option<Said>,
+    log_kow_sd: Option<f64>,
+    log_kow_temperature: Option<f64>,
+    log_kow_ph: Option<f64>,
+    koc_ph: Option<f64>,
+    bcf_lipid: Option<f64>,
+    half_life_temperature: Vec<Speaking<f64>>,
+    reliability: Vec<Speaking<u8>>,
+    guidelines: Vec<Speaking<Guideline>>,
+}
+
+impl Companions {
+    /// Takes the cell of a companion column.
+    pub(super) fn take(&mut self, column: &Column, content: &CellContent) -> Result<(), CellFaultKind> {
+        let about = column.about;
+        match column.field {
+            Field::LogKowMethod => {
+                if let Some(text) = cell::value_text(content) {
+                    self.method = Some(said_by_method(&text));
+                }
+            }
+            Field::LogKowSd => {
+                let expected = Expected::bare("standard deviation of the log Kow", "0.3", (0.0, 10.0));
+                self.log_kow_sd = single(content, column, expected)?;
+            }
+            Field::LogKowTemperature => {
+                let expected = Expected::temperature("temperature of the log Kow");
+                self.log_kow_temperature = single(content, column, expected)?;
+            }
+            Field::LogKowPh => {
+                self.log_kow_ph = single(
+                    content,
+                    column,
+                    Expected::bare("pH of the log Kow", "7", (-2.0, 16.0)),
+                )?;
+            }
+            Field::KocPh => {
+                self.koc_ph = single(
+                    content,
+                    column,
+                    Expected::bare("pH of the Koc", "7", (-2.0, 16.0)),
+                )?;
+            }
+            Field::BcfLipid => {
+                self.bcf_lipid = single(content, column, Expected::percent("lipid content", "5 %"))?;
+            }
+            Field::HalfLifeTemperature => {
+                let expected = Expected::temperature("temperature of the half-life");
+                if let Some(value) = single(content, column, expected)? {
+                    self.half_life_temperature.push(Speaking { about, value });
+                }
+            }
+            Field::Reliability => {
+                if let Some(value) = read_reliability(content)? {
+                    self.reliability.push(Speaking { about, value });
+                }
+            }
+            Field::Guideline => self.take_guideline(about, content),
+            // The reader sends no other column here.
+            _ => {}
+        }
+        Ok(())
+    }
+
+    fn take_guideline(&mut self, about: Option<Property>, content: &CellContent) {
+        let Some(text) = cell::value_text(content) else {
+            return;
+        };
+        let plain = plain_words(&text);
+        // A column of guidelines may leave `OECD` out.
+        let bare = plain.len() <= 4 && plain.starts_with(|first: char| first.is_ascii_digit());
+        let plain = if bare { format!("oecd {plain}") } else { plain };
+        let mut said = said_by_method(&text);
+        said.basis = basis_in(&plain).or_else(|| STUDY_WORD.is_match(&plain).then_some(Basis::Measured));
+        let number = TEST_NUMBER
+            .captures(&plain)
+            .and_then(|found| Some(found.get(1)?.as_str().to_owned()));
+        self.guidelines.push(Speaking {
+            about,
+            value: Guideline { said, number },
+        });
+    }
+
+    /// What method and guideline columns say of a property; `properties` are those the row has values of.
+    pub(super) fn of_property(&self, property: Property, properties: &[Property]) -> Vec<&Said> {
+        let only_one = properties.iter().all(|other| *other == property);
+        let method = self.method.iter().filter(|_| property == Property::LogKow);
+        let guidelines = self.guidelines.iter().filter(|guideline| {
+            let number = guideline.value.number.as_deref().and_then(tested_by);
+            match (number, guideline.about) {
+                (Some(tested), _) => tested(property),
+                (None, Some(about)) => about == property,
+                // A calculation may be of any of them; a study is of one of them, and nobody knows which.
+                (None, None) => only_one || guideline.value.said.basis == Some(Basis::Calculated),
+            }
+        });
+        method
+            .chain(guidelines.map(|guideline| &guideline.value.said))
+            .collect()
+    }
+
+    /// What guideline columns say of tests with these numbers.
+    pub(super) fn of_tests(&self, numbers: &[&str]) -> Vec<&Said> {
+        let named = |guideline: &&Speaking<Guideline>| {
+            guideline
+                .value
+                .number
+                .as_deref()
+                .is_some_and(|number| numbers.contains(&number))
+        };
+        self.guidelines
+            .iter()
+            .filter(named)
+            .map(|guideline| &guideline.value.said)
+            .collect()
+    }
+
+    /// Fills in what the cell and its header left open.
+    pub(super) fn complete(&self, property: Property, reading: &mut Reading) {
+        let conditions = &mut reading.conditions;
+        match property {
+            Property::LogKow => {
+                reading.quantity.written_sd = reading.quantity.written_sd.or(self.log_kow_sd);
+                conditions.temperature = conditions.temperature.or(self.log_kow_temperature);
+                conditions.ph = conditions.ph.or(self.log_kow_ph);
+            }
+            Property::Koc => conditions.ph = conditions.ph.or(self.koc_ph),
+            Property::Bcf => conditions.lipid = conditions.lipid.or(self.bcf_lipid),
+            Property::HalfLife(_)
+            | Property::HydrolysisHalfLife
+            | Property::PhotolysisHalfLife
+            | Property::DissipationHalfLife => {
+                conditions.temperature = conditions
+                    .temperature
+                    .or_else(|| spoken_of(&self.half_life_temperature, property));
+            }
+            Property::LogD
+            | Property::LogKoa
+            | Property::WaterSolubility
+            | Property::MeltingPoint
+            | Property::BoilingPoint
+            | Property::VapourPressure
+            | Property::HenryConstant
+            | Property::PkaAcid
+            | Property::PkaBase
+            | Property::Baf
+            | Property::Bmf
+            | Property::Tmf
+            | Property::LongTermToxicity
+            | Property::AcuteToxicity
+            | Property::MolarMass => {}
+        }
+        conditions.reliability = conditions
+            .reliability
+            .or_else(|| spoken_of(&self.reliability, property));
+    }
+}
+
+/// The value that names the property, else one that names none.
+fn spoken_of<T: Copy>(speaking: &[Speaking<T>], property: Property) -> Option<T> {
+    let about = |wanted: Option<Property>| {
+        speaking
+            .iter()
+            .find(|one| one.about == wanted)
+            .map(|one| one.value)
+    };
+    about(Some(property)).or_else(|| about(None))
+}
+
+fn single(content: &CellContent, column: &Column, expected: Expected) -> Result<Option<f64>, CellFaultKind> {
+    let read = cell::read_quantity(content, column, expected, None)?;
+    Ok(read.and_then(|(quantity, _): (Quantity, Said)| quantity.single()))
+}
+
+fn said_by_method(text: &str) -> Said {
+    let mut said = Said::in_remarks(&[text.to_owned()]);
+    said.conditions.method = Some(text.to_owned());
+    said
+}
+
+/// The properties that a test with this number measures (titles of the OECD test guidelines, common practice).
+fn tested_by(number: &str) -> Option<fn(Property) -> bool> {
+    let in_water = |property| {
+        matches!(
+            property,
+            Property::HalfLife(Compartment::FreshWater | Compartment::MarineWater | Compartment::Water)
+        )
+    };
+    Some(match number {
+        "102" => |property| property == Property::MeltingPoint,
+        "103" => |property| property == Property::BoilingPoint,
+        "104" => |property| property == Property::VapourPressure,
+        "105" => |property| property == Property::WaterSolubility,
+        "106" | "121" => |property| property == Property::Koc,
+        "107" | "117" | "123" => |property| property == Property::LogKow,
+        "111" => |property| property == Property::HydrolysisHalfLife,
+        "112" => |property| matches!(property, Property::PkaAcid | Property::PkaBase),
+        "201" | "221" => |property| matches!(property, Property::AcuteToxicity | Property::LongTermToxicity),
+        "202" | "203" | "236" => |property| property == Property::AcuteToxicity,
+        "210" | "211" | "212" | "215" => |property| property == Property::LongTermToxicity,
+        "301" | "302" | "310" => |_| false,
+        "305" => |property| matches!(property, Property::Bcf | Property::Bmf),
+        "307" => |property| property == Property::HalfLife(Compartment::Soil),
+        "308" => |property| {
+            matches!(property, Property::HalfLife(compartment) if compartment != Compartment::Air
+            && compartment != Compartment::Soil)
+        },
+        "309" => in_water,
+        "316" => |property| property == Property::PhotolysisHalfLife,
+        _ => return None,
+    })
+}
+
+/// A reliability score from 1 (reliable without restriction) to 4 (not assignable).
+fn read_reliability(content: &CellContent) -> Result<Option<u8>, CellFaultKind> {
+    let Some(text) = cell::value_text(content) else {
+        return Ok(None);
+    };
+    let plain = plain_words(&text);
+    let score = SCORE
+        .captures(&text)
+        .and_then(|found| found.get(1).or_else(|| found.get(2))?.as_str().parse().ok());
+    let has = |words: &str| plain.contains(words);
+    let in_words = if has("not assignable") || has("nicht bewertbar") || has("nicht zuordenbar") {
+        Some(4)
+    } else if has("not reliable") || has("unreliable") || has("nicht zuverlassig") || has("nicht valide") {
+        Some(3)
+    } else if has("without restriction") || has("ohne einschrankung") {
+        Some(1)
+    } else if has("with restriction") || has("mit einschrankung") {
+        Some(2)
+    } else {
+        None
+    };
+    let not_a = CellFaultKind::NotA {
+        what: "reliability score from 1 to 4",
+        example: "2",
+    };
+    score.or(in_words).map(Some).ok_or(not_a)
+}

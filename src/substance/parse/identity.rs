@@ -1,0 +1,303 @@
+//! Which substance a row means, and how sure that is.
+
+use std::sync::LazyLock;
+
+use regex::Regex;
+
+use super::cell;
+use super::pattern::fixed;
+use crate::fault::CellFaultKind;
+use crate::quantity::{Date, is_missing, tidy};
+use crate::substance::{
+    CasError, CasNumber, Cited, EcError, EcNumber, Field, Identity, RowType, Substance, SubstanceType,
+};
+use crate::workbook::{CellContent, CellRef};
+
+static CAS: LazyLock<Regex> = LazyLock::new(|| fixed(r"\b\d{2,7} ?- ?\d{2} ?- ?\d\b"));
+static EC: LazyLock<Regex> = LazyLock::new(|| fixed(r"\b[0-9A-Z]\d{2} ?- ?\d{3} ?- ?\d\b"));
+static ISO_DATE: LazyLock<Regex> = LazyLock::new(|| fixed(r"^(\d{4})-(\d{1,2})-(\d{2})(?:[ T]00:00.*)?$"));
+static POINT_DATE: LazyLock<Regex> = LazyLock::new(|| fixed(r"^(\d{1,2})\.(\d{1,2})\.(\d{4})$"));
+static INCHI_KEY: LazyLock<Regex> = LazyLock::new(|| fixed(r"^(?:InChIKey=)?([A-Z]{14}-[A-Z]{10}-[A-Z])$"));
+
+/// How the number columns of a row were read.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord, Default)]
+pub(super) enum IdentityCells {
+    /// As they stand.
+    #[default]
+    AsWritten,
+    /// The CAS number from a date.
+    FromDate,
+    /// A cell holds several numbers.
+    Several,
+}
+
+/// What a CAS cell holds.
+enum CasCell {
+    Missing,
+    Number(CasNumber),
+    FromDate(CasNumber),
+}
+
+impl IdentityCells {
+    /// Takes an identity cell into the substance.
+    pub(super) fn take(
+        &mut self,
+        substance: &mut Substance,
+        field: Field,
+        content: &CellContent,
+        place: &CellRef,
+    ) -> Result<(), CellFaultKind> {
+        let cell = place.clone();
+        match field {
+            Field::CasNumber => {
+                let read = read_cas(content).inspect_err(|fault| self.note_several(fault))?;
+                let (value, how) = match read {
+                    CasCell::Missing => return Ok(()),
+                    CasCell::Number(number) => (number, Self::AsWritten),
+                    CasCell::FromDate(number) => (number, Self::FromDate),
+                };
+                *self = (*self).max(how);
+                substance.cas = Some(Cited { value, cell });
+            }
+            Field::EcNumber => {
+                let read = read_ec(content).inspect_err(|fault| self.note_several(fault))?;
+                substance.ec = read.map(|value| Cited { value, cell });
+            }
+            Field::Smiles => substance.smiles = read_smiles(content)?.map(|value| Cited { value, cell }),
+            Field::InchiKey => {
+                substance.inchi_key = read_inchi_key(content)?.map(|value| Cited { value, cell })
+            }
+            Field::Formula => substance.formula = read_name(content).map(|value| Cited { value, cell }),
+            Field::Name => substance.name = read_name(content).map(|value| Cited { value, cell }),
+            Field::RowId => substance.row_id = cell::text_of(content).map(|value| Cited { value, cell }),
+            // The reader sends no other column here.
+            _ => {}
+        }
+        Ok(())
+    }
+
+    fn note_several(&mut self, fault: &CellFaultKind) {
+        if matches!(fault, CellFaultKind::SeveralIdentities { .. }) {
+            *self = Self::Several;
+        }
+    }
+
+    /// Sets how sure the identity of the row is.
+    pub(super) fn conclude(self, substance: &mut Substance) {
+        let is_mixture = match substance.row_type {
+            RowType::Mixture | RowType::Article => true,
+            RowType::Substance => false,
+            RowType::NotStated => {
+                substance.substance_type.as_ref().map(|cited| cited.value) == Some(SubstanceType::Mixture)
+            }
+        };
+        let second_identifier =
+            substance.ec.is_some() || substance.smiles.is_some() || substance.inchi_key.is_some();
+        substance.identity = match self {
+            Self::Several => Identity::NotIdentified,
+            Self::AsWritten | Self::FromDate if is_mixture => Identity::NotIdentified,
+            Self::AsWritten | Self::FromDate if second_identifier => Identity::Identified,
+            Self::AsWritten if substance.cas.is_some() => Identity::Identified,
+            Self::FromDate => Identity::RepairedDate,
+            Self::AsWritten => Identity::NameAlone,
+        };
+    }
+}
+
+fn read_cas(content: &CellContent) -> Result<CasCell, CellFaultKind> {
+    if let CellContent::DateTime(serial) = content {
+        let date = Date::from_serial(*serial).ok_or(CellFaultKind::DateIsNoCas)?;
+        let (year, month, day) = date.parts();
+        return from_date(i64::from(year), i64::from(month), i64::from(day));
+    }
+    let Some(text) = cell::value_text(content) else {
+        return Ok(CasCell::Missing);
+    };
+    if let Some((year, month, day)) = date_in(&text) {
+        return from_date(year, month, day);
+    }
+    let mut found: Vec<String> = CAS
+        .find_iter(&text)
+        .map(|number| number.as_str().replace(' ', ""))
+        .collect();
+    found.dedup();
+    match found.as_slice() {
+        [] => read_cas_digits(&text),
+        [number] => CasNumber::parse(number)
+            .map(CasCell::Number)
+            .map_err(|error| cas_fault(number, error)),
+        [_, _, ..] => Err(CellFaultKind::SeveralIdentities { what: "CAS numbers" }),
+    }
+}
+
+/// A number whose hyphens are lost, as 50293.
+fn read_cas_digits(text: &str) -> Result<CasCell, CellFaultKind> {
+    let not_a = CellFaultKind::NotA {
+        what: "CAS number",
+        example: "50-29-3",
+    };
+    let only_digits = text.bytes().all(|byte| byte.is_ascii_digit());
+    let digits: u64 = text
+        .parse()
+        .ok()
+        .filter(|_| only_digits && text.len() <= 10)
+        .ok_or(not_a.clone())?;
+    let written = format!("{}-{:02}-{}", digits / 1000, digits / 10 % 100, digits % 10);
+    match CasNumber::from_digits(digits) {
+        Ok(number) => Ok(CasCell::Number(number)),
+        Err(CasError::Form) => Err(not_a),
+        Err(error @ CasError::CheckDigit { .. }) => Err(cas_fault(&written, error)),
+    }
+}
+
+fn cas_fault(number: &str, error: CasError) -> CellFaultKind {
+    match error {
+        CasError::Form => CellFaultKind::NotA {
+            what: "CAS number",
+            example: "50-29-3",
+        },
+        CasError::CheckDigit { expected } => CellFaultKind::CheckDigit {
+            what: "CAS number",
+            expected,
+            corrected: with_last_digit(number, expected),
+        },
+    }
+}
+
+fn with_last_digit(number: &str, digit: u8) -> String {
+    let mut corrected = number.to_owned();
+    corrected.pop();
+    corrected.push(char::from(b'0' + digit.min(9)));
+    corrected
+}
+
+/// Year, month and day of `1918-02-01` or `01.02.1918`.
+fn date_in(text: &str) -> Option<(i64, i64, i64)> {
+    let number = |found: &regex::Captures<'_>, group| found.get(group)?.as_str().parse().ok();
+    if let Some(found) = ISO_DATE.captures(text) {
+        return Some((number(&found, 1)?, number(&found, 2)?, number(&found, 3)?));
+    }
+    let found = POINT_DATE.captures(text)?;
+    Some((number(&found, 3)?, number(&found, 2)?, number(&found, 1)?))
+}
+
+/// The CAS number of which a spreadsheet made this date. A year of the last or this century may have been written
+/// with two digits; the check digit never fits both readings.
+fn from_date(year: i64, month: i64, day: i64) -> Result<CasCell, CellFaultKind> {
+    let short = (1930..2030)
+        .contains(&year)
+        .then(|| format!("{:02}-{month:02}-{day}", year % 100));
+    let candidates = [Some(format!("{year}-{month:02}-{day}")), short];
+    candidates
+        .into_iter()
+        .flatten()
+        .find_map(|candidate| CasNumber::parse(&candidate).ok())
+        .map(CasCell::FromDate)
+        .ok_or(CellFaultKind::DateIsNoCas)
+}
+
+fn read_ec(content: &CellContent) -> Result<Option<EcNumber>, CellFaultKind> {
+    if matches!(content, CellContent::DateTime(_)) {
+        return Err(CellFaultKind::NotA {
+            what: "EC number",
+            example: "200-024-3",
+        });
+    }
+    let Some(text) = cell::value_text(content) else {
+        return Ok(None);
+    };
+    let mut found: Vec<String> = EC
+        .find_iter(&text)
+        .map(|number| number.as_str().replace(' ', "").to_uppercase())
+        .collect();
+    found.dedup();
+    let number = match found.as_slice() {
+        [] => ec_from_digits(&text).ok_or(CellFaultKind::NotA {
+            what: "EC number",
+            example: "200-024-3",
+        })?,
+        [number] => number.clone(),
+        [_, _, ..] => return Err(CellFaultKind::SeveralIdentities { what: "EC numbers" }),
+    };
+    EcNumber::parse(&number).map(Some).map_err(|error| match error {
+        EcError::Form => CellFaultKind::NotA {
+            what: "EC number",
+            example: "200-024-3",
+        },
+        EcError::NoSuchNumber => CellFaultKind::NoSuchEcNumber,
+        EcError::CheckDigit { expected } => CellFaultKind::CheckDigit {
+            what: "EC number",
+            expected,
+            corrected: with_last_digit(&number, expected),
+        },
+    })
+}
+
+/// A number whose hyphens are lost, as 2000243.
+fn ec_from_digits(text: &str) -> Option<String> {
+    let only_digits = text.len() == 7 && text.bytes().all(|byte| byte.is_ascii_digit());
+    let (first, rest) = text.split_at_checked(3).filter(|_| only_digits)?;
+    let (second, check) = rest.split_at_checked(3)?;
+    Some(format!("{first}-{second}-{check}"))
+}
+
+/// A SMILES by its characters only; whether it is a molecule is for the structure to find.
+fn read_smiles(content: &CellContent) -> Result<Option<String>, CellFaultKind> {
+    let Some(text) = cell::text_of(content) else {
+        return Ok(None);
+    };
+    if is_missing(&tidy(&text)) {
+        return Ok(None);
+    }
+    if looks_like_smiles(&text) {
+        Ok(Some(text))
+    } else {
+        Err(CellFaultKind::NotA {
+            what: "SMILES",
+            example: "CCO",
+        })
+    }
+}
+
+fn looks_like_smiles(text: &str) -> bool {
+    const BONDS_AND_RINGS: &str = "-=#$:/\\.%()+@*~0123456789";
+    let mut in_bracket = false;
+    let mut before = ' ';
+    for character in text.chars() {
+        let belongs = match character {
+            '[' => !std::mem::replace(&mut in_bracket, true),
+            ']' => std::mem::replace(&mut in_bracket, false),
+            _ if in_bracket => character.is_ascii_graphic(),
+            'l' => before == 'C',
+            'r' => before == 'B',
+            'B' | 'C' | 'N' | 'O' | 'P' | 'S' | 'F' | 'I' | 'b' | 'c' | 'n' | 'o' | 'p' | 's' => true,
+            _ => BONDS_AND_RINGS.contains(character),
+        };
+        if !belongs {
+            return false;
+        }
+        before = character;
+    }
+    !in_bracket && text.contains(|character: char| character.is_ascii_alphabetic())
+}
+
+fn read_inchi_key(content: &CellContent) -> Result<Option<String>, CellFaultKind> {
+    let Some(text) = cell::value_text(content) else {
+        return Ok(None);
+    };
+    let key = INCHI_KEY
+        .captures(&text)
+        .and_then(|found| Some(found.get(1)?.as_str().to_uppercase()));
+    let not_a = CellFaultKind::NotA {
+        what: "InChI key",
+        example: "LFQSCWFLJHTTHZ-UHFFFAOYSA-N",
+    };
+    key.map(Some).ok_or(not_a)
+}
+
+/// A name or formula as written. `Na`, `Nb` and `Nd` are elements and no words for missing.
+fn read_name(content: &CellContent) -> Option<String> {
+    let text = cell::text_of(content)?;
+    let is_element = matches!(text.as_str(), "Na" | "Nb" | "Nd");
+    (is_element || !is_missing(&tidy(&text))).then_some(text)
+}
