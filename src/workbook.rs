@@ -5,14 +5,18 @@ mod caught;
 mod content;
 mod contents;
 mod guard;
+mod look;
 mod not_carried;
 mod package;
 mod place;
 mod read;
 mod survey;
+mod write;
 
 pub use appearance::Appearance;
 pub use content::{Cell, CellContent, Row, StyleId};
+pub use look::{Look, Shade};
 pub use place::{CellRef, column_letters};
 pub use read::{Inventory, open_inventory};
 pub use survey::{ColumnLayout, SheetSurvey, Visibility};
+pub use write::{AnnotatedWorkbook, Overwrite, SheetId, Target, Value, free_sheet_name};

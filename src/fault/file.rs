@@ -20,7 +20,9 @@ pub enum FileFault {
         path: String,
     },
     /// The system would not let the file be read.
-    #[error("{path}: cannot be read ({reason}); check that you may open it and that no other program holds it")]
+    #[error(
+        "{path}: cannot be read ({reason}); check that you may open it and that no other program holds it"
+    )]
     Unreadable {
         /// The path as given.
         path: String,
@@ -36,7 +38,9 @@ pub enum FileFault {
         found: FileKind,
     },
     /// A workbook that is cut off, contradicts itself or is not built as the format says.
-    #[error("{path}: the workbook is damaged ({what}); open it in a spreadsheet program, save it again as xlsx and use that file")]
+    #[error(
+        "{path}: the workbook is damaged ({what}); open it in a spreadsheet program, save it again as xlsx and use that file"
+    )]
     Damaged {
         /// The path as given.
         path: String,
@@ -176,7 +180,9 @@ impl fmt::Display for FileKind {
 #[derive(Debug, Clone, PartialEq, Eq, thiserror::Error)]
 pub enum SheetFault {
     /// A reference no sheet has.
-    #[error("sheet `{sheet}` has a cell at `{reference}`, which is not a cell of any sheet (A1 to XFD1048576)")]
+    #[error(
+        "sheet `{sheet}` has a cell at `{reference}`, which is not a cell of any sheet (A1 to XFD1048576)"
+    )]
     NoSuchCell {
         /// The sheet's name.
         sheet: String,

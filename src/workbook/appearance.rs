@@ -1,8 +1,8 @@
 //! How a cell of the inventory looks, translated once from the reading library's terms to the writing library's.
 
 use calamine::{
-    Border, BorderStyle, Color, Fill, FillPattern, Font, HorizontalAlignment, NumberFormat, Style, TextRotation,
-    UnderlineStyle, VerticalAlignment,
+    Border, BorderStyle, Color, Fill, FillPattern, Font, HorizontalAlignment, NumberFormat, Style,
+    TextRotation, UnderlineStyle, VerticalAlignment,
 };
 use rust_xlsxwriter::{Format, FormatAlign, FormatBorder, FormatPattern, FormatUnderline};
 
@@ -10,12 +10,31 @@ use rust_xlsxwriter::{Format, FormatAlign, FormatBorder, FormatPattern, FormatUn
 ///
 /// Names of cell styles, protection, diagonal borders and gradients are not part of it.
 #[derive(Debug, Clone, PartialEq, Default)]
-pub struct Appearance(Format);
+pub struct Appearance {
+    format: Format,
+    numbers: Numbers,
+}
+
+/// Whether the format says how numbers are shown.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
+enum Numbers {
+    #[default]
+    AsTyped,
+    Formatted,
+}
 
 impl Appearance {
     /// The format to write a cell with.
     pub(super) fn format(&self) -> &Format {
-        &self.0
+        &self.format
+    }
+
+    /// The format to write a date with: the same, unless that would show the date as a number.
+    pub(super) fn format_for_dates(&self) -> Format {
+        match self.numbers {
+            Numbers::AsTyped => self.format.clone().set_num_format("yyyy-mm-dd"),
+            Numbers::Formatted => self.format.clone(),
+        }
     }
 
     /// It adds nothing to a cell without any format.
@@ -26,10 +45,7 @@ impl Appearance {
 
 impl From<&Style> for Appearance {
     fn from(style: &Style) -> Self {
-        let mut format = Format::new();
-        if let Some(number) = &style.number_format {
-            format = with_number_format(format, number);
-        }
+        let (mut format, numbers) = number_format(style.number_format.as_ref());
         if let Some(font) = &style.font {
             format = with_font(format, font);
         }
@@ -45,17 +61,24 @@ impl From<&Style> for Appearance {
         if let Some(alignment) = &style.alignment {
             format = with_alignment(format, alignment);
         }
-        Self(format)
+        Self { format, numbers }
     }
 }
 
 /// Built-in formats keep their number: spreadsheet programs show some of them by the user's region.
-fn with_number_format(format: Format, number: &NumberFormat) -> Format {
+fn number_format(number: Option<&NumberFormat>) -> (Format, Numbers) {
+    let format = Format::new();
+    let Some(number) = number else {
+        return (format, Numbers::AsTyped);
+    };
     match number.format_id.map(u8::try_from) {
-        Some(Ok(0)) => format,
-        Some(Ok(built_in @ 1..=58)) => format.set_num_format_index(built_in),
-        _ if number.format_code == "General" => format,
-        _ => format.set_num_format(number.format_code.as_str()),
+        Some(Ok(0)) => (format, Numbers::AsTyped),
+        Some(Ok(built_in @ 1..=58)) => (format.set_num_format_index(built_in), Numbers::Formatted),
+        _ if number.format_code == "General" => (format, Numbers::AsTyped),
+        _ => (
+            format.set_num_format(number.format_code.as_str()),
+            Numbers::Formatted,
+        ),
     }
 }
 

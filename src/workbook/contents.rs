@@ -3,8 +3,8 @@
 
 use std::collections::BTreeMap;
 
-use quick_xml::events::Event;
 use quick_xml::XmlVersion;
+use quick_xml::events::Event;
 
 use crate::fault::{FileFault, FileKind};
 
@@ -49,8 +49,14 @@ struct Relation {
 /// Reads the workbook's own description of itself.
 pub(super) fn read_contents(package: &mut Package) -> Result<Contents, FileFault> {
     let main = main_part(package)?;
-    let (folder, file) = main.rsplit_once('/').map_or(("", main.as_str()), |(folder, file)| (folder, file));
-    let folder = if folder.is_empty() { String::new() } else { format!("{folder}/") };
+    let (folder, file) = main
+        .rsplit_once('/')
+        .map_or(("", main.as_str()), |(folder, file)| (folder, file));
+    let folder = if folder.is_empty() {
+        String::new()
+    } else {
+        format!("{folder}/")
+    };
     let relations = read_relations(package, &format!("{folder}_rels/{file}.rels"), Keyed::ById)?;
     refuse_unusual_places(package, &relations, &folder)?;
     let mut contents = Contents::default();
@@ -71,10 +77,14 @@ fn main_part(package: &mut Package) -> Result<String, FileFault> {
         .find(|(kind, _)| kind.ends_with("/officeDocument"))
         .map(|(_, relation)| relation.target.trim_start_matches('/').to_owned());
     match main {
-        Some(main) if package.has(&main) && main.to_ascii_lowercase().ends_with(".xml") && !is_document(&main) => {
+        Some(main)
+            if package.has(&main) && main.to_ascii_lowercase().ends_with(".xml") && !is_document(&main) =>
+        {
             Ok(main)
         }
-        Some(main) if !package.has(&main) => Err(package.damaged(format!("its main part `{main}` is missing"))),
+        Some(main) if !package.has(&main) => {
+            Err(package.damaged(format!("its main part `{main}` is missing")))
+        }
         Some(_) | None => {
             let media_type = package.beginning_of("mimetype");
             let found = guard::kind_of_parts(package.part_names(), &media_type);
@@ -101,7 +111,11 @@ enum Keyed {
     ByType,
 }
 
-fn read_relations(package: &mut Package, part: &str, keyed: Keyed) -> Result<BTreeMap<String, Relation>, FileFault> {
+fn read_relations(
+    package: &mut Package,
+    part: &str,
+    keyed: Keyed,
+) -> Result<BTreeMap<String, Relation>, FileFault> {
     let mut relations = BTreeMap::new();
     package.read_xml(part, |event| {
         if let Event::Start(element) = event
@@ -127,7 +141,10 @@ fn refuse_unusual_places(
     folder: &str,
 ) -> Result<(), FileFault> {
     for (ending, usual) in [("/sharedStrings", "sharedStrings.xml"), ("/styles", "styles.xml")] {
-        for relation in relations.values().filter(|relation| relation.kind.ends_with(ending)) {
+        for relation in relations
+            .values()
+            .filter(|relation| relation.kind.ends_with(ending))
+        {
             if !full_name(&relation.target, folder).eq_ignore_ascii_case(&format!("{folder}{usual}")) {
                 return Err(package.damaged(format!(
                     "its part `{}` stands where no spreadsheet program puts it",
@@ -195,7 +212,11 @@ fn read_sheet_list(
             Some("veryHidden") => Visibility::VeryHidden,
             _ => Visibility::Visible,
         };
-        contents.sheets.push(SheetEntry { name, visibility, part });
+        contents.sheets.push(SheetEntry {
+            name,
+            visibility,
+            part,
+        });
     }
     Ok(())
 }
@@ -249,7 +270,10 @@ fn count_style_records(package: &mut Package, part: &str) -> Result<(), FileFaul
     let path = package.path.clone();
     package.read_xml(part, |event| {
         if let Event::Start(element) = event
-            && matches!(element.local_name().as_ref(), "xf" | "font" | "fill" | "border" | "numFmt")
+            && matches!(
+                element.local_name().as_ref(),
+                "xf" | "font" | "fill" | "border" | "numFmt"
+            )
         {
             records += 1;
             if records > MOST_STYLE_RECORDS {

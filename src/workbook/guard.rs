@@ -80,7 +80,9 @@ fn kind_of_flat_file(beginning: &[u8]) -> FileKind {
         return FileKind::Empty;
     }
     // BIFF2 to BIFF4, which stood alone in a file.
-    if beginning.starts_with(&[0x09, 0x00]) || beginning.starts_with(&[0x09, 0x02]) || beginning.starts_with(&[0x09, 0x04])
+    if beginning.starts_with(&[0x09, 0x00])
+        || beginning.starts_with(&[0x09, 0x02])
+        || beginning.starts_with(&[0x09, 0x04])
     {
         return FileKind::Xls;
     }

@@ -14,7 +14,11 @@ const KINDS: [(&str, &str, &str); 10] = [
     ("xl/threadedcomments/", "set of comments", "sets of comments"),
     ("xl/pivottables/pivottable", "pivot table", "pivot tables"),
     ("xl/slicers/", "slicer", "slicers"),
-    ("xl/externallinks/externallink", "link to another workbook", "links to other workbooks"),
+    (
+        "xl/externallinks/externallink",
+        "link to another workbook",
+        "links to other workbooks",
+    ),
     ("xl/connections.xml", "data connection", "data connections"),
     ("xl/embeddings/", "embedded file", "embedded files"),
 ];
@@ -46,7 +50,11 @@ pub(super) fn parts_not_carried<'name>(
         sentences.push(format!("Workbook, not carried over: {}.", things.join(", ")));
     }
     if !contents.other_sheets.is_empty() {
-        let names: Vec<String> = contents.other_sheets.iter().map(|name| format!("`{name}`")).collect();
+        let names: Vec<String> = contents
+            .other_sheets
+            .iter()
+            .map(|name| format!("`{name}`"))
+            .collect();
         sentences.push(format!(
             "Workbook, not carried over: {} {}, which hold no cells.",
             if names.len() == 1 { "sheet" } else { "sheets" },

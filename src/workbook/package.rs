@@ -182,7 +182,9 @@ fn read_events(
     let mut buffer = Vec::with_capacity(1024);
     loop {
         buffer.clear();
-        let event = reader.read_event_into(&mut buffer).map_err(|error| damaged(&error))?;
+        let event = reader
+            .read_event_into(&mut buffer)
+            .map_err(|error| damaged(&error))?;
         match &event {
             Event::Eof if depth == 0 => return Ok(()),
             Event::Eof => return Err(damaged(&"it ends in the middle")),
@@ -232,7 +234,9 @@ struct Counted<R> {
 impl<R: Read> Read for Counted<R> {
     fn read(&mut self, buffer: &mut [u8]) -> std::io::Result<usize> {
         let count = self.inner.read(buffer)?;
-        self.unpacked = self.unpacked.saturating_add(u64::try_from(count).unwrap_or(u64::MAX));
+        self.unpacked = self
+            .unpacked
+            .saturating_add(u64::try_from(count).unwrap_or(u64::MAX));
         let total = self.before.saturating_add(self.unpacked);
         if total > self.limits.total {
             self.over = Some((format!("over {}", megabytes(total)), megabytes(self.limits.total)));

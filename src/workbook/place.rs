@@ -91,7 +91,19 @@ mod tests {
     fn a_reference_is_read_up_to_the_last_cell_of_a_sheet_and_not_beyond() {
         assert_eq!(parse_reference("C7"), Some((6, 2)));
         assert_eq!(parse_reference("XFD1048576"), Some((1_048_575, 16_383)));
-        for none in ["XFE1", "A1048577", "A0", "7", "C", "", "C-7", "C7D", "ÄA1", "AAAAAAAAAA1", "A99999999999"] {
+        for none in [
+            "XFE1",
+            "A1048577",
+            "A0",
+            "7",
+            "C",
+            "",
+            "C-7",
+            "C7D",
+            "ÄA1",
+            "AAAAAAAAAA1",
+            "A99999999999",
+        ] {
             assert_eq!(parse_reference(none), None, "{none}");
         }
     }

@@ -1,6 +1,8 @@
 //! Opens an inventory and streams its rows. It gives no cell a meaning and never holds a whole sheet.
 
 mod rows;
+#[cfg(test)]
+mod tests;
 
 use std::fs::File;
 use std::io::BufReader;
@@ -132,7 +134,10 @@ impl Inventory {
             .map_err(|error| fault(error.to_string()))?;
         let mut rows = Rows::new(reader, survey, styles, counts_from_1904);
         loop {
-            match without_panic(|| rows.next_row()).map_err(&fault)?.map_err(&fault)? {
+            match without_panic(|| rows.next_row())
+                .map_err(&fault)?
+                .map_err(&fault)?
+            {
                 Some(row) => {
                     if visit(row).is_break() {
                         return Ok(());

@@ -11,8 +11,8 @@ use quick_xml::events::{BytesStart, Event};
 
 use crate::fault::{FileFault, SheetFault};
 
-use super::contents::SheetEntry;
 use super::content::StyleId;
+use super::contents::SheetEntry;
 use super::package::{Found, Package, attribute};
 use super::place::{LAST_COLUMN, parse_reference};
 use cells::CellCheck;
@@ -190,13 +190,18 @@ fn check_dimension(element: &BytesStart<'_>, survey: &SheetSurvey) -> Result<(),
     let mut ends = text.split(':').map(parse_reference);
     let sound = match (ends.next().flatten(), ends.next(), ends.next()) {
         (Some(_), None, _) => true,
-        (Some((row, column)), Some(Some((last_row, last_column))), None) => row <= last_row && column <= last_column,
+        (Some((row, column)), Some(Some((last_row, last_column))), None) => {
+            row <= last_row && column <= last_column
+        }
         _ => false,
     };
     if sound {
         Ok(())
     } else {
-        Err(whole(survey, format!("says that its cells are `{text}`, which is no range")))
+        Err(whole(
+            survey,
+            format!("says that its cells are `{text}`, which is no range"),
+        ))
     }
 }
 

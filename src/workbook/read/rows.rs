@@ -28,6 +28,14 @@ pub(super) struct Rows<'book> {
     styles: Styles,
     date_shift: f64,
     waiting: Option<(u32, Cell)>,
+    position: Position,
+}
+
+/// Whether there may be cells left; past the end the reading library takes the rest of the XML for damage.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+enum Position {
+    Inside,
+    AtEnd,
 }
 
 impl<'book> Rows<'book> {
@@ -44,6 +52,7 @@ impl<'book> Rows<'book> {
             styles,
             date_shift: if counts_from_1904 { DAYS_1900_TO_1904 } else { 0.0 },
             waiting: None,
+            position: Position::Inside,
         }
     }
 
@@ -70,9 +79,12 @@ impl<'book> Rows<'book> {
 
     /// The next cell that holds a value or a format worth keeping.
     fn next_cell(&mut self) -> Result<Option<(u32, Cell)>, String> {
-        loop {
+        while self.position == Position::Inside {
             let (row, column, content, style) = match self.reader.next_cell_with_style_id() {
-                Ok(None) => return Ok(None),
+                Ok(None) => {
+                    self.position = Position::AtEnd;
+                    break;
+                }
                 Ok(Some((cell, style))) => {
                     let (row, column) = cell.get_position();
                     (row, column, content_of(cell.get_value(), self.date_shift), style)
@@ -80,8 +92,8 @@ impl<'book> Rows<'book> {
                 Err(XlsxError::CellError(text)) => self.known_by_survey(text)?,
                 Err(error) => return Err(error.to_string()),
             };
-            let column =
-                u16::try_from(column).map_err(|_too_far| format!("there is no column {}", u64::from(column) + 1))?;
+            let column = u16::try_from(column)
+                .map_err(|_too_far| format!("there is no column {}", u64::from(column) + 1))?;
             let style = self.kept_style(style);
             let formula = self.survey.is_formula(row, column);
             let empty = content == CellContent::Empty && !formula;
@@ -96,6 +108,7 @@ impl<'book> Rows<'book> {
             };
             return Ok(Some((row, cell)));
         }
+        Ok(None)
     }
 
     /// An error value the reading library stumbled over; it can go on, and the survey knows where it stands.
@@ -185,8 +198,8 @@ fn days_since_1899(date: crate::quantity::Date) -> Option<i32> {
         (i32::from(year), i32::from(month) - 3)
     };
     let days = 365 * year + year / 4 - year / 100 + year / 400 + (153 * month + 2) / 5 + i32::from(day) - 1;
-    // 693,900 is what the line above gives for 30 December 1899.
-    Some(days - 693_900)
+    // 693,899 is what the line above gives for 30 December 1899.
+    Some(days - 693_899)
 }
 
 #[cfg(test)]
@@ -200,7 +213,10 @@ mod tests {
             let serial = serial_of(day).unwrap();
             assert_eq!(Date::from_serial(serial).unwrap().to_string(), day);
         }
-        assert_eq!(serial_of("2026-12-01T12:00:00"), serial_of("2026-12-01").map(|day| day + 0.5));
+        assert_eq!(
+            serial_of("2026-12-01T12:00:00"),
+            serial_of("2026-12-01").map(|day| day + 0.5)
+        );
         assert_eq!(serial_of("2026-12-01T25:00:00"), None);
         assert_eq!(serial_of("tomorrow"), None);
     }

@@ -112,7 +112,9 @@ impl CellCheck {
                 self.add_text(text);
                 Ok(())
             }
-            Event::GeneralRef(_) | Event::CData(_) | Event::Comment(_) | Event::PI(_) => self.interrupt(event),
+            Event::GeneralRef(_) | Event::CData(_) | Event::Comment(_) | Event::PI(_) => {
+                self.interrupt(event)
+            }
             Event::Empty(_) | Event::Decl(_) | Event::DocType(_) | Event::Eof => Ok(()),
         }
     }
@@ -162,11 +164,16 @@ impl CellCheck {
     fn open_row(&mut self, element: &BytesStart<'_>, survey: &mut SheetSurvey) -> Result<(), SheetFault> {
         let mut reference = None;
         for attribute in element.attributes() {
-            let attribute = attribute.map_err(|error| self.whole(format!("has a row that cannot be read: {error}")))?;
+            let attribute =
+                attribute.map_err(|error| self.whole(format!("has a row that cannot be read: {error}")))?;
             match attribute.key.as_ref() {
                 "r" => reference = Some(attribute.value),
-                "hidden" if matches!(attribute.value.as_ref(), "1" | "true") => survey.extras.hidden_rows += 1,
-                "customHeight" if matches!(attribute.value.as_ref(), "1" | "true") => survey.extras.row_heights += 1,
+                "hidden" if matches!(attribute.value.as_ref(), "1" | "true") => {
+                    survey.extras.hidden_rows += 1
+                }
+                "customHeight" if matches!(attribute.value.as_ref(), "1" | "true") => {
+                    survey.extras.row_heights += 1
+                }
                 _ => {}
             }
         }
@@ -188,7 +195,8 @@ impl CellCheck {
         self.cell.reset();
         let mut reference = None;
         for attribute in element.attributes() {
-            let attribute = attribute.map_err(|error| self.whole(format!("has a cell that cannot be read: {error}")))?;
+            let attribute =
+                attribute.map_err(|error| self.whole(format!("has a cell that cannot be read: {error}")))?;
             match attribute.key.as_ref() {
                 "r" => reference = Some(attribute.value),
                 "s" => self.cell.style = attribute.value.parse().unwrap_or(0),
@@ -267,14 +275,18 @@ impl CellCheck {
         let interrupted = self.cell.pieces > 1;
         match self.cell.kind.as_str() {
             "inlineStr" | "is" | "str" | "d" => return Ok(()),
-            _ if interrupted => return Err(self.unreadable("a value interrupted by something else".to_owned())),
+            _ if interrupted => {
+                return Err(self.unreadable("a value interrupted by something else".to_owned()));
+            }
             "" => {}
             "s" => {
                 let known = text.is_empty()
                     || text.bytes().all(|byte| byte.is_ascii_digit())
                         && text.parse::<u64>().is_ok_and(|index| index < self.shared_texts);
                 if !known {
-                    return Err(self.unreadable(format!("a reference to text number `{text}`, which is not stored")));
+                    return Err(self.unreadable(format!(
+                        "a reference to text number `{text}`, which is not stored"
+                    )));
                 }
             }
             "n" if text.is_empty() || text.parse::<f64>().is_ok() => {}
@@ -314,7 +326,9 @@ impl CellCheck {
     /// A value may hold references to characters if it is text; anything else in it would be dropped.
     fn interrupt(&mut self, event: &Event<'_>) -> Result<(), SheetFault> {
         if self.inside == Inside::Value {
-            if matches!(event, Event::CData(_)) || !matches!(self.cell.kind.as_str(), "str" | "d" | "inlineStr" | "is") {
+            if matches!(event, Event::CData(_))
+                || !matches!(self.cell.kind.as_str(), "str" | "d" | "inlineStr" | "is")
+            {
                 return Err(self.unreadable("a value interrupted by something else".to_owned()));
             }
             self.cell.pieces += 1;
