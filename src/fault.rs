@@ -7,7 +7,7 @@ mod file;
 mod rule;
 
 pub use cell::{CellFault, CellFaultKind};
-pub use file::FileFault;
+pub use file::{FileFault, FileKind, SheetFault};
 pub use rule::{Drawing, OwnerKind, RuleFault, RuleFaults, RuleMistake};
 
 /// Why nothing could be written.

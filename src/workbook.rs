@@ -1,7 +1,22 @@
 //! Workbooks in and out: what stands in their cells and how it looks, without any meaning given to it.
 
+mod appearance;
+mod caught;
 mod content;
+mod contents;
+mod guard;
+mod look;
+mod not_carried;
+mod package;
 mod place;
+mod read;
+mod survey;
+mod write;
 
+pub use appearance::Appearance;
 pub use content::{Cell, CellContent, Row, StyleId};
+pub use look::{Look, Shade};
 pub use place::{CellRef, column_letters};
+pub use read::{Inventory, open_inventory};
+pub use survey::{ColumnLayout, SheetSurvey, Visibility};
+pub use write::{AnnotatedWorkbook, Overwrite, SheetId, Target, Value, free_sheet_name};

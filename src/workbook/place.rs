@@ -52,9 +52,61 @@ pub fn column_letters(column: u16) -> String {
     letters.iter().rev().collect()
 }
 
+/// The last column of a sheet (`XFD`), counted from 0 (ECMA-376 leaves it open; all spreadsheet programs agree).
+pub(super) const LAST_COLUMN: u16 = 16_383;
+
+/// The last row of a sheet (1,048,576), counted from 0.
+pub(super) const LAST_ROW: u32 = 1_048_575;
+
+/// Row and column, counted from 0, of a reference such as `C7`, if a sheet has that cell.
+pub(super) fn parse_reference(text: &str) -> Option<(u32, u16)> {
+    let digits = text.find(|character: char| character.is_ascii_digit())?;
+    let (letters, digits) = text.split_at_checked(digits)?;
+    let mut column = 0_u32;
+    for letter in letters.bytes() {
+        if !letter.is_ascii_alphabetic() {
+            return None;
+        }
+        let digit = u32::from(letter.to_ascii_uppercase() - b'A') + 1;
+        column = column.checked_mul(26)?.checked_add(digit)?;
+    }
+    let column = u16::try_from(column.checked_sub(1)?).ok()?;
+    (column <= LAST_COLUMN).then_some((parse_row(digits)?, column))
+}
+
+/// The row, counted from 0, of a row number such as `7`, if a sheet has that row.
+pub(super) fn parse_row(text: &str) -> Option<u32> {
+    if !text.bytes().all(|byte| byte.is_ascii_digit()) {
+        return None;
+    }
+    let row = text.parse::<u32>().ok()?.checked_sub(1)?;
+    (row <= LAST_ROW).then_some(row)
+}
+
 #[cfg(test)]
 mod tests {
-    use super::{CellRef, column_letters};
+    use super::{CellRef, column_letters, parse_reference};
+
+    #[test]
+    fn a_reference_is_read_up_to_the_last_cell_of_a_sheet_and_not_beyond() {
+        assert_eq!(parse_reference("C7"), Some((6, 2)));
+        assert_eq!(parse_reference("XFD1048576"), Some((1_048_575, 16_383)));
+        for none in [
+            "XFE1",
+            "A1048577",
+            "A0",
+            "7",
+            "C",
+            "",
+            "C-7",
+            "C7D",
+            "ÄA1",
+            "AAAAAAAAAA1",
+            "A99999999999",
+        ] {
+            assert_eq!(parse_reference(none), None, "{none}");
+        }
+    }
 
     #[test]
     fn columns_are_lettered_as_spreadsheets_do() {

@@ -1,0 +1,155 @@
+//! Says what a file is by its content, before any library opens it. It reads no cells.
+
+use std::fs::File;
+use std::io::{Read, Seek, SeekFrom};
+use std::path::Path;
+
+use crate::fault::{FileFault, FileKind};
+
+/// How much of an old binary file is searched for the names of its streams, in bytes.
+const SEARCHED: u64 = 32 << 20;
+
+/// How much of a text is looked at to tell what kind it is, in bytes.
+const GLANCED_AT: u64 = 4096;
+
+/// Opens a file that begins as a zip container; whether a workbook is in it shows later.
+pub(super) fn open_container(path: &Path) -> Result<File, FileFault> {
+    let shown = path.display().to_string();
+    let unreadable = |error: std::io::Error| FileFault::Unreadable {
+        path: path.display().to_string(),
+        reason: error.to_string(),
+    };
+    let details = match std::fs::metadata(path) {
+        Ok(details) => details,
+        Err(error) if error.kind() == std::io::ErrorKind::NotFound => {
+            return Err(FileFault::Missing { path: shown });
+        }
+        Err(error) => return Err(unreadable(error)),
+    };
+    if details.is_dir() {
+        return Err(FileFault::Folder { path: shown });
+    }
+    if !details.is_file() {
+        return Err(FileFault::Unreadable {
+            path: shown,
+            reason: "it is not a regular file".to_owned(),
+        });
+    }
+    let mut file = File::open(path).map_err(unreadable)?;
+    match kind_by_content(&mut file).map_err(unreadable)? {
+        Some(found) => Err(FileFault::AnotherKind { path: shown, found }),
+        None => Ok(file),
+    }
+}
+
+/// What the file is, or none if it begins as a zip container does.
+fn kind_by_content(file: &mut File) -> std::io::Result<Option<FileKind>> {
+    let mut beginning = Vec::new();
+    file.by_ref().take(GLANCED_AT).read_to_end(&mut beginning)?;
+    file.seek(SeekFrom::Start(0))?;
+    if beginning.starts_with(b"PK\x03\x04") || beginning.starts_with(b"PK\x05\x06") {
+        return Ok(None);
+    }
+    if beginning.starts_with(&[0xD0, 0xCF, 0x11, 0xE0, 0xA1, 0xB1, 0x1A, 0xE1]) {
+        return kind_of_compound_file(file).map(Some);
+    }
+    Ok(Some(kind_of_flat_file(&beginning)))
+}
+
+/// An encrypted workbook stands in the same container as an old binary one; the names of the streams tell.
+fn kind_of_compound_file(file: &mut File) -> std::io::Result<FileKind> {
+    let mut content = Vec::new();
+    file.take(SEARCHED).read_to_end(&mut content)?;
+    let names = |name: &str| {
+        let wide: Vec<u8> = name.encode_utf16().flat_map(u16::to_le_bytes).collect();
+        content.windows(wide.len()).any(|window| window == wide)
+    };
+    Ok(if names("EncryptedPackage") {
+        FileKind::Encrypted
+    } else if names("WordDocument") || names("PowerPoint Document") {
+        FileKind::Document
+    } else if names("Workbook") || names("Book") {
+        FileKind::Xls
+    } else {
+        FileKind::Unknown
+    })
+}
+
+fn kind_of_flat_file(beginning: &[u8]) -> FileKind {
+    if beginning.is_empty() {
+        return FileKind::Empty;
+    }
+    // BIFF2 to BIFF4, which stood alone in a file.
+    if beginning.starts_with(&[0x09, 0x00])
+        || beginning.starts_with(&[0x09, 0x02])
+        || beginning.starts_with(&[0x09, 0x04])
+    {
+        return FileKind::Xls;
+    }
+    if beginning.starts_with(b"%PDF") {
+        return FileKind::Pdf;
+    }
+    if beginning.starts_with(b"{\\rtf") {
+        return FileKind::Document;
+    }
+    if [&b"\x1F\x8B"[..], b"7z\xBC\xAF", b"Rar!", b"BZh", b"\xFD7zXZ"]
+        .iter()
+        .any(|magic| beginning.starts_with(magic))
+    {
+        return FileKind::Archive;
+    }
+    text_of(beginning).map_or(FileKind::Unknown, |text| kind_of_text(&text))
+}
+
+/// The beginning as lower-case text, if it looks like text in some encoding.
+fn text_of(beginning: &[u8]) -> Option<String> {
+    let wide = beginning.starts_with(&[0xFF, 0xFE]) || beginning.starts_with(&[0xFE, 0xFF]);
+    // Telling the kind of a text needs its ASCII letters only.
+    let letters: Vec<u8> = beginning
+        .iter()
+        .copied()
+        .filter(|byte| !wide || (*byte != 0 && *byte < 0xFE))
+        .collect();
+    let control = letters
+        .iter()
+        .any(|byte| *byte < 0x20 && !matches!(byte, b'\t' | b'\n' | b'\r' | 0x0C));
+    (!control).then(|| String::from_utf8_lossy(&letters).to_lowercase())
+}
+
+fn kind_of_text(text: &str) -> FileKind {
+    let text = text.trim_start_matches('\u{feff}').trim_start();
+    if text.is_empty() {
+        FileKind::Empty
+    } else if !text.starts_with('<') {
+        FileKind::Text
+    } else if text.contains("schemas-microsoft-com:office:spreadsheet") && !text.contains("<html") {
+        FileKind::XmlSpreadsheet
+    } else if ["<html", "<!doctype html", "<table", "<head", "<body", "<meta"]
+        .iter()
+        .any(|tag| text.contains(tag))
+    {
+        FileKind::Html
+    } else {
+        FileKind::Xml
+    }
+}
+
+/// What a container without an xlsx workbook holds, by the names of its parts.
+pub(super) fn kind_of_parts<'name>(names: impl Iterator<Item = &'name str>, media_type: &str) -> FileKind {
+    if media_type.starts_with("application/vnd.oasis.opendocument.spreadsheet") {
+        return FileKind::Ods;
+    }
+    if media_type.starts_with("application/vnd.oasis.opendocument") {
+        return FileKind::Document;
+    }
+    let mut found = FileKind::Archive;
+    for name in names {
+        if name.eq_ignore_ascii_case("xl/workbook.bin") {
+            return FileKind::Xlsb;
+        }
+        if name.starts_with("word/") || name.starts_with("ppt/") {
+            found = FileKind::Document;
+        }
+    }
+    found
+}

@@ -1,0 +1,223 @@
+//! Puts the stream of cells together into rows, in the terms of [`CellContent`].
+
+use std::fs::File;
+use std::io::BufReader;
+
+use calamine::{DataRef, XlsxCellReader, XlsxError};
+
+use crate::workbook::content::{Cell, CellContent, Row, StyleId};
+use crate::workbook::survey::{SheetSurvey, UnknownError};
+
+/// Days from the beginning of the 1900 system to that of the 1904 system (ECMA-376 part 1, 18.17.4.1).
+const DAYS_1900_TO_1904: f64 = 1462.0;
+
+/// Which of the workbook's cell formats matter.
+#[derive(Debug, Clone, Copy)]
+pub(super) struct Styles {
+    /// Format 0, which every cell without one has, adds nothing.
+    pub(super) plain: bool,
+    /// How many formats there are.
+    pub(super) known: usize,
+}
+
+/// The rows of a sheet, one after the other.
+pub(super) struct Rows<'book> {
+    reader: XlsxCellReader<'book, BufReader<File>>,
+    survey: &'book SheetSurvey,
+    errors: std::slice::Iter<'book, UnknownError>,
+    styles: Styles,
+    date_shift: f64,
+    waiting: Option<(u32, Cell)>,
+    position: Position,
+}
+
+/// Whether there may be cells left; past the end the reading library takes the rest of the XML for damage.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+enum Position {
+    Inside,
+    AtEnd,
+}
+
+impl<'book> Rows<'book> {
+    pub(super) fn new(
+        reader: XlsxCellReader<'book, BufReader<File>>,
+        survey: &'book SheetSurvey,
+        styles: Styles,
+        counts_from_1904: bool,
+    ) -> Self {
+        Self {
+            reader,
+            survey,
+            errors: survey.unknown_errors.iter(),
+            styles,
+            date_shift: if counts_from_1904 { DAYS_1900_TO_1904 } else { 0.0 },
+            waiting: None,
+            position: Position::Inside,
+        }
+    }
+
+    /// The next row that holds anything; an error in words if the sheet cannot be read on.
+    pub(super) fn next_row(&mut self) -> Result<Option<Row>, String> {
+        let first = match self.waiting.take() {
+            Some(first) => Some(first),
+            None => self.next_cell()?,
+        };
+        let Some((index, cell)) = first else {
+            return Ok(None);
+        };
+        let mut cells = Vec::with_capacity(usize::from(self.survey.used_columns));
+        cells.push(cell);
+        while let Some((row, cell)) = self.next_cell()? {
+            if row != index {
+                self.waiting = Some((row, cell));
+                break;
+            }
+            cells.push(cell);
+        }
+        Ok(Some(Row { index, cells }))
+    }
+
+    /// The next cell that holds a value or a format worth keeping.
+    fn next_cell(&mut self) -> Result<Option<(u32, Cell)>, String> {
+        while self.position == Position::Inside {
+            let (row, column, content, style) = match self.reader.next_cell_with_style_id() {
+                Ok(None) => {
+                    self.position = Position::AtEnd;
+                    break;
+                }
+                Ok(Some((cell, style))) => {
+                    let (row, column) = cell.get_position();
+                    (row, column, content_of(cell.get_value(), self.date_shift), style)
+                }
+                Err(XlsxError::CellError(text)) => self.known_by_survey(text)?,
+                Err(error) => return Err(error.to_string()),
+            };
+            let column = u16::try_from(column)
+                .map_err(|_too_far| format!("there is no column {}", u64::from(column) + 1))?;
+            let style = self.kept_style(style);
+            let formula = self.survey.is_formula(row, column);
+            let empty = content == CellContent::Empty && !formula;
+            if empty && (style.is_none() || column >= self.survey.used_columns) {
+                continue;
+            }
+            let cell = Cell {
+                column,
+                content,
+                style,
+                formula,
+            };
+            return Ok(Some((row, cell)));
+        }
+        Ok(None)
+    }
+
+    /// An error value the reading library stumbled over; it can go on, and the survey knows where it stands.
+    fn known_by_survey(&mut self, text: String) -> Result<(u32, u32, CellContent, usize), String> {
+        match self.errors.next() {
+            Some(error) if error.text == text => Ok((
+                error.row,
+                u32::from(error.column),
+                CellContent::Error(text),
+                usize::try_from(error.style.0).unwrap_or(0),
+            )),
+            _ => Err(format!("the error value `{text}` is not known")),
+        }
+    }
+
+    fn kept_style(&self, style: usize) -> Option<StyleId> {
+        if style >= self.styles.known || (style == 0 && self.styles.plain) {
+            return None;
+        }
+        u32::try_from(style).ok().map(StyleId)
+    }
+}
+
+fn content_of(value: &DataRef<'_>, date_shift: f64) -> CellContent {
+    match value {
+        DataRef::Empty => CellContent::Empty,
+        DataRef::Float(number) => number_or_text(*number, CellContent::Number),
+        DataRef::Int(number) => CellContent::Text(number.to_string()),
+        DataRef::String(text) => text_or_empty(text),
+        DataRef::SharedString(text) => text_or_empty(text),
+        DataRef::Bool(boolean) => CellContent::Boolean(*boolean),
+        DataRef::DateTime(moment) => {
+            let shift = if moment.is_duration() { 0.0 } else { date_shift };
+            number_or_text(moment.as_f64() + shift, CellContent::DateTime)
+        }
+        DataRef::DateTimeIso(text) => {
+            serial_of(text).map_or_else(|| text_or_empty(text), CellContent::DateTime)
+        }
+        DataRef::DurationIso(text) => text_or_empty(text),
+        DataRef::Error(error) => CellContent::Error(error.to_string()),
+    }
+}
+
+/// A number no spreadsheet can show is kept as the text it was, not as a number to compute with.
+fn number_or_text(number: f64, content: fn(f64) -> CellContent) -> CellContent {
+    if number.is_finite() {
+        content(number)
+    } else {
+        CellContent::Text(number.to_string())
+    }
+}
+
+fn text_or_empty(text: &str) -> CellContent {
+    if text.is_empty() {
+        CellContent::Empty
+    } else {
+        CellContent::Text(text.to_owned())
+    }
+}
+
+/// The serial number (1900 system) of a date written as `2026-12-01` or `2026-12-01T08:30:00`, from March 1900 on.
+fn serial_of(text: &str) -> Option<f64> {
+    let (day, time) = text.split_once('T').unwrap_or((text, "00:00:00"));
+    let date = crate::quantity::Date::parse(day)?;
+    let days = f64::from(days_since_1899(date)?);
+    let mut fields = time.trim_end_matches('Z').split(':');
+    let mut field = |largest: f64| {
+        fields
+            .next()
+            .map_or(Some(0.0), |field| field.parse::<f64>().ok())
+            .filter(|value| (0.0..largest).contains(value))
+    };
+    let seconds = field(24.0)? * 3600.0 + field(60.0)? * 60.0 + field(60.0)?;
+    Some(days + seconds / 86_400.0)
+}
+
+/// Days since 30 December 1899, which is day 0 for every date from 1 March 1900 on.
+fn days_since_1899(date: crate::quantity::Date) -> Option<i32> {
+    let (year, month, day) = date.parts();
+    if (year, month) < (1900, 3) {
+        return None;
+    }
+    // Years begin in March, so that a leap day is the last of its year.
+    let (year, month) = if month < 3 {
+        (i32::from(year) - 1, i32::from(month) + 9)
+    } else {
+        (i32::from(year), i32::from(month) - 3)
+    };
+    let days = 365 * year + year / 4 - year / 100 + year / 400 + (153 * month + 2) / 5 + i32::from(day) - 1;
+    // 693,899 is what the line above gives for 30 December 1899.
+    Some(days - 693_899)
+}
+
+#[cfg(test)]
+mod tests {
+    use super::serial_of;
+    use crate::quantity::Date;
+
+    #[test]
+    fn a_date_in_words_of_the_standard_is_the_serial_of_its_day() {
+        for day in ["1900-03-01", "1999-12-31", "2000-02-29", "2026-12-01"] {
+            let serial = serial_of(day).unwrap();
+            assert_eq!(Date::from_serial(serial).unwrap().to_string(), day);
+        }
+        assert_eq!(
+            serial_of("2026-12-01T12:00:00"),
+            serial_of("2026-12-01").map(|day| day + 0.5)
+        );
+        assert_eq!(serial_of("2026-12-01T25:00:00"), None);
+        assert_eq!(serial_of("tomorrow"), None);
+    }
+}

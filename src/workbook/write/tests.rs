@@ -1,0 +1,1 @@
+//! Round trips and refusals of the written workbook.
