@@ -330,17 +330,24 @@ pub(crate) struct Context<'run> {
 }
 
 impl Context<'_> {
-    /// The first raised caution that keeps the subject, or a value derived from `derived_from`, from clearing.
-    pub(crate) fn blocking(&self, subject: Subject, derived_from: Option<Subject>) -> Option<usize> {
-        self.cautions.iter().map(|raised| raised.caution).find(|index| {
-            self.rules
-                .cautions
-                .get(*index)
-                .is_some_and(|caution| match &caution.blocks {
-                    Blocks::Everything => true,
-                    Blocks::Subjects(subjects) => covers(subjects, subject, derived_from),
-                })
-        })
+    /// The raised cautions that keep the subject, or a value derived from `derived_from`, from clearing.
+    pub(crate) fn blocking(
+        &self,
+        subject: Subject,
+        derived_from: Option<Subject>,
+    ) -> impl Iterator<Item = usize> {
+        self.cautions
+            .iter()
+            .map(|raised| raised.caution)
+            .filter(move |index| {
+                self.rules
+                    .cautions
+                    .get(*index)
+                    .is_some_and(|caution| match &caution.blocks {
+                        Blocks::Everything => true,
+                        Blocks::Subjects(subjects) => covers(subjects, subject, derived_from),
+                    })
+            })
     }
 
     /// Whether a raised caution lets the subject fire as screening only.

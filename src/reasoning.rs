@@ -11,8 +11,8 @@ mod value;
 
 pub use criterion::{Line, criterion_line};
 pub use designation::{headline, headline_verdict, verdict_text, why, with_closeness};
-pub use value::limit_phrase;
 pub use row::{LogKowCells, cautions_text, deciding_text, log_kow_cells};
+pub use value::limit_phrase;
 
 use crate::evidence::EvidenceSet;
 use crate::judge::{CriterionJudgement, Judgement, RulebookJudgement};

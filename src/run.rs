@@ -93,22 +93,26 @@ const BATCHES_WAITING: usize = 4;
 /// Screens an inventory and writes it back, annotated.
 pub fn screen(settings: &ScreenSettings) -> Result<Summary, Refusal> {
     let rules = load_rule_set(&settings.rulebooks)?;
-    let inventory = open_inventory(&settings.inventory)?;
-    let plan = Plan::new(&inventory, &rules, settings)?;
+    let mut inventory = open_inventory(&settings.inventory)?;
+    let plan = Plan::new(&mut inventory, &rules, settings)?;
     let mut output = Output::create(settings, &inventory, &plan, &rules)?;
     let pool = rayon::ThreadPoolBuilder::new()
         .num_threads(settings.threads.unwrap_or(0))
         .build()
-        .map_err(|error| Refusal::Usage(format!("the threads could not be started ({error}); try --threads 1")))?;
+        .map_err(|error| {
+            Refusal::Usage(format!(
+                "the threads could not be started ({error}); try --threads 1"
+            ))
+        })?;
     for sheet in &plan.sheets {
-        stream_sheet(&inventory, sheet, &plan, &rules, &pool, &mut output)?;
+        stream_sheet(&mut inventory, sheet, &plan, &rules, &pool, &mut output)?;
     }
     output.finish(settings, &inventory, &plan, &rules)
 }
 
 /// Reads, judges and writes one sheet, the three at the same time.
 fn stream_sheet(
-    inventory: &Inventory,
+    inventory: &mut Inventory,
     sheet: &SheetPlan,
     plan: &Plan,
     rules: &RuleSet,
@@ -132,14 +136,17 @@ fn stream_sheet(
 type Batch<T> = Result<Vec<T>, FileFault>;
 
 /// A closed channel means that a later stage gave up, with the reason on its own way to the user.
-fn read_batches(inventory: &Inventory, sheet: &SheetPlan, to_judge: &SyncSender<Batch<Row>>) {
+fn read_batches(inventory: &mut Inventory, sheet: &SheetPlan, to_judge: &SyncSender<Batch<Row>>) {
     let mut batch = Vec::with_capacity(ROWS_A_BATCH);
     let read = inventory.stream_rows(sheet.index, |row| {
         batch.push(row);
         if batch.len() < ROWS_A_BATCH {
             return std::ops::ControlFlow::Continue(());
         }
-        match to_judge.send(Ok(std::mem::replace(&mut batch, Vec::with_capacity(ROWS_A_BATCH)))) {
+        match to_judge.send(Ok(std::mem::replace(
+            &mut batch,
+            Vec::with_capacity(ROWS_A_BATCH),
+        ))) {
             Ok(()) => std::ops::ControlFlow::Continue(()),
             Err(_) => std::ops::ControlFlow::Break(()),
         }
@@ -158,7 +165,9 @@ fn judge_batches(
     for batch in rows {
         let judged = batch.map(|rows| {
             pool.install(|| {
-                rows.into_par_iter().map(|row| judge_row(row, sheet, plan.reasoning, rules)).collect::<Vec<_>>()
+                rows.into_par_iter()
+                    .map(|row| judge_row(row, sheet, plan.reasoning, rules))
+                    .collect::<Vec<_>>()
             })
         });
         if to_write.send(judged).is_err() {

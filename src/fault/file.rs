@@ -70,6 +70,28 @@ pub enum FileFault {
         /// What is wrong, and in which sheet or cell.
         fault: SheetFault,
     },
+    /// No sheet has a header that is known.
+    #[error(
+        "{path}: no sheet has a header that is recognised ({}); a header needs a column for a CAS number, an EC number or a structure, or a name beside another known column. `kowledger columns` shows what was found, and `--column 'Header=field'` names a column", .sheets.join(", ")
+    )]
+    NoHeader {
+        /// The path as given.
+        path: String,
+        /// The sheets that were looked at.
+        sheets: Vec<String>,
+    },
+    /// The sheet is too wide for the added columns.
+    #[error(
+        "sheet {sheet}: {used} columns are used and {needed} more are needed, but a sheet has 16384; remove columns that stand far to the right, or apply fewer rulebooks"
+    )]
+    NoRoom {
+        /// The sheet.
+        sheet: String,
+        /// Columns in use.
+        used: usize,
+        /// Columns to add.
+        needed: usize,
+    },
     /// The output exists and may not be replaced.
     #[error("{path}: exists already; add `--force` to replace it, or choose another `--output`")]
     OutputExists {

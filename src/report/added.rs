@@ -21,12 +21,20 @@ pub struct AddedColumns {
     pub folded: Vec<(usize, usize)>,
 }
 
-const ASSESSOR: [(&str, f64); 4] =
-    [("Assessor verdict", 18.0), ("Assessor reason", 30.0), ("Assessor", 14.0), ("Assessed on", 12.0)];
+const ASSESSOR: [(&str, f64); 4] = [
+    ("Assessor verdict", 18.0),
+    ("Assessor reason", 30.0),
+    ("Assessor", 14.0),
+    ("Assessed on", 12.0),
+];
 
 /// Lays out the added columns for a rule set, beside headers that the user already has.
 pub fn added_columns(rules: &RuleSet, taken: &[String]) -> AddedColumns {
-    let mut added = AddedColumns { headers: Vec::new(), widths: Vec::new(), folded: Vec::new() };
+    let mut added = AddedColumns {
+        headers: Vec::new(),
+        widths: Vec::new(),
+        folded: Vec::new(),
+    };
     let mut push = |header: String, width: f64| {
         added.headers.push(free_header(header, taken));
         added.widths.push(width);
@@ -39,8 +47,9 @@ pub fn added_columns(rules: &RuleSet, taken: &[String]) -> AddedColumns {
     for rulebook in &rules.rulebooks {
         push(rulebook.short.clone(), 24.0);
         push(format!("{} why", rulebook.short), 60.0);
-        let places: Vec<usize> =
-            parts(rulebook).map(|id| push(format!("{} {id}", rulebook.short), 20.0)).collect();
+        let places: Vec<usize> = parts(rulebook)
+            .map(|id| push(format!("{} {id}", rulebook.short), 20.0))
+            .collect();
         folded.extend(places.first().copied().zip(places.last().copied()));
     }
     push("Cautions".into(), 50.0);
@@ -53,11 +62,19 @@ pub fn added_columns(rules: &RuleSet, taken: &[String]) -> AddedColumns {
 
 fn parts(rulebook: &Rulebook) -> impl Iterator<Item = &str> {
     let criteria = rulebook.criteria.iter().map(|criterion| criterion.id.as_str());
-    criteria.chain(rulebook.designations.iter().map(|designation| designation.id.as_str()))
+    criteria.chain(
+        rulebook
+            .designations
+            .iter()
+            .map(|designation| designation.id.as_str()),
+    )
 }
 
 fn free_header(header: String, taken: &[String]) -> String {
-    if taken.iter().any(|other| other.trim().eq_ignore_ascii_case(&header)) {
+    if taken
+        .iter()
+        .any(|other| other.trim().eq_ignore_ascii_case(&header))
+    {
         format!("{header} (screened)")
     } else {
         header
@@ -79,7 +96,10 @@ pub fn added_entries(told: Told, faults: &[CellFault]) -> Vec<Entry> {
         entries.push(Entry::text(headline(book), Look::Verdict(headline_shade(book))));
         entries.push(Entry::text(why(book), Look::Wrapped));
         entries.extend(book.criteria().map(|(criterion, judged)| {
-            Entry::text(verdict_text(criterion, judged), Look::Verdict(shade(judged.verdict)))
+            Entry::text(
+                verdict_text(criterion, judged),
+                Look::Verdict(shade(judged.verdict)),
+            )
         }));
         entries.extend(book.judged.designations.iter().map(|judged| {
             let words = with_closeness(judged.verdict, judged.closeness);
@@ -105,7 +125,9 @@ fn cautions_and_faults(told: Told, faults: &[CellFault]) -> String {
 fn headline_shade(book: Book) -> Shade {
     match book.judged.headline {
         Headline::Listed(_) => Shade::Listed,
-        Headline::Designation(_) | Headline::Criterion(_) => headline_verdict(book).map_or(Shade::NoData, shade),
+        Headline::Designation(_) | Headline::Criterion(_) => {
+            headline_verdict(book).map_or(Shade::NoData, shade)
+        }
     }
 }
 

@@ -4,8 +4,8 @@ use crate::quantity::format_number;
 use crate::reasoning::limit_phrase;
 use crate::report::{Entry, Table};
 use crate::rules::{
-    Checked, Combine, Criterion, Decides, Designation, DesignationPart, Guards, OnlyIf, RuleSet, Rulebook, Step, Test,
-    Weight,
+    Checked, Combine, Criterion, Decides, Designation, DesignationPart, Guards, OnlyIf, RuleSet, Rulebook,
+    Step, Test, Weight,
 };
 use crate::workbook::Look;
 
@@ -26,15 +26,30 @@ const COLUMNS: [(&str, f64); 12] = [
 
 /// Lays out the Rulebooks sheet.
 pub fn rulebooks_table(rules: &RuleSet) -> Table {
-    let mut rows = vec![COLUMNS.iter().map(|(header, _)| Entry::text(*header, Look::Header)).collect()];
+    let mut rows = vec![
+        COLUMNS
+            .iter()
+            .map(|(header, _)| Entry::text(*header, Look::Header))
+            .collect(),
+    ];
     for rulebook in &rules.rulebooks {
         rows.push(heading(rulebook));
         for criterion in &rulebook.criteria {
             rows.extend(criterion_rows(rulebook, criterion));
         }
-        rows.extend(rulebook.designations.iter().map(|designation| designation_row(rulebook, designation)));
+        rows.extend(
+            rulebook
+                .designations
+                .iter()
+                .map(|designation| designation_row(rulebook, designation)),
+        );
     }
-    Table { name: "Rulebooks", widths: COLUMNS.iter().map(|(_, width)| *width).collect(), frozen_rows: 1, rows }
+    Table {
+        name: "Rulebooks",
+        widths: COLUMNS.iter().map(|(_, width)| *width).collect(),
+        frozen_rows: 1,
+        rows,
+    }
 }
 
 fn heading(rulebook: &Rulebook) -> Vec<Entry> {
@@ -48,13 +63,21 @@ fn heading(rulebook: &Rulebook) -> Vec<Entry> {
         ));
     }
     if let Some(lipid) = rulebook.bcf_at_lipid {
-        remarks.push(format!("A BCF with a stated lipid content is compared at {} % lipid.", format_number(lipid)));
+        remarks.push(format!(
+            "A BCF with a stated lipid content is compared at {} % lipid.",
+            format_number(lipid)
+        ));
     }
     if let Some(limit) = rulebook.mixture_limit {
-        remarks.push(format!("In a mixture a component counts from {} %.", format_number(limit)));
+        remarks.push(format!(
+            "In a mixture a component counts from {} %.",
+            format_number(limit)
+        ));
     }
     if rulebook.strongest != Weight::Definitive {
-        remarks.push("The instrument leaves the decision to a review: no verdict is more than screening.".to_owned());
+        remarks.push(
+            "The instrument leaves the decision to a review: no verdict is more than screening.".to_owned(),
+        );
     }
     remarks.extend(rulebook.note.clone());
     let mut row = vec![
@@ -89,7 +112,11 @@ fn criterion_rows(rulebook: &Rulebook, criterion: &Criterion) -> Vec<Vec<Entry>>
     let bands = criterion.bands.iter().map(|band| {
         let mut row = lead(rulebook, criterion);
         row.extend((2..5).map(|_| Entry::text("", Look::Text)));
-        row.extend(test_entries(rulebook, &band.test, format!("{}: {}", band.rating, limit_phrase(&band.test))));
+        row.extend(test_entries(
+            rulebook,
+            &band.test,
+            format!("{}: {}", band.rating, limit_phrase(&band.test)),
+        ));
         row
     });
     steps.chain(bands).collect()
@@ -164,10 +191,14 @@ fn designation_row(rulebook: &Rulebook, designation: &Designation) -> Vec<Entry>
         .parts
         .iter()
         .filter_map(|part| match *part {
-            DesignationPart::Criterion(index) => rulebook.criteria.get(index).map(|criterion| criterion.id.as_str()),
-            DesignationPart::Designation(index) => {
-                rulebook.designations.get(index).map(|designation| designation.id.as_str())
-            }
+            DesignationPart::Criterion(index) => rulebook
+                .criteria
+                .get(index)
+                .map(|criterion| criterion.id.as_str()),
+            DesignationPart::Designation(index) => rulebook
+                .designations
+                .get(index)
+                .map(|designation| designation.id.as_str()),
         })
         .collect();
     let joined = match designation.combine {
@@ -176,7 +207,10 @@ fn designation_row(rulebook: &Rulebook, designation: &Designation) -> Vec<Entry>
     };
     let mut remark = format!("{}: {joined}.", designation.title);
     if !designation.stated_by.is_empty() {
-        remark.push_str(&format!(" Fulfilled as stated where the row carries {}.", designation.stated_by.join(" or ")));
+        remark.push_str(&format!(
+            " Fulfilled as stated where the row carries {}.",
+            designation.stated_by.join(" or ")
+        ));
     }
     let mut row = vec![
         Entry::text(rulebook.short.as_str(), Look::Text),

@@ -47,20 +47,43 @@ pub struct SheetFacts {
 /// Lays out the Run record.
 pub fn run_record_table(facts: &RunFacts, rules: &RuleSet) -> Table {
     let mut rows = vec![title("Run record")];
-    rows.push(pair("Screened with", format!("kowledger {}", env!("CARGO_PKG_VERSION"))));
+    rows.push(pair(
+        "Screened with",
+        format!("kowledger {}", env!("CARGO_PKG_VERSION")),
+    ));
     rows.push(pair("Date of the run", facts.date.to_string()));
     rows.push(pair("Inventory", facts.inventory.clone()));
     rows.push(pair("SHA-256 of the inventory", facts.fingerprint.clone()));
-    rows.extend(facts.options.iter().map(|(name, value)| pair(name, value.clone())));
+    rows.extend(
+        facts
+            .options
+            .iter()
+            .map(|(name, value)| pair(name, value.clone())),
+    );
     rows.push(pair("Reasoning sheet", facts.reasoning.clone()));
     rows.push(title("Cautions of use"));
-    rows.extend(CAUTIONS_OF_USE.iter().map(|sentence| pair("", (*sentence).to_owned())));
+    rows.extend(
+        CAUTIONS_OF_USE
+            .iter()
+            .map(|sentence| pair("", (*sentence).to_owned())),
+    );
     rows.push(title("Rulebooks applied"));
     rows.extend(rules.rulebooks.iter().map(|rulebook| {
-        pair(&rulebook.short, format!("{} — {}, edition {}", rulebook.title, rulebook.source, rulebook.edition))
+        pair(
+            &rulebook.short,
+            format!(
+                "{} — {}, edition {}",
+                rulebook.title, rulebook.source, rulebook.edition
+            ),
+        )
     }));
     rows.push(title("SHA-256 of the rule files"));
-    rows.extend(facts.rule_fingerprints.iter().map(|(name, hash)| pair(name, hash.clone())));
+    rows.extend(
+        facts
+            .rule_fingerprints
+            .iter()
+            .map(|(name, hash)| pair(name, hash.clone())),
+    );
     for sheet in &facts.sheets {
         rows.extend(sheet_rows(sheet));
     }
@@ -72,16 +95,28 @@ pub fn run_record_table(facts: &RunFacts, rules: &RuleSet) -> Table {
     rows.extend(fault_rows(facts));
     rows.push(title("Lists not consulted"));
     rows.push(pair("", lists_not_consulted(rules)));
-    Table { name: "Run record", widths: vec![34.0, 120.0], frozen_rows: 0, rows }
+    Table {
+        name: "Run record",
+        widths: vec![34.0, 120.0],
+        frozen_rows: 0,
+        rows,
+    }
 }
 
 fn lists_not_consulted(rules: &RuleSet) -> String {
-    let lists: Vec<&str> =
-        rules.rulebooks.iter().flat_map(|rulebook| &rulebook.listings).map(|listing| listing.title.as_str()).collect();
+    let lists: Vec<&str> = rules
+        .rulebooks
+        .iter()
+        .flat_map(|rulebook| &rulebook.listings)
+        .map(|listing| listing.title.as_str())
+        .collect();
     let consulted = if lists.is_empty() {
         "No list of named substances was consulted".to_owned()
     } else {
-        format!("Only these lists of named substances were consulted: {}", lists.join(", "))
+        format!(
+            "Only these lists of named substances were consulted: {}",
+            lists.join(", ")
+        )
     };
     format!(
         "{consulted}. Candidate and authorisation lists, annexes of treaties, harmonised classifications and national inventories have to be looked up separately."
@@ -100,7 +135,10 @@ fn sheet_rows(sheet: &SheetFacts) -> Vec<Vec<Entry>> {
         let unit = match column.unit {
             Some(unit) => format!("; unit of the header: {}", unit.symbol()),
             None => column.field.default_unit().map_or(String::new(), |unit| {
-                format!("; no unit in the header: {} where the cell names none", unit_word(unit.symbol()))
+                format!(
+                    "; no unit in the header: {} where the cell names none",
+                    unit_word(unit.symbol())
+                )
             }),
         };
         rows.push(pair(
@@ -109,9 +147,17 @@ fn sheet_rows(sheet: &SheetFacts) -> Vec<Vec<Entry>> {
         ));
     }
     rows.extend(recognised.unknown.iter().map(|(index, header)| {
-        pair(&format!("{} {header}", column_letters(*index)), "not recognised; carried along only".to_owned())
+        pair(
+            &format!("{} {header}", column_letters(*index)),
+            "not recognised; carried along only".to_owned(),
+        )
     }));
-    rows.extend(recognised.remarks.iter().map(|remark| pair("Remark", remark.clone())));
+    rows.extend(
+        recognised
+            .remarks
+            .iter()
+            .map(|remark| pair("Remark", remark.clone())),
+    );
     rows
 }
 
@@ -120,11 +166,17 @@ fn unit_word(symbol: &str) -> &str {
 }
 
 fn fault_rows(facts: &RunFacts) -> Vec<Vec<Entry>> {
-    let mut rows = vec![title(&format!("Cells that could not be read: {}", facts.fault_total))];
+    let mut rows = vec![title(&format!(
+        "Cells that could not be read: {}",
+        facts.fault_total
+    ))];
     rows.extend(facts.faults.iter().map(|fault| pair("", fault.clone())));
     if facts.fault_total > facts.faults.len() {
         let rest = facts.fault_total - facts.faults.len();
-        rows.push(pair("", format!("and {rest} more; each stands in the Cautions cell of its row")));
+        rows.push(pair(
+            "",
+            format!("and {rest} more; each stands in the Cautions cell of its row"),
+        ));
     }
     rows
 }

@@ -311,6 +311,8 @@ pub struct RulebookSummary {
     pub edition: Date,
     /// Never loaded by `all`, only when named.
     pub by_name_only: bool,
+    /// How many criteria it has.
+    pub criteria: usize,
     /// How many limits were read in the text or a reproduction of it.
     pub seen: usize,
     /// How many were read in a text that quotes it.
@@ -329,6 +331,7 @@ impl RulebookSummary {
             title: rulebook.title.clone(),
             edition: rulebook.edition,
             by_name_only: rulebook.by_name_only,
+            criteria: rulebook.criteria.len(),
             seen: limits(Checked::Seen),
             second_hand: limits(Checked::SecondHand),
             memory: limits(Checked::Memory),

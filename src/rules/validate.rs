@@ -57,6 +57,7 @@ fn read_head(head: &Section<'_>, caution_ids: &[&str]) -> Option<Rulebook> {
         "half-life-at",
         "half-life-activation-energy",
         "half-life-unstated-temperature",
+        "bcf-at-lipid",
         "by-name-only",
         "note",
     ]);
@@ -80,7 +81,8 @@ fn read_head(head: &Section<'_>, caution_ids: &[&str]) -> Option<Rulebook> {
     let (title, source) = (head.text("title"), head.text("source"));
     let (edition, strongest) = (head.date("edition"), head.word("strongest", &strongest));
     let out_of_scope = head.words("out-of-scope", &scope).unwrap_or_default();
-    let mixture_limit = read_mixture_limit(head);
+    let mixture_limit = read_share(head, "mixture-limit");
+    let bcf_at_lipid = read_share(head, "bcf-at-lipid");
     let half_life_at = read_half_life_reference(head);
     let note = head.text("note").map(|note| note.value);
     Some(Rulebook {
@@ -94,6 +96,7 @@ fn read_head(head: &Section<'_>, caution_ids: &[&str]) -> Option<Rulebook> {
         out_of_scope: out_of_scope.into_iter().map(str::to_owned).collect(),
         mixture_limit,
         half_life_at,
+        bcf_at_lipid,
         criteria: Vec::new(),
         designations: Vec::new(),
         listings: Vec::new(),
@@ -113,8 +116,9 @@ pub(crate) fn read_id(section: &Section<'_>) -> Option<String> {
     Some(id.value)
 }
 
-fn read_mixture_limit(head: &Section<'_>) -> Option<f64> {
-    let written = head.scalar("mixture-limit")?;
+/// A share in %, above 0 and up to 100.
+fn read_share(head: &Section<'_>, key: &str) -> Option<f64> {
+    let written = head.scalar(key)?;
     let content = quantity(head, &written, CONTENT)?;
     if !(content > 0.0 && content <= 100.0) {
         let found = written_text(&written.value);

@@ -5,17 +5,15 @@ use std::collections::BTreeMap;
 use crate::fault::{CellFault, FileFault, Refusal};
 use crate::judge::Verdict;
 use crate::report::{
-    Entry, EntryContent, REASONING_COLUMNS, ReasoningMode, RunFacts, SheetFacts, Table, record_head, rulebooks_table,
-    run_record_table,
+    Entry, EntryContent, REASONING_COLUMNS, ReasoningMode, RunFacts, SheetFacts, Table, record_head,
+    rulebooks_table, run_record_table,
 };
 use crate::rules::RuleSet;
 use crate::run::judged_row::{Added, JudgedRow};
 use crate::run::plan::{Plan, SheetPlan};
 use crate::run::{ScreenSettings, Summary};
 use crate::substance::UnstatedBasis;
-use crate::workbook::{
-    AnnotatedWorkbook, Inventory, Look, Overwrite, SheetId, Value, Visibility, fingerprint_of_text,
-};
+use crate::workbook::{AnnotatedWorkbook, Inventory, Look, SheetId, Value, Visibility, fingerprint_of_text};
 
 /// Faults that are kept with their wording; the others are counted.
 const FAULTS_KEPT: usize = 1_000;
@@ -50,18 +48,19 @@ impl Output {
         plan: &Plan,
         rules: &RuleSet,
     ) -> Result<Self, Refusal> {
-        FileFault::refuse_same_file(&settings.inventory, &settings.output)?;
         let appearances = inventory.appearances();
-        let mut workbook =
-            AnnotatedWorkbook::create(&settings.output, settings.overwrite, settings.date, &appearances)?;
+        let mut workbook = AnnotatedWorkbook::create(
+            &settings.output,
+            &[&settings.inventory],
+            settings.overwrite,
+            settings.date,
+            appearances,
+        )?;
         let mut sheets = Vec::new();
         for (sheet, survey) in plan.sheets.iter().zip(inventory.sheets()) {
             let id = workbook.add_sheet(&sheet.name, survey.visibility)?;
-            for width in &survey.column_widths {
-                workbook.set_column_width(id, width.first, width.last, width.width)?;
-                if width.hidden {
-                    workbook.hide_columns(id, width.first, width.last)?;
-                }
+            for layout in &survey.column_widths {
+                workbook.set_columns(id, *layout)?;
             }
             lay_out_added(&mut workbook, id, sheet)?;
             sheets.push(id);
@@ -95,13 +94,18 @@ impl Output {
     }
 
     pub(crate) fn write_row(&mut self, sheet: &SheetPlan, row: JudgedRow) -> Result<(), Refusal> {
-        let Some(id) = self.sheets.get(sheet.index).copied() else { return Ok(()) };
+        let Some(id) = self.sheets.get(sheet.index).copied() else {
+            return Ok(());
+        };
         let index = row.row.index;
         self.workbook.write_row(id, &row.row)?;
-        let Some(screened) = &sheet.screened else { return Ok(()) };
+        let Some(screened) = &sheet.screened else {
+            return Ok(());
+        };
         if index == screened.recognised.header_row {
             for (column, header) in (screened.first_added..).zip(&screened.added.headers) {
-                self.workbook.write(id, index, column, &Value::Text(header), Look::Header)?;
+                self.workbook
+                    .write(id, index, column, &Value::Text(header), Look::Header)?;
             }
         }
         if let Some(added) = row.added {
@@ -140,7 +144,9 @@ impl Output {
     }
 
     fn write_reasoning(&mut self, line: &[Entry]) -> Result<(), Refusal> {
-        let Some(writer) = &mut self.reasoning else { return Ok(()) };
+        let Some(writer) = &mut self.reasoning else {
+            return Ok(());
+        };
         if writer.next_row > LINES_A_SHEET {
             *writer = new_reasoning_sheet(&mut self.workbook, writer.part + 1)?;
         }
@@ -150,8 +156,15 @@ impl Output {
     fn write_record(&mut self, line: &[Entry]) -> Result<(), Refusal> {
         if self.record.next_row > LINES_A_SHEET {
             let part = self.record.part + 1;
-            let sheet = self.workbook.add_sheet(&format!("{} {part}", self.record.name), Visibility::VeryHidden)?;
-            self.record = SheetWriter { name: self.record.name, sheet, next_row: 0, part };
+            let sheet = self
+                .workbook
+                .add_sheet(&format!("{} {part}", self.record.name), Visibility::VeryHidden)?;
+            self.record = SheetWriter {
+                name: self.record.name,
+                sheet,
+                next_row: 0,
+                part,
+            };
         }
         write_line(&mut self.workbook, &mut self.record, line)
     }
@@ -168,7 +181,11 @@ impl Output {
         let facts = self.facts(settings, inventory, plan, rules);
         write_table(&mut self.workbook, &run_record_table(&facts, rules))?;
         self.workbook.finish()?;
-        let copied = plan.sheets.iter().filter(|sheet| sheet.screened.is_none()).count();
+        let copied = plan
+            .sheets
+            .iter()
+            .filter(|sheet| sheet.screened.is_none())
+            .count();
         Ok(Summary {
             output: settings.output.clone(),
             screened: self.screened.iter().sum(),
@@ -187,12 +204,21 @@ impl Output {
         })
     }
 
-    fn facts(&self, settings: &ScreenSettings, inventory: &Inventory, plan: &Plan, rules: &RuleSet) -> RunFacts {
-        let file_name = settings.inventory.file_name().map(|name| name.to_string_lossy().into_owned());
+    fn facts(
+        &self,
+        settings: &ScreenSettings,
+        inventory: &Inventory,
+        plan: &Plan,
+        rules: &RuleSet,
+    ) -> RunFacts {
+        let file_name = settings
+            .inventory
+            .file_name()
+            .map(|name| name.to_string_lossy().into_owned());
         RunFacts {
             date: settings.date,
             inventory: file_name.unwrap_or_default(),
-            fingerprint: inventory.fingerprint(),
+            fingerprint: inventory.fingerprint().to_owned(),
             options: options(settings),
             rule_fingerprints: rules
                 .texts
@@ -206,11 +232,14 @@ impl Output {
                 .map(|(sheet, screened)| SheetFacts {
                     name: sheet.name.to_string(),
                     screened: *screened,
-                    recognised: sheet.screened.as_ref().map(|screened| screened.recognised.clone()),
+                    recognised: sheet
+                        .screened
+                        .as_ref()
+                        .map(|screened| screened.recognised.clone()),
                     copied_because: sheet.copied_because.clone(),
                 })
                 .collect(),
-            not_carried: inventory.not_carried(),
+            not_carried: inventory.not_carried().to_vec(),
             reasoning: match plan.reasoning {
                 ReasoningMode::All => "a line for every row, rulebook and criterion".to_owned(),
                 ReasoningMode::Concern => {
@@ -231,7 +260,10 @@ fn options(settings: &ScreenSettings) -> Vec<(&'static str, String)> {
         UnstatedBasis::Unstated => "unstated (a rank of its own)",
         UnstatedBasis::Calculated => "calculated",
     };
-    options.push(("Values without a word on how they were obtained count as", unstated.to_owned()));
+    options.push((
+        "Values without a word on how they were obtained count as",
+        unstated.to_owned(),
+    ));
     if !settings.sheets.is_empty() {
         options.push(("Sheets named", settings.sheets.join(", ")));
     }
@@ -247,7 +279,11 @@ fn column_remarks(plan: &Plan) -> Vec<(String, String)> {
         .iter()
         .filter_map(|sheet| Some((sheet, sheet.screened.as_ref()?)))
         .flat_map(|(sheet, screened)| {
-            screened.recognised.remarks.iter().map(|remark| (sheet.name.to_string(), remark.clone()))
+            screened
+                .recognised
+                .remarks
+                .iter()
+                .map(|remark| (sheet.name.to_string(), remark.clone()))
         })
         .collect()
 }
@@ -275,11 +311,18 @@ fn unreached(rules: &RuleSet, reached: &[bool]) -> Vec<String> {
 fn span(sheet: &SheetPlan) -> Option<(String, u32, u16, Vec<String>)> {
     let screened = sheet.screened.as_ref()?;
     let headers = screened.added.headers.clone();
-    Some((sheet.name.to_string(), screened.recognised.header_row, screened.first_added, headers))
+    Some((
+        sheet.name.to_string(),
+        screened.recognised.header_row,
+        screened.first_added,
+        headers,
+    ))
 }
 
 fn lay_out_added(workbook: &mut AnnotatedWorkbook, id: SheetId, sheet: &SheetPlan) -> Result<(), FileFault> {
-    let Some(screened) = &sheet.screened else { return Ok(()) };
+    let Some(screened) = &sheet.screened else {
+        return Ok(());
+    };
     for (column, width) in (screened.first_added..).zip(&screened.added.widths) {
         workbook.set_column_width(id, column, column, *width)?;
     }
@@ -289,22 +332,35 @@ fn lay_out_added(workbook: &mut AnnotatedWorkbook, id: SheetId, sheet: &SheetPla
             workbook.group_columns(id, first, last)?;
         }
     }
-    workbook.freeze_rows(id, screened.recognised.header_row + 1)
+    workbook.freeze(id, screened.recognised.header_row + 1, 0)
 }
 
 fn new_reasoning_sheet(workbook: &mut AnnotatedWorkbook, part: u32) -> Result<SheetWriter, FileFault> {
     let name = "Reasoning";
-    let title = if part == 1 { name.to_owned() } else { format!("{name} {part}") };
+    let title = if part == 1 {
+        name.to_owned()
+    } else {
+        format!("{name} {part}")
+    };
     let sheet = workbook.add_sheet(&title, Visibility::Visible)?;
     for (column, (header, width)) in (0u16..).zip(REASONING_COLUMNS) {
         workbook.set_column_width(sheet, column, column, width)?;
         workbook.write(sheet, 0, column, &Value::Text(header), Look::Header)?;
     }
-    workbook.freeze_rows(sheet, 1)?;
-    Ok(SheetWriter { name, sheet, next_row: 1, part })
+    workbook.freeze(sheet, 1, 0)?;
+    Ok(SheetWriter {
+        name,
+        sheet,
+        next_row: 1,
+        part,
+    })
 }
 
-fn write_line(workbook: &mut AnnotatedWorkbook, writer: &mut SheetWriter, line: &[Entry]) -> Result<(), Refusal> {
+fn write_line(
+    workbook: &mut AnnotatedWorkbook,
+    writer: &mut SheetWriter,
+    line: &[Entry],
+) -> Result<(), Refusal> {
     for (column, entry) in (0u16..).zip(line) {
         write_entry(workbook, writer.sheet, writer.next_row, column, entry)?;
     }
@@ -318,7 +374,7 @@ fn write_table(workbook: &mut AnnotatedWorkbook, table: &Table) -> Result<(), Fi
         workbook.set_column_width(sheet, column, column, *width)?;
     }
     if table.frozen_rows > 0 {
-        workbook.freeze_rows(sheet, table.frozen_rows)?;
+        workbook.freeze(sheet, table.frozen_rows, 0)?;
     }
     for (row, entries) in (0u32..).zip(&table.rows) {
         for (column, entry) in (0u16..).zip(entries) {

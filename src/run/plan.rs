@@ -65,26 +65,44 @@ pub fn recognise_columns(
     inventory: &Path,
     overrides: &[ColumnOverride],
 ) -> Result<Vec<RecognisedSheet>, Refusal> {
-    let inventory = open_inventory(inventory)?;
+    let mut inventory = open_inventory(inventory)?;
     let words = ColumnWords::built_in().map_err(Refusal::Usage)?;
     let mut sheets = Vec::new();
-    for (index, sheet) in inventory.sheets().iter().enumerate() {
+    let names: Vec<Arc<str>> = inventory
+        .sheets()
+        .iter()
+        .map(|sheet| sheet.name.clone())
+        .collect();
+    for (index, name) in names.iter().enumerate() {
         let first_rows = inventory.first_rows(index, ROWS_LOOKED_AT)?;
-        let recognised = recognise(&sheet.name, &first_rows, &words, overrides);
-        sheets.push(RecognisedSheet { name: sheet.name.to_string(), recognised });
+        let recognised = recognise(name, &first_rows, &words, overrides);
+        sheets.push(RecognisedSheet {
+            name: name.to_string(),
+            recognised,
+        });
     }
     Ok(sheets)
 }
 
 impl Plan {
-    pub(crate) fn new(inventory: &Inventory, rules: &RuleSet, settings: &ScreenSettings) -> Result<Self, Refusal> {
+    pub(crate) fn new(
+        inventory: &mut Inventory,
+        rules: &RuleSet,
+        settings: &ScreenSettings,
+    ) -> Result<Self, Refusal> {
         refuse_unknown_sheets(inventory, settings)?;
         let words = ColumnWords::built_in().map_err(Refusal::Usage)?;
         let mut sheets = Vec::new();
         let mut lines = 0;
-        let lines_a_row: usize = rules.rulebooks.iter().map(|rulebook| rulebook.criteria.len()).sum();
-        for (index, survey) in inventory.sheets().iter().enumerate() {
-            let wanted = settings.sheets.is_empty() || settings.sheets.iter().any(|name| **name == *survey.name);
+        let lines_a_row: usize = rules
+            .rulebooks
+            .iter()
+            .map(|rulebook| rulebook.criteria.len())
+            .sum();
+        let surveys = inventory.sheets().to_vec();
+        for (index, survey) in surveys.iter().enumerate() {
+            let wanted =
+                settings.sheets.is_empty() || settings.sheets.iter().any(|name| **name == *survey.name);
             let mut sheet = SheetPlan {
                 index,
                 name: survey.name.clone(),
@@ -100,8 +118,15 @@ impl Plan {
                         let first_added = survey.used_columns;
                         refuse_overwide(&survey.name, first_added, added.headers.len())?;
                         let reader = RowReader::new(survey.name.clone(), &recognised, settings.unstated);
-                        sheet.screened = Some(Screened { recognised, reader, added, first_added });
-                        lines += usize::try_from(survey.last_row).unwrap_or(usize::MAX).saturating_mul(lines_a_row);
+                        sheet.screened = Some(Screened {
+                            recognised,
+                            reader,
+                            added,
+                            first_added,
+                        });
+                        lines += usize::try_from(survey.last_row)
+                            .unwrap_or(usize::MAX)
+                            .saturating_mul(lines_a_row);
                     }
                     None => sheet.copied_because = NO_HEADER.to_owned(),
                 }
@@ -124,8 +149,7 @@ impl Plan {
     }
 }
 
-const NO_HEADER: &str =
-    "no header was recognised: a column for a CAS number, EC number or structure, or a name beside another known column";
+const NO_HEADER: &str = "no header was recognised: a column for a CAS number, EC number or structure, or a name beside another known column";
 
 fn headers(first_rows: &[Row], header_row: u32) -> Vec<String> {
     first_rows
@@ -165,5 +189,10 @@ fn refuse_overwide(sheet: &str, first_added: u16, added: usize) -> Result<(), Re
     if usize::from(first_added) + added <= COLUMNS_A_SHEET {
         return Ok(());
     }
-    Err(FileFault::NoRoom { sheet: sheet.to_owned(), used: usize::from(first_added), needed: added }.into())
+    Err(FileFault::NoRoom {
+        sheet: sheet.to_owned(),
+        used: usize::from(first_added),
+        needed: added,
+    }
+    .into())
 }

@@ -199,6 +199,11 @@ fn read_appearances(
     .map_err(|error| package.damaged(error.to_string()))
 }
 
+/// The SHA-256 of a text, in hexadecimal.
+pub fn fingerprint_of_text(text: &str) -> String {
+    format!("{:x}", Sha256::digest(text.as_bytes()))
+}
+
 fn fingerprint_of(path: &Path) -> Result<String, FileFault> {
     let unreadable = |error: std::io::Error| FileFault::Unreadable {
         path: path.display().to_string(),

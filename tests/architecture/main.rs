@@ -15,7 +15,13 @@ fn sources() -> Vec<(String, PathBuf, String)> {
                 folders.push(path);
             } else if path.extension().is_some_and(|extension| extension == "rs") {
                 let below = path.strip_prefix(&root).unwrap();
-                let first = below.components().next().unwrap().as_os_str().to_string_lossy().into_owned();
+                let first = below
+                    .components()
+                    .next()
+                    .unwrap()
+                    .as_os_str()
+                    .to_string_lossy()
+                    .into_owned();
                 let room = first.strip_suffix(".rs").unwrap_or(&first).to_owned();
                 let text = fs::read_to_string(&path).unwrap();
                 found.push((room, path, text));
@@ -28,18 +34,35 @@ fn sources() -> Vec<(String, PathBuf, String)> {
 
 /// The lines that are code, so that prose may name anything.
 fn code(text: &str) -> impl Iterator<Item = &str> {
-    text.lines().map(str::trim_start).filter(|line| !line.starts_with("//"))
+    text.lines()
+        .map(str::trim_start)
+        .filter(|line| !line.starts_with("//"))
 }
 
 #[test]
 fn imports_point_one_way() {
-    let chain = ["quantity", "substance", "evidence", "judge", "reasoning", "report", "run"];
+    let chain = [
+        "quantity",
+        "substance",
+        "evidence",
+        "judge",
+        "reasoning",
+        "report",
+        "run",
+    ];
     for (room, path, text) in sources() {
-        let Some(place) = chain.iter().position(|name| *name == room) else { continue };
+        let Some(place) = chain.iter().position(|name| *name == room) else {
+            continue;
+        };
         for later in &chain[place + 1..] {
             let import = format!("crate::{later}");
             let offending = code(&text).find(|line| line.contains(&import));
-            assert_eq!(offending, None, "{} names `{later}`, which comes after `{room}`", path.display());
+            assert_eq!(
+                offending,
+                None,
+                "{} names `{later}`, which comes after `{room}`",
+                path.display()
+            );
         }
     }
 }
@@ -69,7 +92,11 @@ fn each_outside_crate_is_named_in_its_own_rooms() {
         for (room, file, text) in sources() {
             let names_it = code(&text).any(|line| line.starts_with(&import) || names_crate(line, &path));
             named |= names_it;
-            assert!(!names_it || rooms.contains(&room.as_str()), "{} names `{name}`", file.display());
+            assert!(
+                !names_it || rooms.contains(&room.as_str()),
+                "{} names `{name}`",
+                file.display()
+            );
         }
         assert!(named, "`{name}` is named somewhere, or should leave Cargo.toml");
     }
@@ -87,6 +114,10 @@ fn names_crate(line: &str, path: &str) -> bool {
 fn only_the_console_prints() {
     for (_, path, text) in sources() {
         let prints = code(&text).any(|line| line.contains("stdout()") || line.contains("stderr()"));
-        assert!(!prints || path.ends_with("bin/kowledger/console.rs"), "{} prints", path.display());
+        assert!(
+            !prints || path.ends_with("bin/kowledger/console.rs"),
+            "{} prints",
+            path.display()
+        );
     }
 }

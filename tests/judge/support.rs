@@ -9,7 +9,7 @@ use kowledger::reasoning::{Told, criterion_line};
 use kowledger::rules::{RuleSet, load_rule_set};
 use kowledger::substance::{
     Basis, CasNumber, Cited, Conditions, DegradationKind, DegradationTest, HazardStatements, Identity,
-    Property, Reading, ReadyBiodegradability, RowType, Substance, SubstanceType,
+    Property, Reading, ReadyBiodegradability, Substance, SubstanceType,
 };
 use kowledger::workbook::CellRef;
 
@@ -151,12 +151,6 @@ impl Row {
     /// Another way of being identified.
     pub fn identified_as(mut self, identity: Identity) -> Self {
         self.0.identity = identity;
-        self
-    }
-
-    /// A mixture, article or substance row.
-    pub fn of_row_type(mut self, row_type: RowType) -> Self {
-        self.0.row_type = row_type;
         self
     }
 

@@ -95,8 +95,12 @@ fn a_polymer_clears_nothing_whatever_its_data_say() {
         .ready(DegradationTest::Ready)
         .measured(Property::Bcf, Value::Point(3.0))
         .measured(Property::LogKow, Value::Point(-1.0))
+        .judged();
+    let sorbing = row()
+        .of_type(SubstanceType::Polymer)
         .measured(Property::Koc, Value::Point(1e6))
         .judged();
+    assert_eq!(sorbing.verdictUnresolved);
     for (book, criterion) in [
         ("REACH", "P"),
         ("REACH", "B"),

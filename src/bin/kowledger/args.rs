@@ -34,7 +34,8 @@ pub(crate) enum Command {
     Rules(RulesCommand),
 }
 
-const EXIT_STATUSES: &str = "Exit status: 0 done; 1 done, but some cells could not be read; 2 nothing written.";
+const EXIT_STATUSES: &str =
+    "Exit status: 0 done; 1 done, but some cells could not be read; 2 nothing written.";
 
 #[derive(Debug, clap::Args)]
 pub(crate) struct ScreenArguments {
@@ -114,17 +115,25 @@ impl ScreenArguments {
         let date = match self.date.as_deref() {
             None => Date::today(),
             Some(text) => Date::parse(text).ok_or_else(|| {
-                Refusal::Usage(format!("--date {text}: not a day of the calendar; write, for example, 2026-01-31"))
+                Refusal::Usage(format!(
+                    "--date {text}: not a day of the calendar; write, for example, 2026-01-31"
+                ))
             })?,
         };
         if self.threads == Some(0) {
-            return Err(Refusal::Usage("--threads 0: at least one thread is needed; write 1 or more".to_owned()));
+            return Err(Refusal::Usage(
+                "--threads 0: at least one thread is needed; write 1 or more".to_owned(),
+            ));
         }
         let output = self.output.unwrap_or_else(|| beside(&self.inventory));
         Ok(ScreenSettings {
             output,
             inventory: self.inventory,
-            overwrite: if self.force { Overwrite::Replace } else { Overwrite::Refuse },
+            overwrite: if self.force {
+                Overwrite::Replace
+            } else {
+                Overwrite::Refuse
+            },
             rulebooks: self.rulebook,
             sheets: self.sheet,
             columns: overrides(&self.column)?,
@@ -153,11 +162,16 @@ impl ColumnsArguments {
 }
 
 fn overrides(texts: &[String]) -> Result<Vec<ColumnOverride>, Refusal> {
-    texts.iter().map(|text| ColumnOverride::parse(text).map_err(Refusal::Usage)).collect()
+    texts
+        .iter()
+        .map(|text| ColumnOverride::parse(text).map_err(Refusal::Usage))
+        .collect()
 }
 
 /// `<name>-screened.xlsx` in the inventory's folder.
 fn beside(inventory: &std::path::Path) -> PathBuf {
-    let stem = inventory.file_stem().map_or_else(|| "inventory".into(), |stem| stem.to_string_lossy().into_owned());
+    let stem = inventory
+        .file_stem()
+        .map_or_else(|| "inventory".into(), |stem| stem.to_string_lossy().into_owned());
     inventory.with_file_name(format!("{stem}-screened.xlsx"))
 }

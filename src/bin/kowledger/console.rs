@@ -36,16 +36,28 @@ impl Console {
         lines.extend(summary.headlines.iter().map(|(short, counts, listed)| {
             let mut parts: Vec<String> = Verdict::ALL
                 .iter()
-                .filter_map(|verdict| counts.get(verdict).map(|number| format!("{number} {}", verdict.words())))
+                .filter_map(|verdict| {
+                    counts
+                        .get(verdict)
+                        .map(|number| format!("{number} {}", verdict.words()))
+                })
                 .collect();
             if *listed > 0 {
                 parts.insert(0, format!("{listed} listed"));
             }
             format!("  {short}: {}", parts.join(", "))
         }));
-        lines.extend(summary.column_remarks.iter().map(|(sheet, remark)| format!("Sheet {sheet}: {remark}")));
+        lines.extend(
+            summary
+                .column_remarks
+                .iter()
+                .map(|(sheet, remark)| format!("Sheet {sheet}: {remark}")),
+        );
         if !summary.unreached.is_empty() {
-            lines.push(format!("No row had a value for: {}.", summary.unreached.join("; ")));
+            lines.push(format!(
+                "No row had a value for: {}.",
+                summary.unreached.join("; ")
+            ));
         }
         if !summary.not_carried.is_empty() {
             lines.push(format!("Not carried over: {}.", summary.not_carried.join("; ")));
@@ -60,7 +72,12 @@ impl Console {
 }
 
 fn show_faults(summary: &Summary) {
-    let mut lines: Vec<String> = summary.faults.iter().take(FAULTS_SHOWN).map(ToString::to_string).collect();
+    let mut lines: Vec<String> = summary
+        .faults
+        .iter()
+        .take(FAULTS_SHOWN)
+        .map(ToString::to_string)
+        .collect();
     if summary.fault_total > FAULTS_SHOWN {
         lines.push(format!(
             "... and {} more; each stands in the Cautions cell of its row.",
@@ -86,10 +103,17 @@ pub(crate) fn columns(sheets: &[RecognisedSheet]) {
     let mut lines = Vec::new();
     for sheet in sheets {
         let Some(recognised) = &sheet.recognised else {
-            lines.push(format!("{}: no header recognised; the sheet would be copied.", sheet.name));
+            lines.push(format!(
+                "{}: no header recognised; the sheet would be copied.",
+                sheet.name
+            ));
             continue;
         };
-        lines.push(format!("{}: header in row {}.", sheet.name, recognised.header_row + 1));
+        lines.push(format!(
+            "{}: header in row {}.",
+            sheet.name,
+            recognised.header_row + 1
+        ));
         lines.extend(recognised.columns.iter().map(|column| {
             format!(
                 "  {:<4}{:<34}{:<28}{}",
@@ -100,7 +124,11 @@ pub(crate) fn columns(sheets: &[RecognisedSheet]) {
             )
         }));
         lines.extend(recognised.unknown.iter().map(|(index, header)| {
-            format!("  {:<4}{:<34}not recognised", column_letters(*index), header.replace('\n', " "))
+            format!(
+                "  {:<4}{:<34}not recognised",
+                column_letters(*index),
+                header.replace('\n', " ")
+            )
         }));
         lines.extend(recognised.remarks.iter().map(|remark| format!("  {remark}")));
     }
@@ -116,7 +144,10 @@ pub(crate) fn rulebooks(summaries: &[RulebookSummary]) {
 /// Rule files that are in order.
 pub(crate) fn checked(summaries: &[RulebookSummary]) {
     let mut lines: Vec<String> = summaries.iter().map(rulebook_line).collect();
-    lines.push(format!("{} in order.", count(summaries.len(), "rulebook is", "rulebooks are")));
+    lines.push(format!(
+        "{} in order.",
+        count(summaries.len(), "rulebook is", "rulebooks are")
+    ));
     print(&lines);
 }
 

@@ -179,6 +179,10 @@ pub(crate) fn quantity(section: &Section<'_>, written: &Located<Scalar>, measure
             QuantityFault::NoValue
             | QuantityFault::NoNumber
             | QuantityFault::NeedsMolarMass
+            | QuantityFault::WordOnly
+            | QuantityFault::BadNumber
+            | QuantityFault::SeveralValues
+            | QuantityFault::TooLong
             | QuantityFault::BadRange => RuleMistake::NotAQuantity {
                 found: found.clone(),
                 property: title,
