@@ -248,10 +248,8 @@ fn stops(context: Context, test: &Test, used: &[Used]) -> Vec<Stop> {
         let Some(evidence) = evidence_of(context, value) else {
             continue;
         };
-        if let Some(caution) = context.blocking(Subject::Property(evidence.property), derived_from(evidence))
-        {
-            stops.push(Stop::Caution(caution));
-        }
+        let blocking = context.blocking(Subject::Property(evidence.property), derived_from(evidence));
+        stops.extend(blocking.map(Stop::Caution));
         let modelled = matches!(evidence.basis, Basis::Calculated | Basis::Estimated);
         if modelled && value.closeness == Closeness::CloseCall {
             stops.push(Stop::WithinOneSd);

@@ -65,7 +65,7 @@ fn the_value_of_most_concern_among_equals_decides_and_a_better_basis_goes_before
     // For mobility the lower value is of more concern.
     let two_koc = row()
         .measured(Property::Koc, Value::Point(5_000.0))
-        .measured(Property::Koc, Value::Point(50.0))
+        .measured(Property::Koc, Value::Point(5.0))
         .judged();
     assert_eq!(two_koc.cell("CLP", "vM"), "fulfilled");
 }
