@@ -3,24 +3,26 @@
 //! `file` reads TOML, `validate` turns it into these types and collects every fault; whatever stands here has been
 //! checked and can be applied without further questions. It decides nothing about substances.
 
+mod built_in;
 mod caution;
 pub(crate) mod file;
+mod folder;
 mod formula;
 mod load;
 mod rulebook;
+mod summary;
 pub(crate) mod validate;
 
+pub use built_in::{built_in_rule_files, built_in_rulebooks};
 pub use caution::{Blocks, Caution, Triggers};
 pub use file::RuleSource;
-pub use load::{
-    RuleSources, RulebookSummary, built_in_rule_files, built_in_rulebooks, check_paths, load_rule_set,
-    summaries,
-};
+pub use load::{RuleSources, load_rule_set};
 pub use rulebook::{
     Band, Checked, ClearsOn, Combine, Criterion, Decides, Designation, DesignationPart, Guards,
     HalfLifeReference, Limit, Listing, ListingEntry, OnlyIf, Rulebook, Step, Subject, Test, Weight,
     WhenMissing,
 };
+pub use summary::{RulebookSummary, check_paths, summaries};
 
 use crate::relations::Relations;
 

@@ -48,7 +48,7 @@ impl RuleFault {
     }
 
     /// What to write instead.
-    pub fn help(&self) -> Option<String> {
+    pub fn help(&self) -> String {
         self.mistake.help()
     }
 
@@ -67,7 +67,7 @@ impl RuleFault {
         };
         let (message, label, help) = (self.message(), self.mistake.label(), self.help());
         let title = Level::ERROR.primary_title(&message);
-        let mut group = match (self.text.as_deref(), self.span.clone()) {
+        let group = match (self.text.as_deref(), self.span.clone()) {
             (Some(text), Some(span)) => {
                 let annotation = AnnotationKind::Primary.span(span).label(label.as_str());
                 title.element(
@@ -78,14 +78,21 @@ impl RuleFault {
             }
             _ => Group::with_title(title).element(Origin::path(self.file.as_str())),
         };
-        if let Some(help) = &help {
-            group = group.element(Level::HELP.message(help.as_str()));
-        }
-        renderer.render(&[group])
+        renderer.render(&[group.element(Level::HELP.message(help.as_str()))])
     }
 }
 
 impl RuleFaults {
+    /// One fault of a file as a whole.
+    pub fn of_file(file: &str, mistake: RuleMistake) -> Self {
+        Self(vec![RuleFault {
+            file: file.to_owned(),
+            text: None,
+            span: None,
+            mistake,
+        }])
+    }
+
     /// All faults, one under the other, and how many there are.
     pub fn draw(&self, drawing: Drawing) -> String {
         let mut drawn: Vec<String> = self.0.iter().map(|fault| fault.draw(drawing)).collect();

@@ -3,7 +3,7 @@
 use crate::judge::{CriterionJudgement, Stop, StoppedClear};
 use crate::quantity::format_number;
 use crate::reasoning::Told;
-use crate::reasoning::value::{listed, short_citation, test_brief, titles};
+use crate::reasoning::value::{listed, short_citation, telling_tests, test_brief, titles};
 use crate::rules::Criterion;
 
 /// Why a clear by a step did not stand.
@@ -64,7 +64,7 @@ fn citation(told: Told, relation: usize) -> String {
         .relations
         .get(relation)
         .map_or("", |line| line.citation.as_str());
-    short_citation(citation).to_owned()
+    short_citation(citation)
 }
 
 fn guard_brief(told: Told, criterion: &Criterion, judged: &CriterionJudgement, step: usize) -> String {

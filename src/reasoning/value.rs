@@ -1,10 +1,10 @@
 //! Values and limits in words.
 
 use crate::evidence::{Evidence, Origin};
-use crate::judge::{Adjustment, Answer, TestJudgement, TestOutcome, Used};
+use crate::judge::{Adjustment, Answer, StepJudgement, TestJudgement, TestOutcome, Used};
 use crate::quantity::{Comparison, format_interval, format_number};
 use crate::reasoning::Told;
-use crate::rules::{Limit, Subject, Test};
+use crate::rules::{Limit, Step, Subject, Test};
 use crate::substance::{Basis, DegradationTest};
 
 /// The evidence behind a value that was held against a limit.
@@ -47,14 +47,32 @@ pub(crate) fn origin_phrase(told: Told, evidence: &Evidence) -> String {
     }
 }
 
-/// Author and year, without the journal.
-pub(crate) fn short_citation(citation: &str) -> &str {
-    citation
-        .split_once(", J")
-        .map_or(citation, |(short, _)| short)
-        .split(';')
-        .next()
-        .unwrap_or(citation)
+/// Author and year, as a sentence names a publication: `Mackay 1982`, `Veith & Kosian 1983`, `Veith et al. 1979`.
+pub(crate) fn short_citation(citation: &str) -> String {
+    let Some((authors, rest)) = citation.split_once(" (") else { return citation.to_owned() };
+    let year = rest.split(')').next().unwrap_or_default();
+    let surname = |author: &str| {
+        let words: Vec<&str> = author.split(' ').collect();
+        match words.as_slice() {
+            // A surname and initials; an organisation has a whole name.
+            [surname, initials] if is_initials(initials) && !is_initials(surname) => (*surname).to_owned(),
+            _ => author.to_owned(),
+        }
+    };
+    let names: Vec<&str> = authors.split(", ").collect();
+    match names.as_slice() {
+        [one] => match one.split_once(" and others") {
+            Some((first, _)) => format!("{} et al. {year}", surname(first)),
+            None => format!("{} {year}", surname(one)),
+        },
+        [one, other] => format!("{} & {} {year}", surname(one), surname(other)),
+        [first, ..] => format!("{} et al. {year}", surname(first)),
+        [] => citation.to_owned(),
+    }
+}
+
+fn is_initials(word: &str) -> bool {
+    word.len() <= 4 && word.chars().all(|character| character.is_ascii_uppercase())
 }
 
 /// `BCF 2300 L/kg (measured, Substances!K12)`, with the value as compared where it was adjusted.
@@ -132,15 +150,26 @@ pub(crate) fn test_clause(told: Told, test: &Test, judged: &TestJudgement) -> St
 
 fn standing(comparison: Comparison, outcome: TestOutcome) -> &'static str {
     match (outcome, comparison) {
-        (TestOutcome::Fired, Comparison::Above) => "is above the limit of",
+        (TestOutcome::Fired, Comparison::Above) | (TestOutcome::Clear, Comparison::AtMost) => "is above the limit of",
         (TestOutcome::Fired, Comparison::AtLeast) => "reaches the limit of",
         (TestOutcome::Fired, Comparison::Below) => "is below the limit of",
-        (TestOutcome::Fired, Comparison::AtMost) => "is not above the limit of",
-        (TestOutcome::Clear, Comparison::Above) => "is not above the limit of",
+        (TestOutcome::Fired, Comparison::AtMost) | (TestOutcome::Clear, Comparison::Above) => {
+            "is not above the limit of"
+        }
         (TestOutcome::Clear, Comparison::AtLeast) => "stays below the limit of",
         (TestOutcome::Clear, Comparison::Below) => "is not below the limit of",
-        (TestOutcome::Clear, Comparison::AtMost) => "is above the limit of",
         (TestOutcome::Undecided | TestOutcome::Missing, _) => "may lie on either side of the limit of",
+    }
+}
+
+fn brief_standing(comparison: Comparison, outcome: TestOutcome) -> &'static str {
+    match (outcome, comparison) {
+        (TestOutcome::Fired, Comparison::Above) | (TestOutcome::Clear, Comparison::AtMost) => "above",
+        (TestOutcome::Fired, Comparison::AtLeast) => "at least",
+        (TestOutcome::Fired, Comparison::Below) | (TestOutcome::Clear, Comparison::AtLeast) => "below",
+        (TestOutcome::Fired, Comparison::AtMost) | (TestOutcome::Clear, Comparison::Above) => "not above",
+        (TestOutcome::Clear, Comparison::Below) => "not below",
+        (TestOutcome::Undecided | TestOutcome::Missing, _) => "on either side of",
     }
 }
 
@@ -199,7 +228,7 @@ fn answer_clause(told: Told, test: &Test, outcome: TestOutcome, answer: &Answer)
     }
 }
 
-/// The same in a few words, for the sentence beside a headline: `BCF 2300 L/kg (measured) > 2000 L/kg`.
+/// The same in a few words, for the sentence beside a headline: `BCF 2300 L/kg (measured), above 2000 L/kg`.
 pub(crate) fn test_brief(told: Told, test: &Test, judged: &TestJudgement) -> String {
     match (&judged.answer, judged.used.first()) {
         (Some(Answer::Ready(index)), _) => {
@@ -222,19 +251,35 @@ pub(crate) fn test_brief(told: Told, test: &Test, judged: &TestJudgement) -> Str
         (None, Some(used)) => {
             let value = format_interval(used.compared, used.property.default_unit());
             let basis = evidence_of(told, used).map_or("", |evidence| basis_phrase(evidence.basis));
-            let sign = match (&test.limit, judged.outcome) {
-                (Limit::Number { comparison, .. }, TestOutcome::Fired) => comparison.sign(),
-                (Limit::Number { comparison, .. }, TestOutcome::Clear) => comparison.opposite_sign(),
-                (_, _) => "straddles",
+            let standing = match &test.limit {
+                Limit::Number { comparison, .. } => brief_standing(*comparison, judged.outcome),
+                Limit::Between { .. } | Limit::AnyOfWords(_) | Limit::Is(_) => "against",
             };
-            format!(
-                "{} {value} ({basis}) {sign} {}",
-                used.property.title(),
-                test.limit_text
-            )
+            format!("{} {value} ({basis}), {standing} {}", used.property.title(), test.limit_text)
         }
         (None, None) => format!("{} missing", test.subject.title()),
     }
+}
+
+/// The tests that make a step's outcome, each value once: a value that stands for two compartments is named with the
+/// higher of its limits, which it meets as well.
+pub(crate) fn telling_tests<'run>(
+    rule: &'run Step,
+    came_out: &'run StepJudgement,
+) -> Vec<(&'run Test, &'run TestJudgement)> {
+    let mut telling: Vec<(&Test, &TestJudgement)> = Vec::new();
+    let tests = came_out.by.iter().filter_map(|index| Some((rule.tests.get(*index)?, came_out.tests.get(*index)?)));
+    for (test, judged) in tests {
+        let same_value = telling.iter_mut().find(|(_, known)| match (known.used.first(), judged.used.first()) {
+            (Some(known), Some(used)) => (known.property, known.index) == (used.property, used.index),
+            (None, _) | (_, None) => false,
+        });
+        match same_value {
+            Some(known) => *known = (test, judged),
+            None => telling.push((test, judged)),
+        }
+    }
+    telling
 }
 
 /// A list a reader can follow: `a`, `a and b`, `a, b and c`.
@@ -256,4 +301,24 @@ pub(crate) fn titles(subjects: impl Iterator<Item = Subject>) -> Vec<String> {
         }
     }
     titles
+}
+
+#[cfg(test)]
+mod tests {
+    use super::short_citation;
+
+    #[test]
+    fn publications_are_named_by_author_and_year() {
+        let table = [
+            ("Mackay D (1982) Environ Sci Technol 16:274-278", "Mackay 1982"),
+            ("Veith GD, Kosian P (1983) in a book", "Veith & Kosian 1983"),
+            ("Veith GD, DeFoe DL, Bergstedt BV (1979) J Fish Res Board Can 36:1040-1048", "Veith et al. 1979"),
+            ("European Commission (2003) Technical Guidance Document", "European Commission 2003"),
+            ("US EPA (1996) Soil Screening Guidance", "US EPA 1996"),
+            ("Verhaar HJM and others in European Commission (2003) Technical Guidance", "Verhaar et al. 2003"),
+        ];
+        for (citation, expected) in table {
+            assert_eq!(short_citation(citation), expected);
+        }
+    }
 }

@@ -4,6 +4,7 @@
 //! neighbours to say. Only this folder names the TOML crate.
 
 mod section;
+mod value;
 
 use std::cell::RefCell;
 use std::ops::Range;
@@ -12,7 +13,8 @@ use std::sync::Arc;
 
 use toml::de::DeTable;
 
-pub(crate) use section::{Located, Scalar, Section};
+pub(crate) use section::Section;
+pub(crate) use value::{Located, Scalar};
 
 use crate::fault::{RuleFault, RuleFaults, RuleMistake};
 
@@ -35,14 +37,9 @@ impl RuleSource {
     }
 
     /// Reads a file; refused if it cannot be read or is not UTF-8.
-    pub fn read(path: &Path) -> Result<Self, RuleFault> {
+    pub fn read(path: &Path) -> Result<Self, RuleFaults> {
         let name = path.display().to_string();
-        let fault = |mistake| RuleFault {
-            file: name.clone(),
-            text: None,
-            span: None,
-            mistake,
-        };
+        let fault = |mistake| RuleFaults::of_file(&name, mistake);
         let bytes = std::fs::read(path).map_err(|error| {
             fault(match error.kind() {
                 std::io::ErrorKind::NotFound => RuleMistake::NoSuchFile,
@@ -78,10 +75,10 @@ impl RuleSource {
         }
     }
 
-    /// Reads the tree with `build` and gives what it built, or every fault found on the way.
+    /// Reads the tree with `read` and gives what it built, or every fault found on the way.
     pub(crate) fn build<Built>(
         &self,
-        build: impl FnOnce(&Section<'_>) -> Option<Built>,
+        read: impl FnOnce(&Section<'_>) -> Option<Built>,
     ) -> Result<Built, RuleFaults> {
         let faults = FaultList::new(self);
         let (tree, errors) = DeTable::parse_recoverable(&self.text);
@@ -100,10 +97,9 @@ impl RuleSource {
         if !faults.is_empty() {
             return Err(faults.into_faults());
         }
-        let built = build(&Section::root(&faults, &tree));
-        match built {
-            Some(built) if faults.is_empty() => Ok(built),
-            _ => Err(faults.into_faults()),
+        match read(&Section::root(&faults, &tree)) {
+            Some(result) if faults.is_empty() => Ok(result),
+            Some(_) | None => Err(faults.into_faults()),
         }
     }
 }
@@ -148,6 +144,8 @@ impl FaultList {
     fn into_faults(self) -> RuleFaults {
         let mut faults = self.faults.into_inner();
         faults.sort_by_key(|fault| fault.span.as_ref().map(|span| (span.start, span.end)));
+        // A name that two readers look at is reported by both.
+        faults.dedup();
         RuleFaults(faults)
     }
 }

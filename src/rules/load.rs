@@ -2,50 +2,15 @@
 //!
 //! A choice is the id of a built-in rulebook, `all`, a file or a folder. What the files mean is for `validate`.
 
-use std::path::{Path, PathBuf};
+use std::path::Path;
 
+use super::built_in::{BUILT_IN, CAUTIONS, RELATIONS};
 use super::file::RuleSource;
+use super::folder::{CAUTIONS_FILE, RELATIONS_FILE, rulebook_files};
 use super::validate::{read_cautions, read_rulebook};
-use super::{Caution, Checked, RuleSet, RuleText, Rulebook};
+use super::{Caution, RuleSet, RuleText, Rulebook};
 use crate::fault::{Refusal, RuleFault, RuleFaults, RuleMistake, nearest};
-use crate::quantity::Date;
 use crate::relations::read_relations;
-
-const BUILT_IN: [(&str, &str); 4] = [
-    (
-        "eu-reach-pbt",
-        include_str!("../../rules/rulebooks/eu-reach-pbt.toml"),
-    ),
-    (
-        "eu-clp-pbt-pmt",
-        include_str!("../../rules/rulebooks/eu-clp-pbt-pmt.toml"),
-    ),
-    (
-        "un-stockholm-annex-d",
-        include_str!("../../rules/rulebooks/un-stockholm-annex-d.toml"),
-    ),
-    (
-        "ca-persistence-bioaccumulation",
-        include_str!("../../rules/rulebooks/ca-persistence-bioaccumulation.toml"),
-    ),
-];
-const CAUTIONS: &str = include_str!("../../rules/cautions.toml");
-const RELATIONS: &str = include_str!("../../rules/relations.toml");
-
-/// The rule files beside the rulebooks; a folder may hold its own.
-const CAUTIONS_FILE: &str = "cautions.toml";
-const RELATIONS_FILE: &str = "relations.toml";
-const COLUMNS_FILE: &str = "columns.toml";
-
-/// Id and text of every built-in rulebook, in the order of their columns.
-pub fn built_in_rulebooks() -> Vec<(&'static str, &'static str)> {
-    BUILT_IN.to_vec()
-}
-
-/// Name and text of the other built-in rule files of this module: cautions and relations.
-pub fn built_in_rule_files() -> Vec<(&'static str, &'static str)> {
-    vec![(CAUTIONS_FILE, CAUTIONS), (RELATIONS_FILE, RELATIONS)]
-}
 
 /// The rule files of a run, not read yet for what they mean.
 #[derive(Debug, Clone, PartialEq, Eq)]
@@ -60,7 +25,7 @@ pub struct RuleSources {
 
 impl RuleSources {
     /// The built-in cautions and relations, and no rulebook yet.
-    fn without_rulebooks() -> Self {
+    pub(super) fn without_rulebooks() -> Self {
         Self {
             rulebooks: Vec::new(),
             cautions: RuleSource::built_in("cautions", CAUTIONS),
@@ -85,11 +50,16 @@ impl RuleSources {
             } else if choice == "all" {
                 sources.add_all_built_in()?;
             } else if path.is_dir() {
-                faults.extend(sources.add_folder(path).err());
+                faults.extend(
+                    sources
+                        .add_folder(path)
+                        .err()
+                        .map_or_else(Vec::new, |found| found.0),
+                );
             } else if path.exists() || looks_like_a_path(choice) {
                 match RuleSource::read(path) {
                     Ok(source) => sources.add(source),
-                    Err(fault) => faults.push(fault),
+                    Err(found) => faults.extend(found.0),
                 }
             } else {
                 return Err(Refusal::Usage(unknown_choice(choice)));
@@ -103,7 +73,7 @@ impl RuleSources {
     }
 
     /// Adds a rulebook unless the same file is there already.
-    fn add(&mut self, source: RuleSource) {
+    pub(super) fn add(&mut self, source: RuleSource) {
         if !self.rulebooks.iter().any(|present| present.name == source.name) {
             self.rulebooks.push(source);
         }
@@ -128,7 +98,7 @@ impl RuleSources {
         Ok(())
     }
 
-    fn add_folder(&mut self, folder: &Path) -> Result<(), RuleFault> {
+    pub(super) fn add_folder(&mut self, folder: &Path) -> Result<(), RuleFaults> {
         let files = rulebook_files(folder)?;
         for file in files {
             self.add(RuleSource::read(&file)?);
@@ -166,12 +136,11 @@ impl RuleSources {
     /// The checked rulebooks. Without sound cautions of the run, `out-of-scope` is held against the built-in ones.
     fn read_rulebooks(&self, cautions: Option<&[Caution]>) -> Result<Vec<Rulebook>, RuleFaults> {
         let built_in;
-        let cautions = match cautions {
-            Some(cautions) => cautions,
-            None => {
-                built_in = read_cautions(&RuleSource::built_in("cautions", CAUTIONS))?;
-                built_in.as_slice()
-            }
+        let cautions = if let Some(cautions) = cautions {
+            cautions
+        } else {
+            built_in = read_cautions(&RuleSource::built_in("cautions", CAUTIONS))?;
+            built_in.as_slice()
         };
         let ids: Vec<&str> = cautions.iter().map(|caution| caution.id.as_str()).collect();
         let mut faults = Vec::new();
@@ -238,48 +207,6 @@ fn taken_names(
     faults
 }
 
-/// The rulebooks of a folder and of its `rulebooks` folder, by file name.
-fn rulebook_files(folder: &Path) -> Result<Vec<PathBuf>, RuleFault> {
-    let mut files = toml_files(folder)?;
-    let inner = folder.join("rulebooks");
-    if inner.is_dir() {
-        files.extend(toml_files(&inner)?);
-    }
-    files.retain(|file| {
-        let name = file.file_name().and_then(|name| name.to_str());
-        ![Some(CAUTIONS_FILE), Some(RELATIONS_FILE), Some(COLUMNS_FILE)].contains(&name)
-    });
-    if files.is_empty() {
-        return Err(fault_of(folder, RuleMistake::NoRulebooks));
-    }
-    Ok(files)
-}
-
-fn toml_files(folder: &Path) -> Result<Vec<PathBuf>, RuleFault> {
-    let unreadable = |error: std::io::Error| {
-        let reason = error.to_string();
-        fault_of(folder, RuleMistake::Unreadable { reason })
-    };
-    let mut files = Vec::new();
-    for entry in std::fs::read_dir(folder).map_err(unreadable)? {
-        let path = entry.map_err(unreadable)?.path();
-        if path.extension().is_some_and(|extension| extension == "toml") {
-            files.push(path);
-        }
-    }
-    files.sort();
-    Ok(files)
-}
-
-fn fault_of(path: &Path, mistake: RuleMistake) -> RuleFault {
-    RuleFault {
-        file: path.display().to_string(),
-        text: None,
-        span: None,
-        mistake,
-    }
-}
-
 fn looks_like_a_path(choice: &str) -> bool {
     let is_toml = Path::new(choice)
         .extension()
@@ -294,90 +221,4 @@ fn unknown_choice(choice: &str) -> String {
         "`{choice}` is no rulebook, file or folder.{hint} Built in are {}; `all` takes them all.",
         ids.map(|id| format!("`{id}`")).join(", ")
     )
-}
-
-/// What a rulebook holds, in short.
-#[derive(Debug, Clone, PartialEq, Eq)]
-pub struct RulebookSummary {
-    /// The file, `built in: eu-reach-pbt` or the path as given.
-    pub file: String,
-    /// Its name on the command line.
-    pub id: String,
-    /// The prefix of its columns.
-    pub short: String,
-    /// Its title.
-    pub title: String,
-    /// The date of the text it follows.
-    pub edition: Date,
-    /// Never loaded by `all`, only when named.
-    pub by_name_only: bool,
-    /// How many criteria it has.
-    pub criteria: usize,
-    /// How many limits were read in the text or a reproduction of it.
-    pub seen: usize,
-    /// How many were read in a text that quotes it.
-    pub second_hand: usize,
-    /// How many are from memory.
-    pub memory: usize,
-}
-
-impl RulebookSummary {
-    fn new(file: &str, rulebook: &Rulebook) -> Self {
-        let limits = |checked: Checked| rulebook.tests().filter(|test| test.checked == checked).count();
-        Self {
-            file: file.to_owned(),
-            id: rulebook.id.clone(),
-            short: rulebook.short.clone(),
-            title: rulebook.title.clone(),
-            edition: rulebook.edition,
-            by_name_only: rulebook.by_name_only,
-            criteria: rulebook.criteria.len(),
-            seen: limits(Checked::Seen),
-            second_hand: limits(Checked::SecondHand),
-            memory: limits(Checked::Memory),
-        }
-    }
-}
-
-/// The built-in rulebooks in short, those of `by-name-only` too.
-pub fn summaries() -> Result<Vec<RulebookSummary>, RuleFaults> {
-    let mut sources = RuleSources::without_rulebooks();
-    for (id, text) in BUILT_IN {
-        sources.add(RuleSource::built_in(id, text));
-    }
-    sources.summaries()
-}
-
-impl RuleSources {
-    fn summaries(&self) -> Result<Vec<RulebookSummary>, RuleFaults> {
-        let rule_set = self.load()?;
-        let named = self.rulebooks.iter().zip(&rule_set.rulebooks);
-        Ok(named
-            .map(|(source, rulebook)| RulebookSummary::new(&source.name, rulebook))
-            .collect())
-    }
-}
-
-/// Checks rule files and folders without an inventory and gives their rulebooks in short.
-pub fn check_paths(paths: &[PathBuf]) -> Result<Vec<RulebookSummary>, RuleFaults> {
-    let mut sources = RuleSources::without_rulebooks();
-    let mut faults = Vec::new();
-    for path in paths {
-        let name = path.file_name().and_then(|name| name.to_str());
-        let added = if path.is_dir() {
-            sources.add_folder(path)
-        } else {
-            RuleSource::read(path).map(|source| match name {
-                Some(CAUTIONS_FILE) => sources.cautions = source,
-                Some(RELATIONS_FILE) => sources.relations = source,
-                Some(_) | None => sources.add(source),
-            })
-        };
-        faults.extend(added.err());
-    }
-    match sources.summaries() {
-        Ok(summaries) if faults.is_empty() => Ok(summaries),
-        Ok(_) => Err(RuleFaults(faults)),
-        Err(found) => Err(RuleFaults(faults.into_iter().chain(found.0).collect())),
-    }
 }

@@ -100,7 +100,7 @@ fn a_polymer_clears_nothing_whatever_its_data_say() {
         .of_type(SubstanceType::Polymer)
         .measured(Property::Koc, Value::Point(1e6))
         .judged();
-    assert_eq!(sorbing.verdictUnresolved);
+    assert_eq!(sorbing.verdict("CLP", "M"), Unresolved);
     for (book, criterion) in [
         ("REACH", "P"),
         ("REACH", "B"),

@@ -2,6 +2,7 @@
 
 use std::path::PathBuf;
 
+use kowledger::fault::Drawing;
 use kowledger::rules::check_paths;
 
 /// A rulebook that is right, with every kind of thing in it that the changes below touch.
@@ -237,4 +238,49 @@ sd = 0.3
 source = "assumed"
 "#;
     insta::assert_snapshot!(answer_to_file("relations.toml", text.as_bytes()));
+}
+
+#[test]
+fn a_mark_at_the_start_of_the_file_is_no_fault() {
+    let folder = tempfile::tempdir().unwrap();
+    let path = folder.path().join("house.toml");
+    std::fs::write(&path, format!("\u{feff}{SOUND}").replace('\n', "\r\n")).unwrap();
+    assert_eq!(check_paths(&[path]).unwrap().len(), 1);
+}
+
+#[test]
+fn colour_is_only_drawn_when_asked_for() {
+    let folder = tempfile::tempdir().unwrap();
+    let path = folder.path().join("house.toml");
+    std::fs::write(&path, SOUND.replace("above = 4.5", "above = 4,5")).unwrap();
+    let faults = check_paths(&[path]).unwrap_err();
+    assert!(!faults.draw(Drawing::Plain).contains('\u{1b}'));
+    assert!(faults.draw(Drawing::Coloured).contains('\u{1b}'));
+    assert_eq!(faults.0[0].line(), Some(54));
+}
+
+/// A file cut anywhere, or with a line missing, is answered with faults or read: it never panics, and a fault always
+/// can be drawn.
+#[test]
+fn a_damaged_file_is_always_answered() {
+    let folder = tempfile::tempdir().unwrap();
+    let (path, cautions) = (
+        folder.path().join("house.toml"),
+        folder.path().join("cautions.toml"),
+    );
+    // The built-in cautions take long to read; one is enough here.
+    let inorganic =
+        "[[caution]]\nid = \"inorganic\"\nsentence = \"x\"\nsource = \"x\"\nionisable = true\nblocks = []";
+    std::fs::write(&cautions, inorganic).unwrap();
+    let cuts = SOUND.char_indices().map(|(end, _)| SOUND[..end].to_owned());
+    let lines: Vec<&str> = SOUND.lines().collect();
+    let gaps = (0..lines.len()).map(|gap| [&lines[..gap], &lines[gap + 1..]].concat().join("\n"));
+    let doubled = (0..lines.len()).map(|line| [&lines[..=line], &lines[line..]].concat().join("\n"));
+    for damaged in cuts.chain(gaps).chain(doubled) {
+        std::fs::write(&path, &damaged).unwrap();
+        if let Err(faults) = check_paths(&[cautions.clone(), path.clone()]) {
+            assert!(!faults.0.is_empty(), "refused without a fault: {damaged}");
+            assert!(!faults.to_string().is_empty());
+        }
+    }
 }

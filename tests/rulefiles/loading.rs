@@ -71,7 +71,7 @@ fn a_file_and_a_folder_are_read_from_disk() {
         let rule_set = choose(&[path.to_str().unwrap()]).unwrap();
         assert_eq!(ids(&rule_set), ["house-rules"]);
         assert_eq!(rule_set.texts[0].name, "own.toml");
-        assert_eq!(check_paths(&[path.clone()]).unwrap()[0].short, "HOUSE");
+        assert_eq!(check_paths(std::slice::from_ref(path)).unwrap()[0].short, "HOUSE");
     }
 }
 

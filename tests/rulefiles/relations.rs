@@ -24,7 +24,7 @@ fn find<'r>(relations: &'r Relations, id: &str) -> &'r Relation {
         .unwrap()
 }
 
-fn leading<'r>(relations: &'r Relations, to: Property, log_kow: f64) -> Option<&'r str> {
+fn leading(relations: &Relations, to: Property, log_kow: f64) -> Option<&str> {
     let leads = |relation: &&Relation| {
         relation.to == to && relation.side == Side::Central && relation.domain.contains(log_kow)
     };

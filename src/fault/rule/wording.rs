@@ -115,25 +115,48 @@ impl RuleMistake {
     }
 
     /// What to write instead.
-    pub(super) fn help(&self) -> Option<String> {
-        Some(match self {
+    pub(super) fn help(&self) -> String {
+        match self {
             Self::Unreadable { .. } => "check who may read it, and that it is a file".into(),
             Self::NoSuchFile => "check the path".into(),
             Self::NotUtf8 { .. } => "save the file again with the encoding UTF-8".into(),
-            Self::NoRulebooks => "a rulebook is a file that ends in .toml and starts with `[rulebook]`".into(),
-            Self::Syntax { .. } => {
-                "a line is `key = value`, `[table]` or `[[table]]`; text stands in quotes, a list in [ ]".into()
+            Self::NoRulebooks => {
+                "a rulebook is a file that ends in .toml and starts with `[rulebook]`".into()
             }
-            Self::UnknownKey { nearest: Some(nearest), .. } => format!("did you mean `{nearest}`?"),
-            Self::UnknownKey { nearest: None, known, .. } => format!("it may have {}", listed(known)),
+            Self::Syntax { .. } => {
+                "a line is `key = value`, `[table]` or `[[table]]`; text stands in quotes".into()
+            }
+            Self::UnknownKey {
+                nearest: Some(nearest),
+                ..
+            } => format!("did you mean `{nearest}`?"),
+            Self::UnknownKey {
+                nearest: None, known, ..
+            } => format!("it may have {}", listed(known)),
             Self::MissingKey { example, .. } => format!("add, for example, `{example}`"),
             Self::WrongKind { wanted, .. } => format!("write {wanted}"),
             Self::EmptyText { .. } => "write the text, or leave the key out where it is not needed".into(),
             Self::EmptyList { .. } => "name at least one, or leave the key out where it is not needed".into(),
-            Self::UnknownWord { nearest: Some(nearest), .. } => format!("did you mean `{nearest}`?"),
-            Self::UnknownWord { nearest: None, known, .. } => format!("it may be {}", listed(known)),
+            Self::UnknownWord {
+                nearest: Some(nearest),
+                ..
+            }
+            | Self::UnknownPart {
+                nearest: Some(nearest),
+                ..
+            } => {
+                format!("did you mean `{nearest}`?")
+            }
+            Self::UnknownWord {
+                nearest: None, known, ..
+            }
+            | Self::UnknownPart {
+                nearest: None, known, ..
+            } => {
+                format!("it may be {}", listed(known))
+            }
             Self::NotKebabCase { .. } => {
-                "use small letters, digits and hyphens, starting with a letter, for example `eu-reach-pbt`".into()
+                "use small letters, digits and hyphens, a letter first: `eu-reach-pbt`".into()
             }
             Self::NotADay { .. } => "write year, month and day without quotes, for example 2023-03-31".into(),
             Self::NoUnit { number, unit, .. } => format!("write the unit, in quotes: \"{number} {unit}\""),
@@ -150,19 +173,19 @@ impl RuleMistake {
             Self::OutOfPlace { belongs, .. } => format!("it belongs {belongs}; take it out here"),
             Self::ReversedRange => "write the low end first".into(),
             Self::ClearBelowContradicts { .. } => {
-                "between `clear-below` and the limit a value is undecided, so `clear-below` must be the smaller".into()
+                "between the two a value is undecided, so it must be below the limit".into()
             }
             Self::NotAHazardCode { .. } => {
-                "write the code without its text, for example \"H350\" or \"EUH440\"; H360 covers H360FD".into()
+                "write the code alone, such as \"H350\" or \"EUH440\"; H360 covers H360FD".into()
             }
-            Self::NotANumberOfASubstance { .. } => "check the number against the list it was taken from".into(),
+            Self::NotANumberOfASubstance { .. } => {
+                "check the number against the list it was taken from".into()
+            }
             Self::EmptyCriterion { .. } => {
-                "add `[[criterion.step]]` or `[[criterion.band]]` below it, or `assess = \"...\"` if no number settles it"
-                    .into()
+                "add `[[criterion.step]]`, `[[criterion.band]]`, or `assess = \"...\"`".into()
             }
             Self::MixedCriterion { .. } => {
-                "use steps for a verdict, bands for a rating or `assess` where no number settles it, only one of them"
-                    .into()
+                "keep one: steps for a verdict, bands for a rating, `assess` for no number".into()
             }
             Self::EmptyStep => "add `[[criterion.step.test]]` below it, or take the step out".into(),
             Self::NoCombine => {
@@ -173,19 +196,17 @@ impl RuleMistake {
                 "give each criterion, designation, caution and relation a name of its own".into()
             }
             Self::NameTaken { .. } => "change it, or select only one of the two files".into(),
-            Self::UnknownPart { nearest: Some(nearest), .. } => format!("did you mean `{nearest}`?"),
-            Self::UnknownPart { nearest: None, known, .. } => format!("it may be {}", listed(known)),
             Self::BandedPart { .. } => "name a criterion that has steps".into(),
             Self::Circular { .. } => "let the chain end at criteria".into(),
             Self::AllOrAny => "keep `all-of` if every part is needed, `any-of` if one is enough".into(),
             Self::BadPattern { .. } => {
-                "put the pattern in single quotes, and a backslash before ( ) [ ] . + * ? that are meant as such".into()
+                "use single quotes, and a backslash before ( ) [ ] . + * ? meant as such".into()
             }
             Self::NoTrigger { .. } => {
-                "add `substance-types`, `row-types`, `identities`, `name-patterns`, `formula` or `ionisable`".into()
+                "add `name-patterns`, `substance-types` or another key that raises it".into()
             }
-            Self::NoDefaultSd => "add `[[default-sd]]` with `property = \"any\"` and no `basis` as the last one".into(),
-        })
+            Self::NoDefaultSd => "end with a `[[default-sd]]` of `property = \"any\"` without `basis`".into(),
+        }
     }
 }
 

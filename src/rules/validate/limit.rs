@@ -92,8 +92,8 @@ fn read_one(test: &Section<'_>, subject: Subject, key: &'static str) -> Option<(
         (Some(measured), None, "between") => read_range(test, measured),
         (None, None, "any-of-words") if subject == Subject::HazardStatements => {
             let codes = read_codes(test, "any-of-words")?;
-            let text = codes.join(", ");
-            Some((Limit::AnyOfWords(codes), text))
+            let joined = codes.join(", ");
+            Some((Limit::AnyOfWords(codes), joined))
         }
         (None, None, "is") if subject == Subject::ReadyBiodegradability => {
             let words = [
