@@ -172,7 +172,8 @@ fn units_below(row: &Row) -> Option<Vec<(u16, String)>> {
         .filter(|cell| cell.content != CellContent::Empty)
         .count();
     let texts = texts_of(row);
-    if texts.len() < filled {
+    let starts_number = |text: &str| text.starts_with(|first: char| first.is_ascii_digit());
+    if texts.len() < filled || texts.iter().any(|(_, text)| starts_number(text)) {
         return None;
     }
     let is_unit = |text: &str| {

@@ -11,7 +11,6 @@ const SPELLINGS: &[(Unit, &[&str])] = &[
         Unit::One,
         &[
             "-",
-            "1",
             "none",
             "dimensionless",
             "dimensionslos",
@@ -211,7 +210,6 @@ const SPELLINGS: &[(Unit, &[&str])] = &[
             "to/jahr",
             "tpa",
             "t",
-            "to",
             "ton",
             "tons",
             "tonne",

@@ -1,0 +1,313 @@
+//! Headers and what they name (`tests/fixtures/headers.tsv`), and how the header of a sheet is found.
+
+use std::collections::BTreeSet;
+
+use kowledger::columns::{Column, ColumnOverride, ColumnWords, Recognised, recognise};
+use kowledger::quantity::DecimalStyle;
+use kowledger::substance::{Basis, Field, Property};
+use kowledger::workbook::{CellContent, Row};
+
+use crate::sheet::{columns_of, content_row, text_row};
+
+const TABLE: &str = include_str!("../fixtures/headers.tsv");
+
+/// Language, header, field and unit of each line of the table.
+fn table() -> impl Iterator<Item = (&'static str, String, &'static str, &'static str)> {
+    TABLE.lines().filter(|line| !line.starts_with('#')).map(|line| {
+        let mut parts = line.split('\t');
+        let mut next = || parts.next().unwrap_or_default();
+        let (language, header, field) = (next(), next(), next());
+        (language, header.replace("\\n", "\n"), field, next())
+    })
+}
+
+#[test]
+fn every_header_of_the_table_names_its_field_and_unit() {
+    let mut wrong = Vec::new();
+    for (_, header, field, unit) in table() {
+        // A SMILES column makes the sheet an inventory and is named by no other header, but by its own.
+        let rows = [text_row(0, &[&header, "SMILES", "Supplier", "Name"])];
+        let recognised = columns_of(&rows).unwrap();
+        let found = recognised.columns.iter().find(|column| column.index == 0);
+        let found_field = found.map_or("none", |column| column.field.id());
+        let found_unit = found
+            .and_then(|column| column.unit)
+            .map_or("", |unit| unit.symbol());
+        if (found_field, found_unit) != (field, unit) {
+            wrong.push(format!(
+                "`{header}`: expected {field} {unit}, found {found_field} {found_unit}"
+            ));
+        }
+    }
+    assert!(wrong.is_empty(), "{}", wrong.join("\n"));
+}
+
+#[test]
+fn every_field_is_named_in_both_languages() {
+    for language in ["en", "de"] {
+        let named: BTreeSet<&str> = table()
+            .filter(|(of, ..)| *of == language)
+            .map(|(_, _, field, _)| field)
+            .collect();
+        let missing: Vec<&str> = Field::all()
+            .map(Field::id)
+            .filter(|id| !named.contains(id))
+            .collect();
+        assert!(missing.is_empty(), "{language}: {missing:?}");
+    }
+}
+
+fn column(recognised: &Recognised, field: Field) -> &Column {
+    recognised
+        .columns
+        .iter()
+        .find(|column| column.field == field)
+        .unwrap()
+}
+
+#[test]
+fn a_header_below_title_rows_is_found() {
+    let rows = [
+        text_row(0, &["Inventory of the Elbe site"]),
+        text_row(2, &["Status:", "2026"]),
+        text_row(4, &["Name", "CAS-Nr.", "log Kow"]),
+        text_row(5, &["DDT", "50-29-3", "6,9"]),
+    ];
+    let recognised = columns_of(&rows).unwrap();
+    assert_eq!((recognised.header_row, recognised.first_data_row), (4, 5));
+    assert_eq!(recognised.columns.len(), 3);
+}
+
+#[test]
+fn a_row_of_units_below_the_names_belongs_to_the_header() {
+    let rows = [
+        text_row(0, &["Name", "CAS", "log Kow", "DT50 soil", "Water solubility"]),
+        text_row(1, &["", "", "-", "wk", "[µg/L]"]),
+        text_row(2, &["DDT", "50-29-3", "6.9", "100", "5"]),
+    ];
+    let recognised = columns_of(&rows).unwrap();
+    assert_eq!((recognised.header_row, recognised.first_data_row), (1, 2));
+    let soil = column(&recognised, Field::from_id("half-life-soil").unwrap());
+    assert_eq!(
+        (soil.header.as_str(), soil.unit.map(|unit| unit.symbol())),
+        ("DT50 soil [wk]", Some("wk"))
+    );
+    let solubility = column(&recognised, Field::Property(Property::WaterSolubility));
+    assert_eq!(solubility.unit.map(|unit| unit.symbol()), Some("µg/L"));
+}
+
+#[test]
+fn a_first_row_of_data_is_no_row_of_units() {
+    let rows = [
+        text_row(0, &["Name", "log Kow"]),
+        text_row(1, &["d", "4.5"]),
+        text_row(2, &["K", ""]),
+    ];
+    assert_eq!(columns_of(&rows).unwrap().header_row, 0);
+}
+
+#[test]
+fn an_identity_column_makes_an_inventory_and_a_name_needs_one_more_field() {
+    for (headers, inventory) in [
+        (["CAS", ""], true),
+        (["SMILES", ""], true),
+        (["EC number", ""], true),
+        (["InChIKey", ""], true),
+        (["Name", ""], false),
+        (["No.", ""], false),
+        (["Name", "log Kow"], true),
+        (["No.", "Name"], true),
+        (["Name", "Colour"], false),
+        (["log Kow", "BCF"], false),
+    ] {
+        assert_eq!(
+            columns_of(&[text_row(0, &headers)]).is_ok(),
+            inventory,
+            "{headers:?}"
+        );
+    }
+}
+
+#[test]
+fn a_product_name_is_the_name_of_the_substance_only_where_no_other_column_is() {
+    let alone = columns_of(&[text_row(0, &["Product name", "CAS"])]).unwrap();
+    assert_eq!(
+        alone.columns.first().map(|column| column.field),
+        Some(Field::Name)
+    );
+    let beside = columns_of(&[text_row(0, &["Product name", "CAS", "Substance name"])]).unwrap();
+    let fields: Vec<Field> = beside.columns.iter().map(|column| column.field).collect();
+    assert_eq!(fields, [Field::Product, Field::CasNumber, Field::Name]);
+}
+
+#[test]
+fn of_doubled_identity_columns_the_first_is_taken_and_the_way_out_is_named() {
+    let recognised = columns_of(&[text_row(0, &["CAS", "Name", "CAS-Nr. (neu)"])]).unwrap();
+    assert_eq!(recognised.columns.len(), 2);
+    assert_eq!(recognised.unknown, [(2, "CAS-Nr. (neu)".to_owned())]);
+    assert_eq!(
+        recognised.remarks,
+        [
+            "Sheet: columns A (`CAS`) and C (`CAS-Nr. (neu)`) both name cas-number; A is taken; to take the other: \
+          --column 'CAS=ignore' --column 'CAS-Nr. (neu)=cas-number'"
+        ]
+    );
+}
+
+#[test]
+fn two_columns_of_one_property_are_both_kept_with_their_basis() {
+    let recognised =
+        columns_of(&[text_row(0, &["CAS", "log Kow (gemessen)", "log Kow (berechnet)"])]).unwrap();
+    let bases: Vec<Option<Basis>> = recognised.columns.iter().map(|column| column.basis).collect();
+    assert_eq!(bases, [None, Some(Basis::Measured), Some(Basis::Calculated)]);
+}
+
+#[test]
+fn headers_carry_conditions() {
+    let headers = [
+        "CAS",
+        "DT50 soil (12 °C, primary)",
+        "LC50 fish (mg/L)",
+        "log Kow OECD 117",
+        "log D (pH 7,4)",
+    ];
+    let recognised = columns_of(&[text_row(0, &headers)]).unwrap();
+    let conditions: Vec<_> = recognised
+        .columns
+        .iter()
+        .map(|column| &column.conditions)
+        .collect();
+    assert_eq!(conditions[1].temperature, Some(12.0));
+    assert_eq!(conditions[2].organism.as_deref(), Some("fish"));
+    assert_eq!(recognised.columns[3].basis, Some(Basis::Measured));
+    assert_eq!(conditions[4].ph, Some(7.4));
+}
+
+#[test]
+fn the_decimal_style_is_the_columns_else_the_sheets_else_the_point() {
+    let rows = |cells: &[[&str; 3]]| -> Vec<Row> {
+        let header = text_row(0, &["CAS", "BCF", "log Kow"]);
+        let data = cells
+            .iter()
+            .enumerate()
+            .map(|(place, texts)| text_row(place + 1, texts));
+        std::iter::once(header).chain(data).collect()
+    };
+    let styles = |rows: &[Row]| {
+        let recognised = columns_of(rows).unwrap();
+        (recognised.columns[1].decimal, recognised.columns[2].decimal)
+    };
+    let (point, comma) = (DecimalStyle::Point, DecimalStyle::Comma);
+    assert_eq!(styles(&rows(&[["", "1.234", "4.5"]])), (point, point));
+    assert_eq!(styles(&rows(&[["", "1.234", "4,5"]])), (comma, comma));
+    assert_eq!(styles(&rows(&[["", "1.234,5", "4.5"]])), (comma, point));
+    assert_eq!(styles(&rows(&[["", "1.234", "5"]])), (point, point));
+}
+
+fn recognised_with(headers: &[&str], overrides: &[&str]) -> Recognised {
+    let overrides: Vec<ColumnOverride> = overrides
+        .iter()
+        .map(|text| ColumnOverride::parse(text).unwrap())
+        .collect();
+    recognise(
+        "Sheet",
+        &[text_row(0, headers)],
+        &ColumnWords::built_in().unwrap(),
+        &overrides,
+    )
+    .unwrap()
+}
+
+#[test]
+fn the_user_can_name_a_column_or_leave_it_aside() {
+    let headers = ["CAS", "Fettliebe", "log Kow"];
+    let recognised = recognised_with(&headers, &["Fettliebe = log-kow", "LOG KOW=ignore"]);
+    let fields: Vec<&str> = recognised
+        .columns
+        .iter()
+        .map(|column| column.field.id())
+        .collect();
+    assert_eq!(fields, ["cas-number", "log-kow"]);
+    assert_eq!(recognised.unknown, [(2, "log Kow".to_owned())]);
+    assert_eq!(recognised.columns[1].reason, "told by --column");
+}
+
+#[test]
+fn an_override_that_means_nothing_is_refused_with_the_nearest_field() {
+    assert_eq!(
+        ColumnOverride::parse("Stoff=nmae").unwrap_err(),
+        "there is no field `nmae`; did you mean `name`?"
+    );
+    assert!(
+        ColumnOverride::parse("Stoff")
+            .unwrap_err()
+            .contains("--column 'Header=field'")
+    );
+    assert!(
+        ColumnOverride::parse("=name")
+            .unwrap_err()
+            .contains("names no header")
+    );
+    assert_eq!(
+        ColumnOverride::parse("a=b=name")
+            .map(|told| told.header)
+            .as_deref(),
+        Ok("a=b")
+    );
+}
+
+#[test]
+fn a_header_that_nearly_names_a_field_is_pointed_out() {
+    let recognised = columns_of(&[text_row(0, &["CAS", "Water solubillity", "Half-life", "pKa"])]).unwrap();
+    assert_eq!(recognised.columns.len(), 1);
+    let expected = [
+        "--column 'Water solubillity=water-solubility'",
+        "names no compartment",
+        "does not say whether its pKa is of an acid or a base",
+    ];
+    assert_eq!(recognised.remarks.len(), expected.len());
+    for (remark, part) in recognised.remarks.iter().zip(expected) {
+        assert!(remark.contains(part), "{remark}");
+    }
+}
+
+#[test]
+fn a_unit_that_does_not_fit_is_said_and_not_used() {
+    let recognised = columns_of(&[text_row(0, &["CAS", "BCF (mg/L)"])]).unwrap();
+    assert_eq!(recognised.columns[1].unit, None);
+    assert!(
+        recognised.remarks[0].contains("numbers without a unit are read in L/kg"),
+        "{:?}",
+        recognised.remarks
+    );
+}
+
+#[test]
+fn several_columns_of_reliability_speak_of_the_value_to_their_left() {
+    let headers = ["CAS", "log Kow", "Reliability", "BCF", "Reliability"];
+    let recognised = columns_of(&[text_row(0, &headers)]).unwrap();
+    let about: Vec<_> = recognised.columns.iter().map(|column| column.about).collect();
+    assert_eq!(
+        about,
+        [None, None, Some(Property::LogKow), None, Some(Property::Bcf)]
+    );
+    let named = columns_of(&[text_row(0, &["CAS", "log Kow", "BCF", "Reliability log Kow"])]).unwrap();
+    assert_eq!(named.columns[3].about, Some(Property::LogKow));
+}
+
+#[test]
+fn rows_without_text_are_no_header() {
+    let rows = [
+        content_row(0, &[CellContent::Number(1.0), CellContent::Empty]),
+        text_row(1, &[]),
+    ];
+    assert!(columns_of(&rows).is_err());
+}
+
+proptest::proptest! {
+    #[test]
+    fn no_header_panics(headers in proptest::collection::vec(proptest::prelude::any::<String>(), 1..6)) {
+        let texts: Vec<&str> = headers.iter().map(String::as_str).collect();
+        let _ = columns_of(&[text_row(0, &texts), text_row(1, &texts)]);
+    }
+}
