@@ -51,6 +51,7 @@ const INK: Color = Color::RGB(0x2B_1B2F);
 const DEEPEST: Color = Color::RGB(0x4A_1D54);
 const MIDDLE: Color = Color::RGB(0xB9_8CC4);
 const PALE: Color = Color::RGB(0xE4_D5E8);
+const MISTY: Color = Color::RGB(0xEF_EAF1);
 const PALEST: Color = Color::RGB(0xF7_F2F8);
 const FRAME: Color = Color::RGB(0x7B_5A86);
 const GREY: Color = Color::RGB(0x66_6670);
@@ -79,7 +80,9 @@ pub(super) struct Looks {
 impl Looks {
     pub(super) fn new() -> Self {
         let top = || Format::new().set_align(FormatAlign::Top);
-        let verdict = || top().set_font_color(INK);
+        // A step in from the edge keeps the words off the frame and off the number before them.
+        let indented = || top().set_indent(1);
+        let verdict = || indented().set_font_color(INK);
         let framed = |line| verdict().set_border(line).set_border_color(FRAME);
         Self {
             header: top()
@@ -96,13 +99,13 @@ impl Looks {
                 .set_font_color(DEEPEST),
             subtle: top().set_font_color(GREY),
             link: top().set_font_color(FRAME).set_underline(FormatUnderline::Single),
-            listed: top()
+            listed: indented()
                 .set_bold()
                 .set_font_color(WHITE)
                 .set_background_color(DEEPEST)
                 .set_border(FormatBorder::Double)
                 .set_border_color(MIDDLE),
-            fulfilled: top()
+            fulfilled: indented()
                 .set_bold()
                 .set_font_color(WHITE)
                 .set_background_color(DEEPEST),
@@ -114,10 +117,10 @@ impl Looks {
             no_data: framed(FormatBorder::Dashed)
                 .set_pattern(FormatPattern::Gray125)
                 .set_foreground_color(FRAME)
-                .set_background_color(PALE),
+                .set_background_color(MISTY),
             screens_out: verdict().set_background_color(PALEST),
             not_fulfilled: verdict(),
-            out_of_scope: top().set_italic().set_font_color(GREY),
+            out_of_scope: indented().set_italic().set_font_color(GREY),
         }
     }
 

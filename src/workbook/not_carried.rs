@@ -29,7 +29,7 @@ pub(super) fn parts_not_carried<'name>(
     contents: &Contents,
 ) -> Vec<String> {
     let mut found = [0_usize; KINDS.len()];
-    for part in parts.map(folded).filter(|part| !part.ends_with(".rels")) {
+    for part in parts.map(folded).filter(|part| !part.contains("/_rels/")) {
         for (number, (place, ..)) in found.iter_mut().zip(KINDS) {
             if part.starts_with(place) {
                 *number += 1;

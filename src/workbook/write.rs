@@ -122,7 +122,7 @@ impl AnnotatedWorkbook {
                 reason: reason_of(&error),
             })?;
         book.set_zip_compression_level(COMPRESSION);
-        book.set_properties(&properties(date).map_err(|error| output.failed(error))?);
+        book.set_properties(&properties(date).map_err(|error| output.failed(&error))?);
         Ok(Self {
             book,
             output,
@@ -199,6 +199,9 @@ impl AnnotatedWorkbook {
     /// Folds columns away under an outline, which the user opens with a click.
     pub fn group_columns(&mut self, sheet: SheetId, first: u16, last: u16) -> Result<(), FileFault> {
         self.on_sheet(sheet, |sheet| {
+            // The library notes the depth of the outline for columns it knows already only; hiding makes them known,
+            // and a folded column is hidden anyway.
+            sheet.set_column_range_hidden(first, last)?;
             sheet.group_columns_collapsed(first, last)?;
             Ok(())
         })
@@ -288,7 +291,7 @@ impl AnnotatedWorkbook {
     /// A [`FileFault`]; then what stood at the target before still does, and no temporary file is left.
     pub fn finish(mut self) -> Result<(), FileFault> {
         if let Some(reason) = &self.broken {
-            return Err(self.output.failed(reason));
+            return Err(self.output.failed(&reason));
         }
         let shown = self
             .sheets
@@ -306,8 +309,8 @@ impl AnnotatedWorkbook {
         let Self { mut book, output, .. } = self;
         output.fill(|file| {
             without_panic(|| book.save_to_writer(file))
-                .map_err(|reason| output.failed(reason))?
-                .map_err(|error| output.failed(reason_of(&error)))
+                .map_err(|reason| output.failed(&reason))?
+                .map_err(|error| output.failed(&reason_of(&error)))
         })
     }
 
@@ -336,7 +339,7 @@ impl AnnotatedWorkbook {
                     state.name
                 );
                 self.broken = Some(reason.clone());
-                Err(self.output.failed(reason))
+                Err(self.output.failed(&reason))
             }
             Some(state) => {
                 state.row = row;
@@ -360,13 +363,13 @@ impl AnnotatedWorkbook {
         work: impl FnOnce(&mut Self) -> Result<Outcome, XlsxError>,
     ) -> Result<Outcome, FileFault> {
         if let Some(reason) = &self.broken {
-            return Err(self.output.failed(reason));
+            return Err(self.output.failed(&reason));
         }
         let outcome =
             without_panic(|| work(self)).and_then(|outcome| outcome.map_err(|error| reason_of(&error)));
         outcome.map_err(|reason| {
             self.broken = Some(reason.clone());
-            self.output.failed(reason)
+            self.output.failed(&reason)
         })
     }
 }
@@ -445,8 +448,7 @@ fn shortened_to(text: &str, longest: usize) -> std::borrow::Cow<'_, str> {
 
 fn reason_of(error: &XlsxError) -> String {
     match error {
-        XlsxError::IoError(error) => error.to_string(),
-        XlsxError::TempFileError(_, error) => error.to_string(),
+        XlsxError::IoError(error) | XlsxError::TempFileError(_, error) => error.to_string(),
         XlsxError::ZipError(error) => error.to_string(),
         other => other.to_string(),
     }

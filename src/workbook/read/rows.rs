@@ -137,7 +137,7 @@ fn content_of(value: &DataRef<'_>, date_shift: f64) -> CellContent {
         DataRef::Empty => CellContent::Empty,
         DataRef::Float(number) => number_or_text(*number, CellContent::Number),
         DataRef::Int(number) => CellContent::Text(number.to_string()),
-        DataRef::String(text) => text_or_empty(text),
+        DataRef::String(text) | DataRef::DurationIso(text) => text_or_empty(text),
         DataRef::SharedString(text) => text_or_empty(text),
         DataRef::Bool(boolean) => CellContent::Boolean(*boolean),
         DataRef::DateTime(moment) => {
@@ -147,7 +147,6 @@ fn content_of(value: &DataRef<'_>, date_shift: f64) -> CellContent {
         DataRef::DateTimeIso(text) => {
             serial_of(text).map_or_else(|| text_or_empty(text), CellContent::DateTime)
         }
-        DataRef::DurationIso(text) => text_or_empty(text),
         DataRef::Error(error) => CellContent::Error(error.to_string()),
     }
 }

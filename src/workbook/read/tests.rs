@@ -312,8 +312,8 @@ fn a_workbook_that_contradicts_itself_is_refused() {
 #[test]
 fn an_error_value_newer_than_the_reading_library_is_kept_where_it_stands() {
     let rows = rows_of(&RawBook::with_rows(
-        r##"<row r="1"><c r="A1"><v>1</v></c><c r="B1" t="e"><v>#SPILL!</v></c><c r="C1" t="e"><v>#N/A</v></c></row>
-            <row r="2"><c r="A2" t="e"><v>#CALC!</v></c><c r="B2" t="str"><f>A1</f><v>x &amp; y</v></c></row>"##,
+        r#"<row r="1"><c r="A1"><v>1</v></c><c r="B1" t="e"><v>#SPILL!</v></c><c r="C1" t="e"><v>#N/A</v></c></row>
+            <row r="2"><c r="A2" t="e"><v>#CALC!</v></c><c r="B2" t="str"><f>A1</f><v>x &amp; y</v></c></row>"#,
     ));
     let contents: Vec<_> = rows
         .iter()

@@ -169,10 +169,10 @@ impl CellCheck {
             match attribute.key.as_ref() {
                 "r" => reference = Some(attribute.value),
                 "hidden" if matches!(attribute.value.as_ref(), "1" | "true") => {
-                    survey.extras.hidden_rows += 1
+                    survey.extras.hidden_rows += 1;
                 }
                 "customHeight" if matches!(attribute.value.as_ref(), "1" | "true") => {
-                    survey.extras.row_heights += 1
+                    survey.extras.row_heights += 1;
                 }
                 _ => {}
             }

@@ -53,7 +53,7 @@ impl Output {
     }
 
     /// A fault that says why the output could not be written.
-    pub(super) fn failed(&self, reason: impl ToString) -> FileFault {
+    pub(super) fn failed(&self, reason: &dyn std::fmt::Display) -> FileFault {
         FileFault::OutputFailed {
             path: self.target.display().to_string(),
             reason: reason.to_string(),
@@ -72,11 +72,11 @@ impl Output {
         // Only the file itself is left to be dropped; what a failed write left in the buffer must not be tried again.
         let (_file, _rest) = writer.into_parts();
         filled?;
-        flushed.map_err(|error| self.failed(error))?;
+        flushed.map_err(|error| self.failed(&error))?;
         temporary
             .as_file()
             .sync_all()
-            .map_err(|error| self.failed(error))?;
+            .map_err(|error| self.failed(&error))?;
         match self.overwrite {
             Overwrite::Replace => temporary.persist(&self.target),
             Overwrite::Refuse => temporary.persist_noclobber(&self.target),
