@@ -6,6 +6,7 @@
 mod criterion;
 mod designation;
 mod row;
+mod sentence;
 mod stops;
 mod value;
 

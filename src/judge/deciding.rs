@@ -16,12 +16,14 @@ use crate::substance::Property;
 pub enum Deciding {
     /// These data together.
     Data(Vec<Subject>),
-    /// No data that the criterion asks for: a caution stops every clear, or a limit has yet to be checked.
+    /// No set settles it whichever way it falls, but each of these would if it pointed to concern.
+    Perhaps(Vec<Subject>),
+    /// No data that the criterion asks for.
     ExpertJudgement,
 }
 
 /// No more data than this are combined in the search.
-const LARGEST_SET: usize = 3;
+const LARGEST_SET: usize = 4;
 
 /// A result that a missing datum could have.
 #[derive(Debug, Clone, Copy, PartialEq)]
@@ -31,7 +33,7 @@ enum Imagined {
     Clears,
 }
 
-/// Searches sets of one, two and three data; among sets of one size those that spare animals come first.
+/// Searches sets of growing size; among sets of one size those that spare animals come first.
 pub(crate) fn find_deciding_data(
     context: Context,
     criterion: &Criterion,
@@ -42,7 +44,25 @@ pub(crate) fn find_deciding_data(
     (1..=LARGEST_SET)
         .flat_map(|size| sets(&candidates, size))
         .find(|set| settles(context, criterion, judged, set))
-        .map_or(Deciding::ExpertJudgement, Deciding::Data)
+        .map_or_else(|| perhaps(context, criterion, judged, &candidates), Deciding::Data)
+}
+
+/// The data of which some result would give an answer.
+fn perhaps(
+    context: Context,
+    criterion: &Criterion,
+    judged: &CriterionJudgement,
+    candidates: &[Subject],
+) -> Deciding {
+    let telling: Vec<Subject> = candidates
+        .iter()
+        .copied()
+        .filter(|subject| {
+            let results = possible_results(criterion, *subject);
+            results.iter().any(|result| decides(context, criterion, judged, &[*subject], &[*result]))
+        })
+        .collect();
+    if telling.is_empty() { Deciding::ExpertJudgement } else { Deciding::Perhaps(telling) }
 }
 
 /// Existing statements and physico-chemical data, then degradation tests, then animal tests (common practice: animal
@@ -110,27 +130,36 @@ fn settles(context: Context, criterion: &Criterion, judged: &CriterionJudgement,
         .iter()
         .map(|subject| possible_results(criterion, *subject))
         .collect();
-    combinations(&results).iter().all(|combination| {
-        let imagined_for = |test: &Test| {
-            let place = set.iter().position(|subject| *subject == test.subject)?;
-            combination.get(place).copied()
-        };
-        let tests = criterion
-            .steps
-            .iter()
-            .zip(&judged.steps)
-            .map(|(step, judged_step)| {
-                let tests = step.tests.iter().zip(&judged_step.tests);
-                tests
-                    .map(|(test, judged_test)| match imagined_for(test) {
-                        Some(result) => imagine(context, test, result),
-                        None => judged_test.clone(),
-                    })
-                    .collect()
-            })
-            .collect();
-        decide(context.rulebook, criterion, tests).verdict.is_decided()
-    })
+    combinations(&results).iter().all(|combination| decides(context, criterion, judged, set, combination))
+}
+
+/// Whether the criterion is answered once the data of the set have these results.
+fn decides(
+    context: Context,
+    criterion: &Criterion,
+    judged: &CriterionJudgement,
+    set: &[Subject],
+    results: &[Imagined],
+) -> bool {
+    let imagined_for = |test: &Test| {
+        let place = set.iter().position(|subject| *subject == test.subject)?;
+        results.get(place).copied()
+    };
+    let tests = criterion
+        .steps
+        .iter()
+        .zip(&judged.steps)
+        .map(|(step, judged_step)| {
+            let tests = step.tests.iter().zip(&judged_step.tests);
+            tests
+                .map(|(test, judged_test)| match imagined_for(test) {
+                    Some(result) => imagine(context, test, result),
+                    None => judged_test.clone(),
+                })
+                .collect()
+        })
+        .collect();
+    decide(context.rulebook, criterion, tests).verdict.is_decided()
 }
 
 fn combinations(results: &[Vec<Imagined>]) -> Vec<Vec<Imagined>> {

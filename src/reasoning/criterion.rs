@@ -1,13 +1,12 @@
 //! One criterion in words: a line of the Reasoning sheet.
 
-use crate::judge::{CriterionJudgement, Deciding, Decision, StepJudgement, StepState, TestJudgement, Used};
+use crate::judge::{CriterionJudgement, Decision, StepState, TestJudgement, Used};
 use crate::quantity::format_interval;
-use crate::reasoning::stops::stops_phrase;
-use crate::reasoning::value::{
-    basis_phrase, evidence_of, limit_phrase, listed, origin_phrase, test_clause, titles, value_phrase,
-};
+use crate::reasoning::sentence::sentence;
+use crate::reasoning::row::deciding_phrase;
+use crate::reasoning::value::{evidence_of, limit_phrase, origin_phrase};
 use crate::reasoning::{Book, Told, verdict_text};
-use crate::rules::{Checked, Criterion, Step, Test, Weight};
+use crate::rules::{Checked, Criterion, Test};
 
 /// What the Reasoning sheet says of one criterion.
 #[derive(Debug, Clone, PartialEq, Default)]
@@ -62,11 +61,7 @@ pub fn criterion_line(book: Book, criterion: &Criterion, judged: &CriterionJudge
 }
 
 fn would_settle(judged: &CriterionJudgement) -> String {
-    match &judged.deciding {
-        Some(Deciding::Data(subjects)) => listed(&titles(subjects.iter().copied())),
-        Some(Deciding::ExpertJudgement) => "expert judgement".to_owned(),
-        None => String::new(),
-    }
+    judged.deciding.as_ref().map_or(String::new(), deciding_phrase)
 }
 
 fn fill_value(line: &mut Line, told: Told, used: &Used) {
@@ -76,7 +71,7 @@ fn fill_value(line: &mut Line, told: Told, used: &Used) {
     line.chance = used.chance;
     if let Some(evidence) = evidence_of(told, used) {
         line.sd = evidence.sd;
-        line.basis = basis_phrase(evidence.basis).to_owned();
+        line.basis = evidence.basis.word().to_owned();
         line.origin = origin_phrase(told, evidence);
     }
 }
@@ -136,286 +131,4 @@ fn cautions(told: Told, judged: &CriterionJudgement) -> String {
         }
     }
     ids.join(", ")
-}
-
-fn sentence(book: Book, criterion: &Criterion, judged: &CriterionJudgement) -> String {
-    let mut sentences = match judged.decision {
-        Decision::In(step) => decided(book, criterion, judged, step, "Points to"),
-        Decision::Out(step) => decided(book, criterion, judged, step, "Points away from"),
-        Decision::Open => open(book.told, criterion, judged),
-        Decision::Assess => vec![criterion.assess.clone().unwrap_or_default()],
-        Decision::OutOfScope(caution) => {
-            let caution = book.told.rules.cautions.get(caution);
-            vec![format!(
-                "{} does not cover it: {}",
-                book.rulebook.short,
-                caution.map_or("", |caution| caution.sentence.as_str())
-            )]
-        }
-        Decision::Rating => vec![rating(book.told, criterion, judged)],
-    };
-    sentences.extend(supporting(book.told, criterion, judged));
-    let text: Vec<String> = sentences.into_iter().map(|sentence| closed(&sentence)).collect();
-    text.join(" ")
-}
-
-/// A sentence with its capital and its full stop.
-fn closed(sentence: &str) -> String {
-    let sentence = sentence.trim();
-    let mut characters = sentence.chars();
-    // Names such as `log Kow` keep their small letter, which is how the trade writes them.
-    let keeps_small = ["log ", "pKa"].iter().any(|start| sentence.starts_with(start));
-    let capital = match characters.next() {
-        Some(first) if !keeps_small => first.to_uppercase().chain(characters).collect(),
-        Some(_) | None => sentence.to_owned(),
-    };
-    if capital.ends_with(['.', '!', '?']) {
-        capital
-    } else {
-        format!("{capital}.")
-    }
-}
-
-fn decided(
-    book: Book,
-    criterion: &Criterion,
-    judged: &CriterionJudgement,
-    step: usize,
-    direction: &str,
-) -> Vec<String> {
-    let (Some(rule), Some(came_out)) = (criterion.steps.get(step), judged.steps.get(step)) else {
-        return Vec::new();
-    };
-    let clauses = clauses(book.told, rule, came_out);
-    let mut sentences = vec![format!(
-        "{direction} {} because {}",
-        criterion.id,
-        listed(&clauses)
-    )];
-    sentences.extend(margin(came_out));
-    if came_out.closeness == crate::judge::Closeness::CloseCall {
-        sentences.push(
-            "A close call: the limit lies inside the value's range or within one standard deviation".into(),
-        );
-    }
-    sentences.extend(weight_remark(book, rule, came_out));
-    sentences.extend(before(book.told, criterion, judged, step));
-    sentences
-}
-
-fn clauses(told: Told, rule: &Step, came_out: &StepJudgement) -> Vec<String> {
-    came_out
-        .by
-        .iter()
-        .filter_map(|index| {
-            Some(test_clause(
-                told,
-                rule.tests.get(*index)?,
-                came_out.tests.get(*index)?,
-            ))
-        })
-        .collect()
-}
-
-/// How far, and how sure, where a single value decided.
-fn margin(came_out: &StepJudgement) -> Option<String> {
-    let [only] = came_out.by.as_slice() else {
-        return None;
-    };
-    let used = came_out.tests.get(*only)?.used.first()?;
-    let margin = used.margin?;
-    let chance = used.chance.map(|chance| {
-        format!(
-            "; given its error, the chance that the value lies beyond the limit is {} %",
-            percent(chance)
-        )
-    });
-    Some(format!(
-        "Distance from the limit: {} log units{}",
-        signed(margin),
-        chance.unwrap_or_default()
-    ))
-}
-
-fn percent(chance: f64) -> String {
-    let percent = chance * 100.0;
-    if percent < 1.0 {
-        "below 1".to_owned()
-    } else if percent > 99.0 {
-        "above 99".to_owned()
-    } else {
-        format!("{percent:.0}")
-    }
-}
-
-fn signed(margin: f64) -> String {
-    format!("{margin:+.2}").replace('-', "\u{2212}")
-}
-
-/// Why the words are no stronger than they are.
-fn weight_remark(book: Book, rule: &Step, came_out: &StepJudgement) -> Option<String> {
-    let carried = came_out
-        .by
-        .iter()
-        .filter_map(|index| came_out.tests.get(*index))
-        .any(|test| test.carries == crate::judge::Carries::Definitive);
-    match rule.weight {
-        Weight::Definitive if book.rulebook.strongest != Weight::Definitive => Some(format!(
-            "{} leaves the decision to a review, so this is a screening result",
-            book.rulebook.short
-        )),
-        Weight::Definitive if !carried => Some(
-            "A screening result, since the value is not said to be measured in the way the criterion asks"
-                .into(),
-        ),
-        Weight::Screening => Some("A screening result".into()),
-        Weight::Definitive | Weight::Concern | Weight::Supporting => None,
-    }
-}
-
-/// What earlier steps came to.
-fn before(told: Told, criterion: &Criterion, judged: &CriterionJudgement, deciding: usize) -> Vec<String> {
-    let mut sentences = Vec::new();
-    for (index, (rule, came_out)) in criterion
-        .steps
-        .iter()
-        .zip(&judged.steps)
-        .enumerate()
-        .take(deciding)
-    {
-        if rule.weight <= Weight::Concern {
-            continue;
-        }
-        sentences.extend(passed_over(told, criterion, judged, index, rule, came_out));
-    }
-    sentences
-}
-
-fn passed_over(
-    told: Told,
-    criterion: &Criterion,
-    judged: &CriterionJudgement,
-    index: usize,
-    rule: &Step,
-    came_out: &StepJudgement,
-) -> Option<String> {
-    if let Some(stopped) = judged.stopped.iter().find(|clear| clear.step == index) {
-        let clauses = listed(&clauses(told, rule, came_out));
-        return Some(format!(
-            "{clauses}, but {}",
-            stops_phrase(told, criterion, judged, stopped)
-        ));
-    }
-    let missing = || {
-        listed(&titles(
-            came_out
-                .by
-                .iter()
-                .filter_map(|test| rule.tests.get(*test))
-                .map(|test| test.subject),
-        ))
-    };
-    match came_out.state {
-        StepState::Empty => {
-            let asked = listed(&titles(rule.tests.iter().map(|test| test.subject)));
-            Some(format!(
-                "No {asked} in the inventory, which does not mean that none exists"
-            ))
-        }
-        StepState::Partial => {
-            let known: Vec<String> = rule
-                .tests
-                .iter()
-                .zip(&came_out.tests)
-                .filter(|(_, test)| !test.used.is_empty() || test.answer.is_some())
-                .map(|(rule, test)| test_clause(told, rule, test))
-                .collect();
-            Some(format!("{}, but {} is missing", listed(&known), missing()))
-        }
-        StepState::Undecided => Some(listed(&clauses(told, rule, came_out))),
-        StepState::Clear | StepState::Fired | StepState::Skipped => None,
-    }
-}
-
-fn open(told: Told, criterion: &Criterion, judged: &CriterionJudgement) -> Vec<String> {
-    let mut sentences = Vec::new();
-    for (index, (rule, came_out)) in criterion.steps.iter().zip(&judged.steps).enumerate() {
-        if rule.weight > Weight::Concern {
-            sentences.extend(passed_over(told, criterion, judged, index, rule, came_out));
-        }
-    }
-    let tail = match &judged.deciding {
-        Some(Deciding::Data(subjects)) => {
-            format!(
-                "A measured {} would settle it",
-                listed(&titles(subjects.iter().copied()))
-            )
-        }
-        Some(Deciding::ExpertJudgement) => {
-            "No single set of data settles it by number; a qualified person has to assess it".to_owned()
-        }
-        None => String::new(),
-    };
-    if !tail.is_empty() {
-        sentences.push(tail);
-    }
-    sentences
-}
-
-fn rating(told: Told, criterion: &Criterion, judged: &CriterionJudgement) -> String {
-    match &judged.rated {
-        Some(rated) => {
-            let ratings: Vec<String> = judged
-                .ratings
-                .iter()
-                .filter_map(|index| criterion.bands.get(*index))
-                .map(|band| format!("{} ({})", band.rating, band.test.limit_text))
-                .collect();
-            format!("{} falls in {}", value_phrase(told, rated), listed(&ratings))
-        }
-        None => {
-            let asked = titles(criterion.bands.iter().map(|band| band.test.subject));
-            format!("No {} in the inventory", listed(&asked))
-        }
-    }
-}
-
-/// What concern and supporting steps add, where they say something.
-fn supporting(told: Told, criterion: &Criterion, judged: &CriterionJudgement) -> Vec<String> {
-    criterion
-        .steps
-        .iter()
-        .zip(&judged.steps)
-        .filter(|(rule, came_out)| rule.weight <= Weight::Concern && came_out.state == StepState::Fired)
-        .map(|(rule, came_out)| {
-            let label = match rule.weight {
-                Weight::Concern => "Of concern, without deciding",
-                Weight::Supporting | Weight::Screening | Weight::Definitive => "Beside it, without deciding",
-            };
-            format!("{label}: {}", listed(&clauses(told, rule, came_out)))
-        })
-        .collect()
-}
-
-/// A number for a cell, shortened as sentences shorten it.
-#[cfg(test)]
-mod tests {
-    use super::{closed, percent, signed};
-
-    #[test]
-    fn chances_near_the_ends_are_not_shown_as_certain() {
-        assert_eq!(percent(0.004), "below 1");
-        assert_eq!(percent(0.996), "above 99");
-        assert_eq!(percent(0.369), "37");
-    }
-
-    #[test]
-    fn sentences_start_and_end_as_sentences_do() {
-        assert_eq!(closed("no BCF in the inventory"), "No BCF in the inventory.");
-        assert_eq!(
-            closed("log Kow 5.2 is above the limit"),
-            "log Kow 5.2 is above the limit."
-        );
-        assert_eq!(signed(-0.25), "\u{2212}0.25");
-    }
 }

@@ -1,11 +1,12 @@
 //! Verdict cells, the headline of a rulebook and the one sentence beside it.
 
 use crate::judge::{
-    Closeness, CriterionJudgement, Deciding, Decision, DesignationJudgement, Headline, Verdict,
+    Closeness, CriterionJudgement, Decision, DesignationJudgement, Headline, StepJudgement, Verdict,
 };
-use crate::reasoning::value::{listed, test_brief, titles};
+use crate::reasoning::sentence::deciding_sentence;
+use crate::reasoning::value::{listed, telling_tests, test_brief};
 use crate::reasoning::{Book, Told};
-use crate::rules::{Criterion, Designation, DesignationPart};
+use crate::rules::{Criterion, Designation, DesignationPart, Step};
 
 /// The words of a criterion's cell: the verdict, or the ratings its value may have.
 pub fn verdict_text(criterion: &Criterion, judged: &CriterionJudgement) -> String {
@@ -116,23 +117,25 @@ fn designation_why(book: Book, index: usize) -> String {
         return format!("{} as stated in the inventory by {code}", rule.id);
     }
     if judged.verdict == Verdict::OutOfScope {
-        return out_of_scope(book);
+        return scope_caution(book).map_or(String::new(), |caution| out_of_scope(book, caution));
     }
     let parts: Vec<String> = rule.parts.iter().map(|part| part_brief(book, *part)).collect();
     parts.join("; ")
 }
 
-fn out_of_scope(book: Book) -> String {
-    let caution = book
-        .judged
-        .criteria
-        .iter()
-        .find_map(|criterion| match criterion.decision {
-            Decision::OutOfScope(caution) => book.told.rules.cautions.get(caution),
-            Decision::In(_) | Decision::Out(_) | Decision::Open | Decision::Assess | Decision::Rating => None,
-        });
-    let sentence = caution.map_or("", |caution| caution.sentence.as_str());
-    format!("{} does not cover it: {sentence}", book.rulebook.short)
+/// Which caution puts the substance outside the instrument, and what raised it.
+pub(crate) fn out_of_scope(book: Book, caution: usize) -> String {
+    let raised = book.told.judgement.cautions.iter().find(|raised| raised.caution == caution);
+    let id = book.told.rules.cautions.get(caution).map_or("", |caution| caution.id.as_str());
+    let reason = raised.map_or("", |raised| raised.reason.as_str());
+    format!("Outside the scope of {} by the caution `{id}`: {reason}", book.rulebook.short)
+}
+
+fn scope_caution(book: Book) -> Option<usize> {
+    book.judged.criteria.iter().find_map(|criterion| match criterion.decision {
+        Decision::OutOfScope(caution) => Some(caution),
+        Decision::In(_) | Decision::Out(_) | Decision::Open | Decision::Assess | Decision::Rating => None,
+    })
 }
 
 fn part_brief(book: Book, part: DesignationPart) -> String {
@@ -148,45 +151,35 @@ fn part_brief(book: Book, part: DesignationPart) -> String {
     }
 }
 
-/// `B fulfilled, BCF 6300 L/kg (measured) > 2000 L/kg`.
+/// `B fulfilled: BCF 6300 L/kg (measured), above 2000 L/kg`.
 fn criterion_brief(told: Told, rule: &Criterion, judged: &CriterionJudgement) -> String {
     let words = verdict_text(rule, judged);
     let reason = match judged.decision {
         Decision::In(step) | Decision::Out(step) => {
-            let briefs = rule
-                .steps
-                .get(step)
-                .zip(judged.steps.get(step))
-                .map(|(rule, came_out)| {
-                    came_out
-                        .by
-                        .iter()
-                        .filter_map(|index| {
-                            Some(test_brief(
-                                told,
-                                rule.tests.get(*index)?,
-                                came_out.tests.get(*index)?,
-                            ))
-                        })
-                        .collect::<Vec<_>>()
-                });
-            listed(&briefs.unwrap_or_default())
+            rule.steps.get(step).zip(judged.steps.get(step)).map_or(String::new(), |(rule, came_out)| {
+                step_brief(told, rule, came_out)
+            })
         }
-        Decision::Open => match &judged.deciding {
-            Some(Deciding::Data(subjects)) => {
-                format!(
-                    "a measured {} would settle it",
-                    listed(&titles(subjects.iter().copied()))
-                )
-            }
-            Some(Deciding::ExpertJudgement) | None => "expert judgement needed".to_owned(),
-        },
+        Decision::Open => judged.deciding.as_ref().map_or(String::new(), deciding_sentence),
         Decision::Assess => "no number settles it".to_owned(),
         Decision::OutOfScope(_) | Decision::Rating => String::new(),
     };
     if reason.is_empty() {
         format!("{} {words}", rule.id)
     } else {
-        format!("{} {words}, {reason}", rule.id)
+        format!("{} {words}: {reason}", rule.id)
+    }
+}
+
+/// The first reasons of a step; the Reasoning sheet has them all.
+fn step_brief(told: Told, rule: &Step, came_out: &StepJudgement) -> String {
+    const REASONS: usize = 2;
+    let briefs: Vec<String> = telling_tests(rule, came_out)
+        .into_iter()
+        .map(|(test, judged)| test_brief(told, test, judged))
+        .collect();
+    match briefs.get(..REASONS) {
+        Some(first) if briefs.len() > REASONS => format!("{} and {} more", first.join(", "), briefs.len() - REASONS),
+        Some(_) | None => listed(&briefs),
     }
 }

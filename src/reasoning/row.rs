@@ -3,7 +3,7 @@
 use crate::judge::{Deciding, Decision, Verdict};
 use crate::quantity::{Unit, format_interval};
 use crate::reasoning::Told;
-use crate::reasoning::value::{basis_phrase, listed, titles};
+use crate::reasoning::value::{listed, titles};
 
 /// The three log Kow cells: value, SD, basis. Empty where no log Kow is known.
 #[derive(Debug, Clone, PartialEq, Default)]
@@ -32,7 +32,7 @@ pub fn log_kow_cells(told: Told) -> LogKowCells {
             format_interval(evidence.interval, Unit::One)
         },
         sd: evidence.sd,
-        basis: basis_phrase(evidence.basis).to_owned(),
+        basis: evidence.basis.word().to_owned(),
     }
 }
 
@@ -64,10 +64,7 @@ pub fn deciding_text(told: Told) -> String {
             if !open || matches!(judged.decision, Decision::Assess | Decision::Rating) {
                 continue;
             }
-            let data = match &judged.deciding {
-                Some(Deciding::Data(subjects)) => listed(&titles(subjects.iter().copied())),
-                Some(Deciding::ExpertJudgement) | None => "expert judgement".to_owned(),
-            };
+            let data = judged.deciding.as_ref().map_or(String::new(), deciding_phrase);
             let name = format!("{} {}", book.rulebook.short, criterion.id);
             match groups.iter_mut().find(|(known, _)| *known == data) {
                 Some((_, names)) => names.push(name),
@@ -80,4 +77,13 @@ pub fn deciding_text(told: Told) -> String {
         .map(|(data, names)| format!("{data} ({})", names.join(", ")))
         .collect();
     parts.join("; ")
+}
+
+/// The data that would settle an open criterion, for a cell.
+pub(crate) fn deciding_phrase(deciding: &Deciding) -> String {
+    match deciding {
+        Deciding::Data(subjects) => listed(&titles(subjects.iter().copied())),
+        Deciding::Perhaps(subjects) => format!("perhaps {}", titles(subjects.iter().copied()).join(" or ")),
+        Deciding::ExpertJudgement => "expert judgement".to_owned(),
+    }
 }

@@ -71,17 +71,8 @@ fn guard_brief(told: Told, criterion: &Criterion, judged: &CriterionJudgement, s
     let (Some(rule), Some(came_out)) = (criterion.steps.get(step), judged.steps.get(step)) else {
         return String::new();
     };
-    let briefs: Vec<String> = came_out
-        .by
-        .iter()
-        .filter_map(|index| {
-            Some(test_brief(
-                told,
-                rule.tests.get(*index)?,
-                came_out.tests.get(*index)?,
-            ))
-        })
-        .collect();
+    let briefs: Vec<String> =
+        telling_tests(rule, came_out).into_iter().map(|(test, judged)| test_brief(told, test, judged)).collect();
     listed(&briefs)
 }
 
