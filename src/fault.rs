@@ -8,7 +8,7 @@ mod rule;
 
 pub use cell::{CellFault, CellFaultKind};
 pub use file::{FileFault, FileKind, SheetFault};
-pub use rule::{Drawing, OwnerKind, RuleFault, RuleFaults, RuleMistake};
+pub use rule::{Drawing, OwnerKind, RuleFault, RuleFaults, RuleMistake, unknown_rulebook};
 
 /// Why nothing could be written.
 #[derive(Debug, thiserror::Error)]

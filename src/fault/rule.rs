@@ -12,6 +12,7 @@ use std::sync::Arc;
 
 use annotate_snippets::{AnnotationKind, Group, Level, Origin, Renderer, Snippet};
 
+use super::{Refusal, nearest};
 pub use mistake::{OwnerKind, RuleMistake};
 
 /// One fault of a rule file.
@@ -110,4 +111,15 @@ impl fmt::Display for RuleFaults {
     fn fmt(&self, formatter: &mut fmt::Formatter<'_>) -> fmt::Result {
         formatter.write_str(&self.draw(Drawing::Plain))
     }
+}
+
+/// The answer to a choice that is neither a built-in rulebook nor a file or folder.
+pub fn unknown_rulebook(choice: &str, ids: &[&str]) -> Refusal {
+    let hint =
+        nearest(choice, ids.iter().copied()).map_or_else(String::new, |id| format!(" Did you mean `{id}`?"));
+    let known: Vec<String> = ids.iter().map(|id| format!("`{id}`")).collect();
+    let known = known.join(", ");
+    Refusal::Usage(format!(
+        "`{choice}` is no rulebook, file or folder.{hint} Built in are {known}; `all` takes them all."
+    ))
 }

@@ -23,11 +23,11 @@ type Atom<'formula> = (&'formula str, u32);
 
 /// No carbon, or a carbonate, hydrogencarbonate, cyanide, cyanate, thiocyanate, carbide or oxide of carbon.
 pub(super) fn is_inorganic(formula: &str) -> bool {
-    let formula = formula.trim();
-    if is_perhaps_a_word(formula) {
+    let formula = in_plain_letters(formula);
+    if is_perhaps_a_word(&formula) {
         return false;
     }
-    let Some(atoms) = read_atoms(formula) else {
+    let Some(atoms) = read_atoms(&formula) else {
         return false;
     };
     let mut counts: BTreeMap<&str, u32> = BTreeMap::new();
@@ -68,6 +68,16 @@ fn holds_only_anions(atoms: &[Atom<'_>]) -> bool {
         ("C", _) => false,
         _ => true,
     })
+}
+
+/// Subscripts as digits, and the `x` or `×` before the water of a hydrate as a dot.
+fn in_plain_letters(formula: &str) -> String {
+    let plain = |letter: char| match u32::from(letter).checked_sub(u32::from('₀')) {
+        Some(digit @ 0..=9) => char::from_digit(digit, 10).unwrap_or(letter),
+        Some(_) | None => letter,
+    };
+    let digits: String = formula.trim().chars().map(plain).collect();
+    digits.replace(" x ", "·").replace('×', "·")
 }
 
 fn is_perhaps_a_word(formula: &str) -> bool {
@@ -135,6 +145,9 @@ mod tests {
             "H2O",
             "CuSO4·5H2O",
             "CuSO4.5H2O",
+            "CuSO4 x 5 H2O",
+            "CaCO₃",
+            "MgSO₄ × 7 H₂O",
             "Na2CO3",
             "CNa2O3",
             "CHNaO3",
@@ -171,6 +184,8 @@ mod tests {
         for formula in [
             "C2H3NaO2",
             "CH3COONa",
+            "C₂H₃NaO₂",
+            "Mg(C2H3O2)2 x 4 H2O",
             "CHNaO2",
             "C2Na2O4",
             "Na2C2O4",

@@ -9,7 +9,7 @@ use super::file::RuleSource;
 use super::folder::{CAUTIONS_FILE, RELATIONS_FILE, rulebook_files};
 use super::validate::{read_cautions, read_rulebook};
 use super::{Caution, RuleSet, RuleText, Rulebook};
-use crate::fault::{Refusal, RuleFault, RuleFaults, RuleMistake, nearest};
+use crate::fault::{Refusal, RuleFault, RuleFaults, RuleMistake, unknown_rulebook};
 use crate::relations::read_relations;
 
 /// The rule files of a run, not read yet for what they mean.
@@ -62,7 +62,7 @@ impl RuleSources {
                     Err(found) => faults.extend(found.0),
                 }
             } else {
-                return Err(Refusal::Usage(unknown_choice(choice)));
+                return Err(unknown_rulebook(choice, &BUILT_IN.map(|(id, _)| id)));
             }
         }
         if faults.is_empty() {
@@ -212,13 +212,4 @@ fn looks_like_a_path(choice: &str) -> bool {
         .extension()
         .is_some_and(|extension| extension.eq_ignore_ascii_case("toml"));
     is_toml || choice.contains(['/', '\\'])
-}
-
-fn unknown_choice(choice: &str) -> String {
-    let ids = BUILT_IN.map(|(id, _)| id);
-    let hint = nearest(choice, ids).map_or_else(String::new, |id| format!(" Did you mean `{id}`?"));
-    format!(
-        "`{choice}` is no rulebook, file or folder.{hint} Built in are {}; `all` takes them all.",
-        ids.map(|id| format!("`{id}`")).join(", ")
-    )
 }

@@ -80,6 +80,7 @@ mistakes! {
     a_limit_with_a_unit_of_something_else: "above = \"2000 L/kg\"" => "above = \"2000 d\"";
     a_limit_with_an_unknown_unit: "above = \"2000 L/kg\"" => "above = \"2000 furlong\"";
     a_limit_with_a_sign: "above = \"2000 L/kg\"" => "above = \"> 2000 L/kg\"";
+    a_limit_with_a_comma: "above = \"2000 L/kg\"" => "above = \"2,000 L/kg\"";
     a_negative_half_life: "above = \"40 d\"" => "above = \"-40 d\"";
     a_limit_without_end: "above = 4.5" => "above = inf";
     a_test_without_limit: "above = 4.5\n" => "";

@@ -9,6 +9,7 @@
 
 mod cautions;
 mod faults;
+mod keys;
 mod limits;
 mod loading;
 mod relations;

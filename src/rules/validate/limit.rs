@@ -153,57 +153,69 @@ fn is_hazard_code(text: &str) -> bool {
 
 /// The number of a written quantity in the canonical unit.
 pub(crate) fn quantity(section: &Section<'_>, written: &Located<Scalar>, measured: Measured) -> Option<f64> {
-    let Measured { title, dimension, .. } = measured;
-    let unit = dimension.canonical().symbol();
-    let found = written_text(&written.value);
-    let bare = match &written.value {
-        Scalar::Number(number, _) => Some(*number),
-        Scalar::Text(text) => text.trim().parse().ok(),
-    };
-    let number = match (bare, &written.value) {
-        (Some(number), _) if dimension == Dimension::Dimensionless => Ok(number),
-        (Some(_), _) => {
-            let number = found.trim().to_owned();
-            Err(RuleMistake::NoUnit {
-                number,
-                property: title,
-                unit,
-            })
-        }
-        (None, Scalar::Text(text)) => parse_limit(text, dimension).map_err(|fault| match fault {
-            QuantityFault::WrongDimension(_) | QuantityFault::UnknownUnit(_) => RuleMistake::WrongUnit {
-                found: found.clone(),
-                property: title,
-                unit,
-            },
-            QuantityFault::NoValue
-            | QuantityFault::NoNumber
-            | QuantityFault::NeedsMolarMass
+    measured
+        .number(&written.value)
+        .map_err(|mistake| section.report(written.span.clone(), mistake))
+        .ok()
+}
+
+impl Measured {
+    fn number(self, written: &Scalar) -> Result<f64, RuleMistake> {
+        let found = written_text(written);
+        let (property, unit) = (self.title, self.dimension.canonical().symbol());
+        let bare = match written {
+            Scalar::Number(number, _) => Some(*number),
+            Scalar::Text(text) => text.trim().parse().ok(),
+        };
+        let number = match bare {
+            Some(number) if self.dimension == Dimension::Dimensionless => number,
+            Some(_) => {
+                return Err(RuleMistake::NoUnit {
+                    number: found.trim().to_owned(),
+                    property,
+                    unit,
+                });
+            }
+            // One plain number: no qualifier, no range, and no comma, which groups here and divides there.
+            None if found.contains(['<', '>', '≤', '≥', '~', '±', ',']) => {
+                return Err(RuleMistake::NotAQuantity {
+                    found,
+                    property,
+                    unit,
+                });
+            }
+            None => parse_limit(&found, self.dimension).map_err(|fault| match fault {
+                QuantityFault::WrongDimension(_) | QuantityFault::UnknownUnit(_) => {
+                    let found = found.clone();
+                    RuleMistake::WrongUnit {
+                        found,
+                        property,
+                        unit,
+                    }
+                }
+                QuantityFault::NoValue
+                | QuantityFault::NoNumber
+                | QuantityFault::NeedsMolarMass
             | QuantityFault::WordOnly
             | QuantityFault::BadNumber
             | QuantityFault::SeveralValues
             | QuantityFault::TooLong
-            | QuantityFault::BadRange => RuleMistake::NotAQuantity {
-                found: found.clone(),
-                property: title,
-                unit,
-            },
-        }),
-        (None, Scalar::Number(..)) => return None,
-    };
-    let number = number.and_then(|number| {
-        if number.is_finite() && (number >= 0.0 || measured.may_be_negative) {
+                | QuantityFault::BadRange => {
+                    let found = found.clone();
+                    RuleMistake::NotAQuantity {
+                        found,
+                        property,
+                        unit,
+                    }
+                }
+            })?,
+        };
+        if number.is_finite() && (number >= 0.0 || self.may_be_negative) {
             Ok(number)
         } else {
-            Err(RuleMistake::Impossible {
-                found,
-                property: title,
-            })
+            Err(RuleMistake::Impossible { found, property })
         }
-    });
-    number
-        .map_err(|mistake| section.report(written.span.clone(), mistake))
-        .ok()
+    }
 }
 
 /// How a limit for the subject is written.
