@@ -8,7 +8,7 @@ use crate::report::{
     Entry, EntryContent, REASONING_COLUMNS, ReasoningMode, RunFacts, SheetFacts, Table, record_head,
     rulebooks_table, run_record_table,
 };
-use crate::rules::RuleSet;
+use crate::rules::{RuleSet, Weight};
 use crate::run::judged_row::{Added, JudgedRow};
 use crate::run::plan::{Plan, SheetPlan};
 use crate::run::{ScreenSettings, Summary};
@@ -288,24 +288,29 @@ fn column_remarks(plan: &Plan) -> Vec<(String, String)> {
         .collect()
 }
 
-/// Tests that found no value in any row, so that a rule nobody's data reach does not go unnoticed.
+/// Properties that deciding tests ask for and no row had, with the criteria that ask, so that a rule nobody's data
+/// reach does not go unnoticed.
 fn unreached(rules: &RuleSet, reached: &[bool]) -> Vec<String> {
     let tests = rules.rulebooks.iter().flat_map(|rulebook| {
         rulebook.criteria.iter().flat_map(move |criterion| {
             criterion.steps.iter().flat_map(move |step| {
-                step.tests
-                    .iter()
-                    .map(move |test| format!("{} {}: {}", rulebook.short, criterion.id, test.subject.title()))
+                step.tests.iter().map(move |test| (step.weight, test, format!("{} {}", rulebook.short, criterion.id)))
             })
         })
     });
-    let mut names: Vec<String> = Vec::new();
-    for (name, reached) in tests.zip(reached) {
-        if !reached && !names.contains(&name) {
-            names.push(name);
+    let mut asked: Vec<(&'static str, Vec<String>)> = Vec::new();
+    for ((weight, test, criterion), reached) in tests.zip(reached) {
+        if *reached || weight == Weight::Supporting {
+            continue;
+        }
+        let property = test.subject.title();
+        match asked.iter_mut().find(|(known, _)| *known == property) {
+            Some((_, criteria)) if criteria.contains(&criterion) => {}
+            Some((_, criteria)) => criteria.push(criterion),
+            None => asked.push((property, vec![criterion])),
         }
     }
-    names
+    asked.into_iter().map(|(property, criteria)| format!("{property} ({})", criteria.join(", "))).collect()
 }
 
 fn span(sheet: &SheetPlan) -> Option<(String, u32, u16, Vec<String>)> {

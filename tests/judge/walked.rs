@@ -104,7 +104,6 @@ fn a_polymer_clears_nothing_whatever_its_data_say() {
     for (book, criterion) in [
         ("REACH", "P"),
         ("REACH", "B"),
-        ("CLP", "M"),
         ("STOCKHOLM", "B"),
         ("CANADA", "P"),
         ("CANADA", "B"),
