@@ -157,12 +157,14 @@ fn a_sheet_that_unpacks_to_far_more_than_it_takes_is_refused() {
 fn parts_that_unpack_too_far_together_are_refused() {
     let (_folder, path) = place("a.xlsx");
     RawBook::with_rows("").write(&path).unwrap();
-    let limits = super::Limits {
-        total: 700,
-        ..super::Limits::USUAL
-    };
-    let said = super::open_within(&path, limits).err().unwrap().to_string();
-    assert!(said.contains("unpacks to over 0 MB"), "{said}");
+    let usual = super::Limits::USUAL;
+    for limits in [
+        super::Limits { total: 700, ..usual },
+        super::Limits { held: 700, ..usual },
+    ] {
+        let said = super::open_within(&path, limits).err().unwrap().to_string();
+        assert!(said.contains("unpacks to over 0 MB"), "{said}");
+    }
     assert!(super::open_within(&path, super::Limits::USUAL).is_ok());
 }
 
@@ -298,6 +300,10 @@ fn a_workbook_that_contradicts_itself_is_refused() {
             "stores its rows in two places",
         ),
         (RawBook::with_sheet("<sheetData><row>"), "cannot be read"),
+        (
+            RawBook::with_rows(r#"<row r="1"><c r="A1" t="n" t="s"><v>0</v></c></row>"#),
+            "has a cell that cannot be read",
+        ),
         (book().part("XL/worksheets/SHEET1.xml", ""), "is there twice"),
         (
             book().part("xl/styles.xml", r#"<!DOCTYPE x [<!ENTITY a "b">]><styleSheet/>"#),
@@ -334,6 +340,24 @@ fn an_error_value_newer_than_the_reading_library_is_kept_where_it_stands() {
             (1, 1, &CellContent::Text("x & y".to_owned())),
         ]
     );
+}
+
+#[test]
+fn an_unknown_error_value_among_cells_without_references_is_refused_since_it_would_shift_them() {
+    for rows in [
+        r#"<row><c t="e"><v>#SPILL!</v></c></row>"#,
+        r#"<row r="1"><c r="A1" t="e"><v>#SPILL!</v></c><c><v>2</v></c></row>"#,
+    ] {
+        let said = refusal_of_rows(rows);
+        assert!(said.contains("unknown error value"), "{said}");
+    }
+}
+
+#[test]
+fn an_inventory_can_be_handed_to_a_thread_that_reads() {
+    fn sendable<Whole: Send>() {}
+    sendable::<super::Inventory>();
+    sendable::<crate::workbook::AnnotatedWorkbook>();
 }
 
 #[test]
@@ -496,7 +520,8 @@ fn no_damage_to_a_sheet_makes_the_reader_panic_or_misorder_cells() {
             )
             .write(&path)
             .unwrap();
-        let Ok(rows) = open_inventory(&path).and_then(|mut inventory| inventory.first_rows(0, usize::MAX)) else {
+        let Ok(rows) = open_inventory(&path).and_then(|mut inventory| inventory.first_rows(0, usize::MAX))
+        else {
             continue;
         };
         opened += 1;

@@ -20,6 +20,13 @@ const LONGEST_TEXT: usize = 32_767;
 /// The longest note (the writing library's limit, which leaves room for an author).
 const LONGEST_NOTE: usize = 32_713;
 
+/// The width of a note's box, in pixels, and in characters of its font.
+const NOTE_WIDTH: u32 = 340;
+const NOTE_COLUMN: f64 = 52.0;
+
+/// The height of a line in a note, in pixels.
+const NOTE_LINE: u32 = 16;
+
 /// What a text that was too long ends with.
 const CUT: &str = " ... (cut)";
 
@@ -108,7 +115,11 @@ impl AnnotatedWorkbook {
 
     /// Puts a note on a cell, written or not.
     pub fn note(&mut self, sheet: SheetId, row: u32, column: u16, text: &str) -> Result<(), FileFault> {
-        let note = Note::new(shortened_to(text, LONGEST_NOTE)).add_author_prefix(false);
+        // The usual box holds a few words only.
+        let note = Note::new(shortened_to(text, LONGEST_NOTE))
+            .add_author_prefix(false)
+            .set_width(NOTE_WIDTH)
+            .set_height(NOTE_LINE * (1 + lines_of(text, NOTE_COLUMN)));
         self.on_sheet(sheet, |sheet| {
             sheet.insert_note(row, column, &note)?;
             Ok(())
