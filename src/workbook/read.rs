@@ -75,7 +75,7 @@ impl Inventory {
         &self.sheets
     }
 
-    /// The cell formats; a cell's [`StyleId`] is an index into them.
+    /// The cell formats; a cell's [`StyleId`](super::StyleId) is an index into them.
     pub fn appearances(&self) -> &[Appearance] {
         &self.appearances
     }
