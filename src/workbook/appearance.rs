@@ -1,5 +1,7 @@
 //! How a cell of the inventory looks, translated once from the reading library's terms to the writing library's.
 
+use std::borrow::Cow;
+
 use calamine::{
     Border, BorderStyle, Color, Fill, FillPattern, Font, HorizontalAlignment, NumberFormat, Style,
     TextRotation, UnderlineStyle, VerticalAlignment,
@@ -13,6 +15,15 @@ use rust_xlsxwriter::{Format, FormatAlign, FormatBorder, FormatPattern, FormatUn
 pub struct Appearance {
     format: Format,
     numbers: Numbers,
+    lines: Lines,
+}
+
+/// Whether a text runs over several lines.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
+pub(super) enum Lines {
+    #[default]
+    One,
+    Wrapped,
 }
 
 /// Whether the format says how numbers are shown.
@@ -30,11 +41,16 @@ impl Appearance {
     }
 
     /// The format to write a date with: the same, unless that would show the date as a number.
-    pub(super) fn format_for_dates(&self) -> Format {
+    pub(super) fn format_for_dates(&self) -> Cow<'_, Format> {
         match self.numbers {
-            Numbers::AsTyped => self.format.clone().set_num_format("yyyy-mm-dd"),
-            Numbers::Formatted => self.format.clone(),
+            Numbers::AsTyped => Cow::Owned(self.format.clone().set_num_format("yyyy-mm-dd")),
+            Numbers::Formatted => Cow::Borrowed(&self.format),
         }
+    }
+
+    /// Whether its text runs over several lines.
+    pub(super) fn lines(&self) -> Lines {
+        self.lines
     }
 
     /// It adds nothing to a cell without any format.
@@ -61,7 +77,15 @@ impl From<&Style> for Appearance {
         if let Some(alignment) = &style.alignment {
             format = with_alignment(format, alignment);
         }
-        Self { format, numbers }
+        let wraps = style
+            .alignment
+            .as_ref()
+            .is_some_and(|alignment| alignment.wrap_text);
+        Self {
+            format,
+            numbers,
+            lines: if wraps { Lines::Wrapped } else { Lines::One },
+        }
     }
 }
 

@@ -35,11 +35,18 @@ fn quiet_inside() {
 }
 
 fn message_of(panic: &(dyn Any + Send)) -> String {
-    panic
+    let message = panic
         .downcast_ref::<&str>()
-        .map(|message| (*message).to_owned())
-        .or_else(|| panic.downcast_ref::<String>().cloned())
-        .unwrap_or_else(|| "the library gave up".to_owned())
+        .copied()
+        .or_else(|| panic.downcast_ref::<String>().map(String::as_str))
+        .unwrap_or("the library gave up");
+    words_of_the_system(message).unwrap_or(message).to_owned()
+}
+
+/// What the system said, out of an error printed for programmers: `... message: "No space left on device" }`.
+fn words_of_the_system(message: &str) -> Option<&str> {
+    let (_, words) = message.split_once("message: \"")?;
+    words.split_once('"').map(|(words, _)| words)
 }
 
 #[cfg(test)]
@@ -51,5 +58,18 @@ mod tests {
         assert_eq!(without_panic(|| 7), Ok(7));
         let outcome: Result<(), String> = without_panic(|| panic!("no space left"));
         assert_eq!(outcome, Err("no space left".to_owned()));
+    }
+
+    #[test]
+    fn the_words_of_the_system_are_taken_out_of_an_error_for_programmers() {
+        // The number of a full disk on Linux.
+        let full = std::io::Error::from_raw_os_error(28);
+        let words = full.to_string();
+        let outcome: Result<(), String> = without_panic(|| panic!("could not write: {full:?}"));
+        assert_eq!(
+            outcome.map_err(|said| words.starts_with(&said)),
+            Err(true),
+            "{words}"
+        );
     }
 }

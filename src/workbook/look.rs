@@ -81,7 +81,7 @@ impl Looks {
     pub(super) fn new() -> Self {
         let top = || Format::new().set_align(FormatAlign::Top);
         // A step in from the edge keeps the words off the frame and off the number before them.
-        let indented = || top().set_indent(1);
+        let indented = || top().set_align(FormatAlign::Left).set_indent(1);
         let verdict = || indented().set_font_color(INK);
         let framed = |line| verdict().set_border(line).set_border_color(FRAME);
         Self {

@@ -6,12 +6,10 @@ use super::contents::Contents;
 use super::package::folded;
 
 /// A kind of part: where it is stored, and what the user calls it (one, several).
-const KINDS: [(&str, &str, &str); 10] = [
+const KINDS: [(&str, &str, &str); 8] = [
     ("xl/vbaproject.bin", "macro project", "macro projects"),
     ("xl/charts/chart", "chart", "charts"),
     ("xl/media/", "image", "images"),
-    ("xl/comments", "set of notes", "sets of notes"),
-    ("xl/threadedcomments/", "set of comments", "sets of comments"),
     ("xl/pivottables/pivottable", "pivot table", "pivot tables"),
     ("xl/slicers/", "slicer", "slicers"),
     (

@@ -19,6 +19,8 @@ use super::guard;
 pub(super) struct Limits {
     /// Bytes all parts together may unpack to.
     pub(super) total: u64,
+    /// Bytes the parts that stay in memory may unpack to: shared texts, formats and lists.
+    pub(super) held: u64,
     /// Bytes a part may unpack to for each byte it takes in the file.
     pub(super) ratio: u64,
     /// Bytes from which the ratio counts; below, a part is harmless whatever its ratio.
@@ -30,6 +32,7 @@ impl Limits {
     /// to exhaust memory goes beyond these (our own choice, from sheets we made).
     pub(super) const USUAL: Self = Self {
         total: 4 << 30,
+        held: 1 << 30,
         ratio: 250,
         ratio_from: 16 << 20,
     };
@@ -42,6 +45,7 @@ pub(super) struct Package {
     /// The names of the parts by their lower-case form with forward slashes.
     parts: BTreeMap<String, String>,
     limits: Limits,
+    allowed: u64,
     unpacked: u64,
 }
 
@@ -71,8 +75,14 @@ impl Package {
             archive,
             parts,
             limits,
+            allowed: limits.held,
             unpacked: 0,
         })
+    }
+
+    /// From here on sheets are read, which pass by and are not held.
+    pub(super) fn allow_sheets(&mut self) {
+        self.allowed = self.limits.total;
     }
 
     /// The names of all parts, as they are stored.
@@ -129,6 +139,7 @@ impl Package {
             unpacked: 0,
             packed,
             limits: self.limits,
+            allowed: self.allowed,
             before: self.unpacked,
             over: None,
         };
@@ -227,6 +238,7 @@ struct Counted<R> {
     unpacked: u64,
     packed: u64,
     limits: Limits,
+    allowed: u64,
     before: u64,
     over: Option<(String, String)>,
 }
@@ -238,8 +250,8 @@ impl<R: Read> Read for Counted<R> {
             .unpacked
             .saturating_add(u64::try_from(count).unwrap_or(u64::MAX));
         let total = self.before.saturating_add(self.unpacked);
-        if total > self.limits.total {
-            self.over = Some((format!("over {}", megabytes(total)), megabytes(self.limits.total)));
+        if total > self.allowed {
+            self.over = Some((format!("over {}", megabytes(total)), megabytes(self.allowed)));
         } else if self.unpacked > self.limits.ratio_from
             && self.unpacked > self.packed.saturating_mul(self.limits.ratio)
         {

@@ -44,6 +44,7 @@ pub fn open_inventory(path: &Path) -> Result<Inventory, FileFault> {
 fn open_within(path: &Path, limits: Limits) -> Result<Inventory, FileFault> {
     let mut package = Package::open(path, limits)?;
     let contents = read_contents(&mut package)?;
+    package.allow_sheets();
     let mut sheets = Vec::new();
     for entry in &contents.sheets {
         sheets.push(survey_sheet(&mut package, entry, contents.shared_texts)?);
@@ -74,7 +75,7 @@ impl Inventory {
         &self.sheets
     }
 
-    /// The cell formats; a cell's [`StyleId`] is an index into them.
+    /// The cell formats; a cell's [`StyleId`](super::StyleId) is an index into them.
     pub fn appearances(&self) -> &[Appearance] {
         &self.appearances
     }

@@ -3,6 +3,7 @@
 
 mod cells;
 mod tail;
+mod value;
 
 use std::collections::BTreeMap;
 use std::sync::Arc;

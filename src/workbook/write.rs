@@ -1,38 +1,28 @@
 //! Writes the annotated workbook, row by row and in little memory. It decides nothing about what is written.
 
+mod cells;
+mod height;
 mod names;
 mod output;
 #[cfg(test)]
 mod tests;
 
+use std::collections::BTreeMap;
 use std::path::Path;
 
-use rust_xlsxwriter::{DocProperties, ExcelDateTime, Format, Note, Url, Workbook, Worksheet, XlsxError};
+use rust_xlsxwriter::{DocProperties, ExcelDateTime, Workbook, Worksheet, XlsxError};
 
 use crate::fault::FileFault;
 use crate::quantity::Date;
 
 use super::appearance::Appearance;
 use super::caught::without_panic;
-use super::content::{Cell, CellContent, Row};
-use super::look::{Look, Looks};
-use super::place::CellRef;
+use super::look::Looks;
 use super::survey::{ColumnLayout, Visibility};
-use names::cut;
+pub use cells::{Target, Value};
+use height::USUAL_WIDTH;
 pub use names::free_sheet_name;
 use output::Output;
-
-/// The longest text of a cell, in UTF-16 units (the format's limit).
-const LONGEST_TEXT: usize = 32_767;
-
-/// The longest note (the writing library's limit, which leaves room for an author).
-const LONGEST_NOTE: usize = 32_713;
-
-/// What a text that was too long ends with.
-const CUT: &str = " ... (cut)";
-
-/// More links on a sheet a spreadsheet program removes as damage (65,530); the rest is written as plain text.
-const MOST_LINKS: u32 = 65_000;
 
 /// Compression: against the usual 6, half the time for 15 % more size (measured on an inventory).
 const COMPRESSION: u8 = 3;
@@ -50,33 +40,6 @@ pub enum Overwrite {
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
 pub struct SheetId(usize);
 
-/// What stands in one of our cells.
-#[derive(Debug, Clone, Copy, PartialEq)]
-pub enum Value<'text> {
-    /// Nothing; the look only.
-    Empty,
-    /// Text, which stays text whatever it begins with.
-    Text(&'text str),
-    /// A finite number; anything else is written as empty.
-    Number(f64),
-    /// Text that leads somewhere.
-    Link {
-        /// What is shown.
-        text: &'text str,
-        /// Where it leads.
-        target: Target<'text>,
-    },
-}
-
-/// Where a link leads.
-#[derive(Debug, Clone, Copy, PartialEq)]
-pub enum Target<'text> {
-    /// A cell of this workbook.
-    Cell(&'text CellRef),
-    /// A page on the web, with its scheme.
-    Web(&'text str),
-}
-
 /// The annotated workbook while it is written.
 ///
 /// Rows of a sheet must come in order; sheets may be written in turns. Nothing appears at the target before
@@ -84,8 +47,7 @@ pub enum Target<'text> {
 pub struct AnnotatedWorkbook {
     book: Workbook,
     output: Output,
-    formats: Vec<Format>,
-    dates: Vec<Format>,
+    appearances: Vec<Appearance>,
     looks: Looks,
     sheets: Vec<SheetState>,
     broken: Option<String>,
@@ -94,8 +56,17 @@ pub struct AnnotatedWorkbook {
 struct SheetState {
     name: String,
     visibility: Visibility,
+    widths: BTreeMap<u16, f64>,
     row: u32,
+    /// How many lines the wrapped texts of the row take that were written so far.
+    lines: u32,
     links: u32,
+}
+
+impl SheetState {
+    fn width(&self, column: u16) -> f64 {
+        self.widths.get(&column).copied().unwrap_or(USUAL_WIDTH)
+    }
 }
 
 impl AnnotatedWorkbook {
@@ -126,8 +97,7 @@ impl AnnotatedWorkbook {
         Ok(Self {
             book,
             output,
-            formats: appearances.iter().map(|look| look.format().clone()).collect(),
-            dates: appearances.iter().map(Appearance::format_for_dates).collect(),
+            appearances: appearances.to_vec(),
             looks: Looks::new(),
             sheets: Vec::new(),
             broken: None,
@@ -152,7 +122,9 @@ impl AnnotatedWorkbook {
             this.sheets.push(SheetState {
                 name,
                 visibility,
+                widths: BTreeMap::new(),
                 row: 0,
+                lines: 1,
                 links: 0,
             });
             Ok(SheetId(this.sheets.len() - 1))
@@ -166,6 +138,11 @@ impl AnnotatedWorkbook {
 
     /// Sets the width of columns, or hides them.
     pub fn set_columns(&mut self, sheet: SheetId, layout: ColumnLayout) -> Result<(), FileFault> {
+        if let (Some(width), Some(state)) = (layout.width, self.sheets.get_mut(sheet.0)) {
+            state
+                .widths
+                .extend((layout.first..=layout.last).map(|column| (column, width)));
+        }
         self.on_sheet(sheet, |sheet| {
             if let Some(width) = layout.width {
                 sheet.set_column_range_width_pixels(layout.first, layout.last, pixels(width))?;
@@ -215,76 +192,6 @@ impl AnnotatedWorkbook {
         })
     }
 
-    /// Writes a row of the inventory as it was, at the place it had.
-    pub fn write_row(&mut self, sheet: SheetId, row: &Row) -> Result<(), FileFault> {
-        self.advance(sheet, row.index)?;
-        self.guarded(|this| {
-            let worksheet = this.book.worksheet_from_index(sheet.0)?;
-            for cell in &row.cells {
-                let format = cell.style.and_then(|style| usize::try_from(style.0).ok());
-                let formats = match cell.content {
-                    CellContent::DateTime(_) => &this.dates,
-                    CellContent::Empty
-                    | CellContent::Text(_)
-                    | CellContent::Number(_)
-                    | CellContent::Boolean(_)
-                    | CellContent::Error(_) => &this.formats,
-                };
-                write_cell(
-                    worksheet,
-                    row.index,
-                    cell,
-                    format.and_then(|style| formats.get(style)),
-                )?;
-            }
-            Ok(())
-        })
-    }
-
-    /// Writes one of our own cells.
-    pub fn write(
-        &mut self,
-        sheet: SheetId,
-        row: u32,
-        column: u16,
-        value: &Value<'_>,
-        look: Look,
-    ) -> Result<(), FileFault> {
-        self.advance(sheet, row)?;
-        let value = self.with_links_left(sheet, *value);
-        self.guarded(|this| {
-            let format = this.looks.format(look);
-            let worksheet = this.book.worksheet_from_index(sheet.0)?;
-            match value {
-                Value::Text(text) => {
-                    worksheet.write_string_with_format(row, column, shortened(text), format)?
-                }
-                Value::Number(number) if number.is_finite() => {
-                    worksheet.write_number_with_format(row, column, number, format)?
-                }
-                Value::Empty | Value::Number(_) => worksheet.write_blank(row, column, format)?,
-                Value::Link { text, target } => worksheet.write_url_with_options(
-                    row,
-                    column,
-                    url(target),
-                    shortened(text),
-                    "",
-                    Some(format),
-                )?,
-            };
-            Ok(())
-        })
-    }
-
-    /// Puts a note on a cell, written or not.
-    pub fn note(&mut self, sheet: SheetId, row: u32, column: u16, text: &str) -> Result<(), FileFault> {
-        let note = Note::new(shortened_to(text, LONGEST_NOTE)).add_author_prefix(false);
-        self.on_sheet(sheet, |sheet| {
-            sheet.insert_note(row, column, &note)?;
-            Ok(())
-        })
-    }
-
     /// Completes the workbook and puts it at the target.
     ///
     /// # Errors
@@ -314,21 +221,6 @@ impl AnnotatedWorkbook {
         })
     }
 
-    /// A link beyond the most a sheet can have is written as the text it shows.
-    fn with_links_left<'text>(&mut self, sheet: SheetId, value: Value<'text>) -> Value<'text> {
-        match (value, self.sheets.get_mut(sheet.0)) {
-            (Value::Link { text, .. }, Some(state)) => {
-                state.links = state.links.saturating_add(1);
-                if state.links > MOST_LINKS {
-                    Value::Text(text)
-                } else {
-                    value
-                }
-            }
-            _ => value,
-        }
-    }
-
     /// The writing library drops cells of rows it has left; that must never happen silently.
     fn advance(&mut self, sheet: SheetId, row: u32) -> Result<(), FileFault> {
         match self.sheets.get_mut(sheet.0) {
@@ -342,7 +234,10 @@ impl AnnotatedWorkbook {
                 Err(self.output.failed(&reason))
             }
             Some(state) => {
-                state.row = row;
+                if row > state.row {
+                    state.row = row;
+                    state.lines = 1;
+                }
                 Ok(())
             }
             None => Ok(()),
@@ -374,37 +269,6 @@ impl AnnotatedWorkbook {
     }
 }
 
-fn write_cell(
-    sheet: &mut Worksheet,
-    row: u32,
-    cell: &Cell,
-    format: Option<&Format>,
-) -> Result<(), XlsxError> {
-    let column = cell.column;
-    match (&cell.content, format) {
-        (CellContent::Empty, None) => sheet,
-        (CellContent::Empty, Some(format)) => sheet.write_blank(row, column, format)?,
-        (CellContent::Text(text) | CellContent::Error(text), Some(format)) => {
-            sheet.write_string_with_format(row, column, shortened(text), format)?
-        }
-        (CellContent::Text(text) | CellContent::Error(text), None) => {
-            sheet.write_string(row, column, shortened(text))?
-        }
-        (CellContent::Number(number) | CellContent::DateTime(number), Some(format)) => {
-            sheet.write_number_with_format(row, column, *number, format)?
-        }
-        (CellContent::Number(number), None) => sheet.write_number(row, column, *number)?,
-        (CellContent::DateTime(number), None) => {
-            sheet.write_number_with_format(row, column, *number, &Appearance::default().format_for_dates())?
-        }
-        (CellContent::Boolean(boolean), Some(format)) => {
-            sheet.write_boolean_with_format(row, column, *boolean, format)?
-        }
-        (CellContent::Boolean(boolean), None) => sheet.write_boolean(row, column, *boolean)?,
-    };
-    Ok(())
-}
-
 fn properties(date: Date) -> Result<DocProperties, XlsxError> {
     let (year, month, day) = date.parts();
     let created = ExcelDateTime::from_ymd(
@@ -424,26 +288,6 @@ fn pixels(width: f64) -> u32 {
     )]
     let pixels = (width.clamp(0.0, 255.0) * 7.0).round() as u32;
     pixels
-}
-
-fn url(target: Target<'_>) -> Url {
-    match target {
-        Target::Cell(cell) => Url::new(format!("internal:{cell}")),
-        Target::Web(page) => Url::new(page),
-    }
-}
-
-fn shortened(text: &str) -> std::borrow::Cow<'_, str> {
-    shortened_to(text, LONGEST_TEXT)
-}
-
-fn shortened_to(text: &str, longest: usize) -> std::borrow::Cow<'_, str> {
-    // A text has at most as many UTF-16 units as bytes.
-    if text.len() <= longest || text.encode_utf16().count() <= longest {
-        text.into()
-    } else {
-        format!("{}{CUT}", cut(text, longest.saturating_sub(CUT.len()))).into()
-    }
 }
 
 fn reason_of(error: &XlsxError) -> String {

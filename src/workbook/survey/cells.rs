@@ -8,10 +8,8 @@ use crate::fault::SheetFault;
 
 use super::super::content::StyleId;
 use super::super::place::{CellRef, LAST_COLUMN, LAST_ROW, parse_reference, parse_row};
+use super::value::{ReadAs, is_text, value_of};
 use super::{Place, SheetSurvey, UnknownError};
-
-/// Error values the reading library knows (calamine 0.38, `CellErrorType`).
-const KNOWN_ERRORS: [&str; 7] = ["#DIV/0!", "#N/A", "#NAME?", "#NULL!", "#NUM!", "#REF!", "#VALUE!"];
 
 /// The state of the check between two pieces of XML.
 pub(super) struct CellCheck {
@@ -22,6 +20,7 @@ pub(super) struct CellCheck {
     column: u32,
     last: Option<(u32, u16)>,
     references: References,
+    unknown_error: Seen,
     inside: Inside,
     cell: OpenCell,
 }
@@ -93,6 +92,7 @@ impl CellCheck {
             column: 0,
             last: None,
             references: References::Everywhere,
+            unknown_error: Seen::No,
             inside: Inside::Rows,
             cell: OpenCell::default(),
         }
@@ -204,20 +204,7 @@ impl CellCheck {
                 _ => {}
             }
         }
-        let column = if let Some(reference) = reference {
-            let (row, column) = parse_reference(&reference).ok_or_else(|| self.no_such_cell(&reference))?;
-            if row != self.row {
-                let cell = self.cell_ref(row, column);
-                return Err(SheetFault::OutOfOrder { cell });
-            }
-            column
-        } else {
-            self.references = References::SomeMissing;
-            u16::try_from(self.column)
-                .ok()
-                .filter(|column| *column <= LAST_COLUMN)
-                .ok_or_else(|| self.no_such_cell("a column after XFD"))?
-        };
+        let column = self.column_of(reference.as_deref())?;
         if self.last.is_some_and(|last| (self.row, column) <= last) {
             let cell = self.cell_ref(self.row, column);
             return Err(SheetFault::OutOfOrder { cell });
@@ -227,6 +214,29 @@ impl CellCheck {
         self.cell.column = column;
         self.column = u32::from(column) + 1;
         Ok(())
+    }
+
+    /// The column a cell stands in: by its reference, or after the cell before it.
+    fn column_of(&mut self, reference: Option<&str>) -> Result<u16, SheetFault> {
+        if let Some(reference) = reference {
+            let (row, column) = parse_reference(reference).ok_or_else(|| self.no_such_cell(reference))?;
+            if row != self.row {
+                let cell = self.cell_ref(row, column);
+                return Err(SheetFault::OutOfOrder { cell });
+            }
+            Ok(column)
+        } else {
+            self.references = References::SomeMissing;
+            if self.unknown_error == Seen::Yes {
+                return Err(
+                    self.whole("has an unknown error value before cells without references".to_owned())
+                );
+            }
+            u16::try_from(self.column)
+                .ok()
+                .filter(|column| *column <= LAST_COLUMN)
+                .ok_or_else(|| self.no_such_cell("a column after XFD"))
+        }
     }
 
     fn close(&mut self, survey: &mut SheetSurvey, place: &mut Place) -> Result<(), SheetFault> {
@@ -269,41 +279,20 @@ impl CellCheck {
         Ok(())
     }
 
-    /// Refuses what the reading library would take for something else, or fail on without saying where.
-    fn check_value(&self, survey: &mut SheetSurvey) -> Result<(), SheetFault> {
-        let text = self.cell.text.as_str();
-        let interrupted = self.cell.pieces > 1;
-        match self.cell.kind.as_str() {
-            "inlineStr" | "is" | "str" | "d" => return Ok(()),
-            _ if interrupted => {
-                return Err(self.unreadable("a value interrupted by something else".to_owned()));
-            }
-            "" => {}
-            "s" => {
-                let known = text.is_empty()
-                    || text.bytes().all(|byte| byte.is_ascii_digit())
-                        && text.parse::<u64>().is_ok_and(|index| index < self.shared_texts);
-                if !known {
-                    return Err(self.unreadable(format!(
-                        "a reference to text number `{text}`, which is not stored"
-                    )));
-                }
-            }
-            "n" if text.is_empty() || text.parse::<f64>().is_ok() => {}
-            "n" => return Err(self.unreadable(format!("`{text}`, said to be a number"))),
-            "b" if ["", "0", "1", "true", "false"].contains(&text.trim().to_ascii_lowercase().as_str()) => {}
-            "b" => return Err(self.unreadable(format!("`{text}`, said to be true or false"))),
-            "e" if KNOWN_ERRORS.contains(&text) => {}
-            "e" => self.note_unknown_error(survey)?,
-            other => return Err(self.unreadable(format!("a value of the unknown type `{other}`"))),
+    fn check_value(&mut self, survey: &mut SheetSurvey) -> Result<(), SheetFault> {
+        let (kind, text) = (self.cell.kind.as_str(), self.cell.text.as_str());
+        match value_of(kind, text, self.cell.pieces, self.shared_texts) {
+            Ok(ReadAs::Meant) => Ok(()),
+            Ok(ReadAs::Unknown) => self.note_unknown_error(survey),
+            Err(what) => Err(self.unreadable(what)),
         }
-        Ok(())
     }
 
-    fn note_unknown_error(&self, survey: &mut SheetSurvey) -> Result<(), SheetFault> {
+    fn note_unknown_error(&mut self, survey: &mut SheetSurvey) -> Result<(), SheetFault> {
         if self.references == References::SomeMissing {
             return Err(self.unreadable(format!("the unknown error value `{}`", self.cell.text)));
         }
+        self.unknown_error = Seen::Yes;
         survey.unknown_errors.push(UnknownError {
             row: self.cell.row,
             column: self.cell.column,
@@ -326,9 +315,7 @@ impl CellCheck {
     /// A value may hold references to characters if it is text; anything else in it would be dropped.
     fn interrupt(&mut self, event: &Event<'_>) -> Result<(), SheetFault> {
         if self.inside == Inside::Value {
-            if matches!(event, Event::CData(_))
-                || !matches!(self.cell.kind.as_str(), "str" | "d" | "inlineStr" | "is")
-            {
+            if matches!(event, Event::CData(_)) || !is_text(&self.cell.kind) {
                 return Err(self.unreadable("a value interrupted by something else".to_owned()));
             }
             self.cell.pieces += 1;

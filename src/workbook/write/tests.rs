@@ -599,76 +599,36 @@ fn a_date_without_a_format_of_its_own_is_still_shown_and_read_as_a_date() {
 }
 
 #[test]
-#[ignore]
-fn picture() {
-    let path = Path::new("/tmp/looks.xlsx");
-    let mut book = AnnotatedWorkbook::create(path, &[], Overwrite::Replace, day(), &[]).unwrap();
-    let s = book.add_sheet("Substances", Visibility::Visible).unwrap();
-    book.set_column_width(s, 0, 0, 22.0).unwrap();
-    book.set_column_width(s, 1, 8, 17.0).unwrap();
-    book.write(s, 0, 0, &Value::Text("Substances of most concern"), Look::Title)
+fn a_row_is_as_high_as_its_wrapped_texts_need() {
+    let (folder, path) = place("out.xlsx");
+    let from = folder.path().join("inventory.xlsx");
+    let mut inventory = Workbook::new();
+    let wrapped = Format::new().set_text_wrap();
+    inventory
+        .add_worksheet()
+        .write_string_with_format(0, 0, "one\ntwo\nthree", &wrapped)
         .unwrap();
-    book.write(
-        s,
-        1,
-        0,
-        &Value::Text("a screening, not a regulatory decision"),
-        Look::Subtle,
-    )
-    .unwrap();
-    for (c, t) in (0..).zip(["Name", "log Kow used", "REACH", "REACH why", "REACH P", "CLP"]) {
-        book.write(s, 3, c, &Value::Text(t), Look::Header).unwrap();
-    }
-    let words = [
-        ("listed", Shade::Listed),
-        ("fulfilled", Shade::Fulfilled),
-        ("screens in (close call)", Shade::ScreensIn),
-        ("unresolved", Shade::Unresolved),
-        ("no data", Shade::NoData),
-        ("screens out", Shade::ScreensOut),
-        ("not fulfilled", Shade::NotFulfilled),
-        ("out of scope", Shade::OutOfScope),
-    ];
-    for (r, (w, sh)) in (4..).zip(words) {
-        book.write(s, r, 0, &Value::Text("Substance"), Look::Text)
+    inventory.save(&from).unwrap();
+    let mut inventory = open_inventory(&from).unwrap();
+    let row = inventory.first_rows(0, 1).unwrap().remove(0);
+    let mut book =
+        AnnotatedWorkbook::create(&path, &[&from], Overwrite::Refuse, day(), inventory.appearances())
             .unwrap();
-        book.write(s, r, 1, &Value::Number(4.52), Look::Number).unwrap();
-        book.write(s, r, 2, &Value::Text(w), Look::Verdict(sh)).unwrap();
-        book.write(
-            s,
-            r,
-            3,
-            &Value::Text("BCF 2,500 L/kg exceeds 2,000 L/kg as measured"),
-            Look::Wrapped,
-        )
+    let sheet = book.add_sheet("Substances", Visibility::Visible).unwrap();
+    book.write_row(sheet, &row).unwrap();
+    book.write(sheet, 0, 1, &Value::Text("log Kow used"), Look::Header)
         .unwrap();
-        book.write(
-            s,
-            r,
-            4,
-            &Value::Text(words[(r as usize - 4 + 3) % 8].0),
-            Look::Verdict(words[(r as usize - 4 + 3) % 8].1),
-        )
+    book.write(sheet, 1, 1, &Value::Text("4.5"), Look::Wrapped)
         .unwrap();
-        book.write(
-            s,
-            r,
-            5,
-            &Value::Text(words[(r as usize - 4 + 6) % 8].0),
-            Look::Verdict(words[(r as usize - 4 + 6) % 8].1),
-        )
+    book.write(sheet, 2, 1, &Value::Text("log Kow used"), Look::Wrapped)
         .unwrap();
-        book.write(
-            s,
-            r,
-            6,
-            &Value::Link {
-                text: "reasoning",
-                target: Target::Web("https://example.org"),
-            },
-            Look::Link,
-        )
-        .unwrap();
-    }
     book.finish().unwrap();
+    let xml = part(&path, "xl/worksheets/sheet1.xml");
+    for head in [
+        r#"<row r="1" ht="45" customHeight="1">"#,
+        r#"<row r="2">"#,
+        r#"<row r="3" ht="30" customHeight="1">"#,
+    ] {
+        assert!(xml.contains(head), "{xml} lacks {head}");
+    }
 }
