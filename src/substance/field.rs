@@ -173,6 +173,15 @@ impl Field {
         Self::all().find(|field| field.id() == id)
     }
 
+    /// The numeric property the column holds, if it holds one.
+    pub fn property(self) -> Option<Property> {
+        if let Self::Property(property) = self {
+            Some(property)
+        } else {
+            None
+        }
+    }
+
     /// Whether the column alone makes a sheet an inventory.
     pub fn identifies(self) -> bool {
         matches!(
