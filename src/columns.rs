@@ -7,6 +7,7 @@ mod choice;
 mod decimals;
 mod header;
 mod header_row;
+mod reading;
 mod words;
 
 pub use words::{BUILT_IN_COLUMN_WORDS, ColumnWords};

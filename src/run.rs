@@ -16,12 +16,12 @@ use rayon::iter::{IntoParallelIterator, ParallelIterator};
 pub use judged_row::JudgedRow;
 pub use plan::{RecognisedSheet, recognise_columns};
 
-use crate::columns::ColumnOverride;
+use crate::columns::{BUILT_IN_COLUMN_WORDS, ColumnOverride};
 use crate::fault::{CellFault, FileFault, Refusal};
 use crate::judge::Verdict;
 use crate::quantity::Date;
 use crate::report::ReasoningMode;
-use crate::rules::{RuleSet, load_rule_set};
+use crate::rules::{RuleSet, RuleText, load_rule_set};
 use crate::substance::UnstatedBasis;
 use crate::workbook::{Inventory, Overwrite, Row, open_inventory};
 use judged_row::judge_row;
@@ -92,7 +92,9 @@ const BATCHES_WAITING: usize = 4;
 
 /// Screens an inventory and writes it back, annotated.
 pub fn screen(settings: &ScreenSettings) -> Result<Summary, Refusal> {
-    let rules = load_rule_set(&settings.rulebooks)?;
+    let mut rules = load_rule_set(&settings.rulebooks)?;
+    rules.texts.push(RuleText { name: "built in: columns".to_owned(), text: BUILT_IN_COLUMN_WORDS.to_owned() });
+    let rules = rules;
     let mut inventory = open_inventory(&settings.inventory)?;
     let plan = Plan::new(&mut inventory, &rules, settings)?;
     let mut output = Output::create(settings, &inventory, &plan, &rules)?;

@@ -1,6 +1,7 @@
 //! From recognised headers to columns: doubled ones, product names, units, conditions, and remarks with the way out.
 
 use std::collections::{BTreeMap, BTreeSet};
+use std::fmt::Write as _;
 
 use super::header_row::{Found, HeaderCell, Meaning};
 use super::words::ColumnWords;
@@ -138,7 +139,31 @@ pub(super) fn dimension_of(field: Field) -> Option<Dimension> {
         }
         Field::Tonnage => Some(Dimension::Tonnage),
         Field::LogKowSd | Field::LogKowPh | Field::KocPh => Some(Dimension::Dimensionless),
-        _ => None,
+        Field::RowId
+        | Field::RowType
+        | Field::Name
+        | Field::CasNumber
+        | Field::EcNumber
+        | Field::Smiles
+        | Field::InchiKey
+        | Field::Formula
+        | Field::SubstanceType
+        | Field::LogKowMethod
+        | Field::HazardStatements
+        | Field::Reliability
+        | Field::Guideline
+        | Field::Reference
+        | Field::Year
+        | Field::Product
+        | Field::Supplier
+        | Field::Use
+        | Field::SubstituteFor
+        | Field::ConstituentOf
+        | Field::TransformsTo
+        | Field::AssessorVerdict
+        | Field::AssessorReason
+        | Field::Assessor
+        | Field::AssessedOn => None,
     }
 }
 
@@ -163,11 +188,14 @@ fn column(sheet: &str, cell: HeaderCell, field: Field, words: &ColumnWords) -> (
             shown_unit(dimension),
         )
     });
-    let said = match field {
-        Field::Property(_) | Field::ReadyBiodegradability | Field::InherentBiodegradability => {
-            Said::in_header(&tidy(&text))
-        }
-        _ => Said::default(),
+    let has_conditions = matches!(
+        field,
+        Field::Property(_) | Field::ReadyBiodegradability | Field::InherentBiodegradability
+    );
+    let said = if has_conditions {
+        Said::in_header(&tidy(&text))
+    } else {
+        Said::default()
     };
     let about = is_companion(field)
         .then(|| header.as_ref()?.property_beside(words))
@@ -202,10 +230,10 @@ fn reason(meaning: &Meaning, unit: Option<&str>, dimension: Option<Dimension>) -
     };
     match (unit, dimension) {
         (Some(unit), Some(dimension)) if dimension != Dimension::Dimensionless => {
-            reason.push_str(&format!("; {unit} from the header"));
+            let _ = write!(reason, "; {unit} from the header");
         }
         (None, Some(dimension)) if dimension != Dimension::Dimensionless => {
-            reason.push_str(&format!("; {} where a cell names no unit", shown_unit(dimension)));
+            let _ = write!(reason, "; {} where a cell names no unit", shown_unit(dimension));
         }
         (_, _) => {}
     }
@@ -227,10 +255,7 @@ fn nearest_property(columns: &[Column], place: usize) -> Option<Property> {
         .get(..place)?
         .iter()
         .rev()
-        .find_map(|column| match column.field {
-            Field::Property(property) => Some(property),
-            _ => None,
-        });
+        .find_map(|column| column.field.property());
     left.filter(|_| is_companion(field))
 }
 

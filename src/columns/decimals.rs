@@ -1,5 +1,6 @@
 //! Decimal point or comma, from what the cells of a column show.
 
+use std::fmt::Write as _;
 use std::sync::LazyLock;
 
 use regex::Regex;
@@ -58,9 +59,7 @@ pub(super) fn set_styles(columns: &mut [Column], data: &[&Row]) {
         column.decimal = by_column.or_else(|| sheet.style()).unwrap_or_default();
         if column.decimal == DecimalStyle::Comma {
             let whose = if by_column.is_some() { "column" } else { "sheet" };
-            column
-                .reason
-                .push_str(&format!("; decimal comma as in the {whose}'s cells"));
+            let _ = write!(column.reason, "; decimal comma as in the {whose}'s cells");
         }
     }
 }
@@ -90,9 +89,8 @@ fn style_of(number: &str) -> Option<DecimalStyle> {
     };
     match (points, commas) {
         (1, 0) | (0, 1) if could_group => None,
-        (1, 0) | (0, 1) => Some(style_of_last),
         // Both kinds: the last is the decimal separator. Several of one kind group thousands.
-        (1.., 1) | (1, 1..) => Some(style_of_last),
+        (1, 0 | 1..) | (0 | 1.., 1) => Some(style_of_last),
         (2.., 0) => Some(DecimalStyle::Comma).filter(|_| decimals.len() == 3),
         (0, 2..) => Some(DecimalStyle::Point).filter(|_| decimals.len() == 3),
         (_, _) => None,

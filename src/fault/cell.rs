@@ -150,6 +150,10 @@ fn shortened(found: &str) -> String {
 }
 
 impl fmt::Display for CellFaultKind {
+    #[expect(
+        clippy::too_many_lines,
+        reason = "one sentence for each kind and nothing else"
+    )]
     fn fmt(&self, formatter: &mut fmt::Formatter<'_>) -> fmt::Result {
         match self {
             Self::NotA { what, example } => {

@@ -6,8 +6,10 @@
 mod expression;
 mod format;
 mod number;
+mod qualifier;
 mod text;
 mod units;
+mod value;
 mod words;
 
 pub use format::{format_interval, format_number};

@@ -13,7 +13,9 @@ use crate::rules::{Checked, Criterion, Test};
 pub struct Line {
     /// The verdict cell's words.
     pub verdict: String,
-    /// The deciding value, in the unit beside it.
+    /// The deciding value, in the unit beside it, if it is a single one.
+    pub number: Option<f64>,
+    /// The deciding value in words, if it is a range or an open interval.
     pub value: String,
     /// Its unit.
     pub unit: String,
@@ -65,7 +67,10 @@ fn would_settle(judged: &CriterionJudgement) -> String {
 }
 
 fn fill_value(line: &mut Line, told: Told, used: &Used) {
-    line.value = format_interval(used.compared, crate::quantity::Unit::One);
+    line.number = used.compared.single();
+    if line.number.is_none() {
+        line.value = format_interval(used.compared, crate::quantity::Unit::One);
+    }
     line.unit = used.property.default_unit().symbol().to_owned();
     line.margin = used.margin;
     line.chance = used.chance;

@@ -4,6 +4,7 @@ use crate::judge::{Deciding, Decision, Verdict};
 use crate::quantity::{Unit, format_interval};
 use crate::reasoning::Told;
 use crate::reasoning::value::{listed, titles};
+use crate::substance::Identity;
 
 /// The three log Kow cells: value, SD, basis. Empty where no log Kow is known.
 #[derive(Debug, Clone, PartialEq, Default)]
@@ -72,10 +73,18 @@ pub fn deciding_text(told: Told) -> String {
             }
         }
     }
-    let parts: Vec<String> = groups
+    let mut parts: Vec<String> = match told.substance.identity {
+        Identity::Identified => Vec::new(),
+        Identity::NameAlone | Identity::RepairedDate | Identity::NotIdentified if groups.is_empty() => Vec::new(),
+        Identity::NameAlone | Identity::RepairedDate | Identity::NotIdentified => {
+            vec!["first a CAS number, EC number or structure that says which substance it is".to_owned()]
+        }
+    };
+    let data: Vec<String> = groups
         .into_iter()
         .map(|(data, names)| format!("{data} ({})", names.join(", ")))
         .collect();
+    parts.extend(data);
     parts.join("; ")
 }
 
@@ -83,7 +92,10 @@ pub fn deciding_text(told: Told) -> String {
 pub(crate) fn deciding_phrase(deciding: &Deciding) -> String {
     match deciding {
         Deciding::Data(subjects) => listed(&titles(subjects.iter().copied())),
-        Deciding::Perhaps(subjects) => format!("perhaps {}", titles(subjects.iter().copied()).join(" or ")),
+        Deciding::Perhaps(subjects) => {
+            let titles = titles(subjects.iter().copied());
+            format!("only by pointing to concern: {}", titles.join(" or "))
+        }
         Deciding::ExpertJudgement => "expert judgement".to_owned(),
     }
 }

@@ -186,7 +186,13 @@ pub(crate) fn deciding_sentence(deciding: &Deciding) -> String {
             format!("{} would settle it{together}", listed(&titles))
         }
         Deciding::Perhaps(subjects) => {
-            format!("{} may settle it, if it points to concern", alternatives(&titles(subjects.iter().copied())))
+            const NAMED: usize = 3;
+            let titles = titles(subjects.iter().copied());
+            if titles.len() > NAMED {
+                "only data that point to concern would settle it".to_owned()
+            } else {
+                format!("{} would settle it only by pointing to concern", alternatives(&titles))
+            }
         }
         Deciding::ExpertJudgement => "no datum alone settles it; a qualified person has to assess it".to_owned(),
     }

@@ -89,7 +89,7 @@ pub fn added_entries(told: Told, faults: &[CellFault]) -> Vec<Entry> {
             Some(number) => Entry::number(Some(number), Look::Number),
             None => Entry::text(log_kow.text, Look::Text),
         },
-        Entry::number(log_kow.sd, Look::Number),
+        Entry::number(log_kow.sd, Look::TwoDecimals),
         Entry::text(log_kow.basis, Look::Text),
     ];
     for book in told.books() {

@@ -5,6 +5,7 @@ use std::collections::BTreeSet;
 use regex::Regex;
 
 use super::formula::is_inorganic;
+use crate::quantity::format_number;
 use crate::rules::Subject;
 use crate::substance::{Identity, Property, RowType, Substance, SubstanceType};
 
@@ -42,6 +43,8 @@ pub struct Triggers {
     pub inorganic_formula: bool,
     /// A pKa of the row puts its ionisation between pH 4 and 9.
     pub ionisable: bool,
+    /// The single values of log Kow in the row lie further apart than this, log units.
+    pub log_kow_spread: Option<f64>,
 }
 
 /// What a caution keeps from clearing.
@@ -79,6 +82,7 @@ impl Caution {
             .or_else(|| triggers.name_reason(substance))
             .or_else(|| triggers.formula_reason(substance))
             .or_else(|| triggers.ionisation_reason(substance))
+            .or_else(|| triggers.spread_reason(substance))
     }
 
     fn stated_type(&self, substance: &Substance) -> Option<String> {
@@ -104,6 +108,16 @@ impl Triggers {
     fn formula_reason(&self, substance: &Substance) -> Option<String> {
         let formula = substance.formula.as_ref()?.value.as_str();
         (self.inorganic_formula && is_inorganic(formula)).then(|| format!("the formula is `{formula}`"))
+    }
+
+    fn spread_reason(&self, substance: &Substance) -> Option<String> {
+        let allowed = self.log_kow_spread?;
+        let readings = substance.readings_of(Property::LogKow);
+        let values: Vec<f64> = readings.iter().filter_map(|reading| reading.quantity.single()).collect();
+        let lowest = values.iter().copied().min_by(f64::total_cmp)?;
+        let highest = values.iter().copied().max_by(f64::total_cmp)?;
+        let (low, high) = (format_number(lowest), format_number(highest));
+        (highest - lowest > allowed).then(|| format!("the row gives log Kow from {low} to {high}"))
     }
 
     /// A pKa at which more than 10 % is ionised somewhere in the range of pH.

@@ -5,7 +5,8 @@ use std::path::PathBuf;
 use super::built_in::BUILT_IN;
 use super::folder::{CAUTIONS_FILE, RELATIONS_FILE};
 use super::{Checked, RuleSource, RuleSources, Rulebook};
-use crate::fault::RuleFaults;
+use crate::columns::ColumnWords;
+use crate::fault::{RuleFault, RuleFaults, RuleMistake};
 use crate::quantity::Date;
 
 /// What a rulebook holds, in short.
@@ -70,6 +71,19 @@ impl RuleSources {
     }
 }
 
+const COLUMNS_FILE: &str = "columns.toml";
+
+/// The words of columns have a form of their own; the parser names the line.
+fn check_columns(source: &RuleSource) -> Option<RuleFault> {
+    let reason = ColumnWords::load(&source.text).err()?;
+    Some(RuleFault {
+        file: source.name.clone(),
+        text: None,
+        span: None,
+        mistake: RuleMistake::Syntax { reason },
+    })
+}
+
 /// Checks rule files and folders without an inventory and gives their rulebooks in short.
 pub fn check_paths(paths: &[PathBuf]) -> Result<Vec<RulebookSummary>, RuleFaults> {
     let mut sources = RuleSources::without_rulebooks();
@@ -82,6 +96,7 @@ pub fn check_paths(paths: &[PathBuf]) -> Result<Vec<RulebookSummary>, RuleFaults
             RuleSource::read(path).map(|source| match name {
                 Some(CAUTIONS_FILE) => sources.cautions = source,
                 Some(RELATIONS_FILE) => sources.relations = source,
+                Some(COLUMNS_FILE) => faults.extend(check_columns(&source)),
                 Some(_) | None => sources.add(source),
             })
         };

@@ -176,12 +176,23 @@ impl Field {
 
     /// The unit assumed where neither cell nor header names one, for fields that hold numbers.
     pub fn default_unit(self) -> Option<Unit> {
-        match self {
-            Self::Property(property) => Some(property.default_unit()),
-            Self::BcfLipid | Self::Content => Some(Unit::Percent),
-            Self::LogKowTemperature | Self::HalfLifeTemperature => Some(Unit::Celsius),
-            Self::Tonnage => Some(Unit::TonnePerYear),
-            _ => None,
+        const OF_OTHERS: [(Field, Unit); 5] = [
+            (Field::BcfLipid, Unit::Percent),
+            (Field::Content, Unit::Percent),
+            (Field::LogKowTemperature, Unit::Celsius),
+            (Field::HalfLifeTemperature, Unit::Celsius),
+            (Field::Tonnage, Unit::TonnePerYear),
+        ];
+        let of_others = OF_OTHERS.into_iter().find(|(field, _)| *field == self);
+        self.property().map(Property::default_unit).or(of_others.map(|(_, unit)| unit))
+    }
+
+    /// The numeric property the column holds, if it holds one.
+    pub fn property(self) -> Option<Property> {
+        if let Self::Property(property) = self {
+            Some(property)
+        } else {
+            None
         }
     }
 

@@ -16,6 +16,8 @@ pub enum Look {
     Wrapped,
     /// A number, as the spreadsheet program shows numbers.
     Number,
+    /// A number to two decimals, such as a standard deviation or a chance.
+    TwoDecimals,
     /// The heading of a sheet.
     Title,
     /// Text that stands back.
@@ -64,6 +66,7 @@ pub(super) struct Looks {
     text: Format,
     wrapped: Format,
     number: Format,
+    two_decimals: Format,
     title: Format,
     subtle: Format,
     link: Format,
@@ -93,6 +96,7 @@ impl Looks {
             text: top(),
             wrapped: top().set_text_wrap(),
             number: top().set_align(FormatAlign::Right),
+            two_decimals: top().set_align(FormatAlign::Right).set_num_format("0.00"),
             title: Format::new()
                 .set_bold()
                 .set_font_size(14.0)
@@ -130,6 +134,7 @@ impl Looks {
             Look::Text => &self.text,
             Look::Wrapped => &self.wrapped,
             Look::Number => &self.number,
+            Look::TwoDecimals => &self.two_decimals,
             Look::Title => &self.title,
             Look::Subtle => &self.subtle,
             Look::Link => &self.link,

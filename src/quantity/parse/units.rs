@@ -5,235 +5,92 @@ use std::sync::LazyLock;
 
 use crate::quantity::{Dimension, Unit};
 
-/// Spellings in lower case, without spaces and multiplication signs, `per` written `/`; see [`fold`].
-const SPELLINGS: &[(Unit, &[&str])] = &[
+/// Spellings in lower case, without spaces and multiplication signs, `per` written `/`; see [`fold`]. Parted by spaces.
+const SPELLINGS: &[(Unit, &str)] = &[
     (
         Unit::One,
-        &[
-            "-",
-            "none",
-            "dimensionless",
-            "dimensionslos",
-            "unitless",
-            "einheitenlos",
-        ],
+        "- none dimensionless dimensionslos unitless einheitenlos",
     ),
-    (
-        Unit::Second,
-        &[
-            "s", "sec", "secs", "sek", "second", "seconds", "sekunde", "sekunden",
-        ],
-    ),
-    (Unit::Minute, &["min", "mins", "minute", "minutes", "minuten"]),
-    (
-        Unit::Hour,
-        &["h", "hr", "hrs", "hour", "hours", "std", "stunde", "stunden"],
-    ),
-    (Unit::Day, &["d", "day", "days", "tag", "tage", "tagen"]),
-    (
-        Unit::Week,
-        &["w", "wk", "wks", "week", "weeks", "wo", "woche", "wochen"],
-    ),
+    (Unit::Second, "s sec secs sek second seconds sekunde sekunden"),
+    (Unit::Minute, "min mins minute minutes minuten"),
+    (Unit::Hour, "h hr hrs hour hours std stunde stunden"),
+    (Unit::Day, "d day days tag tage tagen"),
+    (Unit::Week, "w wk wks week weeks wo woche wochen"),
     (
         Unit::Month,
-        &[
-            "mo", "mos", "mon", "mth", "mths", "month", "months", "monat", "monate", "monaten",
-        ],
+        "mo mos mon mth mths month months monat monate monaten",
     ),
-    (
-        Unit::Year,
-        &[
-            "a", "y", "yr", "yrs", "year", "years", "j", "jahr", "jahre", "jahren",
-        ],
-    ),
+    (Unit::Year, "a y yr yrs year years j jahr jahre jahren"),
     (
         Unit::NanogramPerLitre,
-        &[
-            "ng/l", "ngl-1", "ng/liter", "ng/litre", "pg/ml", "ng/dm3", "µg/m3",
-        ],
+        "ng/l ngl-1 ng/liter ng/litre pg/ml ng/dm3 µg/m3",
     ),
     (
         Unit::MicrogramPerLitre,
-        &[
-            "µg/l",
-            "ug/l",
-            "mcg/l",
-            "µgl-1",
-            "ugl-1",
-            "µg/liter",
-            "µg/litre",
-            "ug/liter",
-            "ug/litre",
-            "ppb",
-            "ng/ml",
-            "mg/m3",
-            "µg/dm3",
-            "ug/dm3",
-        ],
+        "µg/l ug/l mcg/l µgl-1 ugl-1 µg/liter µg/litre ug/liter ug/litre ppb ng/ml mg/m3 µg/dm3 ug/dm3",
     ),
     (
         Unit::MilligramPerLitre,
-        &[
-            "mg/l", "mgl-1", "mg/liter", "mg/litre", "ppm", "µg/ml", "ug/ml", "g/m3", "mg/dm3", "mgdm-3",
-        ],
+        "mg/l mgl-1 mg/liter mg/litre ppm µg/ml ug/ml g/m3 mg/dm3 mgdm-3",
     ),
     (
         Unit::GramPerLitre,
-        &[
-            "g/l", "gl-1", "g/liter", "g/litre", "mg/ml", "kg/m3", "g/dm3", "mg/cm3", "gdm-3",
-        ],
+        "g/l gl-1 g/liter g/litre mg/ml kg/m3 g/dm3 mg/cm3 gdm-3",
     ),
     (
         Unit::MolePerLitre,
-        &["mol/l", "moll-1", "mol/liter", "mol/litre", "mol/dm3", "moldm-3"],
+        "mol/l moll-1 mol/liter mol/litre mol/dm3 moldm-3",
     ),
     (
         Unit::MillimolePerLitre,
-        &[
-            "mmol/l",
-            "mmoll-1",
-            "mmol/liter",
-            "mmol/litre",
-            "mmol/dm3",
-            "mol/m3",
-        ],
+        "mmol/l mmoll-1 mmol/liter mmol/litre mmol/dm3 mol/m3",
     ),
     (
         Unit::MicromolePerLitre,
-        &[
-            "µmol/l",
-            "umol/l",
-            "µmoll-1",
-            "umoll-1",
-            "µmol/liter",
-            "µmol/litre",
-            "µmol/dm3",
-            "umol/dm3",
-            "mmol/m3",
-        ],
+        "µmol/l umol/l µmoll-1 umoll-1 µmol/liter µmol/litre µmol/dm3 umol/dm3 mmol/m3",
     ),
     (
         Unit::LitrePerKilogram,
-        &[
-            "l/kg",
-            "lkg-1",
-            "liter/kg",
-            "litre/kg",
-            "litres/kg",
-            "dm3/kg",
-            "dm3kg-1",
-            "ml/g",
-            "mlg-1",
-            "cm3/g",
-            "cm3g-1",
-            "l/kgww",
-            "l/kgwwt",
-            "l/kgbw",
-            "l/kgoc",
-        ],
+        "l/kg lkg-1 liter/kg litre/kg litres/kg dm3/kg dm3kg-1 ml/g mlg-1 cm3/g cm3g-1 l/kgww l/kgwwt l/kgbw l/kgoc",
     ),
-    (
-        Unit::LogLitrePerKilogram,
-        &["logl/kg", "lgl/kg", "log(l/kg)", "lg(l/kg)"],
-    ),
-    (Unit::Pascal, &["pa", "pascal", "n/m2"]),
-    (
-        Unit::Hectopascal,
-        &["hpa", "mbar", "millibar", "hectopascal", "hektopascal"],
-    ),
-    (Unit::Kilopascal, &["kpa", "kilopascal"]),
-    (Unit::Bar, &["bar"]),
-    (Unit::MillimetreMercury, &["mmhg", "torr"]),
-    (Unit::Atmosphere, &["atm"]),
+    (Unit::LogLitrePerKilogram, "logl/kg lgl/kg log(l/kg) lg(l/kg)"),
+    (Unit::Pascal, "pa pascal n/m2"),
+    (Unit::Hectopascal, "hpa mbar millibar hectopascal hektopascal"),
+    (Unit::Kilopascal, "kpa kilopascal"),
+    (Unit::Bar, "bar"),
+    (Unit::MillimetreMercury, "mmhg torr"),
+    (Unit::Atmosphere, "atm"),
     (
         Unit::Celsius,
-        &[
-            "°c",
-            "c",
-            "degc",
-            "°celsius",
-            "celsius",
-            "gradc",
-            "gradcelsius",
-            "degreescelsius",
-        ],
+        "°c c degc °celsius celsius gradc gradcelsius degreescelsius",
     ),
-    (Unit::Kelvin, &["k", "kelvin", "°k"]),
-    (
-        Unit::Fahrenheit,
-        &["°f", "f", "degf", "fahrenheit", "gradfahrenheit"],
-    ),
-    (
-        Unit::GramPerMole,
-        &["g/mol", "gmol-1", "g/mole", "da", "dalton", "u", "amu", "kg/kmol"],
-    ),
+    (Unit::Kelvin, "k kelvin °k"),
+    (Unit::Fahrenheit, "°f f degf fahrenheit gradfahrenheit"),
+    (Unit::GramPerMole, "g/mol gmol-1 g/mole da dalton u amu kg/kmol"),
     (
         Unit::PascalCubicMetrePerMole,
-        &[
-            "pam3/mol",
-            "pam3mol-1",
-            "pa/(mol/m3)",
-            "pam3/mole",
-            "pa/mol/m3",
-            "m3pa/mol",
-        ],
+        "pam3/mol pam3mol-1 pa/(mol/m3) pam3/mole pa/mol/m3 m3pa/mol",
     ),
     (
         Unit::AtmosphereCubicMetrePerMole,
-        &[
-            "atmm3/mol",
-            "atmm3mol-1",
-            "atm-m3/mol",
-            "atm-m3/mole",
-            "atmm3/mole",
-            "m3atm/mol",
-        ],
+        "atmm3/mol atmm3mol-1 atm-m3/mol atm-m3/mole atmm3/mole m3atm/mol",
     ),
     (
         Unit::Percent,
-        &[
-            "%", "percent", "prozent", "wt%", "wt.%", "wt-%", "gew%", "gew.%", "gew-%", "gew.-%", "%w/w",
-            "%(w/w)", "%m/m", "%wt", "%gew", "vol%", "pct", "ma%", "ma.-%", "ma-%", "mass%", "masse%",
-            "masse-%",
-        ],
+        "% percent prozent wt% wt.% wt-% gew% gew.% gew-% gew.-% %w/w %(w/w) %m/m %wt %gew vol% pct ma% ma.-% ma-% mass% masse% masse-%",
     ),
     (
         Unit::TonnePerYear,
-        &[
-            "t/a",
-            "t/y",
-            "t/yr",
-            "t/year",
-            "t/jahr",
-            "ta-1",
-            "to/a",
-            "to/jahr",
-            "tpa",
-            "t",
-            "ton",
-            "tons",
-            "tonne",
-            "tonnes",
-            "tonnen",
-            "tons/year",
-            "tonnes/year",
-            "tonnes/annum",
-            "tonnen/jahr",
-            "tons/a",
-            "tonnes/a",
-        ],
+        "t/a t/y t/yr t/year t/jahr ta-1 to/a to/jahr tpa t ton tons tonne tonnes tonnen tons/year tonnes/year tonnes/annum tonnen/jahr tons/a tonnes/a",
     ),
-    (
-        Unit::KilogramPerYear,
-        &["kg/a", "kg/y", "kg/yr", "kg/year", "kg/jahr", "kga-1", "kg"],
-    ),
-    (Unit::KilojoulePerMole, &["kj/mol", "kjmol-1", "kj/mole"]),
+    (Unit::KilogramPerYear, "kg/a kg/y kg/yr kg/year kg/jahr kga-1 kg"),
+    (Unit::KilojoulePerMole, "kj/mol kjmol-1 kj/mole"),
 ];
 
 static BY_SPELLING: LazyLock<BTreeMap<&'static str, Unit>> = LazyLock::new(|| {
     SPELLINGS
         .iter()
-        .flat_map(|(unit, spellings)| spellings.iter().map(|spelling| (*spelling, *unit)))
+        .flat_map(|(unit, spellings)| spellings.split(' ').map(|spelling| (spelling, *unit)))
         .collect()
 });
 
@@ -256,7 +113,7 @@ pub fn unit_words(dimension: Dimension) -> impl Iterator<Item = &'static str> {
     SPELLINGS
         .iter()
         .filter(move |(unit, _)| unit.dimension() == dimension)
-        .flat_map(|(unit, spellings)| std::iter::once(unit.symbol()).chain(spellings.iter().copied()))
+        .flat_map(|(unit, spellings)| std::iter::once(unit.symbol()).chain(spellings.split(' ')))
         .filter(|word| word.chars().count() > 1)
 }
 
@@ -319,7 +176,10 @@ mod tests {
     fn no_spelling_names_two_units() {
         assert_eq!(
             BY_SPELLING.len(),
-            SPELLINGS.iter().map(|(_, words)| words.len()).sum::<usize>()
+            SPELLINGS
+                .iter()
+                .map(|(_, words)| words.split(' ').count())
+                .sum::<usize>()
         );
     }
 

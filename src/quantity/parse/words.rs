@@ -1,273 +1,40 @@
-//! Words that stand for no value, for a qualifier, or for a value without a number, in English and German.
+//! Words that stand for no value, for a value without a number, or beside one, in English and German.
 
 use super::text::plain_words;
 
-/// How a number is qualified.
-#[derive(Debug, Clone, Copy, PartialEq, Eq)]
-pub(super) enum Qualifier {
-    Above,
-    AtLeast,
-    Below,
-    AtMost,
-    About,
-    /// `=`, `from`, `von`: nothing is added to the number.
-    Exactly,
-    /// `between`, `zwischen`: `and` then parts the ends of a range.
-    Between,
-}
-
-/// Longest first where one starts another.
-const SIGNS: &[(&str, Qualifier)] = &[
-    (">=", Qualifier::AtLeast),
-    ("=>", Qualifier::AtLeast),
-    ("≥", Qualifier::AtLeast),
-    ("<=", Qualifier::AtMost),
-    ("=<", Qualifier::AtMost),
-    ("≤", Qualifier::AtMost),
-    (">", Qualifier::Above),
-    ("<", Qualifier::Below),
-    ("~", Qualifier::About),
-    ("=", Qualifier::Exactly),
-];
-
-/// Lower case. Longer phrases stand before those that start them.
-const PHRASES: &[(&str, Qualifier)] = &[
-    ("greater than or equal to", Qualifier::AtLeast),
-    ("more than or equal to", Qualifier::AtLeast),
-    ("not less than", Qualifier::AtLeast),
-    ("no less than", Qualifier::AtLeast),
-    ("at least", Qualifier::AtLeast),
-    ("minimum", Qualifier::AtLeast),
-    ("min.", Qualifier::AtLeast),
-    ("min", Qualifier::AtLeast),
-    ("größer oder gleich", Qualifier::AtLeast),
-    ("groesser oder gleich", Qualifier::AtLeast),
-    ("größer gleich", Qualifier::AtLeast),
-    ("groesser gleich", Qualifier::AtLeast),
-    ("mindestens", Qualifier::AtLeast),
-    ("ab", Qualifier::AtLeast),
-    ("less than or equal to", Qualifier::AtMost),
-    ("lower than or equal to", Qualifier::AtMost),
-    ("not more than", Qualifier::AtMost),
-    ("no more than", Qualifier::AtMost),
-    ("at most", Qualifier::AtMost),
-    ("up to", Qualifier::AtMost),
-    ("maximum", Qualifier::AtMost),
-    ("maximal", Qualifier::AtMost),
-    ("max.", Qualifier::AtMost),
-    ("max", Qualifier::AtMost),
-    ("kleiner oder gleich", Qualifier::AtMost),
-    ("kleiner gleich", Qualifier::AtMost),
-    ("höchstens", Qualifier::AtMost),
-    ("hoechstens", Qualifier::AtMost),
-    ("nicht mehr als", Qualifier::AtMost),
-    ("bis zu", Qualifier::AtMost),
-    ("bis", Qualifier::AtMost),
-    ("greater than", Qualifier::Above),
-    ("larger than", Qualifier::Above),
-    ("higher than", Qualifier::Above),
-    ("more than", Qualifier::Above),
-    ("above", Qualifier::Above),
-    ("over", Qualifier::Above),
-    ("exceeds", Qualifier::Above),
-    ("größer als", Qualifier::Above),
-    ("grösser als", Qualifier::Above),
-    ("groesser als", Qualifier::Above),
-    ("größer", Qualifier::Above),
-    ("groesser", Qualifier::Above),
-    ("mehr als", Qualifier::Above),
-    ("oberhalb", Qualifier::Above),
-    ("über", Qualifier::Above),
-    ("ueber", Qualifier::Above),
-    ("less than", Qualifier::Below),
-    ("lower than", Qualifier::Below),
-    ("smaller than", Qualifier::Below),
-    ("fewer than", Qualifier::Below),
-    ("below", Qualifier::Below),
-    ("under", Qualifier::Below),
-    ("kleiner als", Qualifier::Below),
-    ("kleiner", Qualifier::Below),
-    ("weniger als", Qualifier::Below),
-    ("unterhalb", Qualifier::Below),
-    ("unter", Qualifier::Below),
-    ("approximately", Qualifier::About),
-    ("approx.", Qualifier::About),
-    ("approx", Qualifier::About),
-    ("about", Qualifier::About),
-    ("around", Qualifier::About),
-    ("roughly", Qualifier::About),
-    ("circa", Qualifier::About),
-    ("zirka", Qualifier::About),
-    ("ca.", Qualifier::About),
-    ("ca", Qualifier::About),
-    ("c.", Qualifier::About),
-    ("etwa", Qualifier::About),
-    ("ungefähr", Qualifier::About),
-    ("ungefaehr", Qualifier::About),
-    ("rund", Qualifier::About),
-    ("between", Qualifier::Between),
-    ("zwischen", Qualifier::Between),
-    ("from", Qualifier::Exactly),
-    ("von", Qualifier::Exactly),
-];
-
 /// Folded by [`plain_words`], spaces left out.
-const MISSING: &[&str] = &[
-    "",
-    "nd",
-    "na",
-    "nb",
-    "nv",
-    "nr",
-    "ka",
-    "null",
-    "nil",
-    "none",
-    "tbd",
-    "tba",
-    "tbc",
-    "unknown",
-    "unbekannt",
-    "missing",
-    "fehlt",
-    "keine",
-    "leer",
-    "blank",
-    "empty",
-    "offen",
-    "pending",
-    "entfallt",
-    "nodata",
-    "nodataavailable",
-    "datanotavailable",
-    "notavailable",
-    "notdetermined",
-    "nottested",
-    "notmeasured",
-    "notreported",
-    "notapplicable",
-    "notknown",
-    "notstated",
-    "notspecified",
-    "nichtbestimmt",
-    "nichtverfugbar",
-    "nichtanwendbar",
-    "nichtbekannt",
-    "nichtgemessen",
-    "nichtgepruft",
-    "nichtermittelt",
-    "nichtvorhanden",
-    "keineangabe",
-    "keineangaben",
-    "keinedaten",
-    "keinedatenverfugbar",
-    "keinedatenvorhanden",
-    "nichtrelevant",
-    "notrelevant",
-    "keinwert",
-    "novalue",
-];
+const MISSING: &str = concat!(
+    "nd na nb nv nr ka null nil none tbd tba tbc unknown unbekannt missing fehlt keine leer blank empty ",
+    "offen pending entfallt nodata nodataavailable datanotavailable notavailable notdetermined nottested ",
+    "notmeasured notreported notapplicable notknown notstated notspecified nichtbestimmt nichtverfugbar ",
+    "nichtanwendbar nichtbekannt nichtgemessen nichtgepruft nichtermittelt nichtvorhanden keineangabe ",
+    "keineangaben keinedaten keinedatenverfugbar keinedatenvorhanden nichtrelevant notrelevant keinwert ",
+    "novalue"
+);
 
 /// Words that say something of a value but not how much, folded by [`plain_words`]; any of them may stand within.
-const VALUE_WORDS: &[&str] = &[
-    "miscible",
-    "mischbar",
-    "immiscible",
-    "insoluble",
-    "soluble",
-    "unloslich",
-    "loslich",
-    "negligible",
-    "vernachlassigbar",
-    "decomposes",
-    "decomposition",
-    "zersetzt",
-    "zersetzung",
-    "sublimes",
-    "sublimiert",
-    "stable",
-    "stabil",
-    "persistent",
-    "hydrolyses",
-    "hydrolysiert",
-    "low",
-    "high",
-    "niedrig",
-    "gering",
-    "hoch",
-    "reacts",
-];
+const VALUE_WORDS: &str = concat!(
+    "miscible mischbar immiscible insoluble soluble unloslich loslich negligible vernachlassigbar ",
+    "decomposes decomposition zersetzt zersetzung sublimes sublimiert stable stabil persistent hydrolyses ",
+    "hydrolysiert low high niedrig gering hoch reacts"
+);
 
 /// Words after a bare number that are known to be remarks and no misspelt unit, in lower case.
-const REMARK_STARTS: &[&str] = &[
-    "at",
-    "bei",
-    "in",
-    "for",
-    "für",
-    "oecd",
-    "eu",
-    "ec",
-    "epa",
-    "iso",
-    "ph",
-    "ww",
-    "dw",
-    "wet",
-    "dry",
-    "measured",
-    "gemessen",
-    "exp",
-    "exp.",
-    "experimental",
-    "experimentell",
-    "calc",
-    "calc.",
-    "calculated",
-    "berechnet",
-    "estimated",
-    "est.",
-    "geschätzt",
-    "predicted",
-    "qsar",
-    "fish",
-    "fisch",
-    "lipid",
-    "glp",
-    "study",
-    "studie",
-    "primary",
-    "ultimate",
-];
+const REMARK_STARTS: &str = concat!(
+    "at bei in for für oecd eu ec epa iso ph ww dw wet dry measured gemessen exp exp. experimental ",
+    "experimentell calc calc. calculated berechnet estimated est. geschätzt predicted qsar fish fisch ",
+    "lipid glp study studie primary ultimate"
+);
 
 /// Words before a number, without `=` or `:`, that make the number theirs and no value.
-const NUMBERED: &[&str] = &[
-    "oecd",
-    "eu",
-    "ec",
-    "eg",
-    "epa",
-    "oppts",
-    "ocspp",
-    "iso",
-    "din",
-    "astm",
-    "tg",
-    "method",
-    "methode",
-    "guideline",
-    "richtlinie",
-    "test",
-    "ph",
-    "year",
-    "jahr",
-    "klimisch",
-    "reliability",
-    "ref",
-    "ref.",
-    "no.",
-    "nr.",
-];
+const NUMBERED: &str = concat!(
+    "oecd eu ec eg epa oppts ocspp iso din astm tg method methode guideline richtlinie test ph year jahr ",
+    "klimisch reliability ref ref. no. nr."
+);
+
+fn stands_in(list: &str, word: &str) -> bool {
+    list.split(' ').any(|known| known == word)
+}
 
 /// Whether a text is empty or one of the words for a missing value.
 pub fn is_missing(text: &str) -> bool {
@@ -285,18 +52,18 @@ pub fn is_missing(text: &str) -> bool {
         });
     }
     let joined: String = plain_words(text).split(' ').collect();
-    MISSING.contains(&joined.as_str())
+    joined.is_empty() || stands_in(MISSING, &joined)
 }
 
 /// Whether a text holds a word that stands for a value without a number.
 pub(super) fn has_value_word(text: &str) -> bool {
     plain_words(text)
         .split(' ')
-        .any(|word| VALUE_WORDS.contains(&word))
+        .any(|word| stands_in(VALUE_WORDS, word))
 }
 
 pub(super) fn starts_remark(word: &str) -> bool {
-    REMARK_STARTS.contains(&word.to_lowercase().as_str())
+    stands_in(REMARK_STARTS, &word.to_lowercase())
 }
 
 /// Whether the words before a number make it the number of a guideline, a pH or the like.
@@ -304,47 +71,12 @@ pub(super) fn numbers_something_else(label: &str) -> bool {
     label
         .split_whitespace()
         .last()
-        .is_some_and(|word| NUMBERED.contains(&word.to_lowercase().as_str()))
-}
-
-/// The qualifier at the start of a text, if any, and what follows it.
-pub(super) fn take_qualifier(text: &str) -> Option<(Qualifier, &str)> {
-    let text = text.trim_start();
-    let sign = SIGNS
-        .iter()
-        .find_map(|(sign, qualifier)| text.strip_prefix(sign).map(|rest| (*qualifier, rest)));
-    sign.or_else(|| {
-        if !text.starts_with(char::is_alphabetic) {
-            return None;
-        }
-        PHRASES
-            .iter()
-            .find_map(|(phrase, qualifier)| strip_phrase(text, phrase).map(|rest| (*qualifier, rest)))
-    })
-}
-
-/// What follows a phrase at the start of a text, whatever its case and spaces, if it ends where a word ends.
-fn strip_phrase<'text>(text: &'text str, phrase: &str) -> Option<&'text str> {
-    let mut rest = text;
-    for (place, word) in phrase.split(' ').enumerate() {
-        if place > 0 {
-            rest = rest.strip_prefix(' ')?.trim_start();
-        }
-        for expected in word.chars() {
-            let found = rest.chars().next()?;
-            if !found.to_lowercase().eq(expected.to_lowercase()) {
-                return None;
-            }
-            rest = rest.get(found.len_utf8()..)?;
-        }
-    }
-    let ends_word = phrase.ends_with('.') || !rest.starts_with(char::is_alphanumeric);
-    ends_word.then_some(rest)
+        .is_some_and(|word| stands_in(NUMBERED, &word.to_lowercase()))
 }
 
 #[cfg(test)]
 mod tests {
-    use super::{Qualifier, is_missing, take_qualifier};
+    use super::is_missing;
 
     #[test]
     fn words_for_missing_are_known_in_every_spelling() {
@@ -373,14 +105,5 @@ mod tests {
         for text in ["0", "insoluble", "4.5", "no", "> 3"] {
             assert!(!is_missing(text), "{text}");
         }
-    }
-
-    #[test]
-    fn qualifier_words_end_where_words_end() {
-        assert_eq!(take_qualifier("at least 3"), Some((Qualifier::AtLeast, " 3")));
-        assert_eq!(take_qualifier("Größer als 6"), Some((Qualifier::Above, " 6")));
-        assert_eq!(take_qualifier("ca.4"), Some((Qualifier::About, "4")));
-        assert_eq!(take_qualifier("bisphenol 4"), None);
-        assert_eq!(take_qualifier("=> 4"), Some((Qualifier::AtLeast, " 4")));
     }
 }

@@ -5,8 +5,10 @@ use std::collections::BTreeSet;
 use regex::Regex;
 
 use super::criterion::refuse_duplicate;
+use super::limit::{Measured, quantity};
 use super::read_id;
 use super::test::subjects;
+use crate::quantity::Dimension;
 use crate::fault::{OwnerKind, RuleFaults, RuleMistake};
 use crate::rules::file::{Located, Section};
 use crate::rules::{Blocks, Caution, RuleSource, Subject, Triggers};
@@ -22,13 +24,14 @@ const IDENTITIES: [(&str, Identity); 3] = [
     ("repaired-date", Identity::RepairedDate),
     ("not-identified", Identity::NotIdentified),
 ];
-const TRIGGER_KEYS: [&str; 6] = [
+const TRIGGER_KEYS: [&str; 7] = [
     "substance-types",
     "row-types",
     "identities",
     "name-patterns",
     "formula",
     "ionisable",
+    "log-kow-spread",
 ];
 
 /// The checked cautions of a file, in order.
@@ -94,7 +97,16 @@ fn read_triggers(section: &Section<'_>) -> Triggers {
         unless_name: read_pattern(section, "unless-names"),
         inorganic_formula: formula.is_some(),
         ionisable: section.flag("ionisable"),
+        log_kow_spread: read_spread(section),
     }
+}
+
+const SPREAD: Measured = Measured::new("a spread of log Kow", Dimension::Dimensionless);
+
+/// Log units between the lowest and the highest log Kow of a row.
+fn read_spread(section: &Section<'_>) -> Option<f64> {
+    let written = section.scalar("log-kow-spread")?;
+    quantity(section, &written, SPREAD)
 }
 
 fn set<T: Ord>(items: Option<Vec<T>>) -> BTreeSet<T> {

@@ -82,7 +82,21 @@ impl Expected {
             Property::LogKoa => (-10.0, 30.0),
             Property::PkaAcid | Property::PkaBase => (-60.0, 60.0),
             Property::MeltingPoint | Property::BoilingPoint => (-273.15, 1e4),
-            _ => (0.0, 1e15),
+            Property::WaterSolubility
+            | Property::VapourPressure
+            | Property::HenryConstant
+            | Property::Koc
+            | Property::Bcf
+            | Property::Baf
+            | Property::Bmf
+            | Property::Tmf
+            | Property::HalfLife(_)
+            | Property::HydrolysisHalfLife
+            | Property::PhotolysisHalfLife
+            | Property::DissipationHalfLife
+            | Property::LongTermToxicity
+            | Property::AcuteToxicity
+            | Property::MolarMass => (0.0, 1e15),
         };
         Self {
             what: property.title(),

@@ -10,7 +10,7 @@ use super::remark::{Said, basis_in};
 use crate::columns::Column;
 use crate::fault::CellFaultKind;
 use crate::quantity::{Quantity, plain_words};
-use crate::substance::{Basis, Compartment, Field, Property, Reading};
+use crate::substance::{Basis, Compartment, Property, Reading};
 use crate::workbook::CellContent;
 
 static TEST_NUMBER: LazyLock<Regex> =
@@ -37,70 +37,54 @@ struct Guideline {
 #[derive(Debug, Clone, PartialEq, Default)]
 pub(super) struct Companions {
     method: Option<Said>,
-    log_kow_sd: Option<f64>,
-    log_kow_temperature: Option<f64>,
-    log_kow_ph: Option<f64>,
-    koc_ph: Option<f64>,
-    bcf_lipid: Option<f64>,
+    pub(super) log_kow_sd: Option<f64>,
+    pub(super) log_kow_temperature: Option<f64>,
+    pub(super) log_kow_ph: Option<f64>,
+    pub(super) koc_ph: Option<f64>,
+    pub(super) bcf_lipid: Option<f64>,
     half_life_temperature: Vec<Speaking<f64>>,
     reliability: Vec<Speaking<u8>>,
     guidelines: Vec<Speaking<Guideline>>,
 }
 
 impl Companions {
-    /// Takes the cell of a companion column.
-    pub(super) fn take(&mut self, column: &Column, content: &CellContent) -> Result<(), CellFaultKind> {
-        let about = column.about;
-        match column.field {
-            Field::LogKowMethod => {
-                if let Some(text) = cell::value_text(content) {
-                    self.method = Some(said_by_method(&text));
-                }
-            }
-            Field::LogKowSd => {
-                let expected = Expected::bare("standard deviation of the log Kow", "0.3", (0.0, 10.0));
-                self.log_kow_sd = single(content, column, expected)?;
-            }
-            Field::LogKowTemperature => {
-                let expected = Expected::temperature("temperature of the log Kow");
-                self.log_kow_temperature = single(content, column, expected)?;
-            }
-            Field::LogKowPh => {
-                self.log_kow_ph = single(
-                    content,
-                    column,
-                    Expected::bare("pH of the log Kow", "7", (-2.0, 16.0)),
-                )?;
-            }
-            Field::KocPh => {
-                self.koc_ph = single(
-                    content,
-                    column,
-                    Expected::bare("pH of the Koc", "7", (-2.0, 16.0)),
-                )?;
-            }
-            Field::BcfLipid => {
-                self.bcf_lipid = single(content, column, Expected::percent("lipid content", "5 %"))?;
-            }
-            Field::HalfLifeTemperature => {
-                let expected = Expected::temperature("temperature of the half-life");
-                if let Some(value) = single(content, column, expected)? {
-                    self.half_life_temperature.push(Speaking { about, value });
-                }
-            }
-            Field::Reliability => {
-                if let Some(value) = read_reliability(content)? {
-                    self.reliability.push(Speaking { about, value });
-                }
-            }
-            Field::Guideline => self.take_guideline(about, content),
-            // The reader sends no other column here.
-            _ => {}
+    /// Takes a cell of the column on how the log Kow was obtained.
+    pub(super) fn take_method(&mut self, content: &CellContent) {
+        if let Some(text) = cell::value_text(content) {
+            self.method = Some(said_by_method(&text));
+        }
+    }
+
+    /// Takes a cell of the column of half-life temperatures.
+    pub(super) fn take_half_life_temperature(
+        &mut self,
+        column: &Column,
+        content: &CellContent,
+    ) -> Result<(), CellFaultKind> {
+        let expected = Expected::temperature("temperature of the half-life");
+        if let Some(value) = single(content, column, expected)? {
+            self.half_life_temperature.push(Speaking {
+                about: column.about,
+                value,
+            });
         }
         Ok(())
     }
 
-    fn take_guideline(&mut self, about: Option<Property>, content: &CellContent) {
+    /// Takes a cell of a column of reliability scores.
+    pub(super) fn take_reliability(
+        &mut self,
+        about: Option<Property>,
+        content: &CellContent,
+    ) -> Result<(), CellFaultKind> {
+        if let Some(value) = read_reliability(content)? {
+            self.reliability.push(Speaking { about, value });
+        }
+        Ok(())
+    }
+
+    /// Takes a cell of a column of guidelines.
+    pub(super) fn take_guideline(&mut self, about: Option<Property>, content: &CellContent) {
         let Some(text) = cell::value_text(content) else {
             return;
         };
@@ -205,7 +189,12 @@ fn spoken_of<T: Copy>(speaking: &[Speaking<T>], property: Property) -> Option<T>
     about(Some(property)).or_else(|| about(None))
 }
 
-fn single(content: &CellContent, column: &Column, expected: Expected) -> Result<Option<f64>, CellFaultKind> {
+/// The number of a cell, if it holds a single one.
+pub(super) fn single(
+    content: &CellContent,
+    column: &Column,
+    expected: Expected,
+) -> Result<Option<f64>, CellFaultKind> {
     let read = cell::read_quantity(content, column, expected, None)?;
     Ok(read.and_then(|(quantity, _): (Quantity, Said)| quantity.single()))
 }

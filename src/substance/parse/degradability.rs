@@ -1,4 +1,4 @@
-//! Cells on ready and inherent biodegradability.
+//! Cells on ready biodegradability, and what they share with those on inherent biodegradability.
 //!
 //! At least 70 % is ready; 60 to 70 % only with a named O2 or CO2 measure; below 60 % is not (OECD 301, pass levels).
 //! A pass reached after more than 28 days is open, and so is a level missed before 28 days are over.
@@ -14,7 +14,7 @@ use crate::fault::CellFaultKind;
 use crate::quantity::{
     Comparison, DecimalStyle, Dimension, Interval, Outcome, ReadAs, Unit, parse_quantity, plain_words,
 };
-use crate::substance::{Basis, DegradationTest, InherentBiodegradability, ReadyBiodegradability};
+use crate::substance::{Basis, DegradationTest, ReadyBiodegradability};
 use crate::workbook::CellContent;
 
 /// Pass level for dissolved organic carbon and for an unnamed measure, %.
@@ -33,7 +33,7 @@ static WINDOW: LazyLock<Regex> = LazyLock::new(|| {
         r"( (failed|passed|met|not met|nicht erfullt|erfullt|nicht eingehalten|eingehalten|criterion))*"
     ))
 });
-static NEGATIVE: LazyLock<Regex> = LazyLock::new(|| {
+pub(super) static NEGATIVE: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
         r"\b(not|non|no|nicht|kein) (\w+ )?(readily|ready|easily|leicht\w*|bio|biologisch\w*|biodegrad\w*|degrad\w*|",
         r"abbaubar\w*|bestanden|passed|met|erfullt)\b|\bnonbiodegrad\w*\b|\bnot (bio)?degrad\w*|\bfail\w*|\bschwer abbaubar|",
@@ -41,13 +41,13 @@ static NEGATIVE: LazyLock<Regex> = LazyLock::new(|| {
         r"nicht)\b"
     ))
 });
-static POSITIVE: LazyLock<Regex> = LazyLock::new(|| {
+pub(super) static POSITIVE: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
         r"\b(readily|ready|leicht\w* (biologisch\w* )?abbau\w*|leicht biologisch\w*|passed|pass|bestanden)\b|",
         r"^(yes|ja|y|j|true|wahr|positive?|positiv|leicht|easily|easily biodegradable)\b"
     ))
 });
-static INHERENT: LazyLock<Regex> =
+pub(super) static INHERENT: LazyLock<Regex> =
     LazyLock::new(|| fixed(r"\b(inherent\w*|inharent\w*|inhaerent\w*|potenziell abbaubar)\b"));
 static O2_OR_CO2: LazyLock<Regex> = LazyLock::new(|| {
     fixed(
@@ -60,7 +60,6 @@ static PERCENTAGE: LazyLock<Regex> = LazyLock::new(|| {
     )
 });
 static DAYS: LazyLock<Regex> = LazyLock::new(|| fixed(r"(\d+(?:[.,]\d+)?)\s*-?\s*(?:d|days?|tage?n?)\b"));
-static INHERENT_GUIDELINE: LazyLock<Regex> = LazyLock::new(|| fixed(r"\b302 ?([abc])\b"));
 
 /// A cell on ready biodegradability whose basis is still open.
 #[derive(Debug, Clone, PartialEq, Eq)]
@@ -79,28 +78,7 @@ impl ReadyCell {
     }
 }
 
-/// A cell on inherent biodegradability whose basis is still open.
-#[derive(Debug, Clone, PartialEq)]
-pub(super) struct InherentCell {
-    guideline: Option<String>,
-    degraded: Option<Interval>,
-    days: Option<f64>,
-    reported: String,
-}
-
-impl InherentCell {
-    pub(super) fn with_basis(self, basis: Basis) -> InherentBiodegradability {
-        InherentBiodegradability {
-            guideline: self.guideline,
-            degraded: self.degraded,
-            days: self.days,
-            basis,
-            reported: self.reported,
-        }
-    }
-}
-
-type Read<T> = Result<Option<T>, CellFaultKind>;
+pub(super) type Read<T> = Result<Option<T>, CellFaultKind>;
 
 const NOT_READY_CELL: CellFaultKind = CellFaultKind::NotA {
     what: "result of a ready biodegradability test",
@@ -217,7 +195,7 @@ fn result_of(degraded: Interval, days: Option<f64>, measure: Measure) -> Degrada
 }
 
 /// Numbers from 0 to 1 may be fractions; zero is no degradation either way.
-fn percentage_of_number(number: f64) -> Result<Interval, CellFaultKind> {
+pub(super) fn percentage_of_number(number: f64) -> Result<Interval, CellFaultKind> {
     if !(0.0..=150.0).contains(&number) {
         return Err(NOT_READY_CELL);
     }
@@ -236,7 +214,7 @@ const fn percent(decimal: DecimalStyle) -> ReadAs {
     }
 }
 
-fn bare_number(text: &str, decimal: DecimalStyle) -> Option<f64> {
+pub(super) fn bare_number(text: &str, decimal: DecimalStyle) -> Option<f64> {
     let only_digits = text
         .chars()
         .all(|character| character.is_ascii_digit() || matches!(character, '.' | ','));
@@ -246,7 +224,7 @@ fn bare_number(text: &str, decimal: DecimalStyle) -> Option<f64> {
     parse_quantity(text, percent(decimal)).ok()?.quantity.single()
 }
 
-fn percentages(text: &str, decimal: DecimalStyle) -> Vec<Interval> {
+pub(super) fn percentages(text: &str, decimal: DecimalStyle) -> Vec<Interval> {
     PERCENTAGE
         .find_iter(text)
         .filter_map(|found| parse_quantity(found.as_str(), percent(decimal)).ok())
@@ -255,71 +233,11 @@ fn percentages(text: &str, decimal: DecimalStyle) -> Vec<Interval> {
 }
 
 /// The longest time a text names, the 10-day window left out.
-fn days_in(text: &str) -> Option<f64> {
+pub(super) fn days_in(text: &str) -> Option<f64> {
     static WINDOW_AS_WRITTEN: LazyLock<Regex> =
         LazyLock::new(|| fixed(r"10\s*-?\s*(?:d|days?|tages?)\s*-?\s*(?:window|zeitfenster|fenster)"));
     let text = WINDOW_AS_WRITTEN.replace_all(text, " ");
     DAYS.captures_iter(&text)
         .filter_map(|found| found.get(1)?.as_str().replace(',', ".").parse().ok())
         .reduce(f64::max)
-}
-
-/// What a cell says of inherent biodegradability.
-pub(super) fn read_inherent(content: &CellContent, decimal: DecimalStyle) -> Read<(InherentCell, Said)> {
-    let not_a = CellFaultKind::NotA {
-        what: "result of an inherent biodegradability test",
-        example: "75 %, 28 d, OECD 302B",
-    };
-    let Some(text) = value_text(content) else {
-        return Ok(None);
-    };
-    let plain = plain_words(&text);
-    let bare = match content {
-        CellContent::Number(number) => Some(*number),
-        CellContent::Text(_) => bare_number(&text, decimal),
-        CellContent::Empty | CellContent::Error(_) => None,
-        CellContent::Boolean(_) | CellContent::DateTime(_) => return Err(not_a),
-    };
-    let degraded = match bare {
-        Some(number) => Some(percentage_of_number(number)?),
-        // Of several results the one of most concern.
-        None => percentages(&text, decimal)
-            .into_iter()
-            .min_by(|one, other| lowest(*one).total_cmp(&lowest(*other))),
-    };
-    let guideline = inherent_guideline(&plain);
-    let in_words = INHERENT.is_match(&plain) || POSITIVE.is_match(&plain) || NEGATIVE.is_match(&plain);
-    if degraded.is_none() && guideline.is_none() && !in_words {
-        return Err(not_a);
-    }
-    let said = Said::in_remarks(std::slice::from_ref(&text));
-    let days = days_in(&text);
-    Ok(Some((
-        InherentCell {
-            guideline,
-            degraded,
-            days,
-            reported: text,
-        },
-        said,
-    )))
-}
-
-fn lowest(interval: Interval) -> f64 {
-    interval.low().number().unwrap_or(f64::NEG_INFINITY)
-}
-
-fn inherent_guideline(plain: &str) -> Option<String> {
-    if let Some(letter) = INHERENT_GUIDELINE.captures(plain).and_then(|found| found.get(1)) {
-        return Some(format!("OECD 302{}", letter.as_str().to_uppercase()));
-    }
-    // Names of the methods in OECD 302 A to C.
-    [
-        ("scas", "OECD 302A"),
-        ("zahn wellens", "OECD 302B"),
-        ("miti ii", "OECD 302C"),
-    ]
-    .into_iter()
-    .find(|(name, _)| plain.contains(name))
-    .map(|(_, guideline)| guideline.to_owned())
 }

@@ -9,7 +9,7 @@ use super::pattern::fixed;
 use crate::fault::CellFaultKind;
 use crate::quantity::{Date, is_missing, tidy};
 use crate::substance::{
-    CasError, CasNumber, Cited, EcError, EcNumber, Field, Identity, RowType, Substance, SubstanceType,
+    CasError, CasNumber, Cited, EcError, EcNumber, Identity, RowType, Substance, SubstanceType,
 };
 use crate::workbook::{CellContent, CellRef};
 
@@ -39,40 +39,32 @@ enum CasCell {
 }
 
 impl IdentityCells {
-    /// Takes an identity cell into the substance.
-    pub(super) fn take(
+    /// Takes a cell of the CAS column.
+    pub(super) fn take_cas(
         &mut self,
         substance: &mut Substance,
-        field: Field,
         content: &CellContent,
-        place: &CellRef,
+        cell: CellRef,
     ) -> Result<(), CellFaultKind> {
-        let cell = place.clone();
-        match field {
-            Field::CasNumber => {
-                let read = read_cas(content).inspect_err(|fault| self.note_several(fault))?;
-                let (value, how) = match read {
-                    CasCell::Missing => return Ok(()),
-                    CasCell::Number(number) => (number, Self::AsWritten),
-                    CasCell::FromDate(number) => (number, Self::FromDate),
-                };
-                *self = (*self).max(how);
-                substance.cas = Some(Cited { value, cell });
-            }
-            Field::EcNumber => {
-                let read = read_ec(content).inspect_err(|fault| self.note_several(fault))?;
-                substance.ec = read.map(|value| Cited { value, cell });
-            }
-            Field::Smiles => substance.smiles = read_smiles(content)?.map(|value| Cited { value, cell }),
-            Field::InchiKey => {
-                substance.inchi_key = read_inchi_key(content)?.map(|value| Cited { value, cell })
-            }
-            Field::Formula => substance.formula = read_name(content).map(|value| Cited { value, cell }),
-            Field::Name => substance.name = read_name(content).map(|value| Cited { value, cell }),
-            Field::RowId => substance.row_id = cell::text_of(content).map(|value| Cited { value, cell }),
-            // The reader sends no other column here.
-            _ => {}
-        }
+        let (value, how) = match read_cas(content).inspect_err(|fault| self.note_several(fault))? {
+            CasCell::Missing => return Ok(()),
+            CasCell::Number(number) => (number, Self::AsWritten),
+            CasCell::FromDate(number) => (number, Self::FromDate),
+        };
+        *self = (*self).max(how);
+        substance.cas = Some(Cited { value, cell });
+        Ok(())
+    }
+
+    /// Takes a cell of the EC column.
+    pub(super) fn take_ec(
+        &mut self,
+        substance: &mut Substance,
+        content: &CellContent,
+        cell: CellRef,
+    ) -> Result<(), CellFaultKind> {
+        let read = read_ec(content).inspect_err(|fault| self.note_several(fault))?;
+        substance.ec = read.map(|value| Cited { value, cell });
         Ok(())
     }
 
@@ -242,7 +234,7 @@ fn ec_from_digits(text: &str) -> Option<String> {
 }
 
 /// A SMILES by its characters only; whether it is a molecule is for the structure to find.
-fn read_smiles(content: &CellContent) -> Result<Option<String>, CellFaultKind> {
+pub(super) fn read_smiles(content: &CellContent) -> Result<Option<String>, CellFaultKind> {
     let Some(text) = cell::text_of(content) else {
         return Ok(None);
     };
@@ -281,7 +273,7 @@ fn looks_like_smiles(text: &str) -> bool {
     !in_bracket && text.contains(|character: char| character.is_ascii_alphabetic())
 }
 
-fn read_inchi_key(content: &CellContent) -> Result<Option<String>, CellFaultKind> {
+pub(super) fn read_inchi_key(content: &CellContent) -> Result<Option<String>, CellFaultKind> {
     let Some(text) = cell::value_text(content) else {
         return Ok(None);
     };
@@ -296,7 +288,7 @@ fn read_inchi_key(content: &CellContent) -> Result<Option<String>, CellFaultKind
 }
 
 /// A name or formula as written. `Na`, `Nb` and `Nd` are elements and no words for missing.
-fn read_name(content: &CellContent) -> Option<String> {
+pub(super) fn read_name(content: &CellContent) -> Option<String> {
     let text = cell::text_of(content)?;
     let is_element = matches!(text.as_str(), "Na" | "Nb" | "Nd");
     (is_element || !is_missing(&tidy(&text))).then_some(text)

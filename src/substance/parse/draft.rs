@@ -1,0 +1,350 @@
+//! A row while its cells are read: values wait until the columns that speak of them are known.
+
+use std::sync::Arc;
+
+use super::cell::{self, Expected};
+use super::companions::{self, Companions};
+use super::identity::{self, IdentityCells};
+use super::remark::{self, Said};
+use super::{UnstatedBasis, degradability, inherent, kinds, statements};
+use crate::columns::Column;
+use crate::fault::{CellFault, CellFaultKind};
+use crate::quantity::Quantity;
+use crate::substance::{Basis, Cited, Conditions, Field, Property, Reading, RowType, Substance};
+use crate::workbook::{Cell, CellContent, CellRef};
+
+/// A value whose basis and conditions still wait for the columns that speak of it.
+struct Waiting<T> {
+    value: T,
+    said: Said,
+    header: Said,
+    cell: CellRef,
+}
+
+enum AnyValue {
+    Property(Property, Waiting<Quantity>),
+    Tonnage(Waiting<Quantity>),
+    Content(Waiting<Quantity>),
+    Ready(Waiting<degradability::ReadyCell>),
+    Inherent(Waiting<inherent::InherentCell>),
+}
+
+/// A row on its way to a [`Substance`].
+pub(super) struct Draft {
+    substance: Substance,
+    identity: IdentityCells,
+    companions: Companions,
+    values: Vec<AnyValue>,
+    molar_mass: Option<f64>,
+}
+
+const PH_RANGE: (f64, f64) = (-2.0, 16.0);
+
+impl Draft {
+    /// A row of which nothing is read yet.
+    pub(super) fn new(sheet: Arc<str>, row: u32) -> Self {
+        Self {
+            substance: Substance::unknown(sheet, row),
+            identity: IdentityCells::default(),
+            companions: Companions::default(),
+            values: Vec::new(),
+            molar_mass: None,
+        }
+    }
+
+    /// Takes a cell as what its column holds.
+    pub(super) fn take(&mut self, column: &Column, cell: &Cell) {
+        let place = CellRef {
+            sheet: Arc::clone(&self.substance.sheet),
+            row: self.substance.row,
+            column: column.index,
+        };
+        let result = match &cell.content {
+            CellContent::Empty => Ok(()),
+            CellContent::Error(_) => Err(CellFaultKind::SheetError),
+            content => self.take_content(column, content, place.clone()),
+        };
+        if let Err(kind) = result {
+            self.fault(&cell.content, place, kind);
+        }
+    }
+
+    fn fault(&mut self, content: &CellContent, cell: CellRef, kind: CellFaultKind) {
+        let found = cell::shown(content);
+        self.substance.faults.push(CellFault { cell, found, kind });
+    }
+
+    fn take_content(
+        &mut self,
+        column: &Column,
+        content: &CellContent,
+        cell: CellRef,
+    ) -> Result<(), CellFaultKind> {
+        let bare =
+            |what, example, range| companions::single(content, column, Expected::bare(what, example, range));
+        match column.field {
+            Field::RowId => self.substance.row_id = cited(cell::text_of(content), cell),
+            Field::Name => self.substance.name = cited(identity::read_name(content), cell),
+            Field::Formula => self.substance.formula = cited(identity::read_name(content), cell),
+            Field::CasNumber => self.identity.take_cas(&mut self.substance, content, cell)?,
+            Field::EcNumber => self.identity.take_ec(&mut self.substance, content, cell)?,
+            Field::Smiles => self.substance.smiles = cited(identity::read_smiles(content)?, cell),
+            Field::InchiKey => self.substance.inchi_key = cited(identity::read_inchi_key(content)?, cell),
+            Field::RowType => self.take_row_type(content)?,
+            Field::SubstanceType => {
+                self.substance.substance_type = cited(kinds::read_substance_type(content)?, cell);
+            }
+            Field::Property(property) => self.take_property(property, column, content, &cell)?,
+            Field::LogKowMethod => self.companions.take_method(content),
+            Field::LogKowSd => {
+                self.companions.log_kow_sd = bare("standard deviation of the log Kow", "0.3", (0.0, 10.0))?;
+            }
+            Field::LogKowTemperature => {
+                let expected = Expected::temperature("temperature of the log Kow");
+                self.companions.log_kow_temperature = companions::single(content, column, expected)?;
+            }
+            Field::LogKowPh => self.companions.log_kow_ph = bare("pH of the log Kow", "7", PH_RANGE)?,
+            Field::KocPh => self.companions.koc_ph = bare("pH of the Koc", "7", PH_RANGE)?,
+            Field::BcfLipid => {
+                let expected = Expected::percent("lipid content", "5 %");
+                self.companions.bcf_lipid = companions::single(content, column, expected)?;
+            }
+            Field::HalfLifeTemperature => self.companions.take_half_life_temperature(column, content)?,
+            Field::Reliability => self.companions.take_reliability(column.about, content)?,
+            Field::Guideline => {
+                self.companions.take_guideline(column.about, content);
+                self.carry_text(column.field, content, cell);
+            }
+            Field::ReadyBiodegradability => self.take_ready(column, content, &cell)?,
+            Field::InherentBiodegradability => self.take_inherent(column, content, &cell)?,
+            Field::HazardStatements => self.take_statements(content, cell)?,
+            Field::Content | Field::Tonnage => self.take_amount(column, content, &cell)?,
+            Field::Reference
+            | Field::Year
+            | Field::Product
+            | Field::Supplier
+            | Field::Use
+            | Field::SubstituteFor
+            | Field::ConstituentOf
+            | Field::TransformsTo
+            | Field::AssessorVerdict
+            | Field::AssessorReason
+            | Field::Assessor
+            | Field::AssessedOn => self.carry_text(column.field, content, cell),
+        }
+        Ok(())
+    }
+
+    fn take_amount(
+        &mut self,
+        column: &Column,
+        content: &CellContent,
+        cell: &CellRef,
+    ) -> Result<(), CellFaultKind> {
+        let is_content = column.field == Field::Content;
+        let expected = if is_content {
+            Expected::percent("content", "12 %")
+        } else {
+            Expected::TONNAGE
+        };
+        if let Some((quantity, said)) = cell::read_quantity(content, column, expected, None)? {
+            let waiting = waiting(column, quantity, said, cell);
+            self.values.push(if is_content {
+                AnyValue::Content(waiting)
+            } else {
+                AnyValue::Tonnage(waiting)
+            });
+        }
+        Ok(())
+    }
+
+    fn carry_text(&mut self, field: Field, content: &CellContent, cell: CellRef) {
+        if let Some(value) = cell::text_of(content) {
+            let cited = Cited { value, cell };
+            self.substance.texts.entry(field).or_insert(cited);
+        }
+    }
+
+    fn take_row_type(&mut self, content: &CellContent) -> Result<(), CellFaultKind> {
+        if let Some(row_type) = kinds::read_row_type(content)? {
+            self.substance.row_type = row_type;
+        }
+        match self.substance.row_type {
+            RowType::Mixture => Err(CellFaultKind::MixtureRow),
+            RowType::Article => Err(CellFaultKind::ArticleRow),
+            RowType::NotStated | RowType::Substance => Ok(()),
+        }
+    }
+
+    fn take_property(
+        &mut self,
+        property: Property,
+        column: &Column,
+        content: &CellContent,
+        place: &CellRef,
+    ) -> Result<(), CellFaultKind> {
+        let expected = Expected::property(property);
+        let Some((quantity, said)) = cell::read_quantity(content, column, expected, self.molar_mass)? else {
+            return Ok(());
+        };
+        if property == Property::MolarMass {
+            self.molar_mass = self.molar_mass.or(quantity.single());
+        }
+        let value = waiting(column, quantity, said, place);
+        self.values.push(AnyValue::Property(property, value));
+        Ok(())
+    }
+
+    fn take_ready(
+        &mut self,
+        column: &Column,
+        content: &CellContent,
+        place: &CellRef,
+    ) -> Result<(), CellFaultKind> {
+        let Some((ready, said, fault)) = degradability::read_ready(content, column.decimal)? else {
+            return Ok(());
+        };
+        if let Some(kind) = fault {
+            self.fault(content, place.clone(), kind);
+        }
+        self.values
+            .push(AnyValue::Ready(waiting(column, ready, said, place)));
+        Ok(())
+    }
+
+    fn take_inherent(
+        &mut self,
+        column: &Column,
+        content: &CellContent,
+        place: &CellRef,
+    ) -> Result<(), CellFaultKind> {
+        if let Some((inherent, said)) = inherent::read_inherent(content, column.decimal)? {
+            self.values
+                .push(AnyValue::Inherent(waiting(column, inherent, said, place)));
+        }
+        Ok(())
+    }
+
+    /// Several columns, for example one of codes and one of classes, add up.
+    fn take_statements(&mut self, content: &CellContent, place: CellRef) -> Result<(), CellFaultKind> {
+        let (statements, fault) = statements::read_statements(content)?;
+        if let Some(value) = statements {
+            let before = self.substance.hazard_statements.take();
+            let (value, cell) = match before {
+                Some(earlier) => (earlier.value.united(&value), earlier.cell),
+                None => (value, place),
+            };
+            self.substance.hazard_statements = Some(Cited { value, cell });
+        }
+        fault.map_or(Ok(()), Err)
+    }
+
+    /// The substance, once every cell of the row was taken.
+    pub(super) fn finish(mut self, unstated: UnstatedBasis) -> Substance {
+        let values = std::mem::take(&mut self.values);
+        let properties: Vec<Property> = values
+            .iter()
+            .filter_map(|value| match value {
+                AnyValue::Property(property, _) => Some(*property),
+                AnyValue::Tonnage(_) | AnyValue::Content(_) | AnyValue::Ready(_) | AnyValue::Inherent(_) => {
+                    None
+                }
+            })
+            .collect();
+        for value in values {
+            self.settle(value, &properties, unstated);
+        }
+        self.identity.conclude(&mut self.substance);
+        self.substance
+    }
+
+    fn settle(&mut self, value: AnyValue, properties: &[Property], unstated: UnstatedBasis) {
+        let substance = &mut self.substance;
+        match value {
+            AnyValue::Property(property, value) => {
+                let speaking = self.companions.of_property(property, properties);
+                let mut reading = reading(value, &speaking, unstated);
+                self.companions.complete(property, &mut reading);
+                substance.readings.entry(property).or_default().push(reading);
+            }
+            AnyValue::Tonnage(value) => {
+                substance.tonnage.get_or_insert(reading(value, &[], unstated));
+            }
+            AnyValue::Content(value) => {
+                substance.content.get_or_insert(reading(value, &[], unstated));
+            }
+            AnyValue::Ready(value) => {
+                let basis = basis_of(
+                    &value.said,
+                    &value.header,
+                    &self.companions.of_tests(&["301", "310"]),
+                    unstated,
+                );
+                substance.ready.push(Cited {
+                    value: value.value.with_basis(basis),
+                    cell: value.cell,
+                });
+            }
+            AnyValue::Inherent(value) => {
+                let basis = basis_of(
+                    &value.said,
+                    &value.header,
+                    &self.companions.of_tests(&["302"]),
+                    unstated,
+                );
+                substance.inherent.push(Cited {
+                    value: value.value.with_basis(basis),
+                    cell: value.cell,
+                });
+            }
+        }
+    }
+}
+
+fn cited<T>(value: Option<T>, cell: CellRef) -> Option<Cited<T>> {
+    value.map(|value| Cited { value, cell })
+}
+
+fn waiting<T>(column: &Column, value: T, said: Said, cell: &CellRef) -> Waiting<T> {
+    let header = Said {
+        basis: column.basis,
+        conditions: column.conditions.clone(),
+    };
+    Waiting {
+        value,
+        said,
+        header,
+        cell: cell.clone(),
+    }
+}
+
+/// The cell's own word first; then calculated if anything beside it says so, because an estimate is never shown as
+/// measured.
+fn basis_of(cell: &Said, header: &Said, beside: &[&Said], unstated: UnstatedBasis) -> Basis {
+    let others = || {
+        beside
+            .iter()
+            .map(|said| said.basis)
+            .chain([header.basis])
+            .flatten()
+    };
+    cell.basis
+        .or_else(|| others().find(|basis| *basis == Basis::Calculated))
+        .or_else(|| others().next())
+        .unwrap_or_else(|| unstated.basis())
+}
+
+fn reading(value: Waiting<Quantity>, beside: &[&Said], unstated: UnstatedBasis) -> Reading {
+    let basis = basis_of(&value.said, &value.header, beside, unstated);
+    let mut conditions: Conditions = value.said.conditions;
+    for said in beside {
+        remark::fill_conditions(&mut conditions, &said.conditions);
+    }
+    remark::fill_conditions(&mut conditions, &value.header.conditions);
+    Reading {
+        quantity: value.value,
+        basis,
+        conditions,
+        cell: value.cell,
+    }
+}
