@@ -106,6 +106,6 @@ pub fn recognise(
     let found = header_row::find(first_rows, words, overrides)?;
     let data: Vec<&Row> = first_rows.iter().filter(|row| row.index > found.row).collect();
     let mut recognised = choice::choose(sheet, found, words);
-    decimals::set_styles(&mut recognised.columns, &data);
+    decimals::set_styles(sheet, &mut recognised, &data);
     Some(recognised)
 }

@@ -5,23 +5,25 @@ use std::sync::LazyLock;
 
 use regex::Regex;
 
-use super::Column;
 use super::choice::dimension_of;
+use super::{Column, Recognised};
 use crate::quantity::{DecimalStyle, tidy};
-use crate::workbook::{CellContent, Row};
+use crate::workbook::{CellContent, Row, column_letters};
 
 /// Digits with separators; numbers of three dotted parts and the like show nothing.
 static NUMBER: LazyLock<Option<Regex>> = LazyLock::new(|| Regex::new(r"\d*(?:[.,]\d+)+").ok());
 
 /// How many numbers show one style.
-#[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
+#[derive(Debug, Clone, PartialEq, Eq, Default)]
 struct Shown {
     points: usize,
     commas: usize,
+    /// The first number that could be read both ways.
+    ambiguous: Option<String>,
 }
 
 impl Shown {
-    fn style(self) -> Option<DecimalStyle> {
+    fn style(&self) -> Option<DecimalStyle> {
         match self.commas.cmp(&self.points) {
             std::cmp::Ordering::Greater => Some(DecimalStyle::Comma),
             std::cmp::Ordering::Less => Some(DecimalStyle::Point),
@@ -37,31 +39,53 @@ impl Shown {
     }
 }
 
-/// Sets each column's style: what its own text cells show, else what the sheet's show, else the point.
-pub(super) fn set_styles(columns: &mut [Column], data: &[&Row]) {
-    let mut sheet = Shown::default();
-    let mut own = Vec::with_capacity(columns.len());
-    for column in columns.iter() {
-        let mut shown = Shown::default();
-        if dimension_of(column.field).is_some() {
-            for row in data {
-                if let Some(CellContent::Text(text)) = row.cell(column.index).map(|cell| &cell.content) {
-                    count(text, &mut shown);
-                }
+/// Sets each column's style: what its own text cells show, else what the sheet's show, else the point. Numbers that
+/// could be read both ways are remarked on.
+pub(super) fn set_styles(sheet: &str, recognised: &mut Recognised, data: &[&Row]) {
+    let own: Vec<Shown> = recognised
+        .columns
+        .iter()
+        .map(|column| shown_by(column, data))
+        .collect();
+    let whole = Shown {
+        points: own.iter().map(|shown| shown.points).sum(),
+        commas: own.iter().map(|shown| shown.commas).sum(),
+        ambiguous: None,
+    };
+    for (column, shown) in recognised.columns.iter_mut().zip(own) {
+        let (style, why) = match (shown.style(), whole.style()) {
+            (Some(style), _) => (style, "as the column's other cells show"),
+            (None, Some(style)) => (style, "as the sheet's other cells show"),
+            (None, None) => (DecimalStyle::Point, "because no cell shows which"),
+        };
+        column.decimal = style;
+        let word = match style {
+            DecimalStyle::Point => "point",
+            DecimalStyle::Comma => "comma",
+        };
+        if style == DecimalStyle::Comma {
+            let _ = write!(column.reason, "; decimal comma, {why}");
+        }
+        if let Some(example) = shown.ambiguous {
+            recognised.remarks.push(format!(
+                "{sheet}: column {} holds numbers such as `{example}`, which could group thousands; they are read with \
+                 a decimal {word}, {why}",
+                column_letters(column.index)
+            ));
+        }
+    }
+}
+
+fn shown_by(column: &Column, data: &[&Row]) -> Shown {
+    let mut shown = Shown::default();
+    if dimension_of(column.field).is_some() {
+        for row in data {
+            if let Some(CellContent::Text(text)) = row.cell(column.index).map(|cell| &cell.content) {
+                count(text, &mut shown);
             }
         }
-        sheet.points += shown.points;
-        sheet.commas += shown.commas;
-        own.push(shown);
     }
-    for (column, shown) in columns.iter_mut().zip(own) {
-        let by_column = shown.style();
-        column.decimal = by_column.or_else(|| sheet.style()).unwrap_or_default();
-        if column.decimal == DecimalStyle::Comma {
-            let whose = if by_column.is_some() { "column" } else { "sheet" };
-            let _ = write!(column.reason, "; decimal comma as in the {whose}'s cells");
-        }
-    }
+    shown
 }
 
 fn count(text: &str, shown: &mut Shown) {
@@ -69,8 +93,11 @@ fn count(text: &str, shown: &mut Shown) {
         return;
     };
     for found in number.find_iter(&tidy(text)) {
-        if let Some(style) = style_of(found.as_str()) {
-            shown.add(style);
+        match style_of(found.as_str()) {
+            Some(style) => shown.add(style),
+            None => {
+                shown.ambiguous.get_or_insert_with(|| found.as_str().to_owned());
+            }
         }
     }
 }

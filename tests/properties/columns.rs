@@ -3,7 +3,7 @@
 use std::collections::BTreeSet;
 
 use kowledger::columns::{Column, ColumnOverride, ColumnWords, Recognised, recognise};
-use kowledger::quantity::DecimalStyle;
+use kowledger::quantity::{DecimalStyle, Unit};
 use kowledger::substance::{Basis, Field, Property};
 use kowledger::workbook::{CellContent, Row};
 
@@ -30,9 +30,7 @@ fn every_header_of_the_table_names_its_field_and_unit() {
         let recognised = columns_of(&rows).unwrap();
         let found = recognised.columns.iter().find(|column| column.index == 0);
         let found_field = found.map_or("none", |column| column.field.id());
-        let found_unit = found
-            .and_then(|column| column.unit)
-            .map_or("", |unit| unit.symbol());
+        let found_unit = found.and_then(|column| column.unit).map_or("", Unit::symbol);
         if (found_field, found_unit) != (field, unit) {
             wrong.push(format!(
                 "`{header}`: expected {field} {unit}, found {found_field} {found_unit}"
@@ -57,12 +55,8 @@ fn every_field_is_named_in_both_languages() {
     }
 }
 
-fn column(recognised: &Recognised, field: Field) -> &Column {
-    recognised
-        .columns
-        .iter()
-        .find(|column| column.field == field)
-        .unwrap()
+fn column(recognised: &Recognised, field: Field) -> Option<&Column> {
+    recognised.columns.iter().find(|column| column.field == field)
 }
 
 #[test]
@@ -87,13 +81,13 @@ fn a_row_of_units_below_the_names_belongs_to_the_header() {
     ];
     let recognised = columns_of(&rows).unwrap();
     assert_eq!((recognised.header_row, recognised.first_data_row), (1, 2));
-    let soil = column(&recognised, Field::from_id("half-life-soil").unwrap());
+    let soil = column(&recognised, Field::from_id("half-life-soil").unwrap()).unwrap();
     assert_eq!(
-        (soil.header.as_str(), soil.unit.map(|unit| unit.symbol())),
+        (soil.header.as_str(), soil.unit.map(Unit::symbol)),
         ("DT50 soil [wk]", Some("wk"))
     );
-    let solubility = column(&recognised, Field::Property(Property::WaterSolubility));
-    assert_eq!(solubility.unit.map(|unit| unit.symbol()), Some("µg/L"));
+    let solubility = column(&recognised, Field::Property(Property::WaterSolubility)).unwrap();
+    assert_eq!(solubility.unit.map(Unit::symbol), Some("µg/L"));
 }
 
 #[test]
@@ -204,24 +198,46 @@ fn the_decimal_style_is_the_columns_else_the_sheets_else_the_point() {
     assert_eq!(styles(&rows(&[["", "1.234", "5"]])), (point, point));
 }
 
-fn recognised_with(headers: &[&str], overrides: &[&str]) -> Recognised {
-    let overrides: Vec<ColumnOverride> = overrides
+#[test]
+fn numbers_that_could_group_thousands_are_remarked_on() {
+    let header = text_row(0, &["CAS", "BCF"]);
+    let remarks = |cells: &[&str]| {
+        let data = cells
+            .iter()
+            .enumerate()
+            .map(|(place, text)| text_row(place + 1, &["", text]));
+        let rows: Vec<Row> = std::iter::once(header.clone()).chain(data).collect();
+        columns_of(&rows).unwrap().remarks
+    };
+    assert_eq!(
+        remarks(&["1.500"]),
+        [
+            "Sheet: column B holds numbers such as `1.500`, which could group thousands; they are read with a decimal \
+          point, because no cell shows which"
+        ]
+    );
+    assert!(remarks(&["1.500", "12,5"])[0].ends_with("decimal comma, as the column's other cells show"));
+    assert!(remarks(&["15.00", "0.125"]).is_empty());
+}
+
+fn recognised_with(headers: &[&str], overrides: &[&str]) -> Result<Recognised, String> {
+    let overrides = overrides
         .iter()
-        .map(|text| ColumnOverride::parse(text).unwrap())
-        .collect();
+        .map(|text| ColumnOverride::parse(text))
+        .collect::<Result<Vec<_>, _>>()?;
     recognise(
         "Sheet",
         &[text_row(0, headers)],
-        &ColumnWords::built_in().unwrap(),
+        &ColumnWords::built_in()?,
         &overrides,
     )
-    .unwrap()
+    .ok_or_else(|| "no inventory".to_owned())
 }
 
 #[test]
 fn the_user_can_name_a_column_or_leave_it_aside() {
     let headers = ["CAS", "Fettliebe", "log Kow"];
-    let recognised = recognised_with(&headers, &["Fettliebe = log-kow", "LOG KOW=ignore"]);
+    let recognised = recognised_with(&headers, &["Fettliebe = log-kow", "LOG KOW=ignore"]).unwrap();
     let fields: Vec<&str> = recognised
         .columns
         .iter()

@@ -1,6 +1,6 @@
 //! Cells of words: biodegradability, hazard statements, types, reliability, and the columns beside a value.
 
-use kowledger::quantity::Bound;
+use kowledger::quantity::{Bound, Interval};
 use kowledger::substance::{
     Basis, Completeness, DegradationTest, HazardStatements, Property, ReadyBiodegradability, Substance,
     SubstanceType,
@@ -9,8 +9,8 @@ use kowledger::workbook::CellContent;
 
 use crate::sheet::{read_cells, read_last};
 
-fn ready_row(text: &str) -> Substance {
-    read_last(&[&["CAS", "Ready biodegradability"], &["50-29-3", text]]).unwrap()
+fn ready_row(text: &str) -> Result<Substance, String> {
+    read_last(&[&["CAS", "Ready biodegradability"], &["50-29-3", text]])
 }
 
 fn ready(substance: &Substance) -> Option<&ReadyBiodegradability> {
@@ -33,6 +33,8 @@ fn ready_biodegradability_is_read_from_words_and_from_numbers() {
         ("readily biodegradable, but failing 10-day window", Ready),
         ("readily biodegradable, 10-day window not met", Ready),
         ("no", NotReady),
+        ("no (32 %, 28 d)", NotReady),
+        ("ready biodegradability: 40 %, 28 d", NotReady),
         ("nein", NotReady),
         ("not ready", NotReady),
         ("not readily biodegradable", NotReady),
@@ -71,7 +73,7 @@ fn ready_biodegradability_is_read_from_words_and_from_numbers() {
         ("82", Ready),
         ("0 %", NotReady),
     ] {
-        let substance = ready_row(text);
+        let substance = ready_row(text).unwrap();
         assert_eq!(
             ready(&substance).map(|ready| ready.result),
             Some(result),
@@ -93,12 +95,33 @@ fn what_settles_nothing_on_ready_biodegradability_gives_no_reading_and_a_fault()
             "inherently (75 %, OECD 302B)",
             "does not settle ready biodegradability",
         ),
+        (
+            "not tested for ready biodegradability",
+            "is no result of a ready biodegradability test",
+        ),
+        (
+            "ready biodegradability unknown",
+            "is no result of a ready biodegradability test",
+        ),
+        (
+            "ready biodegradability",
+            "is no result of a ready biodegradability test",
+        ),
+        (
+            "expected to be readily biodegradable",
+            "is no result of a ready biodegradability test",
+        ),
+        ("no information", "is no result of a ready biodegradability test"),
+        (
+            "leichte Abbaubarkeit nicht geprüft",
+            "is no result of a ready biodegradability test",
+        ),
         ("biodegradable", "is no result of a ready biodegradability test"),
         ("soon", "is no result of a ready biodegradability test"),
         ("0.82", "may be a fraction or a percentage"),
         ("1", "may be a fraction or a percentage"),
     ] {
-        let substance = ready_row(text);
+        let substance = ready_row(text).unwrap();
         assert_eq!(ready(&substance), None, "{text}");
         assert!(
             substance.faults[0].to_string().contains(part),
@@ -106,7 +129,7 @@ fn what_settles_nothing_on_ready_biodegradability_gives_no_reading_and_a_fault()
             substance.faults[0]
         );
     }
-    let missing = ready_row("n.d.");
+    let missing = ready_row("n.d.").unwrap();
     assert_eq!((ready(&missing), missing.faults.len()), (None, 0));
 }
 
@@ -116,7 +139,7 @@ fn words_against_numbers_are_open_and_a_fault() {
         "readily biodegradable (40 %, 28 d)",
         "not readily biodegradable (82 %, 28 d)",
     ] {
-        let substance = ready_row(text);
+        let substance = ready_row(text).unwrap();
         assert_eq!(
             ready(&substance).map(|ready| ready.result),
             Some(DegradationTest::Open),
@@ -157,7 +180,7 @@ fn a_test_number_makes_a_result_measured_and_a_model_makes_it_calculated() {
         ("not readily biodegradable (predicted)", Basis::Calculated),
     ] {
         assert_eq!(
-            ready(&ready_row(text)).map(|ready| ready.basis),
+            ready(&ready_row(text).unwrap()).map(|ready| ready.basis),
             Some(basis),
             "{text}"
         );
@@ -185,7 +208,7 @@ fn an_inherent_test_has_its_guideline_percentage_and_days() {
     ] {
         let substance = read_last(&[&["CAS", "Inherent biodegradability"], &["50-29-3", text]]).unwrap();
         let inherent = &substance.inherent.first().unwrap().value;
-        let degraded = inherent.degraded.map(|interval| interval.low());
+        let degraded = inherent.degraded.map(Interval::low);
         assert_eq!(inherent.guideline.as_deref(), guideline, "{text}");
         assert_eq!(degraded, percent.map(Bound::Included), "{text}");
         assert_eq!(inherent.days, days, "{text}");
@@ -194,8 +217,8 @@ fn an_inherent_test_has_its_guideline_percentage_and_days() {
     assert_eq!((wrong.inherent.len(), wrong.faults.len()), (0, 1));
 }
 
-fn statements_row(text: &str) -> Substance {
-    read_last(&[&["CAS", "Hazard statements"], &["50-29-3", text]]).unwrap()
+fn statements_row(text: &str) -> Result<Substance, String> {
+    read_last(&[&["CAS", "Hazard statements"], &["50-29-3", text]])
 }
 
 fn statements(substance: &Substance) -> Option<&HazardStatements> {
@@ -235,7 +258,7 @@ fn hazard_statements_are_read_in_every_usual_spelling() {
         ("keine", vec![]),
         ("nicht eingestuft", vec![]),
     ] {
-        let substance = statements_row(text);
+        let substance = statements_row(text).unwrap();
         let found: Option<Vec<&str>> = statements(&substance).map(|statements| statements.codes().collect());
         assert_eq!(found, Some(codes), "{text}");
         assert!(substance.faults.is_empty(), "{text}");
@@ -244,8 +267,18 @@ fn hazard_statements_are_read_in_every_usual_spelling() {
 
 #[test]
 fn a_cell_without_statement_is_never_a_row_without_hazards() {
-    for text in ["n.d.", "-", "n/a", "unknown", "k.A.", ""] {
-        let substance = statements_row(text);
+    for text in [
+        "n.d.",
+        "-",
+        "n/a",
+        "unknown",
+        "k.A.",
+        "",
+        "no data",
+        "keine Angabe",
+        "keine Daten",
+    ] {
+        let substance = statements_row(text).unwrap();
         assert_eq!(
             (statements(&substance), substance.faults.len()),
             (None, 0),
@@ -253,6 +286,9 @@ fn a_cell_without_statement_is_never_a_row_without_hazards() {
         );
     }
     for text in [
+        "not classified due to lack of data",
+        "no information",
+        "none known",
         "see data sheet",
         "toxic",
         "Carc.",
@@ -261,7 +297,7 @@ fn a_cell_without_statement_is_never_a_row_without_hazards() {
         "P280",
         "carcinogenic",
     ] {
-        let substance = statements_row(text);
+        let substance = statements_row(text).unwrap();
         assert_eq!(
             (statements(&substance), substance.faults.len()),
             (None, 1),
@@ -272,14 +308,14 @@ fn a_cell_without_statement_is_never_a_row_without_hazards() {
 
 #[test]
 fn a_class_without_category_leaves_the_statements_incomplete() {
-    let substance = statements_row("H410; Carc.");
+    let substance = statements_row("H410; Carc.").unwrap();
     let found = statements(&substance).unwrap();
     assert_eq!(found.codes().collect::<Vec<_>>(), ["H410"]);
     assert_eq!(
         (found.completeness(), substance.faults.len()),
         (Completeness::Incomplete, 1)
     );
-    let complete = statements_row("H410; Carc. 1B");
+    let complete = statements_row("H410; Carc. 1B").unwrap();
     assert_eq!(
         statements(&complete).map(HazardStatements::completeness),
         Some(Completeness::Complete)
@@ -326,11 +362,16 @@ fn substance_types_are_known_in_both_languages() {
 }
 
 /// Basis of the log Kow and of the BCF of a row with these companion columns.
-fn bases(companion: &str, text: &str) -> (Basis, Basis) {
+fn bases(companion: &str, text: &str) -> Result<(Option<Basis>, Option<Basis>), String> {
     let headers = ["CAS", "log Kow", "BCF", companion];
-    let substance = read_last(&[&headers, &["50-29-3", "4.5", "1500", text]]).unwrap();
-    let basis = |property| substance.readings_of(property)[0].basis;
-    (basis(Property::LogKow), basis(Property::Bcf))
+    let substance = read_last(&[&headers, &["50-29-3", "4.5", "1500", text]])?;
+    let basis = |property| {
+        substance
+            .readings_of(property)
+            .first()
+            .map(|reading| reading.basis)
+    };
+    Ok((basis(Property::LogKow), basis(Property::Bcf)))
 }
 
 #[test]
@@ -349,7 +390,12 @@ fn method_and_guideline_columns_speak_only_of_the_values_they_can_mean() {
         ("Guideline", "QSAR", (Calculated, Calculated)),
         ("BCF guideline", "GLP study", (Unstated, Measured)),
     ] {
-        assert_eq!(bases(companion, text), expected, "{companion}: {text}");
+        let (log_kow, bcf) = expected;
+        assert_eq!(
+            bases(companion, text),
+            Ok((Some(log_kow), Some(bcf))),
+            "{companion}: {text}"
+        );
     }
 }
 
@@ -487,6 +533,14 @@ fn the_columns_decimal_style_decides_three_digits() {
         substance.readings_of(Property::Bcf)[0].quantity.single(),
         Some(1234.0)
     );
+}
+
+#[test]
+fn one_reader_serves_all_threads() {
+    fn shared<T: Send + Sync>() -> usize {
+        std::mem::size_of::<T>()
+    }
+    assert!(shared::<kowledger::substance::RowReader>() > 0);
 }
 
 proptest::proptest! {

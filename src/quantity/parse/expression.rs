@@ -6,7 +6,7 @@ use super::units::{parse_unit, take_unit};
 use super::value::{read_opening, read_value, take_plus_minus};
 use super::words::{has_value_word, numbers_something_else};
 use super::{QuantityFault, ReadAs};
-use crate::quantity::{Bound, DecimalStyle, Dimension, Unit};
+use crate::quantity::{Bound, Dimension, Unit};
 
 /// One end of an interval as written, with its own unit if it names one.
 #[derive(Debug, Clone, Copy, PartialEq)]
@@ -157,14 +157,25 @@ fn read_body(body: &str, brackets: Vec<String>, read_as: ReadAs) -> Result<Expre
     let mut expression = value.ok_or(QuantityFault::NoNumber)?;
     expression.remarks.append(&mut remarks);
     for bracket in brackets {
-        read_bracket(&mut expression, bracket, read_as.decimal);
+        read_bracket(&mut expression, bracket, read_as);
     }
     Ok(expression)
 }
 
-fn read_bracket(expression: &mut Expression, bracket: String, decimal: DecimalStyle) {
-    if let Some(sd) = take_plus_minus(&bracket).and_then(|rest| read_number(rest, decimal).ok().flatten()) {
+fn read_bracket(expression: &mut Expression, bracket: String, read_as: ReadAs) {
+    if let Some(sd) =
+        take_plus_minus(&bracket).and_then(|rest| read_number(rest, read_as.decimal).ok().flatten())
+    {
         expression.written_sd = expression.written_sd.or(Some(sd.0.abs()));
+        return;
+    }
+    let says_logarithm = matches!(
+        bracket.to_lowercase().as_str(),
+        "log" | "log10" | "lg" | "logarithm"
+    );
+    if says_logarithm && read_as.dimension == Dimension::VolumePerMass {
+        (expression.low.unit, expression.high.unit) = (None, None);
+        expression.unit = Some(Unit::LogLitrePerKilogram);
         return;
     }
     match parse_unit(&bracket) {

@@ -109,6 +109,41 @@ const PHRASES: &[(&str, Qualifier)] = &[
     ("von", Qualifier::Exactly),
 ];
 
+/// Words after a number that qualify it; lower case.
+const AFTER: &[(&str, Qualifier)] = &[
+    ("or more", Qualifier::AtLeast),
+    ("or higher", Qualifier::AtLeast),
+    ("or above", Qualifier::AtLeast),
+    ("or greater", Qualifier::AtLeast),
+    ("or longer", Qualifier::AtLeast),
+    ("and above", Qualifier::AtLeast),
+    ("and more", Qualifier::AtLeast),
+    ("oder mehr", Qualifier::AtLeast),
+    ("oder höher", Qualifier::AtLeast),
+    ("oder länger", Qualifier::AtLeast),
+    ("und mehr", Qualifier::AtLeast),
+    ("und höher", Qualifier::AtLeast),
+    ("or less", Qualifier::AtMost),
+    ("or lower", Qualifier::AtMost),
+    ("or below", Qualifier::AtMost),
+    ("or shorter", Qualifier::AtMost),
+    ("and below", Qualifier::AtMost),
+    ("oder weniger", Qualifier::AtMost),
+    ("oder kürzer", Qualifier::AtMost),
+    ("und weniger", Qualifier::AtMost),
+];
+
+/// The qualifier that stands after a number: `6 or more`, `6 oder weniger`, `6+`.
+pub(super) fn take_qualifier_after(text: &str) -> Option<(Qualifier, &str)> {
+    let text = text.trim_start();
+    if let Some(rest) = text.strip_prefix('+').filter(|rest| rest.trim().is_empty()) {
+        return Some((Qualifier::AtLeast, rest));
+    }
+    AFTER
+        .iter()
+        .find_map(|(phrase, qualifier)| strip_phrase(text, phrase).map(|rest| (*qualifier, rest)))
+}
+
 /// The qualifier at the start of a text, if any, and what follows it.
 pub(super) fn take_qualifier(text: &str) -> Option<(Qualifier, &str)> {
     let text = text.trim_start();

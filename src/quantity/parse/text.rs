@@ -13,7 +13,10 @@ pub fn tidy(text: &str) -> String {
             plain = plain.replace(ending, replacement);
         }
     }
-    let trimmed = plain.trim_matches(|character: char| character.is_whitespace() || character == ';');
+    // A leading apostrophe is how spreadsheets mark text.
+    let trimmed = plain
+        .trim_matches(|character: char| character.is_whitespace() || character == ';')
+        .trim_start_matches('\'');
     if trimmed.len() == plain.len() {
         plain
     } else {
@@ -25,8 +28,15 @@ pub fn tidy(text: &str) -> String {
 fn push_tidied(plain: &mut String, character: char, raised: Raised) -> Raised {
     match character {
         '\n' | '\r' => {
-            let after_label = plain.trim_end().ends_with([':', '=', ';']);
-            plain.push_str(if after_label { " " } else { "; " });
+            // Only what was just written is looked at, so that a text of line breaks stays linear.
+            let before = plain.strip_suffix(' ').unwrap_or(plain);
+            if before.ends_with([':', '=', ';']) {
+                if before.len() == plain.len() {
+                    plain.push(' ');
+                }
+            } else {
+                plain.push_str("; ");
+            }
         }
         // Soft hyphen, zero-width spaces and joiners, byte order mark.
         '\u{AD}' | '\u{200B}'..='\u{200F}' | '\u{2060}' | '\u{FEFF}' => {}

@@ -2,7 +2,7 @@
 
 use super::expression::{End, Expression};
 use super::number::{read_number, starts_number};
-use super::qualifier::{Qualifier, take_qualifier};
+use super::qualifier::{Qualifier, take_qualifier, take_qualifier_after};
 use super::units::take_unit;
 use super::words::starts_remark;
 use super::{QuantityFault, ReadAs};
@@ -95,6 +95,11 @@ pub(super) fn read_value(opening: &Opening<'_>, read_as: ReadAs) -> Result<Expre
             unit: upper.unit.or(first_unit),
         };
         upper.rest
+    } else if let Some((qualifier, after)) = take_qualifier_after(rest)
+        && opening.qualifier == Qualifier::Exactly
+    {
+        (expression.low, expression.high) = ends(qualifier, first, None);
+        after
     } else {
         (expression.low, expression.high) = ends(opening.qualifier, first, None);
         rest
@@ -203,7 +208,9 @@ pub(super) fn take_plus_minus(text: &str) -> Option<&str> {
 
 /// What follows the value and its unit: a remark, a misspelt unit, or a second number.
 fn read_leftover(rest: &str, expression: &mut Expression, dimension: Dimension) -> Result<(), QuantityFault> {
-    let rest = rest.trim_matches(|character: char| character.is_whitespace() || character == '.');
+    // Asterisks point to footnotes.
+    let rest = rest
+        .trim_matches(|character: char| character.is_whitespace() || matches!(character, '.' | '*' | '†'));
     if rest.is_empty() {
         return Ok(());
     }

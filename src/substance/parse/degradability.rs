@@ -35,16 +35,23 @@ static WINDOW: LazyLock<Regex> = LazyLock::new(|| {
 });
 pub(super) static NEGATIVE: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
-        r"\b(not|non|no|nicht|kein) (\w+ )?(readily|ready|easily|leicht\w*|bio|biologisch\w*|biodegrad\w*|degrad\w*|",
-        r"abbaubar\w*|bestanden|passed|met|erfullt)\b|\bnonbiodegrad\w*\b|\bnot (bio)?degrad\w*|\bfail\w*|\bschwer abbaubar|",
-        r"\bschwer biologisch|\bpoorly|\bpersistent|\b(bio)?degradation fails|^(no|nein|n|false|falsch|negative?|negativ|not|",
-        r"nicht)\b"
+        r"\b(not|non|nicht) (\w+ )?(readily|ready|easily|leicht\w*|biodegrad\w*|biologisch abbaubar\w*|abbaubar\w*|",
+        r"bestanden|passed)\b|\bnonbiodegrad\w*\b|\bnot (bio)?degrad(able|ed)\b|\bfail(s|ed)?\b|\bschwer (biologisch )?",
+        r"abbaubar|\bpoorly (bio)?degrad|\bpersistent|^(no|nein|n|false|falsch|negative?|negativ)( \d.*| oecd.*)?$"
     ))
 });
 pub(super) static POSITIVE: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
-        r"\b(readily|ready|leicht\w* (biologisch\w* )?abbau\w*|leicht biologisch\w*|passed|pass|bestanden)\b|",
-        r"^(yes|ja|y|j|true|wahr|positive?|positiv|leicht|easily|easily biodegradable)\b"
+        r"\breadily\b|\bready (bio)?degradable\b|\bleicht\w* (biologisch\w* )?abbau\w*|\b(passed|bestanden)\b|",
+        r"^(ready|pass|yes|ja|y|j|true|wahr|positive?|positiv|leicht|easily|easily biodegradable)( \d.*| oecd.*)?$"
+    ))
+});
+/// With one of these left over, a word for ready is no result: `not tested for ready biodegradability`.
+static UNCERTAIN: LazyLock<Regex> = LazyLock::new(|| {
+    fixed(concat!(
+        r"\b(not|no|non|nicht|kein\w*|unknown|unbekannt|unclear|unklar|untested|pending|planned|geplant|ongoing|laufend|",
+        r"expected|erwartet|likely|wahrscheinlich|probably|vermutlich|possibly|moglicherweise|may|might|could|",
+        r"partially|partly|teilweise|if|unless|without|ohne|doubtful|fraglich|inconclusive)\b"
     ))
 });
 pub(super) static INHERENT: LazyLock<Regex> =
@@ -153,7 +160,7 @@ fn result_in_words(text: &str) -> Option<DegradationTest> {
     if NEGATIVE.is_match(plain) {
         Some(DegradationTest::NotReady)
     } else {
-        POSITIVE.is_match(plain).then_some(DegradationTest::Ready)
+        (POSITIVE.is_match(plain) && !UNCERTAIN.is_match(plain)).then_some(DegradationTest::Ready)
     }
 }
 

@@ -42,15 +42,16 @@ static CLASSES: LazyLock<Vec<Class>> = LazyLock::new(|| {
         ),
     ]
 });
+/// Whole cells only: `no data` and `not classified due to lack of data` are no statement that there is none.
 static NONE: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
-        r"^(none|no|not classified|unclassified|not hazardous|non hazardous|no hazard|no classification|not dangerous|",
+        r"^(none|no|not classified|unclassified|not hazardous|non hazardous|no hazards?|no classification|not dangerous|",
         r"no (h|hazard) (statements?|phrases?|codes?)|keine?|keine? (h satze|einstufung|gefahrenhinweise|kennzeichnung|",
-        r"gefahrstoff|gefahrlicher stoff)|nicht eingestuft|nicht klassifiziert|nicht kennzeichnungspflichtig|",
-        r"kein gefahrstoff|ohne|nicht gefahrlich|not subject to classification|no labelling)( .*)?$"
+        r"gefahrstoff|gefahrlicher stoff)|nicht eingestuft|nicht klassifiziert|nicht kennzeichnungspflichtig|ohne|",
+        r"nicht gefahrlich|not subject to classification|no labelling)",
+        r"( (according to|under|acc to|as per|gemass|nach|laut) (the )?(clp|ghs|clp verordnung|regulation ec no 1272 2008))?$"
     ))
 });
-
 struct Class {
     with_category: Regex,
     alone: Regex,
