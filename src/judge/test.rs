@@ -5,7 +5,7 @@ use crate::judge::compare::{hold_against, outcome_of};
 use crate::judge::{Answer, Carries, Closeness, Context, Stop, TestJudgement, TestOutcome, Used};
 use crate::quantity::{Interval, Outcome};
 use crate::rules::{Checked, Limit, Step, Subject, Test, Weight, WhenMissing};
-use crate::substance::{Basis, Compartment, DegradationKind, DegradationTest, Property};
+use crate::substance::{Basis, Compartment, Completeness, DegradationKind, DegradationTest, Property};
 
 /// Judges one test of a step.
 pub(crate) fn judge_test(context: Context, step: &Step, test: &Test) -> TestJudgement {
@@ -394,21 +394,11 @@ fn judge_statements(context: Context, test: &Test) -> Option<TestJudgement> {
     };
     let statements = &context.substance.hazard_statements.as_ref()?.value;
     let found = codes.iter().find_map(|code| statements.find(code));
-    Some(match found {
-        // The classification in force is itself what the instruments ask for, so a stated one counts in full.
-        Some(code) => in_words(
-            context,
-            test,
-            TestOutcome::Fired,
-            Answer::Statement(code.to_owned()),
-            Carries::Definitive,
-        ),
-        None => in_words(
-            context,
-            test,
-            TestOutcome::Clear,
-            Answer::NoStatement,
-            Carries::Screening,
-        ),
-    })
+    // The classification in force is itself what the instruments ask for, so a stated one counts in full.
+    let (outcome, answer, carries) = match (found, statements.completeness()) {
+        (Some(code), _) => (TestOutcome::Fired, Answer::Statement(code.to_owned()), Carries::Definitive),
+        (None, Completeness::Complete) => (TestOutcome::Clear, Answer::NoStatement, Carries::Screening),
+        (None, Completeness::Incomplete) => (TestOutcome::Undecided, Answer::NoStatement, Carries::Screening),
+    };
+    Some(in_words(context, test, outcome, answer, carries))
 }

@@ -214,16 +214,13 @@ fn answer_clause(told: Told, test: &Test, outcome: TestOutcome, answer: &Answer)
             format!("{} states {code}", cell.unwrap_or_default())
         }
         Answer::NoStatement => {
-            let cell = told
-                .substance
-                .hazard_statements
-                .as_ref()
-                .map(|statements| statements.cell.to_string());
-            format!(
-                "the hazard statements in {} hold none of {}",
-                cell.unwrap_or_default(),
-                limit_phrase(test)
-            )
+            let cell = told.substance.hazard_statements.as_ref().map(|statements| statements.cell.to_string());
+            let unread = match outcome {
+                TestOutcome::Undecided | TestOutcome::Missing => ", but name a hazard class without its category",
+                TestOutcome::Clear | TestOutcome::Fired => "",
+            };
+            let codes = limit_phrase(test);
+            format!("the hazard statements in {} hold none of {codes}{unread}", cell.unwrap_or_default())
         }
     }
 }

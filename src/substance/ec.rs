@@ -29,27 +29,27 @@ impl EcNumber {
     /// (N1 + 2 N2 + 3 N3 + 4 N4 + 5 N5 + 6 N6) mod 11 is the check digit. Where the remainder is 10, numbers of the
     /// 4xx series were issued with check digit 1 (second-hand). Letters count A = 10, B = 11, ... without I, L and O.
     pub fn parse(text: &str) -> Result<Self, EcError> {
-        let bytes: Vec<u8> = text.bytes().map(|byte| byte.to_ascii_uppercase()).collect();
-        let [a, b, c, b'-', d, e, f, b'-', check] = bytes.as_slice() else {
+        let groups: Vec<&str> = text.split('-').collect();
+        let (3, [3, 3, 1]) = (groups.len(), [0, 1, 2].map(|place| groups.get(place).map_or(0, |group| group.len())))
+        else {
             return Err(EcError::Form);
         };
-        let body = [*a, *b, *c, *d, *e, *f];
+        let written = groups.concat().to_ascii_uppercase();
+        let (body, check) = written.split_at_checked(6).ok_or(EcError::Form)?;
         let mut sum = 0;
-        for (factor, byte) in (1u32..).zip(body) {
+        for (factor, byte) in (1u32..).zip(body.bytes()) {
             sum += factor * character_value(byte).ok_or(EcError::Form)?;
         }
-        if !check.is_ascii_digit() {
-            return Err(EcError::Form);
-        }
-        let found = check - b'0';
-        let expected = u8::try_from(sum % 11).unwrap_or(10);
-        let issued_with_one = expected == 10 && *a == b'4' && found == 1;
+        let found = check.parse::<u32>().map_err(|_| EcError::Form)?;
+        let expected = sum % 11;
+        let issued_with_one = expected == 10 && body.starts_with('4') && found == 1;
         if expected == found || issued_with_one {
-            Ok(Self([*a, *b, *c, *d, *e, *f, *check]))
+            let digits = written.as_bytes().try_into().map_err(|_| EcError::Form)?;
+            Ok(Self(digits))
         } else if expected == 10 {
             Err(EcError::NoSuchNumber)
         } else {
-            Err(EcError::CheckDigit { expected })
+            Err(EcError::CheckDigit { expected: u8::try_from(expected).map_err(|_| EcError::Form)? })
         }
     }
 }
@@ -65,8 +65,13 @@ fn character_value(byte: u8) -> Option<u32> {
 
 impl fmt::Display for EcNumber {
     fn fmt(&self, formatter: &mut fmt::Formatter<'_>) -> fmt::Result {
-        let [a, b, c, d, e, f, check] = self.0.map(char::from);
-        write!(formatter, "{a}{b}{c}-{d}{e}{f}-{check}")
+        for (place, byte) in self.0.iter().enumerate() {
+            if matches!(place, 3 | 6) {
+                formatter.write_str("-")?;
+            }
+            write!(formatter, "{}", char::from(*byte))?;
+        }
+        Ok(())
     }
 }
 
