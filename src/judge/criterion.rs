@@ -121,15 +121,15 @@ fn take_steps(
         match judged.state {
             StepState::Fired if step.decides != Decides::Out => return (Decision::In(index), stopped),
             StepState::Clear if step.decides != Decides::In => {
-                let mut stops = stops_of_tests(step.combine, judged);
-                stops.extend(guards(rulebook, criterion, steps, index));
+                let mut against = stops_of_tests(step.combine, judged);
+                against.extend(guards(rulebook, criterion, steps, index));
                 if doubt {
-                    stops.push(Stop::EarlierDoubt);
+                    against.push(Stop::EarlierDoubt);
                 }
-                if stops.is_empty() {
+                if against.is_empty() {
                     return (Decision::Out(index), stopped);
                 }
-                stopped.push(StoppedClear { step: index, stops });
+                stopped.push(StoppedClear { step: index, stops: against });
                 doubt = true;
             }
             StepState::Undecided if step.weight == Weight::Definitive => doubt = true,

@@ -59,7 +59,8 @@ fn judge_designation(
             Some((*part, verdict, closeness))
         })
         .collect();
-    let verdict = combined(designation.combine, parts.iter().map(|(_, verdict, _)| *verdict));
+    let verdicts: Vec<Verdict> = parts.iter().map(|(_, verdict, _)| *verdict).collect();
+    let verdict = combined(designation.combine, &verdicts);
     let makes_it = |part: &&(DesignationPart, Verdict, Closeness)| match verdict {
         Verdict::Unresolved | Verdict::NoData => matches!(part.1, Verdict::Unresolved | Verdict::NoData),
         Verdict::OutOfScope
@@ -88,8 +89,8 @@ fn stated(context: Context, designation: &Designation) -> Option<String> {
 
 /// All-of: any `out of scope`, else any `not fulfilled`, else any `screens out`, else anything unanswered, else any
 /// `screens in`, else `fulfilled`. Any-of mirrors it.
-pub(crate) fn combined(combine: Combine, verdicts: impl Iterator<Item = Verdict> + Clone) -> Verdict {
-    let any = |wanted: Verdict| verdicts.clone().any(|verdict| verdict == wanted);
+pub(crate) fn combined(combine: Combine, verdicts: &[Verdict]) -> Verdict {
+    let any = |wanted: Verdict| verdicts.contains(&wanted);
     let unanswered = any(Verdict::Unresolved) || any(Verdict::NoData);
     if any(Verdict::OutOfScope) {
         return Verdict::OutOfScope;
@@ -169,7 +170,7 @@ mod tests {
         ];
         for (parts, expected) in table {
             assert_eq!(
-                combined(Combine::All, parts.iter().copied()),
+                combined(Combine::All, parts),
                 expected,
                 "{parts:?}"
             );
@@ -191,7 +192,7 @@ mod tests {
         ];
         for (parts, expected) in table {
             assert_eq!(
-                combined(Combine::Any, parts.iter().copied()),
+                combined(Combine::Any, parts),
                 expected,
                 "{parts:?}"
             );
@@ -203,11 +204,11 @@ mod tests {
         for unanswered in [Unresolved, NoData] {
             for other in Verdict::ALL {
                 assert!(!matches!(
-                    combined(Combine::All, [unanswered, other].into_iter()),
+                    combined(Combine::All, &[unanswered, other]),
                     Fulfilled | ScreensIn
                 ));
                 assert!(!matches!(
-                    combined(Combine::Any, [unanswered, other].into_iter()),
+                    combined(Combine::Any, &[unanswered, other]),
                     NotFulfilled | ScreensOut
                 ));
             }

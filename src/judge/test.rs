@@ -37,8 +37,8 @@ fn without_value(outcome: TestOutcome) -> TestJudgement {
 
 fn judge_number(context: Context, step: &Step, test: &Test, property: Property) -> Option<TestJudgement> {
     let mut used: Vec<Used> = match property {
-        Property::HalfLife(Compartment::Water) => together(context, step, test, &WATERS),
-        Property::HalfLife(Compartment::Sediment) => together(context, step, test, &SEDIMENTS),
+        Property::HalfLife(Compartment::Water) => together(context, step, test, WATERS),
+        Property::HalfLife(Compartment::Sediment) => together(context, step, test, SEDIMENTS),
         _ => {
             let own = most_concerning(context, step, test, property, |interval| {
                 outcome_of(test, interval)
@@ -81,11 +81,11 @@ const SEDIMENTS: [Property; 3] = [
 ];
 
 /// The value of each compartment that has one.
-fn together(context: Context, step: &Step, test: &Test, compartments: &[Property; 3]) -> Vec<Used> {
+fn together(context: Context, step: &Step, test: &Test, compartments: [Property; 3]) -> Vec<Used> {
     compartments
-        .iter()
+        .into_iter()
         .filter_map(|property| {
-            most_concerning(context, step, test, *property, |interval| {
+            most_concerning(context, step, test, property, |interval| {
                 outcome_of(test, interval)
             })
         })

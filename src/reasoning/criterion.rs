@@ -71,12 +71,12 @@ fn fill_value(line: &mut Line, told: Told, used: &Used) {
     if line.number.is_none() {
         line.value = format_interval(used.compared, crate::quantity::Unit::One);
     }
-    line.unit = used.property.default_unit().symbol().to_owned();
+    used.property.default_unit().symbol().clone_into(&mut line.unit);
     line.margin = used.margin;
     line.chance = used.chance;
     if let Some(evidence) = evidence_of(told, used) {
         line.sd = evidence.sd;
-        line.basis = evidence.basis.word().to_owned();
+        evidence.basis.word().clone_into(&mut line.basis);
         line.origin = origin_phrase(told, evidence);
     }
 }

@@ -67,17 +67,14 @@ pub fn headline_verdict(book: Book) -> Option<Verdict> {
     }
 }
 
-fn designation_at<'run>(
-    book: Book<'run>,
-    index: usize,
-) -> Option<(&'run Designation, &'run DesignationJudgement)> {
+fn designation_at(book: Book<'_>, index: usize) -> Option<(&Designation, &DesignationJudgement)> {
     Some((
         book.rulebook.designations.get(index)?,
         book.judged.designations.get(index)?,
     ))
 }
 
-fn criterion_at<'run>(book: Book<'run>, index: usize) -> Option<(&'run Criterion, &'run CriterionJudgement)> {
+fn criterion_at(book: Book<'_>, index: usize) -> Option<(&Criterion, &CriterionJudgement)> {
     Some((
         book.rulebook.criteria.get(index)?,
         book.judged.criteria.get(index)?,

@@ -199,21 +199,13 @@ pub(crate) fn deciding_sentence(deciding: &Deciding) -> String {
 }
 
 fn rating(told: Told, criterion: &Criterion, judged: &CriterionJudgement) -> String {
-    match &judged.rated {
-        Some(rated) => {
-            let ratings: Vec<String> = judged
-                .ratings
-                .iter()
-                .filter_map(|index| criterion.bands.get(*index))
-                .map(|band| format!("{} ({})", band.rating, band.test.limit_text))
-                .collect();
-            format!("{} falls in {}", value_phrase(told, rated), listed(&ratings))
-        }
-        None => {
-            let asked = titles(criterion.bands.iter().map(|band| band.test.subject));
-            format!("The inventory holds no {}", alternatives(&asked))
-        }
-    }
+    let Some(rated) = &judged.rated else {
+        let asked = titles(criterion.bands.iter().map(|band| band.test.subject));
+        return format!("The inventory holds no {}", alternatives(&asked));
+    };
+    let bands = judged.ratings.iter().filter_map(|index| criterion.bands.get(*index));
+    let ratings: Vec<String> = bands.map(|band| format!("{} ({})", band.rating, band.test.limit_text)).collect();
+    format!("{} falls in {}", value_phrase(told, rated), listed(&ratings))
 }
 
 /// What concern and supporting steps add, where they say something.

@@ -11,9 +11,9 @@ pub(crate) fn stops_phrase(
     told: Told,
     criterion: &Criterion,
     judged: &CriterionJudgement,
-    stopped: &StoppedClear,
+    clear: &StoppedClear,
 ) -> String {
-    let phrases: Vec<String> = stopped
+    let phrases: Vec<String> = clear
         .stops
         .iter()
         .map(|stop| stop_phrase(told, criterion, judged, *stop))
@@ -45,12 +45,12 @@ fn stop_phrase(told: Told, criterion: &Criterion, judged: &CriterionJudgement, s
             citation(told, relation),
             format_number(10f64.powf(log_value))
         ),
-        Stop::Guard(step) => format!(
+        Stop::Guard(guard) => format!(
             "{} points the other way",
-            guard_brief(told, criterion, judged, step)
+            guard_brief(told, criterion, judged, guard)
         ),
-        Stop::OpenGuard(step) => {
-            let missing = guard_missing(criterion, judged, step);
+        Stop::OpenGuard(guard) => {
+            let missing = guard_missing(criterion, judged, guard);
             format!("{} could point the other way and is not known", listed(&missing))
         }
         Stop::EarlierDoubt => "an earlier step had already left doubt".to_owned(),

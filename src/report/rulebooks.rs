@@ -207,10 +207,8 @@ fn designation_row(rulebook: &Rulebook, designation: &Designation) -> Vec<Entry>
     };
     let mut remark = format!("{}: {joined}.", designation.title);
     if !designation.stated_by.is_empty() {
-        remark.push_str(&format!(
-            " Fulfilled as stated where the row carries {}.",
-            designation.stated_by.join(" or ")
-        ));
+        let codes = designation.stated_by.join(" or ");
+        remark = format!("{remark} Fulfilled as stated where the row carries {codes}.");
     }
     let mut row = vec![
         Entry::text(rulebook.short.as_str(), Look::Text),

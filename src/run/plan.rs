@@ -128,7 +128,7 @@ impl Plan {
                             .unwrap_or(usize::MAX)
                             .saturating_mul(lines_a_row);
                     }
-                    None => sheet.copied_because = NO_HEADER.to_owned(),
+                    None => NO_HEADER.clone_into(&mut sheet.copied_because),
                 }
             }
             sheets.push(sheet);

@@ -1,35 +1,34 @@
 //! The structure of the code: which room may name which, and which room names each outside crate.
 
 use std::fs;
+use std::io;
 use std::path::{Path, PathBuf};
 
-/// Every source file with the room it belongs to: the folder or file below `src`, or `bin`.
-fn sources() -> Vec<(String, PathBuf, String)> {
-    let root = Path::new(env!("CARGO_MANIFEST_DIR")).join("src");
+/// Every source file: the room it belongs to (the folder or file below `src`), its path and its text.
+fn sources() -> io::Result<Vec<(String, PathBuf, String)>> {
+    let top = Path::new(env!("CARGO_MANIFEST_DIR")).join("src");
     let mut found = Vec::new();
-    let mut folders = vec![root.clone()];
+    let mut folders = vec![top.clone()];
     while let Some(folder) = folders.pop() {
-        for entry in fs::read_dir(folder).unwrap() {
-            let path = entry.unwrap().path();
+        for entry in fs::read_dir(folder)? {
+            let path = entry?.path();
             if path.is_dir() {
                 folders.push(path);
             } else if path.extension().is_some_and(|extension| extension == "rs") {
-                let below = path.strip_prefix(&root).unwrap();
-                let first = below
-                    .components()
-                    .next()
-                    .unwrap()
-                    .as_os_str()
-                    .to_string_lossy()
-                    .into_owned();
-                let room = first.strip_suffix(".rs").unwrap_or(&first).to_owned();
-                let text = fs::read_to_string(&path).unwrap();
+                let below = path.strip_prefix(&top).map_err(io::Error::other)?;
+                let first = below.components().next().map(|part| part.as_os_str().to_string_lossy().into_owned());
+                let room = first.unwrap_or_default().trim_end_matches(".rs").to_owned();
+                let text = fs::read_to_string(&path)?;
                 found.push((room, path, text));
             }
         }
     }
-    assert!(found.len() > 30, "the sources are found");
-    found
+    Ok(found)
+}
+
+#[test]
+fn the_sources_are_found() {
+    assert!(sources().unwrap().len() > 30);
 }
 
 /// The lines that are code, so that prose may name anything.
@@ -50,7 +49,7 @@ fn imports_point_one_way() {
         "report",
         "run",
     ];
-    for (room, path, text) in sources() {
+    for (room, path, text) in sources().unwrap() {
         let Some(place) = chain.iter().position(|name| *name == room) else {
             continue;
         };
@@ -89,7 +88,7 @@ fn each_outside_crate_is_named_in_its_own_rooms() {
     for (name, rooms) in table {
         let (path, import) = (format!("{name}::"), format!("use {name}"));
         let mut named = false;
-        for (room, file, text) in sources() {
+        for (room, file, text) in sources().unwrap() {
             let names_it = code(&text).any(|line| line.starts_with(&import) || names_crate(line, &path));
             named |= names_it;
             assert!(
@@ -112,7 +111,7 @@ fn names_crate(line: &str, path: &str) -> bool {
 
 #[test]
 fn only_the_console_prints() {
-    for (_, path, text) in sources() {
+    for (_, path, text) in sources().unwrap() {
         let prints = code(&text).any(|line| line.contains("stdout()") || line.contains("stderr()"));
         assert!(
             !prints || path.ends_with("bin/kowledger/console.rs"),

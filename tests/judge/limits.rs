@@ -32,7 +32,7 @@ struct Limit {
     criterion: &'static str,
     property: Property,
     worded: Worded,
-    limit: f64,
+    value: f64,
     /// A measured value beyond the limit.
     beyond: Verdict,
     /// A measured value on the other side.
@@ -47,7 +47,7 @@ const fn limit(
     criterion: &'static str,
     property: Property,
     worded: Worded,
-    limit: f64,
+    value: f64,
     beyond: Verdict,
     within: Verdict,
     straddling: Verdict,
@@ -57,7 +57,7 @@ const fn limit(
         criterion,
         property,
         worded,
-        limit,
+        value,
         beyond,
         within,
         straddling,
@@ -143,13 +143,13 @@ impl Limit {
             self.criterion,
             self.property.title(),
             self.worded,
-            self.limit
+            self.value
         )
     }
 
     /// Values on the concerning side, far enough not to be close.
     fn beyond_values(&self) -> Vec<Value> {
-        let (limit, log) = (self.limit, self.property.is_logarithmic());
+        let (limit, log) = (self.value, self.property.is_logarithmic());
         let far_up = if log { limit + 2.0 } else { limit * 50.0 };
         match self.worded {
             Above => vec![
@@ -176,7 +176,7 @@ impl Limit {
 
     /// Values on the other side.
     fn within_values(&self) -> Vec<Value> {
-        let (limit, log) = (self.limit, self.property.is_logarithmic());
+        let (limit, log) = (self.value, self.property.is_logarithmic());
         let far_down = if log { limit - 1.5 } else { limit / 50.0 };
         match self.worded {
             Above => vec![Value::Point(limit), Value::Point(far_down)],
@@ -194,7 +194,7 @@ impl Limit {
     }
 
     fn straddling_values(&self) -> Vec<Value> {
-        let (low, high) = (self.limit * 0.9, self.limit * 1.1);
+        let (low, high) = (self.value * 0.9, self.value * 1.1);
         vec![Value::Range(low, high), Value::Less(high), Value::Greater(low)]
     }
 }

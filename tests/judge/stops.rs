@@ -34,8 +34,8 @@ fn each_concern_value_stops_a_clear_without_deciding() {
         let beyond = low_bcf().measured(property, Value::Point(value)).judged();
         assert_eq!(beyond.verdict("REACH", "B"), Unresolved, "{}", property.title());
         let at_limit = if property == Property::Baf { 2000.0 } else { 1.0 };
-        let within = low_bcf().measured(property, Value::Point(at_limit)).judged();
-        assert_eq!(within.verdict("REACH", "B"), NotFulfilled, "{}", property.title());
+        let at_most = low_bcf().measured(property, Value::Point(at_limit)).judged();
+        assert_eq!(at_most.verdict("REACH", "B"), NotFulfilled, "{}", property.title());
     }
 }
 
@@ -168,12 +168,15 @@ fn a_given_koc_of_an_ionisable_substance_may_fire_and_not_clear() {
     );
 }
 
+/// A caution, a row that raises it, and whether it stops a clear by log Kow, by BCF, by an estimate, by a ready test.
+type CautionLine = (&'static str, fn(Row) -> Row, [bool; 4]);
+
 /// What each caution keeps from clearing, written by hand from the published list of what it stops.
 #[test]
 fn each_caution_stops_what_it_says_and_nothing_more() {
     let everything = [true, true, true, true];
     let whole_log_kow = [true, false, true, false];
-    let table: [(&str, fn(Row) -> Row, [bool; 4]); 9] = [
+    let table: [CautionLine; 9] = [
         (
             "perfluoroalkyl",
             |row| row.named("perfluorooctanoic acid"),

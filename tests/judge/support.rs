@@ -173,7 +173,7 @@ pub struct Judged {
 }
 
 impl Judged {
-    fn book(&self, short: &str) -> usize {
+    fn book(short: &str) -> usize {
         RULES
             .rulebooks
             .iter()
@@ -183,7 +183,7 @@ impl Judged {
 
     /// A criterion of a rulebook.
     pub fn criterion(&self, short: &str, id: &str) -> &CriterionJudgement {
-        let book = self.book(short);
+        let book = Self::book(short);
         let place = RULES.rulebooks[book]
             .criteria
             .iter()
@@ -194,7 +194,7 @@ impl Judged {
 
     /// The verdict on a criterion or designation, as its cell words it.
     pub fn cell(&self, short: &str, id: &str) -> String {
-        let book = self.book(short);
+        let book = Self::book(short);
         let rulebook = &RULES.rulebooks[book];
         if let Some(place) = rulebook.criteria.iter().position(|criterion| criterion.id == id) {
             let judged = &self.judgement.rulebooks[book].criteria[place];
@@ -246,7 +246,7 @@ impl Judged {
             rules: &RULES,
             judgement: &self.judgement,
         };
-        let book = told.books().nth(self.book(short)).expect("a built-in rulebook");
+        let book = told.books().nth(Self::book(short)).expect("a built-in rulebook");
         let (criterion, judged) = book
             .criteria()
             .find(|(criterion, _)| criterion.id == id)

@@ -55,7 +55,7 @@ pub(crate) struct ScreenArguments {
     column: Vec<String>,
     /// What a value counts as that does not say how it was obtained
     #[arg(long, value_name = "BASIS", default_value = "unstated")]
-    unstated: Unstated,
+    unstated: CountsAs,
     /// Lines of the Reasoning sheet; auto: all up to 200,000 lines, else those at `unresolved` or above
     #[arg(long, value_name = "MODE", default_value = "auto")]
     reasoning: Reasoning,
@@ -95,7 +95,7 @@ pub(crate) enum RulesCommand {
 }
 
 #[derive(Debug, Clone, Copy, ValueEnum)]
-enum Unstated {
+enum CountsAs {
     Measured,
     Unstated,
     Calculated,
@@ -138,9 +138,9 @@ impl ScreenArguments {
             sheets: self.sheet,
             columns: overrides(&self.column)?,
             unstated: match self.unstated {
-                Unstated::Measured => UnstatedBasis::Measured,
-                Unstated::Unstated => UnstatedBasis::Unstated,
-                Unstated::Calculated => UnstatedBasis::Calculated,
+                CountsAs::Measured => UnstatedBasis::Measured,
+                CountsAs::Unstated => UnstatedBasis::Unstated,
+                CountsAs::Calculated => UnstatedBasis::Calculated,
             },
             reasoning: match self.reasoning {
                 Reasoning::Auto => ReasoningChoice::Auto,

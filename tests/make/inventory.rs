@@ -1,0 +1,198 @@
+//! Writes `inputs-example/inventory.xlsx` from `tests/fixtures/inventory.tsv`.
+//!
+//! Run with `cargo run --example make-inventory`. The substances are real; the company, its products, suppliers and
+//! quantities are invented. Where each value comes from stands in `tests/fixtures/inventory-sources.tsv`. The same table
+//! gives the same bytes. This program decides how the workbook looks, never what a cell holds: a text that is a plain
+//! number with a decimal point becomes a number cell, everything else stays the text it is.
+
+mod layout;
+
+use layout::{Column, Holds, LAYOUTS, Layout, NOTES};
+use rust_xlsxwriter::{
+    Color, DocProperties, ExcelDateTime, Format, FormatAlign, FormatBorder, Workbook, Worksheet, XlsxError,
+};
+use std::collections::BTreeMap;
+use std::error::Error;
+use std::path::Path;
+
+/// One row of the table: the text under each heading.
+type Row<'a> = BTreeMap<&'a str, &'a str>;
+
+fn main() -> Result<(), Box<dyn Error>> {
+    let root = Path::new(env!("CARGO_MANIFEST_DIR"));
+    let table = std::fs::read_to_string(root.join("tests/fixtures/inventory.tsv"))?;
+    let rows = read_rows(&table)?;
+    let mut workbook = Workbook::new();
+    workbook.set_properties(
+        &DocProperties::new()
+            .set_title("Raw material inventory (invented company)")
+            .set_company("Grenwick & Aldermoor Surface Technologies (invented)")
+            .set_creation_datetime(&ExcelDateTime::from_ymd(2026, 11, 30)?),
+    );
+    for layout in &LAYOUTS {
+        let of_sheet = rows.iter().filter(|row| text(row, "sheet") == layout.sheet);
+        write_sheet(workbook.add_worksheet(), layout, of_sheet)?;
+    }
+    write_notes(workbook.add_worksheet())?;
+    workbook.save(root.join("inputs-example/inventory.xlsx"))?;
+    Ok(())
+}
+
+fn read_rows(table: &str) -> Result<Vec<Row<'_>>, Box<dyn Error>> {
+    let mut lines = table.lines();
+    let headings: Vec<&str> = lines.next().ok_or("the table is empty")?.split('\t').collect();
+    let mut rows = Vec::new();
+    for (number, line) in (2..).zip(lines) {
+        let cells: Vec<&str> = line.split('\t').collect();
+        if cells.len() != headings.len() {
+            return Err(format!("line {number} has {} cells, not {}", cells.len(), headings.len()).into());
+        }
+        rows.push(headings.iter().copied().zip(cells).collect());
+    }
+    Ok(rows)
+}
+
+fn text<'a>(row: &Row<'a>, field: &str) -> &'a str {
+    row.get(field).copied().unwrap_or_default()
+}
+
+fn write_sheet<'a>(
+    sheet: &mut Worksheet,
+    layout: &Layout,
+    rows: impl Iterator<Item = &'a Row<'a>>,
+) -> Result<(), Box<dyn Error>> {
+    sheet.set_name(layout.sheet)?;
+    write_titles(sheet, layout)?;
+    let header_row = u32::try_from(layout.titles.len())?;
+    write_header(sheet, layout, header_row)?;
+    let mut last_row = header_row;
+    for (place, row) in (header_row + 1..).zip(rows) {
+        last_row = place;
+        if text(row, "name").is_empty() {
+            continue;
+        }
+        for (column_place, column) in (0u16..).zip(layout.columns) {
+            write_cell(
+                sheet,
+                (place, column_place),
+                column,
+                layout,
+                text(row, column.field),
+            )?;
+        }
+    }
+    let last_column = u16::try_from(layout.columns.len().saturating_sub(1))?;
+    sheet.autofilter(header_row, 0, last_row, last_column)?;
+    sheet.set_freeze_panes(header_row + 1, 4)?;
+    sheet
+        .set_landscape()
+        .set_paper_size(8)
+        .set_print_fit_to_pages(3, 0);
+    sheet.set_repeat_rows(header_row, header_row)?;
+    Ok(())
+}
+
+fn write_titles(sheet: &mut Worksheet, layout: &Layout) -> Result<(), XlsxError> {
+    let large = Format::new()
+        .set_bold()
+        .set_font_size(14)
+        .set_font_color(Color::RGB(0x1F_3A4D));
+    let small = Format::new().set_italic().set_font_color(Color::RGB(0x59_5959));
+    for (place, title) in (0u32..).zip(layout.titles) {
+        let format = if place == 0 { &large } else { &small };
+        sheet.write_with_format(place, 0, *title, format)?;
+    }
+    Ok(())
+}
+
+fn write_header(sheet: &mut Worksheet, layout: &Layout, row: u32) -> Result<(), XlsxError> {
+    let format = Format::new()
+        .set_bold()
+        .set_text_wrap()
+        .set_align(FormatAlign::VerticalCenter)
+        .set_background_color(Color::RGB(0xD9_E2E7))
+        .set_border_bottom(FormatBorder::Medium);
+    sheet.set_row_height(row, 48)?;
+    for (place, column) in (0u16..).zip(layout.columns) {
+        sheet.set_column_width(place, column.width)?;
+        sheet.write_with_format(row, place, column.header, &format)?;
+    }
+    Ok(())
+}
+
+fn write_cell(
+    sheet: &mut Worksheet,
+    (row, place): (u32, u16),
+    column: &Column,
+    layout: &Layout,
+    text: &str,
+) -> Result<(), XlsxError> {
+    let format = cell_format(column, layout);
+    if text.is_empty() {
+        sheet.write_blank(row, place, &format)?;
+        return Ok(());
+    }
+    match column.holds {
+        Holds::Numbers(_) => match text.parse::<f64>() {
+            Ok(number) => sheet.write_with_format(row, place, number, &format)?,
+            Err(_) => sheet.write_with_format(row, place, text, &format)?,
+        },
+        Holds::Dates => write_date(sheet, (row, place), text, &format)?,
+        // The spreadsheet took one of the numbers for a day: `1983-10-04` is no CAS number, its last group has two digits.
+        Holds::CasNumbers
+            if text.len() == 10 && text.split('-').nth(2).is_some_and(|last| last.len() == 2) =>
+        {
+            write_date(
+                sheet,
+                (row, place),
+                text,
+                &format.set_num_format(layout.date_format),
+            )?
+        }
+        Holds::Words | Holds::CasNumbers => sheet.write_with_format(row, place, text, &format)?,
+    };
+    Ok(())
+}
+
+fn write_date<'a>(
+    sheet: &'a mut Worksheet,
+    (row, place): (u32, u16),
+    text: &str,
+    format: &Format,
+) -> Result<&'a mut Worksheet, XlsxError> {
+    sheet.write_with_format(row, place, &ExcelDateTime::parse_from_str(text)?, format)
+}
+
+fn cell_format(column: &Column, layout: &Layout) -> Format {
+    let mut format = Format::new()
+        .set_border_bottom(FormatBorder::Hair)
+        .set_border_bottom_color(Color::RGB(0xBF_BFBF));
+    format = match column.holds {
+        Holds::Words | Holds::CasNumbers => format.set_indent(1),
+        Holds::Numbers(number_format) => format.set_num_format(number_format).set_align(FormatAlign::Right),
+        Holds::Dates => format
+            .set_num_format(layout.date_format)
+            .set_align(FormatAlign::Right),
+    };
+    match column.fill {
+        Some(colour) => format.set_background_color(Color::RGB(colour)),
+        None => format,
+    }
+}
+
+fn write_notes(sheet: &mut Worksheet) -> Result<(), XlsxError> {
+    let bold = Format::new().set_bold();
+    let plain = Format::new().set_text_wrap().set_align(FormatAlign::Top);
+    sheet.set_name("Read me")?;
+    sheet
+        .set_landscape()
+        .set_paper_size(9)
+        .set_print_fit_to_pages(1, 0);
+    sheet.set_column_width(0, 120)?;
+    for (place, note) in (0u32..).zip(NOTES) {
+        let format = if place == 0 { &bold } else { &plain };
+        sheet.set_row_height(place, 32)?;
+        sheet.write_with_format(place, 0, note, format)?;
+    }
+    Ok(())
+}
