@@ -1,1 +1,8 @@
-//! (being built)
+//! The annotated example, as a user gets it.
+
+#![expect(clippy::expect_used, clippy::indexing_slicing, reason = "an example that cannot be read has to stop the test")]
+
+mod annotated;
+mod certain;
+mod planted;
+mod threads;
