@@ -75,8 +75,8 @@ pub struct Summary {
     pub headlines: Vec<(String, BTreeMap<Verdict, usize>, usize)>,
     /// Tests that no row's data reached: rulebook, criterion and property.
     pub unreached: Vec<String>,
-    /// Remarks on columns: sheet and remark.
-    pub column_remarks: Vec<(String, String)>,
+    /// Remarks on columns, each with its sheet.
+    pub column_remarks: Vec<String>,
     /// What could not be carried over.
     pub not_carried: Vec<String>,
     /// Cells that could not be read, the first of them.

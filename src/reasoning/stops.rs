@@ -4,6 +4,7 @@ use crate::judge::{CriterionJudgement, Stop, StoppedClear};
 use crate::quantity::format_number;
 use crate::reasoning::Told;
 use crate::reasoning::value::{listed, short_citation, telling_tests, test_brief, titles};
+use crate::relations::Side;
 use crate::rules::Criterion;
 
 /// Why a clear by a step did not stand.
@@ -40,21 +41,28 @@ fn stop_phrase(told: Told, criterion: &Criterion, judged: &CriterionJudgement, s
         Stop::LimitFromMemory => {
             "the limit is from memory: check the current text before relying on it".to_owned()
         }
-        Stop::LowSide { relation, log_value } => format!(
-            "{} could give a value as low as {} for a substance of its kind",
-            citation(told, relation),
-            format_number(10f64.powf(log_value))
-        ),
-        Stop::Guard(guard) => format!(
-            "{} points the other way",
-            guard_brief(told, criterion, judged, guard)
-        ),
+        Stop::LowSide { relation, log_value } => low_side_phrase(told, relation, log_value),
+        Stop::Guard(guard) => {
+            format!("this does not stand beside {}", guard_brief(told, criterion, judged, guard))
+        }
         Stop::OpenGuard(guard) => {
             let missing = guard_missing(criterion, judged, guard);
             format!("{} could point the other way and is not known", listed(&missing))
         }
         Stop::EarlierDoubt => "an earlier step had already left doubt".to_owned(),
     }
+}
+
+/// Which line could apply that gives less, and to what kind of substance.
+fn low_side_phrase(told: Told, relation: usize, log_value: f64) -> String {
+    let value = format_number(10f64.powf(log_value));
+    let Some(line) = told.rules.relations.relations.get(relation) else { return String::new() };
+    let unit = line.to.default_unit().symbol();
+    let kind = match line.side {
+        Side::Ionised => "if it ionises between pH 4 and 9, which is not known",
+        Side::Class | Side::Central => "if it belongs to another class of substances, which is not known",
+    };
+    format!("{kind}, it could be as low as {value} {unit} ({} less one standard deviation)", citation(told, relation))
 }
 
 fn citation(told: Told, relation: usize) -> String {
@@ -73,7 +81,7 @@ fn guard_brief(told: Told, criterion: &Criterion, judged: &CriterionJudgement, s
     };
     let briefs: Vec<String> =
         telling_tests(rule, came_out).into_iter().map(|(test, judged)| test_brief(told, test, judged)).collect();
-    listed(&briefs)
+    briefs.join("; ")
 }
 
 fn guard_missing(criterion: &Criterion, judged: &CriterionJudgement, step: usize) -> Vec<String> {

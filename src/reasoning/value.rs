@@ -87,17 +87,14 @@ pub(crate) fn value_phrase(told: Told, used: &Used) -> String {
     let mut beside = vec![format!("{basis}, {origin}")];
     match used.adjustment {
         Some(Adjustment::HalfLifeTemperature { from, to, factor }) => beside.push(format!(
-            "tested at {} °C, {} at {} °C, factor {}",
+            "tested at {} °C; {} at {} °C, {factor:.2} times that",
             format_number(from),
             format_interval(used.compared, unit),
-            format_number(to),
-            format_number(factor)
+            format_number(to)
         )),
-        Some(Adjustment::HalfLifeTemperatureUnstated { from, to, factor }) => beside.push(format!(
-            "test temperature not stated: at {} °C up to {} times longer, had it been tested at {} °C",
-            format_number(to),
-            format_number(factor),
-            format_number(from)
+        Some(Adjustment::HalfLifeTemperatureUnstated { to, factor, .. }) => beside.push(format!(
+            "test temperature not stated, so up to {factor:.2} times longer at {} °C",
+            format_number(to)
         )),
         Some(Adjustment::Lipid { from, to }) => beside.push(format!(
             "fish with {} % lipid; {} at {} % lipid",

@@ -274,18 +274,9 @@ fn options(settings: &ScreenSettings) -> Vec<(&'static str, String)> {
     options
 }
 
-fn column_remarks(plan: &Plan) -> Vec<(String, String)> {
-    plan.sheets
-        .iter()
-        .filter_map(|sheet| Some((sheet, sheet.screened.as_ref()?)))
-        .flat_map(|(sheet, screened)| {
-            screened
-                .recognised
-                .remarks
-                .iter()
-                .map(|remark| (sheet.name.to_string(), remark.clone()))
-        })
-        .collect()
+fn column_remarks(plan: &Plan) -> Vec<String> {
+    let screened = plan.sheets.iter().filter_map(|sheet| sheet.screened.as_ref());
+    screened.flat_map(|screened| screened.recognised.remarks.iter().cloned()).collect()
 }
 
 /// Properties that deciding tests ask for and no row had, with the criteria that ask, so that a rule nobody's data

@@ -47,21 +47,14 @@ impl Console {
             }
             format!("  {short}: {}", parts.join(", "))
         }));
-        lines.extend(
-            summary
-                .column_remarks
-                .iter()
-                .map(|(sheet, remark)| format!("Sheet {sheet}: {remark}")),
-        );
+        lines.extend(summary.column_remarks.iter().cloned());
         if !summary.unreached.is_empty() {
             lines.push(format!(
                 "No row had a value for: {}.",
                 summary.unreached.join("; ")
             ));
         }
-        if !summary.not_carried.is_empty() {
-            lines.push(format!("Not carried over: {}.", summary.not_carried.join("; ")));
-        }
+        lines.extend(summary.not_carried.iter().cloned());
         lines.push(format!("Written: {}", summary.output.display()));
         lines.push(
             "A screening, not a decision: unresolved and no data are open questions, and a qualified person must confirm every verdict."
