@@ -161,7 +161,7 @@ impl fmt::Display for CellFaultKind {
             }
             Self::WordNoNumber { what, example } => write!(
                 formatter,
-                "is a word and no number for {what}; write a value or a bound, for example `{example}`"
+                "is a word and no number for {what}; write a number, or a bound with `<` or `>`, for example `{example}`"
             ),
             Self::BadNumber { example } => write!(
                 formatter,

@@ -45,19 +45,25 @@ pub fn added_columns(rules: &RuleSet, taken: &[String]) -> AddedColumns {
     push("log Kow basis".into(), 14.0);
     let mut folded = Vec::new();
     for rulebook in &rules.rulebooks {
-        push(rulebook.short.clone(), 24.0);
+        push(rulebook.short.clone(), headline_width(rulebook));
         push(format!("{} why", rulebook.short), 60.0);
         let places: Vec<usize> = parts(rulebook)
             .map(|id| push(format!("{} {id}", rulebook.short), 20.0))
             .collect();
         folded.extend(places.first().copied().zip(places.last().copied()));
     }
-    push("Cautions".into(), 50.0);
-    push("Deciding data".into(), 50.0);
+    push("Cautions".into(), 70.0);
+    push("Deciding data".into(), 70.0);
     for (header, width) in ASSESSOR {
         push(header.into(), width);
     }
     AddedColumns { folded, ..added }
+}
+
+/// Room for the longest headline: a designation and `unresolved (close call)`.
+fn headline_width(rulebook: &Rulebook) -> f64 {
+    let longest = parts(rulebook).map(|id| id.chars().count()).max().unwrap_or(0);
+    f64::from(u8::try_from(longest).unwrap_or(u8::MAX)) + 27.0
 }
 
 fn parts(rulebook: &Rulebook) -> impl Iterator<Item = &str> {
@@ -106,8 +112,8 @@ pub fn added_entries(told: Told, faults: &[CellFault]) -> Vec<Entry> {
             Entry::text(words, Look::Verdict(shade(judged.verdict)))
         }));
     }
-    entries.push(Entry::text(cautions_and_faults(told, faults), Look::Wrapped));
-    entries.push(Entry::text(deciding_text(told), Look::Wrapped));
+    entries.push(Entry::text(cautions_and_faults(told, faults), Look::Aside));
+    entries.push(Entry::text(deciding_text(told), Look::Aside));
     entries.extend(ASSESSOR.map(|_| Entry::text("", Look::Text)));
     entries
 }

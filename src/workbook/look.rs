@@ -14,6 +14,8 @@ pub enum Look {
     Text,
     /// Text over several lines.
     Wrapped,
+    /// Text over several lines that does not make its row higher: the rest shows when the cell is clicked.
+    Aside,
     /// A number, as the spreadsheet program shows numbers.
     Number,
     /// A number to two decimals, such as a standard deviation or a chance.
@@ -132,7 +134,7 @@ impl Looks {
         match look {
             Look::Header => &self.header,
             Look::Text => &self.text,
-            Look::Wrapped => &self.wrapped,
+            Look::Wrapped | Look::Aside => &self.wrapped,
             Look::Number => &self.number,
             Look::TwoDecimals => &self.two_decimals,
             Look::Title => &self.title,
