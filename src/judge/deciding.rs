@@ -34,24 +34,32 @@ enum Imagined {
 }
 
 /// Searches sets of growing size; among sets of one size those that spare animals come first.
-pub(crate) fn find_deciding_data(
-    context: Context,
-    criterion: &Criterion,
-    judged: &CriterionJudgement,
-) -> Deciding {
+pub(crate) fn find_deciding_data(context: Context, criterion: &Criterion, judged: &CriterionJudgement) -> Deciding {
     let mut candidates = candidates(criterion, judged);
     candidates.sort_by_key(|subject| burden(*subject));
+    let known = bare_outcomes(judged);
     (1..=LARGEST_SET)
         .flat_map(|size| sets(&candidates, size))
-        .find(|set| settles(context, criterion, judged, set))
-        .map_or_else(|| perhaps(context, criterion, judged, &candidates), Deciding::Data)
+        .find(|set| settles(context, criterion, &known, set))
+        .map_or_else(|| perhaps(context, criterion, &known, &candidates), Deciding::Data)
+}
+
+/// What the tests came to, without the values behind it: the search takes the steps hundreds of times.
+fn bare_outcomes(judged: &CriterionJudgement) -> Vec<Vec<TestJudgement>> {
+    let bare = |test: &TestJudgement| TestJudgement {
+        used: Vec::new(),
+        answer: None,
+        stops: test.stops.clone(),
+        ..*test
+    };
+    judged.steps.iter().map(|step| step.tests.iter().map(bare).collect()).collect()
 }
 
 /// The data of which some result would give an answer.
 fn perhaps(
     context: Context,
     criterion: &Criterion,
-    judged: &CriterionJudgement,
+    known: &[Vec<TestJudgement>],
     candidates: &[Subject],
 ) -> Deciding {
     let telling: Vec<Subject> = candidates
@@ -59,7 +67,7 @@ fn perhaps(
         .copied()
         .filter(|subject| {
             let results = possible_results(criterion, *subject);
-            results.iter().any(|result| decides(context, criterion, judged, &[*subject], &[*result]))
+            results.iter().any(|result| decides(context, criterion, known, &[*subject], &[*result]))
         })
         .collect();
     if telling.is_empty() { Deciding::ExpertJudgement } else { Deciding::Perhaps(telling) }
@@ -125,19 +133,19 @@ fn sets(candidates: &[Subject], size: usize) -> Vec<Vec<Subject>> {
 }
 
 /// Whether every combination of results of the imagined data gives an answer.
-fn settles(context: Context, criterion: &Criterion, judged: &CriterionJudgement, set: &[Subject]) -> bool {
+fn settles(context: Context, criterion: &Criterion, known: &[Vec<TestJudgement>], set: &[Subject]) -> bool {
     let results: Vec<Vec<Imagined>> = set
         .iter()
         .map(|subject| possible_results(criterion, *subject))
         .collect();
-    combinations(&results).iter().all(|combination| decides(context, criterion, judged, set, combination))
+    combinations(&results).iter().all(|combination| decides(context, criterion, known, set, combination))
 }
 
 /// Whether the criterion is answered once the data of the set have these results.
 fn decides(
     context: Context,
     criterion: &Criterion,
-    judged: &CriterionJudgement,
+    known: &[Vec<TestJudgement>],
     set: &[Subject],
     results: &[Imagined],
 ) -> bool {
@@ -148,9 +156,9 @@ fn decides(
     let tests = criterion
         .steps
         .iter()
-        .zip(&judged.steps)
+        .zip(known)
         .map(|(step, judged_step)| {
-            let tests = step.tests.iter().zip(&judged_step.tests);
+            let tests = step.tests.iter().zip(judged_step);
             tests
                 .map(|(test, judged_test)| match imagined_for(test) {
                     Some(result) => imagine(context, test, result),
