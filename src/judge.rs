@@ -14,6 +14,7 @@ mod test;
 use std::collections::BTreeSet;
 
 pub use deciding::Deciding;
+use deciding::Found;
 pub use designation::DesignationJudgement;
 pub use step::StepState;
 
@@ -327,6 +328,7 @@ pub(crate) struct Context<'run> {
     pub(crate) rules: &'run RuleSet,
     pub(crate) rulebook: &'run Rulebook,
     pub(crate) cautions: &'run [RaisedCaution],
+    pub(crate) found: &'run Found,
 }
 
 impl Context<'_> {
@@ -363,31 +365,43 @@ fn covers(subjects: &BTreeSet<Subject>, subject: Subject, derived_from: Option<S
     subjects.contains(&subject) || derived_from.is_some_and(|origin| subjects.contains(&origin))
 }
 
-/// Holds a substance against every rulebook of the set.
+/// Holds substances against a rule set. It may be shared between threads; the order of substances changes nothing.
+#[derive(Debug)]
+pub struct Judge<'rules> {
+    rules: &'rules RuleSet,
+    found: Found,
+}
+
+impl<'rules> Judge<'rules> {
+    /// A judge by these rules.
+    pub fn new(rules: &'rules RuleSet) -> Self {
+        Self { rules, found: Found::default() }
+    }
+
+    /// The rules it judges by.
+    pub fn rules(&self) -> &'rules RuleSet {
+        self.rules
+    }
+
+    /// Holds a substance against every rulebook of the set.
+    pub fn judge(&self, substance: &Substance, evidence: &EvidenceSet) -> Judgement {
+        let rules = self.rules;
+        let cautions: Vec<RaisedCaution> = rules
+            .cautions
+            .iter()
+            .enumerate()
+            .filter_map(|(caution, rule)| rule.is_raised_by(substance).map(|reason| RaisedCaution { caution, reason }))
+            .collect();
+        let context =
+            |rulebook| Context { substance, evidence, rules, rulebook, cautions: &cautions, found: &self.found };
+        let rulebooks = rules.rulebooks.iter().map(|rulebook| judge_rulebook(context(rulebook))).collect();
+        Judgement { cautions, rulebooks }
+    }
+}
+
+/// Holds one substance against every rulebook of the set.
 pub fn judge(substance: &Substance, evidence: &EvidenceSet, rules: &RuleSet) -> Judgement {
-    let cautions: Vec<RaisedCaution> = rules
-        .cautions
-        .iter()
-        .enumerate()
-        .filter_map(|(caution, rule)| {
-            rule.is_raised_by(substance)
-                .map(|reason| RaisedCaution { caution, reason })
-        })
-        .collect();
-    let rulebooks = rules
-        .rulebooks
-        .iter()
-        .map(|rulebook| {
-            judge_rulebook(Context {
-                substance,
-                evidence,
-                rules,
-                rulebook,
-                cautions: &cautions,
-            })
-        })
-        .collect();
-    Judgement { cautions, rulebooks }
+    Judge::new(rules).judge(substance, evidence)
 }
 
 fn judge_rulebook(context: Context) -> RulebookJudgement {

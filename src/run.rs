@@ -18,7 +18,7 @@ pub use plan::{RecognisedSheet, recognise_columns};
 
 use crate::columns::{BUILT_IN_COLUMN_WORDS, ColumnOverride};
 use crate::fault::{CellFault, FileFault, Refusal};
-use crate::judge::Verdict;
+use crate::judge::{Judge, Verdict};
 use crate::quantity::Date;
 use crate::report::ReasoningMode;
 use crate::rules::{RuleSet, RuleText, load_rule_set};
@@ -92,40 +92,46 @@ const BATCHES_WAITING: usize = 4;
 
 /// Screens an inventory and writes it back, annotated.
 pub fn screen(settings: &ScreenSettings) -> Result<Summary, Refusal> {
-    let mut rules = load_rule_set(&settings.rulebooks)?;
-    rules.texts.push(RuleText { name: "built in: columns".to_owned(), text: BUILT_IN_COLUMN_WORDS.to_owned() });
-    let rules = rules;
+    let rules = load_rules(settings)?;
     let mut inventory = open_inventory(&settings.inventory)?;
     let plan = Plan::new(&mut inventory, &rules, settings)?;
     let mut output = Output::create(settings, &inventory, &plan, &rules)?;
-    let pool = rayon::ThreadPoolBuilder::new()
-        .num_threads(settings.threads.unwrap_or(0))
-        .build()
-        .map_err(|error| {
-            Refusal::Usage(format!(
-                "the threads could not be started ({error}); try --threads 1"
-            ))
-        })?;
+    let pool = rayon::ThreadPoolBuilder::new().num_threads(settings.threads.unwrap_or(0)).build().map_err(|error| {
+        Refusal::Usage(format!("the threads could not be started ({error}); try --threads 1"))
+    })?;
+    let bench = Bench { judge: Judge::new(&rules), reasoning: plan.reasoning, pool };
     for sheet in &plan.sheets {
-        stream_sheet(&mut inventory, sheet, &plan, &rules, &pool, &mut output)?;
+        stream_sheet(&mut inventory, sheet, &bench, &mut output)?;
     }
     output.finish(settings, &inventory, &plan, &rules)
+}
+
+fn load_rules(settings: &ScreenSettings) -> Result<RuleSet, Refusal> {
+    let mut rules = load_rule_set(&settings.rulebooks)?;
+    let columns = RuleText { name: "built in: columns".to_owned(), text: BUILT_IN_COLUMN_WORDS.to_owned() };
+    rules.texts.push(columns);
+    Ok(rules)
+}
+
+/// Who judges rows, and on how many threads.
+struct Bench<'rules> {
+    judge: Judge<'rules>,
+    reasoning: ReasoningMode,
+    pool: rayon::ThreadPool,
 }
 
 /// Reads, judges and writes one sheet, the three at the same time.
 fn stream_sheet(
     inventory: &mut Inventory,
     sheet: &SheetPlan,
-    plan: &Plan,
-    rules: &RuleSet,
-    pool: &rayon::ThreadPool,
+    bench: &Bench,
     output: &mut Output,
 ) -> Result<(), Refusal> {
     std::thread::scope(|scope| {
         let (to_judge, rows) = sync_channel(BATCHES_WAITING);
         let (to_write, judged) = sync_channel(BATCHES_WAITING);
         scope.spawn(move || read_batches(inventory, sheet, &to_judge));
-        scope.spawn(move || judge_batches(&rows, sheet, plan, rules, pool, &to_write));
+        scope.spawn(move || judge_batches(&rows, sheet, bench, &to_write));
         for batch in judged {
             for row in batch? {
                 output.write_row(sheet, row)?;
@@ -159,18 +165,13 @@ fn read_batches(inventory: &mut Inventory, sheet: &SheetPlan, to_judge: &SyncSen
 fn judge_batches(
     rows: &Receiver<Batch<Row>>,
     sheet: &SheetPlan,
-    plan: &Plan,
-    rules: &RuleSet,
-    pool: &rayon::ThreadPool,
+    bench: &Bench,
     to_write: &SyncSender<Batch<JudgedRow>>,
 ) {
     for batch in rows {
         let judged = batch.map(|rows| {
-            pool.install(|| {
-                rows.into_par_iter()
-                    .map(|row| judge_row(row, sheet, plan.reasoning, rules))
-                    .collect::<Vec<_>>()
-            })
+            let judged = rows.into_par_iter().map(|row| judge_row(row, sheet, bench.reasoning, &bench.judge));
+            bench.pool.install(|| judged.collect::<Vec<_>>())
         });
         if to_write.send(judged).is_err() {
             return;

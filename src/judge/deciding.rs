@@ -3,6 +3,9 @@
 //! Found by asking, not by rule of thumb: each candidate is imagined measured on every side of the limits it is held
 //! against, and the steps are taken again.
 
+use std::collections::HashMap;
+use std::sync::RwLock;
+
 use crate::judge::compare::outcome_of;
 use crate::judge::criterion::decide;
 use crate::judge::test::limit_stops;
@@ -35,13 +38,76 @@ enum Imagined {
 
 /// Searches sets of growing size; among sets of one size those that spare animals come first.
 pub(crate) fn find_deciding_data(context: Context, criterion: &Criterion, judged: &CriterionJudgement) -> Deciding {
+    let known = bare_outcomes(judged);
+    let question = question(context, criterion, &known);
+    if let Some(found) = context.found.get(&question) {
+        return found;
+    }
+    let deciding = search(context, criterion, judged, &known);
+    context.found.keep(question, deciding.clone());
+    deciding
+}
+
+fn search(
+    context: Context,
+    criterion: &Criterion,
+    judged: &CriterionJudgement,
+    known: &[Vec<TestJudgement>],
+) -> Deciding {
     let mut candidates = candidates(criterion, judged);
     candidates.sort_by_key(|subject| burden(*subject));
-    let known = bare_outcomes(judged);
     (1..=LARGEST_SET)
         .flat_map(|size| sets(&candidates, size))
-        .find(|set| settles(context, criterion, &known, set))
-        .map_or_else(|| perhaps(context, criterion, &known, &candidates), Deciding::Data)
+        .find(|set| settles(context, criterion, known, set))
+        .map_or_else(|| perhaps(context, criterion, known, &candidates), Deciding::Data)
+}
+
+/// What was found before. Rows whose tests came out the same ask the same question, and most rows do.
+#[derive(Debug, Default)]
+pub(crate) struct Found(RwLock<HashMap<Vec<u8>, Deciding>>);
+
+impl Found {
+    /// More questions than an inventory can ask in practice; beyond it nothing is kept, and nothing changes.
+    const MOST: usize = 100_000;
+
+    fn get(&self, question: &[u8]) -> Option<Deciding> {
+        self.0.read().ok()?.get(question).cloned()
+    }
+
+    fn keep(&self, question: Vec<u8>, deciding: Deciding) {
+        if let Ok(mut found) = self.0.write()
+            && found.len() < Self::MOST
+        {
+            found.insert(question, deciding);
+        }
+    }
+}
+
+/// Everything that the search looks at, as bytes: the criterion, the cautions raised, and what each test came to.
+fn question(context: Context, criterion: &Criterion, known: &[Vec<TestJudgement>]) -> Vec<u8> {
+    let mut bytes = format!("{}\n{}\n", context.rulebook.id, criterion.id).into_bytes();
+    let number = |bytes: &mut Vec<u8>, number: usize| bytes.extend(number.to_le_bytes());
+    for raised in context.cautions {
+        number(&mut bytes, raised.caution);
+    }
+    for test in known.iter().flatten() {
+        bytes.extend([b'|', test.outcome as u8, test.carries as u8]);
+        for stop in &test.stops {
+            let (kind, index) = match *stop {
+                Stop::Caution(index) => (0, index),
+                Stop::WithinOneSd => (1, 0),
+                Stop::RelationFromMemory(index) => (2, index),
+                Stop::LimitFromMemory => (3, 0),
+                Stop::LowSide { relation, .. } => (4, relation),
+                Stop::Guard(step) => (5, step),
+                Stop::OpenGuard(step) => (6, step),
+                Stop::EarlierDoubt => (7, 0),
+            };
+            bytes.push(kind);
+            number(&mut bytes, index);
+        }
+    }
+    bytes
 }
 
 /// What the tests came to, without the values behind it: the search takes the steps hundreds of times.

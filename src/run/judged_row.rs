@@ -2,7 +2,7 @@
 
 use crate::evidence::gather_evidence;
 use crate::fault::CellFault;
-use crate::judge::{Judgement, TestOutcome, Verdict, judge};
+use crate::judge::{Judge, Judgement, TestOutcome, Verdict};
 use crate::reasoning::{Told, headline_verdict};
 use crate::report::{Entry, ReasoningMode, added_entries, reasoning_entries, record_entries};
 use crate::rules::RuleSet;
@@ -36,7 +36,7 @@ pub(crate) struct Added {
 }
 
 /// Takes one row its whole way.
-pub(crate) fn judge_row(row: Row, sheet: &SheetPlan, reasoning: ReasoningMode, rules: &RuleSet) -> JudgedRow {
+pub(crate) fn judge_row(row: Row, sheet: &SheetPlan, reasoning: ReasoningMode, judge: &Judge) -> JudgedRow {
     let Some(screened) = &sheet.screened else {
         return JudgedRow { row, added: None };
     };
@@ -49,9 +49,10 @@ pub(crate) fn judge_row(row: Row, sheet: &SheetPlan, reasoning: ReasoningMode, r
     if !holds_data {
         return JudgedRow { row, added: None };
     }
+    let rules = judge.rules();
     let substance = screened.reader.read(&row);
     let evidence = gather_evidence(&substance, &rules.relations);
-    let judgement = judge(&substance, &evidence, rules);
+    let judgement = judge.judge(&substance, &evidence);
     let told = Told {
         substance: &substance,
         evidence: &evidence,
