@@ -93,8 +93,10 @@ pub(crate) fn deciding_phrase(deciding: &Deciding) -> String {
     match deciding {
         Deciding::Data(subjects) => listed(&titles(subjects.iter().copied())),
         Deciding::Perhaps(subjects) => {
+            const NAMED: usize = 3;
             let titles = titles(subjects.iter().copied());
-            format!("only by pointing to concern: {}", titles.join(" or "))
+            let named = if titles.len() > NAMED { "any datum".to_owned() } else { titles.join(" or ") };
+            format!("{named}, only by pointing to concern")
         }
         Deciding::ExpertJudgement => "expert judgement".to_owned(),
     }

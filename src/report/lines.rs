@@ -1,6 +1,7 @@
 //! The Reasoning sheet: a line per row, rulebook and criterion.
 
 use crate::judge::Verdict;
+use crate::quantity::format_number;
 use crate::reasoning::{Told, criterion_line};
 use crate::report::Entry;
 use crate::report::added::shade;
@@ -73,22 +74,27 @@ pub fn reasoning_entries(told: Told, mode: ReasoningMode) -> Vec<Vec<Entry>> {
                 Entry::text(criterion.id.as_str(), Look::Text),
                 Entry::text(line.verdict, Look::Verdict(shade(judged.verdict))),
                 match line.number {
-                    Some(number) => Entry::number(Some(number), Look::Number),
+                    Some(number) => Entry::number(Some(as_shown(number)), Look::Number),
                     None => Entry::text(line.value, Look::Text),
                 },
                 Entry::text(line.unit, Look::Text),
                 Entry::number(line.sd, Look::TwoDecimals),
                 Entry::text(line.basis, Look::Text),
                 Entry::text(line.origin, Look::Wrapped),
-                Entry::text(line.limit, Look::Text),
+                Entry::text(line.limit, Look::Wrapped),
                 Entry::number(line.margin, Look::TwoDecimals),
                 Entry::number(line.chance, Look::TwoDecimals),
                 Entry::text(line.sentence, Look::Wrapped),
-                Entry::text(line.cautions, Look::Text),
+                Entry::text(line.cautions, Look::Wrapped),
                 Entry::text(line.source, Look::Wrapped),
                 Entry::text(line.would_settle, Look::Wrapped),
             ]);
         }
     }
     lines
+}
+
+/// A number to the four significant digits that sentences show; what was compared had them all.
+fn as_shown(number: f64) -> f64 {
+    format_number(number).parse().unwrap_or(number)
 }

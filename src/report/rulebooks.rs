@@ -7,6 +7,7 @@ use crate::rules::{
     Checked, Combine, Criterion, Decides, Designation, DesignationPart, Guards, OnlyIf, RuleSet, Rulebook,
     Step, Test, Weight,
 };
+use crate::substance::Basis;
 use crate::workbook::Look;
 
 const COLUMNS: [(&str, f64); 12] = [
@@ -131,6 +132,7 @@ fn lead(rulebook: &Rulebook, criterion: &Criterion) -> Vec<Entry> {
 
 fn test_entries(rulebook: &Rulebook, test: &Test, limit: String) -> Vec<Entry> {
     let bases: Vec<&str> = test.bases.iter().map(|basis| basis.word()).collect();
+    let bases = if bases.len() == Basis::ALL.len() { "any".to_owned() } else { bases.join(", ") };
     let mut remarks: Vec<String> = test.note.clone().into_iter().collect();
     if let (Some(guideline), Some(within)) = (&test.guideline, test.within) {
         remarks.push(format!("By {guideline} within {} d.", format_number(within)));
@@ -146,8 +148,8 @@ fn test_entries(rulebook: &Rulebook, test: &Test, limit: String) -> Vec<Entry> {
     }
     vec![
         Entry::text(test.subject.title(), Look::Text),
-        Entry::text(limit, Look::Text),
-        Entry::text(bases.join(", "), Look::Text),
+        Entry::text(limit, Look::Wrapped),
+        Entry::text(bases, Look::Wrapped),
         Entry::text(test.source.as_str(), Look::Wrapped),
         Entry::text(test.checked.word(), Look::Text),
         Entry::text(rulebook.edition.to_string(), Look::Text),

@@ -97,7 +97,7 @@ pub fn run_record_table(facts: &RunFacts, rules: &RuleSet) -> Table {
     rows.push(pair("", lists_not_consulted(rules)));
     Table {
         name: "Run record",
-        widths: vec![34.0, 120.0],
+        widths: vec![40.0, 120.0],
         frozen_rows: 0,
         rows,
     }
@@ -132,18 +132,15 @@ fn sheet_rows(sheet: &SheetFacts) -> Vec<Vec<Entry>> {
     rows.push(pair("Rows screened", sheet.screened.to_string()));
     rows.push(pair("Header in row", (recognised.header_row + 1).to_string()));
     for column in &recognised.columns {
-        let unit = match column.unit {
-            Some(unit) => format!("; unit of the header: {}", unit.symbol()),
-            None => column.field.default_unit().map_or(String::new(), |unit| {
-                format!(
-                    "; no unit in the header: {} where the cell names none",
-                    unit_word(unit.symbol())
-                )
-            }),
+        let unit = match (column.unit, column.field.default_unit()) {
+            (Some(unit), _) if unit.symbol().is_empty() => String::new(),
+            (Some(unit), _) => format!("; unit of the header: {}", unit.symbol()),
+            (None, Some(unit)) if !unit.symbol().is_empty() => format!("; {} where a cell names no unit", unit.symbol()),
+            (None, Some(_) | None) => String::new(),
         };
         rows.push(pair(
             &format!("{} {}", column_letters(column.index), column.header),
-            format!("{}{unit}. {}", column.field.id(), column.reason),
+            format!("{}{unit}; {}", column.field.id(), column.reason),
         ));
     }
     rows.extend(recognised.unknown.iter().map(|(index, header)| {
@@ -159,10 +156,6 @@ fn sheet_rows(sheet: &SheetFacts) -> Vec<Vec<Entry>> {
             .map(|remark| pair("Remark", remark.clone())),
     );
     rows
-}
-
-fn unit_word(symbol: &str) -> &str {
-    if symbol.is_empty() { "no unit" } else { symbol }
 }
 
 fn fault_rows(facts: &RunFacts) -> Vec<Vec<Entry>> {
@@ -186,5 +179,5 @@ fn title(text: &str) -> Vec<Entry> {
 }
 
 fn pair(name: &str, value: String) -> Vec<Entry> {
-    vec![Entry::text(name, Look::Text), Entry::text(value, Look::Wrapped)]
+    vec![Entry::text(name, Look::Wrapped), Entry::text(value, Look::Wrapped)]
 }

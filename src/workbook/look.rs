@@ -99,7 +99,7 @@ impl Looks {
             wrapped: top().set_text_wrap(),
             number: top().set_align(FormatAlign::Right),
             two_decimals: top().set_align(FormatAlign::Right).set_num_format("0.00"),
-            title: Format::new()
+            title: top()
                 .set_bold()
                 .set_font_size(14.0)
                 .set_font_color(DEEPEST),
