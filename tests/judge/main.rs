@@ -11,6 +11,7 @@ mod close_calls;
 mod half_lives;
 mod limits;
 mod statements;
+mod steps;
 mod stops;
 mod support;
 mod walked;
