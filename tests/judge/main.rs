@@ -9,10 +9,12 @@
 
 mod close_calls;
 mod half_lives;
+mod keys;
 mod limits;
 mod statements;
 mod steps;
 mod stops;
 mod support;
+mod values;
 mod walked;
 mod words;
