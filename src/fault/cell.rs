@@ -63,6 +63,11 @@ pub enum CellFaultKind {
     },
     /// A molar concentration in a row without a molar mass.
     NeedsMolarMass,
+    /// A number that no substance can have.
+    OutOfSense {
+        /// The field's title.
+        what: &'static str,
+    },
     /// A range whose ends are the wrong way round, or a number out of any sense.
     BadRange {
         /// The field's title.
@@ -87,6 +92,8 @@ pub enum CellFaultKind {
     },
     /// A text too long to be a value.
     TooLong,
+    /// A formula whose result the file does not hold.
+    FormulaWithoutResult,
     /// The spreadsheet shows an error.
     SheetError,
     /// A number whose check digit is wrong.
@@ -195,6 +202,10 @@ impl fmt::Display for CellFaultKind {
                 formatter,
                 "is in moles, but the row has no molar mass; add a molar mass in g/mol or write it in mg/L"
             ),
+            Self::OutOfSense { what } => write!(
+                formatter,
+                "is far outside what {what} can be; check the number, its unit and its decimal separator"
+            ),
             Self::BadRange { what } => write!(
                 formatter,
                 "is no sensible {what}: its ends are the wrong way round or the number is out of any range; \
@@ -219,6 +230,11 @@ impl fmt::Display for CellFaultKind {
             Self::TooLong => write!(
                 formatter,
                 "is too long to be a value; write the value alone and keep the rest in a column of its own"
+            ),
+            Self::FormulaWithoutResult => write!(
+                formatter,
+                "is a formula without a stored result; open the workbook in a spreadsheet program, save it and use \
+                 that file"
             ),
             Self::SheetError => {
                 write!(

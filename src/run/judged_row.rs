@@ -77,7 +77,7 @@ pub(crate) fn judge_row(row: Row, sheet: &SheetPlan, reasoning: ReasoningMode, r
 
 fn is_filled(row: &Row, column: u16) -> bool {
     row.cell(column).is_some_and(|cell| match &cell.content {
-        CellContent::Empty => false,
+        CellContent::Empty => cell.formula,
         CellContent::Text(text) => !text.trim().is_empty(),
         CellContent::Number(_)
         | CellContent::Boolean(_)

@@ -30,7 +30,7 @@ pub struct Cell {
     pub content: CellContent,
     /// How it looks, if it is formatted.
     pub style: Option<StyleId>,
-    /// It holds a formula, of which `content` is the last result.
+    /// It holds a formula, of which `content` is the last result; [`CellContent::Empty`] if none is stored.
     pub formula: bool,
 }
 

@@ -54,7 +54,7 @@ pub(super) fn parts_not_carried<'name>(
             .map(|name| format!("`{name}`"))
             .collect();
         sentences.push(format!(
-            "Workbook, not carried over: {} {}, which hold no cells.",
+            "Workbook, not carried over: {} {}, without cells.",
             if names.len() == 1 { "sheet" } else { "sheets" },
             names.join(", ")
         ));

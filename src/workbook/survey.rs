@@ -59,6 +59,8 @@ pub struct SheetSurvey {
     pub last_row: u32,
     /// How many cells are formulas.
     pub formulas: usize,
+    /// How many cells hold an error value such as `#N/A`.
+    pub error_values: usize,
     /// How many formulas have no stored result and so read as empty.
     pub formulas_without_result: usize,
     /// Rows and columns that stay in place when the user scrolls.
@@ -115,6 +117,7 @@ pub(super) fn survey_sheet(
         used_columns: 0,
         last_row: 0,
         formulas: 0,
+        error_values: 0,
         formulas_without_result: 0,
         frozen: None,
         formula_runs: BTreeMap::new(),

@@ -216,7 +216,7 @@ fn check_sense(interval: Interval, expected: Expected) -> Result<(), CellFaultKi
         });
     }
     if ends.iter().flatten().any(|end| *end < least || *end > most) {
-        return Err(CellFaultKind::BadRange { what });
+        return Err(CellFaultKind::OutOfSense { what });
     }
     Ok(())
 }
@@ -234,11 +234,17 @@ pub(super) fn value_text(content: &CellContent) -> Option<String> {
     (!is_missing(&text)).then_some(text)
 }
 
+/// Whether a number is shown in full; spreadsheet programs show others with an exponent.
+fn plain(number: f64) -> bool {
+    number.abs() < f64::MIN_POSITIVE || (1e-9..1e15).contains(&number.abs())
+}
+
 /// The content of a cell in a message.
 pub(super) fn shown(content: &CellContent) -> String {
     match content {
         CellContent::Empty => String::new(),
         CellContent::Text(text) | CellContent::Error(text) => text.clone(),
+        CellContent::Number(number) if !plain(*number) => format!("{number:E}"),
         CellContent::Number(number) => number.to_string(),
         CellContent::Boolean(true) => "TRUE".to_owned(),
         CellContent::Boolean(false) => "FALSE".to_owned(),

@@ -60,12 +60,22 @@ impl Draft {
             column: column.index,
         };
         let result = match &cell.content {
+            CellContent::Empty if cell.formula => Err(CellFaultKind::FormulaWithoutResult),
             CellContent::Empty => Ok(()),
             CellContent::Error(_) => Err(CellFaultKind::SheetError),
             content => self.take_content(column, content, place.clone()),
         };
         if let Err(kind) = result {
-            self.fault(&cell.content, place, kind);
+            let found = if kind == CellFaultKind::FormulaWithoutResult {
+                "=…".to_owned()
+            } else {
+                cell::shown(&cell.content)
+            };
+            self.substance.faults.push(CellFault {
+                cell: place,
+                found,
+                kind,
+            });
         }
     }
 

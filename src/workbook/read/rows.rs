@@ -80,14 +80,18 @@ impl<'book> Rows<'book> {
     /// The next cell that holds a value or a format worth keeping.
     fn next_cell(&mut self) -> Result<Option<(u32, Cell)>, String> {
         while self.position == Position::Inside {
-            let (row, column, content, style) = match self.reader.next_cell_with_style_id() {
+            let (row, column, mut content, style) = match self.reader.next_cell_with_style_id() {
                 Ok(None) => {
                     self.position = Position::AtEnd;
                     break;
                 }
                 Ok(Some((cell, style))) => {
                     let (row, column) = cell.get_position();
-                    (row, column, content_of(cell.get_value(), self.date_shift), style)
+                    if matches!(cell.get_value(), DataRef::String(text) if text.is_empty()) {
+                        (row, column, CellContent::Text(String::new()), style)
+                    } else {
+                        (row, column, content_of(cell.get_value(), self.date_shift), style)
+                    }
                 }
                 Err(XlsxError::CellError(text)) => self.known_by_survey(text)?,
                 Err(error) => return Err(error.to_string()),
@@ -96,6 +100,10 @@ impl<'book> Rows<'book> {
                 .map_err(|_too_far| format!("there is no column {}", u64::from(column) + 1))?;
             let style = self.kept_style(style);
             let formula = self.survey.is_formula(row, column);
+            // Where a formula gave an empty text, that is its result; without a formula it is an empty cell.
+            if !formula && content == CellContent::Text(String::new()) {
+                content = CellContent::Empty;
+            }
             let empty = content == CellContent::Empty && !formula;
             if empty && (style.is_none() || column >= self.survey.used_columns) {
                 continue;

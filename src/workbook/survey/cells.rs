@@ -263,7 +263,7 @@ impl CellCheck {
         let (row, column) = (self.cell.row, self.cell.column);
         if self.cell.formula == Seen::Yes {
             survey.note_formula(row, column);
-            if self.cell.value == Seen::No {
+            if self.has_no_result() {
                 survey.formulas_without_result += 1;
             }
         }
@@ -279,8 +279,17 @@ impl CellCheck {
         Ok(())
     }
 
+    /// Programs that write formulas without computing them store no value, or an empty one; an empty text is a result.
+    fn has_no_result(&self) -> bool {
+        let stored_empty = self.cell.text.is_empty() && self.cell.pieces == 0 && !is_text(&self.cell.kind);
+        self.cell.value == Seen::No || stored_empty
+    }
+
     fn check_value(&mut self, survey: &mut SheetSurvey) -> Result<(), SheetFault> {
         let (kind, text) = (self.cell.kind.as_str(), self.cell.text.as_str());
+        if kind == "e" {
+            survey.error_values += 1;
+        }
         match value_of(kind, text, self.cell.pieces, self.shared_texts) {
             Ok(ReadAs::Meant) => Ok(()),
             Ok(ReadAs::Unknown) => self.note_unknown_error(survey),

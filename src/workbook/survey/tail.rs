@@ -120,6 +120,13 @@ impl super::SheetSurvey {
                 count(self.formulas_without_result, "formula has", "formulas have")
             ));
         }
+        if self.error_values > 0 {
+            sentences.push(format!(
+                "Sheet `{}`: {} written as text.",
+                self.name,
+                count(self.error_values, "error value is", "error values are")
+            ));
+        }
         sentences
     }
 }

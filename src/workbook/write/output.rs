@@ -26,6 +26,12 @@ impl Output {
             Some(folder) => folder.to_path_buf(),
             None => return Err(FileFault::Folder { path }),
         };
+        if folder.exists() && !folder.is_dir() {
+            return Err(FileFault::OutputFolderClosed {
+                folder: folder.display().to_string(),
+                reason: "it is a file, not a folder".to_owned(),
+            });
+        }
         if !folder.is_dir() {
             return Err(FileFault::OutputFolderMissing {
                 folder: folder.display().to_string(),
