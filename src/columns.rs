@@ -56,6 +56,20 @@ pub struct Recognised {
     pub remarks: Vec<String>,
 }
 
+impl Recognised {
+    /// The headers of all columns, recognised or not.
+    pub fn headers(&self) -> impl Iterator<Item = &str> {
+        let known = self.columns.iter().map(|column| column.header.as_str());
+        known.chain(self.unknown.iter().map(|(_, header)| header.as_str()))
+    }
+
+    /// Whether there is a column of which the user speaks.
+    pub fn has_column_of(&self, told: &ColumnOverride) -> bool {
+        self.headers()
+            .any(|header| told.is_for(header) || header_row::is_for_name(told, header))
+    }
+}
+
 /// `--column 'Header=field'`.
 #[derive(Debug, Clone, PartialEq, Eq)]
 pub struct ColumnOverride {

@@ -13,13 +13,37 @@ use crate::workbook::column_letters;
 /// Settles which columns are taken.
 pub(super) fn choose(sheet: &str, found: Found, words: &ColumnWords) -> Recognised {
     let mut cells = found.cells;
-    let mut remarks = Vec::new();
+    let mut remarks: Vec<String> = found
+        .others_above
+        .iter()
+        .map(|row| {
+            format!(
+                "{sheet}: row {} looks like a header, too, but row {} names more columns; rows above it are not \
+                 screened: give each table a sheet of its own",
+                row + 1,
+                found.row + 1
+            )
+        })
+        .collect();
+    remarks.extend(found.others_below.iter().map(|row| {
+        format!(
+            "{sheet}: row {} looks like a header, too, but the rows below it are read with the columns of row {}; \
+             give each table a sheet of its own",
+            row + 1,
+            found.row + 1
+        )
+    }));
     take_product_name(&mut cells, words);
     let doubled = doubled_fields(&cells);
     let mut taken: BTreeMap<Field, (u16, String)> = BTreeMap::new();
     let mut columns: Vec<Column> = Vec::new();
     let mut unknown = Vec::new();
+    let second_table = second_table(&cells);
     for cell in cells {
+        if second_table.is_some_and(|start| cell.column >= start) {
+            unknown.push((cell.column, cell.text));
+            continue;
+        }
         let Some(field) = cell.field() else {
             remarks.extend(hint(sheet, &cell, words));
             unknown.push((cell.column, cell.text));
@@ -38,6 +62,13 @@ pub(super) fn choose(sheet: &str, found: Found, words: &ColumnWords) -> Recognis
             }
         }
     }
+    remarks.extend(second_table.map(|column| {
+        format!(
+            "{sheet}: headers repeat from column {} on, as if a second table stood there; the columns from there on are \
+             left aside: give each table a sheet of its own",
+            column_letters(column)
+        )
+    }));
     for place in 0..columns.len() {
         let about = columns.get(place).and_then(|column| {
             column
@@ -55,6 +86,24 @@ pub(super) fn choose(sheet: &str, found: Found, words: &ColumnWords) -> Recognis
         unknown,
         remarks,
     }
+}
+
+/// Where a second table begins: an identity repeated word by word, and right of it a property, too. Its values may be
+/// another substance's than the row's.
+fn second_table(cells: &[HeaderCell]) -> Option<u16> {
+    let repeats = |cell: &HeaderCell| {
+        cells.iter().any(|other| {
+            other.column < cell.column && other.text == cell.text && other.field() == cell.field()
+        })
+    };
+    let start = cells
+        .iter()
+        .find(|cell| cell.field().is_some_and(Field::identifies) && repeats(cell))?
+        .column;
+    let property_too = cells
+        .iter()
+        .any(|cell| cell.column > start && matches!(cell.field(), Some(Field::Property(_))) && repeats(cell));
+    property_too.then_some(start)
 }
 
 /// `Product name` is the substance's name where no other column is.

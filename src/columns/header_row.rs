@@ -50,11 +50,16 @@ pub(super) struct Found {
     /// The row in which our own headers go, counted from 0.
     pub(super) row: u32,
     pub(super) cells: Vec<HeaderCell>,
+    /// Rows above it that could be a header, too.
+    pub(super) others_above: Vec<u32>,
+    /// Rows below it that look like the header of another table.
+    pub(super) others_below: Vec<u32>,
 }
 
 /// The row with the most recognised headers, of several such the one with the most cells, then the first.
 pub(super) fn find(first_rows: &[Row], words: &ColumnWords, overrides: &[ColumnOverride]) -> Option<Found> {
     let mut best: Option<((usize, usize), usize, Vec<HeaderCell>)> = None;
+    let mut others_above = Vec::new();
     for (place, row) in first_rows.iter().take(HEADER_WITHIN).enumerate() {
         let cells = header_cells(texts_of(row), words, overrides);
         if !is_inventory(&cells) {
@@ -63,10 +68,18 @@ pub(super) fn find(first_rows: &[Row], words: &ColumnWords, overrides: &[ColumnO
         let recognised = cells.iter().filter(|cell| cell.field().is_some()).count();
         let rank = (recognised, cells.len());
         if best.as_ref().is_none_or(|(best_rank, ..)| rank > *best_rank) {
+            let passed_over = best.as_ref().filter(|((recognised, _), ..)| *recognised > 1);
+            others_above.extend(passed_over.and_then(|(_, place, _)| Some(first_rows.get(*place)?.index)));
             best = Some((rank, place, cells));
         }
     }
     let (_, place, cells) = best?;
+    let others_below: Vec<u32> = first_rows
+        .iter()
+        .skip(place + 1)
+        .filter(|row| names_columns(&header_cells(texts_of(row), words, overrides)))
+        .map(|row| row.index)
+        .collect();
     let upper = first_rows.get(place)?;
     let below = first_rows
         .get(place + 1)
@@ -81,11 +94,15 @@ pub(super) fn find(first_rows: &[Row], words: &ColumnWords, overrides: &[ColumnO
             Found {
                 row: row.index,
                 cells: header_cells(joined.collect(), words, overrides),
+                others_above,
+                others_below,
             }
         }
         None => Found {
             row: upper.index,
             cells,
+            others_above,
+            others_below,
         },
     })
 }
@@ -150,9 +167,14 @@ fn header_cells(
 }
 
 /// The user may give a header of two rows without its unit.
-fn is_for_name(told: &ColumnOverride, text: &str) -> bool {
+pub(super) fn is_for_name(told: &ColumnOverride, text: &str) -> bool {
     text.rsplit_once(" [")
         .is_some_and(|(name, _)| header_words(name) == header_words(&told.header))
+}
+
+/// Whether a row among the data is a header of its own: an identity and something else, each named.
+fn names_columns(cells: &[HeaderCell]) -> bool {
+    is_inventory(cells) && cells.iter().filter(|cell| cell.field().is_some()).count() > 1
 }
 
 fn is_inventory(cells: &[HeaderCell]) -> bool {
