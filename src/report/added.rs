@@ -71,14 +71,21 @@ fn parts(rulebook: &Rulebook) -> impl Iterator<Item = &str> {
 }
 
 fn free_header(header: String, taken: &[String]) -> String {
-    if taken
-        .iter()
-        .any(|other| other.trim().eq_ignore_ascii_case(&header))
-    {
-        format!("{header} (screened)")
-    } else {
-        header
+    let is_taken = |header: &str| {
+        taken
+            .iter()
+            .any(|other| other.trim().eq_ignore_ascii_case(header))
+    };
+    if !is_taken(&header) {
+        return header;
     }
+    let mut free = format!("{header} (screened)");
+    let mut number = 2_u32;
+    while is_taken(&free) {
+        free = format!("{header} (screened {number})");
+        number = number.saturating_add(1);
+    }
+    free
 }
 
 /// The added cells of one row, in the order of the headers.

@@ -125,6 +125,14 @@ impl ScreenArguments {
                 "--threads 0: at least one thread is needed; write 1 or more".to_owned(),
             ));
         }
+        if self.threads.is_some_and(|threads| threads > MOST_THREADS) {
+            return Err(Refusal::Usage(format!(
+                "--threads: at most {MOST_THREADS} can be asked for; more threads than cores gain nothing"
+            )));
+        }
+        if let Some(output) = &self.output {
+            refuse_other_kind(output)?;
+        }
         let output = self.output.unwrap_or_else(|| beside(&self.inventory));
         Ok(ScreenSettings {
             output,
@@ -159,6 +167,23 @@ impl ColumnsArguments {
     pub(crate) fn overrides(&self) -> Result<Vec<ColumnOverride>, Refusal> {
         overrides(&self.column)
     }
+}
+
+/// More threads take minutes to start, and no machine has the cores.
+const MOST_THREADS: usize = 1024;
+
+/// A spreadsheet program does not open a workbook that is named as something else.
+fn refuse_other_kind(output: &std::path::Path) -> Result<(), Refusal> {
+    let is_xlsx = output
+        .extension()
+        .is_some_and(|extension| extension.eq_ignore_ascii_case("xlsx"));
+    if is_xlsx || output.is_dir() {
+        return Ok(());
+    }
+    Err(Refusal::Usage(format!(
+        "--output {}: the output is an xlsx workbook; write a name that ends in .xlsx",
+        output.display()
+    )))
 }
 
 fn overrides(texts: &[String]) -> Result<Vec<ColumnOverride>, Refusal> {

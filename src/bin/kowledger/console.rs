@@ -51,7 +51,7 @@ impl Console {
             summary
                 .column_remarks
                 .iter()
-                .map(|(sheet, remark)| format!("Sheet {sheet}: {remark}")),
+                .map(|(_, remark)| format!("Columns of {remark}")),
         );
         if !summary.unreached.is_empty() {
             lines.push(format!(
@@ -59,9 +59,7 @@ impl Console {
                 summary.unreached.join("; ")
             ));
         }
-        if !summary.not_carried.is_empty() {
-            lines.push(format!("Not carried over: {}.", summary.not_carried.join("; ")));
-        }
+        lines.extend(summary.not_carried.iter().cloned());
         lines.push(format!("Written: {}", summary.output.display()));
         lines.push(
             "A screening, not a decision: unresolved and no data are open questions, and a qualified person must confirm every verdict."
@@ -153,7 +151,7 @@ pub(crate) fn checked(summaries: &[RulebookSummary]) {
 
 fn rulebook_line(summary: &RulebookSummary) -> String {
     format!(
-        "{:<28}{:<12}{}, edition {}: {}; limits seen {}, second-hand {}, from memory {}",
+        "{:<32}{:<12}{}, edition {}: {}; limits seen {}, second-hand {}, from memory {}",
         summary.id,
         summary.short,
         summary.title,
