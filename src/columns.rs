@@ -56,6 +56,19 @@ pub struct Recognised {
     pub remarks: Vec<String>,
 }
 
+impl Recognised {
+    /// The headers of all columns, recognised or not.
+    pub fn headers(&self) -> impl Iterator<Item = &str> {
+        let known = self.columns.iter().map(|column| column.header.as_str());
+        known.chain(self.unknown.iter().map(|(_, header)| header.as_str()))
+    }
+
+    /// Whether there is a column of which the user speaks.
+    pub fn has_column_of(&self, told: &ColumnOverride) -> bool {
+        self.headers().any(|header| told.is_for(header) || header_row::is_for_name(told, header))
+    }
+}
+
 /// `--column 'Header=field'`.
 #[derive(Debug, Clone, PartialEq, Eq)]
 pub struct ColumnOverride {
@@ -69,9 +82,8 @@ impl ColumnOverride {
     /// Reads `Header=field` or `Header=ignore`; what is wrong with it in words.
     pub fn parse(text: &str) -> Result<Self, String> {
         let example = "write --column 'Header=field', for example --column 'Stoff=name', or 'Header=ignore'";
-        let (header, field) = text
-            .rsplit_once('=')
-            .ok_or_else(|| format!("`{text}` names no field; {example}"))?;
+        let (header, field) =
+            text.rsplit_once('=').ok_or_else(|| format!("`{text}` names no field; {example}"))?;
         if header_words(header).is_empty() {
             return Err(format!("`{text}` names no header; {example}"));
         }
@@ -80,10 +92,7 @@ impl ColumnOverride {
             "ignore" => None,
             _ => Some(Field::from_id(id).ok_or_else(|| words::unknown_field(id))?),
         };
-        Ok(Self {
-            header: header.trim().to_owned(),
-            field,
-        })
+        Ok(Self { header: header.trim().to_owned(), field })
     }
 
     /// Whether this speaks of a header.

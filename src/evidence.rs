@@ -91,10 +91,7 @@ impl EvidenceSet {
     }
 
     fn push(&mut self, evidence: Evidence) {
-        self.by_property
-            .entry(evidence.property)
-            .or_default()
-            .push(evidence);
+        self.by_property.entry(evidence.property).or_default().push(evidence);
     }
 }
 
@@ -114,8 +111,5 @@ impl Evidence {
 pub fn best_ranked(values: &[Evidence]) -> impl Iterator<Item = &Evidence> {
     let full = |evidence: &&Evidence| evidence.standing == Standing::Full;
     let best = values.iter().filter(full).map(|evidence| evidence.basis).min();
-    values
-        .iter()
-        .filter(full)
-        .filter(move |evidence| Some(evidence.basis) == best)
+    values.iter().filter(full).filter(move |evidence| Some(evidence.basis) == best)
 }

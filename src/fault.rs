@@ -36,11 +36,7 @@ pub fn nearest<'word>(unknown: &str, known: impl IntoIterator<Item = &'word str>
 
 /// A noun with its number: `1 row`, `2 rows`.
 pub fn count(number: usize, singular: &str, plural: &str) -> String {
-    if number == 1 {
-        format!("1 {singular}")
-    } else {
-        format!("{number} {plural}")
-    }
+    if number == 1 { format!("1 {singular}") } else { format!("{number} {plural}") }
 }
 
 #[cfg(test)]

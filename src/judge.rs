@@ -338,18 +338,12 @@ impl Context<'_> {
         subject: Subject,
         derived_from: Option<Subject>,
     ) -> impl Iterator<Item = usize> {
-        self.cautions
-            .iter()
-            .map(|raised| raised.caution)
-            .filter(move |index| {
-                self.rules
-                    .cautions
-                    .get(*index)
-                    .is_some_and(|caution| match &caution.blocks {
-                        Blocks::Everything => true,
-                        Blocks::Subjects(subjects) => covers(subjects, subject, derived_from),
-                    })
+        self.cautions.iter().map(|raised| raised.caution).filter(move |index| {
+            self.rules.cautions.get(*index).is_some_and(|caution| match &caution.blocks {
+                Blocks::Everything => true,
+                Blocks::Subjects(subjects) => covers(subjects, subject, derived_from),
             })
+        })
     }
 
     /// Whether a raised caution lets the subject fire as screening only.
@@ -390,10 +384,18 @@ impl<'rules> Judge<'rules> {
             .cautions
             .iter()
             .enumerate()
-            .filter_map(|(caution, rule)| rule.is_raised_by(substance).map(|reason| RaisedCaution { caution, reason }))
+            .filter_map(|(caution, rule)| {
+                rule.is_raised_by(substance).map(|reason| RaisedCaution { caution, reason })
+            })
             .collect();
-        let context =
-            |rulebook| Context { substance, evidence, rules, rulebook, cautions: &cautions, found: &self.found };
+        let context = |rulebook| Context {
+            substance,
+            evidence,
+            rules,
+            rulebook,
+            cautions: &cautions,
+            found: &self.found,
+        };
         let rulebooks = rules.rulebooks.iter().map(|rulebook| judge_rulebook(context(rulebook))).collect();
         Judgement { cautions, rulebooks }
     }
@@ -413,11 +415,7 @@ fn judge_rulebook(context: Context) -> RulebookJudgement {
         .collect();
     let designations = designation::judge_designations(context, &criteria);
     let headline = headline(context, &criteria, &designations);
-    RulebookJudgement {
-        headline,
-        criteria,
-        designations,
-    }
+    RulebookJudgement { headline, criteria, designations }
 }
 
 fn headline(
@@ -425,11 +423,8 @@ fn headline(
     criteria: &[CriterionJudgement],
     designations: &[DesignationJudgement],
 ) -> Headline {
-    if let Some(listing) = context
-        .rulebook
-        .listings
-        .iter()
-        .position(|listing| is_listed(context.substance, listing))
+    if let Some(listing) =
+        context.rulebook.listings.iter().position(|listing| is_listed(context.substance, listing))
     {
         return Headline::Listed(listing);
     }

@@ -48,11 +48,7 @@ impl<'run> Told<'run> {
     /// The rulebooks, in the order of the run.
     pub fn books(self) -> impl Iterator<Item = Book<'run>> {
         let pairs = self.rules.rulebooks.iter().zip(&self.judgement.rulebooks);
-        pairs.map(move |(rulebook, judged)| Book {
-            told: self,
-            rulebook,
-            judged,
-        })
+        pairs.map(move |(rulebook, judged)| Book { told: self, rulebook, judged })
     }
 }
 

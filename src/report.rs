@@ -43,20 +43,13 @@ impl Entry {
     /// A text.
     pub fn text(text: impl Into<String>, look: Look) -> Self {
         let text = text.into();
-        let content = if text.is_empty() {
-            EntryContent::Empty
-        } else {
-            EntryContent::Text(text)
-        };
+        let content = if text.is_empty() { EntryContent::Empty } else { EntryContent::Text(text) };
         Self { content, look }
     }
 
     /// A number, or nothing.
     pub fn number(number: Option<f64>, look: Look) -> Self {
-        Self {
-            content: number.map_or(EntryContent::Empty, EntryContent::Number),
-            look,
-        }
+        Self { content: number.map_or(EntryContent::Empty, EntryContent::Number), look }
     }
 }
 

@@ -96,9 +96,9 @@ pub fn screen(settings: &ScreenSettings) -> Result<Summary, Refusal> {
     let mut inventory = open_inventory(&settings.inventory)?;
     let plan = Plan::new(&mut inventory, &rules, settings)?;
     let mut output = Output::create(settings, &inventory, &plan, &rules)?;
-    let pool = rayon::ThreadPoolBuilder::new().num_threads(settings.threads.unwrap_or(0)).build().map_err(|error| {
-        Refusal::Usage(format!("the threads could not be started ({error}); try --threads 1"))
-    })?;
+    let pool = rayon::ThreadPoolBuilder::new().num_threads(settings.threads.unwrap_or(0)).build().map_err(
+        |error| Refusal::Usage(format!("the threads could not be started ({error}); try --threads 1")),
+    )?;
     let bench = Bench { judge: Judge::new(&rules), reasoning: plan.reasoning, pool };
     for sheet in &plan.sheets {
         stream_sheet(&mut inventory, sheet, &bench, &mut output)?;
@@ -151,10 +151,7 @@ fn read_batches(inventory: &mut Inventory, sheet: &SheetPlan, to_judge: &SyncSen
         if batch.len() < ROWS_A_BATCH {
             return std::ops::ControlFlow::Continue(());
         }
-        match to_judge.send(Ok(std::mem::replace(
-            &mut batch,
-            Vec::with_capacity(ROWS_A_BATCH),
-        ))) {
+        match to_judge.send(Ok(std::mem::replace(&mut batch, Vec::with_capacity(ROWS_A_BATCH)))) {
             Ok(()) => std::ops::ControlFlow::Continue(()),
             Err(_) => std::ops::ControlFlow::Break(()),
         }

@@ -13,13 +13,37 @@ use crate::workbook::column_letters;
 /// Settles which columns are taken.
 pub(super) fn choose(sheet: &str, found: Found, words: &ColumnWords) -> Recognised {
     let mut cells = found.cells;
-    let mut remarks = Vec::new();
+    let mut remarks: Vec<String> = found
+        .others_above
+        .iter()
+        .map(|row| {
+            format!(
+                "{sheet}: row {} looks like a header, too, but row {} names more columns; rows above it are not \
+                 screened: give each table a sheet of its own",
+                row + 1,
+                found.row + 1
+            )
+        })
+        .collect();
+    remarks.extend(found.others_below.iter().map(|row| {
+        format!(
+            "{sheet}: row {} looks like a header, too, but the rows below it are read with the columns of row {}; \
+             give each table a sheet of its own",
+            row + 1,
+            found.row + 1
+        )
+    }));
     take_product_name(&mut cells, words);
     let doubled = doubled_fields(&cells);
     let mut taken: BTreeMap<Field, (u16, String)> = BTreeMap::new();
     let mut columns: Vec<Column> = Vec::new();
     let mut unknown = Vec::new();
+    let second_table = second_table(&cells);
     for cell in cells {
+        if second_table.is_some_and(|start| cell.column >= start) {
+            unknown.push((cell.column, cell.text));
+            continue;
+        }
         let Some(field) = cell.field() else {
             remarks.extend(hint(sheet, &cell, words));
             unknown.push((cell.column, cell.text));
@@ -38,6 +62,13 @@ pub(super) fn choose(sheet: &str, found: Found, words: &ColumnWords) -> Recognis
             }
         }
     }
+    remarks.extend(second_table.map(|column| {
+        format!(
+            "{sheet}: headers repeat from column {} on, as if a second table stood there; the columns from there on are \
+             left aside: give each table a sheet of its own",
+            column_letters(column)
+        )
+    }));
     for place in 0..columns.len() {
         let about = columns.get(place).and_then(|column| {
             column
@@ -48,13 +79,23 @@ pub(super) fn choose(sheet: &str, found: Found, words: &ColumnWords) -> Recognis
             column.about = about;
         }
     }
-    Recognised {
-        header_row: found.row,
-        first_data_row: found.row + 1,
-        columns,
-        unknown,
-        remarks,
-    }
+    Recognised { header_row: found.row, first_data_row: found.row + 1, columns, unknown, remarks }
+}
+
+/// Where a second table begins: an identity repeated word by word, and right of it a property, too. Its values may be
+/// another substance's than the row's.
+fn second_table(cells: &[HeaderCell]) -> Option<u16> {
+    let repeats = |cell: &HeaderCell| {
+        cells.iter().any(|other| {
+            other.column < cell.column && other.text == cell.text && other.field() == cell.field()
+        })
+    };
+    let start =
+        cells.iter().find(|cell| cell.field().is_some_and(Field::identifies) && repeats(cell))?.column;
+    let property_too = cells
+        .iter()
+        .any(|cell| cell.column > start && matches!(cell.field(), Some(Field::Property(_))) && repeats(cell));
+    property_too.then_some(start)
 }
 
 /// `Product name` is the substance's name where no other column is.
@@ -64,16 +105,9 @@ fn take_product_name(cells: &mut [HeaderCell], words: &ColumnWords) {
     }
     let product_name = cells.iter_mut().find(|cell| {
         cell.field() == Some(Field::Product)
-            && cell
-                .header
-                .as_ref()
-                .is_some_and(|header| header.speaks_of("name", words))
+            && cell.header.as_ref().is_some_and(|header| header.speaks_of("name", words))
     });
-    if let Some(HeaderCell {
-        meaning: Meaning::Named(named),
-        ..
-    }) = product_name
-    {
+    if let Some(HeaderCell { meaning: Meaning::Named(named), .. }) = product_name {
         named.field = Field::Name;
         named.by.push("no other column of names".to_owned());
     }
@@ -81,11 +115,7 @@ fn take_product_name(cells: &mut [HeaderCell], words: &ColumnWords) {
 
 fn doubled_fields(cells: &[HeaderCell]) -> BTreeSet<Field> {
     let mut seen = BTreeSet::new();
-    cells
-        .iter()
-        .filter_map(HeaderCell::field)
-        .filter(|field| !seen.insert(*field))
-        .collect()
+    cells.iter().filter_map(HeaderCell::field).filter(|field| !seen.insert(*field)).collect()
 }
 
 /// Several values of a property are several readings; several companions speak of different ones.
@@ -110,10 +140,7 @@ fn doubled_remark(sheet: &str, field: Field, first: (u16, &str), second: &Header
             second.text
         )
     } else {
-        format!(
-            "to take the other: --column '{}=ignore' --column '{}={id}'",
-            first.1, second.text
-        )
+        format!("to take the other: --column '{}=ignore' --column '{}={id}'", first.1, second.text)
     };
     format!(
         "{sheet}: columns {} (`{}`) and {} (`{}`) both name {id}; {} is taken; {way_out}",
@@ -168,12 +195,7 @@ pub(super) fn dimension_of(field: Field) -> Option<Dimension> {
 }
 
 fn column(sheet: &str, cell: HeaderCell, field: Field, words: &ColumnWords) -> (Column, Option<String>) {
-    let HeaderCell {
-        column,
-        text,
-        header,
-        meaning,
-    } = cell;
+    let HeaderCell { column, text, header, meaning } = cell;
     let dimension = dimension_of(field);
     let unit = dimension.and_then(|dimension| header.as_ref()?.unit(dimension));
     let strange = dimension
@@ -188,18 +210,10 @@ fn column(sheet: &str, cell: HeaderCell, field: Field, words: &ColumnWords) -> (
             shown_unit(dimension),
         )
     });
-    let has_conditions = matches!(
-        field,
-        Field::Property(_) | Field::ReadyBiodegradability | Field::InherentBiodegradability
-    );
-    let said = if has_conditions {
-        Said::in_header(&tidy(&text))
-    } else {
-        Said::default()
-    };
-    let about = is_companion(field)
-        .then(|| header.as_ref()?.property_beside(words))
-        .flatten();
+    let has_conditions =
+        matches!(field, Field::Property(_) | Field::ReadyBiodegradability | Field::InherentBiodegradability);
+    let said = if has_conditions { Said::in_header(&tidy(&text)) } else { Said::default() };
+    let about = is_companion(field).then(|| header.as_ref()?.property_beside(words)).flatten();
     let reason = reason(&meaning, unit.map(crate::quantity::Unit::symbol), dimension);
     let column = Column {
         index: column,
@@ -242,20 +256,13 @@ fn reason(meaning: &Meaning, unit: Option<&str>, dimension: Option<Dimension>) -
 
 /// Fields that speak of another column's value and may name it.
 fn is_companion(field: Field) -> bool {
-    matches!(
-        field,
-        Field::Reliability | Field::Guideline | Field::HalfLifeTemperature
-    )
+    matches!(field, Field::Reliability | Field::Guideline | Field::HalfLifeTemperature)
 }
 
 /// The property of the nearest column to the left that holds one.
 fn nearest_property(columns: &[Column], place: usize) -> Option<Property> {
     let field = columns.get(place)?.field;
-    let left = columns
-        .get(..place)?
-        .iter()
-        .rev()
-        .find_map(|column| column.field.property());
+    let left = columns.get(..place)?.iter().rev().find_map(|column| column.field.property());
     left.filter(|_| is_companion(field))
 }
 
@@ -265,11 +272,7 @@ fn hint(sheet: &str, cell: &HeaderCell, words: &ColumnWords) -> Option<String> {
         return None;
     }
     let header = cell.header.as_ref()?;
-    let place = format!(
-        "{sheet}: column {} (`{}`)",
-        column_letters(cell.column),
-        one_line(&cell.text)
-    );
+    let place = format!("{sheet}: column {} (`{}`)", column_letters(cell.column), one_line(&cell.text));
     let told = |field: &str| format!("--column '{}={field}'", one_line(&cell.text));
     if header.speaks_of("pka", words) {
         let (acid, base) = (told("pka-acid"), told("pka-base"));
@@ -285,8 +288,5 @@ fn hint(sheet: &str, cell: &HeaderCell, words: &ColumnWords) -> Option<String> {
     }
     let corrected = header.with_nearest_word(words)?;
     let field = corrected.field(words)?.field.id();
-    Some(format!(
-        "{place} is not recognised; if it is {field}: {}",
-        told(field)
-    ))
+    Some(format!("{place} is not recognised; if it is {field}: {}", told(field)))
 }

@@ -42,11 +42,7 @@ impl Shown {
 /// Sets each column's style: what its own text cells show, else what the sheet's show, else the point. Numbers that
 /// could be read both ways are remarked on.
 pub(super) fn set_styles(sheet: &str, recognised: &mut Recognised, data: &[&Row]) {
-    let own: Vec<Shown> = recognised
-        .columns
-        .iter()
-        .map(|column| shown_by(column, data))
-        .collect();
+    let own: Vec<Shown> = recognised.columns.iter().map(|column| shown_by(column, data)).collect();
     let whole = Shown {
         points: own.iter().map(|shown| shown.points).sum(),
         commas: own.iter().map(|shown| shown.commas).sum(),
@@ -109,11 +105,8 @@ fn style_of(number: &str) -> Option<DecimalStyle> {
     let last = number.rfind(['.', ','])?;
     let (whole, decimals) = (number.get(..last)?, number.get(last + 1..)?);
     let could_group = decimals.len() == 3 && !whole.is_empty() && !whole.starts_with('0') && whole.len() <= 3;
-    let style_of_last = if number.get(last..=last)? == "," {
-        DecimalStyle::Comma
-    } else {
-        DecimalStyle::Point
-    };
+    let style_of_last =
+        if number.get(last..=last)? == "," { DecimalStyle::Comma } else { DecimalStyle::Point };
     match (points, commas) {
         (1, 0) | (0, 1) if could_group => None,
         // Both kinds: the last is the decimal separator. Several of one kind group thousands.

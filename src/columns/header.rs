@@ -45,11 +45,7 @@ fn parted_at_capitals(text: &str) -> String {
         if character.is_uppercase() && small_letters >= SHORTEST_WORD {
             parted.push(' ');
         }
-        small_letters = if character.is_lowercase() {
-            small_letters + 1
-        } else {
-            0
-        };
+        small_letters = if character.is_lowercase() { small_letters + 1 } else { 0 };
         parted.push(character);
     }
     parted
@@ -69,16 +65,8 @@ impl Header {
             (plain, brackets)
         };
         let words = header_words(&plain);
-        let bracket_words = brackets
-            .iter()
-            .flat_map(|bracket| header_words(bracket))
-            .collect();
-        (!words.is_empty()).then_some(Self {
-            plain,
-            brackets,
-            words,
-            bracket_words,
-        })
+        let bracket_words = brackets.iter().flat_map(|bracket| header_words(bracket)).collect();
+        (!words.is_empty()).then_some(Self { plain, brackets, words, bracket_words })
     }
 
     /// The field the header names.
@@ -88,25 +76,11 @@ impl Header {
             return None;
         }
         let value = reading.value;
-        let first_pass = known
-            .rules
-            .iter()
-            .find(|rule| reading.fits(rule, Brackets::ForProperties, value));
-        let rule = first_pass.or_else(|| {
-            known
-                .rules
-                .iter()
-                .find(|rule| reading.fits(rule, Brackets::ForEveryField, value))
-        })?;
-        let by = rule
-            .needs
-            .iter()
-            .filter_map(|need| self.words_of(*need, known))
-            .collect();
-        Some(Named {
-            field: rule.field,
-            by,
-        })
+        let first_pass = known.rules.iter().find(|rule| reading.fits(rule, Brackets::ForProperties, value));
+        let rule = first_pass
+            .or_else(|| known.rules.iter().find(|rule| reading.fits(rule, Brackets::ForEveryField, value)))?;
+        let by = rule.needs.iter().filter_map(|need| self.words_of(*need, known)).collect();
+        Some(Named { field: rule.field, by })
     }
 
     /// The property of which a header of reliability, guideline or the like speaks.
@@ -177,11 +151,8 @@ impl Header {
         let concept = known.concepts.get(concept)?;
         [&self.words, &self.bracket_words].into_iter().find_map(|words| {
             (0..words.len()).find_map(|start| {
-                let length = concept
-                    .phrases
-                    .iter()
-                    .filter_map(|phrase| phrase.length_at(words, start))
-                    .max()?;
+                let length =
+                    concept.phrases.iter().filter_map(|phrase| phrase.length_at(words, start)).max()?;
                 Some(words.get(start..start + length)?.join(" "))
             })
         })

@@ -50,11 +50,16 @@ pub(super) struct Found {
     /// The row in which our own headers go, counted from 0.
     pub(super) row: u32,
     pub(super) cells: Vec<HeaderCell>,
+    /// Rows above it that could be a header, too.
+    pub(super) others_above: Vec<u32>,
+    /// Rows below it that look like the header of another table.
+    pub(super) others_below: Vec<u32>,
 }
 
 /// The row with the most recognised headers, of several such the one with the most cells, then the first.
 pub(super) fn find(first_rows: &[Row], words: &ColumnWords, overrides: &[ColumnOverride]) -> Option<Found> {
     let mut best: Option<((usize, usize), usize, Vec<HeaderCell>)> = None;
+    let mut others_above = Vec::new();
     for (place, row) in first_rows.iter().take(HEADER_WITHIN).enumerate() {
         let cells = header_cells(texts_of(row), words, overrides);
         if !is_inventory(&cells) {
@@ -63,14 +68,20 @@ pub(super) fn find(first_rows: &[Row], words: &ColumnWords, overrides: &[ColumnO
         let recognised = cells.iter().filter(|cell| cell.field().is_some()).count();
         let rank = (recognised, cells.len());
         if best.as_ref().is_none_or(|(best_rank, ..)| rank > *best_rank) {
+            let passed_over = best.as_ref().filter(|((recognised, _), ..)| *recognised > 1);
+            others_above.extend(passed_over.and_then(|(_, place, _)| Some(first_rows.get(*place)?.index)));
             best = Some((rank, place, cells));
         }
     }
     let (_, place, cells) = best?;
+    let others_below: Vec<u32> = first_rows
+        .iter()
+        .skip(place + 1)
+        .filter(|row| names_columns(&header_cells(texts_of(row), words, overrides)))
+        .map(|row| row.index)
+        .collect();
     let upper = first_rows.get(place)?;
-    let below = first_rows
-        .get(place + 1)
-        .filter(|row| row.index == upper.index + 1);
+    let below = first_rows.get(place + 1).filter(|row| row.index == upper.index + 1);
     Some(match below.and_then(|row| Some((row, units_below(row)?))) {
         Some((row, units)) => {
             let joined = texts_of(upper).into_iter().map(|(column, text)| {
@@ -81,28 +92,20 @@ pub(super) fn find(first_rows: &[Row], words: &ColumnWords, overrides: &[ColumnO
             Found {
                 row: row.index,
                 cells: header_cells(joined.collect(), words, overrides),
+                others_above,
+                others_below,
             }
         }
-        None => Found {
-            row: upper.index,
-            cells,
-        },
+        None => Found { row: upper.index, cells, others_above, others_below },
     })
 }
 
 fn with_unit(name: &str, unit: &str) -> String {
-    if unit.starts_with(['(', '[']) {
-        format!("{name} {unit}")
-    } else {
-        format!("{name} [{unit}]")
-    }
+    if unit.starts_with(['(', '[']) { format!("{name} {unit}") } else { format!("{name} [{unit}]") }
 }
 
 fn texts_of(row: &Row) -> Vec<(u16, String)> {
-    row.cells
-        .iter()
-        .filter_map(|cell| Some((cell.column, text_of(cell)?)))
-        .collect()
+    row.cells.iter().filter_map(|cell| Some((cell.column, text_of(cell)?))).collect()
 }
 
 fn text_of(cell: &Cell) -> Option<String> {
@@ -126,51 +129,40 @@ fn header_cells(
         .into_iter()
         .map(|(column, text)| {
             let header = Header::new(&text);
-            let told = overrides
-                .iter()
-                .find(|told| told.is_for(&text) || is_for_name(told, &text));
+            let told = overrides.iter().find(|told| told.is_for(&text) || is_for_name(told, &text));
             let meaning = match told {
-                Some(ColumnOverride {
-                    field: Some(field), ..
-                }) => Meaning::Told(*field),
+                Some(ColumnOverride { field: Some(field), .. }) => Meaning::Told(*field),
                 Some(ColumnOverride { field: None, .. }) => Meaning::LeftAside,
                 None => header
                     .as_ref()
                     .and_then(|header| header.field(words))
                     .map_or(Meaning::Unknown, Meaning::Named),
             };
-            HeaderCell {
-                column,
-                text,
-                header,
-                meaning,
-            }
+            HeaderCell { column, text, header, meaning }
         })
         .collect()
 }
 
 /// The user may give a header of two rows without its unit.
-fn is_for_name(told: &ColumnOverride, text: &str) -> bool {
-    text.rsplit_once(" [")
-        .is_some_and(|(name, _)| header_words(name) == header_words(&told.header))
+pub(super) fn is_for_name(told: &ColumnOverride, text: &str) -> bool {
+    text.rsplit_once(" [").is_some_and(|(name, _)| header_words(name) == header_words(&told.header))
+}
+
+/// Whether a row among the data is a header of its own: an identity and something else, each named.
+fn names_columns(cells: &[HeaderCell]) -> bool {
+    is_inventory(cells) && cells.iter().filter(|cell| cell.field().is_some()).count() > 1
 }
 
 fn is_inventory(cells: &[HeaderCell]) -> bool {
     let fields: BTreeSet<Field> = cells.iter().filter_map(HeaderCell::field).collect();
     // A product's name is the substance's where there is no other, see `choice`.
-    let named = fields
-        .iter()
-        .any(|field| matches!(field, Field::RowId | Field::Name | Field::Product));
+    let named = fields.iter().any(|field| matches!(field, Field::RowId | Field::Name | Field::Product));
     fields.iter().any(|field| field.identifies()) || (named && fields.len() >= 2)
 }
 
 /// The units of a row that holds nothing else: text only, at least half of it units.
 fn units_below(row: &Row) -> Option<Vec<(u16, String)>> {
-    let filled = row
-        .cells
-        .iter()
-        .filter(|cell| cell.content != CellContent::Empty)
-        .count();
+    let filled = row.cells.iter().filter(|cell| cell.content != CellContent::Empty).count();
     let texts = texts_of(row);
     let starts_number = |text: &str| text.starts_with(|first: char| first.is_ascii_digit());
     if texts.len() < filled || texts.iter().any(|(_, text)| starts_number(text)) {
@@ -180,13 +172,7 @@ fn units_below(row: &Row) -> Option<Vec<(u16, String)>> {
         let bare = tidy(text);
         parse_unit(bare.trim_matches(['(', ')', '[', ']'])).is_some()
     };
-    let real_units = texts
-        .iter()
-        .filter(|(_, text)| is_unit(text) && !is_missing(text))
-        .count();
-    let others = texts
-        .iter()
-        .filter(|(_, text)| !is_unit(text) && !is_missing(text))
-        .count();
+    let real_units = texts.iter().filter(|(_, text)| is_unit(text) && !is_missing(text)).count();
+    let others = texts.iter().filter(|(_, text)| !is_unit(text) && !is_missing(text)).count();
     (real_units > 0 && real_units >= others).then_some(texts)
 }

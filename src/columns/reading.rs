@@ -40,11 +40,8 @@ impl Reading {
         let mut value = NamesValue::Perhaps;
         for (place, concept) in known.concepts.iter().enumerate() {
             for start in 0..header.words.len() {
-                let longest = concept
-                    .phrases
-                    .iter()
-                    .filter_map(|phrase| phrase.length_at(&header.words, start))
-                    .max();
+                let longest =
+                    concept.phrases.iter().filter_map(|phrase| phrase.length_at(&header.words, start)).max();
                 let Some(length) = longest else {
                     continue;
                 };
@@ -62,10 +59,7 @@ impl Reading {
         let mut everywhere = main.clone();
         for (place, concept) in known.concepts.iter().enumerate() {
             let stands = |start| {
-                concept
-                    .phrases
-                    .iter()
-                    .any(|phrase| phrase.length_at(&header.bracket_words, start).is_some())
+                concept.phrases.iter().any(|phrase| phrase.length_at(&header.bracket_words, start).is_some())
             };
             if (0..header.bracket_words.len()).any(stands) {
                 everywhere.insert(place);
@@ -83,18 +77,9 @@ impl Reading {
             })
             .map(|(_, word)| word.len())
             .sum::<usize>();
-        let understood: usize = covered
-            .iter()
-            .filter_map(|place| header.words.get(*place))
-            .map(String::len)
-            .sum();
-        Self {
-            main,
-            everywhere,
-            covered,
-            mostly_unknown: unknown > understood,
-            value,
-        }
+        let understood: usize =
+            covered.iter().filter_map(|place| header.words.get(*place)).map(String::len).sum();
+        Self { main, everywhere, covered, mostly_unknown: unknown > understood, value }
     }
 
     pub(super) fn fits(&self, rule: &FieldRule, brackets: Brackets, value: NamesValue) -> bool {
@@ -102,11 +87,8 @@ impl Reading {
         if is_property && value == NamesValue::No {
             return false;
         }
-        let counted = if is_property || brackets == Brackets::ForEveryField {
-            &self.everywhere
-        } else {
-            &self.main
-        };
+        let counted =
+            if is_property || brackets == Brackets::ForEveryField { &self.everywhere } else { &self.main };
         let named_outside = rule.needs.intersection(&self.main).next().is_some();
         rule.needs.is_subset(counted)
             && (named_outside || brackets == Brackets::ForEveryField)
@@ -124,11 +106,7 @@ fn add_companion(bracket: &str, known: &ColumnWords, main: &mut ConceptSet, valu
         let Some(concept) = known.concepts.get(*place) else {
             continue;
         };
-        if concept
-            .phrases
-            .iter()
-            .any(|phrase| phrase.length_at(&words, 0) == Some(words.len()))
-        {
+        if concept.phrases.iter().any(|phrase| phrase.length_at(&words, 0) == Some(words.len())) {
             main.insert(*place);
             *value = NamesValue::No;
         }

@@ -88,39 +88,21 @@ impl ColumnWords {
         let mut concepts = Vec::new();
         for concept in file.concept {
             if places.insert(concept.id.clone(), concepts.len()).is_some() {
-                return Err(format!(
-                    "the concept `{}` stands twice; put its words together",
-                    concept.id
-                ));
+                return Err(format!("the concept `{}` stands twice; put its words together", concept.id));
             }
             concepts.push(Concept::new(concept)?);
         }
-        let set = |ids: &[String]| {
-            ids.iter()
-                .map(|id| place_of(&places, id))
-                .collect::<Result<ConceptSet, _>>()
-        };
+        let set =
+            |ids: &[String]| ids.iter().map(|id| place_of(&places, id)).collect::<Result<ConceptSet, _>>();
         let mut rules = Vec::new();
         for field in &file.field {
             if field.needs.is_empty() {
-                return Err(format!(
-                    "the field `{}` needs no concept; name at least one",
-                    field.id
-                ));
+                return Err(format!("the field `{}` needs no concept; name at least one", field.id));
             }
             let known = Field::from_id(&field.id).ok_or_else(|| unknown_field(&field.id))?;
-            rules.push(FieldRule {
-                field: known,
-                needs: set(&field.needs)?,
-                without: set(&field.without)?,
-            });
+            rules.push(FieldRule { field: known, needs: set(&field.needs)?, without: set(&field.without)? });
         }
-        Ok(Self {
-            concepts,
-            rules,
-            never: set(&file.never)?,
-            not_a_value: set(&file.not_a_value)?,
-        })
+        Ok(Self { concepts, rules, never: set(&file.never)?, not_a_value: set(&file.not_a_value)? })
     }
 
     /// Every word of every phrase, for the nearest one to a word that is not known.
@@ -142,45 +124,27 @@ fn place_of(places: &BTreeMap<String, usize>, id: &str) -> Result<usize, String>
 
 /// The message for a field name that does not exist.
 pub(super) fn unknown_field(id: &str) -> String {
-    with_hint(
-        &format!("there is no field `{id}`"),
-        nearest(id, Field::all().map(Field::id)),
-    )
+    with_hint(&format!("there is no field `{id}`"), nearest(id, Field::all().map(Field::id)))
 }
 
 fn with_hint(message: &str, nearest: Option<&str>) -> String {
-    nearest.map_or_else(
-        || message.to_owned(),
-        |word| format!("{message}; did you mean `{word}`?"),
-    )
+    nearest.map_or_else(|| message.to_owned(), |word| format!("{message}; did you mean `{word}`?"))
 }
 
 impl Concept {
     fn new(concept: FileConcept) -> Result<Self, String> {
-        let phrases: Vec<Phrase> = concept
-            .words
-            .values()
-            .flatten()
-            .map(|words| Phrase::new(words))
-            .collect();
+        let phrases: Vec<Phrase> = concept.words.values().flatten().map(|words| Phrase::new(words)).collect();
         if phrases.iter().any(|phrase| phrase.0.is_empty()) {
             return Err(format!("the concept `{}` has a word without letters", concept.id));
         }
-        Ok(Self {
-            id: concept.id,
-            phrases,
-        })
+        Ok(Self { id: concept.id, phrases })
     }
 }
 
 impl Phrase {
     fn new(words: &str) -> Self {
         let patterns = words.split_whitespace().map(WordPattern::new);
-        Self(
-            patterns
-                .filter(|pattern| pattern.parts.iter().any(|part| !part.is_empty()))
-                .collect(),
-        )
+        Self(patterns.filter(|pattern| pattern.parts.iter().any(|part| !part.is_empty())).collect())
     }
 
     /// How many words of a header the phrase covers from a place on; none if it does not stand there.
@@ -194,18 +158,14 @@ impl Phrase {
 impl WordPattern {
     fn new(word: &str) -> Self {
         let fold = |part: &str| header_words(part).concat();
-        Self {
-            parts: word.split('*').map(fold).collect(),
-        }
+        Self { parts: word.split('*').map(fold).collect() }
     }
 
     fn fits(&self, word: &str) -> bool {
         let [first, middle @ .., last] = self.parts.as_slice() else {
             return self.parts.first().is_some_and(|only| only == word);
         };
-        let Some(inner) = word
-            .strip_prefix(first.as_str())
-            .and_then(|rest| rest.strip_suffix(last.as_str()))
+        let Some(inner) = word.strip_prefix(first.as_str()).and_then(|rest| rest.strip_suffix(last.as_str()))
         else {
             return false;
         };
@@ -239,16 +199,9 @@ mod tests {
             ("cas", "case", false),
             ("*oktanol*wasser*", "noktanolwasserkoeffizient", true),
         ] {
-            assert_eq!(
-                Phrase::new(pattern).length_at(&words(word), 0).is_some(),
-                fits,
-                "{pattern} {word}"
-            );
+            assert_eq!(Phrase::new(pattern).length_at(&words(word), 0).is_some(), fits, "{pattern} {word}");
         }
-        assert_eq!(
-            Phrase::new("half life").length_at(&words("soil half life"), 1),
-            Some(2)
-        );
+        assert_eq!(Phrase::new("half life").length_at(&words("soil half life"), 1), Some(2));
     }
 
     #[test]

@@ -13,11 +13,9 @@ pub fn gather_evidence(substance: &Substance, relations: &Relations) -> Evidence
             evidence.push(from_reading(*property, reading, substance, relations));
         }
     }
-    for (property, end) in [
-        (Property::Bcf, End::High),
-        (Property::Koc, End::Low),
-        (Property::AcuteToxicity, End::High),
-    ] {
+    for (property, end) in
+        [(Property::Bcf, End::High), (Property::Koc, End::Low), (Property::AcuteToxicity, End::High)]
+    {
         if let Some(estimate) = estimate(property, end, &evidence, substance, relations) {
             evidence.push(estimate);
         }
@@ -27,37 +25,17 @@ pub fn gather_evidence(substance: &Substance, relations: &Relations) -> Evidence
 
 /// Whether a pKa of the row puts more than a tenth of the substance into its ionised form somewhere from pH 4 to 9.
 pub fn ionisation(substance: &Substance) -> Ionisation {
-    let acid = substance
-        .readings_of(Property::PkaAcid)
-        .iter()
-        .any(|reading| may_lie_below(reading, 10.0));
-    let base = substance
-        .readings_of(Property::PkaBase)
-        .iter()
-        .any(|reading| may_lie_above(reading, 3.0));
-    if acid || base {
-        Ionisation::Ionisable
-    } else {
-        Ionisation::Unknown
-    }
+    let acid = substance.readings_of(Property::PkaAcid).iter().any(|reading| may_lie_below(reading, 10.0));
+    let base = substance.readings_of(Property::PkaBase).iter().any(|reading| may_lie_above(reading, 3.0));
+    if acid || base { Ionisation::Ionisable } else { Ionisation::Unknown }
 }
 
 fn may_lie_below(reading: &Reading, limit: f64) -> bool {
-    reading
-        .quantity
-        .interval
-        .low()
-        .number()
-        .is_none_or(|low| low < limit)
+    reading.quantity.interval.low().number().is_none_or(|low| low < limit)
 }
 
 fn may_lie_above(reading: &Reading, limit: f64) -> bool {
-    reading
-        .quantity
-        .interval
-        .high()
-        .number()
-        .is_none_or(|high| high > limit)
+    reading.quantity.interval.high().number().is_none_or(|high| high > limit)
 }
 
 fn from_reading(
@@ -79,9 +57,7 @@ fn from_reading(
     Evidence {
         property,
         interval,
-        sd: interval
-            .single()
-            .map(|value| standard_deviation(property, reading, value, relations)),
+        sd: interval.single().map(|value| standard_deviation(property, reading, value, relations)),
         basis: reading.basis,
         origin: Origin::Cell(reading.cell.clone()),
         standing: match reading.conditions.reliability {
@@ -102,12 +78,7 @@ const LEAST_NEUTRAL_SHARE: f64 = 0.9;
 /// Acid 1 / (1 + 10^(pH - pKa)), base 1 / (1 + 10^(pKa - pH)): the mass action law for one group.
 fn neutral_share(reading: &Reading, substance: &Substance) -> Option<f64> {
     let ph = reading.conditions.ph?;
-    let pka = |property| {
-        substance
-            .readings_of(property)
-            .iter()
-            .find_map(|reading| reading.quantity.single())
-    };
+    let pka = |property| substance.readings_of(property).iter().find_map(|reading| reading.quantity.single());
     let acid = pka(Property::PkaAcid).map(|pka| 1.0 / (1.0 + 10f64.powf(ph - pka)));
     let base = pka(Property::PkaBase).map(|pka| 1.0 / (1.0 + 10f64.powf(pka - ph)));
     match (acid, base) {
@@ -118,17 +89,11 @@ fn neutral_share(reading: &Reading, substance: &Substance) -> Option<f64> {
 
 /// The SD in log units: as written with `±`, else the default, doubled for `~` and `ca.`.
 fn standard_deviation(property: Property, reading: &Reading, value: f64, relations: &Relations) -> f64 {
-    let written = reading
-        .quantity
-        .written_sd
-        .and_then(|sd| log_sd(property, reading.quantity.unit, sd, value));
+    let written =
+        reading.quantity.written_sd.and_then(|sd| log_sd(property, reading.quantity.unit, sd, value));
     written.unwrap_or_else(|| {
         let default = relations.default_sd(property, reading.basis, value);
-        if reading.quantity.approximate {
-            2.0 * default
-        } else {
-            default
-        }
+        if reading.quantity.approximate { 2.0 * default } else { default }
     })
 }
 
@@ -160,27 +125,14 @@ fn estimate(
         End::Low => best_ranked(known.of(Property::LogKow))
             .min_by(|one, other| one.lower_value().total_cmp(&other.lower_value()))?,
     };
-    let entered = LogKow {
-        interval: log_kow.interval,
-        sd: log_kow.sd,
-    };
+    let entered = LogKow { interval: log_kow.interval, sd: log_kow.sd };
     let estimate = relations.estimate(property, entered, ionisation(substance))?;
     let relation = relations.relations.get(estimate.leading)?;
-    let shift = if relation.molar {
-        molar_shift(substance)?
-    } else {
-        0.0
-    };
+    let shift = if relation.molar { molar_shift(substance)? } else { 0.0 };
     let Origin::Cell(log_kow_cell) = &log_kow.origin else {
         return None;
     };
-    let Estimate {
-        leading,
-        log_value,
-        sd,
-        others,
-        low_side,
-    } = estimate;
+    let Estimate { leading, log_value, sd, others, low_side } = estimate;
     Some(Evidence {
         property,
         interval: log_value.map_increasing(|log| 10f64.powf(log + shift)).ok()?,
@@ -191,10 +143,7 @@ fn estimate(
             log_kow: log_kow.interval,
             log_kow_sd: log_kow.sd,
             log_kow_cell: log_kow_cell.clone(),
-            others: others
-                .into_iter()
-                .map(|(index, value)| (index, value + shift))
-                .collect(),
+            others: others.into_iter().map(|(index, value)| (index, value + shift)).collect(),
             low_side: low_side.map(|(index, value)| (index, value + shift)),
         },
         standing: Standing::Full,
@@ -206,9 +155,7 @@ fn estimate(
 
 /// log10 of the factor from mol/L to mg/L, where the row gives the molar mass.
 fn molar_shift(substance: &Substance) -> Option<f64> {
-    let molar_mass = substance
-        .readings_of(Property::MolarMass)
-        .iter()
-        .find_map(|reading| reading.quantity.single())?;
+    let molar_mass =
+        substance.readings_of(Property::MolarMass).iter().find_map(|reading| reading.quantity.single())?;
     (molar_mass > 0.0).then(|| molar_mass.log10() + 3.0)
 }

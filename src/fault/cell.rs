@@ -63,6 +63,11 @@ pub enum CellFaultKind {
     },
     /// A molar concentration in a row without a molar mass.
     NeedsMolarMass,
+    /// A number that no substance can have.
+    OutOfSense {
+        /// The field's title.
+        what: &'static str,
+    },
     /// A range whose ends are the wrong way round, or a number out of any sense.
     BadRange {
         /// The field's title.
@@ -87,6 +92,8 @@ pub enum CellFaultKind {
     },
     /// A text too long to be a value.
     TooLong,
+    /// A formula whose result the file does not hold.
+    FormulaWithoutResult,
     /// The spreadsheet shows an error.
     SheetError,
     /// A number whose check digit is wrong.
@@ -128,13 +135,7 @@ pub enum CellFaultKind {
 
 impl fmt::Display for CellFault {
     fn fmt(&self, formatter: &mut fmt::Formatter<'_>) -> fmt::Result {
-        write!(
-            formatter,
-            "{}: `{}` {}",
-            self.cell,
-            shortened(&self.found),
-            self.kind
-        )
+        write!(formatter, "{}: `{}` {}", self.cell, shortened(&self.found), self.kind)
     }
 }
 
@@ -150,10 +151,7 @@ fn shortened(found: &str) -> String {
 }
 
 impl fmt::Display for CellFaultKind {
-    #[expect(
-        clippy::too_many_lines,
-        reason = "one sentence for each kind and nothing else"
-    )]
+    #[expect(clippy::too_many_lines, reason = "one sentence for each kind and nothing else")]
     fn fmt(&self, formatter: &mut fmt::Formatter<'_>) -> fmt::Result {
         match self {
             Self::NotA { what, example } => {
@@ -171,18 +169,10 @@ impl fmt::Display for CellFaultKind {
                 formatter,
                 "holds more than one value of {what}; write one, a range such as `3–5`, or use a column for each"
             ),
-            Self::UnknownUnit {
-                word,
-                nearest: Some(unit),
-                ..
-            } => {
+            Self::UnknownUnit { word, nearest: Some(unit), .. } => {
                 write!(formatter, "has the unknown unit `{word}`; did you mean `{unit}`?")
             }
-            Self::UnknownUnit {
-                word,
-                nearest: None,
-                example,
-            } => write!(
+            Self::UnknownUnit { word, nearest: None, example } => write!(
                 formatter,
                 "has the unknown unit `{word}`; write, for example, `{example}`, and remarks in brackets"
             ),
@@ -194,6 +184,10 @@ impl fmt::Display for CellFaultKind {
             Self::NeedsMolarMass => write!(
                 formatter,
                 "is in moles, but the row has no molar mass; add a molar mass in g/mol or write it in mg/L"
+            ),
+            Self::OutOfSense { what } => write!(
+                formatter,
+                "is far outside what {what} can be; check the number, its unit and its decimal separator"
             ),
             Self::BadRange { what } => write!(
                 formatter,
@@ -220,17 +214,18 @@ impl fmt::Display for CellFaultKind {
                 formatter,
                 "is too long to be a value; write the value alone and keep the rest in a column of its own"
             ),
+            Self::FormulaWithoutResult => write!(
+                formatter,
+                "is a formula without a stored result; open the workbook in a spreadsheet program, save it and use \
+                 that file"
+            ),
             Self::SheetError => {
                 write!(
                     formatter,
                     "is an error of the spreadsheet; correct the formula or leave the cell empty"
                 )
             }
-            Self::CheckDigit {
-                what,
-                expected,
-                corrected,
-            } => write!(
+            Self::CheckDigit { what, expected, corrected } => write!(
                 formatter,
                 "is no {what}: its check digit should be {expected}; write `{corrected}` if the other digits are \
                  right, or correct them"
@@ -244,10 +239,9 @@ impl fmt::Display for CellFaultKind {
                 "is a date and gives no CAS number when read back; format the column as text and write the number \
                  again, for example `50-29-3`"
             ),
-            Self::SeveralIdentities { what } => write!(
-                formatter,
-                "holds several {what}, so the row is not identified; write one a row"
-            ),
+            Self::SeveralIdentities { what } => {
+                write!(formatter, "holds several {what}, so the row is not identified; write one a row")
+            }
             Self::MixtureRow => write!(
                 formatter,
                 "says that the row is a mixture; mixtures are screened by their components: give each a row of its own"
@@ -288,17 +282,8 @@ mod tests {
     use crate::workbook::CellRef;
 
     fn message(found: &str, kind: CellFaultKind) -> String {
-        let cell = CellRef {
-            sheet: "Substances".into(),
-            row: 6,
-            column: 2,
-        };
-        CellFault {
-            cell,
-            found: found.to_owned(),
-            kind,
-        }
-        .to_string()
+        let cell = CellRef { sheet: "Substances".into(), row: 6, column: 2 };
+        CellFault { cell, found: found.to_owned(), kind }.to_string()
     }
 
     #[test]
@@ -312,23 +297,12 @@ mod tests {
         assert_eq!(
             message(
                 "12 wekks",
-                CellFaultKind::UnknownUnit {
-                    word: "wekks".to_owned(),
-                    nearest: Some("weeks"),
-                    example
-                }
+                CellFaultKind::UnknownUnit { word: "wekks".to_owned(), nearest: Some("weeks"), example }
             ),
             "Substances!C7: `12 wekks` has the unknown unit `wekks`; did you mean `weeks`?"
         );
         assert_eq!(
-            message(
-                "3 mg/L",
-                CellFaultKind::WrongUnit {
-                    unit: Unit::MilligramPerLitre,
-                    what,
-                    example
-                }
-            ),
+            message("3 mg/L", CellFaultKind::WrongUnit { unit: Unit::MilligramPerLitre, what, example }),
             "Substances!C7: `3 mg/L` is in mg/L, which does not measure half-life in soil; write, for example, `40 d`"
         );
     }

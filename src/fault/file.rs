@@ -72,7 +72,7 @@ pub enum FileFault {
     },
     /// No sheet has a header that is known.
     #[error(
-        "{path}: no sheet has a header that is recognised ({}); a header needs a column for a CAS number, an EC number or a structure, or a name beside another known column. `kowledger columns` shows what was found, and `--column 'Header=field'` names a column", .sheets.join(", ")
+        "{path}: no sheet has a header that is recognised ({}); a header stands within the first 30 rows that hold anything and needs a column for a CAS number, an EC number or a structure, or a name beside another known column. `kowledger columns` shows what was found, and `--column 'Header=field'` names a column", .sheets.join(", ")
     )]
     NoHeader {
         /// The path as given.

@@ -71,11 +71,7 @@ impl RuleFault {
         let group = match (self.text.as_deref(), self.span.clone()) {
             (Some(text), Some(span)) => {
                 let annotation = AnnotationKind::Primary.span(span).label(label.as_str());
-                title.element(
-                    Snippet::source(text)
-                        .path(self.file.as_str())
-                        .annotation(annotation),
-                )
+                title.element(Snippet::source(text).path(self.file.as_str()).annotation(annotation))
             }
             _ => Group::with_title(title).element(Origin::path(self.file.as_str())),
         };
@@ -86,21 +82,13 @@ impl RuleFault {
 impl RuleFaults {
     /// One fault of a file as a whole.
     pub fn of_file(file: &str, mistake: RuleMistake) -> Self {
-        Self(vec![RuleFault {
-            file: file.to_owned(),
-            text: None,
-            span: None,
-            mistake,
-        }])
+        Self(vec![RuleFault { file: file.to_owned(), text: None, span: None, mistake }])
     }
 
     /// All faults, one under the other, and how many there are.
     pub fn draw(&self, drawing: Drawing) -> String {
         let mut drawn: Vec<String> = self.0.iter().map(|fault| fault.draw(drawing)).collect();
-        drawn.push(format!(
-            "{}; no rule was applied",
-            super::count(self.0.len(), "fault", "faults")
-        ));
+        drawn.push(format!("{}; no rule was applied", super::count(self.0.len(), "fault", "faults")));
         drawn.join("\n\n")
     }
 }

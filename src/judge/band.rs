@@ -31,19 +31,13 @@ pub(crate) fn rate(context: Context, criterion: &Criterion) -> (Vec<usize>, Opti
 fn highest_value(context: Context, band: &Band, property: Property) -> Option<Used> {
     let values = context.evidence.of(property);
     let accepted = |basis| band.test.bases.contains(&basis);
-    let best = values
-        .iter()
-        .map(|evidence| evidence.basis)
-        .filter(|basis| accepted(*basis))
-        .min()?;
+    let best = values.iter().map(|evidence| evidence.basis).filter(|basis| accepted(*basis)).min()?;
     values
         .iter()
         .enumerate()
         .filter(|(_, evidence)| evidence.basis == best)
         .max_by(|(_, one), (_, other)| one.upper_value().total_cmp(&other.upper_value()))
         .map(|(index, evidence)| {
-            hold_against(context, &band.test, index, evidence, |interval| {
-                outcome_of(&band.test, interval)
-            })
+            hold_against(context, &band.test, index, evidence, |interval| outcome_of(&band.test, interval))
         })
 }

@@ -9,11 +9,7 @@ use crate::substance::{Compartment, Property};
 /// The value as it is compared under the rulebook, and what was done to it.
 pub(crate) fn as_compared(context: Context, evidence: &Evidence) -> (Interval, Option<Adjustment>) {
     let unchanged = (evidence.interval, None);
-    match (
-        evidence.property,
-        context.rulebook.half_life_at,
-        context.rulebook.bcf_at_lipid,
-    ) {
+    match (evidence.property, context.rulebook.half_life_at, context.rulebook.bcf_at_lipid) {
         (Property::HalfLife(compartment), Some(reference), _) if compartment != Compartment::Air => {
             at_temperature(evidence, reference).unwrap_or(unchanged)
         }
@@ -36,10 +32,7 @@ fn at_temperature(
     let factor = arrhenius_factor(reference.activation_energy, from, to);
     let longer = evidence.interval.map_increasing(|days| days * factor).ok()?;
     let widened = Interval::new(evidence.interval.low(), longer.high()).ok()?;
-    Some((
-        widened,
-        Some(Adjustment::HalfLifeTemperatureUnstated { from, to, factor }),
-    ))
+    Some((widened, Some(Adjustment::HalfLifeTemperatureUnstated { from, to, factor })))
 }
 
 /// How many times longer a half-life is at `to` than at `from` (°C), by the Arrhenius equation.
@@ -65,17 +58,10 @@ pub(crate) fn outcome_of(test: &Test, interval: Interval) -> Outcome {
             let certainly_clear = test
                 .clear_below
                 .is_none_or(|below| interval.compare(Comparison::Below, below) == Outcome::Fired);
-            if outcome == Outcome::Clear && !certainly_clear {
-                Outcome::Undecided
-            } else {
-                outcome
-            }
+            if outcome == Outcome::Clear && !certainly_clear { Outcome::Undecided } else { outcome }
         }
         Limit::Between { low, high } => {
-            match (
-                interval.compare(Comparison::AtLeast, *low),
-                interval.compare(Comparison::Below, *high),
-            ) {
+            match (interval.compare(Comparison::AtLeast, *low), interval.compare(Comparison::Below, *high)) {
                 (Outcome::Fired, Outcome::Fired) => Outcome::Fired,
                 (Outcome::Clear, _) | (_, Outcome::Clear) => Outcome::Clear,
                 (Outcome::Fired | Outcome::Undecided, Outcome::Fired | Outcome::Undecided) => {
@@ -99,9 +85,7 @@ pub(crate) fn hold_against(
     let (compared, adjustment) = as_compared(context, evidence);
     let outcome = outcome(compared);
     let margin = margin(test, evidence.property, compared);
-    let within_one_sd = margin
-        .zip(evidence.sd)
-        .is_some_and(|(margin, sd)| margin.abs() <= sd);
+    let within_one_sd = margin.zip(evidence.sd).is_some_and(|(margin, sd)| margin.abs() <= sd);
     Used {
         property: evidence.property,
         index,
@@ -123,58 +107,28 @@ fn in_log_units(property: Property, value: f64) -> Option<f64> {
 
 /// Log units by which a single value lies beyond the limit.
 fn margin(test: &Test, property: Property, compared: Interval) -> Option<f64> {
-    let Limit::Number {
-        comparison,
-        value: limit,
-    } = test.limit
-    else {
+    let Limit::Number { comparison, value: limit } = test.limit else {
         return None;
     };
     let distance = in_log_units(property, compared.single()?)? - in_log_units(property, limit)?;
-    Some(if comparison.looks_upward() {
-        distance
-    } else {
-        -distance
-    })
+    Some(if comparison.looks_upward() { distance } else { -distance })
 }
 
 fn chance(context: Context, test: &Test, evidence: &Evidence, compared: Interval) -> Option<f64> {
-    let Limit::Number {
-        comparison,
-        value: limit,
-    } = test.limit
-    else {
+    let Limit::Number { comparison, value: limit } = test.limit else {
         return None;
     };
     let value = in_log_units(evidence.property, compared.single()?)?;
     let limit = in_log_units(evidence.property, limit)?;
     let above = match &evidence.origin {
         Origin::Cell(_) => chance_beyond(value, evidence.sd?, limit),
-        Origin::Relation {
-            relation,
-            log_kow,
-            log_kow_sd,
-            ..
-        } => {
+        Origin::Relation { relation, log_kow, log_kow_sd, .. } => {
             let log_kow = log_kow.single()?;
-            let shift = value
-                - context
-                    .rules
-                    .relations
-                    .relations
-                    .get(*relation)?
-                    .log_value(log_kow);
-            context
-                .rules
-                .relations
-                .chance_of_estimate(*relation, log_kow, (*log_kow_sd)?, limit - shift)?
+            let shift = value - context.rules.relations.relations.get(*relation)?.log_value(log_kow);
+            context.rules.relations.chance_of_estimate(*relation, log_kow, (*log_kow_sd)?, limit - shift)?
         }
     };
-    Some(if comparison.looks_upward() {
-        above
-    } else {
-        1.0 - above
-    })
+    Some(if comparison.looks_upward() { above } else { 1.0 - above })
 }
 
 #[cfg(test)]

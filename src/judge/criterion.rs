@@ -12,14 +12,10 @@ use crate::rules::{Combine, Criterion, Decides, Guards, OnlyIf, Rulebook, Weight
 
 /// Judges one criterion.
 pub(crate) fn judge_criterion(context: Context, criterion: &Criterion) -> CriterionJudgement {
-    let scope = context
-        .cautions
-        .iter()
-        .map(|raised| raised.caution)
-        .find(|index| {
-            let caution = context.rules.cautions.get(*index);
-            caution.is_some_and(|caution| context.rulebook.out_of_scope.contains(&caution.id))
-        });
+    let scope = context.cautions.iter().map(|raised| raised.caution).find(|index| {
+        let caution = context.rules.cautions.get(*index);
+        caution.is_some_and(|caution| context.rulebook.out_of_scope.contains(&caution.id))
+    });
     if let Some(caution) = scope {
         return without_steps(Verdict::OutOfScope, Decision::OutOfScope(caution));
     }
@@ -28,26 +24,13 @@ pub(crate) fn judge_criterion(context: Context, criterion: &Criterion) -> Criter
     }
     if !criterion.bands.is_empty() {
         let (ratings, rated) = rate(context, criterion);
-        let verdict = if rated.is_some() {
-            Verdict::Unresolved
-        } else {
-            Verdict::NoData
-        };
-        return CriterionJudgement {
-            ratings,
-            rated,
-            ..without_steps(verdict, Decision::Rating)
-        };
+        let verdict = if rated.is_some() { Verdict::Unresolved } else { Verdict::NoData };
+        return CriterionJudgement { ratings, rated, ..without_steps(verdict, Decision::Rating) };
     }
     let tests = criterion
         .steps
         .iter()
-        .map(|step| {
-            step.tests
-                .iter()
-                .map(|test| judge_test(context, step, test))
-                .collect()
-        })
+        .map(|step| step.tests.iter().map(|test| judge_test(context, step, test)).collect())
         .collect();
     let mut judged = decide(context.rulebook, criterion, tests);
     if !judged.verdict.is_decided() {
@@ -75,22 +58,13 @@ pub(crate) fn decide(
     criterion: &Criterion,
     tests: Vec<Vec<TestJudgement>>,
 ) -> CriterionJudgement {
-    let mut steps: Vec<StepJudgement> = criterion
-        .steps
-        .iter()
-        .zip(tests)
-        .map(|(step, tests)| judge_step(step, tests))
-        .collect();
+    let mut steps: Vec<StepJudgement> =
+        criterion.steps.iter().zip(tests).map(|(step, tests)| judge_step(step, tests)).collect();
     skip_steps(criterion, &mut steps);
     let (decision, stopped) = take_steps(rulebook, criterion, &steps);
     let verdict = word(rulebook, criterion, &steps, decision);
     let closeness = closeness(criterion, &steps, decision, &stopped);
-    CriterionJudgement {
-        closeness,
-        stopped,
-        steps,
-        ..without_steps(verdict, decision)
-    }
+    CriterionJudgement { closeness, stopped, steps, ..without_steps(verdict, decision) }
 }
 
 /// An `only-if` step is not taken when an earlier deciding step had any data.
@@ -146,11 +120,7 @@ fn take_steps(
 
 /// A clear `any` step rests on every clear test; a clear `all` step stands as long as one of them stands.
 fn stops_of_tests(combine: Combine, judged: &StepJudgement) -> Vec<Stop> {
-    let clear: Vec<&TestJudgement> = judged
-        .by
-        .iter()
-        .filter_map(|index| judged.tests.get(*index))
-        .collect();
+    let clear: Vec<&TestJudgement> = judged.by.iter().filter_map(|index| judged.tests.get(*index)).collect();
     if combine == Combine::All && clear.iter().any(|test| test.stops.is_empty()) {
         return Vec::new();
     }
@@ -184,21 +154,14 @@ fn guards(rulebook: &Rulebook, criterion: &Criterion, steps: &[StepJudgement], c
 
 fn word(rulebook: &Rulebook, criterion: &Criterion, steps: &[StepJudgement], decision: Decision) -> Verdict {
     let definitive = |index: usize, all: bool| {
-        let step_is = criterion
-            .steps
-            .get(index)
-            .is_some_and(|step| step.weight == Weight::Definitive);
+        let step_is = criterion.steps.get(index).is_some_and(|step| step.weight == Weight::Definitive);
         let carried = steps.get(index).is_some_and(|judged| {
             let mut carries = judged
                 .by
                 .iter()
                 .filter_map(|test| judged.tests.get(*test))
                 .map(|test| test.carries == Carries::Definitive);
-            if all {
-                carries.all(|carries| carries)
-            } else {
-                carries.any(|carries| carries)
-            }
+            if all { carries.all(|carries| carries) } else { carries.any(|carries| carries) }
         });
         step_is && carried && rulebook.strongest == Weight::Definitive
     };
@@ -213,11 +176,7 @@ fn word(rulebook: &Rulebook, criterion: &Criterion, steps: &[StepJudgement], dec
                 step.weight != Weight::Supporting
                     && !matches!(judged.state, StepState::Empty | StepState::Skipped)
             });
-            if had_data {
-                Verdict::Unresolved
-            } else {
-                Verdict::NoData
-            }
+            if had_data { Verdict::Unresolved } else { Verdict::NoData }
         }
     }
 }
@@ -230,17 +189,15 @@ fn closeness(
     stopped: &[StoppedClear],
 ) -> Closeness {
     match decision {
-        Decision::In(index) | Decision::Out(index) => steps
-            .get(index)
-            .map_or(Closeness::Clear, |judged| judged.closeness),
+        Decision::In(index) | Decision::Out(index) => {
+            steps.get(index).map_or(Closeness::Clear, |judged| judged.closeness)
+        }
         Decision::Open => {
             let straddles =
                 criterion.steps.iter().zip(steps).any(|(step, judged)| {
                     step.weight > Weight::Concern && judged.state == StepState::Undecided
                 });
-            let within_one_sd = stopped
-                .iter()
-                .any(|clear| clear.stops.contains(&Stop::WithinOneSd));
+            let within_one_sd = stopped.iter().any(|clear| clear.stops.contains(&Stop::WithinOneSd));
             Closeness::from_condition(straddles || within_one_sd)
         }
         Decision::Assess | Decision::OutOfScope(_) | Decision::Rating => Closeness::Clear,

@@ -37,7 +37,11 @@ enum Imagined {
 }
 
 /// Searches sets of growing size; among sets of one size those that spare animals come first.
-pub(crate) fn find_deciding_data(context: Context, criterion: &Criterion, judged: &CriterionJudgement) -> Deciding {
+pub(crate) fn find_deciding_data(
+    context: Context,
+    criterion: &Criterion,
+    judged: &CriterionJudgement,
+) -> Deciding {
     let known = bare_outcomes(judged);
     let question = question(context, criterion, &known);
     if let Some(found) = context.found.get(&question) {
@@ -200,10 +204,8 @@ fn sets(candidates: &[Subject], size: usize) -> Vec<Vec<Subject>> {
 
 /// Whether every combination of results of the imagined data gives an answer.
 fn settles(context: Context, criterion: &Criterion, known: &[Vec<TestJudgement>], set: &[Subject]) -> bool {
-    let results: Vec<Vec<Imagined>> = set
-        .iter()
-        .map(|subject| possible_results(criterion, *subject))
-        .collect();
+    let results: Vec<Vec<Imagined>> =
+        set.iter().map(|subject| possible_results(criterion, *subject)).collect();
     combinations(&results).iter().all(|combination| decides(context, criterion, known, set, combination))
 }
 
@@ -240,24 +242,14 @@ fn combinations(results: &[Vec<Imagined>]) -> Vec<Vec<Imagined>> {
     results.iter().fold(vec![Vec::new()], |so_far, choices| {
         so_far
             .iter()
-            .flat_map(|begun| {
-                choices
-                    .iter()
-                    .map(|choice| [begun.as_slice(), &[*choice]].concat())
-            })
+            .flat_map(|begun| choices.iter().map(|choice| [begun.as_slice(), &[*choice]].concat()))
             .collect()
     })
 }
 
 /// A value below all limits the subject is held against, one between each two of them, and one above all.
 fn possible_results(criterion: &Criterion, subject: Subject) -> Vec<Imagined> {
-    let tests = || {
-        criterion
-            .steps
-            .iter()
-            .flat_map(|step| &step.tests)
-            .filter(|test| test.subject == subject)
-    };
+    let tests = || criterion.steps.iter().flat_map(|step| &step.tests).filter(|test| test.subject == subject);
     if !matches!(subject, Subject::Property(_)) {
         return vec![Imagined::Fires, Imagined::Clears];
     }

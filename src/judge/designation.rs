@@ -22,10 +22,7 @@ pub(crate) fn judge_designations(
     criteria: &[CriterionJudgement],
 ) -> Vec<DesignationJudgement> {
     let designations = &context.rulebook.designations;
-    designations
-        .iter()
-        .map(|designation| judge_designation(context, designation, criteria))
-        .collect()
+    designations.iter().map(|designation| judge_designation(context, designation, criteria)).collect()
 }
 
 /// Designations never go round in circles (validation refuses that), so the recursion ends.
@@ -47,9 +44,9 @@ fn judge_designation(
         .iter()
         .filter_map(|part| {
             let (verdict, closeness) = match *part {
-                DesignationPart::Criterion(index) => criteria
-                    .get(index)
-                    .map(|criterion| (criterion.verdict, criterion.closeness))?,
+                DesignationPart::Criterion(index) => {
+                    criteria.get(index).map(|criterion| (criterion.verdict, criterion.closeness))?
+                }
                 DesignationPart::Designation(index) => {
                     let other = context.rulebook.designations.get(index)?;
                     let judged = judge_designation(context, other, criteria);
@@ -80,11 +77,7 @@ fn judge_designation(
 
 fn stated(context: Context, designation: &Designation) -> Option<String> {
     let statements = &context.substance.hazard_statements.as_ref()?.value;
-    designation
-        .stated_by
-        .iter()
-        .find_map(|code| statements.find(code))
-        .map(str::to_owned)
+    designation.stated_by.iter().find_map(|code| statements.find(code)).map(str::to_owned)
 }
 
 /// All-of: any `out of scope`, else any `not fulfilled`, else any `screens out`, else anything unanswered, else any
@@ -96,18 +89,8 @@ pub(crate) fn combined(combine: Combine, verdicts: &[Verdict]) -> Verdict {
         return Verdict::OutOfScope;
     }
     let (first, second, fourth, last) = match combine {
-        Combine::All => (
-            Verdict::NotFulfilled,
-            Verdict::ScreensOut,
-            Verdict::ScreensIn,
-            Verdict::Fulfilled,
-        ),
-        Combine::Any => (
-            Verdict::Fulfilled,
-            Verdict::ScreensIn,
-            Verdict::ScreensOut,
-            Verdict::NotFulfilled,
-        ),
+        Combine::All => (Verdict::NotFulfilled, Verdict::ScreensOut, Verdict::ScreensIn, Verdict::Fulfilled),
+        Combine::Any => (Verdict::Fulfilled, Verdict::ScreensIn, Verdict::ScreensOut, Verdict::NotFulfilled),
     };
     if any(first) {
         first
@@ -129,19 +112,13 @@ fn closeness(
     verdict: Verdict,
     deciding: &[&(DesignationPart, Verdict, Closeness)],
 ) -> bool {
-    let mut close = deciding
-        .iter()
-        .map(|(_, _, closeness)| *closeness == Closeness::CloseCall);
+    let mut close = deciding.iter().map(|(_, _, closeness)| *closeness == Closeness::CloseCall);
     let one_is_enough = match verdict {
         Verdict::NotFulfilled | Verdict::ScreensOut => combine == Combine::All,
         Verdict::Fulfilled | Verdict::ScreensIn => combine == Combine::Any,
         Verdict::Unresolved | Verdict::NoData | Verdict::OutOfScope => false,
     };
-    if one_is_enough {
-        !deciding.is_empty() && close.all(|close| close)
-    } else {
-        close.any(|close| close)
-    }
+    if one_is_enough { !deciding.is_empty() && close.all(|close| close) } else { close.any(|close| close) }
 }
 
 #[cfg(test)]
@@ -169,11 +146,7 @@ mod tests {
             (&[OutOfScope, NotFulfilled, Fulfilled], OutOfScope),
         ];
         for (parts, expected) in table {
-            assert_eq!(
-                combined(Combine::All, parts),
-                expected,
-                "{parts:?}"
-            );
+            assert_eq!(combined(Combine::All, parts), expected, "{parts:?}");
         }
     }
 
@@ -191,11 +164,7 @@ mod tests {
             (&[OutOfScope, OutOfScope], OutOfScope),
         ];
         for (parts, expected) in table {
-            assert_eq!(
-                combined(Combine::Any, parts),
-                expected,
-                "{parts:?}"
-            );
+            assert_eq!(combined(Combine::Any, parts), expected, "{parts:?}");
         }
     }
 
@@ -203,14 +172,8 @@ mod tests {
     fn an_unanswered_part_never_lets_an_all_of_designation_be_fulfilled_nor_an_any_of_one_be_cleared() {
         for unanswered in [Unresolved, NoData] {
             for other in Verdict::ALL {
-                assert!(!matches!(
-                    combined(Combine::All, &[unanswered, other]),
-                    Fulfilled | ScreensIn
-                ));
-                assert!(!matches!(
-                    combined(Combine::Any, &[unanswered, other]),
-                    NotFulfilled | ScreensOut
-                ));
+                assert!(!matches!(combined(Combine::All, &[unanswered, other]), Fulfilled | ScreensIn));
+                assert!(!matches!(combined(Combine::Any, &[unanswered, other]), NotFulfilled | ScreensOut));
             }
         }
     }

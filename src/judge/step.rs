@@ -28,12 +28,7 @@ pub(crate) fn judge_step(step: &Step, tests: Vec<TestJudgement>) -> StepJudgemen
     };
     let by = responsible(state, step, &tests);
     let closeness = closeness(state, step, &by, &tests);
-    StepJudgement {
-        state,
-        closeness,
-        by,
-        tests,
-    }
+    StepJudgement { state, closeness, by, tests }
 }
 
 /// In a screening step an undecided test counts as fired, as a close call.
@@ -97,10 +92,8 @@ fn responsible(state: StepState, step: &Step, tests: &[TestJudgement]) -> Vec<us
 
 /// A step is a close call if its outcome rests on close tests: one far beyond the limit makes an `any` step safe.
 fn closeness(state: StepState, step: &Step, by: &[usize], tests: &[TestJudgement]) -> Closeness {
-    let mut close = by
-        .iter()
-        .filter_map(|index| tests.get(*index))
-        .map(|test| test.closeness == Closeness::CloseCall);
+    let mut close =
+        by.iter().filter_map(|index| tests.get(*index)).map(|test| test.closeness == Closeness::CloseCall);
     Closeness::from_condition(match (state, step.combine) {
         (StepState::Undecided, _) => true,
         (StepState::Fired, Combine::Any) | (StepState::Clear, Combine::All) => close.all(|close| close),

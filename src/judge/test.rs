@@ -40,12 +40,8 @@ fn judge_number(context: Context, step: &Step, test: &Test, property: Property) 
         Property::HalfLife(Compartment::Water) => together(context, step, test, WATERS),
         Property::HalfLife(Compartment::Sediment) => together(context, step, test, SEDIMENTS),
         _ => {
-            let own = most_concerning(context, step, test, property, |interval| {
-                outcome_of(test, interval)
-            });
-            own.or_else(|| unspecified(context, step, test, property))
-                .into_iter()
-                .collect()
+            let own = most_concerning(context, step, test, property, |interval| outcome_of(test, interval));
+            own.or_else(|| unspecified(context, step, test, property)).into_iter().collect()
         }
     };
     used.sort_by(|one, other| concern(test, other).total_cmp(&concern(test, one)));
@@ -59,14 +55,7 @@ fn judge_number(context: Context, step: &Step, test: &Test, property: Property) 
     let closeness = deciding.closeness;
     let carries = carries(context, test, outcome, &used);
     let stops = stops(context, test, &used);
-    Some(TestJudgement {
-        outcome,
-        used,
-        answer: None,
-        closeness,
-        carries,
-        stops,
-    })
+    Some(TestJudgement { outcome, used, answer: None, closeness, carries, stops })
 }
 
 const WATERS: [Property; 3] = [
@@ -85,9 +74,7 @@ fn together(context: Context, step: &Step, test: &Test, compartments: [Property;
     compartments
         .into_iter()
         .filter_map(|property| {
-            most_concerning(context, step, test, property, |interval| {
-                outcome_of(test, interval)
-            })
+            most_concerning(context, step, test, property, |interval| outcome_of(test, interval))
         })
         .collect()
 }
@@ -118,10 +105,7 @@ fn unspecified(context: Context, step: &Step, test: &Test, property: Property) -
         })
         .collect();
     most_concerning(context, step, test, unspecified, |interval| {
-        let outcomes: Vec<Outcome> = standing_for
-            .iter()
-            .map(|other| outcome_of(other, interval))
-            .collect();
+        let outcomes: Vec<Outcome> = standing_for.iter().map(|other| outcome_of(other, interval)).collect();
         if outcomes.iter().all(|outcome| *outcome == Outcome::Fired) {
             Outcome::Fired
         } else if outcomes.iter().all(|outcome| *outcome == Outcome::Clear) {
@@ -149,15 +133,8 @@ fn counted<'run>(
             }
     };
     let values = context.evidence.of(property);
-    let best = values
-        .iter()
-        .filter(|evidence| accepted(evidence))
-        .map(|evidence| evidence.basis)
-        .min();
-    values
-        .iter()
-        .enumerate()
-        .filter(move |(_, evidence)| accepted(evidence) && Some(evidence.basis) == best)
+    let best = values.iter().filter(|evidence| accepted(evidence)).map(|evidence| evidence.basis).min();
+    values.iter().enumerate().filter(move |(_, evidence)| accepted(evidence) && Some(evidence.basis) == best)
 }
 
 /// Of several values of the best basis, the one that points to more concern for this test.
@@ -235,11 +212,7 @@ fn carries(context: Context, test: &Test, outcome: TestOutcome, used: &[Used]) -
         TestOutcome::Clear => used.iter().all(strong),
         TestOutcome::Undecided | TestOutcome::Missing => false,
     };
-    if carried && test.checked != Checked::Memory {
-        Carries::Definitive
-    } else {
-        Carries::Screening
-    }
+    if carried && test.checked != Checked::Memory { Carries::Definitive } else { Carries::Screening }
 }
 
 fn stops(context: Context, test: &Test, used: &[Used]) -> Vec<Stop> {
@@ -254,10 +227,7 @@ fn stops(context: Context, test: &Test, used: &[Used]) -> Vec<Stop> {
         if modelled && value.closeness == Closeness::CloseCall {
             stops.push(Stop::WithinOneSd);
         }
-        if let Origin::Relation {
-            relation, low_side, ..
-        } = &evidence.origin
-        {
+        if let Origin::Relation { relation, low_side, .. } = &evidence.origin {
             if context
                 .rules
                 .relations
@@ -302,11 +272,7 @@ fn in_words(
 ) -> TestJudgement {
     let mut stops = limit_stops(test);
     stops.extend(context.blocking(test.subject, None).map(Stop::Caution));
-    let carries = if test.checked == Checked::Memory {
-        Carries::Screening
-    } else {
-        carries
-    };
+    let carries = if test.checked == Checked::Memory { Carries::Screening } else { carries };
     TestJudgement {
         outcome,
         used: Vec::new(),
@@ -330,21 +296,12 @@ fn judge_ready(context: Context, test: &Test) -> Option<TestJudgement> {
     };
     let entries = &context.substance.ready;
     let accepted = |basis: Basis| test.bases.contains(&basis);
-    let best = entries
-        .iter()
-        .map(|entry| entry.value.basis)
-        .filter(|basis| accepted(*basis))
-        .min()?;
+    let best = entries.iter().map(|entry| entry.value.basis).filter(|basis| accepted(*basis)).min()?;
     entries
         .iter()
         .enumerate()
         .filter(|(_, entry)| entry.value.basis == best)
-        .map(|(index, entry)| {
-            (
-                ready_outcome(entry.value.result, wanted),
-                std::cmp::Reverse(index),
-            )
-        })
+        .map(|(index, entry)| (ready_outcome(entry.value.result, wanted), std::cmp::Reverse(index)))
         .max()
         .map(|(outcome, std::cmp::Reverse(index))| {
             in_words(context, test, outcome, Answer::Ready(index), carried_by(best))
@@ -371,9 +328,8 @@ fn judge_inherent(context: Context, test: &Test) -> Option<TestJudgement> {
         .filter(|(_, entry)| guideline.is_none_or(|wanted| entry.value.guideline.as_deref() == Some(wanted)))
         .filter_map(|(index, entry)| {
             let outcome = outcome_of(test, entry.value.degraded?);
-            let in_time = test
-                .within
-                .is_none_or(|within| entry.value.days.is_some_and(|days| days <= within));
+            let in_time =
+                test.within.is_none_or(|within| entry.value.days.is_some_and(|days| days <= within));
             let outcome = match (outcome, in_time) {
                 (Outcome::Clear, true) => TestOutcome::Clear,
                 (Outcome::Clear, false) | (Outcome::Undecided, _) => TestOutcome::Undecided,

@@ -16,11 +16,7 @@ impl Date {
         let year = parts.next()?.parse().ok()?;
         let month = parts.next()?.parse().ok()?;
         let day = parts.next()?.parse().ok()?;
-        if parts.next().is_some() {
-            None
-        } else {
-            Self::new(year, month, day)
-        }
+        if parts.next().is_some() { None } else { Self::new(year, month, day) }
     }
 
     /// Today, by the system's clock and time zone.
@@ -39,11 +35,8 @@ impl Date {
             return None;
         }
         // The 1900 system counts a 29 February 1900 that never was; from March on, day 0 is 30 December 1899.
-        let base = if serial < 60.0 {
-            jiff::civil::date(1899, 12, 31)
-        } else {
-            jiff::civil::date(1899, 12, 30)
-        };
+        let base =
+            if serial < 60.0 { jiff::civil::date(1899, 12, 31) } else { jiff::civil::date(1899, 12, 30) };
         #[expect(
             clippy::cast_possible_truncation,
             reason = "bounded just above to the calendar of spreadsheets"
@@ -55,13 +48,7 @@ impl Date {
 
 impl std::fmt::Display for Date {
     fn fmt(&self, formatter: &mut std::fmt::Formatter<'_>) -> std::fmt::Result {
-        write!(
-            formatter,
-            "{:04}-{:02}-{:02}",
-            self.0.year(),
-            self.0.month(),
-            self.0.day()
-        )
+        write!(formatter, "{:04}-{:02}-{:02}", self.0.year(), self.0.month(), self.0.day())
     }
 }
 
@@ -80,9 +67,6 @@ mod tests {
     #[test]
     fn a_day_the_calendar_lacks_is_refused() {
         assert_eq!(Date::parse("2023-02-30"), None);
-        assert_eq!(
-            Date::parse("2023-03-31").map(|date| date.to_string()).as_deref(),
-            Some("2023-03-31")
-        );
+        assert_eq!(Date::parse("2023-03-31").map(|date| date.to_string()).as_deref(), Some("2023-03-31"));
     }
 }

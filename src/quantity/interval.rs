@@ -170,10 +170,7 @@ impl Interval {
     /// The smallest interval that holds both.
     #[must_use]
     pub fn hull(self, other: Self) -> Self {
-        Self {
-            low: lower(self.low, other.low),
-            high: higher(self.high, other.high),
-        }
+        Self { low: lower(self.low, other.low), high: higher(self.high, other.high) }
     }
 
     /// Whether the number belongs to the interval.
@@ -289,26 +286,15 @@ mod tests {
     #[test]
     fn a_straddling_range_is_undecided_for_every_comparison() {
         let range = interval(Bound::Included(1500.0), Bound::Included(2500.0));
-        for comparison in [
-            Comparison::Above,
-            Comparison::AtLeast,
-            Comparison::Below,
-            Comparison::AtMost,
-        ] {
+        for comparison in [Comparison::Above, Comparison::AtLeast, Comparison::Below, Comparison::AtMost] {
             assert_eq!(range.compare(comparison, 2000.0), Outcome::Undecided);
         }
     }
 
     #[test]
     fn ends_that_make_no_interval_are_refused() {
-        assert_eq!(
-            Interval::new(Bound::Included(2.0), Bound::Included(1.0)),
-            Err(IntervalError::Reversed)
-        );
-        assert_eq!(
-            Interval::new(Bound::Excluded(1.0), Bound::Included(1.0)),
-            Err(IntervalError::Reversed)
-        );
+        assert_eq!(Interval::new(Bound::Included(2.0), Bound::Included(1.0)), Err(IntervalError::Reversed));
+        assert_eq!(Interval::new(Bound::Excluded(1.0), Bound::Included(1.0)), Err(IntervalError::Reversed));
         assert_eq!(Interval::point(f64::NAN), Err(IntervalError::NotFinite));
         assert_eq!(Interval::point(f64::INFINITY), Err(IntervalError::NotFinite));
     }

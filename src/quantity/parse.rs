@@ -97,8 +97,7 @@ pub fn parse_quantity(text: &str, read_as: ReadAs) -> Result<Parsed, QuantityFau
         if unit.dimension() != read_as.dimension {
             return Err(QuantityFault::WrongDimension(unit));
         }
-        unit.to_canonical(number, read_as.molar_mass)
-            .ok_or(QuantityFault::NeedsMolarMass)
+        unit.to_canonical(number, read_as.molar_mass).ok_or(QuantityFault::NeedsMolarMass)
     };
     let low = expression.low.convert(convert)?;
     let high = expression.high.convert(convert)?;
@@ -121,9 +120,7 @@ pub fn quantity_of_number(number: f64, read_as: ReadAs) -> Result<Quantity, Quan
     if unit.dimension() != read_as.dimension {
         return Err(QuantityFault::WrongDimension(unit));
     }
-    let canonical = unit
-        .to_canonical(number, read_as.molar_mass)
-        .ok_or(QuantityFault::NeedsMolarMass)?;
+    let canonical = unit.to_canonical(number, read_as.molar_mass).ok_or(QuantityFault::NeedsMolarMass)?;
     Ok(Quantity {
         interval: Interval::point(canonical).map_err(|_| QuantityFault::BadRange)?,
         unit,
@@ -156,7 +153,5 @@ pub fn parse_limit(text: &str, dimension: Dimension) -> Result<f64, QuantityFaul
     if unit.dimension() != dimension {
         return Err(QuantityFault::WrongDimension(unit));
     }
-    unit.to_canonical(number, None)
-        .filter(|value| value.is_finite())
-        .ok_or(QuantityFault::NeedsMolarMass)
+    unit.to_canonical(number, None).filter(|value| value.is_finite()).ok_or(QuantityFault::NeedsMolarMass)
 }

@@ -251,9 +251,6 @@ mod tests {
 
     #[test]
     fn months_and_years_agree() {
-        assert_eq!(
-            Unit::Month.to_canonical(12.0, None),
-            Unit::Year.to_canonical(1.0, None)
-        );
+        assert_eq!(Unit::Month.to_canonical(12.0, None), Unit::Year.to_canonical(1.0, None));
     }
 }

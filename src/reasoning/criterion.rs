@@ -2,8 +2,8 @@
 
 use crate::judge::{CriterionJudgement, Decision, StepState, TestJudgement, Used};
 use crate::quantity::format_interval;
-use crate::reasoning::sentence::sentence;
 use crate::reasoning::row::deciding_phrase;
+use crate::reasoning::sentence::sentence;
 use crate::reasoning::value::{evidence_of, limit_phrase, origin_phrase};
 use crate::reasoning::{Book, Told, verdict_text};
 use crate::rules::{Checked, Criterion, Test};
@@ -86,10 +86,7 @@ fn source(test: &Test) -> String {
         Checked::Seen => test.source.clone(),
         Checked::SecondHand => format!("{} (second-hand)", test.source),
         Checked::Memory => {
-            format!(
-                "{} (from memory: check the current text before relying on this)",
-                test.source
-            )
+            format!("{} (from memory: check the current text before relying on this)", test.source)
         }
     }
 }
@@ -102,18 +99,12 @@ fn shown_test<'run>(
     let step = match judged.decision {
         Decision::In(step) | Decision::Out(step) => Some(step),
         Decision::Open => judged.stopped.first().map(|clear| clear.step).or_else(|| {
-            judged
-                .steps
-                .iter()
-                .position(|step| !matches!(step.state, StepState::Empty | StepState::Skipped))
+            judged.steps.iter().position(|step| !matches!(step.state, StepState::Empty | StepState::Skipped))
         }),
         Decision::Assess | Decision::OutOfScope(_) | Decision::Rating => None,
     }?;
     let (rule, came_out) = (criterion.steps.get(step)?, judged.steps.get(step)?);
-    let with_value = came_out
-        .tests
-        .iter()
-        .position(|test| !test.used.is_empty() || test.answer.is_some());
+    let with_value = came_out.tests.iter().position(|test| !test.used.is_empty() || test.answer.is_some());
     let chosen = match came_out.state {
         StepState::Partial => with_value.or(came_out.by.first().copied()),
         StepState::Fired

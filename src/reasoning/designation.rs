@@ -36,25 +36,15 @@ pub fn with_closeness(verdict: Verdict, closeness: Closeness) -> String {
 pub fn headline(book: Book) -> String {
     match book.judged.headline {
         Headline::Listed(listing) => {
-            let title = book
-                .rulebook
-                .listings
-                .get(listing)
-                .map_or("", |listing| listing.title.as_str());
+            let title = book.rulebook.listings.get(listing).map_or("", |listing| listing.title.as_str());
             format!("listed: {title}")
         }
-        Headline::Designation(index) => {
-            designation_at(book, index).map_or(String::new(), |(rule, judged)| {
-                format!(
-                    "{}: {}",
-                    rule.id,
-                    with_closeness(judged.verdict, judged.closeness)
-                )
-            })
-        }
-        Headline::Criterion(index) => criterion_at(book, index).map_or(String::new(), |(rule, judged)| {
-            format!("{}: {}", rule.id, verdict_text(rule, judged))
-        }),
+        Headline::Designation(index) => designation_at(book, index)
+            .map_or(String::new(), |(rule, judged)| {
+                format!("{}: {}", rule.id, with_closeness(judged.verdict, judged.closeness))
+            }),
+        Headline::Criterion(index) => criterion_at(book, index)
+            .map_or(String::new(), |(rule, judged)| format!("{}: {}", rule.id, verdict_text(rule, judged))),
     }
 }
 
@@ -68,42 +58,27 @@ pub fn headline_verdict(book: Book) -> Option<Verdict> {
 }
 
 fn designation_at(book: Book<'_>, index: usize) -> Option<(&Designation, &DesignationJudgement)> {
-    Some((
-        book.rulebook.designations.get(index)?,
-        book.judged.designations.get(index)?,
-    ))
+    Some((book.rulebook.designations.get(index)?, book.judged.designations.get(index)?))
 }
 
 fn criterion_at(book: Book<'_>, index: usize) -> Option<(&Criterion, &CriterionJudgement)> {
-    Some((
-        book.rulebook.criteria.get(index)?,
-        book.judged.criteria.get(index)?,
-    ))
+    Some((book.rulebook.criteria.get(index)?, book.judged.criteria.get(index)?))
 }
 
 /// One sentence that says why the headline is as it is.
 pub fn why(book: Book) -> String {
     let text = match book.judged.headline {
-        Headline::Listed(listing) => book
-            .rulebook
-            .listings
-            .get(listing)
-            .map_or(String::new(), |listing| {
-                format!(
-                    "The number of the row is on the list `{}` of {} ({})",
-                    listing.title, listing.date, listing.source
-                )
-            }),
-        Headline::Designation(index) => designation_why(book, index),
-        Headline::Criterion(index) => criterion_at(book, index).map_or(String::new(), |(rule, judged)| {
-            criterion_brief(book.told, rule, judged)
+        Headline::Listed(listing) => book.rulebook.listings.get(listing).map_or(String::new(), |listing| {
+            format!(
+                "The number of the row is on the list `{}` of {} ({})",
+                listing.title, listing.date, listing.source
+            )
         }),
+        Headline::Designation(index) => designation_why(book, index),
+        Headline::Criterion(index) => criterion_at(book, index)
+            .map_or(String::new(), |(rule, judged)| criterion_brief(book.told, rule, judged)),
     };
-    if text.is_empty() || text.ends_with('.') {
-        text
-    } else {
-        format!("{text}.")
-    }
+    if text.is_empty() || text.ends_with('.') { text } else { format!("{text}.") }
 }
 
 fn designation_why(book: Book, index: usize) -> String {
@@ -138,9 +113,7 @@ fn scope_caution(book: Book) -> Option<usize> {
 fn part_brief(book: Book, part: DesignationPart) -> String {
     match part {
         DesignationPart::Criterion(index) => criterion_at(book, index)
-            .map_or(String::new(), |(rule, judged)| {
-                criterion_brief(book.told, rule, judged)
-            }),
+            .map_or(String::new(), |(rule, judged)| criterion_brief(book.told, rule, judged)),
         DesignationPart::Designation(index) => designation_at(book, index)
             .map_or(String::new(), |(rule, judged)| {
                 format!("{} {}", rule.id, with_closeness(judged.verdict, judged.closeness))
@@ -152,20 +125,16 @@ fn part_brief(book: Book, part: DesignationPart) -> String {
 fn criterion_brief(told: Told, rule: &Criterion, judged: &CriterionJudgement) -> String {
     let words = verdict_text(rule, judged);
     let reason = match judged.decision {
-        Decision::In(step) | Decision::Out(step) => {
-            rule.steps.get(step).zip(judged.steps.get(step)).map_or(String::new(), |(rule, came_out)| {
-                step_brief(told, rule, came_out)
-            })
-        }
+        Decision::In(step) | Decision::Out(step) => rule
+            .steps
+            .get(step)
+            .zip(judged.steps.get(step))
+            .map_or(String::new(), |(rule, came_out)| step_brief(told, rule, came_out)),
         Decision::Open => judged.deciding.as_ref().map_or(String::new(), deciding_sentence),
         Decision::Assess => "no number settles it".to_owned(),
         Decision::OutOfScope(_) | Decision::Rating => String::new(),
     };
-    if reason.is_empty() {
-        format!("{} {words}", rule.id)
-    } else {
-        format!("{} {words}: {reason}", rule.id)
-    }
+    if reason.is_empty() { format!("{} {words}", rule.id) } else { format!("{} {words}: {reason}", rule.id) }
 }
 
 /// The first reasons of a step; the Reasoning sheet has them all.
@@ -176,7 +145,9 @@ fn step_brief(told: Told, rule: &Step, came_out: &StepJudgement) -> String {
         .map(|(test, judged)| test_brief(told, test, judged))
         .collect();
     match briefs.get(..REASONS) {
-        Some(first) if briefs.len() > REASONS => format!("{} and {} more", first.join(", "), briefs.len() - REASONS),
+        Some(first) if briefs.len() > REASONS => {
+            format!("{} and {} more", first.join(", "), briefs.len() - REASONS)
+        }
         Some(_) | None => listed(&briefs),
     }
 }

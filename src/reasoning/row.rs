@@ -27,11 +27,7 @@ pub fn log_kow_cells(told: Told) -> LogKowCells {
     let number = evidence.interval.single();
     LogKowCells {
         number,
-        text: if number.is_some() {
-            String::new()
-        } else {
-            format_interval(evidence.interval, Unit::One)
-        },
+        text: if number.is_some() { String::new() } else { format_interval(evidence.interval, Unit::One) },
         sd: evidence.sd,
         basis: evidence.basis.word().to_owned(),
     }
@@ -45,12 +41,7 @@ pub fn cautions_text(told: Told) -> String {
         .iter()
         .filter_map(|raised| {
             let caution = told.rules.cautions.get(raised.caution)?;
-            Some(format!(
-                "{}: {} ({})",
-                caution.id,
-                caution.sentence.trim_end_matches('.'),
-                raised.reason
-            ))
+            Some(format!("{}: {} ({})", caution.id, caution.sentence.trim_end_matches('.'), raised.reason))
         })
         .collect();
     sentences.join("; ")
@@ -75,15 +66,15 @@ pub fn deciding_text(told: Told) -> String {
     }
     let mut parts: Vec<String> = match told.substance.identity {
         Identity::Identified => Vec::new(),
-        Identity::NameAlone | Identity::RepairedDate | Identity::NotIdentified if groups.is_empty() => Vec::new(),
+        Identity::NameAlone | Identity::RepairedDate | Identity::NotIdentified if groups.is_empty() => {
+            Vec::new()
+        }
         Identity::NameAlone | Identity::RepairedDate | Identity::NotIdentified => {
             vec!["first a CAS number, EC number or structure that says which substance it is".to_owned()]
         }
     };
-    let data: Vec<String> = groups
-        .into_iter()
-        .map(|(data, names)| format!("{data} ({})", names.join(", ")))
-        .collect();
+    let data: Vec<String> =
+        groups.into_iter().map(|(data, names)| format!("{data} ({})", names.join(", "))).collect();
     parts.extend(data);
     parts.join("; ")
 }

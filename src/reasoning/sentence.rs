@@ -1,8 +1,6 @@
 //! The sentences behind a verdict.
 
-use crate::judge::{
-    Carries, Closeness, CriterionJudgement, Deciding, Decision, StepJudgement, StepState,
-};
+use crate::judge::{Carries, Closeness, CriterionJudgement, Deciding, Decision, StepJudgement, StepState};
 use crate::reasoning::designation::out_of_scope;
 use crate::reasoning::stops::stops_phrase;
 use crate::reasoning::value::{listed, telling_tests, test_clause, titles, value_phrase};
@@ -54,7 +52,8 @@ fn decided(
     match came_out.closeness {
         Closeness::Clear => {}
         Closeness::CloseCall => sentences.push(
-            "A close call: the limit lies inside the value's range or within one standard deviation of it".into(),
+            "A close call: the limit lies inside the value's range or within one standard deviation of it"
+                .into(),
         ),
     }
     sentences.extend(weight_remark(book, rule, came_out));
@@ -102,12 +101,14 @@ fn weight_remark(book: Book, rule: &Step, came_out: &StepJudgement) -> Option<St
         .any(|test| test.carries == Carries::Definitive);
     let strongest = book.rulebook.strongest;
     match rule.weight {
-        Weight::Definitive if strongest != Weight::Definitive => {
-            Some(format!("{} leaves the decision to a review, so this is a screening result", book.rulebook.short))
-        }
-        Weight::Definitive if !carried => {
-            Some("A screening result, since the value is not said to be measured in the way the criterion asks".into())
-        }
+        Weight::Definitive if strongest != Weight::Definitive => Some(format!(
+            "{} leaves the decision to a review, so this is a screening result",
+            book.rulebook.short
+        )),
+        Weight::Definitive if !carried => Some(
+            "A screening result, since the value is not said to be measured in the way the criterion asks"
+                .into(),
+        ),
         Weight::Screening => Some("A screening result".into()),
         Weight::Definitive | Weight::Concern | Weight::Supporting => None,
     }
@@ -147,7 +148,12 @@ fn alternatives(parts: &[String]) -> String {
 }
 
 /// What a step with data came to that did not decide.
-fn step_sentence(told: Told, criterion: &Criterion, judged: &CriterionJudgement, index: usize) -> Option<String> {
+fn step_sentence(
+    told: Told,
+    criterion: &Criterion,
+    judged: &CriterionJudgement,
+    index: usize,
+) -> Option<String> {
     let (rule, came_out) = (criterion.steps.get(index)?, judged.steps.get(index)?);
     if let Some(stopped) = judged.stopped.iter().find(|clear| clear.step == index) {
         let clauses = listed(&clauses(told, rule, came_out));
@@ -162,7 +168,8 @@ fn step_sentence(told: Told, criterion: &Criterion, judged: &CriterionJudgement,
                 .filter(|(_, test)| !test.used.is_empty() || test.answer.is_some())
                 .map(|(rule, test)| test_clause(told, rule, test))
                 .collect();
-            let missing = came_out.by.iter().filter_map(|test| rule.tests.get(*test)).filter(|test| !test.optional);
+            let missing =
+                came_out.by.iter().filter_map(|test| rule.tests.get(*test)).filter(|test| !test.optional);
             let missing = titles(missing.map(|test| test.subject));
             Some(format!("{}, but there is no {}", listed(&known), alternatives(&missing)))
         }
@@ -194,7 +201,9 @@ pub(crate) fn deciding_sentence(deciding: &Deciding) -> String {
                 format!("{} would settle it only by pointing to concern", alternatives(&titles))
             }
         }
-        Deciding::ExpertJudgement => "no datum alone settles it; a qualified person has to assess it".to_owned(),
+        Deciding::ExpertJudgement => {
+            "no datum alone settles it; a qualified person has to assess it".to_owned()
+        }
     }
 }
 
@@ -204,7 +213,8 @@ fn rating(told: Told, criterion: &Criterion, judged: &CriterionJudgement) -> Str
         return format!("The inventory holds no {}", alternatives(&asked));
     };
     let bands = judged.ratings.iter().filter_map(|index| criterion.bands.get(*index));
-    let ratings: Vec<String> = bands.map(|band| format!("{} ({})", band.rating, band.test.limit_text)).collect();
+    let ratings: Vec<String> =
+        bands.map(|band| format!("{} ({})", band.rating, band.test.limit_text)).collect();
     format!("{} falls in {}", value_phrase(told, rated), listed(&ratings))
 }
 
@@ -238,10 +248,7 @@ mod tests {
     #[test]
     fn sentences_start_and_end_as_sentences_do() {
         assert_eq!(closed("no BCF in the inventory"), "No BCF in the inventory.");
-        assert_eq!(
-            closed("log Kow 5.2 is above the limit"),
-            "log Kow 5.2 is above the limit."
-        );
+        assert_eq!(closed("log Kow 5.2 is above the limit"), "log Kow 5.2 is above the limit.");
         assert_eq!(signed(-0.25), "\u{2212}0.25");
     }
 }

@@ -14,22 +14,15 @@ pub(crate) fn stops_phrase(
     judged: &CriterionJudgement,
     clear: &StoppedClear,
 ) -> String {
-    let phrases: Vec<String> = clear
-        .stops
-        .iter()
-        .map(|stop| stop_phrase(told, criterion, judged, *stop))
-        .collect();
+    let phrases: Vec<String> =
+        clear.stops.iter().map(|stop| stop_phrase(told, criterion, judged, *stop)).collect();
     listed(&phrases)
 }
 
 fn stop_phrase(told: Told, criterion: &Criterion, judged: &CriterionJudgement, stop: Stop) -> String {
     match stop {
         Stop::Caution(index) => {
-            let id = told
-                .rules
-                .cautions
-                .get(index)
-                .map_or("", |caution| caution.id.as_str());
+            let id = told.rules.cautions.get(index).map_or("", |caution| caution.id.as_str());
             format!("the caution `{id}` does not let this value clear")
         }
         Stop::WithinOneSd => {
@@ -62,16 +55,14 @@ fn low_side_phrase(told: Told, relation: usize, log_value: f64) -> String {
         Side::Ionised => "if it ionises between pH 4 and 9, which is not known",
         Side::Class | Side::Central => "if it belongs to another class of substances, which is not known",
     };
-    format!("{kind}, it could be as low as {value} {unit} ({} less one standard deviation)", citation(told, relation))
+    format!(
+        "{kind}, it could be as low as {value} {unit} ({} less one standard deviation)",
+        citation(told, relation)
+    )
 }
 
 fn citation(told: Told, relation: usize) -> String {
-    let citation = told
-        .rules
-        .relations
-        .relations
-        .get(relation)
-        .map_or("", |line| line.citation.as_str());
+    let citation = told.rules.relations.relations.get(relation).map_or("", |line| line.citation.as_str());
     short_citation(citation)
 }
 
@@ -79,8 +70,10 @@ fn guard_brief(told: Told, criterion: &Criterion, judged: &CriterionJudgement, s
     let (Some(rule), Some(came_out)) = (criterion.steps.get(step), judged.steps.get(step)) else {
         return String::new();
     };
-    let briefs: Vec<String> =
-        telling_tests(rule, came_out).into_iter().map(|(test, judged)| test_brief(told, test, judged)).collect();
+    let briefs: Vec<String> = telling_tests(rule, came_out)
+        .into_iter()
+        .map(|(test, judged)| test_brief(told, test, judged))
+        .collect();
     briefs.join("; ")
 }
 
@@ -88,11 +81,5 @@ fn guard_missing(criterion: &Criterion, judged: &CriterionJudgement, step: usize
     let (Some(rule), Some(came_out)) = (criterion.steps.get(step), judged.steps.get(step)) else {
         return Vec::new();
     };
-    titles(
-        came_out
-            .by
-            .iter()
-            .filter_map(|index| rule.tests.get(*index))
-            .map(|test| test.subject),
-    )
+    titles(came_out.by.iter().filter_map(|index| rule.tests.get(*index)).map(|test| test.subject))
 }

@@ -26,23 +26,11 @@ pub(crate) fn basis_phrase(basis: Basis) -> &'static str {
 pub(crate) fn origin_phrase(told: Told, evidence: &Evidence) -> String {
     match &evidence.origin {
         Origin::Cell(cell) => cell.to_string(),
-        Origin::Relation {
-            relation,
-            log_kow,
-            log_kow_cell,
-            ..
-        } => {
-            let citation = told
-                .rules
-                .relations
-                .relations
-                .get(*relation)
-                .map_or("", |line| line.citation.as_str());
+        Origin::Relation { relation, log_kow, log_kow_cell, .. } => {
+            let citation =
+                told.rules.relations.relations.get(*relation).map_or("", |line| line.citation.as_str());
             let log_kow = format_interval(*log_kow, crate::quantity::Unit::One);
-            format!(
-                "from log Kow {log_kow} in {log_kow_cell} by {}",
-                short_citation(citation)
-            )
+            format!("from log Kow {log_kow} in {log_kow_cell} by {}", short_citation(citation))
         }
     }
 }
@@ -133,11 +121,7 @@ pub(crate) fn test_clause(told: Told, test: &Test, judged: &TestJudgement) -> St
     let value = value_phrase(told, used);
     match &test.limit {
         Limit::Number { comparison, .. } => {
-            format!(
-                "{value} {} {}",
-                standing(*comparison, judged.outcome),
-                test.limit_text
-            )
+            format!("{value} {} {}", standing(*comparison, judged.outcome), test.limit_text)
         }
         Limit::Between { .. } | Limit::AnyOfWords(_) | Limit::Is(_) => {
             format!("{value} against {}", limit_phrase(test))
@@ -147,7 +131,9 @@ pub(crate) fn test_clause(told: Told, test: &Test, judged: &TestJudgement) -> St
 
 fn standing(comparison: Comparison, outcome: TestOutcome) -> &'static str {
     match (outcome, comparison) {
-        (TestOutcome::Fired, Comparison::Above) | (TestOutcome::Clear, Comparison::AtMost) => "is above the limit of",
+        (TestOutcome::Fired, Comparison::Above) | (TestOutcome::Clear, Comparison::AtMost) => {
+            "is above the limit of"
+        }
         (TestOutcome::Fired, Comparison::AtLeast) => "reaches the limit of",
         (TestOutcome::Fired, Comparison::Below) => "is below the limit of",
         (TestOutcome::Fired, Comparison::AtMost) | (TestOutcome::Clear, Comparison::Above) => {
@@ -203,17 +189,17 @@ fn answer_clause(told: Told, test: &Test, outcome: TestOutcome, answer: &Answer)
             )
         }
         Answer::Statement(code) => {
-            let cell = told
-                .substance
-                .hazard_statements
-                .as_ref()
-                .map(|statements| statements.cell.to_string());
+            let cell =
+                told.substance.hazard_statements.as_ref().map(|statements| statements.cell.to_string());
             format!("{} states {code}", cell.unwrap_or_default())
         }
         Answer::NoStatement => {
-            let cell = told.substance.hazard_statements.as_ref().map(|statements| statements.cell.to_string());
+            let cell =
+                told.substance.hazard_statements.as_ref().map(|statements| statements.cell.to_string());
             let unread = match outcome {
-                TestOutcome::Undecided | TestOutcome::Missing => ", but name a hazard class without its category",
+                TestOutcome::Undecided | TestOutcome::Missing => {
+                    ", but name a hazard class without its category"
+                }
                 TestOutcome::Clear | TestOutcome::Fired => "",
             };
             let codes = limit_phrase(test);
@@ -233,11 +219,7 @@ pub(crate) fn test_brief(told: Told, test: &Test, judged: &TestJudgement) -> Str
             }
         }
         (Some(Answer::Inherent(index)), _) => {
-            let reported = told
-                .substance
-                .inherent
-                .get(*index)
-                .map(|entry| entry.value.reported.clone());
+            let reported = told.substance.inherent.get(*index).map(|entry| entry.value.reported.clone());
             format!("inherent test {}", reported.unwrap_or_default())
         }
         (Some(Answer::Statement(code)), _) => format!("{code} stated"),
@@ -262,12 +244,14 @@ pub(crate) fn telling_tests<'run>(
     came_out: &'run StepJudgement,
 ) -> Vec<(&'run Test, &'run TestJudgement)> {
     let mut telling: Vec<(&Test, &TestJudgement)> = Vec::new();
-    let tests = came_out.by.iter().filter_map(|index| Some((rule.tests.get(*index)?, came_out.tests.get(*index)?)));
+    let tests =
+        came_out.by.iter().filter_map(|index| Some((rule.tests.get(*index)?, came_out.tests.get(*index)?)));
     for (test, judged) in tests {
-        let same_value = telling.iter_mut().find(|(_, known)| match (known.used.first(), judged.used.first()) {
-            (Some(known), Some(used)) => (known.property, known.index) == (used.property, used.index),
-            (None, _) | (_, None) => false,
-        });
+        let same_value =
+            telling.iter_mut().find(|(_, known)| match (known.used.first(), judged.used.first()) {
+                (Some(known), Some(used)) => (known.property, known.index) == (used.property, used.index),
+                (None, _) | (_, None) => false,
+            });
         match same_value {
             Some(known) => *known = (test, judged),
             None => telling.push((test, judged)),
@@ -306,10 +290,16 @@ mod tests {
         let table = [
             ("Mackay D (1982) Environ Sci Technol 16:274-278", "Mackay 1982"),
             ("Veith GD, Kosian P (1983) in a book", "Veith & Kosian 1983"),
-            ("Veith GD, DeFoe DL, Bergstedt BV (1979) J Fish Res Board Can 36:1040-1048", "Veith et al. 1979"),
+            (
+                "Veith GD, DeFoe DL, Bergstedt BV (1979) J Fish Res Board Can 36:1040-1048",
+                "Veith et al. 1979",
+            ),
             ("European Commission (2003) Technical Guidance Document", "European Commission 2003"),
             ("US EPA (1996) Soil Screening Guidance", "US EPA 1996"),
-            ("Verhaar HJM and others in European Commission (2003) Technical Guidance", "Verhaar et al. 2003"),
+            (
+                "Verhaar HJM and others in European Commission (2003) Technical Guidance",
+                "Verhaar et al. 2003",
+            ),
         ];
         for (citation, expected) in table {
             assert_eq!(short_citation(citation), expected);

@@ -42,10 +42,7 @@ pub struct Estimate {
 impl Relation {
     /// log10 of the target at a log Kow.
     pub fn log_value(&self, log_kow: f64) -> f64 {
-        self.coefficients
-            .iter()
-            .rev()
-            .fold(0.0, |sum, coefficient| sum * log_kow + coefficient)
+        self.coefficients.iter().rev().fold(0.0, |sum, coefficient| sum * log_kow + coefficient)
     }
 
     fn slope(&self, log_kow: f64) -> f64 {
@@ -55,11 +52,7 @@ impl Relation {
             weighted.push(power * coefficient);
             power += 1.0;
         }
-        weighted
-            .iter()
-            .skip(1)
-            .rev()
-            .fold(0.0, |sum, coefficient| sum * log_kow + coefficient)
+        weighted.iter().skip(1).rev().fold(0.0, |sum, coefficient| sum * log_kow + coefficient)
     }
 
     fn is_curved(&self) -> bool {
@@ -94,12 +87,7 @@ impl Relations {
     ///
     /// For a molar relation the caller adds the logarithm of the molar mass in mg/mmol.
     pub fn estimate(&self, to: Property, log_kow: LogKow, ionisation: Ionisation) -> Option<Estimate> {
-        let of_target = || {
-            self.relations
-                .iter()
-                .enumerate()
-                .filter(move |(_, relation)| relation.to == to)
-        };
+        let of_target = || self.relations.iter().enumerate().filter(move |(_, relation)| relation.to == to);
         let (leading, relation) = of_target()
             .find(|(_, relation)| relation.side == Side::Central && relation.holds_for(log_kow.interval))?;
         let log_value = match log_kow.interval.single() {
@@ -224,10 +212,7 @@ mod tests {
     }
 
     fn point(value: f64, sd: f64) -> LogKow {
-        LogKow {
-            interval: Interval::point(value).unwrap(),
-            sd: Some(sd),
-        }
+        LogKow { interval: Interval::point(value).unwrap(), sd: Some(sd) }
     }
 
     #[test]
@@ -242,34 +227,23 @@ mod tests {
 
     #[test]
     fn an_open_interval_gives_no_estimate() {
-        let open = LogKow {
-            interval: Interval::new(Bound::Excluded(6.0), Bound::Unbounded).unwrap(),
-            sd: None,
-        };
-        assert_eq!(
-            relations().estimate(Property::Bcf, open, Ionisation::Unknown),
-            None
-        );
+        let open =
+            LogKow { interval: Interval::new(Bound::Excluded(6.0), Bound::Unbounded).unwrap(), sd: None };
+        assert_eq!(relations().estimate(Property::Bcf, open, Ionisation::Unknown), None);
     }
 
     #[test]
     fn a_range_over_the_top_of_a_curve_reaches_the_top() {
-        let range = LogKow {
-            interval: Interval::new(Bound::Included(6.2), Bound::Included(7.5)).unwrap(),
-            sd: None,
-        };
-        let estimate = relations()
-            .estimate(Property::Bcf, range, Ionisation::Unknown)
-            .unwrap();
+        let range =
+            LogKow { interval: Interval::new(Bound::Included(6.2), Bound::Included(7.5)).unwrap(), sd: None };
+        let estimate = relations().estimate(Property::Bcf, range, Ionisation::Unknown).unwrap();
         // The parabola's maximum is -4.72 + 2.74^2 / (4 x 0.20) = 4.6645 at 6.85.
         assert!((estimate.log_value.high().number().unwrap() - 4.6645).abs() < 1e-4);
     }
 
     #[test]
     fn the_low_side_is_the_lowest_line_in_domain_less_its_error() {
-        let estimate = relations()
-            .estimate(Property::Bcf, point(4.0, 0.2), Ionisation::Unknown)
-            .unwrap();
+        let estimate = relations().estimate(Property::Bcf, point(4.0, 0.2), Ionisation::Unknown).unwrap();
         let (index, lowest) = estimate.low_side.unwrap();
         assert_eq!(index, 2);
         assert!((lowest - (0.39 * 4.0 + 0.5 - 0.4)).abs() < 1e-12);
@@ -286,21 +260,9 @@ mod tests {
             (4.0, 0.5, 0.180, 0.064),
         ];
         for (log_kow, sd, above_2000, above_5000) in cases {
-            let chance = |limit: f64| {
-                relations
-                    .chance_of_estimate(0, log_kow, sd, limit.log10())
-                    .unwrap()
-            };
-            assert!(
-                (chance(2000.0) - above_2000).abs() < 6e-4,
-                "{log_kow} {sd}: {}",
-                chance(2000.0)
-            );
-            assert!(
-                (chance(5000.0) - above_5000).abs() < 6e-4,
-                "{log_kow} {sd}: {}",
-                chance(5000.0)
-            );
+            let chance = |limit: f64| relations.chance_of_estimate(0, log_kow, sd, limit.log10()).unwrap();
+            assert!((chance(2000.0) - above_2000).abs() < 6e-4, "{log_kow} {sd}: {}", chance(2000.0));
+            assert!((chance(5000.0) - above_5000).abs() < 6e-4, "{log_kow} {sd}: {}", chance(5000.0));
         }
     }
 

@@ -8,11 +8,8 @@ use crate::rules::file::{Located, Section};
 use crate::rules::validate::{CHECKED, read_id, refuse_duplicate};
 use crate::substance::{Basis, Property};
 
-const SIDES: [(&str, Side); 3] = [
-    ("central", Side::Central),
-    ("class", Side::Class),
-    ("ionised", Side::Ionised),
-];
+const SIDES: [(&str, Side); 3] =
+    [("central", Side::Central), ("class", Side::Class), ("ionised", Side::Ionised)];
 
 /// The checked relations of a file, in order.
 pub(crate) fn read_relations(source: &RuleSource) -> Result<Relations, RuleFaults> {
@@ -28,10 +25,7 @@ pub(crate) fn read_relations(source: &RuleSource) -> Result<Relations, RuleFault
                 relations.push(relation);
             }
         }
-        Some(Relations {
-            relations,
-            default_sds: read_default_sds(file),
-        })
+        Some(Relations { relations, default_sds: read_default_sds(file) })
     })
 }
 
@@ -104,9 +98,7 @@ fn read_domain(section: &Section<'_>) -> Option<Interval> {
     let high = read_end(section, at_most, below, "at-most = 6")?;
     let domain = Interval::new(low, high);
     if domain.is_err() {
-        let span = ["at-most", "below"]
-            .into_iter()
-            .find_map(|key| section.key_span(key));
+        let span = ["at-most", "below"].into_iter().find_map(|key| section.key_span(key));
         section.report(span.unwrap_or(section.span()), RuleMistake::ReversedRange);
     }
     domain.ok()
@@ -127,11 +119,7 @@ fn read_end(
         }
         (Some(_), Some(second)) => {
             let belongs = "where the other end of the domain is not given already";
-            let key = if example.starts_with("at-least") {
-                "above"
-            } else {
-                "below"
-            };
+            let key = if example.starts_with("at-least") { "above" } else { "below" };
             section.report(second.span, RuleMistake::OutOfPlace { key, belongs });
             None
         }
@@ -141,10 +129,8 @@ fn read_end(
 fn read_sd(section: &Section<'_>) -> Option<f64> {
     let sd = section.number("sd")?;
     if sd.value < 0.0 {
-        let mistake = RuleMistake::Impossible {
-            found: sd.value.to_string(),
-            property: "a standard deviation",
-        };
+        let mistake =
+            RuleMistake::Impossible { found: sd.value.to_string(), property: "a standard deviation" };
         section.report(sd.span, mistake);
     }
     Some(sd.value)
@@ -167,10 +153,8 @@ fn read_default_sd(section: &Section<'_>) -> Option<DefaultSd> {
     section.need("property = \"bcf\"");
     section.need("sd = 0.3");
     section.need("source = \"assumed\"");
-    let mut names: Vec<(&str, &str)> = Property::ALL
-        .iter()
-        .map(|property| (property.id(), property.id()))
-        .collect();
+    let mut names: Vec<(&str, &str)> =
+        Property::ALL.iter().map(|property| (property.id(), property.id())).collect();
     names.extend([("half-life", "half-life"), ("any", "any")]);
     let property = section.word("property", &names);
     let bases = section.words("basis", &Basis::ALL.map(|basis| (basis.word(), basis)));

@@ -21,20 +21,12 @@ pub struct AddedColumns {
     pub folded: Vec<(usize, usize)>,
 }
 
-const ASSESSOR: [(&str, f64); 4] = [
-    ("Assessor verdict", 18.0),
-    ("Assessor reason", 30.0),
-    ("Assessor", 14.0),
-    ("Assessed on", 12.0),
-];
+const ASSESSOR: [(&str, f64); 4] =
+    [("Assessor verdict", 18.0), ("Assessor reason", 30.0), ("Assessor", 14.0), ("Assessed on", 12.0)];
 
 /// Lays out the added columns for a rule set, beside headers that the user already has.
 pub fn added_columns(rules: &RuleSet, taken: &[String]) -> AddedColumns {
-    let mut added = AddedColumns {
-        headers: Vec::new(),
-        widths: Vec::new(),
-        folded: Vec::new(),
-    };
+    let mut added = AddedColumns { headers: Vec::new(), widths: Vec::new(), folded: Vec::new() };
     let mut push = |header: String, width: f64| {
         added.headers.push(free_header(header, taken));
         added.widths.push(width);
@@ -47,9 +39,8 @@ pub fn added_columns(rules: &RuleSet, taken: &[String]) -> AddedColumns {
     for rulebook in &rules.rulebooks {
         push(rulebook.short.clone(), headline_width(rulebook));
         push(format!("{} why", rulebook.short), 60.0);
-        let places: Vec<usize> = parts(rulebook)
-            .map(|id| push(format!("{} {id}", rulebook.short), 20.0))
-            .collect();
+        let places: Vec<usize> =
+            parts(rulebook).map(|id| push(format!("{} {id}", rulebook.short), 20.0)).collect();
         folded.extend(places.first().copied().zip(places.last().copied()));
     }
     push("Cautions".into(), 70.0);
@@ -68,23 +59,21 @@ fn headline_width(rulebook: &Rulebook) -> f64 {
 
 fn parts(rulebook: &Rulebook) -> impl Iterator<Item = &str> {
     let criteria = rulebook.criteria.iter().map(|criterion| criterion.id.as_str());
-    criteria.chain(
-        rulebook
-            .designations
-            .iter()
-            .map(|designation| designation.id.as_str()),
-    )
+    criteria.chain(rulebook.designations.iter().map(|designation| designation.id.as_str()))
 }
 
 fn free_header(header: String, taken: &[String]) -> String {
-    if taken
-        .iter()
-        .any(|other| other.trim().eq_ignore_ascii_case(&header))
-    {
-        format!("{header} (screened)")
-    } else {
-        header
+    let is_taken = |header: &str| taken.iter().any(|other| other.trim().eq_ignore_ascii_case(header));
+    if !is_taken(&header) {
+        return header;
     }
+    let mut free = format!("{header} (screened)");
+    let mut number = 2_u32;
+    while is_taken(&free) {
+        free = format!("{header} (screened {number})");
+        number = number.saturating_add(1);
+    }
+    free
 }
 
 /// The added cells of one row, in the order of the headers.
@@ -102,10 +91,7 @@ pub fn added_entries(told: Told, faults: &[CellFault]) -> Vec<Entry> {
         entries.push(Entry::text(headline(book), Look::Verdict(headline_shade(book))));
         entries.push(Entry::text(why(book), Look::Wrapped));
         entries.extend(book.criteria().map(|(criterion, judged)| {
-            Entry::text(
-                verdict_text(criterion, judged),
-                Look::Verdict(shade(judged.verdict)),
-            )
+            Entry::text(verdict_text(criterion, judged), Look::Verdict(shade(judged.verdict)))
         }));
         entries.extend(book.judged.designations.iter().map(|judged| {
             let words = with_closeness(judged.verdict, judged.closeness);

@@ -60,16 +60,10 @@ pub fn reasoning_entries(told: Told, mode: ReasoningMode) -> Vec<Vec<Entry>> {
                 Entry::text(substance.sheet.to_string(), Look::Text),
                 Entry::number(Some(f64::from(substance.row + 1)), Look::Text),
                 Entry::text(
-                    substance
-                        .cas
-                        .as_ref()
-                        .map_or(String::new(), |cas| cas.value.to_string()),
+                    substance.cas.as_ref().map_or(String::new(), |cas| cas.value.to_string()),
                     Look::Text,
                 ),
-                Entry::text(
-                    substance.name.as_ref().map_or("", |name| name.value.as_str()),
-                    Look::Text,
-                ),
+                Entry::text(substance.name.as_ref().map_or("", |name| name.value.as_str()), Look::Text),
                 Entry::text(book.rulebook.short.as_str(), Look::Text),
                 Entry::text(criterion.id.as_str(), Look::Text),
                 Entry::text(line.verdict, Look::Verdict(shade(judged.verdict))),

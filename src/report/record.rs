@@ -18,20 +18,13 @@ const CHARACTERS_A_CELL: usize = 30_000;
 pub fn record_head(rules: &RuleSet, spans: &[(String, u32, u16, Vec<String>)]) -> Vec<Vec<Entry>> {
     let text = |text: &str| Entry::text(text, Look::Text);
     let mut rows = vec![
-        vec![
-            text("format"),
-            Entry::number(Some(f64::from(RECORD_FORMAT)), Look::Text),
-        ],
+        vec![text("format"), Entry::number(Some(f64::from(RECORD_FORMAT)), Look::Text)],
         vec![text("version"), text(env!("CARGO_PKG_VERSION"))],
     ];
     for rule in &rules.texts {
         let characters: Vec<char> = rule.text.chars().collect();
         let mut row = vec![text("rules"), text(&rule.name)];
-        row.extend(
-            characters
-                .chunks(CHARACTERS_A_CELL)
-                .map(|chunk| text(&chunk.iter().collect::<String>())),
-        );
+        row.extend(characters.chunks(CHARACTERS_A_CELL).map(|chunk| text(&chunk.iter().collect::<String>())));
         rows.push(row);
     }
     for (sheet, header_row, first_column, headers) in spans {
@@ -68,12 +61,7 @@ fn values(told: Told) -> String {
     let mut text = String::new();
     for evidence in told.evidence.iter() {
         let value = format_interval(evidence.interval, Unit::One);
-        let _ = writeln!(
-            text,
-            "{}\t{value}\t{}",
-            evidence.property.id(),
-            evidence.basis.word()
-        );
+        let _ = writeln!(text, "{}\t{value}\t{}", evidence.property.id(), evidence.basis.word());
     }
     text
 }
@@ -82,13 +70,8 @@ fn verdicts(told: Told) -> String {
     let mut text = String::new();
     for book in told.books() {
         for (criterion, judged) in book.criteria() {
-            let _ = writeln!(
-                text,
-                "{}\t{}\t{}",
-                book.rulebook.id,
-                criterion.id,
-                verdict_text(criterion, judged)
-            );
+            let _ =
+                writeln!(text, "{}\t{}\t{}", book.rulebook.id, criterion.id, verdict_text(criterion, judged));
         }
         for (designation, judged) in book.rulebook.designations.iter().zip(&book.judged.designations) {
             let words = with_closeness(judged.verdict, judged.closeness);

@@ -27,23 +27,13 @@ const COLUMNS: [(&str, f64); 12] = [
 
 /// Lays out the Rulebooks sheet.
 pub fn rulebooks_table(rules: &RuleSet) -> Table {
-    let mut rows = vec![
-        COLUMNS
-            .iter()
-            .map(|(header, _)| Entry::text(*header, Look::Header))
-            .collect(),
-    ];
+    let mut rows = vec![COLUMNS.iter().map(|(header, _)| Entry::text(*header, Look::Header)).collect()];
     for rulebook in &rules.rulebooks {
         rows.push(heading(rulebook));
         for criterion in &rulebook.criteria {
             rows.extend(criterion_rows(rulebook, criterion));
         }
-        rows.extend(
-            rulebook
-                .designations
-                .iter()
-                .map(|designation| designation_row(rulebook, designation)),
-        );
+        rows.extend(rulebook.designations.iter().map(|designation| designation_row(rulebook, designation)));
     }
     Table {
         name: "Rulebooks",
@@ -70,10 +60,7 @@ fn heading(rulebook: &Rulebook) -> Vec<Entry> {
         ));
     }
     if let Some(limit) = rulebook.mixture_limit {
-        remarks.push(format!(
-            "In a mixture a component counts from {} %.",
-            format_number(limit)
-        ));
+        remarks.push(format!("In a mixture a component counts from {} %.", format_number(limit)));
     }
     if rulebook.strongest != Weight::Definitive {
         remarks.push(
@@ -124,10 +111,7 @@ fn criterion_rows(rulebook: &Rulebook, criterion: &Criterion) -> Vec<Vec<Entry>>
 }
 
 fn lead(rulebook: &Rulebook, criterion: &Criterion) -> Vec<Entry> {
-    vec![
-        Entry::text(rulebook.short.as_str(), Look::Text),
-        Entry::text(criterion.id.as_str(), Look::Text),
-    ]
+    vec![Entry::text(rulebook.short.as_str(), Look::Text), Entry::text(criterion.id.as_str(), Look::Text)]
 }
 
 fn test_entries(rulebook: &Rulebook, test: &Test, limit: String) -> Vec<Entry> {
@@ -193,14 +177,12 @@ fn designation_row(rulebook: &Rulebook, designation: &Designation) -> Vec<Entry>
         .parts
         .iter()
         .filter_map(|part| match *part {
-            DesignationPart::Criterion(index) => rulebook
-                .criteria
-                .get(index)
-                .map(|criterion| criterion.id.as_str()),
-            DesignationPart::Designation(index) => rulebook
-                .designations
-                .get(index)
-                .map(|designation| designation.id.as_str()),
+            DesignationPart::Criterion(index) => {
+                rulebook.criteria.get(index).map(|criterion| criterion.id.as_str())
+            }
+            DesignationPart::Designation(index) => {
+                rulebook.designations.get(index).map(|designation| designation.id.as_str())
+            }
         })
         .collect();
     let joined = match designation.combine {

@@ -47,43 +47,23 @@ pub struct SheetFacts {
 /// Lays out the Run record.
 pub fn run_record_table(facts: &RunFacts, rules: &RuleSet) -> Table {
     let mut rows = vec![title("Run record")];
-    rows.push(pair(
-        "Screened with",
-        format!("kowledger {}", env!("CARGO_PKG_VERSION")),
-    ));
+    rows.push(pair("Screened with", format!("kowledger {}", env!("CARGO_PKG_VERSION"))));
     rows.push(pair("Date of the run", facts.date.to_string()));
     rows.push(pair("Inventory", facts.inventory.clone()));
     rows.push(pair("SHA-256 of the inventory", facts.fingerprint.clone()));
-    rows.extend(
-        facts
-            .options
-            .iter()
-            .map(|(name, value)| pair(name, value.clone())),
-    );
+    rows.extend(facts.options.iter().map(|(name, value)| pair(name, value.clone())));
     rows.push(pair("Reasoning sheet", facts.reasoning.clone()));
     rows.push(title("Cautions of use"));
-    rows.extend(
-        CAUTIONS_OF_USE
-            .iter()
-            .map(|sentence| pair("", (*sentence).to_owned())),
-    );
+    rows.extend(CAUTIONS_OF_USE.iter().map(|sentence| pair("", (*sentence).to_owned())));
     rows.push(title("Rulebooks applied"));
     rows.extend(rules.rulebooks.iter().map(|rulebook| {
         pair(
             &rulebook.short,
-            format!(
-                "{} — {}, edition {}",
-                rulebook.title, rulebook.source, rulebook.edition
-            ),
+            format!("{} — {}, edition {}", rulebook.title, rulebook.source, rulebook.edition),
         )
     }));
     rows.push(title("SHA-256 of the rule files"));
-    rows.extend(
-        facts
-            .rule_fingerprints
-            .iter()
-            .map(|(name, hash)| pair(name, hash.clone())),
-    );
+    rows.extend(facts.rule_fingerprints.iter().map(|(name, hash)| pair(name, hash.clone())));
     for sheet in &facts.sheets {
         rows.extend(sheet_rows(sheet));
     }
@@ -95,12 +75,7 @@ pub fn run_record_table(facts: &RunFacts, rules: &RuleSet) -> Table {
     rows.extend(fault_rows(facts));
     rows.push(title("Lists not consulted"));
     rows.push(pair("", lists_not_consulted(rules)));
-    Table {
-        name: "Run record",
-        widths: vec![40.0, 120.0],
-        frozen_rows: 0,
-        rows,
-    }
+    Table { name: "Run record", widths: vec![40.0, 120.0], frozen_rows: 0, rows }
 }
 
 fn lists_not_consulted(rules: &RuleSet) -> String {
@@ -113,10 +88,7 @@ fn lists_not_consulted(rules: &RuleSet) -> String {
     let consulted = if lists.is_empty() {
         "No list of named substances was consulted".to_owned()
     } else {
-        format!(
-            "Only these lists of named substances were consulted: {}",
-            lists.join(", ")
-        )
+        format!("Only these lists of named substances were consulted: {}", lists.join(", "))
     };
     format!(
         "{consulted}. Candidate and authorisation lists, annexes of treaties, harmonised classifications and national inventories have to be looked up separately."
@@ -135,7 +107,9 @@ fn sheet_rows(sheet: &SheetFacts) -> Vec<Vec<Entry>> {
         let unit = match (column.unit, column.field.default_unit()) {
             (Some(unit), _) if unit.symbol().is_empty() => String::new(),
             (Some(unit), _) => format!("; unit of the header: {}", unit.symbol()),
-            (None, Some(unit)) if !unit.symbol().is_empty() => format!("; {} where a cell names no unit", unit.symbol()),
+            (None, Some(unit)) if !unit.symbol().is_empty() => {
+                format!("; {} where a cell names no unit", unit.symbol())
+            }
             (None, Some(_) | None) => String::new(),
         };
         rows.push(pair(
@@ -144,32 +118,18 @@ fn sheet_rows(sheet: &SheetFacts) -> Vec<Vec<Entry>> {
         ));
     }
     rows.extend(recognised.unknown.iter().map(|(index, header)| {
-        pair(
-            &format!("{} {header}", column_letters(*index)),
-            "not recognised; carried along only".to_owned(),
-        )
+        pair(&format!("{} {header}", column_letters(*index)), "not recognised; carried along only".to_owned())
     }));
-    rows.extend(
-        recognised
-            .remarks
-            .iter()
-            .map(|remark| pair("Remark", remark.clone())),
-    );
+    rows.extend(recognised.remarks.iter().map(|remark| pair("Remark", remark.clone())));
     rows
 }
 
 fn fault_rows(facts: &RunFacts) -> Vec<Vec<Entry>> {
-    let mut rows = vec![title(&format!(
-        "Cells that could not be read: {}",
-        facts.fault_total
-    ))];
+    let mut rows = vec![title(&format!("Cells that could not be read: {}", facts.fault_total))];
     rows.extend(facts.faults.iter().map(|fault| pair("", fault.clone())));
     if facts.fault_total > facts.faults.len() {
         let rest = facts.fault_total - facts.faults.len();
-        rows.push(pair(
-            "",
-            format!("and {rest} more; each stands in the Cautions cell of its row"),
-        ));
+        rows.push(pair("", format!("and {rest} more; each stands in the Cautions cell of its row")));
     }
     rows
 }

@@ -1,18 +1,9 @@
 //! The rule files that are part of the program.
 
 pub(super) const BUILT_IN: [(&str, &str); 4] = [
-    (
-        "eu-reach-pbt",
-        include_str!("../../rules/rulebooks/eu-reach-pbt.toml"),
-    ),
-    (
-        "eu-clp-pbt-pmt",
-        include_str!("../../rules/rulebooks/eu-clp-pbt-pmt.toml"),
-    ),
-    (
-        "un-stockholm-annex-d",
-        include_str!("../../rules/rulebooks/un-stockholm-annex-d.toml"),
-    ),
+    ("eu-reach-pbt", include_str!("../../rules/rulebooks/eu-reach-pbt.toml")),
+    ("eu-clp-pbt-pmt", include_str!("../../rules/rulebooks/eu-clp-pbt-pmt.toml")),
+    ("un-stockholm-annex-d", include_str!("../../rules/rulebooks/un-stockholm-annex-d.toml")),
     (
         "ca-persistence-bioaccumulation",
         include_str!("../../rules/rulebooks/ca-persistence-bioaccumulation.toml"),

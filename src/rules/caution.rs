@@ -66,18 +66,10 @@ impl Caution {
     pub fn is_raised_by(&self, substance: &Substance) -> Option<String> {
         let triggers = &self.triggers;
         self.stated_type(substance)
-            .or_else(|| {
-                triggers
-                    .row_types
-                    .contains(&substance.row_type)
-                    .then(|| row_reason(substance))
-            })
+            .or_else(|| triggers.row_types.contains(&substance.row_type).then(|| row_reason(substance)))
             .or_else(|| {
                 let identity = substance.identity;
-                triggers
-                    .identities
-                    .contains(&identity)
-                    .then(|| identity_reason(identity))
+                triggers.identities.contains(&identity).then(|| identity_reason(identity))
             })
             .or_else(|| triggers.name_reason(substance))
             .or_else(|| triggers.formula_reason(substance))
@@ -98,10 +90,7 @@ impl Triggers {
     fn name_reason(&self, substance: &Substance) -> Option<String> {
         let name = substance.name.as_ref()?.value.trim();
         let found = self.name_pattern.as_ref()?.find(name)?;
-        let excepted = self
-            .unless_name
-            .as_ref()
-            .is_some_and(|unless| unless.is_match(name));
+        let excepted = self.unless_name.as_ref().is_some_and(|unless| unless.is_match(name));
         (!excepted).then(|| format!("the name holds `{}`", found.as_str().trim()))
     }
 
@@ -136,11 +125,7 @@ impl Triggers {
         let (property, reading) = acid
             .map(|reading| (Property::PkaAcid, reading))
             .or_else(|| base.map(|reading| (Property::PkaBase, reading)))?;
-        Some(format!(
-            "the {} is {}",
-            property.title(),
-            reading.quantity.reported
-        ))
+        Some(format!("the {} is {}", property.title(), reading.quantity.reported))
     }
 }
 

@@ -30,10 +30,7 @@ pub struct RuleSource {
 impl RuleSource {
     /// A file that is part of the program.
     pub fn built_in(id: &str, text: &str) -> Self {
-        Self {
-            name: format!("built in: {id}"),
-            text: text.into(),
-        }
+        Self { name: format!("built in: {id}"), text: text.into() }
     }
 
     /// Reads a file; refused if it cannot be read or is not UTF-8.
@@ -43,16 +40,12 @@ impl RuleSource {
         let bytes = std::fs::read(path).map_err(|error| {
             fault(match error.kind() {
                 std::io::ErrorKind::NotFound => RuleMistake::NoSuchFile,
-                _ => RuleMistake::Unreadable {
-                    reason: error.to_string(),
-                },
+                _ => RuleMistake::Unreadable { reason: error.to_string() },
             })
         })?;
         let text = String::from_utf8(bytes).map_err(|error| {
             let valid = error.as_bytes().iter().take(error.utf8_error().valid_up_to());
-            fault(RuleMistake::NotUtf8 {
-                line: 1 + valid.filter(|byte| **byte == b'\n').count(),
-            })
+            fault(RuleMistake::NotUtf8 { line: 1 + valid.filter(|byte| **byte == b'\n').count() })
         })?;
         let text = text.strip_prefix('\u{feff}').unwrap_or(&text).into();
         Ok(Self { name, text })
@@ -113,10 +106,7 @@ pub(crate) struct FaultList {
 
 impl FaultList {
     fn new(source: &RuleSource) -> Self {
-        Self {
-            source: source.clone(),
-            faults: RefCell::new(Vec::new()),
-        }
+        Self { source: source.clone(), faults: RefCell::new(Vec::new()) }
     }
 
     pub(crate) fn report(&self, span: Range<usize>, mistake: RuleMistake) {

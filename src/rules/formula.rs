@@ -14,9 +14,8 @@ const ELEMENTS: &str = " H He Li Be B C N O F Ne Na Mg Al Si P S Cl Ar K Ca Sc T
 const NOT_METALS: &str = " H He B C N O F Ne Si P S Cl Ar As Se Br Kr Te I Xe At Rn ";
 
 /// Formulas in capitals alone that are substances and no words.
-const CAPITALS: [&str; 15] = [
-    "HF", "KF", "FK", "KI", "IK", "HI", "KH", "KOH", "HKO", "KCN", "CKN", "HCN", "CHN", "CKNS", "KSCN",
-];
+const CAPITALS: [&str; 15] =
+    ["HF", "KF", "FK", "KI", "IK", "HI", "KH", "KOH", "HKO", "KCN", "CKN", "HCN", "CHN", "CKNS", "KSCN"];
 
 /// A symbol and the number written behind it.
 type Atom<'formula> = (&'formula str, u32);
@@ -37,11 +36,8 @@ pub(super) fn is_inorganic(formula: &str) -> bool {
     }
     let count = |symbol: &str| counts.get(symbol).copied().unwrap_or(0);
     let has_metal = counts.keys().any(|symbol| !is_in(NOT_METALS, symbol));
-    let only = |allowed: &[&str]| {
-        counts
-            .keys()
-            .all(|symbol| allowed.contains(symbol) || !is_in(NOT_METALS, symbol))
-    };
+    let only =
+        |allowed: &[&str]| counts.keys().all(|symbol| allowed.contains(symbol) || !is_in(NOT_METALS, symbol));
     let (carbon, hydrogen, nitrogen, oxygen) = (count("C"), count("H"), count("N"), count("O"));
     if carbon == 0 {
         return !atoms.is_empty();
@@ -96,11 +92,7 @@ fn read_atoms(formula: &str) -> Option<Vec<Atom<'_>>> {
         let length = if first.is_ascii_uppercase() {
             let symbol = symbol_at(rest)?;
             let digits = digits_at(rest.get(symbol.len()..)?);
-            let count = if digits.is_empty() {
-                1
-            } else {
-                digits.parse().ok()?
-            };
+            let count = if digits.is_empty() { 1 } else { digits.parse().ok()? };
             atoms.push((symbol, count));
             symbol.len() + digits.len()
         } else if "()[]·•.*⋅+-– ".contains(first) || first.is_ascii_digit() {
@@ -114,16 +106,11 @@ fn read_atoms(formula: &str) -> Option<Vec<Atom<'_>>> {
 }
 
 fn symbol_at(text: &str) -> Option<&str> {
-    [2, 1]
-        .into_iter()
-        .filter_map(|length| text.get(..length))
-        .find(|symbol| is_in(ELEMENTS, symbol))
+    [2, 1].into_iter().filter_map(|length| text.get(..length)).find(|symbol| is_in(ELEMENTS, symbol))
 }
 
 fn digits_at(text: &str) -> &str {
-    let end = text
-        .find(|letter: char| !letter.is_ascii_digit())
-        .unwrap_or(text.len());
+    let end = text.find(|letter: char| !letter.is_ascii_digit()).unwrap_or(text.len());
     text.get(..end).unwrap_or("")
 }
 

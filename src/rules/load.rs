@@ -50,12 +50,7 @@ impl RuleSources {
             } else if choice == "all" {
                 sources.add_all_built_in()?;
             } else if path.is_dir() {
-                faults.extend(
-                    sources
-                        .add_folder(path)
-                        .err()
-                        .map_or_else(Vec::new, |found| found.0),
-                );
+                faults.extend(sources.add_folder(path).err().map_or_else(Vec::new, |found| found.0));
             } else if path.exists() || looks_like_a_path(choice) {
                 match RuleSource::read(path) {
                     Ok(source) => sources.add(source),
@@ -65,11 +60,7 @@ impl RuleSources {
                 return Err(unknown_rulebook(choice, &BUILT_IN.map(|(id, _)| id)));
             }
         }
-        if faults.is_empty() {
-            Ok(sources)
-        } else {
-            Err(RuleFaults(faults).into())
-        }
+        if faults.is_empty() { Ok(sources) } else { Err(RuleFaults(faults).into()) }
     }
 
     /// Adds a rulebook unless the same file is there already.
@@ -103,10 +94,7 @@ impl RuleSources {
         for file in files {
             self.add(RuleSource::read(&file)?);
         }
-        for (name, source) in [
-            (CAUTIONS_FILE, &mut self.cautions),
-            (RELATIONS_FILE, &mut self.relations),
-        ] {
+        for (name, source) in [(CAUTIONS_FILE, &mut self.cautions), (RELATIONS_FILE, &mut self.relations)] {
             let path = folder.join(name);
             if path.is_file() {
                 *source = RuleSource::read(&path)?;
@@ -123,12 +111,9 @@ impl RuleSources {
         let relations = read_relations(&self.relations).map_err(&mut keep).ok();
         let rulebooks = self.read_rulebooks(cautions.as_deref()).map_err(&mut keep).ok();
         match (rulebooks, cautions, relations) {
-            (Some(rulebooks), Some(cautions), Some(relations)) => Ok(RuleSet {
-                rulebooks,
-                cautions,
-                relations,
-                texts: self.texts(),
-            }),
+            (Some(rulebooks), Some(cautions), Some(relations)) => {
+                Ok(RuleSet { rulebooks, cautions, relations, texts: self.texts() })
+            }
             (None | Some(_), None | Some(_), None | Some(_)) => Err(RuleFaults(faults)),
         }
     }
@@ -156,21 +141,14 @@ impl RuleSources {
                 Err(found) => faults.extend(found.0),
             }
         }
-        if faults.is_empty() {
-            Ok(rulebooks)
-        } else {
-            Err(RuleFaults(faults))
-        }
+        if faults.is_empty() { Ok(rulebooks) } else { Err(RuleFaults(faults)) }
     }
 
     fn texts(&self) -> Vec<RuleText> {
         self.rulebooks
             .iter()
             .chain([&self.cautions, &self.relations])
-            .map(|source| RuleText {
-                name: source.short_name(),
-                text: source.text.to_string(),
-            })
+            .map(|source| RuleText { name: source.short_name(), text: source.text.to_string() })
             .collect()
     }
 }
@@ -195,11 +173,7 @@ fn taken_names(
         ];
         for (key, name, is_taken) in names {
             if is_taken {
-                let mistake = RuleMistake::NameTaken {
-                    key,
-                    name: name.clone(),
-                    other: (*owner).to_owned(),
-                };
+                let mistake = RuleMistake::NameTaken { key, name: name.clone(), other: (*owner).to_owned() };
                 faults.push(source.fault_at_head(key, mistake));
             }
         }
@@ -208,8 +182,7 @@ fn taken_names(
 }
 
 fn looks_like_a_path(choice: &str) -> bool {
-    let is_toml = Path::new(choice)
-        .extension()
-        .is_some_and(|extension| extension.eq_ignore_ascii_case("toml"));
+    let is_toml =
+        Path::new(choice).extension().is_some_and(|extension| extension.eq_ignore_ascii_case("toml"));
     is_toml || choice.contains(['/', '\\'])
 }

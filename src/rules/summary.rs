@@ -65,9 +65,7 @@ impl RuleSources {
     fn summaries(&self) -> Result<Vec<RulebookSummary>, RuleFaults> {
         let rule_set = self.load()?;
         let named = self.rulebooks.iter().zip(&rule_set.rulebooks);
-        Ok(named
-            .map(|(source, rulebook)| RulebookSummary::new(&source.name, rulebook))
-            .collect())
+        Ok(named.map(|(source, rulebook)| RulebookSummary::new(&source.name, rulebook)).collect())
     }
 }
 

@@ -18,11 +18,8 @@ use crate::rules::file::{Located, Scalar, Section};
 use crate::rules::{Checked, HalfLifeReference, RuleSource, Rulebook, Weight};
 use limit::{Measured, quantity};
 
-pub(crate) const CHECKED: [(&str, Checked); 3] = [
-    ("seen", Checked::Seen),
-    ("second-hand", Checked::SecondHand),
-    ("memory", Checked::Memory),
-];
+pub(crate) const CHECKED: [(&str, Checked); 3] =
+    [("seen", Checked::Seen), ("second-hand", Checked::SecondHand), ("memory", Checked::Memory)];
 
 /// The checked rulebook of a file. `caution_ids` are the cautions that `out-of-scope` may name.
 pub(crate) fn read_rulebook(source: &RuleSource, caution_ids: &[&str]) -> Result<Rulebook, RuleFaults> {
@@ -72,10 +69,7 @@ fn read_head(head: &Section<'_>, caution_ids: &[&str]) -> Option<Rulebook> {
         head.need(example);
     }
     let scope: Vec<(&str, &str)> = caution_ids.iter().map(|id| (*id, *id)).collect();
-    let strongest = [
-        ("definitive", Weight::Definitive),
-        ("screening", Weight::Screening),
-    ];
+    let strongest = [("definitive", Weight::Definitive), ("screening", Weight::Screening)];
     // Each is read before any is missed, so that all their faults are found.
     let (id, short) = (read_id(head), head.text("short"));
     let (title, source) = (head.text("title"), head.text("source"));
@@ -133,11 +127,7 @@ const TEMPERATURE: Measured = Measured::new("a temperature", Dimension::Temperat
 const ENERGY: Measured = Measured::new("an activation energy", Dimension::MolarEnergy);
 
 fn read_half_life_reference(head: &Section<'_>) -> Option<HalfLifeReference> {
-    const KEYS: [&str; 3] = [
-        "half-life-at",
-        "half-life-activation-energy",
-        "half-life-unstated-temperature",
-    ];
+    const KEYS: [&str; 3] = ["half-life-at", "half-life-activation-energy", "half-life-unstated-temperature"];
     if KEYS.iter().all(|key| head.key_span(key).is_none()) {
         return None;
     }

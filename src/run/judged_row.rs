@@ -41,11 +41,7 @@ pub(crate) fn judge_row(row: Row, sheet: &SheetPlan, reasoning: ReasoningMode, j
         return JudgedRow { row, added: None };
     };
     let holds_data = row.index >= screened.recognised.first_data_row
-        && screened
-            .recognised
-            .columns
-            .iter()
-            .any(|column| is_filled(&row, column.index));
+        && screened.recognised.columns.iter().any(|column| is_filled(&row, column.index));
     if !holds_data {
         return JudgedRow { row, added: None };
     }
@@ -53,12 +49,7 @@ pub(crate) fn judge_row(row: Row, sheet: &SheetPlan, reasoning: ReasoningMode, j
     let substance = screened.reader.read(&row);
     let evidence = gather_evidence(&substance, &rules.relations);
     let judgement = judge.judge(&substance, &evidence);
-    let told = Told {
-        substance: &substance,
-        evidence: &evidence,
-        rules,
-        judgement: &judgement,
-    };
+    let told = Told { substance: &substance, evidence: &evidence, rules, judgement: &judgement };
     let added = Added {
         entries: added_entries(told, &substance.faults),
         lines: reasoning_entries(told, reasoning),
@@ -67,18 +58,12 @@ pub(crate) fn judge_row(row: Row, sheet: &SheetPlan, reasoning: ReasoningMode, j
         reached: reached(rules, &judgement),
         faults: Vec::new(),
     };
-    JudgedRow {
-        row,
-        added: Some(Added {
-            faults: substance.faults,
-            ..added
-        }),
-    }
+    JudgedRow { row, added: Some(Added { faults: substance.faults, ..added }) }
 }
 
 fn is_filled(row: &Row, column: u16) -> bool {
     row.cell(column).is_some_and(|cell| match &cell.content {
-        CellContent::Empty => false,
+        CellContent::Empty => cell.formula,
         CellContent::Text(text) => !text.trim().is_empty(),
         CellContent::Number(_)
         | CellContent::Boolean(_)
@@ -93,15 +78,9 @@ fn reached(rules: &RuleSet, judgement: &Judgement) -> Vec<bool> {
     for (rulebook, judged) in rules.rulebooks.iter().zip(&judgement.rulebooks) {
         for (criterion, judged) in rulebook.criteria.iter().zip(&judged.criteria) {
             for (number, step) in criterion.steps.iter().enumerate() {
-                let tests = judged
-                    .steps
-                    .get(number)
-                    .map_or(&[][..], |step| step.tests.as_slice());
-                let found = |place: usize| {
-                    tests
-                        .get(place)
-                        .is_some_and(|test| test.outcome != TestOutcome::Missing)
-                };
+                let tests = judged.steps.get(number).map_or(&[][..], |step| step.tests.as_slice());
+                let found =
+                    |place: usize| tests.get(place).is_some_and(|test| test.outcome != TestOutcome::Missing);
                 reached.extend((0..step.tests.len()).map(found));
             }
         }

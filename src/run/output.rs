@@ -104,8 +104,7 @@ impl Output {
         };
         if index == screened.recognised.header_row {
             for (column, header) in (screened.first_added..).zip(&screened.added.headers) {
-                self.workbook
-                    .write(id, index, column, &Value::Text(header), Look::Header)?;
+                self.workbook.write(id, index, column, &Value::Text(header), Look::Header)?;
             }
         }
         if let Some(added) = row.added {
@@ -156,15 +155,9 @@ impl Output {
     fn write_record(&mut self, line: &[Entry]) -> Result<(), Refusal> {
         if self.record.next_row > LINES_A_SHEET {
             let part = self.record.part + 1;
-            let sheet = self
-                .workbook
-                .add_sheet(&format!("{} {part}", self.record.name), Visibility::VeryHidden)?;
-            self.record = SheetWriter {
-                name: self.record.name,
-                sheet,
-                next_row: 0,
-                part,
-            };
+            let sheet =
+                self.workbook.add_sheet(&format!("{} {part}", self.record.name), Visibility::VeryHidden)?;
+            self.record = SheetWriter { name: self.record.name, sheet, next_row: 0, part };
         }
         write_line(&mut self.workbook, &mut self.record, line)
     }
@@ -181,11 +174,7 @@ impl Output {
         let facts = self.facts(settings, inventory, plan, rules);
         write_table(&mut self.workbook, &run_record_table(&facts, rules))?;
         self.workbook.finish()?;
-        let copied = plan
-            .sheets
-            .iter()
-            .filter(|sheet| sheet.screened.is_none())
-            .count();
+        let copied = plan.sheets.iter().filter(|sheet| sheet.screened.is_none()).count();
         Ok(Summary {
             output: settings.output.clone(),
             screened: self.screened.iter().sum(),
@@ -211,10 +200,7 @@ impl Output {
         plan: &Plan,
         rules: &RuleSet,
     ) -> RunFacts {
-        let file_name = settings
-            .inventory
-            .file_name()
-            .map(|name| name.to_string_lossy().into_owned());
+        let file_name = settings.inventory.file_name().map(|name| name.to_string_lossy().into_owned());
         RunFacts {
             date: settings.date,
             inventory: file_name.unwrap_or_default(),
@@ -232,10 +218,7 @@ impl Output {
                 .map(|(sheet, screened)| SheetFacts {
                     name: sheet.name.to_string(),
                     screened: *screened,
-                    recognised: sheet
-                        .screened
-                        .as_ref()
-                        .map(|screened| screened.recognised.clone()),
+                    recognised: sheet.screened.as_ref().map(|screened| screened.recognised.clone()),
                     copied_because: sheet.copied_because.clone(),
                 })
                 .collect(),
@@ -260,10 +243,7 @@ fn options(settings: &ScreenSettings) -> Vec<(&'static str, String)> {
         UnstatedBasis::Unstated => "unstated (a rank of its own)",
         UnstatedBasis::Calculated => "calculated",
     };
-    options.push((
-        "Values without a word on how they were obtained count as",
-        unstated.to_owned(),
-    ));
+    options.push(("Values without a word on how they were obtained count as", unstated.to_owned()));
     if !settings.sheets.is_empty() {
         options.push(("Sheets named", settings.sheets.join(", ")));
     }
@@ -285,7 +265,9 @@ fn unreached(rules: &RuleSet, reached: &[bool]) -> Vec<String> {
     let tests = rules.rulebooks.iter().flat_map(|rulebook| {
         rulebook.criteria.iter().flat_map(move |criterion| {
             criterion.steps.iter().flat_map(move |step| {
-                step.tests.iter().map(move |test| (step.weight, test, format!("{} {}", rulebook.short, criterion.id)))
+                step.tests
+                    .iter()
+                    .map(move |test| (step.weight, test, format!("{} {}", rulebook.short, criterion.id)))
             })
         })
     });
@@ -307,12 +289,7 @@ fn unreached(rules: &RuleSet, reached: &[bool]) -> Vec<String> {
 fn span(sheet: &SheetPlan) -> Option<(String, u32, u16, Vec<String>)> {
     let screened = sheet.screened.as_ref()?;
     let headers = screened.added.headers.clone();
-    Some((
-        sheet.name.to_string(),
-        screened.recognised.header_row,
-        screened.first_added,
-        headers,
-    ))
+    Some((sheet.name.to_string(), screened.recognised.header_row, screened.first_added, headers))
 }
 
 fn lay_out_added(workbook: &mut AnnotatedWorkbook, id: SheetId, sheet: &SheetPlan) -> Result<(), FileFault> {
@@ -333,23 +310,14 @@ fn lay_out_added(workbook: &mut AnnotatedWorkbook, id: SheetId, sheet: &SheetPla
 
 fn new_reasoning_sheet(workbook: &mut AnnotatedWorkbook, part: u32) -> Result<SheetWriter, FileFault> {
     let name = "Reasoning";
-    let title = if part == 1 {
-        name.to_owned()
-    } else {
-        format!("{name} {part}")
-    };
+    let title = if part == 1 { name.to_owned() } else { format!("{name} {part}") };
     let sheet = workbook.add_sheet(&title, Visibility::Visible)?;
     for (column, (header, width)) in (0u16..).zip(REASONING_COLUMNS) {
         workbook.set_column_width(sheet, column, column, width)?;
         workbook.write(sheet, 0, column, &Value::Text(header), Look::Header)?;
     }
     workbook.freeze(sheet, 1, 0)?;
-    Ok(SheetWriter {
-        name,
-        sheet,
-        next_row: 1,
-        part,
-    })
+    Ok(SheetWriter { name, sheet, next_row: 1, part })
 }
 
 fn write_line(

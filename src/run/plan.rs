@@ -68,18 +68,16 @@ pub fn recognise_columns(
     let mut inventory = open_inventory(inventory)?;
     let words = ColumnWords::built_in().map_err(Refusal::Usage)?;
     let mut sheets = Vec::new();
-    let names: Vec<Arc<str>> = inventory
-        .sheets()
-        .iter()
-        .map(|sheet| sheet.name.clone())
-        .collect();
+    let names: Vec<Arc<str>> = inventory.sheets().iter().map(|sheet| sheet.name.clone()).collect();
     for (index, name) in names.iter().enumerate() {
         let first_rows = inventory.first_rows(index, ROWS_LOOKED_AT)?;
         let recognised = recognise(name, &first_rows, &words, overrides);
-        sheets.push(RecognisedSheet {
-            name: name.to_string(),
-            recognised,
-        });
+        sheets.push(RecognisedSheet { name: name.to_string(), recognised });
+    }
+    let recognised: Vec<&Recognised> =
+        sheets.iter().filter_map(|sheet: &RecognisedSheet| sheet.recognised.as_ref()).collect();
+    if !recognised.is_empty() {
+        refuse_idle_overrides(overrides, &recognised)?;
     }
     Ok(sheets)
 }
@@ -94,11 +92,7 @@ impl Plan {
         let words = ColumnWords::built_in().map_err(Refusal::Usage)?;
         let mut sheets = Vec::new();
         let mut lines = 0;
-        let lines_a_row: usize = rules
-            .rulebooks
-            .iter()
-            .map(|rulebook| rulebook.criteria.len())
-            .sum();
+        let lines_a_row: usize = rules.rulebooks.iter().map(|rulebook| rulebook.criteria.len()).sum();
         let surveys = inventory.sheets().to_vec();
         for (index, survey) in surveys.iter().enumerate() {
             let wanted =
@@ -113,17 +107,14 @@ impl Plan {
                 let first_rows = inventory.first_rows(index, ROWS_LOOKED_AT)?;
                 match recognise(&survey.name, &first_rows, &words, &settings.columns) {
                     Some(recognised) => {
-                        let taken = headers(&first_rows, recognised.header_row);
+                        let mut taken = headers(&first_rows, recognised.header_row);
+                        // Of a header of two rows, the names stand in the upper one.
+                        taken.extend(recognised.headers().map(str::to_owned));
                         let added = added_columns(rules, &taken);
                         let first_added = survey.used_columns;
                         refuse_overwide(&survey.name, first_added, added.headers.len())?;
                         let reader = RowReader::new(survey.name.clone(), &recognised, settings.unstated);
-                        sheet.screened = Some(Screened {
-                            recognised,
-                            reader,
-                            added,
-                            first_added,
-                        });
+                        sheet.screened = Some(Screened { recognised, reader, added, first_added });
                         lines += usize::try_from(survey.last_row)
                             .unwrap_or(usize::MAX)
                             .saturating_mul(lines_a_row);
@@ -140,6 +131,11 @@ impl Plan {
             }
             .into());
         }
+        let recognised: Vec<&Recognised> = sheets
+            .iter()
+            .filter_map(|sheet: &SheetPlan| Some(&sheet.screened.as_ref()?.recognised))
+            .collect();
+        refuse_idle_overrides(&settings.columns, &recognised)?;
         let reasoning = match settings.reasoning {
             ReasoningChoice::Always(mode) => mode,
             ReasoningChoice::Auto if lines <= LINES_IN_FULL => ReasoningMode::All,
@@ -149,7 +145,24 @@ impl Plan {
     }
 }
 
-const NO_HEADER: &str = "no header was recognised: a column for a CAS number, EC number or structure, or a name beside another known column";
+/// A `--column` that speaks of no column there is would be obeyed by doing nothing.
+fn refuse_idle_overrides(overrides: &[ColumnOverride], sheets: &[&Recognised]) -> Result<(), Refusal> {
+    for told in overrides {
+        if !sheets.iter().any(|sheet| sheet.has_column_of(told)) {
+            let headers = sheets.iter().flat_map(|sheet| sheet.headers());
+            let hint = nearest(&told.header, headers)
+                .map_or(String::new(), |header| format!(" Did you mean `{header}`?"));
+            return Err(Refusal::Usage(format!(
+                "--column: no sheet has a column with the header `{}`; write the header as it stands in the sheet \
+                 (`kowledger columns` lists them).{hint}",
+                told.header
+            )));
+        }
+    }
+    Ok(())
+}
+
+const NO_HEADER: &str = "no header was recognised within the first 30 rows that hold anything: a column for a CAS number, EC number or structure, or a name beside another known column";
 
 fn headers(first_rows: &[Row], header_row: u32) -> Vec<String> {
     first_rows
@@ -189,10 +202,5 @@ fn refuse_overwide(sheet: &str, first_added: u16, added: usize) -> Result<(), Re
     if usize::from(first_added) + added <= COLUMNS_A_SHEET {
         return Ok(());
     }
-    Err(FileFault::NoRoom {
-        sheet: sheet.to_owned(),
-        used: usize::from(first_added),
-        needed: added,
-    }
-    .into())
+    Err(FileFault::NoRoom { sheet: sheet.to_owned(), used: usize::from(first_added), needed: added }.into())
 }

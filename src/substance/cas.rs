@@ -44,15 +44,12 @@ impl CasNumber {
         let (Some(first), Some(second), Some(check), None) = (first, second, check, groups.next()) else {
             return Err(CasError::Form);
         };
-        let only_digits = [first, second, check]
-            .iter()
-            .all(|group| group.bytes().all(|byte| byte.is_ascii_digit()));
+        let only_digits =
+            [first, second, check].iter().all(|group| group.bytes().all(|byte| byte.is_ascii_digit()));
         if !only_digits || !(2..=7).contains(&first.len()) || second.len() != 2 || check.len() != 1 {
             return Err(CasError::Form);
         }
-        let digits = format!("{first}{second}{check}")
-            .parse()
-            .map_err(|_| CasError::Form)?;
+        let digits = format!("{first}{second}{check}").parse().map_err(|_| CasError::Form)?;
         Self::from_digits(digits)
     }
 }
@@ -70,13 +67,7 @@ fn check_digit(mut digits: u64) -> u8 {
 
 impl fmt::Display for CasNumber {
     fn fmt(&self, formatter: &mut fmt::Formatter<'_>) -> fmt::Result {
-        write!(
-            formatter,
-            "{}-{:02}-{}",
-            self.0 / 1000,
-            self.0 / 10 % 100,
-            self.0 % 10
-        )
+        write!(formatter, "{}-{:02}-{}", self.0 / 1000, self.0 / 10 % 100, self.0 % 10)
     }
 }
 
@@ -87,37 +78,19 @@ mod tests {
     #[test]
     fn well_known_numbers_are_read_and_written_the_same() {
         // DDT, water, hexachlorobenzene, DEHP, PFOA, 4-nonylphenol branched.
-        for text in [
-            "50-29-3",
-            "7732-18-5",
-            "118-74-1",
-            "117-81-7",
-            "335-67-1",
-            "84852-15-3",
-        ] {
+        for text in ["50-29-3", "7732-18-5", "118-74-1", "117-81-7", "335-67-1", "84852-15-3"] {
             assert_eq!(CasNumber::parse(text).unwrap().to_string(), text);
         }
     }
 
     #[test]
     fn a_wrong_check_digit_is_refused_with_the_right_one() {
-        assert_eq!(
-            CasNumber::parse("50-29-4"),
-            Err(CasError::CheckDigit { expected: 3 })
-        );
+        assert_eq!(CasNumber::parse("50-29-4"), Err(CasError::CheckDigit { expected: 3 }));
     }
 
     #[test]
     fn other_forms_are_refused() {
-        for text in [
-            "",
-            "50-29",
-            "5-29-3",
-            "50-2-93",
-            "12345678-12-1",
-            "a0-29-3",
-            "50-29-3-1",
-        ] {
+        for text in ["", "50-29", "5-29-3", "50-2-93", "12345678-12-1", "a0-29-3", "50-29-3-1"] {
             assert_eq!(CasNumber::parse(text), Err(CasError::Form), "{text}");
         }
     }

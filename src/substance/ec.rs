@@ -30,7 +30,8 @@ impl EcNumber {
     /// 4xx series were issued with check digit 1 (second-hand). Letters count A = 10, B = 11, ... without I, L and O.
     pub fn parse(text: &str) -> Result<Self, EcError> {
         let groups: Vec<&str> = text.split('-').collect();
-        let (3, [3, 3, 1]) = (groups.len(), [0, 1, 2].map(|place| groups.get(place).map_or(0, |group| group.len())))
+        let (3, [3, 3, 1]) =
+            (groups.len(), [0, 1, 2].map(|place| groups.get(place).map_or(0, |group| group.len())))
         else {
             return Err(EcError::Form);
         };
@@ -89,10 +90,7 @@ mod tests {
 
     #[test]
     fn a_wrong_check_digit_is_refused_with_the_right_one() {
-        assert_eq!(
-            EcNumber::parse("200-024-4"),
-            Err(EcError::CheckDigit { expected: 3 })
-        );
+        assert_eq!(EcNumber::parse("200-024-4"), Err(EcError::CheckDigit { expected: 3 }));
     }
 
     #[test]

@@ -122,9 +122,7 @@ impl Field {
 
     /// Every field.
     pub fn all() -> impl Iterator<Item = Self> {
-        Self::OTHERS
-            .into_iter()
-            .chain(Property::ALL.into_iter().map(Self::Property))
+        Self::OTHERS.into_iter().chain(Property::ALL.into_iter().map(Self::Property))
     }
 
     /// The name in `rules/columns.toml` and in `--column 'Header=field'`.
@@ -189,19 +187,12 @@ impl Field {
 
     /// The numeric property the column holds, if it holds one.
     pub fn property(self) -> Option<Property> {
-        if let Self::Property(property) = self {
-            Some(property)
-        } else {
-            None
-        }
+        if let Self::Property(property) = self { Some(property) } else { None }
     }
 
     /// Whether the column alone makes a sheet an inventory.
     pub fn identifies(self) -> bool {
-        matches!(
-            self,
-            Self::CasNumber | Self::EcNumber | Self::Smiles | Self::InchiKey
-        )
+        matches!(self, Self::CasNumber | Self::EcNumber | Self::Smiles | Self::InchiKey)
     }
 }
 

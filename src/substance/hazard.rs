@@ -24,18 +24,12 @@ pub enum Completeness {
 impl HazardStatements {
     /// The statements with these codes.
     pub fn new(codes: impl IntoIterator<Item = String>) -> Self {
-        Self {
-            codes: codes.into_iter().collect(),
-            completeness: Completeness::Complete,
-        }
+        Self { codes: codes.into_iter().collect(), completeness: Completeness::Complete }
     }
 
     /// The statements with these codes, of a cell that says more than could be read.
     pub fn incomplete(codes: impl IntoIterator<Item = String>) -> Self {
-        Self {
-            codes: codes.into_iter().collect(),
-            completeness: Completeness::Incomplete,
-        }
+        Self { codes: codes.into_iter().collect(), completeness: Completeness::Incomplete }
     }
 
     /// Whether a code that is not there is known not to be stated.

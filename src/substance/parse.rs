@@ -59,11 +59,7 @@ impl RowReader {
     pub fn new(sheet: Arc<str>, columns: &Recognised, unstated: UnstatedBasis) -> Self {
         let mut columns = columns.columns.clone();
         columns.sort_by_key(|column| column.field != Field::Property(Property::MolarMass));
-        Self {
-            sheet,
-            columns,
-            unstated,
-        }
+        Self { sheet, columns, unstated }
     }
 
     /// What the row says of its substance.

@@ -69,23 +69,13 @@ impl From<&Style> for Appearance {
             format = with_fill(format, fill);
         }
         if let Some(borders) = &style.borders {
-            format = with_borders(
-                format,
-                [&borders.left, &borders.right, &borders.top, &borders.bottom],
-            );
+            format = with_borders(format, [&borders.left, &borders.right, &borders.top, &borders.bottom]);
         }
         if let Some(alignment) = &style.alignment {
             format = with_alignment(format, alignment);
         }
-        let wraps = style
-            .alignment
-            .as_ref()
-            .is_some_and(|alignment| alignment.wrap_text);
-        Self {
-            format,
-            numbers,
-            lines: if wraps { Lines::Wrapped } else { Lines::One },
-        }
+        let wraps = style.alignment.as_ref().is_some_and(|alignment| alignment.wrap_text);
+        Self { format, numbers, lines: if wraps { Lines::Wrapped } else { Lines::One } }
     }
 }
 
@@ -99,10 +89,7 @@ fn number_format(number: Option<&NumberFormat>) -> (Format, Numbers) {
         Some(Ok(0)) => (format, Numbers::AsTyped),
         Some(Ok(built_in @ 1..=58)) => (format.set_num_format_index(built_in), Numbers::Formatted),
         _ if number.format_code == "General" => (format, Numbers::AsTyped),
-        _ => (
-            format.set_num_format(number.format_code.as_str()),
-            Numbers::Formatted,
-        ),
+        _ => (format.set_num_format(number.format_code.as_str()), Numbers::Formatted),
     }
 }
 

@@ -66,10 +66,6 @@ mod tests {
         let full = std::io::Error::from_raw_os_error(28);
         let words = full.to_string();
         let outcome: Result<(), String> = without_panic(|| panic!("could not write: {full:?}"));
-        assert_eq!(
-            outcome.map_err(|said| words.starts_with(&said)),
-            Err(true),
-            "{words}"
-        );
+        assert_eq!(outcome.map_err(|said| words.starts_with(&said)), Err(true), "{words}");
     }
 }

@@ -30,7 +30,7 @@ pub struct Cell {
     pub content: CellContent,
     /// How it looks, if it is formatted.
     pub style: Option<StyleId>,
-    /// It holds a formula, of which `content` is the last result.
+    /// It holds a formula, of which `content` is the last result; [`CellContent::Empty`] if none is stored.
     pub formula: bool,
 }
 
@@ -46,10 +46,7 @@ pub struct Row {
 impl Row {
     /// The cell in a column, if the row has one.
     pub fn cell(&self, column: u16) -> Option<&Cell> {
-        let position = self
-            .cells
-            .binary_search_by_key(&column, |cell| cell.column)
-            .ok()?;
+        let position = self.cells.binary_search_by_key(&column, |cell| cell.column).ok()?;
         self.cells.get(position)
     }
 }

@@ -49,14 +49,8 @@ struct Relation {
 /// Reads the workbook's own description of itself.
 pub(super) fn read_contents(package: &mut Package) -> Result<Contents, FileFault> {
     let main = main_part(package)?;
-    let (folder, file) = main
-        .rsplit_once('/')
-        .map_or(("", main.as_str()), |(folder, file)| (folder, file));
-    let folder = if folder.is_empty() {
-        String::new()
-    } else {
-        format!("{folder}/")
-    };
+    let (folder, file) = main.rsplit_once('/').map_or(("", main.as_str()), |(folder, file)| (folder, file));
+    let folder = if folder.is_empty() { String::new() } else { format!("{folder}/") };
     let relations = read_relations(package, &format!("{folder}_rels/{file}.rels"), Keyed::ById)?;
     refuse_unusual_places(package, &relations, &folder)?;
     let mut contents = Contents::default();
@@ -92,10 +86,7 @@ fn main_part(package: &mut Package) -> Result<String, FileFault> {
                 FileKind::Archive if package.has("xl/workbook.xml") => {
                     package.damaged("it does not say which part is the workbook")
                 }
-                found => FileFault::AnotherKind {
-                    path: package.path.clone(),
-                    found,
-                },
+                found => FileFault::AnotherKind { path: package.path.clone(), found },
             })
         }
     }
@@ -141,10 +132,7 @@ fn refuse_unusual_places(
     folder: &str,
 ) -> Result<(), FileFault> {
     for (ending, usual) in [("/sharedStrings", "sharedStrings.xml"), ("/styles", "styles.xml")] {
-        for relation in relations
-            .values()
-            .filter(|relation| relation.kind.ends_with(ending))
-        {
+        for relation in relations.values().filter(|relation| relation.kind.ends_with(ending)) {
             if !full_name(&relation.target, folder).eq_ignore_ascii_case(&format!("{folder}{usual}")) {
                 return Err(package.damaged(format!(
                     "its part `{}` stands where no spreadsheet program puts it",
@@ -157,9 +145,7 @@ fn refuse_unusual_places(
 }
 
 fn full_name(target: &str, folder: &str) -> String {
-    target
-        .strip_prefix('/')
-        .map_or_else(|| format!("{folder}{target}"), ToOwned::to_owned)
+    target.strip_prefix('/').map_or_else(|| format!("{folder}{target}"), ToOwned::to_owned)
 }
 
 fn read_sheet_list(
@@ -212,11 +198,7 @@ fn read_sheet_list(
             Some("veryHidden") => Visibility::VeryHidden,
             _ => Visibility::Visible,
         };
-        contents.sheets.push(SheetEntry {
-            name,
-            visibility,
-            part,
-        });
+        contents.sheets.push(SheetEntry { name, visibility, part });
     }
     Ok(())
 }
@@ -233,9 +215,8 @@ fn read_shared_texts(package: &mut Package, part: &str, contents: &mut Contents)
             match element.local_name().as_ref() {
                 // How often texts are used (`count`) may exceed their number, and nothing is reserved for it.
                 "sst" => {
-                    claimed = attribute(element, "uniqueCount")
-                        .and_then(|number| number.parse().ok())
-                        .unwrap_or(0);
+                    claimed =
+                        attribute(element, "uniqueCount").and_then(|number| number.parse().ok()).unwrap_or(0);
                 }
                 "si" => {
                     contents.shared_texts += 1;
@@ -256,10 +237,7 @@ fn read_shared_texts(package: &mut Package, part: &str, contents: &mut Contents)
     if found == Found::Yes && claimed > possible.max(contents.shared_texts) {
         return Err(FileFault::Damaged {
             path,
-            what: format!(
-                "it claims {claimed} different texts but stores {}",
-                contents.shared_texts
-            ),
+            what: format!("it claims {claimed} different texts but stores {}", contents.shared_texts),
         });
     }
     Ok(())
@@ -270,10 +248,7 @@ fn count_style_records(package: &mut Package, part: &str) -> Result<(), FileFaul
     let path = package.path.clone();
     package.read_xml(part, |event| {
         if let Event::Start(element) = event
-            && matches!(
-                element.local_name().as_ref(),
-                "xf" | "font" | "fill" | "border" | "numFmt"
-            )
+            && matches!(element.local_name().as_ref(), "xf" | "font" | "fill" | "border" | "numFmt")
         {
             records += 1;
             if records > MOST_STYLE_RECORDS {

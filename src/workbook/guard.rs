@@ -30,10 +30,7 @@ pub(super) fn open_container(path: &Path) -> Result<File, FileFault> {
         return Err(FileFault::Folder { path: shown });
     }
     if !details.is_file() {
-        return Err(FileFault::Unreadable {
-            path: shown,
-            reason: "it is not a regular file".to_owned(),
-        });
+        return Err(FileFault::Unreadable { path: shown, reason: "it is not a regular file".to_owned() });
     }
     let mut file = File::open(path).map_err(unreadable)?;
     match kind_by_content(&mut file).map_err(unreadable)? {
@@ -105,14 +102,9 @@ fn kind_of_flat_file(beginning: &[u8]) -> FileKind {
 fn text_of(beginning: &[u8]) -> Option<String> {
     let wide = beginning.starts_with(&[0xFF, 0xFE]) || beginning.starts_with(&[0xFE, 0xFF]);
     // Telling the kind of a text needs its ASCII letters only.
-    let letters: Vec<u8> = beginning
-        .iter()
-        .copied()
-        .filter(|byte| !wide || (*byte != 0 && *byte < 0xFE))
-        .collect();
-    let control = letters
-        .iter()
-        .any(|byte| *byte < 0x20 && !matches!(byte, b'\t' | b'\n' | b'\r' | 0x0C));
+    let letters: Vec<u8> =
+        beginning.iter().copied().filter(|byte| !wide || (*byte != 0 && *byte < 0xFE)).collect();
+    let control = letters.iter().any(|byte| *byte < 0x20 && !matches!(byte, b'\t' | b'\n' | b'\r' | 0x0C));
     (!control).then(|| String::from_utf8_lossy(&letters).to_lowercase())
 }
 

@@ -99,10 +99,7 @@ impl Looks {
             wrapped: top().set_text_wrap(),
             number: top().set_align(FormatAlign::Right),
             two_decimals: top().set_align(FormatAlign::Right).set_num_format("0.00"),
-            title: top()
-                .set_bold()
-                .set_font_size(14.0)
-                .set_font_color(DEEPEST),
+            title: top().set_bold().set_font_size(14.0).set_font_color(DEEPEST),
             subtle: top().set_font_color(GREY),
             link: top().set_font_color(FRAME).set_underline(FormatUnderline::Single),
             listed: indented()
@@ -111,10 +108,7 @@ impl Looks {
                 .set_background_color(DEEPEST)
                 .set_border(FormatBorder::Double)
                 .set_border_color(MIDDLE),
-            fulfilled: indented()
-                .set_bold()
-                .set_font_color(WHITE)
-                .set_background_color(DEEPEST),
+            fulfilled: indented().set_bold().set_font_color(WHITE).set_background_color(DEEPEST),
             screens_in: verdict().set_bold().set_background_color(MIDDLE),
             unresolved: framed(FormatBorder::Thin)
                 .set_pattern(FormatPattern::LightUp)

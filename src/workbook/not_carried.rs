@@ -12,11 +12,7 @@ const KINDS: [(&str, &str, &str); 8] = [
     ("xl/media/", "image", "images"),
     ("xl/pivottables/pivottable", "pivot table", "pivot tables"),
     ("xl/slicers/", "slicer", "slicers"),
-    (
-        "xl/externallinks/externallink",
-        "link to another workbook",
-        "links to other workbooks",
-    ),
+    ("xl/externallinks/externallink", "link to another workbook", "links to other workbooks"),
     ("xl/connections.xml", "data connection", "data connections"),
     ("xl/embeddings/", "embedded file", "embedded files"),
 ];
@@ -48,13 +44,9 @@ pub(super) fn parts_not_carried<'name>(
         sentences.push(format!("Workbook, not carried over: {}.", things.join(", ")));
     }
     if !contents.other_sheets.is_empty() {
-        let names: Vec<String> = contents
-            .other_sheets
-            .iter()
-            .map(|name| format!("`{name}`"))
-            .collect();
+        let names: Vec<String> = contents.other_sheets.iter().map(|name| format!("`{name}`")).collect();
         sentences.push(format!(
-            "Workbook, not carried over: {} {}, which hold no cells.",
+            "Workbook, not carried over: {} {}, without cells.",
             if names.len() == 1 { "sheet" } else { "sheets" },
             names.join(", ")
         ));

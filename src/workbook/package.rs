@@ -30,12 +30,7 @@ pub(super) struct Limits {
 impl Limits {
     /// A sheet of 1,048,576 rows and 60 filled columns unpacks to about 3 GiB, at a ratio of 5 to 30; only a file made
     /// to exhaust memory goes beyond these (our own choice, from sheets we made).
-    pub(super) const USUAL: Self = Self {
-        total: 4 << 30,
-        held: 1 << 30,
-        ratio: 250,
-        ratio_from: 16 << 20,
-    };
+    pub(super) const USUAL: Self = Self { total: 4 << 30, held: 1 << 30, ratio: 250, ratio_from: 16 << 20 };
 }
 
 /// A workbook's container, opened.
@@ -70,14 +65,7 @@ impl Package {
                 });
             }
         }
-        Ok(Self {
-            path,
-            archive,
-            parts,
-            limits,
-            allowed: limits.held,
-            unpacked: 0,
-        })
+        Ok(Self { path, archive, parts, limits, allowed: limits.held, unpacked: 0 })
     }
 
     /// From here on sheets are read, which pass by and are not held.
@@ -97,10 +85,7 @@ impl Package {
 
     /// A fault that says the workbook contradicts itself.
     pub(super) fn damaged(&self, what: impl Into<String>) -> FileFault {
-        FileFault::Damaged {
-            path: self.path.clone(),
-            what: what.into(),
-        }
+        FileFault::Damaged { path: self.path.clone(), what: what.into() }
     }
 
     /// The first bytes of a part, as text; empty if there is no such part.
@@ -193,9 +178,7 @@ fn read_events(
     let mut buffer = Vec::with_capacity(1024);
     loop {
         buffer.clear();
-        let event = reader
-            .read_event_into(&mut buffer)
-            .map_err(|error| damaged(&error))?;
+        let event = reader.read_event_into(&mut buffer).map_err(|error| damaged(&error))?;
         match &event {
             Event::Eof if depth == 0 => return Ok(()),
             Event::Eof => return Err(damaged(&"it ends in the middle")),
@@ -246,9 +229,7 @@ struct Counted<R> {
 impl<R: Read> Read for Counted<R> {
     fn read(&mut self, buffer: &mut [u8]) -> std::io::Result<usize> {
         let count = self.inner.read(buffer)?;
-        self.unpacked = self
-            .unpacked
-            .saturating_add(u64::try_from(count).unwrap_or(u64::MAX));
+        self.unpacked = self.unpacked.saturating_add(u64::try_from(count).unwrap_or(u64::MAX));
         let total = self.before.saturating_add(self.unpacked);
         if total > self.allowed {
             self.over = Some((format!("over {}", megabytes(total)), megabytes(self.allowed)));

@@ -16,19 +16,11 @@ pub struct CellRef {
 
 impl fmt::Display for CellRef {
     fn fmt(&self, formatter: &mut fmt::Formatter<'_>) -> fmt::Result {
-        let plain = self
-            .sheet
-            .chars()
-            .all(|character| character.is_alphanumeric() || character == '_');
+        let plain = self.sheet.chars().all(|character| character.is_alphanumeric() || character == '_');
         if plain {
             write!(formatter, "{}!{}", self.sheet, self.address())
         } else {
-            write!(
-                formatter,
-                "'{}'!{}",
-                self.sheet.replace('\'', "''"),
-                self.address()
-            )
+            write!(formatter, "'{}'!{}", self.sheet.replace('\'', "''"), self.address())
         }
     }
 }
@@ -91,19 +83,9 @@ mod tests {
     fn a_reference_is_read_up_to_the_last_cell_of_a_sheet_and_not_beyond() {
         assert_eq!(parse_reference("C7"), Some((6, 2)));
         assert_eq!(parse_reference("XFD1048576"), Some((1_048_575, 16_383)));
-        for none in [
-            "XFE1",
-            "A1048577",
-            "A0",
-            "7",
-            "C",
-            "",
-            "C-7",
-            "C7D",
-            "ÄA1",
-            "AAAAAAAAAA1",
-            "A99999999999",
-        ] {
+        for none in
+            ["XFE1", "A1048577", "A0", "7", "C", "", "C-7", "C7D", "ÄA1", "AAAAAAAAAA1", "A99999999999"]
+        {
             assert_eq!(parse_reference(none), None, "{none}");
         }
     }
@@ -116,11 +98,7 @@ mod tests {
 
     #[test]
     fn a_cell_prints_as_the_user_would_type_it() {
-        let cell = |sheet: &str| CellRef {
-            sheet: sheet.into(),
-            row: 6,
-            column: 2,
-        };
+        let cell = |sheet: &str| CellRef { sheet: sheet.into(), row: 6, column: 2 };
         assert_eq!(cell("Substances").to_string(), "Substances!C7");
         assert_eq!(cell("Site's list").to_string(), "'Site''s list'!C7");
     }

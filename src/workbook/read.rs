@@ -98,11 +98,7 @@ impl Inventory {
         }
         self.stream_rows(sheet, |row| {
             rows.push(row);
-            if rows.len() < count {
-                ControlFlow::Continue(())
-            } else {
-                ControlFlow::Break(())
-            }
+            if rows.len() < count { ControlFlow::Continue(()) } else { ControlFlow::Break(()) }
         })?;
         Ok(rows)
     }
@@ -135,10 +131,7 @@ impl Inventory {
             .map_err(|error| fault(error.to_string()))?;
         let mut rows = Rows::new(reader, survey, styles, counts_from_1904);
         loop {
-            match without_panic(|| rows.next_row())
-                .map_err(&fault)?
-                .map_err(&fault)?
-            {
+            match without_panic(|| rows.next_row()).map_err(&fault)?.map_err(&fault)? {
                 Some(row) => {
                     if visit(row).is_break() {
                         return Ok(());
@@ -152,14 +145,9 @@ impl Inventory {
 
 fn open_book(path: &Path) -> Result<Xlsx<BufReader<File>>, FileFault> {
     let shown = path.display().to_string();
-    let file = File::open(path).map_err(|error| FileFault::Unreadable {
-        path: shown.clone(),
-        reason: error.to_string(),
-    })?;
-    let damaged = |what: String| FileFault::Damaged {
-        path: shown.clone(),
-        what,
-    };
+    let file = File::open(path)
+        .map_err(|error| FileFault::Unreadable { path: shown.clone(), reason: error.to_string() })?;
+    let damaged = |what: String| FileFault::Damaged { path: shown.clone(), what };
     without_panic(|| Xlsx::new(BufReader::new(file)))
         .map_err(damaged)?
         .map_err(|error| damaged(error.to_string()))

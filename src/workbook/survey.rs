@@ -59,6 +59,8 @@ pub struct SheetSurvey {
     pub last_row: u32,
     /// How many cells are formulas.
     pub formulas: usize,
+    /// How many cells hold an error value such as `#N/A`.
+    pub error_values: usize,
     /// How many formulas have no stored result and so read as empty.
     pub formulas_without_result: usize,
     /// Rows and columns that stay in place when the user scrolls.
@@ -85,10 +87,7 @@ impl SheetSurvey {
     pub(super) fn is_formula(&self, row: u32, column: u16) -> bool {
         self.formula_runs.get(&column).is_some_and(|runs| {
             let after = runs.partition_point(|(first, _)| *first <= row);
-            after
-                .checked_sub(1)
-                .and_then(|position| runs.get(position))
-                .is_some_and(|(_, last)| row <= *last)
+            after.checked_sub(1).and_then(|position| runs.get(position)).is_some_and(|(_, last)| row <= *last)
         })
     }
 
@@ -115,6 +114,7 @@ pub(super) fn survey_sheet(
         used_columns: 0,
         last_row: 0,
         formulas: 0,
+        error_values: 0,
         formulas_without_result: 0,
         frozen: None,
         formula_runs: BTreeMap::new(),
@@ -130,10 +130,7 @@ pub(super) fn survey_sheet(
             Place::Data => check.visit(event, &mut survey, &mut place),
             Place::Tail => read_tail(event, &mut survey),
         };
-        outcome.map_err(|fault| FileFault::Sheet {
-            path: path.clone(),
-            fault,
-        })
+        outcome.map_err(|fault| FileFault::Sheet { path: path.clone(), fault })
     })?;
     if found == Found::No || place != Place::Tail {
         let fault = whole(&survey, "holds no rows as a worksheet stores them");
@@ -152,10 +149,7 @@ enum Place {
 }
 
 fn whole(survey: &SheetSurvey, what: impl Into<String>) -> SheetFault {
-    SheetFault::Whole {
-        sheet: survey.name.to_string(),
-        what: what.into(),
-    }
+    SheetFault::Whole { sheet: survey.name.to_string(), what: what.into() }
 }
 
 fn read_head(event: &Event<'_>, survey: &mut SheetSurvey, place: &mut Place) -> Result<(), SheetFault> {
@@ -199,10 +193,7 @@ fn check_dimension(element: &BytesStart<'_>, survey: &SheetSurvey) -> Result<(),
     if sound {
         Ok(())
     } else {
-        Err(whole(
-            survey,
-            format!("says that its cells are `{text}`, which is no range"),
-        ))
+        Err(whole(survey, format!("says that its cells are `{text}`, which is no range")))
     }
 }
 
@@ -223,12 +214,7 @@ fn read_column_layout(element: &BytesStart<'_>, survey: &mut SheetSurvey) -> Res
         .and_then(|width| width.parse::<f64>().ok())
         .filter(|width| (0.0..=255.0).contains(width));
     let hidden = attribute(element, "hidden").is_some_and(|hidden| hidden == "1" || hidden == "true");
-    survey.column_widths.push(ColumnLayout {
-        first,
-        last,
-        width,
-        hidden,
-    });
+    survey.column_widths.push(ColumnLayout { first, last, width, hidden });
     Ok(())
 }
 

@@ -87,11 +87,10 @@ impl AnnotatedWorkbook {
         let output = Output::check(target, inputs, overwrite)?;
         let mut book = Workbook::new();
         // Rows wait in temporary files; beside the output there is as much space as the output needs.
-        book.set_tempdir(output.folder())
-            .map_err(|error| FileFault::OutputFolderClosed {
-                folder: output.folder().display().to_string(),
-                reason: reason_of(&error),
-            })?;
+        book.set_tempdir(output.folder()).map_err(|error| FileFault::OutputFolderClosed {
+            folder: output.folder().display().to_string(),
+            reason: reason_of(&error),
+        })?;
         book.set_zip_compression_level(COMPRESSION);
         book.set_properties(&properties(date).map_err(|error| output.failed(&error))?);
         Ok(Self {
@@ -139,9 +138,7 @@ impl AnnotatedWorkbook {
     /// Sets the width of columns, or hides them.
     pub fn set_columns(&mut self, sheet: SheetId, layout: ColumnLayout) -> Result<(), FileFault> {
         if let (Some(width), Some(state)) = (layout.width, self.sheets.get_mut(sheet.0)) {
-            state
-                .widths
-                .extend((layout.first..=layout.last).map(|column| (column, width)));
+            state.widths.extend((layout.first..=layout.last).map(|column| (column, width)));
         }
         self.on_sheet(sheet, |sheet| {
             if let Some(width) = layout.width {
@@ -162,15 +159,7 @@ impl AnnotatedWorkbook {
         last: u16,
         width: f64,
     ) -> Result<(), FileFault> {
-        self.set_columns(
-            sheet,
-            ColumnLayout {
-                first,
-                last,
-                width: Some(width),
-                hidden: false,
-            },
-        )
+        self.set_columns(sheet, ColumnLayout { first, last, width: Some(width), hidden: false })
     }
 
     /// Folds columns away under an outline, which the user opens with a click.
@@ -200,10 +189,7 @@ impl AnnotatedWorkbook {
         if let Some(reason) = &self.broken {
             return Err(self.output.failed(&reason));
         }
-        let shown = self
-            .sheets
-            .iter()
-            .position(|sheet| sheet.visibility == Visibility::Visible);
+        let shown = self.sheets.iter().position(|sheet| sheet.visibility == Visibility::Visible);
         let first = match shown {
             Some(shown) => SheetId(shown),
             // A workbook must show one sheet.
@@ -225,11 +211,7 @@ impl AnnotatedWorkbook {
     fn advance(&mut self, sheet: SheetId, row: u32) -> Result<(), FileFault> {
         match self.sheets.get_mut(sheet.0) {
             Some(state) if row < state.row => {
-                let reason = format!(
-                    "row {} of sheet `{}` came too late",
-                    u64::from(row) + 1,
-                    state.name
-                );
+                let reason = format!("row {} of sheet `{}` came too late", u64::from(row) + 1, state.name);
                 self.broken = Some(reason.clone());
                 Err(self.output.failed(&reason))
             }

@@ -16,7 +16,8 @@ fn sources() -> io::Result<Vec<(String, PathBuf, String)>> {
                 folders.push(path);
             } else if path.extension().is_some_and(|extension| extension == "rs") {
                 let below = path.strip_prefix(&top).map_err(io::Error::other)?;
-                let first = below.components().next().map(|part| part.as_os_str().to_string_lossy().into_owned());
+                let first =
+                    below.components().next().map(|part| part.as_os_str().to_string_lossy().into_owned());
                 let room = first.unwrap_or_default().trim_end_matches(".rs").to_owned();
                 let text = fs::read_to_string(&path)?;
                 found.push((room, path, text));
@@ -33,22 +34,12 @@ fn the_sources_are_found() {
 
 /// The lines that are code, so that prose may name anything.
 fn code(text: &str) -> impl Iterator<Item = &str> {
-    text.lines()
-        .map(str::trim_start)
-        .filter(|line| !line.starts_with("//"))
+    text.lines().map(str::trim_start).filter(|line| !line.starts_with("//"))
 }
 
 #[test]
 fn imports_point_one_way() {
-    let chain = [
-        "quantity",
-        "substance",
-        "evidence",
-        "judge",
-        "reasoning",
-        "report",
-        "run",
-    ];
+    let chain = ["quantity", "substance", "evidence", "judge", "reasoning", "report", "run"];
     for (room, path, text) in sources().unwrap() {
         let Some(place) = chain.iter().position(|name| *name == room) else {
             continue;
@@ -56,12 +47,7 @@ fn imports_point_one_way() {
         for later in &chain[place + 1..] {
             let import = format!("crate::{later}");
             let offending = code(&text).find(|line| line.contains(&import));
-            assert_eq!(
-                offending,
-                None,
-                "{} names `{later}`, which comes after `{room}`",
-                path.display()
-            );
+            assert_eq!(offending, None, "{} names `{later}`, which comes after `{room}`", path.display());
         }
     }
 }
@@ -91,11 +77,7 @@ fn each_outside_crate_is_named_in_its_own_rooms() {
         for (room, file, text) in sources().unwrap() {
             let names_it = code(&text).any(|line| line.starts_with(&import) || names_crate(line, &path));
             named |= names_it;
-            assert!(
-                !names_it || rooms.contains(&room.as_str()),
-                "{} names `{name}`",
-                file.display()
-            );
+            assert!(!names_it || rooms.contains(&room.as_str()), "{} names `{name}`", file.display());
         }
         assert!(named, "`{name}` is named somewhere, or should leave Cargo.toml");
     }
@@ -113,10 +95,6 @@ fn names_crate(line: &str, path: &str) -> bool {
 fn only_the_console_prints() {
     for (_, path, text) in sources().unwrap() {
         let prints = code(&text).any(|line| line.contains("stdout()") || line.contains("stderr()"));
-        assert!(
-            !prints || path.ends_with("bin/kowledger/console.rs"),
-            "{} prints",
-            path.display()
-        );
+        assert!(!prints || path.ends_with("bin/kowledger/console.rs"), "{} prints", path.display());
     }
 }

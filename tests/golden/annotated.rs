@@ -69,13 +69,15 @@ impl Annotated {
     /// The row of the sheet's header: the one that holds our first column.
     pub fn header(&self, sheet: &str) -> (usize, &[String]) {
         let rows = &self.sheets[sheet];
-        let place = rows.iter().position(|row| row.iter().any(|cell| cell == "log Kow used")).expect("a header");
+        let place =
+            rows.iter().position(|row| row.iter().any(|cell| cell == "log Kow used")).expect("a header");
         (place, &rows[place])
     }
 
     /// The cell of a row, counted from 1, under one of our headers.
     pub fn cell(&self, sheet: &str, row: usize, header: &str) -> &str {
-        let column = self.header(sheet).1.iter().position(|cell| cell == header).expect("a column of that header");
+        let column =
+            self.header(sheet).1.iter().position(|cell| cell == header).expect("a column of that header");
         &self.sheets[sheet][row - 1][column]
     }
 }

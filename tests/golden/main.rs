@@ -1,6 +1,10 @@
 //! The annotated example, as a user gets it.
 
-#![expect(clippy::expect_used, clippy::indexing_slicing, reason = "an example that cannot be read has to stop the test")]
+#![expect(
+    clippy::expect_used,
+    clippy::indexing_slicing,
+    reason = "an example that cannot be read has to stop the test"
+)]
 
 mod annotated;
 mod certain;

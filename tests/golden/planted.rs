@@ -34,7 +34,10 @@ fn a_date_read_back_as_a_cas_number_raises_a_caution_and_clears_nothing() {
     let header = EXAMPLE.header("Substances").1;
     for (place, name) in header.iter().enumerate() {
         let verdict = &EXAMPLE.sheets["Substances"][105][place];
-        assert!(!verdict.starts_with("screens out") && !verdict.starts_with("not fulfilled"), "{name}: {verdict}");
+        assert!(
+            !verdict.starts_with("screens out") && !verdict.starts_with("not fulfilled"),
+            "{name}: {verdict}"
+        );
     }
 }
 
@@ -71,7 +74,10 @@ fn the_added_headers_are_those_of_the_documentation() {
 #[test]
 fn the_sheets_are_those_of_the_documentation() {
     let names: Vec<&str> = EXAMPLE.sheets.keys().map(String::as_str).collect();
-    assert_eq!(names, ["Read me", "Reasoning", "Record", "Rohstoffe", "Rulebooks", "Run record", "Substances"]);
+    assert_eq!(
+        names,
+        ["Read me", "Reasoning", "Record", "Rohstoffe", "Rulebooks", "Run record", "Substances"]
+    );
 }
 
 #[test]

@@ -17,12 +17,7 @@ fn deciding_value<'run>(judged: &'run Judged, book: &str, criterion: &str) -> &'
 #[test]
 fn a_value_within_one_sd_of_the_limit_is_a_close_call_on_either_side() {
     // A measured BCF has 0.21 log units: 2000 x 10^0.21 = 3244.
-    let close = |bcf| {
-        row()
-            .measured(Property::Bcf, Value::Point(bcf))
-            .judged()
-            .is_close("REACH", "B")
-    };
+    let close = |bcf| row().measured(Property::Bcf, Value::Point(bcf)).judged().is_close("REACH", "B");
     assert!(close(3_240.0));
     assert!(!close(3_250.0));
     assert!(close(1_240.0));

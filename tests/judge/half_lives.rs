@@ -20,11 +20,7 @@ fn at(
     temperature: Option<f64>,
     degradation: DegradationKind,
 ) -> Row {
-    let conditions = Conditions {
-        temperature,
-        degradation,
-        ..Conditions::default()
-    };
+    let conditions = Conditions { temperature, degradation, ..Conditions::default() };
     row.under(property, Value::Point(days), Basis::Measured, conditions)
 }
 
@@ -32,26 +28,19 @@ fn at(
 fn short_everywhere(degradation: DegradationKind) -> Row {
     [FRESH, FRESH_SEDIMENT, SOIL]
         .into_iter()
-        .fold(row(), |row, property| {
-            at(row, property, 3.0, Some(12.0), degradation)
-        })
+        .fold(row(), |row, property| at(row, property, 3.0, Some(12.0), degradation))
 }
 
 #[test]
 fn a_half_life_at_twenty_degrees_is_2_12_times_longer_at_twelve() {
     // 40 d / 2.12 = 18.9 d.
-    let verdict = |days| {
-        at(row(), FRESH, days, Some(20.0), DegradationKind::Ultimate)
-            .judged()
-            .verdict("REACH", "P")
-    };
+    let verdict =
+        |days| at(row(), FRESH, days, Some(20.0), DegradationKind::Ultimate).judged().verdict("REACH", "P");
     assert_eq!(verdict(19.0), Fulfilled);
     assert_eq!(verdict(18.7), Unresolved);
     // The same value is far within the limit of an instrument that compares as reported.
     assert_eq!(
-        at(row(), WATER, 59.0, Some(20.0), DegradationKind::Ultimate)
-            .judged()
-            .verdict("STOCKHOLM", "P"),
+        at(row(), WATER, 59.0, Some(20.0), DegradationKind::Ultimate).judged().verdict("STOCKHOLM", "P"),
         Unresolved
     );
 }
@@ -59,9 +48,9 @@ fn a_half_life_at_twenty_degrees_is_2_12_times_longer_at_twelve() {
 #[test]
 fn without_a_test_temperature_a_half_life_fires_as_it_is_and_clears_only_if_2_12_times_it_would() {
     let judged = |days| {
-        let soil_and_sediment = [FRESH_SEDIMENT, SOIL].into_iter().fold(row(), |row, property| {
-            at(row, property, 3.0, Some(12.0), DegradationKind::Ultimate)
-        });
+        let soil_and_sediment = [FRESH_SEDIMENT, SOIL]
+            .into_iter()
+            .fold(row(), |row, property| at(row, property, 3.0, Some(12.0), DegradationKind::Ultimate));
         at(soil_and_sediment, FRESH, days, None, DegradationKind::Ultimate).judged()
     };
     assert_eq!(judged(40.5).verdict("REACH", "P"), Fulfilled);
@@ -93,15 +82,8 @@ fn one_short_compartment_does_not_make_up_for_a_missing_one() {
         let two = [FRESH, FRESH_SEDIMENT, SOIL]
             .into_iter()
             .filter(|property| *property != missing)
-            .fold(row(), |row, property| {
-                at(row, property, 3.0, Some(12.0), DegradationKind::Ultimate)
-            });
-        assert_eq!(
-            two.judged().verdict("REACH", "P"),
-            Unresolved,
-            "without {}",
-            missing.title()
-        );
+            .fold(row(), |row, property| at(row, property, 3.0, Some(12.0), DegradationKind::Ultimate));
+        assert_eq!(two.judged().verdict("REACH", "P"), Unresolved, "without {}", missing.title());
     }
 }
 
@@ -109,17 +91,13 @@ fn one_short_compartment_does_not_make_up_for_a_missing_one() {
 fn water_not_further_specified_fires_above_the_highest_limit_it_could_stand_for() {
     // It could stand for fresh water (40 d) and marine water (60 d).
     let judged = |days| {
-        let rest = [FRESH_SEDIMENT, SOIL].into_iter().fold(row(), |row, property| {
-            at(row, property, 3.0, Some(12.0), DegradationKind::Ultimate)
-        });
+        let rest = [FRESH_SEDIMENT, SOIL]
+            .into_iter()
+            .fold(row(), |row, property| at(row, property, 3.0, Some(12.0), DegradationKind::Ultimate));
         at(rest, WATER, days, Some(12.0), DegradationKind::Ultimate).judged()
     };
-    let table: [(f64, Verdict); 4] = [
-        (61.0, Fulfilled),
-        (60.0, Unresolved),
-        (41.0, Unresolved),
-        (40.0, NotFulfilled),
-    ];
+    let table: [(f64, Verdict); 4] =
+        [(61.0, Fulfilled), (60.0, Unresolved), (41.0, Unresolved), (40.0, NotFulfilled)];
     for (days, expected) in table {
         assert_eq!(judged(days).verdict("REACH", "P"), expected, "{days} d in water");
     }
@@ -137,9 +115,7 @@ fn water_not_further_specified_stands_only_for_compartments_without_a_value_of_t
 fn sediment_not_further_specified_follows_the_same_rule() {
     // Fresh water sediment 120 d, marine sediment 180 d.
     let verdict = |days| {
-        at(row(), SEDIMENT, days, Some(12.0), DegradationKind::Ultimate)
-            .judged()
-            .verdict("REACH", "P")
+        at(row(), SEDIMENT, days, Some(12.0), DegradationKind::Ultimate).judged().verdict("REACH", "P")
     };
     assert_eq!(verdict(181.0), Fulfilled);
     assert_eq!(verdict(150.0), Unresolved);
@@ -168,17 +144,9 @@ fn ready_biodegradability_screens_persistence_where_half_lives_are_missing() {
 
 #[test]
 fn a_ready_result_does_not_overrule_a_long_or_straddling_half_life() {
-    let long = at(
-        row().ready(DegradationTest::Ready),
-        SOIL,
-        300.0,
-        Some(12.0),
-        DegradationKind::Ultimate,
-    );
+    let long = at(row().ready(DegradationTest::Ready), SOIL, 300.0, Some(12.0), DegradationKind::Ultimate);
     assert_eq!(long.judged().verdict("REACH", "P"), Fulfilled);
-    let straddling = row()
-        .ready(DegradationTest::Ready)
-        .measured(SOIL, Value::Range(100.0, 140.0));
+    let straddling = row().ready(DegradationTest::Ready).measured(SOIL, Value::Range(100.0, 140.0));
     assert_eq!(straddling.judged().verdict("REACH", "P"), Unresolved);
 }
 
@@ -190,8 +158,6 @@ fn an_older_reliability_score_of_three_supports_and_decides_nothing() {
         reliability: Some(3),
         ..Conditions::default()
     };
-    let judged = row()
-        .under(SOIL, Value::Point(900.0), Basis::Measured, conditions)
-        .judged();
+    let judged = row().under(SOIL, Value::Point(900.0), Basis::Measured, conditions).judged();
     assert_eq!(judged.verdict("REACH", "P"), Verdict::NoData);
 }

@@ -129,7 +129,12 @@ fn cell(row: &Row, id: &str) -> String {
     if let Some((criterion, judged)) = book.criteria().find(|(criterion, _)| criterion.id == id) {
         return verdict_text(criterion, judged);
     }
-    let place = book.rulebook.designations.iter().position(|designation| designation.id == id).expect("a designation");
+    let place = book
+        .rulebook
+        .designations
+        .iter()
+        .position(|designation| designation.id == id)
+        .expect("a designation");
     let judged = &book.judged.designations[place];
     with_closeness(judged.verdict, judged.closeness)
 }

@@ -52,16 +52,7 @@ const fn limit(
     within: Verdict,
     straddling: Verdict,
 ) -> Limit {
-    Limit {
-        book,
-        criterion,
-        property,
-        worded,
-        value,
-        beyond,
-        within,
-        straddling,
-    }
+    Limit { book, criterion, property, worded, value, beyond, within, straddling }
 }
 
 /// 2 months and 6 months at 30.4375 d each.
@@ -130,21 +121,11 @@ const LIMITS: &[Limit] = &[
 
 impl Limit {
     fn verdict(&self, value: Value, basis: Basis) -> Verdict {
-        row()
-            .with(self.property, value, basis)
-            .judged()
-            .verdict(self.book, self.criterion)
+        row().with(self.property, value, basis).judged().verdict(self.book, self.criterion)
     }
 
     fn name(&self) -> String {
-        format!(
-            "{} {} {} {:?} {}",
-            self.book,
-            self.criterion,
-            self.property.title(),
-            self.worded,
-            self.value
-        )
+        format!("{} {} {} {:?} {}", self.book, self.criterion, self.property.title(), self.worded, self.value)
     }
 
     /// Values on the concerning side, far enough not to be close.
@@ -152,11 +133,7 @@ impl Limit {
         let (limit, log) = (self.value, self.property.is_logarithmic());
         let far_up = if log { limit + 2.0 } else { limit * 50.0 };
         match self.worded {
-            Above => vec![
-                Value::Point(nudged_up(limit)),
-                Value::Point(far_up),
-                Value::Greater(limit),
-            ],
+            Above => vec![Value::Point(nudged_up(limit)), Value::Point(far_up), Value::Greater(limit)],
             AtLeast => vec![Value::Point(limit), Value::Point(far_up), Value::Greater(limit)],
             // Far below 0.1 mg/L an acute value would meet the definitive limit of 0.01 mg/L as well.
             Below if self.property == Property::AcuteToxicity => {
@@ -166,11 +143,7 @@ impl Limit {
                     Value::Range(0.02, limit * 0.99),
                 ]
             }
-            Below => vec![
-                Value::Point(nudged_down(limit)),
-                Value::Point(limit / 50.0),
-                Value::Less(limit),
-            ],
+            Below => vec![Value::Point(nudged_down(limit)), Value::Point(limit / 50.0), Value::Less(limit)],
         }
     }
 
@@ -180,16 +153,8 @@ impl Limit {
         let far_down = if log { limit - 1.5 } else { limit / 50.0 };
         match self.worded {
             Above => vec![Value::Point(limit), Value::Point(far_down)],
-            AtLeast => vec![
-                Value::Point(nudged_down(limit)),
-                Value::Point(far_down),
-                Value::Less(limit),
-            ],
-            Below => vec![
-                Value::Point(limit),
-                Value::Point(limit * 50.0),
-                Value::Greater(limit),
-            ],
+            AtLeast => vec![Value::Point(nudged_down(limit)), Value::Point(far_down), Value::Less(limit)],
+            Below => vec![Value::Point(limit), Value::Point(limit * 50.0), Value::Greater(limit)],
         }
     }
 
@@ -241,15 +206,8 @@ fn a_range_or_qualifier_that_straddles_a_limit_clears_nothing() {
         for value in limit.straddling_values() {
             let judged = row().measured(limit.property, value).judged();
             let name = format!("{} with {value:?}", limit.name());
-            assert_eq!(
-                judged.verdict(limit.book, limit.criterion),
-                limit.straddling,
-                "{name}"
-            );
-            assert!(
-                judged.is_close(limit.book, limit.criterion),
-                "{name} is a close call"
-            );
+            assert_eq!(judged.verdict(limit.book, limit.criterion), limit.straddling, "{name}");
+            assert!(judged.is_close(limit.book, limit.criterion), "{name} is a close call");
         }
     }
 }
@@ -263,19 +221,12 @@ fn without_the_word_measured_no_verdict_is_more_than_screening() {
     };
     for limit in LIMITS {
         for basis in [Basis::Unstated, Basis::Calculated] {
-            for (values, expected) in [
-                (limit.beyond_values(), limit.beyond),
-                (limit.within_values(), limit.within),
-            ] {
+            for (values, expected) in
+                [(limit.beyond_values(), limit.beyond), (limit.within_values(), limit.within)]
+            {
                 // The far value, which no standard deviation reaches.
                 let verdict = limit.verdict(values[1], basis);
-                assert_eq!(
-                    verdict,
-                    screening(expected),
-                    "{} with {:?}, {basis:?}",
-                    limit.name(),
-                    values[1]
-                );
+                assert_eq!(verdict, screening(expected), "{} with {:?}, {basis:?}", limit.name(), values[1]);
             }
         }
     }
@@ -284,10 +235,7 @@ fn without_the_word_measured_no_verdict_is_more_than_screening() {
 #[test]
 fn an_estimate_never_stands_in_for_a_given_value() {
     for limit in LIMITS.iter().filter(|limit| limit.property != Property::LogKow) {
-        let given_only = matches!(
-            limit.property,
-            Property::Bcf | Property::Baf | Property::LongTermToxicity
-        );
+        let given_only = matches!(limit.property, Property::Bcf | Property::Baf | Property::LongTermToxicity);
         if given_only {
             let verdict = limit.verdict(limit.beyond_values()[1], Basis::Estimated);
             assert_eq!(verdict, NoData, "{}", limit.name());
@@ -299,20 +247,11 @@ fn an_estimate_never_stands_in_for_a_given_value() {
 fn a_row_without_data_is_without_data_everywhere_and_nothing_else() {
     let judged = row().judged();
     for limit in LIMITS {
-        assert_eq!(
-            judged.verdict(limit.book, limit.criterion),
-            NoData,
-            "{}",
-            limit.name()
-        );
+        assert_eq!(judged.verdict(limit.book, limit.criterion), NoData, "{}", limit.name());
     }
-    for (book, designation) in [
-        ("REACH", "PBT"),
-        ("REACH", "vPvB"),
-        ("CLP", "PMT"),
-        ("CLP", "vPvM"),
-        ("CANADA", "PB"),
-    ] {
+    for (book, designation) in
+        [("REACH", "PBT"), ("REACH", "vPvB"), ("CLP", "PMT"), ("CLP", "vPvM"), ("CANADA", "PB")]
+    {
         assert_eq!(judged.cell(book, designation), "unresolved");
     }
 }

@@ -26,11 +26,7 @@ fn a_guard_that_fired_stops_a_definitive_clear() {
 
 #[test]
 fn each_concern_value_stops_a_clear_without_deciding() {
-    for (property, value) in [
-        (Property::Bmf, 1.5),
-        (Property::Tmf, 1.5),
-        (Property::Baf, 2500.0),
-    ] {
+    for (property, value) in [(Property::Bmf, 1.5), (Property::Tmf, 1.5), (Property::Baf, 2500.0)] {
         let beyond = low_bcf().measured(property, Value::Point(value)).judged();
         assert_eq!(beyond.verdict("REACH", "B"), Unresolved, "{}", property.title());
         let limit = if property == Property::Baf { 2000.0 } else { 1.0 };
@@ -50,19 +46,15 @@ fn a_guard_left_open_stops_screening_clears_only() {
     assert_eq!(with_basis(Basis::Measured).verdict("REACH", "B"), NotFulfilled);
     assert_eq!(with_basis(Basis::Unstated).verdict("REACH", "B"), Unresolved);
     assert!(
-        with_basis(Basis::Unstated)
-            .stops("REACH", "B")
-            .iter()
-            .any(|stop| matches!(stop, Stop::OpenGuard(_)))
+        with_basis(Basis::Unstated).stops("REACH", "B").iter().any(|stop| matches!(stop, Stop::OpenGuard(_)))
     );
 }
 
 #[test]
 fn a_guard_that_is_clear_stops_nothing() {
     let judged = row().with(Property::Bcf, Value::Point(10.0), Basis::Unstated);
-    let low_koa = judged
-        .measured(Property::LogKoa, Value::Point(4.0))
-        .measured(Property::LogKow, Value::Point(3.0));
+    let low_koa =
+        judged.measured(Property::LogKoa, Value::Point(4.0)).measured(Property::LogKow, Value::Point(3.0));
     assert_eq!(low_koa.judged().verdict("REACH", "B"), ScreensOut);
     let low_kow = row().measured(Property::LogKow, Value::Point(1.5));
     assert_eq!(low_kow.judged().verdict("REACH", "B"), ScreensOut);
@@ -72,17 +64,11 @@ fn a_guard_that_is_clear_stops_nothing() {
 fn a_calculated_value_within_one_sd_of_its_limit_does_not_clear_and_a_measured_one_does() {
     let with_basis = |basis| row().with(Property::Bcf, Value::Point(4500.0), basis).judged();
     assert_eq!(with_basis(Basis::Calculated).verdict("CANADA", "B"), Unresolved);
-    assert!(
-        with_basis(Basis::Calculated)
-            .stops("CANADA", "B")
-            .contains(&Stop::WithinOneSd)
-    );
+    assert!(with_basis(Basis::Calculated).stops("CANADA", "B").contains(&Stop::WithinOneSd));
     assert!(with_basis(Basis::Calculated).is_close("CANADA", "B"));
     assert_eq!(with_basis(Basis::Measured).verdict("CANADA", "B"), NotFulfilled);
     assert!(with_basis(Basis::Measured).is_close("CANADA", "B"));
-    let far = row()
-        .with(Property::Bcf, Value::Point(450.0), Basis::Calculated)
-        .judged();
+    let far = row().with(Property::Bcf, Value::Point(450.0), Basis::Calculated).judged();
     assert_eq!(far.verdict("CANADA", "B"), ScreensOut);
 }
 
@@ -124,11 +110,7 @@ fn a_limit_from_memory_never_clears() {
             basis: Basis::Measured,
             reported: "95 % in 7 d, OECD 302B".to_owned(),
         },
-        cell: CellRef {
-            sheet: "Substances".into(),
-            row: 6,
-            column: 30,
-        },
+        cell: CellRef { sheet: "Substances".into(), row: 6, column: 30 },
     });
     let judged = with_inherent.judged();
     assert_eq!(judged.verdict("REACH", "P"), Unresolved);
@@ -145,12 +127,7 @@ fn an_estimated_koc_fires_on_the_leading_line_and_does_not_clear_while_a_lower_l
     assert_eq!(judged(3.0).verdict("CLP", "vM"), Unresolved);
     // 0.81 x 5 + 0.10 = 4.15, but the substance may be of another class, or ionise.
     assert_eq!(judged(5.0).verdict("CLP", "M"), Unresolved);
-    assert!(
-        judged(5.0)
-            .stops("CLP", "M")
-            .iter()
-            .any(|stop| matches!(stop, Stop::LowSide { .. }))
-    );
+    assert!(judged(5.0).stops("CLP", "M").iter().any(|stop| matches!(stop, Stop::LowSide { .. })));
 }
 
 #[test]
@@ -162,10 +139,7 @@ fn a_given_koc_of_an_ionisable_substance_may_fire_and_not_clear() {
             .judged()
     };
     assert_eq!(judged(5000.0).verdict("CLP", "M"), Unresolved);
-    assert_eq!(
-        judged(50.0).verdict("CLP", "vM"),
-        kowledger::judge::Verdict::Fulfilled
-    );
+    assert_eq!(judged(50.0).verdict("CLP", "vM"), kowledger::judge::Verdict::Fulfilled);
 }
 
 /// A caution, a row that raises it, and whether it stops a clear by log Kow, by BCF, by a ready test.
@@ -177,81 +151,38 @@ fn each_caution_stops_what_it_says_and_nothing_more() {
     let everything = [true, true, true];
     let whole_log_kow = [true, false, false];
     let table: [CautionLine; 9] = [
-        (
-            "perfluoroalkyl",
-            |row| row.named("perfluorooctanoic acid"),
-            [true, true, false],
-        ),
-        (
-            "surfactant",
-            |row| row.of_type(SubstanceType::Surfactant),
-            whole_log_kow,
-        ),
-        (
-            "permanent-charge",
-            |row| row.named("hexadecyltrimethylammonium bromide"),
-            whole_log_kow,
-        ),
-        (
-            "organometallic",
-            |row| row.of_type(SubstanceType::Organometallic),
-            whole_log_kow,
-        ),
+        ("perfluoroalkyl", |row| row.named("perfluorooctanoic acid"), [true, true, false]),
+        ("surfactant", |row| row.of_type(SubstanceType::Surfactant), whole_log_kow),
+        ("permanent-charge", |row| row.named("hexadecyltrimethylammonium bromide"), whole_log_kow),
+        ("organometallic", |row| row.of_type(SubstanceType::Organometallic), whole_log_kow),
         ("polymer", |row| row.of_type(SubstanceType::Polymer), everything),
         ("uvcb", |row| row.of_type(SubstanceType::Uvcb), everything),
-        (
-            "multi-constituent",
-            |row| row.of_type(SubstanceType::MultiConstituent),
-            everything,
-        ),
+        ("multi-constituent", |row| row.of_type(SubstanceType::MultiConstituent), everything),
         ("identity-by-name-alone", Row::by_name_alone, everything),
-        (
-            "identity-by-repaired-date",
-            |row| row.identified_as(Identity::RepairedDate),
-            everything,
-        ),
+        ("identity-by-repaired-date", |row| row.identified_as(Identity::RepairedDate), everything),
     ];
     for (caution, make, [log_kow, bcf, ready]) in table {
         let stopped = |row: Row, book: &str, criterion: &str| {
             let judged = make(row).judged();
-            assert!(
-                judged.cautions().contains(&caution),
-                "{caution} is raised: {:?}",
-                judged.cautions()
-            );
+            assert!(judged.cautions().contains(&caution), "{caution} is raised: {:?}", judged.cautions());
             judged
                 .stops(book, criterion)
                 .iter()
                 .any(|stop| matches!(stop, Stop::Caution(index) if RULES.cautions[*index].id == caution))
         };
         let by_log_kow = row().measured(Property::LogKow, Value::Point(1.0));
-        assert_eq!(
-            stopped(by_log_kow, "STOCKHOLM", "B"),
-            log_kow,
-            "{caution} and log Kow"
-        );
+        assert_eq!(stopped(by_log_kow, "STOCKHOLM", "B"), log_kow, "{caution} and log Kow");
         let by_bcf = row().measured(Property::Bcf, Value::Point(10.0));
         assert_eq!(stopped(by_bcf, "CANADA", "B"), bcf, "{caution} and BCF");
         let by_ready = row().ready(DegradationTest::Ready);
-        assert_eq!(
-            stopped(by_ready, "REACH", "P"),
-            ready,
-            "{caution} and ready biodegradability"
-        );
+        assert_eq!(stopped(by_ready, "REACH", "P"), ready, "{caution} and ready biodegradability");
     }
 }
 
 #[test]
 fn a_caution_never_keeps_a_test_from_firing() {
-    for kind in [
-        SubstanceType::Polymer,
-        SubstanceType::Uvcb,
-        SubstanceType::Surfactant,
-    ] {
-        let judged = row()
-            .of_type(kind)
-            .measured(Property::LogKow, Value::Point(7.0))
-            .judged();
+    for kind in [SubstanceType::Polymer, SubstanceType::Uvcb, SubstanceType::Surfactant] {
+        let judged = row().of_type(kind).measured(Property::LogKow, Value::Point(7.0)).judged();
         assert_eq!(judged.verdict("REACH", "B"), ScreensIn, "{kind:?}");
     }
 }

@@ -15,12 +15,7 @@ use kowledger::workbook::CellRef;
 
 /// The rulebooks that are built in, loaded once.
 pub static RULES: LazyLock<RuleSet> = LazyLock::new(|| {
-    let all = [
-        "eu-reach-pbt",
-        "eu-clp-pbt-pmt",
-        "un-stockholm-annex-d",
-        "ca-persistence-bioaccumulation",
-    ];
+    let all = ["eu-reach-pbt", "eu-clp-pbt-pmt", "un-stockholm-annex-d", "ca-persistence-bioaccumulation"];
     load_rule_set(&all.map(String::from)).expect("the built-in rulebooks load")
 });
 
@@ -62,14 +57,7 @@ pub fn row() -> Row {
 }
 
 fn cited<T>(value: T, column: u16) -> Cited<T> {
-    Cited {
-        value,
-        cell: CellRef {
-            sheet: Arc::from("Substances"),
-            row: 6,
-            column,
-        },
-    }
+    Cited { value, cell: CellRef { sheet: Arc::from("Substances"), row: 6, column } }
 }
 
 impl Row {
@@ -102,22 +90,14 @@ impl Row {
             },
             basis,
             conditions,
-            cell: CellRef {
-                sheet: Arc::from("Substances"),
-                row: 6,
-                column,
-            },
+            cell: CellRef { sheet: Arc::from("Substances"), row: 6, column },
         });
         self
     }
 
     /// A word on ready biodegradability.
     pub fn ready(mut self, result: DegradationTest) -> Self {
-        let entry = ReadyBiodegradability {
-            result,
-            basis: Basis::Unstated,
-            reported: format!("{result:?}"),
-        };
+        let entry = ReadyBiodegradability { result, basis: Basis::Unstated, reported: format!("{result:?}") };
         self.0.ready.push(cited(entry, 20));
         self
     }
@@ -158,10 +138,7 @@ impl Row {
     pub fn judged(&self) -> Judged {
         let evidence = gather_evidence(&self.0, &RULES.relations);
         let judgement = judge(&self.0, &evidence, &RULES);
-        Judged {
-            substance: self.0.clone(),
-            judgement,
-        }
+        Judged { substance: self.0.clone(), judgement }
     }
 }
 
@@ -174,11 +151,7 @@ pub struct Judged {
 
 impl Judged {
     fn book(short: &str) -> usize {
-        RULES
-            .rulebooks
-            .iter()
-            .position(|rulebook| rulebook.short == short)
-            .expect("a built-in rulebook")
+        RULES.rulebooks.iter().position(|rulebook| rulebook.short == short).expect("a built-in rulebook")
     }
 
     /// A criterion of a rulebook.
@@ -200,11 +173,8 @@ impl Judged {
             let judged = &self.judgement.rulebooks[book].criteria[place];
             return kowledger::reasoning::verdict_text(&rulebook.criteria[place], judged);
         }
-        let place = rulebook
-            .designations
-            .iter()
-            .position(|designation| designation.id == id)
-            .expect("a designation");
+        let place =
+            rulebook.designations.iter().position(|designation| designation.id == id).expect("a designation");
         let judged = &self.judgement.rulebooks[book].designations[place];
         kowledger::reasoning::with_closeness(judged.verdict, judged.closeness)
     }
@@ -221,20 +191,12 @@ impl Judged {
 
     /// Everything that stopped a clear of a criterion.
     pub fn stops(&self, short: &str, id: &str) -> Vec<Stop> {
-        self.criterion(short, id)
-            .stopped
-            .iter()
-            .flat_map(|clear| clear.stops.clone())
-            .collect()
+        self.criterion(short, id).stopped.iter().flat_map(|clear| clear.stops.clone()).collect()
     }
 
     /// The ids of the cautions that the row raises.
     pub fn cautions(&self) -> Vec<&'static str> {
-        self.judgement
-            .cautions
-            .iter()
-            .map(|raised| RULES.cautions[raised.caution].id.as_str())
-            .collect()
+        self.judgement.cautions.iter().map(|raised| RULES.cautions[raised.caution].id.as_str()).collect()
     }
 
     /// The sentence of a criterion.
@@ -247,10 +209,8 @@ impl Judged {
             judgement: &self.judgement,
         };
         let book = told.books().nth(Self::book(short)).expect("a built-in rulebook");
-        let (criterion, judged) = book
-            .criteria()
-            .find(|(criterion, _)| criterion.id == id)
-            .expect("a criterion");
+        let (criterion, judged) =
+            book.criteria().find(|(criterion, _)| criterion.id == id).expect("a criterion");
         criterion_line(book, criterion, judged).sentence
     }
 }

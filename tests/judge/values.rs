@@ -29,12 +29,16 @@ fn default_errors_are_those_of_the_documentation() {
     assert!(is_near(bcf(Basis::Measured), 0.21));
     assert!(is_near(bcf(Basis::Unstated), 0.3));
     assert!(is_near(sd(&row().measured(Property::Koc, Value::Point(100.0)), Property::Koc), 0.4));
-    assert!(is_near(sd(&row().measured(Property::AcuteToxicity, Value::Point(1.0)), Property::AcuteToxicity), 0.3));
+    assert!(is_near(
+        sd(&row().measured(Property::AcuteToxicity, Value::Point(1.0)), Property::AcuteToxicity),
+        0.3
+    ));
 }
 
 #[test]
 fn a_written_error_goes_before_the_default_and_an_approximate_value_doubles_it() {
-    let mut row = row().measured(Property::LogKow, Value::Point(4.0)).measured(Property::Bcf, Value::Point(100.0));
+    let mut row =
+        row().measured(Property::LogKow, Value::Point(4.0)).measured(Property::Bcf, Value::Point(100.0));
     let reading = &mut row.0.readings.get_mut(&Property::LogKow).expect("a log Kow")[0];
     reading.quantity.written_sd = Some(0.05);
     assert!(is_near(sd(&row, Property::LogKow), 0.05));
@@ -61,7 +65,8 @@ fn bcf_is_estimated_from_the_highest_and_koc_from_the_lowest_log_kow_of_the_best
         .measured(Property::LogKow, Value::Point(4.0))
         .with(Property::LogKow, Value::Point(5.0), Basis::Calculated);
     let evidence = evidence(&row);
-    let log = |property: Property| evidence.of(property)[0].interval.single().expect("a single value").log10();
+    let log =
+        |property: Property| evidence.of(property)[0].interval.single().expect("a single value").log10();
     // Veith 1979: 0.85 x 4 - 0.70. Sabljic 1995: 0.81 x 3 + 0.10.
     assert!(is_near(log(Property::Bcf), 2.70));
     assert!(is_near(log(Property::Koc), 2.53));
@@ -78,7 +83,8 @@ fn above_log_kow_6_the_parabola_leads_and_the_other_relations_are_kept_beside() 
     assert!(is_near(estimate.interval.single().expect("a value").log10(), 4.66));
     let Origin::Relation { relation, others, .. } = &estimate.origin else { panic!("an estimate") };
     assert_eq!(RULES.relations.relations[*relation].id, "eu-parabola");
-    let names: Vec<&str> = others.iter().map(|(other, _)| RULES.relations.relations[*other].id.as_str()).collect();
+    let names: Vec<&str> =
+        others.iter().map(|(other, _)| RULES.relations.relations[*other].id.as_str()).collect();
     assert_eq!(names, ["isnard-lambert-1988"]);
 }
 
@@ -100,7 +106,9 @@ fn a_log_kow_measured_while_partly_ionised_is_a_lower_bound() {
 
 #[test]
 fn values_of_one_row_far_apart_raise_a_caution() {
-    let two = |other| row().measured(Property::LogKow, Value::Point(3.0)).measured(Property::LogKow, Value::Point(other));
+    let two = |other| {
+        row().measured(Property::LogKow, Value::Point(3.0)).measured(Property::LogKow, Value::Point(other))
+    };
     assert!(two(3.6).judged().cautions().contains(&"log-kow-spread"));
     assert!(!two(3.5).judged().cautions().contains(&"log-kow-spread"));
 }

@@ -27,29 +27,19 @@ fn a_perfluorinated_acid_with_a_bcf_of_4_does_not_clear() {
         .measured(Property::Bcf, Value::Point(4.0))
         .measured(Property::LogKow, Value::Point(1.0))
         .judged();
-    for (book, criterion) in [
-        ("REACH", "B"),
-        ("REACH", "vB"),
-        ("CLP", "B"),
-        ("STOCKHOLM", "B"),
-        ("CANADA", "B"),
-    ] {
+    for (book, criterion) in
+        [("REACH", "B"), ("REACH", "vB"), ("CLP", "B"), ("STOCKHOLM", "B"), ("CANADA", "B")]
+    {
         assert_eq!(judged.verdict(book, criterion), Unresolved, "{book} {criterion}");
     }
 }
 
 #[test]
 fn acute_data_never_clear_t() {
-    let judged = row()
-        .measured(Property::AcuteToxicity, Value::Point(500.0))
-        .statements(&["H302"])
-        .judged();
+    let judged = row().measured(Property::AcuteToxicity, Value::Point(500.0)).statements(&["H302"]).judged();
     assert_eq!(judged.verdict("REACH", "T"), Unresolved);
     assert_eq!(
-        row()
-            .measured(Property::AcuteToxicity, Value::Point(500.0))
-            .judged()
-            .verdict("CLP", "T"),
+        row().measured(Property::AcuteToxicity, Value::Point(500.0)).judged().verdict("CLP", "T"),
         Unresolved
     );
 }
@@ -79,10 +69,7 @@ fn a_readily_biodegradable_alcohol_with_log_kow_5_screens_into_b_but_out_of_p_an
 
 #[test]
 fn a_metal_salt_is_out_of_scope_under_reach_and_never_cleared_elsewhere() {
-    let judged = row()
-        .named("zinc oxide")
-        .of_type(SubstanceType::Inorganic)
-        .judged();
+    let judged = row().named("zinc oxide").of_type(SubstanceType::Inorganic).judged();
     assert_eq!(judged.verdict("REACH", "P"), OutOfScope);
     assert_eq!(judged.verdict("CANADA", "B"), NoData);
     assert_eq!(judged.cell("STOCKHOLM", "Annex D indicators"), "unresolved");
@@ -96,18 +83,11 @@ fn a_polymer_clears_nothing_whatever_its_data_say() {
         .measured(Property::Bcf, Value::Point(3.0))
         .measured(Property::LogKow, Value::Point(-1.0))
         .judged();
-    let sorbing = row()
-        .of_type(SubstanceType::Polymer)
-        .measured(Property::Koc, Value::Point(1e6))
-        .judged();
+    let sorbing = row().of_type(SubstanceType::Polymer).measured(Property::Koc, Value::Point(1e6)).judged();
     assert_eq!(sorbing.verdict("CLP", "M"), Unresolved);
-    for (book, criterion) in [
-        ("REACH", "P"),
-        ("REACH", "B"),
-        ("STOCKHOLM", "B"),
-        ("CANADA", "P"),
-        ("CANADA", "B"),
-    ] {
+    for (book, criterion) in
+        [("REACH", "P"), ("REACH", "B"), ("STOCKHOLM", "B"), ("CANADA", "P"), ("CANADA", "B")]
+    {
         assert_eq!(judged.verdict(book, criterion), Unresolved, "{book} {criterion}");
     }
 }
@@ -115,11 +95,7 @@ fn a_polymer_clears_nothing_whatever_its_data_say() {
 /// A log Kow of an ion that sits at interfaces says nothing about accumulation; a measured BCF still does.
 #[test]
 fn a_quaternary_ammonium_surfactant_does_not_clear_by_log_kow() {
-    let named = || {
-        row()
-            .named("hexadecyltrimethylammonium bromide")
-            .of_type(SubstanceType::Surfactant)
-    };
+    let named = || row().named("hexadecyltrimethylammonium bromide").of_type(SubstanceType::Surfactant);
     let by_log_kow = named().measured(Property::LogKow, Value::Point(1.8)).judged();
     assert_eq!(by_log_kow.verdict("REACH", "B"), Unresolved);
     assert_eq!(by_log_kow.verdict("CANADA", "B"), Unresolved);
@@ -137,15 +113,9 @@ fn a_row_with_a_name_only_has_no_data_and_nothing_is_cleared() {
 
 #[test]
 fn a_row_identified_by_name_alone_may_fire_but_not_clear() {
-    let fires = row()
-        .by_name_alone()
-        .measured(Property::Bcf, Value::Point(30_000.0))
-        .judged();
+    let fires = row().by_name_alone().measured(Property::Bcf, Value::Point(30_000.0)).judged();
     assert_eq!(fires.cell("REACH", "vB"), "fulfilled");
-    let clears = row()
-        .by_name_alone()
-        .measured(Property::Bcf, Value::Point(3.0))
-        .judged();
+    let clears = row().by_name_alone().measured(Property::Bcf, Value::Point(3.0)).judged();
     assert_eq!(clears.verdict("REACH", "vB"), Unresolved);
 }
 
@@ -156,29 +126,18 @@ fn log_kow_greater_than_6_screens_in_everywhere_without_a_close_call() {
     for book in ["REACH", "CLP", "STOCKHOLM", "CANADA"] {
         assert_eq!(judged.cell(book, "B"), "screens in", "{book}");
     }
-    assert!(
-        !judged.sentence("REACH", "B").contains("estimated"),
-        "{}",
-        judged.sentence("REACH", "B")
-    );
+    assert!(!judged.sentence("REACH", "B").contains("estimated"), "{}", judged.sentence("REACH", "B"));
 }
 
 #[test]
 fn a_bcf_is_compared_at_5_percent_lipid_under_the_eu_rules_and_as_reported_elsewhere() {
-    let lipid = |percent| Conditions {
-        lipid: Some(percent),
-        ..Conditions::default()
-    };
-    let fat_fish = row()
-        .under(Property::Bcf, Value::Point(6000.0), Basis::Measured, lipid(10.0))
-        .judged();
+    let lipid = |percent| Conditions { lipid: Some(percent), ..Conditions::default() };
+    let fat_fish = row().under(Property::Bcf, Value::Point(6000.0), Basis::Measured, lipid(10.0)).judged();
     // 6000 x 5 / 10 = 3000.
     assert_eq!(fat_fish.cell("REACH", "B"), "fulfilled (close call)");
     assert_eq!(fat_fish.verdict("REACH", "vB"), NotFulfilled);
     assert_eq!(fat_fish.cell("CANADA", "B"), "fulfilled (close call)");
-    let lean_fish = row()
-        .under(Property::Bcf, Value::Point(1200.0), Basis::Measured, lipid(2.5))
-        .judged();
+    let lean_fish = row().under(Property::Bcf, Value::Point(1200.0), Basis::Measured, lipid(2.5)).judged();
     // 1200 x 5 / 2.5 = 2400.
     assert_eq!(lean_fish.cell("REACH", "B"), "fulfilled (close call)");
 }

@@ -17,15 +17,8 @@ fn measured_pbt() -> Row {
 #[test]
 fn the_words_are_those_of_the_documentation_in_order_of_concern() {
     let words: Vec<&str> = Verdict::ALL.iter().map(|verdict| verdict.words()).collect();
-    let documented = [
-        "fulfilled",
-        "screens in",
-        "unresolved",
-        "no data",
-        "screens out",
-        "not fulfilled",
-        "out of scope",
-    ];
+    let documented =
+        ["fulfilled", "screens in", "unresolved", "no data", "screens out", "not fulfilled", "out of scope"];
     assert_eq!(words, documented);
     assert!(Verdict::ALL.windows(2).all(|pair| pair[0] > pair[1]));
 }
@@ -57,10 +50,8 @@ fn one_screening_part_makes_the_designation_screen_in() {
 
 #[test]
 fn one_unanswered_part_leaves_the_designation_unresolved() {
-    let judged = row()
-        .measured(SOIL, Value::Point(900.0))
-        .measured(Property::Bcf, Value::Point(30_000.0))
-        .judged();
+    let judged =
+        row().measured(SOIL, Value::Point(900.0)).measured(Property::Bcf, Value::Point(30_000.0)).judged();
     assert_eq!(judged.cell("REACH", "T"), "no data");
     assert_eq!(judged.cell("REACH", "PBT"), "unresolved");
     assert_eq!(judged.cell("REACH", "vPvB"), "fulfilled");
@@ -105,10 +96,7 @@ fn a_close_call_is_said_after_the_word_and_reaches_the_designation() {
 
 #[test]
 fn inorganic_substances_are_out_of_scope_where_the_instrument_says_so_and_only_there() {
-    let judged = row()
-        .of_type(SubstanceType::Inorganic)
-        .named("sodium chloride")
-        .judged();
+    let judged = row().of_type(SubstanceType::Inorganic).named("sodium chloride").judged();
     for book in ["REACH", "CLP"] {
         assert_eq!(judged.cell(book, "P"), "out of scope");
         assert_eq!(judged.cell(book, "PBT"), "out of scope");
@@ -119,8 +107,5 @@ fn inorganic_substances_are_out_of_scope_where_the_instrument_says_so_and_only_t
 #[test]
 fn what_no_number_settles_is_always_unresolved() {
     assert_eq!(row().judged().cell("STOCKHOLM", "adverse effects"), "unresolved");
-    assert_eq!(
-        measured_pbt().judged().cell("STOCKHOLM", "adverse effects"),
-        "unresolved"
-    );
+    assert_eq!(measured_pbt().judged().cell("STOCKHOLM", "adverse effects"), "unresolved");
 }

@@ -58,10 +58,7 @@ impl RawBook {
             ),
         ];
         Self {
-            parts: parts
-                .into_iter()
-                .map(|(name, content)| (name.to_owned(), content.into_bytes()))
-                .collect(),
+            parts: parts.into_iter().map(|(name, content)| (name.to_owned(), content.into_bytes())).collect(),
         }
     }
 
@@ -84,11 +81,8 @@ impl RawBook {
 
     /// Writes the workbook.
     pub fn write(&self, path: &Path) -> Result<()> {
-        let parts: Vec<(&str, &[u8])> = self
-            .parts
-            .iter()
-            .map(|(name, content)| (name.as_str(), content.as_slice()))
-            .collect();
+        let parts: Vec<(&str, &[u8])> =
+            self.parts.iter().map(|(name, content)| (name.as_str(), content.as_slice())).collect();
         write_zip(path, &parts)
     }
 
@@ -104,11 +98,8 @@ impl RawBook {
         for (name, content) in &mut self.parts {
             if name == "xl/worksheets/sheet1.xml" {
                 let text = String::from_utf8_lossy(content).replace("UTF-8", "UTF-16");
-                *content = "\u{feff}"
-                    .encode_utf16()
-                    .chain(text.encode_utf16())
-                    .flat_map(u16::to_le_bytes)
-                    .collect();
+                *content =
+                    "\u{feff}".encode_utf16().chain(text.encode_utf16()).flat_map(u16::to_le_bytes).collect();
             }
         }
         self.write(path)
@@ -134,36 +125,21 @@ pub fn write_false_text_count(path: &Path) -> Result<()> {
 /// A text document in the container a workbook would have.
 pub fn write_text_document(path: &Path) -> Result<()> {
     let relations = r#"<Relationships><Relationship Id="rId1" Type="http://schemas.openxmlformats.org/officeDocument/2006/relationships/officeDocument" Target="word/document.xml"/></Relationships>"#;
-    write_zip(
-        path,
-        &[
-            ("_rels/.rels", relations.as_bytes()),
-            ("word/document.xml", b"<document/>"),
-        ],
-    )
+    write_zip(path, &[("_rels/.rels", relations.as_bytes()), ("word/document.xml", b"<document/>")])
 }
 
 /// An OpenDocument workbook, or what tells one.
 pub fn write_open_document(path: &Path) -> Result<()> {
     write_zip(
         path,
-        &[
-            ("mimetype", b"application/vnd.oasis.opendocument.spreadsheet"),
-            ("content.xml", b"<content/>"),
-        ],
+        &[("mimetype", b"application/vnd.oasis.opendocument.spreadsheet"), ("content.xml", b"<content/>")],
     )
 }
 
 /// A binary workbook in a zip container, or what tells one.
 pub fn write_xlsb(path: &Path) -> Result<()> {
     let relations = r#"<Relationships><Relationship Id="rId1" Type="http://schemas.openxmlformats.org/officeDocument/2006/relationships/officeDocument" Target="xl/workbook.bin"/></Relationships>"#;
-    write_zip(
-        path,
-        &[
-            ("_rels/.rels", relations.as_bytes()),
-            ("xl/workbook.bin", &[0x83, 0x01]),
-        ],
-    )
+    write_zip(path, &[("_rels/.rels", relations.as_bytes()), ("xl/workbook.bin", &[0x83, 0x01])])
 }
 
 /// The beginning of a compound file that has a stream of this name.

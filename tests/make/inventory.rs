@@ -72,31 +72,19 @@ fn write_sheet<'a>(
             continue;
         }
         for (column_place, column) in (0u16..).zip(layout.columns) {
-            write_cell(
-                sheet,
-                (place, column_place),
-                column,
-                layout,
-                text(row, column.field),
-            )?;
+            write_cell(sheet, (place, column_place), column, layout, text(row, column.field))?;
         }
     }
     let last_column = u16::try_from(layout.columns.len().saturating_sub(1))?;
     sheet.autofilter(header_row, 0, last_row, last_column)?;
     sheet.set_freeze_panes(header_row + 1, 4)?;
-    sheet
-        .set_landscape()
-        .set_paper_size(8)
-        .set_print_fit_to_pages(3, 0);
+    sheet.set_landscape().set_paper_size(8).set_print_fit_to_pages(3, 0);
     sheet.set_repeat_rows(header_row, header_row)?;
     Ok(())
 }
 
 fn write_titles(sheet: &mut Worksheet, layout: &Layout) -> Result<(), XlsxError> {
-    let large = Format::new()
-        .set_bold()
-        .set_font_size(14)
-        .set_font_color(Color::RGB(0x1F_3A4D));
+    let large = Format::new().set_bold().set_font_size(14).set_font_color(Color::RGB(0x1F_3A4D));
     let small = Format::new().set_italic().set_font_color(Color::RGB(0x59_5959));
     for (place, title) in (0u32..).zip(layout.titles) {
         let format = if place == 0 { &large } else { &small };
@@ -142,12 +130,7 @@ fn write_cell(
         Holds::CasNumbers
             if text.len() == 10 && text.split('-').nth(2).is_some_and(|last| last.len() == 2) =>
         {
-            write_date(
-                sheet,
-                (row, place),
-                text,
-                &format.set_num_format(layout.date_format),
-            )?
+            write_date(sheet, (row, place), text, &format.set_num_format(layout.date_format))?
         }
         Holds::Words | Holds::CasNumbers => sheet.write_with_format(row, place, text, &format)?,
     };
@@ -164,15 +147,12 @@ fn write_date<'a>(
 }
 
 fn cell_format(column: &Column, layout: &Layout) -> Format {
-    let mut format = Format::new()
-        .set_border_bottom(FormatBorder::Hair)
-        .set_border_bottom_color(Color::RGB(0xBF_BFBF));
+    let mut format =
+        Format::new().set_border_bottom(FormatBorder::Hair).set_border_bottom_color(Color::RGB(0xBF_BFBF));
     format = match column.holds {
         Holds::Words | Holds::CasNumbers => format.set_indent(1),
         Holds::Numbers(number_format) => format.set_num_format(number_format).set_align(FormatAlign::Right),
-        Holds::Dates => format
-            .set_num_format(layout.date_format)
-            .set_align(FormatAlign::Right),
+        Holds::Dates => format.set_num_format(layout.date_format).set_align(FormatAlign::Right),
     };
     match column.fill {
         Some(colour) => format.set_background_color(Color::RGB(colour)),
@@ -184,10 +164,7 @@ fn write_notes(sheet: &mut Worksheet) -> Result<(), XlsxError> {
     let bold = Format::new().set_bold();
     let plain = Format::new().set_text_wrap().set_align(FormatAlign::Top);
     sheet.set_name("Read me")?;
-    sheet
-        .set_landscape()
-        .set_paper_size(9)
-        .set_print_fit_to_pages(1, 0);
+    sheet.set_landscape().set_paper_size(9).set_print_fit_to_pages(1, 0);
     sheet.set_column_width(0, 120)?;
     for (place, note) in (0u32..).zip(NOTES) {
         let format = if place == 0 { &bold } else { &plain };

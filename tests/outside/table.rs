@@ -11,8 +11,12 @@ pub fn lines(name: &str) -> Vec<Line> {
     let path = Path::new(env!("CARGO_MANIFEST_DIR")).join("tests/fixtures").join(name);
     let delimiter = if path.extension().is_some_and(|ending| ending == "tsv") { b'\t' } else { b',' };
     let mut reader = csv::ReaderBuilder::new().delimiter(delimiter).from_path(path).expect("the table opens");
-    let lines: Vec<Line> = reader.deserialize().map(|line| line.expect("the table has its columns")).collect();
-    assert!(lines.iter().all(|line| line.get("source").is_some_and(|source| !source.is_empty())), "{name} names its sources");
+    let lines: Vec<Line> =
+        reader.deserialize().map(|line| line.expect("the table has its columns")).collect();
+    assert!(
+        lines.iter().all(|line| line.get("source").is_some_and(|source| !source.is_empty())),
+        "{name} names its sources"
+    );
     lines
 }
 

@@ -23,10 +23,7 @@ fn every_cell_of_the_table_is_read_as_written_there() {
             _ => found == expected.join("\t").trim_end(),
         };
         if !fits {
-            wrong.push(format!(
-                "{header} | {cell}\n  expected {}\n  found    {found}",
-                expected.join("\t")
-            ));
+            wrong.push(format!("{header} | {cell}\n  expected {}\n  found    {found}", expected.join("\t")));
         }
     }
     assert!(rows > 150, "{rows}");
@@ -41,13 +38,7 @@ fn describe(header: &str, cell: &str) -> String {
     if let Some(fault) = substance.faults.first() {
         return format!("fault: {}", fault.kind);
     }
-    match substance
-        .readings
-        .values()
-        .flatten()
-        .collect::<Vec<_>>()
-        .as_slice()
-    {
+    match substance.readings.values().flatten().collect::<Vec<_>>().as_slice() {
         [] => "missing".to_owned(),
         [reading] => describe_reading(reading),
         _ => "several readings".to_owned(),
@@ -76,21 +67,13 @@ fn conditions(reading: &Reading) -> String {
     let parts = [
         reading.quantity.approximate.then(|| "approximate".to_owned()),
         reading.quantity.written_sd.map(|sd| format!("sd {sd}")),
-        conditions
-            .temperature
-            .map(|temperature| format!("{temperature} °C")),
+        conditions.temperature.map(|temperature| format!("{temperature} °C")),
         conditions.ph.map(|ph| format!("pH {ph}")),
         conditions.lipid.map(|lipid| format!("lipid {lipid}")),
         conditions.reliability.map(|score| format!("reliability {score}")),
         degradation,
-        conditions
-            .organism
-            .as_ref()
-            .map(|organism| format!("organism {organism}")),
-        conditions
-            .method
-            .as_ref()
-            .map(|method| format!("method {method}")),
+        conditions.organism.as_ref().map(|organism| format!("organism {organism}")),
+        conditions.method.as_ref().map(|method| format!("method {method}")),
     ];
     parts.into_iter().flatten().collect::<Vec<_>>().join("; ")
 }

@@ -32,9 +32,7 @@ fn every_header_of_the_table_names_its_field_and_unit() {
         let found_field = found.map_or("none", |column| column.field.id());
         let found_unit = found.and_then(|column| column.unit).map_or("", Unit::symbol);
         if (found_field, found_unit) != (field, unit) {
-            wrong.push(format!(
-                "`{header}`: expected {field} {unit}, found {found_field} {found_unit}"
-            ));
+            wrong.push(format!("`{header}`: expected {field} {unit}, found {found_field} {found_unit}"));
         }
     }
     assert!(wrong.is_empty(), "{}", wrong.join("\n"));
@@ -43,14 +41,9 @@ fn every_header_of_the_table_names_its_field_and_unit() {
 #[test]
 fn every_field_is_named_in_both_languages() {
     for language in ["en", "de"] {
-        let named: BTreeSet<&str> = table()
-            .filter(|(of, ..)| *of == language)
-            .map(|(_, _, field, _)| field)
-            .collect();
-        let missing: Vec<&str> = Field::all()
-            .map(Field::id)
-            .filter(|id| !named.contains(id))
-            .collect();
+        let named: BTreeSet<&str> =
+            table().filter(|(of, ..)| *of == language).map(|(_, _, field, _)| field).collect();
+        let missing: Vec<&str> = Field::all().map(Field::id).filter(|id| !named.contains(id)).collect();
         assert!(missing.is_empty(), "{language}: {missing:?}");
     }
 }
@@ -82,21 +75,14 @@ fn a_row_of_units_below_the_names_belongs_to_the_header() {
     let recognised = columns_of(&rows).unwrap();
     assert_eq!((recognised.header_row, recognised.first_data_row), (1, 2));
     let soil = column(&recognised, Field::from_id("half-life-soil").unwrap()).unwrap();
-    assert_eq!(
-        (soil.header.as_str(), soil.unit.map(Unit::symbol)),
-        ("DT50 soil [wk]", Some("wk"))
-    );
+    assert_eq!((soil.header.as_str(), soil.unit.map(Unit::symbol)), ("DT50 soil [wk]", Some("wk")));
     let solubility = column(&recognised, Field::Property(Property::WaterSolubility)).unwrap();
     assert_eq!(solubility.unit.map(Unit::symbol), Some("µg/L"));
 }
 
 #[test]
 fn a_first_row_of_data_is_no_row_of_units() {
-    let rows = [
-        text_row(0, &["Name", "log Kow"]),
-        text_row(1, &["d", "4.5"]),
-        text_row(2, &["K", ""]),
-    ];
+    let rows = [text_row(0, &["Name", "log Kow"]), text_row(1, &["d", "4.5"]), text_row(2, &["K", ""])];
     assert_eq!(columns_of(&rows).unwrap().header_row, 0);
 }
 
@@ -114,21 +100,14 @@ fn an_identity_column_makes_an_inventory_and_a_name_needs_one_more_field() {
         (["Name", "Colour"], false),
         (["log Kow", "BCF"], false),
     ] {
-        assert_eq!(
-            columns_of(&[text_row(0, &headers)]).is_ok(),
-            inventory,
-            "{headers:?}"
-        );
+        assert_eq!(columns_of(&[text_row(0, &headers)]).is_ok(), inventory, "{headers:?}");
     }
 }
 
 #[test]
 fn a_product_name_is_the_name_of_the_substance_only_where_no_other_column_is() {
     let alone = columns_of(&[text_row(0, &["Product name", "CAS"])]).unwrap();
-    assert_eq!(
-        alone.columns.first().map(|column| column.field),
-        Some(Field::Name)
-    );
+    assert_eq!(alone.columns.first().map(|column| column.field), Some(Field::Name));
     let beside = columns_of(&[text_row(0, &["Product name", "CAS", "Substance name"])]).unwrap();
     let fields: Vec<Field> = beside.columns.iter().map(|column| column.field).collect();
     assert_eq!(fields, [Field::Product, Field::CasNumber, Field::Name]);
@@ -158,19 +137,10 @@ fn two_columns_of_one_property_are_both_kept_with_their_basis() {
 
 #[test]
 fn headers_carry_conditions() {
-    let headers = [
-        "CAS",
-        "DT50 soil (12 °C, primary)",
-        "LC50 fish (mg/L)",
-        "log Kow OECD 117",
-        "log D (pH 7,4)",
-    ];
+    let headers =
+        ["CAS", "DT50 soil (12 °C, primary)", "LC50 fish (mg/L)", "log Kow OECD 117", "log D (pH 7,4)"];
     let recognised = columns_of(&[text_row(0, &headers)]).unwrap();
-    let conditions: Vec<_> = recognised
-        .columns
-        .iter()
-        .map(|column| &column.conditions)
-        .collect();
+    let conditions: Vec<_> = recognised.columns.iter().map(|column| &column.conditions).collect();
     assert_eq!(conditions[1].temperature, Some(12.0));
     assert_eq!(conditions[2].organism.as_deref(), Some("fish"));
     assert_eq!(recognised.columns[3].basis, Some(Basis::Measured));
@@ -181,10 +151,7 @@ fn headers_carry_conditions() {
 fn the_decimal_style_is_the_columns_else_the_sheets_else_the_point() {
     let rows = |cells: &[[&str; 3]]| -> Vec<Row> {
         let header = text_row(0, &["CAS", "BCF", "log Kow"]);
-        let data = cells
-            .iter()
-            .enumerate()
-            .map(|(place, texts)| text_row(place + 1, texts));
+        let data = cells.iter().enumerate().map(|(place, texts)| text_row(place + 1, texts));
         std::iter::once(header).chain(data).collect()
     };
     let styles = |rows: &[Row]| {
@@ -202,10 +169,7 @@ fn the_decimal_style_is_the_columns_else_the_sheets_else_the_point() {
 fn numbers_that_could_group_thousands_are_remarked_on() {
     let header = text_row(0, &["CAS", "BCF"]);
     let remarks = |cells: &[&str]| {
-        let data = cells
-            .iter()
-            .enumerate()
-            .map(|(place, text)| text_row(place + 1, &["", text]));
+        let data = cells.iter().enumerate().map(|(place, text)| text_row(place + 1, &["", text]));
         let rows: Vec<Row> = std::iter::once(header.clone()).chain(data).collect();
         columns_of(&rows).unwrap().remarks
     };
@@ -221,28 +185,17 @@ fn numbers_that_could_group_thousands_are_remarked_on() {
 }
 
 fn recognised_with(headers: &[&str], overrides: &[&str]) -> Result<Recognised, String> {
-    let overrides = overrides
-        .iter()
-        .map(|text| ColumnOverride::parse(text))
-        .collect::<Result<Vec<_>, _>>()?;
-    recognise(
-        "Sheet",
-        &[text_row(0, headers)],
-        &ColumnWords::built_in()?,
-        &overrides,
-    )
-    .ok_or_else(|| "no inventory".to_owned())
+    let overrides =
+        overrides.iter().map(|text| ColumnOverride::parse(text)).collect::<Result<Vec<_>, _>>()?;
+    recognise("Sheet", &[text_row(0, headers)], &ColumnWords::built_in()?, &overrides)
+        .ok_or_else(|| "no inventory".to_owned())
 }
 
 #[test]
 fn the_user_can_name_a_column_or_leave_it_aside() {
     let headers = ["CAS", "Fettliebe", "log Kow"];
     let recognised = recognised_with(&headers, &["Fettliebe = log-kow", "LOG KOW=ignore"]).unwrap();
-    let fields: Vec<&str> = recognised
-        .columns
-        .iter()
-        .map(|column| column.field.id())
-        .collect();
+    let fields: Vec<&str> = recognised.columns.iter().map(|column| column.field.id()).collect();
     assert_eq!(fields, ["cas-number", "log-kow"]);
     assert_eq!(recognised.unknown, [(2, "log Kow".to_owned())]);
     assert_eq!(recognised.columns[1].reason, "told by --column");
@@ -254,22 +207,9 @@ fn an_override_that_means_nothing_is_refused_with_the_nearest_field() {
         ColumnOverride::parse("Stoff=nmae").unwrap_err(),
         "there is no field `nmae`; did you mean `name`?"
     );
-    assert!(
-        ColumnOverride::parse("Stoff")
-            .unwrap_err()
-            .contains("--column 'Header=field'")
-    );
-    assert!(
-        ColumnOverride::parse("=name")
-            .unwrap_err()
-            .contains("names no header")
-    );
-    assert_eq!(
-        ColumnOverride::parse("a=b=name")
-            .map(|told| told.header)
-            .as_deref(),
-        Ok("a=b")
-    );
+    assert!(ColumnOverride::parse("Stoff").unwrap_err().contains("--column 'Header=field'"));
+    assert!(ColumnOverride::parse("=name").unwrap_err().contains("names no header"));
+    assert_eq!(ColumnOverride::parse("a=b=name").map(|told| told.header).as_deref(), Ok("a=b"));
 }
 
 #[test]
@@ -303,20 +243,14 @@ fn several_columns_of_reliability_speak_of_the_value_to_their_left() {
     let headers = ["CAS", "log Kow", "Reliability", "BCF", "Reliability"];
     let recognised = columns_of(&[text_row(0, &headers)]).unwrap();
     let about: Vec<_> = recognised.columns.iter().map(|column| column.about).collect();
-    assert_eq!(
-        about,
-        [None, None, Some(Property::LogKow), None, Some(Property::Bcf)]
-    );
+    assert_eq!(about, [None, None, Some(Property::LogKow), None, Some(Property::Bcf)]);
     let named = columns_of(&[text_row(0, &["CAS", "log Kow", "BCF", "Reliability log Kow"])]).unwrap();
     assert_eq!(named.columns[3].about, Some(Property::LogKow));
 }
 
 #[test]
 fn rows_without_text_are_no_header() {
-    let rows = [
-        content_row(0, &[CellContent::Number(1.0), CellContent::Empty]),
-        text_row(1, &[]),
-    ];
+    let rows = [content_row(0, &[CellContent::Number(1.0), CellContent::Empty]), text_row(1, &[])];
     assert!(columns_of(&rows).is_err());
 }
 

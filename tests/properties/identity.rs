@@ -6,10 +6,7 @@ use kowledger::workbook::CellContent;
 use crate::sheet::{read_cells, read_last};
 
 fn row(cas: &str, ec: &str, smiles: &str) -> Result<Substance, String> {
-    read_last(&[
-        &["Name", "CAS", "EC number", "SMILES"],
-        &["a name", cas, ec, smiles],
-    ])
+    read_last(&[&["Name", "CAS", "EC number", "SMILES"], &["a name", cas, ec, smiles]])
 }
 
 fn faults(substance: &Substance) -> Vec<String> {
@@ -34,19 +31,12 @@ fn a_cas_number_is_read_in_every_usual_form() {
         "50-29-3; 50-29-3",
     ] {
         let substance = row(text, "", "").unwrap();
-        assert_eq!(
-            substance.cas.map(|cas| cas.value.to_string()).as_deref(),
-            Some("50-29-3"),
-            "{text}"
-        );
+        assert_eq!(substance.cas.map(|cas| cas.value.to_string()).as_deref(), Some("50-29-3"), "{text}");
         assert_eq!(substance.identity, Identity::Identified, "{text}");
         assert!(substance.faults.is_empty(), "{text}");
     }
     let number = cas_cell(CellContent::Number(50_293.0)).unwrap();
-    assert_eq!(
-        number.cas.map(|cas| cas.value.to_string()).as_deref(),
-        Some("50-29-3")
-    );
+    assert_eq!(number.cas.map(|cas| cas.value.to_string()).as_deref(), Some("50-29-3"));
 }
 
 #[test]
@@ -61,27 +51,15 @@ fn a_wrong_check_digit_is_a_fault_that_names_the_right_one() {
     );
     assert_eq!((substance.cas, substance.identity), (None, Identity::NameAlone));
     let substance = row("", "200-024-4", "").unwrap();
-    assert!(
-        faults(&substance)[0].contains("write `200-024-3`"),
-        "{:?}",
-        substance.faults
-    );
+    assert!(faults(&substance)[0].contains("write `200-024-3`"), "{:?}", substance.faults);
 }
 
 #[test]
 fn two_cas_numbers_in_a_cell_identify_nothing_even_beside_an_ec_number() {
-    for text in [
-        "50-29-3, 7732-18-5",
-        "50-29-3; 50-29-4",
-        "50-29-3/7732-18-5",
-        "50-29-3\n7732-18-5",
-    ] {
+    for text in ["50-29-3, 7732-18-5", "50-29-3; 50-29-4", "50-29-3/7732-18-5", "50-29-3\n7732-18-5"] {
         let substance = row(text, "200-024-3", "").unwrap();
         assert_eq!(substance.identity, Identity::NotIdentified, "{text}");
-        assert!(
-            faults(&substance)[0].contains("holds several CAS numbers"),
-            "{text}"
-        );
+        assert!(faults(&substance)[0].contains("holds several CAS numbers"), "{text}");
     }
 }
 
@@ -89,38 +67,20 @@ fn two_cas_numbers_in_a_cell_identify_nothing_even_beside_an_ec_number() {
 fn any_one_identifier_identifies_and_a_name_or_row_number_alone_does_not() {
     assert_eq!(row("50-29-3", "", "").unwrap().identity, Identity::Identified);
     assert_eq!(row("", "200-024-3", "").unwrap().identity, Identity::Identified);
-    assert_eq!(
-        row("", "", "Clc1ccc(cc1)C(c1ccc(Cl)cc1)C(Cl)(Cl)Cl")
-            .unwrap()
-            .identity,
-        Identity::Identified
-    );
+    assert_eq!(row("", "", "Clc1ccc(cc1)C(c1ccc(Cl)cc1)C(Cl)(Cl)Cl").unwrap().identity, Identity::Identified);
     assert_eq!(row("", "", "").unwrap().identity, Identity::NameAlone);
     assert_eq!(row("n.a.", "-", "k.A.").unwrap().identity, Identity::NameAlone);
     let by_key = read_last(&[&["InChIKey"], &["InChIKey=YVGGHNCTFXOJCH-UHFFFAOYSA-N"]]).unwrap();
     assert_eq!(by_key.identity, Identity::Identified);
-    assert_eq!(
-        by_key.inchi_key.map(|key| key.value).as_deref(),
-        Some("YVGGHNCTFXOJCH-UHFFFAOYSA-N")
-    );
+    assert_eq!(by_key.inchi_key.map(|key| key.value).as_deref(), Some("YVGGHNCTFXOJCH-UHFFFAOYSA-N"));
 }
 
 #[test]
 fn words_are_no_smiles() {
     let substance = row("", "", "DDT technical").unwrap();
-    assert_eq!(
-        (substance.smiles.is_none(), substance.identity),
-        (true, Identity::NameAlone)
-    );
+    assert_eq!((substance.smiles.is_none(), substance.identity), (true, Identity::NameAlone));
     assert!(faults(&substance)[0].ends_with("is no SMILES; write, for example, `CCO`"));
-    for smiles in [
-        "CCO",
-        "[Na+].[Cl-]",
-        "C[C@@H](N)C(=O)O",
-        "F/C=C/F",
-        "c1ccc2[nH]ccc2c1",
-        "CC%10CC%10",
-    ] {
+    for smiles in ["CCO", "[Na+].[Cl-]", "C[C@@H](N)C(=O)O", "F/C=C/F", "c1ccc2[nH]ccc2c1", "CC%10CC%10"] {
         assert!(row("", "", smiles).unwrap().smiles.is_some(), "{smiles}");
     }
 }
@@ -136,41 +96,23 @@ fn a_date_that_was_a_cas_number_is_read_back_when_its_check_digit_agrees() {
         (CellContent::DateTime(27_522.0), "75-05-8"),
     ] {
         let substance = cas_cell(content).unwrap();
-        assert_eq!(
-            substance.cas.as_ref().map(|cas| cas.value.to_string()).as_deref(),
-            Some(number)
-        );
+        assert_eq!(substance.cas.as_ref().map(|cas| cas.value.to_string()).as_deref(), Some(number));
         assert_eq!(substance.identity, Identity::RepairedDate);
     }
 }
 
 #[test]
 fn a_repaired_date_beside_a_second_identifier_is_identified() {
-    assert_eq!(
-        row("1918-02-01", "200-024-3", "").unwrap().identity,
-        Identity::Identified
-    );
-    assert_eq!(
-        row("1918-02-01", "", "CCO").unwrap().identity,
-        Identity::Identified
-    );
-    assert_eq!(
-        row("1918-02-01", "", "").unwrap().identity,
-        Identity::RepairedDate
-    );
+    assert_eq!(row("1918-02-01", "200-024-3", "").unwrap().identity, Identity::Identified);
+    assert_eq!(row("1918-02-01", "", "CCO").unwrap().identity, Identity::Identified);
+    assert_eq!(row("1918-02-01", "", "").unwrap().identity, Identity::RepairedDate);
 }
 
 #[test]
 fn a_date_that_gives_no_cas_number_is_a_fault() {
-    for content in [
-        CellContent::DateTime(6608.0),
-        CellContent::Text("1918-02-15".to_owned()),
-    ] {
+    for content in [CellContent::DateTime(6608.0), CellContent::Text("1918-02-15".to_owned())] {
         let substance = cas_cell(content).unwrap();
-        assert_eq!(
-            (substance.cas.is_none(), substance.identity),
-            (true, Identity::NameAlone)
-        );
+        assert_eq!((substance.cas.is_none(), substance.identity), (true, Identity::NameAlone));
         assert!(faults(&substance)[0].contains("gives no CAS number when read back"));
     }
 }
@@ -179,19 +121,12 @@ fn a_date_that_gives_no_cas_number_is_a_fault() {
 fn an_ec_number_is_read_with_and_without_hyphens() {
     for text in ["200-024-3", "2000243", "EC 200-024-3", "200‑024‑3"] {
         assert_eq!(
-            row("", text, "")
-                .unwrap()
-                .ec
-                .map(|ec| ec.value.to_string())
-                .as_deref(),
+            row("", text, "").unwrap().ec.map(|ec| ec.value.to_string()).as_deref(),
             Some("200-024-3"),
             "{text}"
         );
     }
-    assert_eq!(
-        row("", "200-024-3, 200-001-8", "").unwrap().identity,
-        Identity::NotIdentified
-    );
+    assert_eq!(row("", "200-024-3, 200-001-8", "").unwrap().identity, Identity::NotIdentified);
 }
 
 #[test]
@@ -207,22 +142,14 @@ fn mixtures_and_articles_are_not_identified_and_say_what_to_do() {
         assert!(faults(&substance)[0].contains(part), "{words}");
     }
     let substance = read_last(&[&["CAS", "Row type"], &["50-29-3", "Stoff"]]).unwrap();
-    assert_eq!(
-        (substance.identity, substance.faults.len()),
-        (Identity::Identified, 0)
-    );
+    assert_eq!((substance.identity, substance.faults.len()), (Identity::Identified, 0));
     let by_type = read_last(&[&["CAS", "Substance type"], &["50-29-3", "Gemisch"]]).unwrap();
     assert_eq!(by_type.identity, Identity::NotIdentified);
 }
 
 #[test]
 fn sodium_is_a_name_and_na_is_not() {
-    for (text, name) in [
-        ("Na", Some("Na")),
-        ("NA", None),
-        ("n/a", None),
-        ("DDT", Some("DDT")),
-    ] {
+    for (text, name) in [("Na", Some("Na")), ("NA", None), ("n/a", None), ("DDT", Some("DDT"))] {
         let substance = read_last(&[&["CAS", "Name"], &["50-29-3", text]]).unwrap();
         assert_eq!(substance.name.map(|name| name.value).as_deref(), name, "{text}");
     }

@@ -21,12 +21,7 @@ const DIMENSIONS: [Dimension; 11] = [
 ];
 
 fn read_as(dimension: Dimension, decimal: DecimalStyle) -> ReadAs {
-    ReadAs {
-        dimension,
-        default_unit: dimension.canonical(),
-        decimal,
-        molar_mass: None,
-    }
+    ReadAs { dimension, default_unit: dimension.canonical(), decimal, molar_mass: None }
 }
 
 /// Numbers with at most four digits, as they are written in cells.
@@ -75,13 +70,7 @@ fn members(interval: Interval, limit: f64, shares: &[f64]) -> Vec<f64> {
     let low = interval.low().number().unwrap_or(limit.min(0.0) - 1e15);
     let high = interval.high().number().unwrap_or(limit.max(0.0) + 1e15);
     let between = shares.iter().map(|share| low + share * (high - low));
-    let at_the_limit = [
-        limit,
-        limit.next_down(),
-        limit.next_up(),
-        limit - 1.0,
-        limit + 1.0,
-    ];
+    let at_the_limit = [limit, limit.next_down(), limit.next_up(), limit - 1.0, limit + 1.0];
     [low, high, low.next_up(), high.next_down()]
         .into_iter()
         .chain(at_the_limit)
@@ -181,10 +170,7 @@ fn an_absurdly_long_text_is_refused_at_once() {
 
 #[test]
 fn molar_concentrations_use_the_molar_mass_of_the_row() {
-    let read = ReadAs {
-        molar_mass: Some(100.0),
-        ..read_as(Dimension::Concentration, DecimalStyle::Point)
-    };
+    let read = ReadAs { molar_mass: Some(100.0), ..read_as(Dimension::Concentration, DecimalStyle::Point) };
     let parsed = parse_quantity("2 mmol/L", read).unwrap();
     assert_eq!(parsed.quantity.single(), Some(200.0));
     assert_eq!(parsed.quantity.unit, Unit::MillimolePerLitre);

@@ -74,11 +74,7 @@ fn ready_biodegradability_is_read_from_words_and_from_numbers() {
         ("0 %", NotReady),
     ] {
         let substance = ready_row(text).unwrap();
-        assert_eq!(
-            ready(&substance).map(|ready| ready.result),
-            Some(result),
-            "{text}"
-        );
+        assert_eq!(ready(&substance).map(|ready| ready.result), Some(result), "{text}");
         assert!(substance.faults.is_empty(), "{text}: {:?}", substance.faults);
     }
 }
@@ -86,36 +82,15 @@ fn ready_biodegradability_is_read_from_words_and_from_numbers() {
 #[test]
 fn what_settles_nothing_on_ready_biodegradability_gives_no_reading_and_a_fault() {
     for (text, part) in [
-        (
-            "inherently biodegradable",
-            "does not settle ready biodegradability",
-        ),
+        ("inherently biodegradable", "does not settle ready biodegradability"),
         ("inhärent abbaubar", "does not settle ready biodegradability"),
-        (
-            "inherently (75 %, OECD 302B)",
-            "does not settle ready biodegradability",
-        ),
-        (
-            "not tested for ready biodegradability",
-            "is no result of a ready biodegradability test",
-        ),
-        (
-            "ready biodegradability unknown",
-            "is no result of a ready biodegradability test",
-        ),
-        (
-            "ready biodegradability",
-            "is no result of a ready biodegradability test",
-        ),
-        (
-            "expected to be readily biodegradable",
-            "is no result of a ready biodegradability test",
-        ),
+        ("inherently (75 %, OECD 302B)", "does not settle ready biodegradability"),
+        ("not tested for ready biodegradability", "is no result of a ready biodegradability test"),
+        ("ready biodegradability unknown", "is no result of a ready biodegradability test"),
+        ("ready biodegradability", "is no result of a ready biodegradability test"),
+        ("expected to be readily biodegradable", "is no result of a ready biodegradability test"),
         ("no information", "is no result of a ready biodegradability test"),
-        (
-            "leichte Abbaubarkeit nicht geprüft",
-            "is no result of a ready biodegradability test",
-        ),
+        ("leichte Abbaubarkeit nicht geprüft", "is no result of a ready biodegradability test"),
         ("biodegradable", "is no result of a ready biodegradability test"),
         ("soon", "is no result of a ready biodegradability test"),
         ("0.82", "may be a fraction or a percentage"),
@@ -123,11 +98,7 @@ fn what_settles_nothing_on_ready_biodegradability_gives_no_reading_and_a_fault()
     ] {
         let substance = ready_row(text).unwrap();
         assert_eq!(ready(&substance), None, "{text}");
-        assert!(
-            substance.faults[0].to_string().contains(part),
-            "{text}: {}",
-            substance.faults[0]
-        );
+        assert!(substance.faults[0].to_string().contains(part), "{text}: {}", substance.faults[0]);
     }
     let missing = ready_row("n.d.").unwrap();
     assert_eq!((ready(&missing), missing.faults.len()), (None, 0));
@@ -135,16 +106,9 @@ fn what_settles_nothing_on_ready_biodegradability_gives_no_reading_and_a_fault()
 
 #[test]
 fn words_against_numbers_are_open_and_a_fault() {
-    for text in [
-        "readily biodegradable (40 %, 28 d)",
-        "not readily biodegradable (82 %, 28 d)",
-    ] {
+    for text in ["readily biodegradable (40 %, 28 d)", "not readily biodegradable (82 %, 28 d)"] {
         let substance = ready_row(text).unwrap();
-        assert_eq!(
-            ready(&substance).map(|ready| ready.result),
-            Some(DegradationTest::Open),
-            "{text}"
-        );
+        assert_eq!(ready(&substance).map(|ready| ready.result), Some(DegradationTest::Open), "{text}");
         assert_eq!(substance.faults.len(), 1, "{text}");
     }
 }
@@ -159,15 +123,9 @@ fn true_and_false_answer_the_question_of_the_header() {
         (CellContent::Number(65.0), Some(DegradationTest::Open)),
         (CellContent::Number(0.82), None),
     ] {
-        let substance = read_cells(
-            &["CAS", "Ready biodegradability"],
-            &[CellContent::Empty, content.clone()],
-        );
-        assert_eq!(
-            ready(&substance.unwrap()).map(|ready| ready.result),
-            result,
-            "{content:?}"
-        );
+        let substance =
+            read_cells(&["CAS", "Ready biodegradability"], &[CellContent::Empty, content.clone()]);
+        assert_eq!(ready(&substance.unwrap()).map(|ready| ready.result), result, "{content:?}");
     }
 }
 
@@ -179,11 +137,7 @@ fn a_test_number_makes_a_result_measured_and_a_model_makes_it_calculated() {
         ("readily biodegradable (QSAR)", Basis::Calculated),
         ("not readily biodegradable (predicted)", Basis::Calculated),
     ] {
-        assert_eq!(
-            ready(&ready_row(text).unwrap()).map(|ready| ready.basis),
-            Some(basis),
-            "{text}"
-        );
+        assert_eq!(ready(&ready_row(text).unwrap()).map(|ready| ready.basis), Some(basis), "{text}");
     }
     let headers = ["CAS", "Ready biodegradability", "Guideline"];
     let beside = read_last(&[&headers, &["50-29-3", "82 %", "OECD 301F"]]).unwrap();
@@ -196,12 +150,7 @@ fn a_test_number_makes_a_result_measured_and_a_model_makes_it_calculated() {
 fn an_inherent_test_has_its_guideline_percentage_and_days() {
     for (text, guideline, percent, days) in [
         ("75 %, 28 d, OECD 302B", Some("OECD 302B"), Some(75.0), Some(28.0)),
-        (
-            "80 % in 7 d (OECD 302 C)",
-            Some("OECD 302C"),
-            Some(80.0),
-            Some(7.0),
-        ),
+        ("80 % in 7 d (OECD 302 C)", Some("OECD 302C"), Some(80.0), Some(7.0)),
         ("Zahn-Wellens 71 %", Some("OECD 302B"), Some(71.0), None),
         ("inherently biodegradable", None, None, None),
         ("72", None, Some(72.0), None),
@@ -267,23 +216,9 @@ fn hazard_statements_are_read_in_every_usual_spelling() {
 
 #[test]
 fn a_cell_without_statement_is_never_a_row_without_hazards() {
-    for text in [
-        "n.d.",
-        "-",
-        "n/a",
-        "unknown",
-        "k.A.",
-        "",
-        "no data",
-        "keine Angabe",
-        "keine Daten",
-    ] {
+    for text in ["n.d.", "-", "n/a", "unknown", "k.A.", "", "no data", "keine Angabe", "keine Daten"] {
         let substance = statements_row(text).unwrap();
-        assert_eq!(
-            (statements(&substance), substance.faults.len()),
-            (None, 0),
-            "{text}"
-        );
+        assert_eq!((statements(&substance), substance.faults.len()), (None, 0), "{text}");
     }
     for text in [
         "not classified due to lack of data",
@@ -298,11 +233,7 @@ fn a_cell_without_statement_is_never_a_row_without_hazards() {
         "carcinogenic",
     ] {
         let substance = statements_row(text).unwrap();
-        assert_eq!(
-            (statements(&substance), substance.faults.len()),
-            (None, 1),
-            "{text}"
-        );
+        assert_eq!((statements(&substance), substance.faults.len()), (None, 1), "{text}");
     }
 }
 
@@ -311,25 +242,16 @@ fn a_class_without_category_leaves_the_statements_incomplete() {
     let substance = statements_row("H410; Carc.").unwrap();
     let found = statements(&substance).unwrap();
     assert_eq!(found.codes().collect::<Vec<_>>(), ["H410"]);
-    assert_eq!(
-        (found.completeness(), substance.faults.len()),
-        (Completeness::Incomplete, 1)
-    );
+    assert_eq!((found.completeness(), substance.faults.len()), (Completeness::Incomplete, 1));
     let complete = statements_row("H410; Carc. 1B").unwrap();
-    assert_eq!(
-        statements(&complete).map(HazardStatements::completeness),
-        Some(Completeness::Complete)
-    );
+    assert_eq!(statements(&complete).map(HazardStatements::completeness), Some(Completeness::Complete));
 }
 
 #[test]
 fn codes_and_classes_in_two_columns_add_up() {
     let headers = ["CAS", "Classification", "H statements"];
     let substance = read_last(&[&headers, &["50-29-3", "Carc. 1B", "H410"]]).unwrap();
-    assert_eq!(
-        statements(&substance).unwrap().codes().collect::<Vec<_>>(),
-        ["H350", "H410"]
-    );
+    assert_eq!(statements(&substance).unwrap().codes().collect::<Vec<_>>(), ["H350", "H410"]);
 }
 
 #[test]
@@ -348,29 +270,17 @@ fn substance_types_are_known_in_both_languages() {
         ("Tensid", SubstanceType::Surfactant),
     ] {
         let substance = read_last(&[&["CAS", "Substance type"], &["50-29-3", text]]).unwrap();
-        assert_eq!(
-            substance.substance_type.map(|cited| cited.value),
-            Some(kind),
-            "{text}"
-        );
+        assert_eq!(substance.substance_type.map(|cited| cited.value), Some(kind), "{text}");
     }
     let unknown = read_last(&[&["CAS", "Substance type"], &["50-29-3", "blue"]]).unwrap();
-    assert_eq!(
-        (unknown.substance_type.is_none(), unknown.faults.len()),
-        (true, 1)
-    );
+    assert_eq!((unknown.substance_type.is_none(), unknown.faults.len()), (true, 1));
 }
 
 /// Basis of the log Kow and of the BCF of a row with these companion columns.
 fn bases(companion: &str, text: &str) -> Result<(Option<Basis>, Option<Basis>), String> {
     let headers = ["CAS", "log Kow", "BCF", companion];
     let substance = read_last(&[&headers, &["50-29-3", "4.5", "1500", text]])?;
-    let basis = |property| {
-        substance
-            .readings_of(property)
-            .first()
-            .map(|reading| reading.basis)
-    };
+    let basis = |property| substance.readings_of(property).first().map(|reading| reading.basis);
     Ok((basis(Property::LogKow), basis(Property::Bcf)))
 }
 
@@ -391,11 +301,7 @@ fn method_and_guideline_columns_speak_only_of_the_values_they_can_mean() {
         ("BCF guideline", "GLP study", (Unstated, Measured)),
     ] {
         let (log_kow, bcf) = expected;
-        assert_eq!(
-            bases(companion, text),
-            Ok((Some(log_kow), Some(bcf))),
-            "{companion}: {text}"
-        );
+        assert_eq!(bases(companion, text), Ok((Some(log_kow), Some(bcf))), "{companion}: {text}");
     }
 }
 
@@ -403,16 +309,10 @@ fn method_and_guideline_columns_speak_only_of_the_values_they_can_mean() {
 fn an_estimate_is_never_shown_as_measured_by_the_columns_beside_it() {
     let headers = ["CAS", "log Kow (measured)", "log Kow method"];
     let substance = read_last(&[&headers, &["50-29-3", "4.5", "QSAR"]]).unwrap();
-    assert_eq!(
-        substance.readings_of(Property::LogKow)[0].basis,
-        Basis::Calculated
-    );
+    assert_eq!(substance.readings_of(Property::LogKow)[0].basis, Basis::Calculated);
     let headers = ["CAS", "log Kow (calculated)", "log Kow method"];
     let substance = read_last(&[&headers, &["50-29-3", "4.5", "OECD 117"]]).unwrap();
-    assert_eq!(
-        substance.readings_of(Property::LogKow)[0].basis,
-        Basis::Calculated
-    );
+    assert_eq!(substance.readings_of(Property::LogKow)[0].basis, Basis::Calculated);
 }
 
 #[test]
@@ -431,29 +331,14 @@ fn companion_columns_fill_in_what_the_cell_leaves_open() {
         "Koc pH",
         "Reliability",
     ];
-    let cells = [
-        "50-29-3",
-        "4.5",
-        "0.3",
-        "25",
-        "7",
-        "1500 (3 % lipid)",
-        "5",
-        "40 d",
-        "20 °C",
-        "100",
-        "6,5",
-        "2",
-    ];
+    let cells =
+        ["50-29-3", "4.5", "0.3", "25", "7", "1500 (3 % lipid)", "5", "40 d", "20 °C", "100", "6,5", "2"];
     let substance = read_last(&[&headers, &cells]).unwrap();
     assert!(substance.faults.is_empty(), "{:?}", substance.faults);
     let reading = |property| &substance.readings_of(property)[0];
     let log_kow = reading(Property::LogKow);
     assert_eq!(log_kow.quantity.written_sd, Some(0.3));
-    assert_eq!(
-        (log_kow.conditions.temperature, log_kow.conditions.ph),
-        (Some(25.0), Some(7.0))
-    );
+    assert_eq!((log_kow.conditions.temperature, log_kow.conditions.ph), (Some(25.0), Some(7.0)));
     assert_eq!(reading(Property::Bcf).conditions.lipid, Some(3.0));
     assert_eq!(reading(Property::Koc).conditions.ph, Some(6.5));
     let soil = Property::from_id("half-life-soil").unwrap();
@@ -477,11 +362,7 @@ fn reliability_scores_are_read_in_words_and_numbers() {
         ("good", None),
     ] {
         let substance = read_last(&[&["CAS", "BCF", "Reliability"], &["50-29-3", "1500", text]]).unwrap();
-        assert_eq!(
-            substance.readings_of(Property::Bcf)[0].conditions.reliability,
-            score,
-            "{text}"
-        );
+        assert_eq!(substance.readings_of(Property::Bcf)[0].conditions.reliability, score, "{text}");
         assert_eq!(substance.faults.is_empty(), score.is_some(), "{text}");
     }
 }
@@ -494,10 +375,7 @@ fn number_cells_dates_and_errors_are_told_apart() {
     assert_eq!(number.readings_of(soil)[0].quantity.single(), Some(84.0));
     for (content, part) in [
         (CellContent::DateTime(45_000.0), "is a date"),
-        (
-            CellContent::Error("#N/A".to_owned()),
-            "Sheet!B2: `#N/A` is an error of the spreadsheet",
-        ),
+        (CellContent::Error("#N/A".to_owned()), "Sheet!B2: `#N/A` is an error of the spreadsheet"),
         (CellContent::Boolean(true), "is no half-life in soil"),
         (CellContent::Number(-1.0), "is negative"),
         (CellContent::Number(0.0), "is zero"),
@@ -505,11 +383,7 @@ fn number_cells_dates_and_errors_are_told_apart() {
     ] {
         let substance = row(content);
         assert!(substance.readings_of(soil).is_empty());
-        assert!(
-            substance.faults[0].to_string().contains(part),
-            "{}",
-            substance.faults[0]
-        );
+        assert!(substance.faults[0].to_string().contains(part), "{}", substance.faults[0]);
     }
 }
 
@@ -517,22 +391,14 @@ fn number_cells_dates_and_errors_are_told_apart() {
 fn molar_mass_serves_molar_concentrations_wherever_it_stands() {
     let headers = ["CAS", "Water solubility (mmol/L)", "Molar mass"];
     let substance = read_last(&[&headers, &["50-29-3", "2", "100 g/mol"]]).unwrap();
-    assert_eq!(
-        substance.readings_of(Property::WaterSolubility)[0]
-            .quantity
-            .single(),
-        Some(200.0)
-    );
+    assert_eq!(substance.readings_of(Property::WaterSolubility)[0].quantity.single(), Some(200.0));
 }
 
 #[test]
 fn the_columns_decimal_style_decides_three_digits() {
     let rows: [&[&str]; 3] = [&["CAS", "BCF"], &["50-29-3", "12,5"], &["50-29-3", "1.234"]];
     let substance = read_last(&rows).unwrap();
-    assert_eq!(
-        substance.readings_of(Property::Bcf)[0].quantity.single(),
-        Some(1234.0)
-    );
+    assert_eq!(substance.readings_of(Property::Bcf)[0].quantity.single(), Some(1234.0));
 }
 
 #[test]

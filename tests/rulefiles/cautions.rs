@@ -10,11 +10,7 @@ use kowledger::substance::{
 use kowledger::workbook::CellRef;
 
 fn cell() -> CellRef {
-    CellRef {
-        sheet: Arc::from("Substances"),
-        row: 1,
-        column: 1,
-    }
+    CellRef { sheet: Arc::from("Substances"), row: 1, column: 1 }
 }
 
 fn cited<T>(value: T) -> Cited<T> {
@@ -38,9 +34,7 @@ fn cautions() -> Vec<Caution> {
 }
 
 fn raised<'c>(cautions: &'c [Caution], substance: &Substance) -> Vec<&'c str> {
-    let raised = cautions
-        .iter()
-        .filter(|caution| caution.is_raised_by(substance).is_some());
+    let raised = cautions.iter().filter(|caution| caution.is_raised_by(substance).is_some());
     raised.map(|caution| caution.id.as_str()).collect()
 }
 
@@ -158,19 +152,13 @@ const NAMES: &[(&str, &[&str])] = &[
     ("Rosin", &["uvcb"]),
     ("Chlorparaffin", &["uvcb"]),
     ("Reaction products of aniline and acetone", &["uvcb"]),
-    (
-        "Reaction mass of ethylbenzene and m-xylene",
-        &["multi-constituent"],
-    ),
+    ("Reaction mass of ethylbenzene and m-xylene", &["multi-constituent"]),
     ("Xylene, mixture of isomers", &["multi-constituent", "mixture"]),
     ("Xylol-Isomerengemisch", &["multi-constituent", "mixture"]),
     // Surfactants.
     ("Sodium dodecyl sulfate", &["surfactant", "permanent-charge"]),
     ("Sodium laureth sulfate", &["surfactant", "permanent-charge"]),
-    (
-        "Sodium dodecylbenzenesulfonate",
-        &["surfactant", "permanent-charge"],
-    ),
+    ("Sodium dodecylbenzenesulfonate", &["surfactant", "permanent-charge"]),
     ("Nonylphenol ethoxylate", &["surfactant"]),
     ("Lauryl glucoside", &["surfactant"]),
     ("Lauryl methacrylate", &[]),
@@ -180,42 +168,24 @@ const NAMES: &[(&str, &[&str])] = &[
     ("Triton X-100", &["surfactant"]),
     ("Alcohols, C12-14, ethoxylated", &["uvcb", "surfactant"]),
     ("Benzalkonium chloride", &["surfactant", "permanent-charge"]),
-    (
-        "Didecyldimethylammonium chloride",
-        &["surfactant", "permanent-charge"],
-    ),
-    (
-        "Hexadecyltrimethylammonium bromide",
-        &["surfactant", "permanent-charge"],
-    ),
+    ("Didecyldimethylammonium chloride", &["surfactant", "permanent-charge"]),
+    ("Hexadecyltrimethylammonium bromide", &["surfactant", "permanent-charge"]),
     ("Docusate sodium", &["surfactant", "permanent-charge"]),
     ("Natriumstearat", &["surfactant", "permanent-charge"]),
     // Perfluorinated chains.
     ("Perfluorooctanoic acid", &["perfluoroalkyl", "ionisable"]),
-    (
-        "Perfluoroctansulfonsäure",
-        &["perfluoroalkyl", "permanent-charge", "ionisable"],
-    ),
+    ("Perfluoroctansulfonsäure", &["perfluoroalkyl", "permanent-charge", "ionisable"]),
     ("PFOA", &["perfluoroalkyl"]),
     ("PFHxS", &["perfluoroalkyl"]),
     ("Pentadecafluorooctanoic acid", &["perfluoroalkyl", "ionisable"]),
-    (
-        "Potassium heptadecafluorooctane-1-sulphonate",
-        &["perfluoroalkyl", "permanent-charge"],
-    ),
+    ("Potassium heptadecafluorooctane-1-sulphonate", &["perfluoroalkyl", "permanent-charge"]),
     ("Heptafluorobutyric acid", &["perfluoroalkyl", "ionisable"]),
     ("1H,1H,2H,2H-Perfluorodecan-1-ol", &["perfluoroalkyl"]),
     ("8:2 FTOH", &["perfluoroalkyl"]),
     ("6:2 Fluorotelomer alcohol", &["perfluoroalkyl"]),
     ("Henicosafluorodecyl acrylate", &["perfluoroalkyl"]),
-    (
-        "Hexafluoropropylene oxide dimer acid",
-        &["perfluoroalkyl", "ionisable"],
-    ),
-    (
-        "Perfluorooctanoic acid, ammonium salt",
-        &["perfluoroalkyl", "permanent-charge"],
-    ),
+    ("Hexafluoropropylene oxide dimer acid", &["perfluoroalkyl", "ionisable"]),
+    ("Perfluorooctanoic acid, ammonium salt", &["perfluoroalkyl", "permanent-charge"]),
     ("GenX", &["perfluoroalkyl"]),
     // Charged at every pH, and salts of organic ions.
     ("Paraquat dichloride", &["permanent-charge"]),
@@ -298,11 +268,7 @@ fn identity_and_row_type_raise_their_cautions() {
 #[test]
 fn a_formula_without_carbon_is_inorganic_and_the_salt_of_an_organic_acid_is_not() {
     let cautions = cautions();
-    for (formula, expected) in [
-        ("NaCl", vec!["inorganic"]),
-        ("C2H3NaO2", vec![]),
-        ("C12H27ClSn", vec![]),
-    ] {
+    for (formula, expected) in [("NaCl", vec!["inorganic"]), ("C2H3NaO2", vec![]), ("C12H27ClSn", vec![])] {
         let mut substance = named("Product 4711");
         substance.formula = Some(cited(formula.to_owned()));
         assert_eq!(raised(&cautions, &substance), expected, "{formula}");
@@ -318,12 +284,8 @@ fn with_pka(property: Property, pka: f64) -> Substance {
         approximate: false,
         reported: pka.to_string(),
     };
-    let reading = Reading {
-        quantity,
-        basis: Basis::Measured,
-        conditions: Conditions::default(),
-        cell: cell(),
-    };
+    let reading =
+        Reading { quantity, basis: Basis::Measured, conditions: Conditions::default(), cell: cell() };
     substance.readings.insert(property, vec![reading]);
     substance
 }
@@ -341,11 +303,7 @@ fn a_pka_that_leaves_a_tenth_ionised_between_ph_4_and_9_is_ionisable() {
         (Property::PkaBase, 3.0, false),
     ] {
         let found = raised(&cautions, &with_pka(property, pka));
-        assert_eq!(
-            found == ["ionisable"],
-            is_ionisable,
-            "{property:?} {pka}: {found:?}"
-        );
+        assert_eq!(found == ["ionisable"], is_ionisable, "{property:?} {pka}: {found:?}");
     }
 }
 
@@ -379,10 +337,6 @@ fn cautions_stop_what_the_published_practice_says() {
         assert_eq!(found, stopped, "{id}");
         let at_most_screening = ["organometallic", "surfactant", "permanent-charge"].contains(&id);
         let log_kow = Subject::Property(LogKow);
-        assert_eq!(
-            caution.at_most_screening.contains(&log_kow),
-            at_most_screening,
-            "{id}"
-        );
+        assert_eq!(caution.at_most_screening.contains(&log_kow), at_most_screening, "{id}");
     }
 }

@@ -24,9 +24,7 @@ fn answer_to_file(name: &str, content: &[u8]) -> String {
 fn answer_to_paths(folder: &tempfile::TempDir, paths: &[PathBuf]) -> String {
     let message = check_paths(paths).expect_err("the file is faulty").to_string();
     let inside = format!("{}/", folder.path().display());
-    message
-        .replace(&inside, "")
-        .replace(&folder.path().display().to_string(), "folder")
+    message.replace(&inside, "").replace(&folder.path().display().to_string(), "folder")
 }
 
 /// One test a mistake: its name, what is replaced by what in the sound rulebook.
@@ -47,10 +45,7 @@ fn the_sound_rulebook_has_no_fault() {
     let path = folder.path().join("house.toml");
     std::fs::write(&path, SOUND).unwrap();
     let summaries = check_paths(&[path]).unwrap();
-    assert_eq!(
-        (summaries[0].seen, summaries[0].second_hand, summaries[0].memory),
-        (7, 1, 1)
-    );
+    assert_eq!((summaries[0].seen, summaries[0].second_hand, summaries[0].memory), (7, 1, 1));
 }
 
 mistakes! {
@@ -129,10 +124,7 @@ fn an_empty_step() {
 #[test]
 fn a_file_without_head() {
     let (_, tail) = SOUND.split_once("[[criterion]]").unwrap();
-    insta::assert_snapshot!(answer_to_file(
-        "house.toml",
-        format!("[[criterion]]{tail}").as_bytes()
-    ));
+    insta::assert_snapshot!(answer_to_file("house.toml", format!("[[criterion]]{tail}").as_bytes()));
 }
 
 #[test]
@@ -265,10 +257,7 @@ fn colour_is_only_drawn_when_asked_for() {
 #[test]
 fn a_damaged_file_is_always_answered() {
     let folder = tempfile::tempdir().unwrap();
-    let (path, cautions) = (
-        folder.path().join("house.toml"),
-        folder.path().join("cautions.toml"),
-    );
+    let (path, cautions) = (folder.path().join("house.toml"), folder.path().join("cautions.toml"));
     // The built-in cautions take long to read; one is enough here.
     let inorganic =
         "[[caution]]\nid = \"inorganic\"\nsentence = \"x\"\nsource = \"x\"\nionisable = true\nblocks = []";

@@ -124,14 +124,8 @@ fn read() -> Rulebook {
 #[test]
 fn of_the_head() {
     let rulebook = read();
-    assert_eq!(
-        (rulebook.id.as_str(), rulebook.short.as_str()),
-        ("house-rules", "HOUSE")
-    );
-    assert_eq!(
-        (rulebook.title.as_str(), rulebook.source.as_str()),
-        ("House rules", "Manual")
-    );
+    assert_eq!((rulebook.id.as_str(), rulebook.short.as_str()), ("house-rules", "HOUSE"));
+    assert_eq!((rulebook.title.as_str(), rulebook.source.as_str()), ("House rules", "Manual"));
     assert_eq!(rulebook.edition.to_string(), "2026-01-31");
     assert!(rulebook.by_name_only);
     assert_eq!(rulebook.strongest, Weight::Screening);
@@ -147,21 +141,13 @@ fn of_the_head() {
 #[test]
 fn of_a_step() {
     let rulebook = read();
-    let [step, concern] = &rulebook.criteria[0].steps[..] else {
-        panic!("two steps")
-    };
+    let [step, concern] = &rulebook.criteria[0].steps[..] else { panic!("two steps") };
     assert_eq!((step.weight, step.combine), (Weight::Screening, Combine::Any));
     assert_eq!((step.decides, step.guards), (Decides::Out, Guards::FiredOrOpen));
-    assert_eq!(
-        (step.clears_on, step.only_if),
-        (ClearsOn::Some, OnlyIf::NoDataBefore)
-    );
+    assert_eq!((step.clears_on, step.only_if), (ClearsOn::Some, OnlyIf::NoDataBefore));
     // A step of concern guards without being told to.
     assert_eq!((concern.weight, concern.guards), (Weight::Concern, Guards::Fired));
-    assert_eq!(
-        (concern.decides, concern.clears_on),
-        (Decides::Both, ClearsOn::All)
-    );
+    assert_eq!((concern.decides, concern.clears_on), (Decides::Both, ClearsOn::All));
     assert_eq!(concern.only_if, OnlyIf::Always);
 }
 
@@ -171,25 +157,14 @@ fn of_a_test() {
     let [soil, ready, inherent, statements] = &rulebook.criteria[0].steps[0].tests[..] else {
         panic!("four tests")
     };
-    let Limit::Number { comparison, value } = soil.limit else {
-        panic!("a number")
-    };
+    let Limit::Number { comparison, value } = soil.limit else { panic!("a number") };
     assert_eq!(soil.subject.id(), "half-life-soil");
-    assert_eq!(
-        (comparison, value.to_string().as_str()),
-        (Comparison::AtLeast, "182.625")
-    );
+    assert_eq!((comparison, value.to_string().as_str()), (Comparison::AtLeast, "182.625"));
     assert_eq!(soil.limit_text, "6 months");
-    assert_eq!(
-        soil.clear_below.map(|days| days.to_string()).as_deref(),
-        Some("60.875")
-    );
+    assert_eq!(soil.clear_below.map(|days| days.to_string()).as_deref(), Some("60.875"));
     assert_eq!(soil.bases, BTreeSet::from([Basis::Measured, Basis::Estimated]));
     assert_eq!((soil.optional, soil.missing), (true, WhenMissing::Open));
-    assert_eq!(
-        (soil.source.as_str(), soil.checked),
-        ("Manual, 1", Checked::SecondHand)
-    );
+    assert_eq!((soil.source.as_str(), soil.checked), ("Manual, 1", Checked::SecondHand));
     assert_eq!(soil.note.as_deref(), Some("Topsoil."));
 
     assert_eq!(ready.limit, Limit::Is(DegradationTest::Ready));
@@ -197,65 +172,36 @@ fn of_a_test() {
     assert_eq!(ready.bases, BTreeSet::from(Basis::ALL));
 
     assert_eq!(inherent.subject, Subject::InherentBiodegradability);
-    assert_eq!(
-        (inherent.guideline.as_deref(), inherent.within),
-        (Some("OECD 302C"), Some(14.0))
-    );
+    assert_eq!((inherent.guideline.as_deref(), inherent.within), (Some("OECD 302C"), Some(14.0)));
     assert_eq!(inherent.limit_text, "70 %");
 
-    assert_eq!(
-        statements.limit,
-        Limit::AnyOfWords(vec!["H350".to_owned(), "EUH440".to_owned()])
-    );
+    assert_eq!(statements.limit, Limit::AnyOfWords(vec!["H350".to_owned(), "EUH440".to_owned()]));
     assert_eq!(statements.limit_text, "H350, EUH440");
 }
 
 #[test]
 fn of_a_band_and_a_sentence() {
     let rulebook = read();
-    assert_eq!(
-        rulebook.criteria[1].assess.as_deref(),
-        Some("No number settles it.")
-    );
+    assert_eq!(rulebook.criteria[1].assess.as_deref(), Some("No number settles it."));
     let band = &rulebook.criteria[2].bands[0];
     assert_eq!(band.rating, "rating 2");
     assert_eq!(band.test.subject, Subject::Property(Property::Bcf));
-    assert_eq!(
-        band.test.limit,
-        Limit::Between {
-            low: 10.0,
-            high: 100.0
-        }
-    );
+    assert_eq!(band.test.limit, Limit::Between { low: 10.0, high: 100.0 });
     assert_eq!(band.test.limit_text, "10 L/kg to below 100 L/kg");
 }
 
 #[test]
 fn of_designations_and_listings() {
     let rulebook = read();
-    let [concern, highest] = &rulebook.designations[..] else {
-        panic!("two designations")
-    };
-    assert_eq!(
-        (concern.id.as_str(), concern.title.as_str()),
-        ("concern", "Of concern")
-    );
+    let [concern, highest] = &rulebook.designations[..] else { panic!("two designations") };
+    assert_eq!((concern.id.as_str(), concern.title.as_str()), ("concern", "Of concern"));
     assert_eq!(concern.combine, Combine::Any);
-    assert_eq!(
-        concern.parts,
-        [DesignationPart::Criterion(0), DesignationPart::Criterion(1)]
-    );
+    assert_eq!(concern.parts, [DesignationPart::Criterion(0), DesignationPart::Criterion(1)]);
     assert_eq!(concern.stated_by, ["EUH440"]);
     assert_eq!(highest.combine, Combine::All);
-    assert_eq!(
-        highest.parts,
-        [DesignationPart::Designation(0), DesignationPart::Criterion(0)]
-    );
+    assert_eq!(highest.parts, [DesignationPart::Designation(0), DesignationPart::Criterion(0)]);
     let listing = &rulebook.listings[0];
-    assert_eq!(
-        (listing.title.as_str(), listing.source.as_str()),
-        ("Banned", "Manual, annex")
-    );
+    assert_eq!((listing.title.as_str(), listing.source.as_str()), ("Banned", "Manual, annex"));
     assert_eq!(listing.date.to_string(), "2026-01-30");
     let cas = ListingEntry::Cas(CasNumber::parse("50-29-3").unwrap());
     let ec = ListingEntry::Ec(EcNumber::parse("200-024-3").unwrap());

@@ -41,10 +41,7 @@ fn line(test: &Test) -> String {
     };
     let optional = if test.optional { " optional" } else { "" };
     let checked = test.checked.word();
-    format!(
-        "{} {limit}{inherent}{bases}{optional}, {checked}",
-        test.subject.id()
-    )
+    format!("{} {limit}{inherent}{bases}{optional}, {checked}", test.subject.id())
 }
 
 fn sign(comparison: Comparison) -> &'static str {
@@ -93,11 +90,7 @@ fn head(step: &Step) -> String {
 
 /// The criterion as lines: each step's head, then its tests.
 fn lines(rulebook: &Rulebook, criterion: &str) -> Vec<String> {
-    let criterion = rulebook
-        .criteria
-        .iter()
-        .find(|found| found.id == criterion)
-        .unwrap();
+    let criterion = rulebook.criteria.iter().find(|found| found.id == criterion).unwrap();
     let in_steps = criterion
         .steps
         .iter()
@@ -106,11 +99,7 @@ fn lines(rulebook: &Rulebook, criterion: &str) -> Vec<String> {
 }
 
 fn ids(rulebook: &Rulebook) -> Vec<&str> {
-    rulebook
-        .criteria
-        .iter()
-        .map(|criterion| criterion.id.as_str())
-        .collect()
+    rulebook.criteria.iter().map(|criterion| criterion.id.as_str()).collect()
 }
 
 /// A designation in one line: `PBT = all of P B T, stated by EUH440`.
@@ -122,12 +111,7 @@ fn designations(rulebook: &Rulebook) -> Vec<String> {
     let line = |designation: &kowledger::rules::Designation| {
         assert_eq!(designation.combine, Combine::All);
         let parts: Vec<_> = designation.parts.iter().map(name).collect();
-        format!(
-            "{} = {} [{}]",
-            designation.id,
-            parts.join(", "),
-            designation.stated_by.join(" ")
-        )
+        format!("{} = {} [{}]", designation.id, parts.join(", "), designation.stated_by.join(" "))
     };
     rulebook.designations.iter().map(line).collect()
 }
@@ -215,10 +199,7 @@ fn clp_has_the_limits_of_annex_i_and_its_wider_toxicity() {
         ];
         assert_eq!(lines(&clp, criterion), expected);
     }
-    assert_eq!(
-        lines(&clp, "T"),
-        toxicity("H340 H350 H360 H361 H372 H373 EUH380 EUH430")
-    );
+    assert_eq!(lines(&clp, "T"), toxicity("H340 H350 H360 H361 H372 H373 EUH380 EUH430"));
     assert_eq!(
         designations(&clp),
         [
@@ -235,16 +216,9 @@ fn both_eu_rulebooks_compare_half_lives_at_12_degrees_and_leave_inorganics_out()
     for (id, edition) in [("eu-reach-pbt", "2011-03-15"), ("eu-clp-pbt-pmt", "2023-03-31")] {
         let rulebook = rulebook(id);
         let reference = rulebook.half_life_at.unwrap();
-        let numbers = [
-            reference.temperature,
-            reference.activation_energy,
-            reference.unstated_temperature,
-        ];
+        let numbers = [reference.temperature, reference.activation_energy, reference.unstated_temperature];
         assert_eq!(numbers.map(|number| number.to_string()), ["12", "65.4", "20"]);
-        assert_eq!(
-            rulebook.mixture_limit.map(|limit| limit.to_string()).as_deref(),
-            Some("0.1")
-        );
+        assert_eq!(rulebook.mixture_limit.map(|limit| limit.to_string()).as_deref(), Some("0.1"));
         assert_eq!(rulebook.out_of_scope, ["inorganic"]);
         assert_eq!(rulebook.strongest, Weight::Definitive);
         assert_eq!(rulebook.edition.to_string(), edition);
@@ -277,10 +251,7 @@ fn stockholm_has_the_limits_of_annex_d_in_months_and_nothing_definitive() {
             "log-kow > 5, seen",
         ]
     );
-    assert_eq!(
-        lines(&stockholm, "LRT"),
-        ["def decides in", "half-life-air > 2, seen"]
-    );
+    assert_eq!(lines(&stockholm, "LRT"), ["def decides in", "half-life-air > 2, seen"]);
     assert!(stockholm.criteria[3].assess.is_some());
     assert_eq!(designations(&stockholm), ["Annex D indicators = P, B, LRT []"]);
     assert_eq!(stockholm.strongest, Weight::Screening);

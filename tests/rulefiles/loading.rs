@@ -4,11 +4,7 @@ use kowledger::fault::Refusal;
 use kowledger::rules::{RuleSet, check_paths, load_rule_set, summaries};
 
 fn ids(rule_set: &RuleSet) -> Vec<&str> {
-    rule_set
-        .rulebooks
-        .iter()
-        .map(|rulebook| rulebook.id.as_str())
-        .collect()
+    rule_set.rulebooks.iter().map(|rulebook| rulebook.id.as_str()).collect()
 }
 
 fn choose(choices: &[&str]) -> Result<RuleSet, Refusal> {
@@ -19,12 +15,8 @@ fn choose(choices: &[&str]) -> Result<RuleSet, Refusal> {
 #[test]
 fn without_a_choice_every_built_in_rulebook_is_taken_in_order() {
     let rule_set = choose(&[]).unwrap();
-    let expected = [
-        "eu-reach-pbt",
-        "eu-clp-pbt-pmt",
-        "un-stockholm-annex-d",
-        "ca-persistence-bioaccumulation",
-    ];
+    let expected =
+        ["eu-reach-pbt", "eu-clp-pbt-pmt", "un-stockholm-annex-d", "ca-persistence-bioaccumulation"];
     assert_eq!(ids(&rule_set), expected);
     assert_eq!(ids(&choose(&["all"]).unwrap()), expected);
 }
@@ -39,14 +31,7 @@ fn a_choice_is_taken_once_and_in_the_order_given() {
 fn every_applied_file_is_kept_for_the_record() {
     let rule_set = choose(&["eu-reach-pbt"]).unwrap();
     let names: Vec<_> = rule_set.texts.iter().map(|text| text.name.as_str()).collect();
-    assert_eq!(
-        names,
-        [
-            "built in: eu-reach-pbt",
-            "built in: cautions",
-            "built in: relations"
-        ]
-    );
+    assert_eq!(names, ["built in: eu-reach-pbt", "built in: cautions", "built in: relations"]);
     assert!(rule_set.texts.iter().all(|text| !text.text.is_empty()));
 }
 
@@ -91,15 +76,9 @@ fn a_folder_may_bring_its_own_cautions_and_relations() {
 fn a_faulty_file_beside_a_sound_one_leaves_nothing_applied() {
     let folder = tempfile::tempdir().unwrap();
     std::fs::write(folder.path().join("own.toml"), OWN_RULEBOOK).unwrap();
-    std::fs::write(
-        folder.path().join("worse.toml"),
-        OWN_RULEBOOK.replace("above = 4.5", "above = "),
-    )
-    .unwrap();
-    assert!(matches!(
-        choose(&[folder.path().to_str().unwrap()]),
-        Err(Refusal::Rules(_))
-    ));
+    std::fs::write(folder.path().join("worse.toml"), OWN_RULEBOOK.replace("above = 4.5", "above = "))
+        .unwrap();
+    assert!(matches!(choose(&[folder.path().to_str().unwrap()]), Err(Refusal::Rules(_))));
 }
 
 pub const OWN_RULEBOOK: &str = r#"

@@ -9,30 +9,18 @@ fn relations() -> Relations {
 }
 
 fn value(relation: &Relation, log_kow: f64) -> f64 {
-    relation
-        .coefficients
-        .iter()
-        .rev()
-        .fold(0.0, |sum, coefficient| sum * log_kow + coefficient)
+    relation.coefficients.iter().rev().fold(0.0, |sum, coefficient| sum * log_kow + coefficient)
 }
 
 fn find<'r>(relations: &'r Relations, id: &str) -> &'r Relation {
-    relations
-        .relations
-        .iter()
-        .find(|relation| relation.id == id)
-        .unwrap()
+    relations.relations.iter().find(|relation| relation.id == id).unwrap()
 }
 
 fn leading(relations: &Relations, to: Property, log_kow: f64) -> Option<&str> {
     let leads = |relation: &&Relation| {
         relation.to == to && relation.side == Side::Central && relation.domain.contains(log_kow)
     };
-    relations
-        .relations
-        .iter()
-        .find(leads)
-        .map(|relation| relation.id.as_str())
+    relations.relations.iter().find(leads).map(|relation| relation.id.as_str())
 }
 
 /// Values worked by hand from the published equations (see the citation of each in the file).
@@ -84,26 +72,10 @@ fn the_first_equation_whose_domain_holds_leads() {
 #[test]
 fn class_lines_and_the_anion_line_never_lead() {
     let relations = relations();
-    let count = |side: Side| {
-        relations
-            .relations
-            .iter()
-            .filter(|relation| relation.side == side)
-            .count()
-    };
-    assert_eq!(
-        (count(Side::Central), count(Side::Class), count(Side::Ionised)),
-        (9, 16, 1)
-    );
-    let class_lines = relations
-        .relations
-        .iter()
-        .filter(|relation| relation.side == Side::Class);
-    assert!(
-        class_lines
-            .into_iter()
-            .all(|relation| relation.checked == Checked::Memory)
-    );
+    let count = |side: Side| relations.relations.iter().filter(|relation| relation.side == side).count();
+    assert_eq!((count(Side::Central), count(Side::Class), count(Side::Ionised)), (9, 16, 1));
+    let class_lines = relations.relations.iter().filter(|relation| relation.side == Side::Class);
+    assert!(class_lines.into_iter().all(|relation| relation.checked == Checked::Memory));
     assert!(find(&relations, "verhaar-baseline-fish").molar);
 }
 
@@ -125,9 +97,6 @@ fn default_deviations_follow_property_basis_and_value() {
         (Property::LogKoa, Basis::Measured, 8.0, 0.3),
     ] {
         let found = relations.default_sd(property, basis, value);
-        assert!(
-            (found - expected).abs() < 1e-12,
-            "{property:?} {basis:?} {value}: {found}"
-        );
+        assert!((found - expected).abs() < 1e-12, "{property:?} {basis:?} {value}: {found}");
     }
 }

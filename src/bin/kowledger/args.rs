@@ -125,15 +125,19 @@ impl ScreenArguments {
                 "--threads 0: at least one thread is needed; write 1 or more".to_owned(),
             ));
         }
+        if self.threads.is_some_and(|threads| threads > MOST_THREADS) {
+            return Err(Refusal::Usage(format!(
+                "--threads: at most {MOST_THREADS} can be asked for; more threads than cores gain nothing"
+            )));
+        }
+        if let Some(output) = &self.output {
+            refuse_other_kind(output)?;
+        }
         let output = self.output.unwrap_or_else(|| beside(&self.inventory));
         Ok(ScreenSettings {
             output,
             inventory: self.inventory,
-            overwrite: if self.force {
-                Overwrite::Replace
-            } else {
-                Overwrite::Refuse
-            },
+            overwrite: if self.force { Overwrite::Replace } else { Overwrite::Refuse },
             rulebooks: self.rulebook,
             sheets: self.sheet,
             columns: overrides(&self.column)?,
@@ -161,17 +165,28 @@ impl ColumnsArguments {
     }
 }
 
+/// More threads take minutes to start, and no machine has the cores.
+const MOST_THREADS: usize = 1024;
+
+/// A spreadsheet program does not open a workbook that is named as something else.
+fn refuse_other_kind(output: &std::path::Path) -> Result<(), Refusal> {
+    let is_xlsx = output.extension().is_some_and(|extension| extension.eq_ignore_ascii_case("xlsx"));
+    if is_xlsx || output.is_dir() {
+        return Ok(());
+    }
+    Err(Refusal::Usage(format!(
+        "--output {}: the output is an xlsx workbook; write a name that ends in .xlsx",
+        output.display()
+    )))
+}
+
 fn overrides(texts: &[String]) -> Result<Vec<ColumnOverride>, Refusal> {
-    texts
-        .iter()
-        .map(|text| ColumnOverride::parse(text).map_err(Refusal::Usage))
-        .collect()
+    texts.iter().map(|text| ColumnOverride::parse(text).map_err(Refusal::Usage)).collect()
 }
 
 /// `<name>-screened.xlsx` in the inventory's folder.
 fn beside(inventory: &std::path::Path) -> PathBuf {
-    let stem = inventory
-        .file_stem()
-        .map_or_else(|| "inventory".into(), |stem| stem.to_string_lossy().into_owned());
+    let stem =
+        inventory.file_stem().map_or_else(|| "inventory".into(), |stem| stem.to_string_lossy().into_owned());
     inventory.with_file_name(format!("{stem}-screened.xlsx"))
 }

@@ -37,9 +37,7 @@ impl Console {
             let mut parts: Vec<String> = Verdict::ALL
                 .iter()
                 .filter_map(|verdict| {
-                    counts
-                        .get(verdict)
-                        .map(|number| format!("{number} {}", verdict.words()))
+                    counts.get(verdict).map(|number| format!("{number} {}", verdict.words()))
                 })
                 .collect();
             if *listed > 0 {
@@ -47,12 +45,9 @@ impl Console {
             }
             format!("  {short}: {}", parts.join(", "))
         }));
-        lines.extend(summary.column_remarks.iter().cloned());
+        lines.extend(summary.column_remarks.iter().map(|remark| format!("Columns of {remark}")));
         if !summary.unreached.is_empty() {
-            lines.push(format!(
-                "No row had a value for: {}.",
-                summary.unreached.join("; ")
-            ));
+            lines.push(format!("No row had a value for: {}.", summary.unreached.join("; ")));
         }
         lines.extend(summary.not_carried.iter().cloned());
         lines.push(format!("Written: {}", summary.output.display()));
@@ -65,12 +60,7 @@ impl Console {
 }
 
 fn show_faults(summary: &Summary) {
-    let mut lines: Vec<String> = summary
-        .faults
-        .iter()
-        .take(FAULTS_SHOWN)
-        .map(ToString::to_string)
-        .collect();
+    let mut lines: Vec<String> = summary.faults.iter().take(FAULTS_SHOWN).map(ToString::to_string).collect();
     if summary.fault_total > FAULTS_SHOWN {
         lines.push(format!(
             "... and {} more; each stands in the Cautions cell of its row.",
@@ -96,17 +86,10 @@ pub(crate) fn columns(sheets: &[RecognisedSheet]) {
     let mut lines = Vec::new();
     for sheet in sheets {
         let Some(recognised) = &sheet.recognised else {
-            lines.push(format!(
-                "{}: no header recognised; the sheet would be copied.",
-                sheet.name
-            ));
+            lines.push(format!("{}: no header recognised; the sheet would be copied.", sheet.name));
             continue;
         };
-        lines.push(format!(
-            "{}: header in row {}.",
-            sheet.name,
-            recognised.header_row + 1
-        ));
+        lines.push(format!("{}: header in row {}.", sheet.name, recognised.header_row + 1));
         lines.extend(recognised.columns.iter().map(|column| {
             format!(
                 "  {:<4}{:<34}{:<28}{}",
@@ -117,11 +100,7 @@ pub(crate) fn columns(sheets: &[RecognisedSheet]) {
             )
         }));
         lines.extend(recognised.unknown.iter().map(|(index, header)| {
-            format!(
-                "  {:<4}{:<34}not recognised",
-                column_letters(*index),
-                header.replace('\n', " ")
-            )
+            format!("  {:<4}{:<34}not recognised", column_letters(*index), header.replace('\n', " "))
         }));
         lines.extend(recognised.remarks.iter().map(|remark| format!("  {remark}")));
     }
@@ -137,16 +116,13 @@ pub(crate) fn rulebooks(summaries: &[RulebookSummary]) {
 /// Rule files that are in order.
 pub(crate) fn checked(summaries: &[RulebookSummary]) {
     let mut lines: Vec<String> = summaries.iter().map(rulebook_line).collect();
-    lines.push(format!(
-        "{} in order.",
-        count(summaries.len(), "rulebook is", "rulebooks are")
-    ));
+    lines.push(format!("{} in order.", count(summaries.len(), "rulebook is", "rulebooks are")));
     print(&lines);
 }
 
 fn rulebook_line(summary: &RulebookSummary) -> String {
     format!(
-        "{:<28}{:<12}{}, edition {}: {}; limits seen {}, second-hand {}, from memory {}",
+        "{:<32}{:<12}{}, edition {}: {}; limits seen {}, second-hand {}, from memory {}",
         summary.id,
         summary.short,
         summary.title,

@@ -51,10 +51,7 @@ impl RuleMistake {
             Self::NoCombine => "the step does not say how its tests count together".into(),
             Self::NoCriteria => "the rulebook has no criterion".into(),
             Self::DuplicateName { name, first, line } => {
-                format!(
-                    "`{name}` is already the name of the {} on line {line}",
-                    first.word()
-                )
+                format!("`{name}` is already the name of the {} on line {line}", first.word())
             }
             Self::NameTaken { key, name, other } => format!("`{key}` `{name}` is already taken by {other}"),
             Self::UnknownPart { found, .. } => {
@@ -126,33 +123,18 @@ impl RuleMistake {
             Self::Syntax { .. } => {
                 "a line is `key = value`, `[table]` or `[[table]]`; text stands in quotes".into()
             }
-            Self::UnknownKey {
-                nearest: Some(nearest),
-                ..
-            } => format!("did you mean `{nearest}`?"),
-            Self::UnknownKey {
-                nearest: None, known, ..
-            } => format!("it may have {}", listed(known)),
+            Self::UnknownKey { nearest: Some(nearest), .. } => format!("did you mean `{nearest}`?"),
+            Self::UnknownKey { nearest: None, known, .. } => format!("it may have {}", listed(known)),
             Self::MissingKey { example, .. } => format!("add, for example, `{example}`"),
             Self::WrongKind { wanted, .. } => format!("write {wanted}"),
             Self::EmptyText { .. } => "write the text, or leave the key out where it is not needed".into(),
             Self::EmptyList { .. } => "name at least one, or leave the key out where it is not needed".into(),
-            Self::UnknownWord {
-                nearest: Some(nearest),
-                ..
-            }
-            | Self::UnknownPart {
-                nearest: Some(nearest),
-                ..
-            } => {
+            Self::UnknownWord { nearest: Some(nearest), .. }
+            | Self::UnknownPart { nearest: Some(nearest), .. } => {
                 format!("did you mean `{nearest}`?")
             }
-            Self::UnknownWord {
-                nearest: None, known, ..
-            }
-            | Self::UnknownPart {
-                nearest: None, known, ..
-            } => {
+            Self::UnknownWord { nearest: None, known, .. }
+            | Self::UnknownPart { nearest: None, known, .. } => {
                 format!("it may be {}", listed(known))
             }
             Self::NotKebabCase { .. } => {

@@ -16,10 +16,7 @@ pub(super) struct End {
 }
 
 impl End {
-    pub(super) const OPEN: Self = Self {
-        bound: Bound::Unbounded,
-        unit: None,
-    };
+    pub(super) const OPEN: Self = Self { bound: Bound::Unbounded, unit: None };
 
     pub(super) fn convert(
         self,
@@ -53,17 +50,9 @@ impl Expression {
         }
         // Nothing but words outside the brackets: `insoluble (< 0.1 mg/L)`, `(4.5 ± 0.2) mg/L`.
         let outside = body.trim();
-        let fault = if has_value_word(outside) {
-            QuantityFault::WordOnly
-        } else {
-            QuantityFault::NoNumber
-        };
+        let fault = if has_value_word(outside) { QuantityFault::WordOnly } else { QuantityFault::NoNumber };
         let Some(position) = brackets.iter().position(|bracket| bracket.contains(is_digit)) else {
-            return Err(if super::is_missing(outside) {
-                QuantityFault::NoValue
-            } else {
-                fault
-            });
+            return Err(if super::is_missing(outside) { QuantityFault::NoValue } else { fault });
         };
         let inside = brackets.remove(position);
         let is_unit = parse_unit(outside).is_some();
@@ -169,10 +158,7 @@ fn read_bracket(expression: &mut Expression, bracket: String, read_as: ReadAs) {
         expression.written_sd = expression.written_sd.or(Some(sd.0.abs()));
         return;
     }
-    let says_logarithm = matches!(
-        bracket.to_lowercase().as_str(),
-        "log" | "log10" | "lg" | "logarithm"
-    );
+    let says_logarithm = matches!(bracket.to_lowercase().as_str(), "log" | "log10" | "lg" | "logarithm");
     if says_logarithm && read_as.dimension == Dimension::VolumePerMass {
         (expression.low.unit, expression.high.unit) = (None, None);
         expression.unit = Some(Unit::LogLitrePerKilogram);
@@ -253,10 +239,7 @@ fn read_segment(segment: &str, read_as: ReadAs) -> Result<Option<Expression>, Qu
 /// A label may say whether a Koc or BCF stands as its logarithm.
 fn unit_by_label(label: &str, written: Option<Unit>) -> Option<Unit> {
     let plain = super::plain_words(label);
-    if plain
-        .split(' ')
-        .any(|word| word.starts_with("log") || word.starts_with("lg"))
-    {
+    if plain.split(' ').any(|word| word.starts_with("log") || word.starts_with("lg")) {
         return Some(Unit::LogLitrePerKilogram);
     }
     let names_value = ["koc", "bcf", "baf"].iter().any(|name| plain.contains(name));
@@ -265,10 +248,7 @@ fn unit_by_label(label: &str, written: Option<Unit>) -> Option<Unit> {
 
 /// `log Pow = 4.7`, `OECD 117: 3.1`: the words before the last sign that is no qualifier, and the rest.
 fn split_label(segment: &str) -> (Option<&str>, &str) {
-    let positions = segment
-        .char_indices()
-        .rev()
-        .filter(|(_, character)| matches!(character, ':' | '='));
+    let positions = segment.char_indices().rev().filter(|(_, character)| matches!(character, ':' | '='));
     for (position, _) in positions {
         let (before, after) = segment.split_at(position);
         let after = after.get(1..).unwrap_or_default();

@@ -6,11 +6,7 @@ use crate::quantity::{Bound, Interval, Unit};
 /// ten (`1.2E-5`) below 0.001 and from 1,000,000,000 on.
 pub fn format_number(number: f64) -> String {
     if !number.is_finite() || number.abs() < f64::MIN_POSITIVE {
-        return if number.is_finite() {
-            "0".to_owned()
-        } else {
-            number.to_string()
-        };
+        return if number.is_finite() { "0".to_owned() } else { number.to_string() };
     }
     let scientific = format!("{number:.3e}");
     let (mantissa, exponent) = scientific.split_once('e').unwrap_or((&scientific, "0"));
@@ -34,11 +30,7 @@ pub(super) fn number_in_full(number: f64) -> String {
 }
 
 fn without_trailing_zeros(decimal: &str) -> &str {
-    if decimal.contains('.') {
-        decimal.trim_end_matches('0').trim_end_matches('.')
-    } else {
-        decimal
-    }
+    if decimal.contains('.') { decimal.trim_end_matches('0').trim_end_matches('.') } else { decimal }
 }
 
 /// An interval as a reader writes it: `> 6.2`, `4.2–4.8`, `≤ 3 d`. The ends are in `unit`, as they are for the
@@ -61,11 +53,7 @@ pub fn format_interval(interval: Interval, unit: Unit) -> String {
         (Bound::Included(low), Bound::Excluded(high)) => format!("{} – < {}", write(low), write(high)),
         (Bound::Excluded(low), Bound::Excluded(high)) => format!("> {} – < {}", write(low), write(high)),
     };
-    if unit.symbol().is_empty() {
-        value
-    } else {
-        format!("{value} {}", unit.symbol())
-    }
+    if unit.symbol().is_empty() { value } else { format!("{value} {}", unit.symbol()) }
 }
 
 /// Four digits, unless they would make two different ends look the same.
@@ -111,12 +99,7 @@ mod tests {
             (Bound::Excluded(6.2), Bound::Unbounded, Unit::One, "> 6.2"),
             (Bound::Included(4.2), Bound::Included(4.8), Unit::One, "4.2–4.8"),
             (Bound::Unbounded, Bound::Included(3.0), Unit::Day, "≤ 3 d"),
-            (
-                Bound::Excluded(1.0),
-                Bound::Excluded(2.0),
-                Unit::Day,
-                "> 1 – < 2 d",
-            ),
+            (Bound::Excluded(1.0), Bound::Excluded(2.0), Unit::Day, "> 1 – < 2 d"),
             (Bound::Included(45.0), Bound::Included(45.0), Unit::Day, "45 d"),
         ] {
             assert_eq!(format_interval(Interval::new(low, high).unwrap(), unit), written);

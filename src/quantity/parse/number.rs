@@ -19,10 +19,7 @@ pub(super) fn read_number(text: &str, decimal: DecimalStyle) -> Result<Option<(f
         None => ("", text.strip_prefix('+').unwrap_or(text)),
     };
     let digits = take_digits(unsigned);
-    if !digits
-        .written
-        .contains(|character: char| character.is_ascii_digit())
-    {
+    if !digits.written.contains(|character: char| character.is_ascii_digit()) {
         return Ok(None);
     }
     let power_alone = power_of_ten(unsigned);
@@ -90,10 +87,7 @@ fn plain_decimal(
     style: DecimalStyle,
     exponent: Option<&str>,
 ) -> Result<String, QuantityFault> {
-    let ungrouped: String = written
-        .chars()
-        .filter(|character| !matches!(character, ' ' | '\''))
-        .collect();
+    let ungrouped: String = written.chars().filter(|character| !matches!(character, ' ' | '\'')).collect();
     let points = ungrouped.matches('.').count();
     let commas = ungrouped.matches(',').count();
     let separator = match (points, commas) {
@@ -103,14 +97,10 @@ fn plain_decimal(
         (_, 0) => Separator::Groups('.'),
         (0, _) => Separator::Groups(','),
         // Both kinds: the last one is the decimal separator, the other groups thousands.
-        (_, _) if ungrouped.rfind('.') > ungrouped.rfind(',') => Separator::Both {
-            groups: ',',
-            decimal: '.',
-        },
-        (_, _) => Separator::Both {
-            groups: '.',
-            decimal: ',',
-        },
+        (_, _) if ungrouped.rfind('.') > ungrouped.rfind(',') => {
+            Separator::Both { groups: ',', decimal: '.' }
+        }
+        (_, _) => Separator::Both { groups: '.', decimal: ',' },
     };
     match separator {
         Separator::Decimal(decimal) => Ok(with_point(&ungrouped, decimal)),
@@ -208,11 +198,7 @@ fn take_exponent(text: &str) -> Result<(Option<&str>, &str), QuantityFault> {
     };
     let bracketed = power.strip_prefix('(').map_or(power, str::trim_start);
     let (exponent, rest) = take_integer(bracketed).ok_or(QuantityFault::BadNumber)?;
-    let rest = if bracketed.len() == power.len() {
-        rest
-    } else {
-        rest.strip_prefix(')').unwrap_or(rest)
-    };
+    let rest = if bracketed.len() == power.len() { rest } else { rest.strip_prefix(')').unwrap_or(rest) };
     Ok((Some(exponent), rest))
 }
 
@@ -226,9 +212,7 @@ fn take_integer(text: &str) -> Option<(&str, &str)> {
     let (exponent, rest) = text.split_at(text.len() - unsigned.len() + length);
     let mut following = rest.chars();
     let goes_on = matches!(following.next(), Some('.' | ','))
-        && following
-            .next()
-            .is_some_and(|character| character.is_ascii_digit());
+        && following.next().is_some_and(|character| character.is_ascii_digit());
     (!goes_on).then_some((exponent, rest))
 }
 
@@ -263,14 +247,8 @@ mod tests {
             ("1 234 567,8", 1_234_567.8, 1_234_567.8),
             ("12'500.25", 12_500.25, 12_500.25),
         ] {
-            assert!(
-                read(text, DecimalStyle::Point).total_cmp(&point).is_eq(),
-                "{text} with points"
-            );
-            assert!(
-                read(text, DecimalStyle::Comma).total_cmp(&comma).is_eq(),
-                "{text} with commas"
-            );
+            assert!(read(text, DecimalStyle::Point).total_cmp(&point).is_eq(), "{text} with points");
+            assert!(read(text, DecimalStyle::Comma).total_cmp(&comma).is_eq(), "{text} with commas");
         }
     }
 
@@ -286,35 +264,17 @@ mod tests {
             ("2 x 10-5", 2e-5),
             ("10^-3", 1e-3),
         ] {
-            assert!(
-                read(text, DecimalStyle::Point).total_cmp(&number).is_eq(),
-                "{text}"
-            );
+            assert!(read(text, DecimalStyle::Point).total_cmp(&number).is_eq(), "{text}");
         }
     }
 
     #[test]
     fn digits_that_make_no_number_are_refused() {
-        for text in [
-            "1.2.3",
-            "1,23.4",
-            "1.234.5",
-            "01.02.2003",
-            "3 x 103",
-            "1,2345,678",
-        ] {
-            assert_eq!(
-                read_number(text, DecimalStyle::Point),
-                Err(QuantityFault::BadNumber),
-                "{text}"
-            );
+        for text in ["1.2.3", "1,23.4", "1.234.5", "01.02.2003", "3 x 103", "1,2345,678"] {
+            assert_eq!(read_number(text, DecimalStyle::Point), Err(QuantityFault::BadNumber), "{text}");
         }
         for text in ["1e999", "1e-999"] {
-            assert_eq!(
-                read_number(text, DecimalStyle::Point),
-                Err(QuantityFault::BadRange),
-                "{text}"
-            );
+            assert_eq!(read_number(text, DecimalStyle::Point), Err(QuantityFault::BadRange), "{text}");
         }
     }
 }

@@ -139,17 +139,14 @@ pub(super) fn take_qualifier_after(text: &str) -> Option<(Qualifier, &str)> {
     if let Some(rest) = text.strip_prefix('+').filter(|rest| rest.trim().is_empty()) {
         return Some((Qualifier::AtLeast, rest));
     }
-    AFTER
-        .iter()
-        .find_map(|(phrase, qualifier)| strip_phrase(text, phrase).map(|rest| (*qualifier, rest)))
+    AFTER.iter().find_map(|(phrase, qualifier)| strip_phrase(text, phrase).map(|rest| (*qualifier, rest)))
 }
 
 /// The qualifier at the start of a text, if any, and what follows it.
 pub(super) fn take_qualifier(text: &str) -> Option<(Qualifier, &str)> {
     let text = text.trim_start();
-    let sign = SIGNS
-        .iter()
-        .find_map(|(sign, qualifier)| text.strip_prefix(sign).map(|rest| (*qualifier, rest)));
+    let sign =
+        SIGNS.iter().find_map(|(sign, qualifier)| text.strip_prefix(sign).map(|rest| (*qualifier, rest)));
     sign.or_else(|| {
         if !text.starts_with(char::is_alphabetic) {
             return None;

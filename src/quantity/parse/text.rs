@@ -17,11 +17,7 @@ pub fn tidy(text: &str) -> String {
     let trimmed = plain
         .trim_matches(|character: char| character.is_whitespace() || character == ';')
         .trim_start_matches('\'');
-    if trimmed.len() == plain.len() {
-        plain
-    } else {
-        trimmed.to_owned()
-    }
+    if trimmed.len() == plain.len() { plain } else { trimmed.to_owned() }
 }
 
 /// Appends what stands for a character; says whether it was a superscript.
@@ -175,10 +171,7 @@ mod tests {
 
     #[test]
     fn words_lose_case_accents_and_punctuation() {
-        assert_eq!(
-            plain_words("Löslichkeit\n(Wasser) [mg/L]"),
-            "loslichkeit wasser mg l"
-        );
+        assert_eq!(plain_words("Löslichkeit\n(Wasser) [mg/L]"), "loslichkeit wasser mg l");
         assert_eq!(plain_words("CAS-Nr."), "cas nr");
         assert_eq!(plain_words("ThCO₂"), "thco2");
         assert_eq!(plain_words("GRÖßER"), "grosser");

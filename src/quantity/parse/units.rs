@@ -7,44 +7,23 @@ use crate::quantity::{Dimension, Unit};
 
 /// Spellings in lower case, without spaces and multiplication signs, `per` written `/`; see [`fold`]. Parted by spaces.
 const SPELLINGS: &[(Unit, &str)] = &[
-    (
-        Unit::One,
-        "- none dimensionless dimensionslos unitless einheitenlos",
-    ),
+    (Unit::One, "- none dimensionless dimensionslos unitless einheitenlos"),
     (Unit::Second, "s sec secs sek second seconds sekunde sekunden"),
     (Unit::Minute, "min mins minute minutes minuten"),
     (Unit::Hour, "h hr hrs hour hours std stunde stunden"),
     (Unit::Day, "d day days tag tage tagen"),
     (Unit::Week, "w wk wks week weeks wo woche wochen"),
-    (
-        Unit::Month,
-        "mo mos mon mth mths month months monat monate monaten",
-    ),
+    (Unit::Month, "mo mos mon mth mths month months monat monate monaten"),
     (Unit::Year, "a y yr yrs year years j jahr jahre jahren"),
-    (
-        Unit::NanogramPerLitre,
-        "ng/l ngl-1 ng/liter ng/litre pg/ml ng/dm3 µg/m3",
-    ),
+    (Unit::NanogramPerLitre, "ng/l ngl-1 ng/liter ng/litre pg/ml ng/dm3 µg/m3"),
     (
         Unit::MicrogramPerLitre,
         "µg/l ug/l mcg/l µgl-1 ugl-1 µg/liter µg/litre ug/liter ug/litre ppb ng/ml mg/m3 µg/dm3 ug/dm3",
     ),
-    (
-        Unit::MilligramPerLitre,
-        "mg/l mgl-1 mg/liter mg/litre ppm µg/ml ug/ml g/m3 mg/dm3 mgdm-3",
-    ),
-    (
-        Unit::GramPerLitre,
-        "g/l gl-1 g/liter g/litre mg/ml kg/m3 g/dm3 mg/cm3 gdm-3",
-    ),
-    (
-        Unit::MolePerLitre,
-        "mol/l moll-1 mol/liter mol/litre mol/dm3 moldm-3",
-    ),
-    (
-        Unit::MillimolePerLitre,
-        "mmol/l mmoll-1 mmol/liter mmol/litre mmol/dm3 mol/m3",
-    ),
+    (Unit::MilligramPerLitre, "mg/l mgl-1 mg/liter mg/litre ppm µg/ml ug/ml g/m3 mg/dm3 mgdm-3"),
+    (Unit::GramPerLitre, "g/l gl-1 g/liter g/litre mg/ml kg/m3 g/dm3 mg/cm3 gdm-3"),
+    (Unit::MolePerLitre, "mol/l moll-1 mol/liter mol/litre mol/dm3 moldm-3"),
+    (Unit::MillimolePerLitre, "mmol/l mmoll-1 mmol/liter mmol/litre mmol/dm3 mol/m3"),
     (
         Unit::MicromolePerLitre,
         "µmol/l umol/l µmoll-1 umoll-1 µmol/liter µmol/litre µmol/dm3 umol/dm3 mmol/m3",
@@ -60,21 +39,12 @@ const SPELLINGS: &[(Unit, &str)] = &[
     (Unit::Bar, "bar"),
     (Unit::MillimetreMercury, "mmhg torr"),
     (Unit::Atmosphere, "atm"),
-    (
-        Unit::Celsius,
-        "°c c degc °celsius celsius gradc gradcelsius degreescelsius",
-    ),
+    (Unit::Celsius, "°c c degc °celsius celsius gradc gradcelsius degreescelsius"),
     (Unit::Kelvin, "k kelvin °k"),
     (Unit::Fahrenheit, "°f f degf fahrenheit gradfahrenheit"),
     (Unit::GramPerMole, "g/mol gmol-1 g/mole da dalton u amu kg/kmol"),
-    (
-        Unit::PascalCubicMetrePerMole,
-        "pam3/mol pam3mol-1 pa/(mol/m3) pam3/mole pa/mol/m3 m3pa/mol",
-    ),
-    (
-        Unit::AtmosphereCubicMetrePerMole,
-        "atmm3/mol atmm3mol-1 atm-m3/mol atm-m3/mole atmm3/mole m3atm/mol",
-    ),
+    (Unit::PascalCubicMetrePerMole, "pam3/mol pam3mol-1 pa/(mol/m3) pam3/mole pa/mol/m3 m3pa/mol"),
+    (Unit::AtmosphereCubicMetrePerMole, "atmm3/mol atmm3mol-1 atm-m3/mol atm-m3/mole atmm3/mole m3atm/mol"),
     (
         Unit::Percent,
         "% percent prozent wt% wt.% wt-% gew% gew.% gew-% gew.-% %w/w %(w/w) %m/m %wt %gew vol% pct ma% ma.-% ma-% mass% masse% masse-%",
@@ -122,10 +92,8 @@ fn fold(text: &str) -> String {
     for word in text.to_lowercase().split_whitespace() {
         match word {
             "per" | "pro" | "je" => folded.push('/'),
-            _ => folded.extend(
-                word.chars()
-                    .filter(|character| !matches!(character, '·' | '*' | '⋅' | '∙' | '^')),
-            ),
+            _ => folded
+                .extend(word.chars().filter(|character| !matches!(character, '·' | '*' | '⋅' | '∙' | '^'))),
         }
     }
     let without_point = folded.trim_end_matches('.').len();
@@ -151,10 +119,9 @@ fn unit_ends(text: &str) -> Vec<usize> {
         if position > LONGEST_UNIT {
             return ends;
         }
-        let separates = matches!(
-            character,
-            ' ' | ',' | ';' | '@' | '±' | '<' | '>' | '~' | '≤' | '≥' | '+' | '.'
-        ) || (character == '-' && !before.is_ascii_punctuation());
+        let separates =
+            matches!(character, ' ' | ',' | ';' | '@' | '±' | '<' | '>' | '~' | '≤' | '≥' | '+' | '.')
+                || (character == '-' && !before.is_ascii_punctuation());
         if separates && position > 0 && before != ' ' {
             ends.push(position);
         }
@@ -176,10 +143,7 @@ mod tests {
     fn no_spelling_names_two_units() {
         assert_eq!(
             BY_SPELLING.len(),
-            SPELLINGS
-                .iter()
-                .map(|(_, words)| words.split(' ').count())
-                .sum::<usize>()
+            SPELLINGS.iter().map(|(_, words)| words.split(' ').count()).sum::<usize>()
         );
     }
 
@@ -204,16 +168,10 @@ mod tests {
 
     #[test]
     fn the_longest_unit_is_taken() {
-        assert_eq!(
-            take_unit(" t/a, food grade"),
-            Some((Unit::TonnePerYear, ", food grade"))
-        );
+        assert_eq!(take_unit(" t/a, food grade"), Some((Unit::TonnePerYear, ", food grade")));
         assert_eq!(take_unit("d in soil"), Some((Unit::Day, " in soil")));
         assert_eq!(take_unit("d-3 wk"), Some((Unit::Day, "-3 wk")));
-        assert_eq!(
-            take_unit("mg L-1 water"),
-            Some((Unit::MilligramPerLitre, " water"))
-        );
+        assert_eq!(take_unit("mg L-1 water"), Some((Unit::MilligramPerLitre, " water")));
         assert_eq!(take_unit("dogs"), None);
     }
 }

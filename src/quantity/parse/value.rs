@@ -86,14 +86,9 @@ pub(super) fn read_value(opening: &Opening<'_>, read_as: ReadAs) -> Result<Expre
         let low_unit = first_unit.or(upper.unit);
         expression.unit = low_unit;
         expression.approximate |= upper.approximate;
-        expression.low = End {
-            bound: low_bound(opening.qualifier, first)?,
-            unit: low_unit,
-        };
-        expression.high = End {
-            bound: high_bound(upper.qualifier, upper.number)?,
-            unit: upper.unit.or(first_unit),
-        };
+        expression.low = End { bound: low_bound(opening.qualifier, first)?, unit: low_unit };
+        expression.high =
+            End { bound: high_bound(upper.qualifier, upper.number)?, unit: upper.unit.or(first_unit) };
         upper.rest
     } else if let Some((qualifier, after)) = take_qualifier_after(rest)
         && opening.qualifier == Qualifier::Exactly
@@ -186,13 +181,7 @@ fn read_upper_end<'text>(
         return Ok(None);
     };
     let (unit, rest) = unit_of(rest);
-    Ok(Some(UpperEnd {
-        number,
-        unit,
-        qualifier: upper.qualifier,
-        approximate: upper.approximate,
-        rest,
-    }))
+    Ok(Some(UpperEnd { number, unit, qualifier: upper.qualifier, approximate: upper.approximate, rest }))
 }
 
 fn strip_word<'text>(text: &'text str, word: &str) -> Option<&'text str> {

@@ -45,10 +45,7 @@ pub fn is_missing(text: &str) -> bool {
     if !has_letter_or_digit {
         return text.chars().all(|character| {
             character.is_whitespace()
-                || matches!(
-                    character,
-                    '-' | '–' | '—' | '−' | '?' | '.' | '/' | '_' | '*' | '#'
-                )
+                || matches!(character, '-' | '–' | '—' | '−' | '?' | '.' | '/' | '_' | '*' | '#')
         });
     }
     let joined: String = plain_words(text).split(' ').collect();
@@ -57,9 +54,7 @@ pub fn is_missing(text: &str) -> bool {
 
 /// Whether a text holds a word that stands for a value without a number.
 pub(super) fn has_value_word(text: &str) -> bool {
-    plain_words(text)
-        .split(' ')
-        .any(|word| stands_in(VALUE_WORDS, word))
+    plain_words(text).split(' ').any(|word| stands_in(VALUE_WORDS, word))
 }
 
 pub(super) fn starts_remark(word: &str) -> bool {
@@ -68,10 +63,7 @@ pub(super) fn starts_remark(word: &str) -> bool {
 
 /// Whether the words before a number make it the number of a guideline, a pH or the like.
 pub(super) fn numbers_something_else(label: &str) -> bool {
-    label
-        .split_whitespace()
-        .last()
-        .is_some_and(|word| stands_in(NUMBERED, &word.to_lowercase()))
+    label.split_whitespace().last().is_some_and(|word| stands_in(NUMBERED, &word.to_lowercase()))
 }
 
 #[cfg(test)]

@@ -57,10 +57,7 @@ impl<'file> Section<'file> {
                 continue;
             }
             let near = nearest(name, known.iter().copied());
-            let near = known
-                .iter()
-                .copied()
-                .find(|word| Some(*word) == near && self.value(word).is_none());
+            let near = known.iter().copied().find(|word| Some(*word) == near && self.value(word).is_none());
             self.misspelt.borrow_mut().extend(near);
             let mistake = RuleMistake::UnknownKey {
                 key: name.to_owned(),
@@ -74,17 +71,11 @@ impl<'file> Section<'file> {
 
     /// The place of a key, if the table has it.
     pub fn key_span(&self, key: &str) -> Option<Range<usize>> {
-        self.table
-            .keys()
-            .find(|name| name.get_ref() == key)
-            .map(Spanned::span)
+        self.table.keys().find(|name| name.get_ref() == key).map(Spanned::span)
     }
 
     pub(super) fn value(&self, key: &str) -> Option<&'file Spanned<DeValue<'file>>> {
-        self.table
-            .iter()
-            .find(|(name, _)| name.get_ref() == key)
-            .map(|(_, value)| value)
+        self.table.iter().find(|(name, _)| name.get_ref() == key).map(|(_, value)| value)
     }
 
     /// Whether the key stands there under a wrong spelling, which is reported already.
@@ -94,28 +85,14 @@ impl<'file> Section<'file> {
 
     /// Reports that the key in `example` is missing, where it is; to be asked after [`Self::allow`].
     pub fn need(&self, example: &'static str) {
-        let key = example
-            .split(" = ")
-            .next()
-            .unwrap_or(example)
-            .trim_matches(['[', ']']);
+        let key = example.split(" = ").next().unwrap_or(example).trim_matches(['[', ']']);
         if self.value(key).is_none() && !self.is_misspelt(key) {
-            self.report(
-                self.span(),
-                RuleMistake::MissingKey {
-                    example,
-                    table: self.title,
-                },
-            );
+            self.report(self.span(), RuleMistake::MissingKey { example, table: self.title });
         }
     }
 
     pub(super) fn wrong_kind(&self, key: &str, wanted: &'static str, value: &Spanned<DeValue<'_>>) {
-        let mistake = RuleMistake::WrongKind {
-            key: key.to_owned(),
-            wanted,
-            found: kind_of(value.get_ref()),
-        };
+        let mistake = RuleMistake::WrongKind { key: key.to_owned(), wanted, found: kind_of(value.get_ref()) };
         self.report(value.span(), mistake);
     }
 
@@ -152,13 +129,7 @@ impl<'file> Section<'file> {
     }
 
     fn inner(&self, table: &'file DeTable<'file>, span: Range<usize>, title: &'static str) -> Self {
-        Self {
-            faults: self.faults,
-            table,
-            span,
-            title,
-            misspelt: RefCell::new(Vec::new()),
-        }
+        Self { faults: self.faults, table, span, title, misspelt: RefCell::new(Vec::new()) }
     }
 }
 

@@ -37,10 +37,7 @@ impl Section<'_> {
             self.report(value.span(), RuleMistake::EmptyText { key: key.to_owned() });
             return None;
         }
-        Some(Located {
-            value: text.to_owned(),
-            span: value.span(),
-        })
+        Some(Located { value: text.to_owned(), span: value.span() })
     }
 
     /// The text of a key.
@@ -76,12 +73,7 @@ impl Section<'_> {
     /// The numbers of a list.
     pub fn numbers(&self, key: &str) -> Option<Vec<Located<f64>>> {
         let items = self.list(key, "a list of numbers")?;
-        Some(
-            items
-                .iter()
-                .filter_map(|item| self.number_of(key, item))
-                .collect(),
-        )
+        Some(items.iter().filter_map(|item| self.number_of(key, item)).collect())
     }
 
     fn number_of(&self, key: &str, value: &Spanned<DeValue<'_>>) -> Option<Located<f64>> {
@@ -89,10 +81,7 @@ impl Section<'_> {
         if number.is_none() {
             self.wrong_kind(key, "a finite number without quotes", value);
         }
-        number.map(|value_of| Located {
-            value: value_of,
-            span: value.span(),
-        })
+        number.map(|value_of| Located { value: value_of, span: value.span() })
     }
 
     fn scalar_of(&self, key: &str, value: &Spanned<DeValue<'_>>) -> Option<Located<Scalar>> {
@@ -104,10 +93,7 @@ impl Section<'_> {
                 return None;
             }
         };
-        Some(Located {
-            value: scalar,
-            span: value.span(),
-        })
+        Some(Located { value: scalar, span: value.span() })
     }
 
     /// A text or a number.
@@ -130,10 +116,7 @@ impl Section<'_> {
             return None;
         };
         let ends = [self.scalar_of(key, low)?, self.scalar_of(key, high)?];
-        Some(Located {
-            value: ends,
-            span: value.span(),
-        })
+        Some(Located { value: ends, span: value.span() })
     }
 
     /// A day.
@@ -143,10 +126,8 @@ impl Section<'_> {
             self.wrong_kind(key, "a day without quotes, for example 2023-03-31", value);
             return None;
         };
-        let day = written
-            .date
-            .filter(|_| written.time.is_none() && written.offset.is_none())
-            .and_then(|day| {
+        let day =
+            written.date.filter(|_| written.time.is_none() && written.offset.is_none()).and_then(|day| {
                 let year = i16::try_from(day.year).ok()?;
                 Date::new(year, i8::try_from(day.month).ok()?, i8::try_from(day.day).ok()?)
             });
@@ -154,10 +135,7 @@ impl Section<'_> {
             let found = self.faults.text(value.span()).to_owned();
             self.report(value.span(), RuleMistake::NotADay { found });
         }
-        day.map(|day| Located {
-            value: day,
-            span: value.span(),
-        })
+        day.map(|day| Located { value: day, span: value.span() })
     }
 
     /// One of the words a key takes.
@@ -168,12 +146,7 @@ impl Section<'_> {
     /// Several of the words a key takes.
     pub fn words<Meaning: Copy>(&self, key: &str, words: &[(&str, Meaning)]) -> Option<Vec<Meaning>> {
         let texts = self.texts(key)?;
-        Some(
-            texts
-                .iter()
-                .filter_map(|text| self.meaning(key, text, words))
-                .collect(),
-        )
+        Some(texts.iter().filter_map(|text| self.meaning(key, text, words)).collect())
     }
 
     fn meaning<Meaning: Copy>(
@@ -203,9 +176,7 @@ impl Section<'_> {
 
     /// Whether `[]` stands at the key.
     pub fn is_empty_list(&self, key: &str) -> bool {
-        self.value(key)
-            .and_then(|value| value.get_ref().as_array())
-            .is_some_and(|list| list.is_empty())
+        self.value(key).and_then(|value| value.get_ref().as_array()).is_some_and(|list| list.is_empty())
     }
 }
 

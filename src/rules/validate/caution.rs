@@ -8,31 +8,21 @@ use super::criterion::refuse_duplicate;
 use super::limit::{Measured, quantity};
 use super::read_id;
 use super::test::subjects;
-use crate::quantity::Dimension;
 use crate::fault::{OwnerKind, RuleFaults, RuleMistake};
+use crate::quantity::Dimension;
 use crate::rules::file::{Located, Section};
 use crate::rules::{Blocks, Caution, RuleSource, Subject, Triggers};
 use crate::substance::{Identity, RowType, SubstanceType};
 
-const ROW_TYPES: [(&str, RowType); 3] = [
-    ("substance", RowType::Substance),
-    ("mixture", RowType::Mixture),
-    ("article", RowType::Article),
-];
+const ROW_TYPES: [(&str, RowType); 3] =
+    [("substance", RowType::Substance), ("mixture", RowType::Mixture), ("article", RowType::Article)];
 const IDENTITIES: [(&str, Identity); 3] = [
     ("name-alone", Identity::NameAlone),
     ("repaired-date", Identity::RepairedDate),
     ("not-identified", Identity::NotIdentified),
 ];
-const TRIGGER_KEYS: [&str; 7] = [
-    "substance-types",
-    "row-types",
-    "identities",
-    "name-patterns",
-    "formula",
-    "ionisable",
-    "log-kow-spread",
-];
+const TRIGGER_KEYS: [&str; 7] =
+    ["substance-types", "row-types", "identities", "name-patterns", "formula", "ionisable", "log-kow-spread"];
 
 /// The checked cautions of a file, in order.
 pub(crate) fn read_cautions(source: &RuleSource) -> Result<Vec<Caution>, RuleFaults> {
@@ -52,14 +42,7 @@ pub(crate) fn read_cautions(source: &RuleSource) -> Result<Vec<Caution>, RuleFau
 }
 
 fn read_caution(section: &Section<'_>) -> Option<Caution> {
-    let mut known = vec![
-        "id",
-        "sentence",
-        "source",
-        "unless-names",
-        "blocks",
-        "at-most-screening",
-    ];
+    let mut known = vec!["id", "sentence", "source", "unless-names", "blocks", "at-most-screening"];
     known.extend(TRIGGER_KEYS);
     section.allow(&known);
     section.need("id = \"polymer\"");
@@ -116,18 +99,11 @@ fn set<T: Ord>(items: Option<Vec<T>>) -> BTreeSet<T> {
 /// One pattern that matches wherever one of the list does, whatever the case.
 fn read_pattern(section: &Section<'_>, key: &str) -> Option<Regex> {
     let patterns = section.texts(key)?;
-    let sound: Vec<&Located<String>> = patterns
-        .iter()
-        .filter(|pattern| refuse_unsound(section, pattern))
-        .collect();
-    let joined: Vec<String> = sound
-        .iter()
-        .map(|pattern| format!("(?:{})", pattern.value))
-        .collect();
+    let sound: Vec<&Located<String>> =
+        patterns.iter().filter(|pattern| refuse_unsound(section, pattern)).collect();
+    let joined: Vec<String> = sound.iter().map(|pattern| format!("(?:{})", pattern.value)).collect();
     let span = patterns.first()?.span.clone();
-    compile(&joined.join("|"))
-        .map_err(|reason| section.report(span, RuleMistake::BadPattern { reason }))
-        .ok()
+    compile(&joined.join("|")).map_err(|reason| section.report(span, RuleMistake::BadPattern { reason })).ok()
 }
 
 fn refuse_unsound(section: &Section<'_>, pattern: &Located<String>) -> bool {

@@ -12,11 +12,7 @@ const WEIGHTS: [(&str, Weight); 4] = [
     ("supporting", Weight::Supporting),
 ];
 const COMBINES: [(&str, Combine); 2] = [("any", Combine::Any), ("all", Combine::All)];
-const DECIDES: [(&str, Decides); 3] = [
-    ("both", Decides::Both),
-    ("in", Decides::In),
-    ("out", Decides::Out),
-];
+const DECIDES: [(&str, Decides); 3] = [("both", Decides::Both), ("in", Decides::In), ("out", Decides::Out)];
 const GUARDS: [(&str, Guards); 2] = [("fired", Guards::Fired), ("fired-or-open", Guards::FiredOrOpen)];
 const CLEARS_ON: [(&str, ClearsOn); 2] = [("all", ClearsOn::All), ("some", ClearsOn::Some)];
 const ONLY_IF: [(&str, OnlyIf); 1] = [("no-data-before", OnlyIf::NoDataBefore)];
@@ -44,11 +40,7 @@ pub(crate) fn refuse_duplicate(
     match names.iter().find(|(taken, _)| taken == name) {
         Some((_, line)) => {
             let span = section.text("id").map_or_else(|| section.span(), |id| id.span);
-            let mistake = RuleMistake::DuplicateName {
-                name: name.to_owned(),
-                first: kind,
-                line: *line,
-            };
+            let mistake = RuleMistake::DuplicateName { name: name.to_owned(), first: kind, line: *line };
             section.report(span, mistake);
         }
         None => names.push((name.to_owned(), section.line(&section.span()))),
@@ -64,10 +56,8 @@ fn read_criterion(section: &Section<'_>) -> Option<Criterion> {
     let steps = read_steps(section);
     let bands = read_bands(section);
     let id = id?.value;
-    let answers: Vec<_> = ["assess", "step", "band"]
-        .into_iter()
-        .filter_map(|key| section.key_span(key))
-        .collect();
+    let answers: Vec<_> =
+        ["assess", "step", "band"].into_iter().filter_map(|key| section.key_span(key)).collect();
     match answers.as_slice() {
         [] => {
             let criterion = id.clone();
@@ -79,33 +69,15 @@ fn read_criterion(section: &Section<'_>) -> Option<Criterion> {
             section.report(second.clone(), RuleMistake::MixedCriterion { criterion });
         }
     }
-    Some(Criterion {
-        id,
-        title: title?.value,
-        assess: assess.map(|sentence| sentence.value),
-        steps,
-        bands,
-    })
+    Some(Criterion { id, title: title?.value, assess: assess.map(|sentence| sentence.value), steps, bands })
 }
 
 fn read_steps(section: &Section<'_>) -> Vec<Step> {
-    section
-        .sections("step", "[[criterion.step]]")
-        .iter()
-        .filter_map(read_step)
-        .collect()
+    section.sections("step", "[[criterion.step]]").iter().filter_map(read_step).collect()
 }
 
 fn read_step(section: &Section<'_>) -> Option<Step> {
-    section.allow(&[
-        "weight",
-        "combine",
-        "decides",
-        "guards",
-        "clears-on",
-        "only-if",
-        "test",
-    ]);
+    section.allow(&["weight", "combine", "decides", "guards", "clears-on", "only-if", "test"]);
     section.need("weight = \"definitive\"");
     let weight = section.word("weight", &WEIGHTS);
     let decides = section.word("decides", &DECIDES);
@@ -167,10 +139,7 @@ fn read_bands(section: &Section<'_>) -> Vec<Band> {
         let rating = band.text("rating");
         let test = read_test(&band, &["rating"]);
         if let (Some(rating), Some(test)) = (rating, test) {
-            bands.push(Band {
-                rating: rating.value,
-                test,
-            });
+            bands.push(Band { rating: rating.value, test });
         }
     }
     bands

@@ -41,24 +41,16 @@ pub(super) fn read_designations(file: &Section<'_>, criteria: &[Criterion]) -> O
     if drafts.len() < sections.len() || criteria.len() < criterion_lines.len() {
         return None;
     }
-    let designations: Option<Vec<Designation>> = drafts
-        .iter()
-        .map(|draft| resolve(draft, &drafts, criteria))
-        .collect();
+    let designations: Option<Vec<Designation>> =
+        drafts.iter().map(|draft| resolve(draft, &drafts, criteria)).collect();
     let designations = designations?;
     for (index, draft) in drafts.iter().enumerate() {
         // Each circle is told once, at its first designation.
         if let Some(circle) =
             way_back(index, &designations).filter(|circle| circle.iter().all(|part| *part >= index))
         {
-            let path = circle
-                .iter()
-                .filter_map(|part| Some(drafts.get(*part)?.id.clone()))
-                .collect();
-            let span = draft
-                .parts
-                .first()
-                .map_or(draft.section.span(), |part| part.span.clone());
+            let path = circle.iter().filter_map(|part| Some(drafts.get(*part)?.id.clone())).collect();
+            let span = draft.parts.first().map_or(draft.section.span(), |part| part.span.clone());
             draft.section.report(span, RuleMistake::Circular { path });
         }
     }
@@ -93,11 +85,8 @@ fn read_draft<'file>(section: &Section<'file>) -> Option<Draft<'file>> {
 }
 
 fn resolve(draft: &Draft<'_>, drafts: &[Draft<'_>], criteria: &[Criterion]) -> Option<Designation> {
-    let parts: Vec<Option<DesignationPart>> = draft
-        .parts
-        .iter()
-        .map(|part| resolve_part(draft, part, drafts, criteria))
-        .collect();
+    let parts: Vec<Option<DesignationPart>> =
+        draft.parts.iter().map(|part| resolve_part(draft, part, drafts, criteria)).collect();
     Some(Designation {
         id: draft.id.clone(),
         title: draft.title.clone(),
@@ -117,14 +106,9 @@ fn resolve_part(
     let by_designation = drafts.iter().position(|other| other.id == part.value);
     match (by_criterion, by_designation) {
         (Some(index), _) => {
-            if criteria
-                .get(index)
-                .is_some_and(|criterion| !criterion.bands.is_empty())
-            {
+            if criteria.get(index).is_some_and(|criterion| !criterion.bands.is_empty()) {
                 let criterion = part.value.clone();
-                draft
-                    .section
-                    .report(part.span.clone(), RuleMistake::BandedPart { criterion });
+                draft.section.report(part.span.clone(), RuleMistake::BandedPart { criterion });
             }
             Some(DesignationPart::Criterion(index))
         }

@@ -18,11 +18,7 @@ pub(crate) struct Measured {
 impl Measured {
     /// A quantity that is no property of a substance.
     pub const fn new(title: &'static str, dimension: Dimension) -> Self {
-        Self {
-            title,
-            dimension,
-            may_be_negative: matches!(dimension, Dimension::Temperature),
-        }
+        Self { title, dimension, may_be_negative: matches!(dimension, Dimension::Temperature) }
     }
 
     /// What the numbers of a subject measure; `None` for those that are words.
@@ -46,22 +42,12 @@ const COMPARISONS: [(&str, Comparison); 4] = [
     ("below", Comparison::Below),
     ("at-most", Comparison::AtMost),
 ];
-pub(super) const LIMIT_KEYS: [&str; 7] = [
-    "above",
-    "at-least",
-    "below",
-    "at-most",
-    "between",
-    "any-of-words",
-    "is",
-];
+pub(super) const LIMIT_KEYS: [&str; 7] =
+    ["above", "at-least", "below", "at-most", "between", "any-of-words", "is"];
 
 /// The limit of a test and its text for sentences.
 pub(super) fn read_limit(test: &Section<'_>, subject: Subject) -> Option<(Limit, String)> {
-    let keys: Vec<&'static str> = LIMIT_KEYS
-        .into_iter()
-        .filter(|key| test.key_span(key).is_some())
-        .collect();
+    let keys: Vec<&'static str> = LIMIT_KEYS.into_iter().filter(|key| test.key_span(key).is_some()).collect();
     match keys.as_slice() {
         [] if LIMIT_KEYS.iter().any(|key| test.is_misspelt(key)) => None,
         [] => {
@@ -83,10 +69,7 @@ fn read_one(test: &Section<'_>, subject: Subject, key: &'static str) -> Option<(
     match (Measured::of(subject), comparison, key) {
         (Some(measured), Some((_, comparison)), _) => {
             let written = test.scalar(key)?;
-            let limit = Limit::Number {
-                comparison: *comparison,
-                value: quantity(test, &written, measured)?,
-            };
+            let limit = Limit::Number { comparison: *comparison, value: quantity(test, &written, measured)? };
             Some((limit, written_text(&written.value)))
         }
         (Some(measured), None, "between") => read_range(test, measured),
@@ -104,11 +87,8 @@ fn read_one(test: &Section<'_>, subject: Subject, key: &'static str) -> Option<(
             Some((Limit::Is(result), word.to_owned()))
         }
         (Some(_) | None, _, _) => {
-            let mistake = RuleMistake::LimitDoesNotFit {
-                key,
-                property: subject.title(),
-                example: example_of(subject),
-            };
+            let mistake =
+                RuleMistake::LimitDoesNotFit { key, property: subject.title(), example: example_of(subject) };
             test.report(test.key_span(key).unwrap_or(test.span()), mistake);
             None
         }
@@ -124,10 +104,7 @@ fn read_range(test: &Section<'_>, measured: Measured) -> Option<(Limit, String)>
         return None;
     }
     let [low_text, high_text] = ends.value.each_ref().map(|end| written_text(&end.value));
-    Some((
-        Limit::Between { low, high },
-        format!("{low_text} to below {high_text}"),
-    ))
+    Some((Limit::Between { low, high }, format!("{low_text} to below {high_text}")))
 }
 
 /// Hazard statement codes of a list.
@@ -153,10 +130,7 @@ fn is_hazard_code(text: &str) -> bool {
 
 /// The number of a written quantity in the canonical unit.
 pub(crate) fn quantity(section: &Section<'_>, written: &Located<Scalar>, measured: Measured) -> Option<f64> {
-    measured
-        .number(&written.value)
-        .map_err(|mistake| section.report(written.span.clone(), mistake))
-        .ok()
+    measured.number(&written.value).map_err(|mistake| section.report(written.span.clone(), mistake)).ok()
 }
 
 impl Measured {
@@ -170,43 +144,27 @@ impl Measured {
         let number = match bare {
             Some(number) if self.dimension == Dimension::Dimensionless => number,
             Some(_) => {
-                return Err(RuleMistake::NoUnit {
-                    number: found.trim().to_owned(),
-                    property,
-                    unit,
-                });
+                return Err(RuleMistake::NoUnit { number: found.trim().to_owned(), property, unit });
             }
             // One plain number: no qualifier, no range, and no comma, which groups here and divides there.
             None if found.contains(['<', '>', '≤', '≥', '~', '±', ',']) => {
-                return Err(RuleMistake::NotAQuantity {
-                    found,
-                    property,
-                    unit,
-                });
+                return Err(RuleMistake::NotAQuantity { found, property, unit });
             }
             None => parse_limit(&found, self.dimension).map_err(|fault| match fault {
                 QuantityFault::WrongDimension(_) | QuantityFault::UnknownUnit(_) => {
                     let found = found.clone();
-                    RuleMistake::WrongUnit {
-                        found,
-                        property,
-                        unit,
-                    }
+                    RuleMistake::WrongUnit { found, property, unit }
                 }
                 QuantityFault::NoValue
                 | QuantityFault::NoNumber
                 | QuantityFault::NeedsMolarMass
-            | QuantityFault::WordOnly
-            | QuantityFault::BadNumber
-            | QuantityFault::SeveralValues
-            | QuantityFault::TooLong
+                | QuantityFault::WordOnly
+                | QuantityFault::BadNumber
+                | QuantityFault::SeveralValues
+                | QuantityFault::TooLong
                 | QuantityFault::BadRange => {
                     let found = found.clone();
-                    RuleMistake::NotAQuantity {
-                        found,
-                        property,
-                        unit,
-                    }
+                    RuleMistake::NotAQuantity { found, property, unit }
                 }
             })?,
         };

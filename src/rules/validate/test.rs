@@ -30,23 +30,14 @@ pub(crate) fn subjects() -> Vec<(&'static str, Subject)> {
     Property::ALL
         .into_iter()
         .map(Subject::Property)
-        .chain([
-            Subject::ReadyBiodegradability,
-            Subject::InherentBiodegradability,
-            Subject::HazardStatements,
-        ])
+        .chain([Subject::ReadyBiodegradability, Subject::InherentBiodegradability, Subject::HazardStatements])
         .map(|subject| (subject.id(), subject))
         .collect()
 }
 
 /// Reads a test; `more_keys` are those the table has beside the test's own.
 pub(super) fn read_test(section: &Section<'_>, more_keys: &[&'static str]) -> Option<Test> {
-    let known: Vec<&'static str> = more_keys
-        .iter()
-        .chain(&OTHER_KEYS)
-        .chain(&LIMIT_KEYS)
-        .copied()
-        .collect();
+    let known: Vec<&'static str> = more_keys.iter().chain(&OTHER_KEYS).chain(&LIMIT_KEYS).copied().collect();
     section.allow(&known);
     section.need("property = \"bcf\"");
     section.need("source = \"Annex XIII, 1.1.2\"");
@@ -55,10 +46,7 @@ pub(super) fn read_test(section: &Section<'_>, more_keys: &[&'static str]) -> Op
     let bases = section.words("basis", &Basis::ALL.map(|basis| (basis.word(), basis)));
     let checked = section.word("checked", &CHECKED);
     let (source, note) = (section.text("source"), section.text("note"));
-    let missing = section.word(
-        "missing",
-        &[("open", WhenMissing::Open), ("fires", WhenMissing::Fires)],
-    );
+    let missing = section.word("missing", &[("open", WhenMissing::Open), ("fires", WhenMissing::Fires)]);
     let (guideline, within) = read_inherent_keys(section, subject);
     let subject = subject?;
     let (limit, limit_text) = read_limit(section, subject)?;

@@ -103,20 +103,13 @@ impl Expected {
             example,
             bound_example,
             dimension,
-            sign: if property.may_be_negative() {
-                Sign::Any
-            } else {
-                Sign::Positive
-            },
+            sign: if property.may_be_negative() { Sign::Any } else { Sign::Positive },
             sensible,
         }
     }
 
     fn not_a(self) -> CellFaultKind {
-        CellFaultKind::NotA {
-            what: self.what,
-            example: self.example,
-        }
+        CellFaultKind::NotA { what: self.what, example: self.example }
     }
 }
 
@@ -144,12 +137,7 @@ pub(super) fn read_quantity(
     molar_mass: Option<f64>,
 ) -> Result<Option<(Quantity, Said)>, CellFaultKind> {
     let default_unit = column.unit.unwrap_or_else(|| expected.dimension.canonical());
-    let read_as = ReadAs {
-        dimension: expected.dimension,
-        default_unit,
-        decimal: column.decimal,
-        molar_mass,
-    };
+    let read_as = ReadAs { dimension: expected.dimension, default_unit, decimal: column.decimal, molar_mass };
     let read = match content {
         CellContent::Number(number) => {
             quantity_of_number(*number, read_as).map(|quantity| (quantity, Said::default()))
@@ -176,19 +164,12 @@ fn word_fault(fault: QuantityFault, expected: Expected) -> CellFaultKind {
     let Expected { what, example, .. } = expected;
     match fault {
         QuantityFault::NoValue | QuantityFault::NoNumber => expected.not_a(),
-        QuantityFault::WordOnly => CellFaultKind::WordNoNumber {
-            what,
-            example: expected.bound_example,
-        },
+        QuantityFault::WordOnly => CellFaultKind::WordNoNumber { what, example: expected.bound_example },
         QuantityFault::BadNumber => CellFaultKind::BadNumber { example },
         QuantityFault::SeveralValues => CellFaultKind::SeveralValues { what },
         QuantityFault::UnknownUnit(word) => {
             let nearest = nearest(&word.to_lowercase(), unit_words(expected.dimension));
-            CellFaultKind::UnknownUnit {
-                word,
-                nearest,
-                example,
-            }
+            CellFaultKind::UnknownUnit { word, nearest, example }
         }
         QuantityFault::WrongDimension(unit) => CellFaultKind::WrongUnit { unit, what, example },
         QuantityFault::NeedsMolarMass => CellFaultKind::NeedsMolarMass,
@@ -210,13 +191,10 @@ fn check_sense(interval: Interval, expected: Expected) -> Result<(), CellFaultKi
         Bound::Unbounded => false,
     };
     if expected.sign == Sign::Positive && reaches_zero_only {
-        return Err(CellFaultKind::Zero {
-            what,
-            example: expected.bound_example,
-        });
+        return Err(CellFaultKind::Zero { what, example: expected.bound_example });
     }
     if ends.iter().flatten().any(|end| *end < least || *end > most) {
-        return Err(CellFaultKind::BadRange { what });
+        return Err(CellFaultKind::OutOfSense { what });
     }
     Ok(())
 }
@@ -234,11 +212,17 @@ pub(super) fn value_text(content: &CellContent) -> Option<String> {
     (!is_missing(&text)).then_some(text)
 }
 
+/// Whether a number is shown in full; spreadsheet programs show others with an exponent.
+fn plain(number: f64) -> bool {
+    number.abs() < f64::MIN_POSITIVE || (1e-9..1e15).contains(&number.abs())
+}
+
 /// The content of a cell in a message.
 pub(super) fn shown(content: &CellContent) -> String {
     match content {
         CellContent::Empty => String::new(),
         CellContent::Text(text) | CellContent::Error(text) => text.clone(),
+        CellContent::Number(number) if !plain(*number) => format!("{number:E}"),
         CellContent::Number(number) => number.to_string(),
         CellContent::Boolean(true) => "TRUE".to_owned(),
         CellContent::Boolean(false) => "FALSE".to_owned(),

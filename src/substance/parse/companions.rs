@@ -63,10 +63,7 @@ impl Companions {
     ) -> Result<(), CellFaultKind> {
         let expected = Expected::temperature("temperature of the half-life");
         if let Some(value) = single(content, column, expected)? {
-            self.half_life_temperature.push(Speaking {
-                about: column.about,
-                value,
-            });
+            self.half_life_temperature.push(Speaking { about: column.about, value });
         }
         Ok(())
     }
@@ -94,13 +91,8 @@ impl Companions {
         let plain = if bare { format!("oecd {plain}") } else { plain };
         let mut said = said_by_method(&text);
         said.basis = basis_in(&plain).or_else(|| STUDY_WORD.is_match(&plain).then_some(Basis::Measured));
-        let number = TEST_NUMBER
-            .captures(&plain)
-            .and_then(|found| Some(found.get(1)?.as_str().to_owned()));
-        self.guidelines.push(Speaking {
-            about,
-            value: Guideline { said, number },
-        });
+        let number = TEST_NUMBER.captures(&plain).and_then(|found| Some(found.get(1)?.as_str().to_owned()));
+        self.guidelines.push(Speaking { about, value: Guideline { said, number } });
     }
 
     /// What method and guideline columns say of a property; `properties` are those the row has values of.
@@ -116,25 +108,15 @@ impl Companions {
                 (None, None) => only_one || guideline.value.said.basis == Some(Basis::Calculated),
             }
         });
-        method
-            .chain(guidelines.map(|guideline| &guideline.value.said))
-            .collect()
+        method.chain(guidelines.map(|guideline| &guideline.value.said)).collect()
     }
 
     /// What guideline columns say of tests with these numbers.
     pub(super) fn of_tests(&self, numbers: &[&str]) -> Vec<&Said> {
         let named = |guideline: &&Speaking<Guideline>| {
-            guideline
-                .value
-                .number
-                .as_deref()
-                .is_some_and(|number| numbers.contains(&number))
+            guideline.value.number.as_deref().is_some_and(|number| numbers.contains(&number))
         };
-        self.guidelines
-            .iter()
-            .filter(named)
-            .map(|guideline| &guideline.value.said)
-            .collect()
+        self.guidelines.iter().filter(named).map(|guideline| &guideline.value.said).collect()
     }
 
     /// Fills in what the cell and its header left open.
@@ -152,9 +134,8 @@ impl Companions {
             | Property::HydrolysisHalfLife
             | Property::PhotolysisHalfLife
             | Property::DissipationHalfLife => {
-                conditions.temperature = conditions
-                    .temperature
-                    .or_else(|| spoken_of(&self.half_life_temperature, property));
+                conditions.temperature =
+                    conditions.temperature.or_else(|| spoken_of(&self.half_life_temperature, property));
             }
             Property::LogD
             | Property::LogKoa
@@ -172,20 +153,14 @@ impl Companions {
             | Property::AcuteToxicity
             | Property::MolarMass => {}
         }
-        conditions.reliability = conditions
-            .reliability
-            .or_else(|| spoken_of(&self.reliability, property));
+        conditions.reliability = conditions.reliability.or_else(|| spoken_of(&self.reliability, property));
     }
 }
 
 /// The value that names the property, else one that names none.
 fn spoken_of<T: Copy>(speaking: &[Speaking<T>], property: Property) -> Option<T> {
-    let about = |wanted: Option<Property>| {
-        speaking
-            .iter()
-            .find(|one| one.about == wanted)
-            .map(|one| one.value)
-    };
+    let about =
+        |wanted: Option<Property>| speaking.iter().find(|one| one.about == wanted).map(|one| one.value);
     about(Some(property)).or_else(|| about(None))
 }
 
@@ -244,9 +219,8 @@ fn read_reliability(content: &CellContent) -> Result<Option<u8>, CellFaultKind> 
         return Ok(None);
     };
     let plain = plain_words(&text);
-    let score = SCORE
-        .captures(&text)
-        .and_then(|found| found.get(1).or_else(|| found.get(2))?.as_str().parse().ok());
+    let score =
+        SCORE.captures(&text).and_then(|found| found.get(1).or_else(|| found.get(2))?.as_str().parse().ok());
     let has = |words: &str| plain.contains(words);
     let in_words = if has("not assignable") || has("nicht bewertbar") || has("nicht zuordenbar") {
         Some(4)
@@ -259,9 +233,6 @@ fn read_reliability(content: &CellContent) -> Result<Option<u8>, CellFaultKind> 
     } else {
         None
     };
-    let not_a = CellFaultKind::NotA {
-        what: "reliability score from 1 to 4",
-        example: "2",
-    };
+    let not_a = CellFaultKind::NotA { what: "reliability score from 1 to 4", example: "2" };
     score.or(in_words).map(Some).ok_or(not_a)
 }

@@ -77,20 +77,14 @@ pub(super) struct ReadyCell {
 
 impl ReadyCell {
     pub(super) fn with_basis(self, basis: Basis) -> ReadyBiodegradability {
-        ReadyBiodegradability {
-            result: self.result,
-            basis,
-            reported: self.reported,
-        }
+        ReadyBiodegradability { result: self.result, basis, reported: self.reported }
     }
 }
 
 pub(super) type Read<T> = Result<Option<T>, CellFaultKind>;
 
-const NOT_READY_CELL: CellFaultKind = CellFaultKind::NotA {
-    what: "result of a ready biodegradability test",
-    example: "82 %, 28 d, OECD 301B",
-};
+const NOT_READY_CELL: CellFaultKind =
+    CellFaultKind::NotA { what: "result of a ready biodegradability test", example: "82 %, 28 d, OECD 301B" };
 
 /// What a cell says of ready biodegradability, with a fault where its words and numbers disagree.
 pub(super) fn read_ready(
@@ -124,14 +118,7 @@ pub(super) fn read_ready(
     }
     let (result, fault) = combined(words, numbers, days_in(&text))?;
     let said = Said::in_remarks(std::slice::from_ref(&text));
-    Ok(Some((
-        ReadyCell {
-            result,
-            reported: text,
-        },
-        said,
-        fault,
-    )))
+    Ok(Some((ReadyCell { result, reported: text }, said, fault)))
 }
 
 /// Words that say it and numbers that say otherwise leave it open.
@@ -172,21 +159,12 @@ enum Measure {
 }
 
 fn result_in_numbers(text: &str, decimal: DecimalStyle) -> Option<DegradationTest> {
-    let measure = if O2_OR_CO2.is_match(&plain_words(text)) {
-        Measure::O2OrCo2
-    } else {
-        Measure::Unnamed
-    };
+    let measure = if O2_OR_CO2.is_match(&plain_words(text)) { Measure::O2OrCo2 } else { Measure::Unnamed };
     let days = days_in(text);
-    let mut results = percentages(text, decimal)
-        .into_iter()
-        .map(|degraded| result_of(degraded, days, measure));
+    let mut results =
+        percentages(text, decimal).into_iter().map(|degraded| result_of(degraded, days, measure));
     let first = results.next()?;
-    Some(if results.all(|result| result == first) {
-        first
-    } else {
-        DegradationTest::Open
-    })
+    Some(if results.all(|result| result == first) { first } else { DegradationTest::Open })
 }
 
 fn result_of(degraded: Interval, days: Option<f64>, measure: Measure) -> DegradationTest {
@@ -213,18 +191,12 @@ pub(super) fn percentage_of_number(number: f64) -> Result<Interval, CellFaultKin
 }
 
 const fn percent(decimal: DecimalStyle) -> ReadAs {
-    ReadAs {
-        dimension: Dimension::Percent,
-        default_unit: Unit::Percent,
-        decimal,
-        molar_mass: None,
-    }
+    ReadAs { dimension: Dimension::Percent, default_unit: Unit::Percent, decimal, molar_mass: None }
 }
 
 pub(super) fn bare_number(text: &str, decimal: DecimalStyle) -> Option<f64> {
-    let only_digits = text
-        .chars()
-        .all(|character| character.is_ascii_digit() || matches!(character, '.' | ','));
+    let only_digits =
+        text.chars().all(|character| character.is_ascii_digit() || matches!(character, '.' | ','));
     if !only_digits {
         return None;
     }

@@ -60,12 +60,18 @@ impl Draft {
             column: column.index,
         };
         let result = match &cell.content {
+            CellContent::Empty if cell.formula => Err(CellFaultKind::FormulaWithoutResult),
             CellContent::Empty => Ok(()),
             CellContent::Error(_) => Err(CellFaultKind::SheetError),
             content => self.take_content(column, content, place.clone()),
         };
         if let Err(kind) = result {
-            self.fault(&cell.content, place, kind);
+            let found = if kind == CellFaultKind::FormulaWithoutResult {
+                "=…".to_owned()
+            } else {
+                cell::shown(&cell.content)
+            };
+            self.substance.faults.push(CellFault { cell: place, found, kind });
         }
     }
 
@@ -142,11 +148,7 @@ impl Draft {
         cell: &CellRef,
     ) -> Result<(), CellFaultKind> {
         let is_content = column.field == Field::Content;
-        let expected = if is_content {
-            Expected::percent("content", "12 %")
-        } else {
-            Expected::TONNAGE
-        };
+        let expected = if is_content { Expected::percent("content", "12 %") } else { Expected::TONNAGE };
         if let Some((quantity, said)) = cell::read_quantity(content, column, expected, None)? {
             let waiting = waiting(column, quantity, said, cell);
             self.values.push(if is_content {
@@ -207,8 +209,7 @@ impl Draft {
         if let Some(kind) = fault {
             self.fault(content, place.clone(), kind);
         }
-        self.values
-            .push(AnyValue::Ready(waiting(column, ready, said, place)));
+        self.values.push(AnyValue::Ready(waiting(column, ready, said, place)));
         Ok(())
     }
 
@@ -219,8 +220,7 @@ impl Draft {
         place: &CellRef,
     ) -> Result<(), CellFaultKind> {
         if let Some((inherent, said)) = inherent::read_inherent(content, column.decimal)? {
-            self.values
-                .push(AnyValue::Inherent(waiting(column, inherent, said, place)));
+            self.values.push(AnyValue::Inherent(waiting(column, inherent, said, place)));
         }
         Ok(())
     }
@@ -280,22 +280,12 @@ impl Draft {
                     &self.companions.of_tests(&["301", "310"]),
                     unstated,
                 );
-                substance.ready.push(Cited {
-                    value: value.value.with_basis(basis),
-                    cell: value.cell,
-                });
+                substance.ready.push(Cited { value: value.value.with_basis(basis), cell: value.cell });
             }
             AnyValue::Inherent(value) => {
-                let basis = basis_of(
-                    &value.said,
-                    &value.header,
-                    &self.companions.of_tests(&["302"]),
-                    unstated,
-                );
-                substance.inherent.push(Cited {
-                    value: value.value.with_basis(basis),
-                    cell: value.cell,
-                });
+                let basis =
+                    basis_of(&value.said, &value.header, &self.companions.of_tests(&["302"]), unstated);
+                substance.inherent.push(Cited { value: value.value.with_basis(basis), cell: value.cell });
             }
         }
     }
@@ -306,28 +296,14 @@ fn cited<T>(value: Option<T>, cell: CellRef) -> Option<Cited<T>> {
 }
 
 fn waiting<T>(column: &Column, value: T, said: Said, cell: &CellRef) -> Waiting<T> {
-    let header = Said {
-        basis: column.basis,
-        conditions: column.conditions.clone(),
-    };
-    Waiting {
-        value,
-        said,
-        header,
-        cell: cell.clone(),
-    }
+    let header = Said { basis: column.basis, conditions: column.conditions.clone() };
+    Waiting { value, said, header, cell: cell.clone() }
 }
 
 /// The cell's own word first; then calculated if anything beside it says so, because an estimate is never shown as
 /// measured.
 fn basis_of(cell: &Said, header: &Said, beside: &[&Said], unstated: UnstatedBasis) -> Basis {
-    let others = || {
-        beside
-            .iter()
-            .map(|said| said.basis)
-            .chain([header.basis])
-            .flatten()
-    };
+    let others = || beside.iter().map(|said| said.basis).chain([header.basis]).flatten();
     cell.basis
         .or_else(|| others().find(|basis| *basis == Basis::Calculated))
         .or_else(|| others().next())
@@ -341,10 +317,5 @@ fn reading(value: Waiting<Quantity>, beside: &[&Said], unstated: UnstatedBasis) 
         remark::fill_conditions(&mut conditions, &said.conditions);
     }
     remark::fill_conditions(&mut conditions, &value.header.conditions);
-    Reading {
-        quantity: value.value,
-        basis,
-        conditions,
-        cell: value.cell,
-    }
+    Reading { quantity: value.value, basis, conditions, cell: value.cell }
 }

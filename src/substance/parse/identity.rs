@@ -108,32 +108,21 @@ fn read_cas(content: &CellContent) -> Result<CasCell, CellFaultKind> {
     if let Some((year, month, day)) = date_in(&text) {
         return from_date(year, month, day);
     }
-    let mut found: Vec<String> = CAS
-        .find_iter(&text)
-        .map(|number| number.as_str().replace(' ', ""))
-        .collect();
+    let mut found: Vec<String> =
+        CAS.find_iter(&text).map(|number| number.as_str().replace(' ', "")).collect();
     found.dedup();
     match found.as_slice() {
         [] => read_cas_digits(&text),
-        [number] => CasNumber::parse(number)
-            .map(CasCell::Number)
-            .map_err(|error| cas_fault(number, error)),
+        [number] => CasNumber::parse(number).map(CasCell::Number).map_err(|error| cas_fault(number, error)),
         [_, _, ..] => Err(CellFaultKind::SeveralIdentities { what: "CAS numbers" }),
     }
 }
 
 /// A number whose hyphens are lost, as 50293.
 fn read_cas_digits(text: &str) -> Result<CasCell, CellFaultKind> {
-    let not_a = CellFaultKind::NotA {
-        what: "CAS number",
-        example: "50-29-3",
-    };
+    let not_a = CellFaultKind::NotA { what: "CAS number", example: "50-29-3" };
     let only_digits = text.bytes().all(|byte| byte.is_ascii_digit());
-    let digits: u64 = text
-        .parse()
-        .ok()
-        .filter(|_| only_digits && text.len() <= 10)
-        .ok_or(not_a.clone())?;
+    let digits: u64 = text.parse().ok().filter(|_| only_digits && text.len() <= 10).ok_or(not_a.clone())?;
     let written = format!("{}-{:02}-{}", digits / 1000, digits / 10 % 100, digits % 10);
     match CasNumber::from_digits(digits) {
         Ok(number) => Ok(CasCell::Number(number)),
@@ -144,10 +133,7 @@ fn read_cas_digits(text: &str) -> Result<CasCell, CellFaultKind> {
 
 fn cas_fault(number: &str, error: CasError) -> CellFaultKind {
     match error {
-        CasError::Form => CellFaultKind::NotA {
-            what: "CAS number",
-            example: "50-29-3",
-        },
+        CasError::Form => CellFaultKind::NotA { what: "CAS number", example: "50-29-3" },
         CasError::CheckDigit { expected } => CellFaultKind::CheckDigit {
             what: "CAS number",
             expected,
@@ -176,9 +162,7 @@ fn date_in(text: &str) -> Option<(i64, i64, i64)> {
 /// The CAS number of which a spreadsheet made this date. A year of the last or this century may have been written
 /// with two digits; the check digit never fits both readings.
 fn from_date(year: i64, month: i64, day: i64) -> Result<CasCell, CellFaultKind> {
-    let short = (1930..2030)
-        .contains(&year)
-        .then(|| format!("{:02}-{month:02}-{day}", year % 100));
+    let short = (1930..2030).contains(&year).then(|| format!("{:02}-{month:02}-{day}", year % 100));
     let candidates = [Some(format!("{year}-{month:02}-{day}")), short];
     candidates
         .into_iter()
@@ -190,32 +174,21 @@ fn from_date(year: i64, month: i64, day: i64) -> Result<CasCell, CellFaultKind> 
 
 fn read_ec(content: &CellContent) -> Result<Option<EcNumber>, CellFaultKind> {
     if matches!(content, CellContent::DateTime(_)) {
-        return Err(CellFaultKind::NotA {
-            what: "EC number",
-            example: "200-024-3",
-        });
+        return Err(CellFaultKind::NotA { what: "EC number", example: "200-024-3" });
     }
     let Some(text) = cell::value_text(content) else {
         return Ok(None);
     };
-    let mut found: Vec<String> = EC
-        .find_iter(&text)
-        .map(|number| number.as_str().replace(' ', "").to_uppercase())
-        .collect();
+    let mut found: Vec<String> =
+        EC.find_iter(&text).map(|number| number.as_str().replace(' ', "").to_uppercase()).collect();
     found.dedup();
     let number = match found.as_slice() {
-        [] => ec_from_digits(&text).ok_or(CellFaultKind::NotA {
-            what: "EC number",
-            example: "200-024-3",
-        })?,
+        [] => ec_from_digits(&text).ok_or(CellFaultKind::NotA { what: "EC number", example: "200-024-3" })?,
         [number] => number.clone(),
         [_, _, ..] => return Err(CellFaultKind::SeveralIdentities { what: "EC numbers" }),
     };
     EcNumber::parse(&number).map(Some).map_err(|error| match error {
-        EcError::Form => CellFaultKind::NotA {
-            what: "EC number",
-            example: "200-024-3",
-        },
+        EcError::Form => CellFaultKind::NotA { what: "EC number", example: "200-024-3" },
         EcError::NoSuchNumber => CellFaultKind::NoSuchEcNumber,
         EcError::CheckDigit { expected } => CellFaultKind::CheckDigit {
             what: "EC number",
@@ -244,10 +217,7 @@ pub(super) fn read_smiles(content: &CellContent) -> Result<Option<String>, CellF
     if looks_like_smiles(&text) {
         Ok(Some(text))
     } else {
-        Err(CellFaultKind::NotA {
-            what: "SMILES",
-            example: "CCO",
-        })
+        Err(CellFaultKind::NotA { what: "SMILES", example: "CCO" })
     }
 }
 
@@ -277,13 +247,8 @@ pub(super) fn read_inchi_key(content: &CellContent) -> Result<Option<String>, Ce
     let Some(text) = cell::value_text(content) else {
         return Ok(None);
     };
-    let key = INCHI_KEY
-        .captures(&text)
-        .and_then(|found| Some(found.get(1)?.as_str().to_uppercase()));
-    let not_a = CellFaultKind::NotA {
-        what: "InChI key",
-        example: "LFQSCWFLJHTTHZ-UHFFFAOYSA-N",
-    };
+    let key = INCHI_KEY.captures(&text).and_then(|found| Some(found.get(1)?.as_str().to_uppercase()));
+    let not_a = CellFaultKind::NotA { what: "InChI key", example: "LFQSCWFLJHTTHZ-UHFFFAOYSA-N" };
     key.map(Some).ok_or(not_a)
 }
 

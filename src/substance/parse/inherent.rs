@@ -68,15 +68,7 @@ pub(super) fn read_inherent(content: &CellContent, decimal: DecimalStyle) -> Rea
     }
     let said = Said::in_remarks(std::slice::from_ref(&text));
     let days = days_in(&text);
-    Ok(Some((
-        InherentCell {
-            guideline,
-            degraded,
-            days,
-            reported: text,
-        },
-        said,
-    )))
+    Ok(Some((InherentCell { guideline, degraded, days, reported: text }, said)))
 }
 
 fn lowest(interval: Interval) -> f64 {
@@ -88,12 +80,8 @@ fn inherent_guideline(plain: &str) -> Option<String> {
         return Some(format!("OECD 302{}", letter.as_str().to_uppercase()));
     }
     // Names of the methods in OECD 302 A to C.
-    [
-        ("scas", "OECD 302A"),
-        ("zahn wellens", "OECD 302B"),
-        ("miti ii", "OECD 302C"),
-    ]
-    .into_iter()
-    .find(|(name, _)| plain.contains(name))
-    .map(|(_, guideline)| guideline.to_owned())
+    [("scas", "OECD 302A"), ("zahn wellens", "OECD 302B"), ("miti ii", "OECD 302C")]
+        .into_iter()
+        .find(|(name, _)| plain.contains(name))
+        .map(|(_, guideline)| guideline.to_owned())
 }

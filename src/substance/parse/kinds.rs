@@ -89,10 +89,7 @@ pub(super) fn read_substance_type(content: &CellContent) -> Result<Option<Substa
     match found {
         Some((_, kind)) => Ok(Some(*kind)),
         None if NO_TYPE.contains(&plain.as_str()) => Ok(None),
-        None => Err(CellFaultKind::NotA {
-            what: "substance type",
-            example: "organic",
-        }),
+        None => Err(CellFaultKind::NotA { what: "substance type", example: "organic" }),
     }
 }
 
@@ -106,8 +103,5 @@ pub(super) fn read_row_type(content: &CellContent) -> Result<Option<RowType>, Ce
         .iter()
         .find(|(words, _)| plain.contains(words))
         .map(|(_, row_type)| Some(*row_type))
-        .ok_or(CellFaultKind::NotA {
-            what: "row type",
-            example: "substance",
-        })
+        .ok_or(CellFaultKind::NotA { what: "row type", example: "substance" })
 }

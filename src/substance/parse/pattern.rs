@@ -13,8 +13,5 @@ pub(super) fn fixed(pattern: &'static str) -> Regex {
     reason = "the patterns are constants, and the tests of each module run every one"
 )]
 pub(super) fn fixed_by_parts(pattern: &str) -> Regex {
-    RegexBuilder::new(pattern)
-        .case_insensitive(true)
-        .build()
-        .expect("a pattern in the code is valid")
+    RegexBuilder::new(pattern).case_insensitive(true).build().expect("a pattern in the code is valid")
 }

@@ -96,9 +96,7 @@ impl Said {
         if !GUIDELINE.is_match(&plain_words(header)) {
             said.conditions.method = None;
         }
-        said.conditions.organism = ORGANISM
-            .find(&plain_words(header))
-            .map(|found| found.as_str().to_owned());
+        said.conditions.organism = ORGANISM.find(&plain_words(header)).map(|found| found.as_str().to_owned());
         said
     }
 
@@ -131,12 +129,9 @@ impl Said {
             .captures(part)
             .filter(|found| found.get(2).is_none())
             .and_then(|found| decimal(found.get(1)?.as_str()));
-        let lipid = LIPID
-            .captures(part)
-            .and_then(|found| decimal(found.get(1).or_else(|| found.get(2))?.as_str()));
-        let reliability = RELIABILITY
-            .captures(part)
-            .and_then(|found| found.get(1)?.as_str().parse().ok());
+        let lipid =
+            LIPID.captures(part).and_then(|found| decimal(found.get(1).or_else(|| found.get(2))?.as_str()));
+        let reliability = RELIABILITY.captures(part).and_then(|found| found.get(1)?.as_str().parse().ok());
         let degradation = match (ULTIMATE.is_match(plain), PRIMARY.is_match(plain)) {
             (true, false) => DegradationKind::Ultimate,
             (false, true) => DegradationKind::Primary,

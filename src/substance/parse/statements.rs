@@ -28,18 +28,12 @@ static CLASSES: LazyLock<Vec<Class>> = LazyLock::new(|| {
             r"(muta\w*|keimzellmut\w*)",
             &[("1a", "H340"), ("1b", "H340"), ("1", "H340"), ("2", "H341")],
         ),
-        Class::new(
-            r"(repr\w*|fortpfl\w*)",
-            &[("1a", "H360"), ("1b", "H360"), ("1", "H360"), ("2", "H361")],
-        ),
+        Class::new(r"(repr\w*|fortpfl\w*)", &[("1a", "H360"), ("1b", "H360"), ("1", "H360"), ("2", "H361")]),
         Class::new(r"stot (re|rep\w*|wdh\w*)", &[("1", "H372"), ("2", "H373")]),
         Class::new(r"ed hh", &[("1", "EUH380"), ("2", "EUH381")]),
         Class::new(r"ed env", &[("1", "EUH430"), ("2", "EUH431")]),
         Class::new(r"aquatic acute", &[("1", "H400")]),
-        Class::new(
-            r"aquatic chronic",
-            &[("1", "H410"), ("2", "H411"), ("3", "H412"), ("4", "H413")],
-        ),
+        Class::new(r"aquatic chronic", &[("1", "H410"), ("2", "H411"), ("3", "H412"), ("4", "H413")]),
     ]
 });
 /// Whole cells only: `no data` and `not classified due to lack of data` are no statement that there is none.
@@ -62,11 +56,7 @@ impl Class {
     fn new(words: &'static str, codes: &'static [(&'static str, &'static str)]) -> Self {
         let with_category = format!(r"\b{words}(?: (?:cat|category|kat|kategorie))? ?(1a|1b|[1-4])\b");
         let alone = format!(r"\b{words}\b");
-        Self {
-            with_category: fixed_by_parts(&with_category),
-            alone: fixed_by_parts(&alone),
-            codes,
-        }
+        Self { with_category: fixed_by_parts(&with_category), alone: fixed_by_parts(&alone), codes }
     }
 }
 
@@ -100,10 +90,7 @@ pub(super) fn read_statements(
         (false, None) => Ok((Some(HazardStatements::new(codes)), None)),
         (false, Some(class)) => {
             let statements = HazardStatements::incomplete(codes);
-            Ok((
-                Some(statements),
-                Some(CellFaultKind::ClassWithoutCategory { class }),
-            ))
+            Ok((Some(statements), Some(CellFaultKind::ClassWithoutCategory { class })))
         }
     }
 }
@@ -111,18 +98,10 @@ pub(super) fn read_statements(
 fn codes_in(text: &str) -> Vec<String> {
     let mut codes = Vec::new();
     for found in CODE.captures_iter(text) {
-        let part = |group| {
-            found
-                .get(group)
-                .map_or("", |part: regex::Match<'_>| part.as_str())
-        };
+        let part = |group| found.get(group).map_or("", |part: regex::Match<'_>| part.as_str());
         let prefix = part(1).to_uppercase();
         codes.push(format!("{prefix}{}{}", part(2), part(3).to_uppercase()));
-        codes.extend(
-            FURTHER_CODE
-                .find_iter(part(4))
-                .map(|number| format!("{prefix}{}", number.as_str())),
-        );
+        codes.extend(FURTHER_CODE.find_iter(part(4)).map(|number| format!("{prefix}{}", number.as_str())));
     }
     codes
 }
@@ -134,11 +113,7 @@ fn read_classes(plain: &str, codes: &mut Vec<String>) -> Option<String> {
         let mut found_category = false;
         for found in class.with_category.captures_iter(plain) {
             let category = found.iter().flatten().last().map_or("", |part| part.as_str());
-            let code = class
-                .codes
-                .iter()
-                .find(|(known, _)| *known == category)
-                .map(|(_, code)| *code);
+            let code = class.codes.iter().find(|(known, _)| *known == category).map(|(_, code)| *code);
             // A code of the same family in the cell says more: `Repr. 1B; H360FD`.
             if let Some(code) = code {
                 found_category = true;

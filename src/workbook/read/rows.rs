@@ -80,14 +80,18 @@ impl<'book> Rows<'book> {
     /// The next cell that holds a value or a format worth keeping.
     fn next_cell(&mut self) -> Result<Option<(u32, Cell)>, String> {
         while self.position == Position::Inside {
-            let (row, column, content, style) = match self.reader.next_cell_with_style_id() {
+            let (row, column, mut content, style) = match self.reader.next_cell_with_style_id() {
                 Ok(None) => {
                     self.position = Position::AtEnd;
                     break;
                 }
                 Ok(Some((cell, style))) => {
                     let (row, column) = cell.get_position();
-                    (row, column, content_of(cell.get_value(), self.date_shift), style)
+                    if matches!(cell.get_value(), DataRef::String(text) if text.is_empty()) {
+                        (row, column, CellContent::Text(String::new()), style)
+                    } else {
+                        (row, column, content_of(cell.get_value(), self.date_shift), style)
+                    }
                 }
                 Err(XlsxError::CellError(text)) => self.known_by_survey(text)?,
                 Err(error) => return Err(error.to_string()),
@@ -96,16 +100,15 @@ impl<'book> Rows<'book> {
                 .map_err(|_too_far| format!("there is no column {}", u64::from(column) + 1))?;
             let style = self.kept_style(style);
             let formula = self.survey.is_formula(row, column);
+            // Where a formula gave an empty text, that is its result; without a formula it is an empty cell.
+            if !formula && content == CellContent::Text(String::new()) {
+                content = CellContent::Empty;
+            }
             let empty = content == CellContent::Empty && !formula;
             if empty && (style.is_none() || column >= self.survey.used_columns) {
                 continue;
             }
-            let cell = Cell {
-                column,
-                content,
-                style,
-                formula,
-            };
+            let cell = Cell { column, content, style, formula };
             return Ok(Some((row, cell)));
         }
         Ok(None)
@@ -153,19 +156,11 @@ fn content_of(value: &DataRef<'_>, date_shift: f64) -> CellContent {
 
 /// A number no spreadsheet can show is kept as the text it was, not as a number to compute with.
 fn number_or_text(number: f64, content: fn(f64) -> CellContent) -> CellContent {
-    if number.is_finite() {
-        content(number)
-    } else {
-        CellContent::Text(number.to_string())
-    }
+    if number.is_finite() { content(number) } else { CellContent::Text(number.to_string()) }
 }
 
 fn text_or_empty(text: &str) -> CellContent {
-    if text.is_empty() {
-        CellContent::Empty
-    } else {
-        CellContent::Text(text.to_owned())
-    }
+    if text.is_empty() { CellContent::Empty } else { CellContent::Text(text.to_owned()) }
 }
 
 /// The serial number (1900 system) of a date written as `2026-12-01` or `2026-12-01T08:30:00`, from March 1900 on.
@@ -212,10 +207,7 @@ mod tests {
             let serial = serial_of(day).unwrap();
             assert_eq!(Date::from_serial(serial).unwrap().to_string(), day);
         }
-        assert_eq!(
-            serial_of("2026-12-01T12:00:00"),
-            serial_of("2026-12-01").map(|day| day + 0.5)
-        );
+        assert_eq!(serial_of("2026-12-01T12:00:00"), serial_of("2026-12-01").map(|day| day + 0.5));
         assert_eq!(serial_of("2026-12-01T25:00:00"), None);
         assert_eq!(serial_of("tomorrow"), None);
     }

@@ -117,18 +117,9 @@ fn a_file_of_another_kind_is_named_as_what_it_is() {
 fn a_path_without_a_file_is_named() {
     let (folder, path) = place("inventory.xlsx");
     let said = open_inventory(&path).err().unwrap().to_string();
-    assert_eq!(
-        said,
-        format!("{}: there is no such file; check the path", path.display())
-    );
+    assert_eq!(said, format!("{}: there is no such file; check the path", path.display()));
     let said = open_inventory(folder.path()).err().unwrap().to_string();
-    assert_eq!(
-        said,
-        format!(
-            "{}: is a folder; name the workbook inside it",
-            folder.path().display()
-        )
-    );
+    assert_eq!(said, format!("{}: is a folder; name the workbook inside it", folder.path().display()));
 }
 
 #[test]
@@ -158,10 +149,7 @@ fn parts_that_unpack_too_far_together_are_refused() {
     let (_folder, path) = place("a.xlsx");
     RawBook::with_rows("").write(&path).unwrap();
     let usual = super::Limits::USUAL;
-    for limits in [
-        super::Limits { total: 700, ..usual },
-        super::Limits { held: 700, ..usual },
-    ] {
+    for limits in [super::Limits { total: 700, ..usual }, super::Limits { held: 700, ..usual }] {
         let said = super::open_within(&path, limits).err().unwrap().to_string();
         assert!(said.contains("unpacks to over 0 MB"), "{said}");
     }
@@ -196,9 +184,7 @@ fn a_cell_no_sheet_has_is_refused() {
 
 #[test]
 fn the_last_cell_a_sheet_has_is_read() {
-    let rows = rows_of(&RawBook::with_rows(
-        r#"<row r="1048576"><c r="XFD1048576"><v>1</v></c></row>"#,
-    ));
+    let rows = rows_of(&RawBook::with_rows(r#"<row r="1048576"><c r="XFD1048576"><v>1</v></c></row>"#));
     assert_eq!(rows.len(), 1);
     assert_eq!(rows[0].index, 1_048_575);
     assert_eq!(rows[0].cells[0].column, 16_383);
@@ -217,41 +203,20 @@ fn a_cell_stored_twice_or_out_of_order_is_named() {
         );
     }
     let said = refusal_of_rows(r#"<row r="7"/><row r="7"/>"#);
-    assert!(
-        said.starts_with("sheet `Substances` stores row 7 twice"),
-        "{said}"
-    );
+    assert!(said.starts_with("sheet `Substances` stores row 7 twice"), "{said}");
 }
 
 #[test]
 fn a_value_that_would_be_read_as_another_is_named() {
     for (cell, what) in [
-        (
-            r#"<c r="A1" t="s"><v>0</v></c>"#,
-            "a reference to text number `0`, which is not stored",
-        ),
-        (
-            r#"<c r="A1" t="s"><v>x</v></c>"#,
-            "a reference to text number `x`, which is not stored",
-        ),
+        (r#"<c r="A1" t="s"><v>0</v></c>"#, "a reference to text number `0`, which is not stored"),
+        (r#"<c r="A1" t="s"><v>x</v></c>"#, "a reference to text number `x`, which is not stored"),
         (r#"<c r="A1" t="n"><v>4,5</v></c>"#, "`4,5`, said to be a number"),
         (r#"<c r="A1" t="b"><v>2</v></c>"#, "`2`, said to be true or false"),
-        (
-            r#"<c r="A1" t="q"><v>2</v></c>"#,
-            "a value of the unknown type `q`",
-        ),
-        (
-            r#"<c r="A1"><v>1<!-- -->2</v></c>"#,
-            "a value interrupted by something else",
-        ),
-        (
-            r#"<c r="A1"><v>1</v><f>1+1</f></c>"#,
-            "`f` where its value should stand",
-        ),
-        (
-            r#"<c r="A1" t="inlineStr"><v>1</v></c>"#,
-            "a text stored where a number belongs",
-        ),
+        (r#"<c r="A1" t="q"><v>2</v></c>"#, "a value of the unknown type `q`"),
+        (r#"<c r="A1"><v>1<!-- -->2</v></c>"#, "a value interrupted by something else"),
+        (r#"<c r="A1"><v>1</v><f>1+1</f></c>"#, "`f` where its value should stand"),
+        (r#"<c r="A1" t="inlineStr"><v>1</v></c>"#, "a text stored where a number belongs"),
     ] {
         assert_eq!(
             refusal_of_rows(&format!(r#"<row r="1">{cell}</row>"#)),
@@ -278,27 +243,15 @@ fn a_sheet_in_another_encoding_is_refused_and_not_read_as_empty() {
 fn a_workbook_that_contradicts_itself_is_refused() {
     let book = || RawBook::with_rows("");
     for (book, what) in [
-        (
-            book().edit("xl/workbook.xml", "rId1", "rId2"),
-            "without saying where it is",
-        ),
-        (
-            book().edit("xl/_rels/workbook.xml.rels", "sheet1", "sheet2"),
-            "is missing",
-        ),
+        (book().edit("xl/workbook.xml", "rId1", "rId2"), "without saying where it is"),
+        (book().edit("xl/_rels/workbook.xml.rels", "sheet1", "sheet2"), "is missing"),
         (RawBook::with_sheet(""), "holds no rows"),
-        (
-            RawBook::with_sheet(r#"<dimension ref="C7:A1"/><sheetData/>"#),
-            "says that its cells are `C7:A1`",
-        ),
+        (RawBook::with_sheet(r#"<dimension ref="C7:A1"/><sheetData/>"#), "says that its cells are `C7:A1`"),
         (
             RawBook::with_sheet(r#"<cols><col min="3" max="16385" width="9"/></cols><sheetData/>"#),
             "gives a width to columns no sheet has",
         ),
-        (
-            RawBook::with_sheet("<sheetData/><sheetData/>"),
-            "stores its rows in two places",
-        ),
+        (RawBook::with_sheet("<sheetData/><sheetData/>"), "stores its rows in two places"),
         (RawBook::with_sheet("<sheetData><row>"), "cannot be read"),
         (
             RawBook::with_rows(r#"<row r="1"><c r="A1" t="n" t="s"><v>0</v></c></row>"#),
@@ -323,11 +276,7 @@ fn an_error_value_newer_than_the_reading_library_is_kept_where_it_stands() {
     ));
     let contents: Vec<_> = rows
         .iter()
-        .flat_map(|row| {
-            row.cells
-                .iter()
-                .map(|cell| (row.index, cell.column, &cell.content))
-        })
+        .flat_map(|row| row.cells.iter().map(|cell| (row.index, cell.column, &cell.content)))
         .collect();
     let error = |text: &str| CellContent::Error(text.to_owned());
     assert_eq!(
@@ -365,10 +314,8 @@ fn cells_without_references_follow_each_other() {
     let rows = rows_of(&RawBook::with_rows(
         "<row><c><v>1</v></c><c/><c><v>2</v></c></row><row/><row><c r=\"B3\"><v>3</v></c><c><v>4</v></c></row>",
     ));
-    let places: Vec<_> = rows
-        .iter()
-        .flat_map(|row| row.cells.iter().map(|cell| (row.index, cell.column)))
-        .collect();
+    let places: Vec<_> =
+        rows.iter().flat_map(|row| row.cells.iter().map(|cell| (row.index, cell.column))).collect();
     assert_eq!(places, [(0, 0), (0, 2), (2, 1), (2, 2)]);
 }
 
@@ -381,26 +328,11 @@ fn dates_of_the_1904_system_are_given_in_the_1900_system() {
             .part("xl/styles.xml", styles)
     };
     let contents = |book: &RawBook| -> Vec<CellContent> {
-        rows_of(book)
-            .remove(0)
-            .cells
-            .into_iter()
-            .map(|cell| cell.content)
-            .collect()
+        rows_of(book).remove(0).cells.into_iter().map(|cell| cell.content).collect()
     };
-    assert_eq!(
-        contents(&book()),
-        [CellContent::DateTime(1000.0), CellContent::Number(1000.0)]
-    );
-    let other = book().edit(
-        "xl/workbook.xml",
-        "<sheets>",
-        r#"<workbookPr date1904="1"/><sheets>"#,
-    );
-    assert_eq!(
-        contents(&other),
-        [CellContent::DateTime(2462.0), CellContent::Number(1000.0)]
-    );
+    assert_eq!(contents(&book()), [CellContent::DateTime(1000.0), CellContent::Number(1000.0)]);
+    let other = book().edit("xl/workbook.xml", "<sheets>", r#"<workbookPr date1904="1"/><sheets>"#);
+    assert_eq!(contents(&other), [CellContent::DateTime(2462.0), CellContent::Number(1000.0)]);
 }
 
 #[test]
@@ -447,22 +379,9 @@ fn the_survey_knows_widths_formulas_and_what_is_not_carried() {
     let rows = inventory.first_rows(0, 9).unwrap();
     let formulas: Vec<_> = rows
         .iter()
-        .flat_map(|row| {
-            row.cells
-                .iter()
-                .map(|cell| (row.index, cell.column, cell.formula))
-        })
+        .flat_map(|row| row.cells.iter().map(|cell| (row.index, cell.column, cell.formula)))
         .collect();
-    assert_eq!(
-        formulas,
-        [
-            (0, 0, true),
-            (0, 1, false),
-            (1, 0, true),
-            (1, 2, false),
-            (3, 0, true)
-        ]
-    );
+    assert_eq!(formulas, [(0, 0, true), (0, 1, false), (1, 0, true), (1, 2, false), (3, 0, true)]);
     assert_eq!(inventory.first_rows(0, 1).unwrap().len(), 1);
 }
 
@@ -472,9 +391,7 @@ fn the_fingerprint_is_the_sha_256_of_the_file() {
     RawBook::with_rows("").write(&path).unwrap();
     let before = open_inventory(&path).unwrap().fingerprint().to_owned();
     assert_eq!(before.len(), 64);
-    RawBook::with_rows(r#"<row r="1"><c r="A1"><v>1</v></c></row>"#)
-        .write(&path)
-        .unwrap();
+    RawBook::with_rows(r#"<row r="1"><c r="A1"><v>1</v></c></row>"#).write(&path).unwrap();
     assert_ne!(open_inventory(&path).unwrap().fingerprint(), before);
     // FIPS 180-4, the example of one block: the digest of `abc`.
     std::fs::write(&path, "abc").unwrap();
@@ -493,9 +410,7 @@ fn no_damage_to_a_sheet_makes_the_reader_panic_or_misorder_cells() {
     // A linear congruential generator (Knuth, TAOCP 3.3.4, from memory): the same damage in every run.
     let mut state = 1_u64;
     let mut draw = |below: usize| {
-        state = state
-            .wrapping_mul(6_364_136_223_846_793_005)
-            .wrapping_add(1_442_695_040_888_963_407);
+        state = state.wrapping_mul(6_364_136_223_846_793_005).wrapping_add(1_442_695_040_888_963_407);
         usize::try_from(state >> 33).unwrap() % below
     };
     let mut opened = 0;
@@ -514,10 +429,7 @@ fn no_damage_to_a_sheet_makes_the_reader_panic_or_misorder_cells() {
         xml.extend(b"</worksheet>");
         RawBook::with_rows("")
             .part("xl/worksheets/sheet1.xml", xml)
-            .part(
-                "xl/sharedStrings.xml",
-                r#"<sst uniqueCount="1"><si><t>CAS</t></si></sst>"#,
-            )
+            .part("xl/sharedStrings.xml", r#"<sst uniqueCount="1"><si><t>CAS</t></si></sst>"#)
             .write(&path)
             .unwrap();
         let Ok(rows) = open_inventory(&path).and_then(|mut inventory| inventory.first_rows(0, usize::MAX))
@@ -525,14 +437,9 @@ fn no_damage_to_a_sheet_makes_the_reader_panic_or_misorder_cells() {
             continue;
         };
         opened += 1;
-        let places: Vec<_> = rows
-            .iter()
-            .flat_map(|row| row.cells.iter().map(|cell| (row.index, cell.column)))
-            .collect();
+        let places: Vec<_> =
+            rows.iter().flat_map(|row| row.cells.iter().map(|cell| (row.index, cell.column))).collect();
         assert!(places.is_sorted_by(|one, next| one < next), "{places:?}");
     }
-    assert!(
-        opened > 20,
-        "only {opened} of the damaged sheets were still readable"
-    );
+    assert!(opened > 20, "only {opened} of the damaged sheets were still readable");
 }

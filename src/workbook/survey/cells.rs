@@ -63,11 +63,7 @@ impl OpenCell {
         let (mut kind, mut text) = (std::mem::take(&mut self.kind), std::mem::take(&mut self.text));
         kind.clear();
         text.clear();
-        *self = Self {
-            kind,
-            text,
-            ..Self::default()
-        };
+        *self = Self { kind, text, ..Self::default() };
     }
 
     fn is_inline(&self) -> bool {
@@ -263,7 +259,7 @@ impl CellCheck {
         let (row, column) = (self.cell.row, self.cell.column);
         if self.cell.formula == Seen::Yes {
             survey.note_formula(row, column);
-            if self.cell.value == Seen::No {
+            if self.has_no_result() {
                 survey.formulas_without_result += 1;
             }
         }
@@ -279,8 +275,17 @@ impl CellCheck {
         Ok(())
     }
 
+    /// Programs that write formulas without computing them store no value, or an empty one; an empty text is a result.
+    fn has_no_result(&self) -> bool {
+        let stored_empty = self.cell.text.is_empty() && self.cell.pieces == 0 && !is_text(&self.cell.kind);
+        self.cell.value == Seen::No || stored_empty
+    }
+
     fn check_value(&mut self, survey: &mut SheetSurvey) -> Result<(), SheetFault> {
         let (kind, text) = (self.cell.kind.as_str(), self.cell.text.as_str());
+        if kind == "e" {
+            survey.error_values += 1;
+        }
         match value_of(kind, text, self.cell.pieces, self.shared_texts) {
             Ok(ReadAs::Meant) => Ok(()),
             Ok(ReadAs::Unknown) => self.note_unknown_error(survey),
@@ -324,31 +329,18 @@ impl CellCheck {
     }
 
     fn cell_ref(&self, row: u32, column: u16) -> CellRef {
-        CellRef {
-            sheet: Arc::clone(&self.sheet),
-            row,
-            column,
-        }
+        CellRef { sheet: Arc::clone(&self.sheet), row, column }
     }
 
     fn unreadable(&self, what: String) -> SheetFault {
-        SheetFault::Unreadable {
-            cell: self.cell_ref(self.cell.row, self.cell.column),
-            what,
-        }
+        SheetFault::Unreadable { cell: self.cell_ref(self.cell.row, self.cell.column), what }
     }
 
     fn no_such_cell(&self, reference: &str) -> SheetFault {
-        SheetFault::NoSuchCell {
-            sheet: self.sheet.to_string(),
-            reference: reference.to_owned(),
-        }
+        SheetFault::NoSuchCell { sheet: self.sheet.to_string(), reference: reference.to_owned() }
     }
 
     fn whole(&self, what: String) -> SheetFault {
-        SheetFault::Whole {
-            sheet: self.sheet.to_string(),
-            what,
-        }
+        SheetFault::Whole { sheet: self.sheet.to_string(), what }
     }
 }

@@ -45,31 +45,15 @@ impl Extras {
     /// Each thing in words, such as `2 merged ranges`.
     pub(super) fn in_words(&self) -> Vec<String> {
         let counted = [
-            (
-                self.hidden_rows,
-                "hidden row (shown in the output)",
-                "hidden rows (shown in the output)",
-            ),
+            (self.hidden_rows, "hidden row (shown in the output)", "hidden rows (shown in the output)"),
             (self.row_heights, "row height", "row heights"),
             (self.merges, "merged range", "merged ranges"),
             (self.links, "link", "links"),
             (self.filters, "filter", "filters"),
-            (
-                self.conditional_formats,
-                "conditional format",
-                "conditional formats",
-            ),
+            (self.conditional_formats, "conditional format", "conditional formats"),
             (self.cell_checks, "data validation", "data validations"),
-            (
-                self.tables,
-                "table frame (its cells are)",
-                "table frames (their cells are)",
-            ),
-            (
-                self.objects,
-                "embedded object or control",
-                "embedded objects or controls",
-            ),
+            (self.tables, "table frame (its cells are)", "table frames (their cells are)"),
+            (self.objects, "embedded object or control", "embedded objects or controls"),
             (self.sparklines, "sparkline", "sparklines"),
             (self.page_breaks, "page break", "page breaks"),
         ];
@@ -83,12 +67,7 @@ impl Extras {
             (self.drawings, "charts, images or shapes"),
             (self.notes, "notes or comments"),
         ];
-        words.extend(
-            named
-                .iter()
-                .filter(|(number, _)| *number > 0)
-                .map(|(_, name)| (*name).to_owned()),
-        );
+        words.extend(named.iter().filter(|(number, _)| *number > 0).map(|(_, name)| (*name).to_owned()));
         words
     }
 }
@@ -99,11 +78,7 @@ impl super::SheetSurvey {
         let mut sentences = Vec::new();
         let words = self.extras.in_words();
         if !words.is_empty() {
-            sentences.push(format!(
-                "Sheet `{}`, not carried over: {}.",
-                self.name,
-                words.join(", ")
-            ));
+            sentences.push(format!("Sheet `{}`, not carried over: {}.", self.name, words.join(", ")));
         }
         if self.formulas > 0 {
             sentences.push(format!(
@@ -118,6 +93,13 @@ impl super::SheetSurvey {
                  program to fill them.",
                 self.name,
                 count(self.formulas_without_result, "formula has", "formulas have")
+            ));
+        }
+        if self.error_values > 0 {
+            sentences.push(format!(
+                "Sheet `{}`: {} written as text.",
+                self.name,
+                count(self.error_values, "error value is", "error values are")
             ));
         }
         sentences

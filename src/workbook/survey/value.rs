@@ -38,9 +38,7 @@ pub(super) fn value_of(kind: &str, text: &str, pieces: u32, shared_texts: u64) -
     };
     match kind {
         _ if sound => Ok(ReadAs::Meant),
-        "s" => Err(format!(
-            "a reference to text number `{text}`, which is not stored"
-        )),
+        "s" => Err(format!("a reference to text number `{text}`, which is not stored")),
         "n" => Err(format!("`{text}`, said to be a number")),
         _ => Err(format!("`{text}`, said to be true or false")),
     }

@@ -160,11 +160,7 @@ impl AnnotatedWorkbook {
         match (value, self.sheets.get_mut(sheet.0)) {
             (Value::Link { text, .. }, Some(state)) => {
                 state.links = state.links.saturating_add(1);
-                if state.links > MOST_LINKS {
-                    Value::Text(text)
-                } else {
-                    value
-                }
+                if state.links > MOST_LINKS { Value::Text(text) } else { value }
             }
             _ => value,
         }

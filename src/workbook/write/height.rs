@@ -25,10 +25,7 @@ pub(super) fn lines_of(text: &str, width: f64) -> u32 {
         reason = "bounded to the widths a column can have"
     )]
     let room = (width - PADDING).clamp(1.0, 255.0) as usize;
-    let lines: usize = text
-        .lines()
-        .map(|paragraph| lines_of_paragraph(paragraph, room))
-        .sum();
+    let lines: usize = text.lines().map(|paragraph| lines_of_paragraph(paragraph, room)).sum();
     u32::try_from(lines).unwrap_or(MOST_LINES).clamp(1, MOST_LINES)
 }
 

@@ -38,11 +38,7 @@ fn acceptable(name: &str) -> String {
         })
         .collect();
     let trimmed = replaced.trim_matches('\'');
-    if trimmed.is_empty() {
-        "Sheet".to_owned()
-    } else {
-        trimmed.to_owned()
-    }
+    if trimmed.is_empty() { "Sheet".to_owned() } else { trimmed.to_owned() }
 }
 
 /// The beginning of a text, as many UTF-16 units long at most.
@@ -63,10 +59,7 @@ mod tests {
     #[test]
     fn a_name_is_kept_if_it_is_free_and_marked_as_ours_if_not() {
         assert_eq!(free_sheet_name("Reasoning", ["Substances"]), "Reasoning");
-        assert_eq!(
-            free_sheet_name("Reasoning", ["REASONING"]),
-            "Reasoning (screened)"
-        );
+        assert_eq!(free_sheet_name("Reasoning", ["REASONING"]), "Reasoning (screened)");
         assert_eq!(
             free_sheet_name("Reasoning", ["Reasoning", "Reasoning (screened)"]),
             "Reasoning (screened 2)"

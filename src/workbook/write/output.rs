@@ -26,10 +26,14 @@ impl Output {
             Some(folder) => folder.to_path_buf(),
             None => return Err(FileFault::Folder { path }),
         };
-        if !folder.is_dir() {
-            return Err(FileFault::OutputFolderMissing {
+        if folder.exists() && !folder.is_dir() {
+            return Err(FileFault::OutputFolderClosed {
                 folder: folder.display().to_string(),
+                reason: "it is a file, not a folder".to_owned(),
             });
+        }
+        if !folder.is_dir() {
+            return Err(FileFault::OutputFolderMissing { folder: folder.display().to_string() });
         }
         if target.is_dir() {
             return Err(FileFault::Folder { path });
@@ -40,11 +44,9 @@ impl Output {
         match overwrite {
             // A link that leads nowhere is in the way, too.
             Overwrite::Refuse if target.symlink_metadata().is_ok() => Err(FileFault::OutputExists { path }),
-            Overwrite::Refuse | Overwrite::Replace => Ok(Self {
-                target: target.to_path_buf(),
-                folder,
-                overwrite,
-            }),
+            Overwrite::Refuse | Overwrite::Replace => {
+                Ok(Self { target: target.to_path_buf(), folder, overwrite })
+            }
         }
     }
 
@@ -54,10 +56,7 @@ impl Output {
 
     /// A fault that says why the output could not be written.
     pub(super) fn failed(&self, reason: &dyn std::fmt::Display) -> FileFault {
-        FileFault::OutputFailed {
-            path: self.target.display().to_string(),
-            reason: reason.to_string(),
-        }
+        FileFault::OutputFailed { path: self.target.display().to_string(), reason: reason.to_string() }
     }
 
     /// Fills a temporary file beside the target and renames it; if `fill` fails the temporary file is gone.
@@ -73,10 +72,7 @@ impl Output {
         let (_file, _rest) = writer.into_parts();
         filled?;
         flushed.map_err(|error| self.failed(&error))?;
-        temporary
-            .as_file()
-            .sync_all()
-            .map_err(|error| self.failed(&error))?;
+        temporary.as_file().sync_all().map_err(|error| self.failed(&error))?;
         match self.overwrite {
             Overwrite::Replace => temporary.persist(&self.target),
             Overwrite::Refuse => temporary.persist_noclobber(&self.target),
@@ -87,9 +83,7 @@ impl Output {
 
     fn not_renamed(&self, error: &std::io::Error) -> FileFault {
         if error.kind() == std::io::ErrorKind::AlreadyExists {
-            FileFault::OutputExists {
-                path: self.target.display().to_string(),
-            }
+            FileFault::OutputExists { path: self.target.display().to_string() }
         } else {
             self.failed(error)
         }
@@ -104,12 +98,10 @@ impl Output {
             // The output is a file like any other of the user's; the usual temporary one would be for the owner only.
             builder.permissions(std::fs::Permissions::from_mode(0o666));
         }
-        builder
-            .tempfile_in(&self.folder)
-            .map_err(|error| FileFault::OutputFolderClosed {
-                folder: self.folder.display().to_string(),
-                reason: error.to_string(),
-            })
+        builder.tempfile_in(&self.folder).map_err(|error| FileFault::OutputFolderClosed {
+            folder: self.folder.display().to_string(),
+            reason: error.to_string(),
+        })
     }
 }
 

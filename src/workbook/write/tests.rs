@@ -62,10 +62,7 @@ fn make_inventory(path: &Path) {
     for (column, text) in (0..).zip(["CAS", "Name", "log Kow", "Tested on", "In use"]) {
         sheet.write_string_with_format(0, column, text, &head).unwrap();
     }
-    let number = Format::new()
-        .set_num_format("0.00")
-        .set_italic()
-        .set_font_color(0x11_2233);
+    let number = Format::new().set_num_format("0.00").set_italic().set_font_color(0x11_2233);
     let date = Format::new().set_num_format("dd.mm.yyyy");
     let built_in = Format::new().set_num_format_index(14);
     sheet.write_string(1, 0, "117-81-7").unwrap();
@@ -110,10 +107,7 @@ fn copy(from: &Path, to: &Path) {
 }
 
 fn rows_of(path: &Path, sheet: usize) -> Vec<Row> {
-    open_inventory(path)
-        .unwrap()
-        .first_rows(sheet, usize::MAX)
-        .unwrap()
+    open_inventory(path).unwrap().first_rows(sheet, usize::MAX).unwrap()
 }
 
 #[test]
@@ -125,11 +119,7 @@ fn a_copy_has_the_values_types_and_formats_of_the_original() {
     let contents = |path: &Path, sheet| -> Vec<(u32, u16, CellContent)> {
         rows_of(path, sheet)
             .into_iter()
-            .flat_map(|row| {
-                row.cells
-                    .into_iter()
-                    .map(move |cell| (row.index, cell.column, cell.content))
-            })
+            .flat_map(|row| row.cells.into_iter().map(move |cell| (row.index, cell.column, cell.content)))
             .collect()
     };
     let copied = contents(&to, 0);
@@ -141,38 +131,15 @@ fn a_copy_has_the_values_types_and_formats_of_the_original() {
 
     let (mut before, mut after): (Xlsx<_>, Xlsx<_>) =
         (open_workbook(&from).unwrap(), open_workbook(&to).unwrap());
-    let (before, after) = (
-        before.worksheet_style("Site's list").unwrap(),
-        after.worksheet_style("Site's list").unwrap(),
-    );
+    let (before, after) =
+        (before.worksheet_style("Site's list").unwrap(), after.worksheet_style("Site's list").unwrap());
     let head = after.get((0, 0)).unwrap();
     assert!(head.font.as_ref().unwrap().is_bold());
-    assert_eq!(
-        head.fill.as_ref().unwrap().get_color().unwrap().to_string(),
-        "#DDEEFF"
-    );
-    let format_of = |cell| {
-        after
-            .get(cell)
-            .unwrap()
-            .number_format
-            .as_ref()
-            .unwrap()
-            .format_code
-            .clone()
-    };
+    assert_eq!(head.fill.as_ref().unwrap().get_color().unwrap().to_string(), "#DDEEFF");
+    let format_of = |cell| after.get(cell).unwrap().number_format.as_ref().unwrap().format_code.clone();
     assert_eq!(format_of((1, 2)), "0.00");
     assert_eq!(format_of((1, 3)), "dd.mm.yyyy");
-    assert_eq!(
-        after
-            .get((3, 3))
-            .unwrap()
-            .number_format
-            .as_ref()
-            .unwrap()
-            .format_id,
-        Some(14)
-    );
+    assert_eq!(after.get((3, 3)).unwrap().number_format.as_ref().unwrap().format_id, Some(14));
     for cell in [(0, 0), (1, 2), (1, 3), (3, 1), (3, 3)] {
         assert_eq!(before.get(cell), after.get(cell), "{cell:?}");
     }
@@ -201,43 +168,20 @@ fn a_copy_has_the_widths_visibility_and_panes_of_the_original() {
 #[test]
 fn text_stays_text_whatever_it_begins_with() {
     let (_folder, path) = place("out.xlsx");
-    let texts = [
-        "=1+1",
-        "+1",
-        "-1",
-        "@SUM(A1)",
-        "1.5",
-        "http://example.org",
-        "{=A1}",
-        "TRUE",
-    ];
+    let texts = ["=1+1", "+1", "-1", "@SUM(A1)", "1.5", "http://example.org", "{=A1}", "TRUE"];
     let (mut book, sheet) = begin_with_sheet(&path);
     for (row, text) in (0..).zip(texts) {
         book.write(sheet, row, 0, &Value::Text(text), Look::Text).unwrap();
-        let cell = Cell {
-            column: 1,
-            content: CellContent::Text(text.to_owned()),
-            style: None,
-            formula: false,
-        };
-        book.write_row(
-            sheet,
-            &Row {
-                index: row,
-                cells: vec![cell],
-            },
-        )
-        .unwrap();
+        let cell =
+            Cell { column: 1, content: CellContent::Text(text.to_owned()), style: None, formula: false };
+        book.write_row(sheet, &Row { index: row, cells: vec![cell] }).unwrap();
     }
     book.finish().unwrap();
     let mut read: Xlsx<_> = open_workbook(&path).unwrap();
     let range = read.worksheet_range("Reasoning").unwrap();
     for (row, text) in (0..).zip(texts) {
         for column in [0, 1] {
-            assert_eq!(
-                range.get_value((row, column)),
-                Some(&Data::String(text.to_owned()))
-            );
+            assert_eq!(range.get_value((row, column)), Some(&Data::String(text.to_owned())));
         }
     }
     assert!(!part(&path, "xl/worksheets/sheet1.xml").contains("<f>"));
@@ -294,28 +238,19 @@ fn no_two_looks_are_the_same_and_the_unknown_is_never_pale() {
     write_every_look(&path);
     let mut read: Xlsx<_> = open_workbook(&path).unwrap();
     let styles = read.worksheet_style("Reasoning").unwrap();
-    let looks: Vec<_> = (0..)
-        .take(LOOKS.len())
-        .map(|row| styles.get((row, 0)).cloned())
-        .collect();
+    let looks: Vec<_> = (0..).take(LOOKS.len()).map(|row| styles.get((row, 0)).cloned()).collect();
     for (index, look) in looks.iter().enumerate() {
         assert!(look.is_some(), "{:?}", LOOKS[index]);
         assert!(!looks[..index].contains(look), "{:?}", LOOKS[index]);
     }
     let style_of = |shade| {
-        let row = LOOKS
-            .iter()
-            .position(|look| *look == Look::Verdict(shade))
-            .unwrap();
+        let row = LOOKS.iter().position(|look| *look == Look::Verdict(shade)).unwrap();
         looks[row].clone().unwrap()
     };
     for shade in [Shade::Unresolved, Shade::NoData] {
         let style = style_of(shade);
         let pattern = style.fill.unwrap().pattern;
-        assert!(!matches!(
-            pattern,
-            calamine::FillPattern::None | calamine::FillPattern::Solid
-        ));
+        assert!(!matches!(pattern, calamine::FillPattern::None | calamine::FillPattern::Solid));
         assert!(style.borders.unwrap().has_visible_borders());
     }
     let lightness = |shade| {
@@ -323,17 +258,9 @@ fn no_two_looks_are_the_same_and_the_unknown_is_never_pale() {
             .fill
             .filter(calamine::Fill::is_visible)
             .and_then(|fill| fill.get_color())
-            .map_or(765, |colour| {
-                u32::from(colour.red) + u32::from(colour.green) + u32::from(colour.blue)
-            })
+            .map_or(765, |colour| u32::from(colour.red) + u32::from(colour.green) + u32::from(colour.blue))
     };
-    let shades = [
-        Shade::Fulfilled,
-        Shade::ScreensIn,
-        Shade::ScreensOut,
-        Shade::NotFulfilled,
-    ]
-    .map(lightness);
+    let shades = [Shade::Fulfilled, Shade::ScreensIn, Shade::ScreensOut, Shade::NotFulfilled].map(lightness);
     assert!(shades.is_sorted_by(|deeper, paler| deeper < paler), "{shades:?}");
 }
 
@@ -382,24 +309,15 @@ fn a_missing_folder_and_one_that_cannot_be_written_into_are_named() {
     let (folder, _path) = place("out.xlsx");
     let missing = folder.path().join("missing");
     let said = |target: &Path| {
-        AnnotatedWorkbook::create(target, &[], Overwrite::Refuse, day(), &[])
-            .err()
-            .unwrap()
-            .to_string()
+        AnnotatedWorkbook::create(target, &[], Overwrite::Refuse, day(), &[]).err().unwrap().to_string()
     };
     assert_eq!(
         said(&missing.join("out.xlsx")),
-        format!(
-            "{}: there is no such folder; create it, or choose another `--output`",
-            missing.display()
-        )
+        format!("{}: there is no such folder; create it, or choose another `--output`", missing.display())
     );
     assert_eq!(
         said(folder.path()),
-        format!(
-            "{}: is a folder; name the workbook inside it",
-            folder.path().display()
-        )
+        format!("{}: is a folder; name the workbook inside it", folder.path().display())
     );
     #[cfg(target_os = "linux")]
     {
@@ -414,8 +332,7 @@ fn nothing_is_left_of_a_workbook_that_was_not_finished() {
     let (folder, path) = place("out.xlsx");
     let (mut book, sheet) = begin_with_sheet(&path);
     for row in 0..1000 {
-        book.write(sheet, row, 0, &Value::Number(1.0), Look::Number)
-            .unwrap();
+        book.write(sheet, row, 0, &Value::Number(1.0), Look::Number).unwrap();
     }
     assert_eq!(files_in(folder.path()), Vec::<String>::new());
     drop(book);
@@ -427,14 +344,8 @@ fn a_row_that_comes_too_late_fails_the_workbook_instead_of_being_dropped() {
     let (folder, path) = place("out.xlsx");
     let (mut book, sheet) = begin_with_sheet(&path);
     book.write(sheet, 5, 0, &Value::Text("five"), Look::Text).unwrap();
-    let said = book
-        .write(sheet, 4, 0, &Value::Text("four"), Look::Text)
-        .unwrap_err()
-        .to_string();
-    assert!(
-        said.contains("row 5 of sheet `Reasoning` came too late"),
-        "{said}"
-    );
+    let said = book.write(sheet, 4, 0, &Value::Text("four"), Look::Text).unwrap_err().to_string();
+    assert!(said.contains("row 5 of sheet `Reasoning` came too late"), "{said}");
     assert!(book.finish().is_err());
     assert_eq!(files_in(folder.path()), Vec::<String>::new());
 }
@@ -466,11 +377,7 @@ fn a_taken_sheet_name_gets_our_mark() {
     assert_eq!(book.sheet_name(second), "reasoning (screened)");
     book.finish().unwrap();
     let inventory = open_inventory(&path).unwrap();
-    let names: Vec<_> = inventory
-        .sheets()
-        .iter()
-        .map(|sheet| sheet.name.to_string())
-        .collect();
+    let names: Vec<_> = inventory.sheets().iter().map(|sheet| sheet.name.to_string()).collect();
     assert_eq!(names, ["Reasoning", "reasoning (screened)"]);
 }
 
@@ -478,10 +385,8 @@ fn a_taken_sheet_name_gets_our_mark() {
 fn columns_fold_under_an_outline_after_their_rows_were_written() {
     let (_folder, path) = place("out.xlsx");
     let (mut book, sheet) = begin_with_sheet(&path);
-    book.write(sheet, 0, 2, &Value::Text("REACH P"), Look::Header)
-        .unwrap();
-    book.write(sheet, 9, 2, &Value::Text("no data"), Look::Verdict(Shade::NoData))
-        .unwrap();
+    book.write(sheet, 0, 2, &Value::Text("REACH P"), Look::Header).unwrap();
+    book.write(sheet, 9, 2, &Value::Text("no data"), Look::Verdict(Shade::NoData)).unwrap();
     book.group_columns(sheet, 2, 4).unwrap();
     book.set_column_width(sheet, 2, 4, 20.0).unwrap();
     book.freeze(sheet, 1, 0).unwrap();
@@ -491,10 +396,7 @@ fn columns_fold_under_an_outline_after_their_rows_were_written() {
         xml.contains(r#"<col min="3" max="5" width="20" hidden="1" customWidth="1" outlineLevel="1"/>"#),
         "{xml}"
     );
-    assert!(
-        xml.contains(r#"<col min="6" max="6" width="9.140625" collapsed="1"/>"#),
-        "{xml}"
-    );
+    assert!(xml.contains(r#"<col min="6" max="6" width="9.140625" collapsed="1"/>"#), "{xml}");
     assert!(xml.contains(r#"outlineLevelCol="1""#), "{xml}");
     assert!(xml.contains(r#"state="frozen""#), "{xml}");
 }
@@ -508,43 +410,23 @@ fn a_workbook_opens_on_its_first_visible_sheet_and_always_has_one() {
     book.add_sheet("Record", Visibility::VeryHidden).unwrap();
     book.finish().unwrap();
     assert!(part(&path, "xl/workbook.xml").contains(r#"activeTab="1""#));
-    let seen: Vec<_> = open_inventory(&path)
-        .unwrap()
-        .sheets()
-        .iter()
-        .map(|sheet| sheet.visibility)
-        .collect();
-    assert_eq!(
-        seen,
-        [Visibility::Hidden, Visibility::Visible, Visibility::VeryHidden]
-    );
+    let seen: Vec<_> = open_inventory(&path).unwrap().sheets().iter().map(|sheet| sheet.visibility).collect();
+    assert_eq!(seen, [Visibility::Hidden, Visibility::Visible, Visibility::VeryHidden]);
     let only_hidden = folder.path().join("hidden.xlsx");
     let mut book = begin(&only_hidden);
     book.add_sheet("Record", Visibility::VeryHidden).unwrap();
     book.finish().unwrap();
-    assert_eq!(
-        open_inventory(&only_hidden).unwrap().sheets()[1].visibility,
-        Visibility::Visible
-    );
+    assert_eq!(open_inventory(&only_hidden).unwrap().sheets()[1].visibility, Visibility::Visible);
 }
 
 #[test]
 fn links_lead_to_cells_and_pages_and_become_text_where_a_sheet_can_have_no_more() {
     let (_folder, path) = place("out.xlsx");
     let (mut book, sheet) = begin_with_sheet(&path);
-    let cell = CellRef {
-        sheet: "Site's list".into(),
-        row: 6,
-        column: 2,
-    };
+    let cell = CellRef { sheet: "Site's list".into(), row: 6, column: 2 };
     for row in 0..65_002 {
-        let target = if row == 0 {
-            Target::Web("https://eur-lex.europa.eu/")
-        } else {
-            Target::Cell(&cell)
-        };
-        book.write(sheet, row, 0, &Value::Link { text: "see", target }, Look::Link)
-            .unwrap();
+        let target = if row == 0 { Target::Web("https://eur-lex.europa.eu/") } else { Target::Cell(&cell) };
+        book.write(sheet, row, 0, &Value::Link { text: "see", target }, Look::Link).unwrap();
     }
     book.finish().unwrap();
     let xml = part(&path, "xl/worksheets/sheet1.xml");
@@ -561,12 +443,7 @@ fn links_lead_to_cells_and_pages_and_become_text_where_a_sheet_can_have_no_more(
 fn a_date_without_a_format_of_its_own_is_still_shown_and_read_as_a_date() {
     let (_folder, path) = place("out.xlsx");
     let (mut book, sheet) = begin_with_sheet(&path);
-    let cell = |column, content| Cell {
-        column,
-        content,
-        style: None,
-        formula: false,
-    };
+    let cell = |column, content| Cell { column, content, style: None, formula: false };
     let cells = vec![
         cell(0, CellContent::DateTime(46_000.0)),
         cell(1, CellContent::Error("#N/A".to_owned())),
@@ -574,26 +451,13 @@ fn a_date_without_a_format_of_its_own_is_still_shown_and_read_as_a_date() {
         cell(3, CellContent::Empty),
     ];
     book.write_row(sheet, &Row { index: 2, cells }).unwrap();
-    book.set_columns(
-        sheet,
-        ColumnLayout {
-            first: 0,
-            last: 0,
-            width: None,
-            hidden: true,
-        },
-    )
-    .unwrap();
+    book.set_columns(sheet, ColumnLayout { first: 0, last: 0, width: None, hidden: true }).unwrap();
     book.finish().unwrap();
     let row = rows_of(&path, 0).remove(0);
     let contents: Vec<_> = row.cells.into_iter().map(|cell| cell.content).collect();
     assert_eq!(
         contents,
-        [
-            CellContent::DateTime(46_000.0),
-            CellContent::Text("#N/A".to_owned()),
-            CellContent::Boolean(false),
-        ]
+        [CellContent::DateTime(46_000.0), CellContent::Text("#N/A".to_owned()), CellContent::Boolean(false),]
     );
     assert!(open_inventory(&path).unwrap().sheets()[0].column_widths[0].hidden);
 }
@@ -604,10 +468,7 @@ fn a_row_is_as_high_as_its_wrapped_texts_need() {
     let from = folder.path().join("inventory.xlsx");
     let mut inventory = Workbook::new();
     let wrapped = Format::new().set_text_wrap();
-    inventory
-        .add_worksheet()
-        .write_string_with_format(0, 0, "one\ntwo\nthree", &wrapped)
-        .unwrap();
+    inventory.add_worksheet().write_string_with_format(0, 0, "one\ntwo\nthree", &wrapped).unwrap();
     inventory.save(&from).unwrap();
     let mut inventory = open_inventory(&from).unwrap();
     let row = inventory.first_rows(0, 1).unwrap().remove(0);
@@ -616,12 +477,9 @@ fn a_row_is_as_high_as_its_wrapped_texts_need() {
             .unwrap();
     let sheet = book.add_sheet("Substances", Visibility::Visible).unwrap();
     book.write_row(sheet, &row).unwrap();
-    book.write(sheet, 0, 1, &Value::Text("log Kow used"), Look::Header)
-        .unwrap();
-    book.write(sheet, 1, 1, &Value::Text("4.5"), Look::Wrapped)
-        .unwrap();
-    book.write(sheet, 2, 1, &Value::Text("log Kow used"), Look::Wrapped)
-        .unwrap();
+    book.write(sheet, 0, 1, &Value::Text("log Kow used"), Look::Header).unwrap();
+    book.write(sheet, 1, 1, &Value::Text("4.5"), Look::Wrapped).unwrap();
+    book.write(sheet, 2, 1, &Value::Text("log Kow used"), Look::Wrapped).unwrap();
     book.finish().unwrap();
     let xml = part(&path, "xl/worksheets/sheet1.xml");
     for head in [

@@ -1,0 +1,201 @@
+//! Options and commands: what each changes, and how a wrong one is told.
+
+use std::process::Stdio;
+
+use crate::place::Place;
+use crate::sheets::{rows_with_a_fault, sound_rows, texts};
+
+const BAD_BOOK: &str = r#"[rulebook]
+id = "house-rules"
+short = "HOUSE"
+title = "House rules"
+source = "Invented"
+edition = 2026-01-01
+strongest = "definitive"
+
+[[criterion]]
+id = "B"
+title = "Bioaccumulative"
+
+[[criterion.step]]
+weight = "definitive"
+combine = "any"
+[[criterion.step.test]]
+property = "bcff"
+above = "2000 L/kg"
+source = "Invented, 1"
+checked = "seen"
+"#;
+
+#[test]
+fn an_option_that_means_nothing_says_what_to_write() {
+    let place = Place::with_rows(sound_rows());
+    for (words, message) in [
+        (
+            ["--date", "2026-02-30"],
+            "--date 2026-02-30: not a day of the calendar; write, for example, 2026-01-31",
+        ),
+        (["--threads", "0"], "--threads 0: at least one thread is needed; write 1 or more"),
+        (
+            ["--threads", "999999999"],
+            "--threads: at most 1024 can be asked for; more threads than cores gain nothing",
+        ),
+        (
+            ["--sheet", "Substance"],
+            "--sheet Substance: the inventory has no sheet of that name; it has Substances. Did you mean `Substances`?",
+        ),
+        (
+            ["--column", "Stoff"],
+            "`Stoff` names no field; write --column 'Header=field', for example --column 'Stoff=name', or 'Header=ignore'",
+        ),
+        (["--column", "Name=nam"], "there is no field `nam`; did you mean `name`?"),
+        (
+            ["--column", "Nam=name"],
+            "--column: no sheet has a column with the header `Nam`; write the header as it stands in the sheet \
+             (`kowledger columns` lists them). Did you mean `Name`?",
+        ),
+        (
+            ["--rulebook", "eu-reach-pbr"],
+            "`eu-reach-pbr` is no rulebook, file or folder. Did you mean `eu-reach-pbt`? Built in are `eu-reach-pbt`, \
+             `eu-clp-pbt-pmt`, `un-stockholm-annex-d`, `ca-persistence-bioaccumulation`; `all` takes them all.",
+        ),
+    ] {
+        place.refuses(&["screen", "inventory.xlsx", words[0], words[1]], message);
+    }
+    assert_eq!(place.run(&["screen"]).status, 2);
+    assert_eq!(place.screen(&["--threads", "many"]).status, 2);
+}
+
+#[test]
+fn a_broken_rulebook_is_drawn_under_its_text_and_nothing_is_written() {
+    let place = Place::with_rows(sound_rows());
+    std::fs::write(place.path("house.toml"), BAD_BOOK).unwrap();
+    for words in
+        [&["screen", "inventory.xlsx", "--rulebook", "house.toml"][..], &["rules", "check", "house.toml"]]
+    {
+        let run = place.run(words);
+        assert_eq!(run.status, 2);
+        for part in ["house.toml:17:12", "property = \"bcff\"", "^^^^^^", "`bcf`"] {
+            assert!(run.complained.contains(part), "{part} in {}", run.complained);
+        }
+    }
+    assert_eq!(place.files(), ["house.toml", "inventory.xlsx"]);
+}
+
+#[test]
+fn rules_check_reads_files_and_folders_and_names_a_path_that_is_not_there() {
+    let place = Place::new();
+    let good = BAD_BOOK.replace("bcff", "bcf");
+    std::fs::create_dir(place.path("rules")).unwrap();
+    std::fs::write(place.path("rules/house.toml"), good).unwrap();
+    for path in ["rules", "rules/house.toml"] {
+        let run = place.run(&["rules", "check", path]);
+        assert_eq!(run.status, 0, "{}", run.complained);
+        assert!(run.said.starts_with("house-rules"), "{}", run.said);
+        assert!(run.said.ends_with("1 rulebook is in order.\n"), "{}", run.said);
+    }
+    let run = place.run(&["rules", "check", "none"]);
+    assert_eq!(run.status, 2);
+    assert!(run.complained.contains("there is no such file or folder"), "{}", run.complained);
+    std::fs::create_dir(place.path("empty")).unwrap();
+    let run = place.run(&["rules", "check", "empty"]);
+    assert_eq!(run.status, 2);
+    assert!(run.complained.contains("the folder holds no rulebook"), "{}", run.complained);
+}
+
+#[test]
+fn the_list_of_rulebooks_keeps_its_columns_apart() {
+    let run = Place::new().run(&["rules", "list"]);
+    assert_eq!(run.status, 0);
+    for (line, id) in run.said.lines().zip([
+        "eu-reach-pbt",
+        "eu-clp-pbt-pmt",
+        "un-stockholm-annex-d",
+        "ca-persistence-bioaccumulation",
+    ]) {
+        assert!(line.starts_with(&format!("{id} ")), "{line}");
+    }
+}
+
+#[test]
+fn quiet_prints_faults_only() {
+    let place = Place::with_rows(rows_with_a_fault());
+    let run = place.screen(&["--quiet"]);
+    assert_eq!((run.status, run.said.as_str()), (1, ""));
+    assert_eq!(
+        run.complained,
+        "Substances!E3: `soon` is no half-life in soil; write, for example, `40 d`\n\
+         1 cell could not be read; the rows were screened with what remains.\n"
+    );
+}
+
+#[test]
+fn reasoning_is_written_in_full_in_part_or_not_at_all() {
+    let place = Place::with_rows(sound_rows());
+    let lines = |mode: &str| {
+        assert_eq!(place.screen(&["--force", "--reasoning", mode]).status, 0);
+        place
+            .names_of_sheets("inventory-screened.xlsx")
+            .contains(&"Reasoning".to_owned())
+            .then(|| place.screened("Reasoning").0.len() - 1)
+    };
+    let all = lines("all").unwrap();
+    let concern = lines("concern").unwrap();
+    assert_eq!(lines("none"), None);
+    assert_eq!(lines("auto"), Some(all));
+    assert_eq!(all, 2 * (5 + 7 + 4 + 2), "a line for every row and criterion");
+    assert!(0 < concern && concern < all, "{concern} of {all}");
+}
+
+#[test]
+fn what_unstated_values_count_as_changes_the_words() {
+    let place = Place::with_rows(sound_rows());
+    let verdict_of = |unstated: &str| {
+        place.screen(&["--force", "--unstated", unstated]);
+        let rows = place.screened("Substances");
+        (rows.under(1, "REACH vB", 2), rows.under(1, "log Kow basis", 2))
+    };
+    let pair = |one: &str, other: &str| (one.to_owned(), other.to_owned());
+    assert_eq!(verdict_of("measured"), pair("fulfilled", "measured"));
+    assert_eq!(verdict_of("unstated"), pair("screens in", "unstated"));
+    assert_eq!(verdict_of("calculated"), pair("screens in", "calculated"));
+}
+
+#[test]
+fn columns_tells_what_was_found_and_what_was_not() {
+    let place = Place::with_rows(vec![
+        texts(&["Site list 2026"]),
+        texts(&["Name", "CAS No.", "log Kow", "CAS number", "Colour"]),
+        texts(&["DDT", "50-29-3", "6.91", "50-29-3", "white"]),
+    ]);
+    let run = place.run(&["columns", "inventory.xlsx"]);
+    assert_eq!(run.status, 0);
+    insta::assert_snapshot!(run.said.trim_end(), @r"
+    Substances: header in row 2.
+      A   Name                              name                        named by `name`
+      B   CAS No.                           cas-number                  named by `cas`
+      C   log Kow                           log-kow                     named by `log kow`
+      D   CAS number                        not recognised
+      E   Colour                            not recognised
+      Substances: columns B (`CAS No.`) and D (`CAS number`) both name cas-number; B is taken; to take the other: --column 'CAS No.=ignore' --column 'CAS number=cas-number'
+    ");
+    assert_eq!(place.files(), ["inventory.xlsx"]);
+}
+
+#[test]
+fn a_reader_that_goes_away_makes_nobody_panic() {
+    let place = Place::with_rows(sound_rows());
+    for words in [&["rules", "list"][..], &["columns", "inventory.xlsx"], &["screen", "inventory.xlsx"]] {
+        let mut child = std::process::Command::new(assert_cmd::cargo::cargo_bin("kowledger"))
+            .current_dir(place.path("."))
+            .args(words)
+            .stdout(Stdio::piped())
+            .stderr(Stdio::piped())
+            .spawn()
+            .unwrap();
+        drop(child.stdout.take());
+        let output = child.wait_with_output().unwrap();
+        assert_eq!(String::from_utf8(output.stderr).unwrap(), "");
+        assert_eq!(output.status.code(), Some(0));
+    }
+}
