@@ -1,5 +1,13 @@
 //! The command line as a user meets it: statuses, messages, and what is left in the folder.
 
+#![expect(
+    clippy::expect_used,
+    clippy::indexing_slicing,
+    clippy::panic,
+    clippy::unwrap_used,
+    reason = "a workbook that cannot be made for a test has to stop it"
+)]
+
 #[path = "../make/hostile.rs"]
 #[expect(dead_code, reason = "other tests use the rest of the makers")]
 mod hostile;

@@ -46,7 +46,7 @@ impl Place {
             .unwrap()
             .current_dir(self.folder.path())
             .args(words)
-            .timeout(std::time::Duration::from_secs(120))
+            .timeout(std::time::Duration::from_mins(2))
             .output()
             .unwrap();
         let run = Run {
@@ -112,7 +112,7 @@ impl Rows {
     pub fn under(&self, header_row: usize, header: &str, row: usize) -> String {
         let place = self.0[header_row - 1]
             .iter()
-            .position(|cell| cell.to_string() == header)
+            .position(|cell| cell.as_string().as_deref() == Some(header))
             .unwrap_or_else(|| panic!("there is no column {header}"));
         self.0[row - 1][place].to_string()
     }
