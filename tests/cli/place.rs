@@ -112,7 +112,7 @@ impl Rows {
     pub fn under(&self, header_row: usize, header: &str, row: usize) -> String {
         let place = self.0[header_row - 1]
             .iter()
-            .position(|cell| cell.as_string().as_deref() == Some(header))
+            .position(|cell| matches!(cell, Data::String(text) if text == header))
             .unwrap_or_else(|| panic!("there is no column {header}"));
         self.0[row - 1][place].to_string()
     }

@@ -30,8 +30,8 @@ fn each_concern_value_stops_a_clear_without_deciding() {
         let beyond = low_bcf().measured(property, Value::Point(value)).judged();
         assert_eq!(beyond.verdict("REACH", "B"), Unresolved, "{}", property.title());
         let limit = if property == Property::Baf { 2000.0 } else { 1.0 };
-        let same_as_limit = low_bcf().measured(property, Value::Point(limit)).judged();
-        assert_eq!(same_as_limit.verdict("REACH", "B"), NotFulfilled, "{}", property.title());
+        let unconcerning = low_bcf().measured(property, Value::Point(limit)).judged();
+        assert_eq!(unconcerning.verdict("REACH", "B"), NotFulfilled, "{}", property.title());
     }
 }
 
@@ -56,8 +56,8 @@ fn a_guard_that_is_clear_stops_nothing() {
     let low_koa =
         judged.measured(Property::LogKoa, Value::Point(4.0)).measured(Property::LogKow, Value::Point(3.0));
     assert_eq!(low_koa.judged().verdict("REACH", "B"), ScreensOut);
-    let low_kow = row().measured(Property::LogKow, Value::Point(1.5));
-    assert_eq!(low_kow.judged().verdict("REACH", "B"), ScreensOut);
+    let barely_lipophilic = row().measured(Property::LogKow, Value::Point(1.5));
+    assert_eq!(barely_lipophilic.judged().verdict("REACH", "B"), ScreensOut);
 }
 
 #[test]
