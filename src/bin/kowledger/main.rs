@@ -2,13 +2,13 @@
 
 mod args;
 mod console;
+mod dispatch;
 
 use std::process::ExitCode;
 
-use args::{Arguments, Command, RulesCommand};
+use args::Arguments;
 use clap::Parser;
-use kowledger::fault::Refusal;
-use kowledger::run;
+use dispatch::{Outcome, dispatch};
 
 fn main() -> ExitCode {
     match dispatch(Arguments::parse().command) {
@@ -17,35 +17,6 @@ fn main() -> ExitCode {
         Err(refusal) => {
             console::refuse(&refusal);
             ExitCode::from(2)
-        }
-    }
-}
-
-/// How a command ended that was not refused.
-enum Outcome {
-    Done,
-    DoneWithFaults,
-}
-
-fn dispatch(command: Command) -> Result<Outcome, Refusal> {
-    match command {
-        Command::Screen(arguments) => {
-            let console = console::Console::new(arguments.quiet);
-            let summary = run::screen(&arguments.into_settings()?)?;
-            console.summary(&summary);
-            Ok(if summary.fault_total == 0 { Outcome::Done } else { Outcome::DoneWithFaults })
-        }
-        Command::Columns(arguments) => {
-            console::columns(&run::recognise_columns(&arguments.inventory, &arguments.overrides()?)?);
-            Ok(Outcome::Done)
-        }
-        Command::Rules(RulesCommand::List) => {
-            console::rulebooks(&kowledger::rules::summaries()?);
-            Ok(Outcome::Done)
-        }
-        Command::Rules(RulesCommand::Check { paths }) => {
-            console::checked(&kowledger::rules::check_paths(&paths)?);
-            Ok(Outcome::Done)
         }
     }
 }
