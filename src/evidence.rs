@@ -44,6 +44,16 @@ pub enum Standing {
     SupportingOnly,
 }
 
+impl Standing {
+    /// The standing that a reliability score leaves.
+    pub fn of_reliability(score: Option<u8>) -> Self {
+        match score {
+            Some(score) if score >= 3 => Self::SupportingOnly,
+            Some(_) | None => Self::Full,
+        }
+    }
+}
+
 /// A value of a property.
 #[derive(Debug, Clone, PartialEq)]
 pub struct Evidence {

@@ -134,6 +134,13 @@ pub enum Adjustment {
         /// The factor.
         factor: f64,
     },
+    /// A BCF whose lipid content may be a fraction or a percentage: both readings are kept.
+    LipidDoubtful {
+        /// Lipid content as written.
+        from: f64,
+        /// The rulebook's, %.
+        to: f64,
+    },
     /// A BCF moved to the rulebook's lipid content.
     Lipid {
         /// Lipid content of the fish, %.

@@ -60,10 +60,7 @@ fn from_reading(
         sd: interval.single().map(|value| standard_deviation(property, reading, value, relations)),
         basis: reading.basis,
         origin: Origin::Cell(reading.cell.clone()),
-        standing: match reading.conditions.reliability {
-            Some(score) if score >= 3 => Standing::SupportingOnly,
-            Some(_) | None => Standing::Full,
-        },
+        standing: Standing::of_reliability(reading.conditions.reliability),
         conditions: reading.conditions.clone(),
         reported: reading.quantity.reported.clone(),
         lower_bound_by_ionisation,
@@ -73,24 +70,30 @@ fn from_reading(
 /// Below this neutral share a measured log Kow is only a lower bound of that of the neutral form (common practice).
 const LEAST_NEUTRAL_SHARE: f64 = 0.9;
 
-/// The share of the neutral form at the pH of the measurement, where the row gives that pH and a pKa.
+/// The least share of the neutral form at the pH of the measurement that the row's pKa leave possible, where it gives
+/// that pH and a pKa.
 ///
 /// Acid 1 / (1 + 10^(pH - pKa)), base 1 / (1 + 10^(pKa - pH)): the mass action law for one group.
 fn neutral_share(reading: &Reading, substance: &Substance) -> Option<f64> {
     let ph = reading.conditions.ph?;
-    let pka = |property| substance.readings_of(property).iter().find_map(|reading| reading.quantity.single());
-    let acid = pka(Property::PkaAcid).map(|pka| 1.0 / (1.0 + 10f64.powf(ph - pka)));
-    let base = pka(Property::PkaBase).map(|pka| 1.0 / (1.0 + 10f64.powf(pka - ph)));
-    match (acid, base) {
-        (Some(acid), Some(base)) => Some(acid.min(base)),
-        (acid, base) => acid.or(base),
-    }
+    let intervals =
+        |property| substance.readings_of(property).iter().map(|reading| reading.quantity.interval);
+    // An open end leaves room for a group that is ionised altogether.
+    let acids = intervals(Property::PkaAcid)
+        .map(|pka| pka.low().number().map_or(0.0, |pka| 1.0 / (1.0 + 10f64.powf(ph - pka))));
+    let bases = intervals(Property::PkaBase)
+        .map(|pka| pka.high().number().map_or(0.0, |pka| 1.0 / (1.0 + 10f64.powf(pka - ph))));
+    acids.chain(bases).min_by(f64::total_cmp)
 }
 
 /// The SD in log units: as written with `±`, else the default, doubled for `~` and `ca.`.
 fn standard_deviation(property: Property, reading: &Reading, value: f64, relations: &Relations) -> f64 {
-    let written =
-        reading.quantity.written_sd.and_then(|sd| log_sd(property, reading.quantity.unit, sd, value));
+    // No value is known without error: an SD of zero is none that was found.
+    let written = reading
+        .quantity
+        .written_sd
+        .filter(|sd| *sd > 0.0)
+        .and_then(|sd| log_sd(property, reading.quantity.unit, sd, value));
     written.unwrap_or_else(|| {
         let default = relations.default_sd(property, reading.basis, value);
         if reading.quantity.approximate { 2.0 * default } else { default }
@@ -120,19 +123,30 @@ fn estimate(
     substance: &Substance,
     relations: &Relations,
 ) -> Option<Evidence> {
-    let log_kow = match end {
-        End::High => known.log_kow_used()?,
-        End::Low => best_ranked(known.of(Property::LogKow))
-            .min_by(|one, other| one.lower_value().total_cmp(&other.lower_value()))?,
-    };
-    let entered = LogKow { interval: log_kow.interval, sd: log_kow.sd };
-    let estimate = relations.estimate(property, entered, ionisation(substance))?;
+    let mut values: Vec<&Evidence> = best_ranked(known.of(Property::LogKow)).collect();
+    match end {
+        End::High => {
+            values.reverse();
+            values.sort_by(|one, other| other.upper_value().total_cmp(&one.upper_value()));
+        }
+        End::Low => values.sort_by(|one, other| one.lower_value().total_cmp(&other.lower_value())),
+    }
+    let (place, log_kow, estimate) = values.into_iter().enumerate().find_map(|(place, log_kow)| {
+        let entered = LogKow { interval: log_kow.interval, sd: log_kow.sd };
+        let estimate = relations.estimate(property, entered, ionisation(substance))?;
+        Some((place, log_kow, estimate))
+    })?;
     let relation = relations.relations.get(estimate.leading)?;
     let shift = if relation.molar { molar_shift(substance)? } else { 0.0 };
     let Origin::Cell(log_kow_cell) = &log_kow.origin else {
         return None;
     };
     let Estimate { leading, log_value, sd, others, low_side } = estimate;
+    // A log Kow of more concern that no relation takes leaves the estimate open on that side.
+    let (log_value, sd) = match place {
+        0 => (log_value, sd),
+        _ => (opened(property, log_value)?, None),
+    };
     Some(Evidence {
         property,
         interval: log_value.map_increasing(|log| 10f64.powf(log + shift)).ok()?,
@@ -151,6 +165,16 @@ fn estimate(
         reported: String::new(),
         lower_bound_by_ionisation: None,
     })
+}
+
+/// The estimate with its side of concern open, so that it may fire and never clears.
+fn opened(property: Property, log_value: Interval) -> Option<Interval> {
+    let opened = match property {
+        Property::Bcf => Interval::new(log_value.low(), Bound::Unbounded),
+        // Little sorption and a low effect concentration are of concern.
+        _ => Interval::new(Bound::Unbounded, log_value.high()),
+    };
+    opened.ok()
 }
 
 /// log10 of the factor from mol/L to mg/L, where the row gives the molar mass.

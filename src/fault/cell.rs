@@ -131,6 +131,11 @@ pub enum CellFaultKind {
         /// The class as found, for example `Carc.`.
         class: String,
     },
+    /// A part of a cell of hazard statements that may be one and was not read as such.
+    StatementUnread {
+        /// The part, for example `350`.
+        part: String,
+    },
 }
 
 impl fmt::Display for CellFault {
@@ -270,6 +275,11 @@ impl fmt::Display for CellFaultKind {
             Self::ClassWithoutCategory { class } => write!(
                 formatter,
                 "names the hazard class `{class}` without its category; write, for example, `Carc. 1B` or `H350`"
+            ),
+            Self::StatementUnread { part } => write!(
+                formatter,
+                "holds `{part}`, which may be a hazard statement and was not read; write each code in full, for example \
+                 `H302; H350`"
             ),
         }
     }

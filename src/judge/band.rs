@@ -1,5 +1,6 @@
 //! Ratings: the first property with data says in which bands its value may lie.
 
+use crate::evidence::{Evidence, Standing};
 use crate::judge::compare::{hold_against, outcome_of};
 use crate::judge::{Context, Used};
 use crate::quantity::Outcome;
@@ -30,12 +31,14 @@ pub(crate) fn rate(context: Context, criterion: &Criterion) -> (Vec<usize>, Opti
 /// Of the values of the best accepted basis, the one that reaches highest.
 fn highest_value(context: Context, band: &Band, property: Property) -> Option<Used> {
     let values = context.evidence.of(property);
-    let accepted = |basis| band.test.bases.contains(&basis);
-    let best = values.iter().map(|evidence| evidence.basis).filter(|basis| accepted(*basis)).min()?;
+    let accepted = |evidence: &Evidence| {
+        band.test.bases.contains(&evidence.basis) && evidence.standing == Standing::Full
+    };
+    let best = values.iter().filter(|evidence| accepted(evidence)).map(|evidence| evidence.basis).min()?;
     values
         .iter()
         .enumerate()
-        .filter(|(_, evidence)| evidence.basis == best)
+        .filter(|(_, evidence)| accepted(evidence) && evidence.basis == best)
         .max_by(|(_, one), (_, other)| one.upper_value().total_cmp(&other.upper_value()))
         .map(|(index, evidence)| {
             hold_against(context, &band.test, index, evidence, |interval| outcome_of(&band.test, interval))

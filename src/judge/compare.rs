@@ -18,12 +18,15 @@ pub(crate) fn as_compared(context: Context, evidence: &Evidence) -> (Interval, O
     }
 }
 
+/// No test of degradation is run in ice: a lower number is no test temperature, °C (common practice).
+const COLDEST_TEST: f64 = 0.0;
+
 fn at_temperature(
     evidence: &Evidence,
     reference: HalfLifeReference,
 ) -> Option<(Interval, Option<Adjustment>)> {
     let to = reference.temperature;
-    if let Some(from) = evidence.conditions.temperature {
+    if let Some(from) = evidence.conditions.temperature.filter(|from| *from >= COLDEST_TEST) {
         let factor = arrhenius_factor(reference.activation_energy, from, to);
         let moved = evidence.interval.map_increasing(|days| days * factor).ok()?;
         return Some((moved, Some(Adjustment::HalfLifeTemperature { from, to, factor })));
@@ -43,10 +46,17 @@ pub(crate) fn arrhenius_factor(activation_energy: f64, from: f64, to: f64) -> f6
     (activation_energy / GAS_CONSTANT * (1.0 / (to + KELVIN) - 1.0 / (from + KELVIN))).exp()
 }
 
+/// A lower lipid content may be a fraction: a cell formatted as a percentage holds 0.05 for 5 % (assumed), %.
+const LEANEST_FISH: f64 = 1.0;
+
 /// BCF at the rulebook's lipid content: BCF x lipid / lipid of the fish (OECD 305).
 fn at_lipid(evidence: &Evidence, to: f64) -> Option<(Interval, Option<Adjustment>)> {
     let from = evidence.conditions.lipid.filter(|lipid| *lipid > 0.0)?;
-    let moved = evidence.interval.map_increasing(|bcf| bcf * to / from).ok()?;
+    let at = |percent: f64| evidence.interval.map_increasing(|bcf| bcf * to / percent).ok();
+    let moved = at(from)?;
+    if from < LEANEST_FISH {
+        return Some((moved.hull(at(from * 100.0)?), Some(Adjustment::LipidDoubtful { from, to })));
+    }
     Some((moved, Some(Adjustment::Lipid { from, to })))
 }
 
@@ -112,6 +122,34 @@ fn margin(test: &Test, property: Property, compared: Interval) -> Option<f64> {
     };
     let distance = in_log_units(property, compared.single()?)? - in_log_units(property, limit)?;
     Some(if comparison.looks_upward() { distance } else { -distance })
+}
+
+/// Whether the end of a value that points to the limit lies within one SD of it. A range has no SD of its own, so that
+/// of a single value at that end counts.
+pub(crate) fn reaches_within_one_sd(
+    context: Context,
+    test: &Test,
+    evidence: &Evidence,
+    compared: Interval,
+) -> bool {
+    let Limit::Number { comparison, value: limit } = test.limit else {
+        return false;
+    };
+    let end = if comparison.looks_upward() { compared.high() } else { compared.low() };
+    let distance = end.number().and_then(|end| {
+        let property = evidence.property;
+        Some((end, (in_log_units(property, end)? - in_log_units(property, limit)?).abs()))
+    });
+    let relations = &context.rules.relations;
+    distance.is_some_and(|(end, distance)| {
+        let sd = evidence.sd.unwrap_or_else(|| match evidence.origin {
+            Origin::Cell(_) => relations.default_sd(evidence.property, evidence.basis, end),
+            Origin::Relation { relation, .. } => {
+                relations.relations.get(relation).map_or(f64::INFINITY, |line| line.sd)
+            }
+        });
+        distance <= sd
+    })
 }
 
 fn chance(context: Context, test: &Test, evidence: &Evidence, compared: Interval) -> Option<f64> {

@@ -8,7 +8,7 @@ use crate::judge::{
     Carries, Closeness, Context, CriterionJudgement, Decision, StepJudgement, StepState, Stop, StoppedClear,
     TestJudgement, Verdict,
 };
-use crate::rules::{Combine, Criterion, Decides, Guards, OnlyIf, Rulebook, Weight};
+use crate::rules::{Combine, Criterion, Decides, Guards, OnlyIf, Rulebook, Step, Weight};
 
 /// Judges one criterion.
 pub(crate) fn judge_criterion(context: Context, criterion: &Criterion) -> CriterionJudgement {
@@ -135,12 +135,16 @@ fn stops_of_tests(combine: Combine, judged: &StepJudgement) -> Vec<Stop> {
 
 fn guards(rulebook: &Rulebook, criterion: &Criterion, steps: &[StepJudgement], clearing: usize) -> Vec<Stop> {
     let screening_clear = word(rulebook, criterion, steps, Decision::Out(clearing)) == Verdict::ScreensOut;
-    let guard = |index: usize, guards: Guards, state: StepState| match (guards, state) {
-        (Guards::Fired | Guards::FiredOrOpen, StepState::Fired) => Some(Stop::Guard(index)),
-        (Guards::FiredOrOpen, StepState::Partial | StepState::Undecided) if screening_clear => {
-            Some(Stop::OpenGuard(index))
-        }
-        (Guards::Never | Guards::Fired | Guards::FiredOrOpen, _) => None,
+    // A clear that could not stand by itself closes no guard either.
+    let open = |step: &Step, judged: &StepJudgement| match judged.state {
+        StepState::Partial | StepState::Undecided => true,
+        StepState::Clear => !stops_of_tests(step.combine, judged).is_empty(),
+        StepState::Skipped | StepState::Empty | StepState::Fired => false,
+    };
+    let guard = |index: usize, step: &Step, judged: &StepJudgement| match step.guards {
+        Guards::Fired | Guards::FiredOrOpen if judged.state == StepState::Fired => Some(Stop::Guard(index)),
+        Guards::FiredOrOpen if screening_clear && open(step, judged) => Some(Stop::OpenGuard(index)),
+        Guards::Never | Guards::Fired | Guards::FiredOrOpen => None,
     };
     criterion
         .steps
@@ -148,7 +152,7 @@ fn guards(rulebook: &Rulebook, criterion: &Criterion, steps: &[StepJudgement], c
         .zip(steps)
         .enumerate()
         .filter(|(index, _)| *index != clearing)
-        .filter_map(|(index, (step, judged))| guard(index, step.guards, judged.state))
+        .filter_map(|(index, (step, judged))| guard(index, step, judged))
         .collect()
 }
 

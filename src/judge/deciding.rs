@@ -11,7 +11,7 @@ use crate::judge::criterion::decide;
 use crate::judge::test::limit_stops;
 use crate::judge::{Carries, Closeness, Context, CriterionJudgement, Stop, TestJudgement, TestOutcome};
 use crate::quantity::{Interval, Outcome};
-use crate::rules::{Criterion, Limit, Subject, Test, Weight};
+use crate::rules::{Checked, Criterion, Limit, Subject, Test, Weight};
 use crate::substance::Property;
 
 /// What would settle an open criterion.
@@ -27,6 +27,9 @@ pub enum Deciding {
 
 /// No more data than this are combined in the search.
 const LARGEST_SET: usize = 4;
+
+/// No more combinations of results are tried for one set.
+const MOST_COMBINATIONS: usize = 4096;
 
 /// A result that a missing datum could have.
 #[derive(Debug, Clone, Copy, PartialEq)]
@@ -206,7 +209,12 @@ fn sets(candidates: &[Subject], size: usize) -> Vec<Vec<Subject>> {
 fn settles(context: Context, criterion: &Criterion, known: &[Vec<TestJudgement>], set: &[Subject]) -> bool {
     let results: Vec<Vec<Imagined>> =
         set.iter().map(|subject| possible_results(criterion, *subject)).collect();
-    combinations(&results).iter().all(|combination| decides(context, criterion, known, set, combination))
+    // A rulebook of very many limits would ask for more combinations than anybody waits for.
+    let count = results.iter().fold(1_usize, |product, choices| product.saturating_mul(choices.len()));
+    count <= MOST_COMBINATIONS
+        && combinations(&results)
+            .iter()
+            .all(|combination| decides(context, criterion, known, set, combination))
 }
 
 /// Whether the criterion is answered once the data of the set have these results.
@@ -281,6 +289,18 @@ fn numbers(test: &Test) -> Vec<f64> {
     numbers
 }
 
+/// How much weight a measured value would carry with this outcome.
+fn imagined_weight(context: Context, test: &Test, outcome: TestOutcome) -> Carries {
+    let screening_only = match (test.subject, outcome) {
+        (Subject::HazardStatements, TestOutcome::Clear) => true,
+        (subject @ Subject::Property(_), TestOutcome::Fired) => {
+            context.fires_as_screening_only(subject, None)
+        }
+        _ => false,
+    };
+    if screening_only || test.checked == Checked::Memory { Carries::Screening } else { Carries::Definitive }
+}
+
 /// A measured value; cautions that block it still do.
 fn imagine(context: Context, test: &Test, result: Imagined) -> TestJudgement {
     let outcome = match result {
@@ -299,7 +319,7 @@ fn imagine(context: Context, test: &Test, result: Imagined) -> TestJudgement {
         used: Vec::new(),
         answer: None,
         closeness: Closeness::Clear,
-        carries: Carries::Definitive,
+        carries: imagined_weight(context, test, outcome),
         stops,
     }
 }

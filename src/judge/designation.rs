@@ -21,15 +21,35 @@ pub(crate) fn judge_designations(
     context: Context,
     criteria: &[CriterionJudgement],
 ) -> Vec<DesignationJudgement> {
-    let designations = &context.rulebook.designations;
-    designations.iter().map(|designation| judge_designation(context, designation, criteria)).collect()
+    let count = context.rulebook.designations.len();
+    let mut judged: Vec<Option<DesignationJudgement>> = vec![None; count];
+    // Designations never go round in circles (validation refuses that), so that each round judges one more at least.
+    for _ in 0..count {
+        for (index, designation) in context.rulebook.designations.iter().enumerate() {
+            let ready = designation.parts.iter().all(|part| match *part {
+                DesignationPart::Criterion(_) => true,
+                DesignationPart::Designation(other) => judged.get(other).is_none_or(Option::is_some),
+            });
+            if !ready || judged.get(index).is_none_or(Option::is_some) {
+                continue;
+            }
+            let verdict = judge_designation(context, designation, criteria, &judged);
+            if let Some(place) = judged.get_mut(index) {
+                *place = Some(verdict);
+            }
+        }
+        if judged.iter().all(Option::is_some) {
+            break;
+        }
+    }
+    judged.into_iter().flatten().collect()
 }
 
-/// Designations never go round in circles (validation refuses that), so the recursion ends.
 fn judge_designation(
     context: Context,
     designation: &Designation,
     criteria: &[CriterionJudgement],
+    judged: &[Option<DesignationJudgement>],
 ) -> DesignationJudgement {
     if let Some(stated) = stated(context, designation) {
         return DesignationJudgement {
@@ -48,9 +68,8 @@ fn judge_designation(
                     criteria.get(index).map(|criterion| (criterion.verdict, criterion.closeness))?
                 }
                 DesignationPart::Designation(index) => {
-                    let other = context.rulebook.designations.get(index)?;
-                    let judged = judge_designation(context, other, criteria);
-                    (judged.verdict, judged.closeness)
+                    let other = judged.get(index)?.as_ref()?;
+                    (other.verdict, other.closeness)
                 }
             };
             Some((*part, verdict, closeness))

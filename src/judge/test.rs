@@ -1,7 +1,7 @@
 //! One test of a step: which value counts, how it stands to the limit, and what a clear by it could not stand against.
 
 use crate::evidence::{Evidence, Origin, Standing};
-use crate::judge::compare::{hold_against, outcome_of};
+use crate::judge::compare::{hold_against, outcome_of, reaches_within_one_sd};
 use crate::judge::{Answer, Carries, Closeness, Context, Stop, TestJudgement, TestOutcome, Used};
 use crate::quantity::{Interval, Outcome};
 use crate::rules::{Checked, Limit, Step, Subject, Test, Weight, WhenMissing};
@@ -11,8 +11,8 @@ use crate::substance::{Basis, Compartment, Completeness, DegradationKind, Degrad
 pub(crate) fn judge_test(context: Context, step: &Step, test: &Test) -> TestJudgement {
     let judged = match test.subject {
         Subject::Property(property) => judge_number(context, step, test, property),
-        Subject::ReadyBiodegradability => judge_ready(context, test),
-        Subject::InherentBiodegradability => judge_inherent(context, test),
+        Subject::ReadyBiodegradability => judge_ready(context, step, test),
+        Subject::InherentBiodegradability => judge_inherent(context, step, test),
         Subject::HazardStatements => judge_statements(context, test),
     };
     match (judged, test.missing) {
@@ -125,16 +125,19 @@ fn counted<'run>(
 ) -> impl Iterator<Item = (usize, &'run Evidence)> {
     let bases = test.bases.clone();
     let weight = step.weight;
-    let accepted = move |evidence: &Evidence| {
-        bases.contains(&evidence.basis)
-            && match (evidence.standing, weight) {
-                (Standing::Full, _) | (Standing::SupportingOnly, Weight::Supporting) => true,
-                (Standing::SupportingOnly, Weight::Concern | Weight::Screening | Weight::Definitive) => false,
-            }
-    };
+    let accepted =
+        move |evidence: &Evidence| bases.contains(&evidence.basis) && counts(evidence.standing, weight);
     let values = context.evidence.of(property);
     let best = values.iter().filter(|evidence| accepted(evidence)).map(|evidence| evidence.basis).min();
     values.iter().enumerate().filter(move |(_, evidence)| accepted(evidence) && Some(evidence.basis) == best)
+}
+
+/// Whether something of this standing counts in a step of this weight.
+fn counts(standing: Standing, weight: Weight) -> bool {
+    match (standing, weight) {
+        (Standing::Full, _) | (Standing::SupportingOnly, Weight::Supporting) => true,
+        (Standing::SupportingOnly, Weight::Concern | Weight::Screening | Weight::Definitive) => false,
+    }
 }
 
 /// Of several values of the best basis, the one that points to more concern for this test.
@@ -224,7 +227,7 @@ fn stops(context: Context, test: &Test, used: &[Used]) -> Vec<Stop> {
         let blocking = context.blocking(Subject::Property(evidence.property), derived_from(evidence));
         stops.extend(blocking.map(Stop::Caution));
         let modelled = matches!(evidence.basis, Basis::Calculated | Basis::Estimated);
-        if modelled && value.closeness == Closeness::CloseCall {
+        if modelled && reaches_within_one_sd(context, test, evidence, value.compared) {
             stops.push(Stop::WithinOneSd);
         }
         if let Origin::Relation { relation, low_side, .. } = &evidence.origin {
@@ -290,16 +293,21 @@ fn carried_by(basis: Basis) -> Carries {
     }
 }
 
-fn judge_ready(context: Context, test: &Test) -> Option<TestJudgement> {
+fn judge_ready(context: Context, step: &Step, test: &Test) -> Option<TestJudgement> {
     let Limit::Is(wanted) = test.limit else {
         return None;
     };
-    let entries = &context.substance.ready;
-    let accepted = |basis: Basis| test.bases.contains(&basis);
-    let best = entries.iter().map(|entry| entry.value.basis).filter(|basis| accepted(*basis)).min()?;
-    entries
+    let accepted: Vec<_> = context
+        .substance
+        .ready
         .iter()
         .enumerate()
+        .filter(|(_, entry)| test.bases.contains(&entry.value.basis))
+        .filter(|(_, entry)| counts(Standing::of_reliability(entry.value.reliability), step.weight))
+        .collect();
+    let best = accepted.iter().map(|(_, entry)| entry.value.basis).min()?;
+    accepted
+        .into_iter()
         .filter(|(_, entry)| entry.value.basis == best)
         .map(|(index, entry)| (ready_outcome(entry.value.result, wanted), std::cmp::Reverse(index)))
         .max()
@@ -317,7 +325,7 @@ fn ready_outcome(found: DegradationTest, wanted: DegradationTest) -> TestOutcome
 }
 
 /// An inherent test counts only if it followed the guideline and the level was reached, or missed, in time.
-fn judge_inherent(context: Context, test: &Test) -> Option<TestJudgement> {
+fn judge_inherent(context: Context, step: &Step, test: &Test) -> Option<TestJudgement> {
     let guideline = test.guideline.as_deref();
     context
         .substance
@@ -325,6 +333,7 @@ fn judge_inherent(context: Context, test: &Test) -> Option<TestJudgement> {
         .iter()
         .enumerate()
         .filter(|(_, entry)| test.bases.contains(&entry.value.basis))
+        .filter(|(_, entry)| counts(Standing::of_reliability(entry.value.reliability), step.weight))
         .filter(|(_, entry)| guideline.is_none_or(|wanted| entry.value.guideline.as_deref() == Some(wanted)))
         .filter_map(|(index, entry)| {
             let outcome = outcome_of(test, entry.value.degraded?);
@@ -343,7 +352,8 @@ fn judge_inherent(context: Context, test: &Test) -> Option<TestJudgement> {
         })
 }
 
-/// A filled cell that lacks the codes is clear; an empty cell says nothing.
+/// A filled cell that lacks the codes is clear; one that was not read to its end leaves it open; an empty cell says
+/// nothing.
 fn judge_statements(context: Context, test: &Test) -> Option<TestJudgement> {
     let Limit::AnyOfWords(codes) = &test.limit else {
         return None;

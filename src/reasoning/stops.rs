@@ -1,6 +1,6 @@
 //! What kept a clearing from standing, in words.
 
-use crate::judge::{CriterionJudgement, Stop, StoppedClear};
+use crate::judge::{CriterionJudgement, StepState, Stop, StoppedClear};
 use crate::quantity::format_number;
 use crate::reasoning::Told;
 use crate::reasoning::value::{listed, short_citation, telling_tests, test_brief, titles};
@@ -39,8 +39,13 @@ fn stop_phrase(told: Told, criterion: &Criterion, judged: &CriterionJudgement, s
             format!("this does not stand beside {}", guard_brief(told, criterion, judged, guard))
         }
         Stop::OpenGuard(guard) => {
-            let missing = guard_missing(criterion, judged, guard);
-            format!("{} could point the other way and is not known", listed(&missing))
+            let named = listed(&guard_missing(criterion, judged, guard));
+            match judged.steps.get(guard).map(|came_out| came_out.state) {
+                Some(StepState::Clear) => {
+                    format!("{named} is not sure enough to rule out that other data point the other way")
+                }
+                Some(_) | None => format!("{named} could point the other way and is not known"),
+            }
         }
         Stop::EarlierDoubt => "an earlier step had already left doubt".to_owned(),
     }

@@ -84,6 +84,12 @@ pub(crate) fn value_phrase(told: Told, used: &Used) -> String {
             "test temperature not stated, so up to {factor:.2} times longer at {} °C",
             format_number(to)
         )),
+        Some(Adjustment::LipidDoubtful { from, to }) => beside.push(format!(
+            "the lipid content of the fish, {}, may be a fraction or a percentage; {} at {} % lipid",
+            format_number(from),
+            format_interval(used.compared, unit),
+            format_number(to)
+        )),
         Some(Adjustment::Lipid { from, to }) => beside.push(format!(
             "fish with {} % lipid; {} at {} % lipid",
             format_number(from),
@@ -197,10 +203,8 @@ fn answer_clause(told: Told, test: &Test, outcome: TestOutcome, answer: &Answer)
             let cell =
                 told.substance.hazard_statements.as_ref().map(|statements| statements.cell.to_string());
             let unread = match outcome {
-                TestOutcome::Undecided | TestOutcome::Missing => {
-                    ", but name a hazard class without its category"
-                }
-                TestOutcome::Clear | TestOutcome::Fired => "",
+                TestOutcome::Undecided => ", but not all that the row says of its hazards was read",
+                TestOutcome::Missing | TestOutcome::Clear | TestOutcome::Fired => "",
             };
             let codes = limit_phrase(test);
             format!("the hazard statements in {} hold none of {codes}{unread}", cell.unwrap_or_default())
@@ -223,7 +227,12 @@ pub(crate) fn test_brief(told: Told, test: &Test, judged: &TestJudgement) -> Str
             format!("inherent test {}", reported.unwrap_or_default())
         }
         (Some(Answer::Statement(code)), _) => format!("{code} stated"),
-        (Some(Answer::NoStatement), _) => "no such hazard statement".to_owned(),
+        (Some(Answer::NoStatement), _) => match judged.outcome {
+            TestOutcome::Undecided => "hazard statements not read to the end".to_owned(),
+            TestOutcome::Missing | TestOutcome::Clear | TestOutcome::Fired => {
+                "no such hazard statement".to_owned()
+            }
+        },
         (None, Some(used)) => {
             let value = format_interval(used.compared, used.property.default_unit());
             let basis = evidence_of(told, used).map_or("", |evidence| basis_phrase(evidence.basis));

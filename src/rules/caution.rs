@@ -4,7 +4,7 @@ use std::collections::BTreeSet;
 
 use regex::Regex;
 
-use super::formula::is_inorganic;
+use super::formula::{holds_organic_carbon, is_inorganic};
 use crate::quantity::format_number;
 use crate::rules::Subject;
 use crate::substance::{Identity, Property, RowType, Substance, SubstanceType};
@@ -37,7 +37,7 @@ pub struct Triggers {
     pub identities: BTreeSet<Identity>,
     /// The name matches.
     pub name_pattern: Option<Regex>,
-    /// The name matches, but this one does not: an exception to `name_pattern`.
+    /// An exception to `name_pattern`; where inorganic formulas raise the caution, also to a stated type.
     pub unless_name: Option<Regex>,
     /// The formula holds no carbon, or is of a carbonate, cyanide, carbide and the like.
     pub inorganic_formula: bool,
@@ -79,6 +79,9 @@ impl Caution {
 
     fn stated_type(&self, substance: &Substance) -> Option<String> {
         let stated = substance.substance_type.as_ref()?;
+        if self.triggers.inorganic_formula && self.triggers.says_organic(substance) {
+            return None;
+        }
         self.triggers
             .substance_types
             .contains(&stated.value)
@@ -90,8 +93,18 @@ impl Triggers {
     fn name_reason(&self, substance: &Substance) -> Option<String> {
         let name = substance.name.as_ref()?.value.trim();
         let found = self.name_pattern.as_ref()?.find(name)?;
-        let excepted = self.unless_name.as_ref().is_some_and(|unless| unless.is_match(name));
-        (!excepted).then(|| format!("the name holds `{}`", found.as_str().trim()))
+        (!self.is_excepted(name)).then(|| format!("the name holds `{}`", found.as_str().trim()))
+    }
+
+    fn is_excepted(&self, name: &str) -> bool {
+        self.unless_name.as_ref().is_some_and(|unless| unless.is_match(name))
+    }
+
+    /// A type is a word that somebody chose; the formula or the name of an organic substance contradicts `inorganic`.
+    fn says_organic(&self, substance: &Substance) -> bool {
+        let by_formula = substance.formula.as_ref().is_some_and(|cited| holds_organic_carbon(&cited.value));
+        let by_name = substance.name.as_ref().is_some_and(|cited| self.is_excepted(&cited.value));
+        by_formula || by_name
     }
 
     fn formula_reason(&self, substance: &Substance) -> Option<String> {

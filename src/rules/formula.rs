@@ -57,6 +57,13 @@ pub(super) fn is_inorganic(formula: &str) -> bool {
     oxide || hydrogen_cyanide || carbide || carbonate || cyanide || (has_metal && holds_only_anions(&atoms))
 }
 
+/// A formula that can be read, holds carbon and is no inorganic one.
+pub(super) fn holds_organic_carbon(formula: &str) -> bool {
+    let plain = in_plain_letters(formula);
+    let holds_carbon = read_atoms(&plain).is_some_and(|atoms| atoms.iter().any(|(symbol, _)| *symbol == "C"));
+    holds_carbon && !is_perhaps_a_word(&plain) && !is_inorganic(formula)
+}
+
 /// Written by groups, as in `Cu2(OH)2CO3` or `K4[Fe(CN)6]`: every carbon is followed by three oxygens or a nitrogen.
 fn holds_only_anions(atoms: &[Atom<'_>]) -> bool {
     atoms.iter().enumerate().all(|(index, atom)| match *atom {

@@ -21,6 +21,8 @@ pub struct ReadyBiodegradability {
     pub result: DegradationTest,
     /// How it is said to be known.
     pub basis: Basis,
+    /// Reliability score, 1 to 4.
+    pub reliability: Option<u8>,
     /// The text as it stood in the cell.
     pub reported: String,
 }
@@ -36,6 +38,8 @@ pub struct InherentBiodegradability {
     pub days: Option<f64>,
     /// How it is said to be known.
     pub basis: Basis,
+    /// Reliability score, 1 to 4.
+    pub reliability: Option<u8>,
     /// The text as it stood in the cell.
     pub reported: String,
 }

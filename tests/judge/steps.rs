@@ -132,6 +132,7 @@ fn an_inherent_test_alone_decides_nothing_in_either_direction() {
                 degraded: Some(Interval::point(degraded).unwrap()),
                 days: Some(days),
                 basis: Basis::Measured,
+                reliability: None,
                 reported: format!("{degraded} % in {days} d"),
             },
             cell: CellRef { sheet: "Substances".into(), row: 6, column: 30 },

@@ -108,6 +108,7 @@ fn a_limit_from_memory_never_clears() {
             degraded: Some(Interval::point(95.0).unwrap()),
             days: Some(7.0),
             basis: Basis::Measured,
+            reliability: None,
             reported: "95 % in 7 d, OECD 302B".to_owned(),
         },
         cell: CellRef { sheet: "Substances".into(), row: 6, column: 30 },

@@ -97,7 +97,12 @@ impl Row {
 
     /// A word on ready biodegradability.
     pub fn ready(mut self, result: DegradationTest) -> Self {
-        let entry = ReadyBiodegradability { result, basis: Basis::Unstated, reported: format!("{result:?}") };
+        let entry = ReadyBiodegradability {
+            result,
+            basis: Basis::Unstated,
+            reliability: None,
+            reported: format!("{result:?}"),
+        };
         self.0.ready.push(cited(entry, 20));
         self
     }

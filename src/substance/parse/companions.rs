@@ -119,6 +119,12 @@ impl Companions {
         self.guidelines.iter().filter(named).map(|guideline| &guideline.value.said).collect()
     }
 
+    /// The reliability of a test that gives words, from its cell, else from a column that names no property.
+    pub(super) fn reliability_of_tests(&self, said: &Said) -> Option<u8> {
+        let of_row = || self.reliability.iter().find(|score| score.about.is_none());
+        said.conditions.reliability.or_else(|| of_row().map(|score| score.value))
+    }
+
     /// Fills in what the cell and its header left open.
     pub(super) fn complete(&self, property: Property, reading: &mut Reading) {
         let conditions = &mut reading.conditions;

@@ -33,11 +33,33 @@ static WINDOW: LazyLock<Regex> = LazyLock::new(|| {
         r"( (failed|passed|met|not met|nicht erfullt|erfullt|nicht eingehalten|eingehalten|criterion))*"
     ))
 });
+/// Nothing was found out, or not for good.
+static NO_RESULT: LazyLock<Regex> = LazyLock::new(|| {
+    fixed(concat!(
+        r"\b(no|not|keine?|nicht|ohne) (\w+ )?(data|information|results?|stud(y|ies)|tests?|tested|determined|conducted|performed|",
+        r"available|assessed|investigated|known|daten|angaben?|informationen|ergebnis\w*|pruf\w*|gepruft|getestet|bestimmt|",
+        r"untersucht|verfugbar|bekannt|bewertet)\b|",
+        r"\b(unknown|unbekannt|untested|ungepruft|inconclusive|planned|geplant|pending|unclear|unklar|to be \w+)\b"
+    ))
+});
+/// A result with a changed inoculum is none on ready biodegradability (OECD 301, inoculum).
+static ADAPTED: LazyLock<Regex> = LazyLock::new(|| {
+    fixed(
+        r"\b(after|with|nach|mit) (\w+ )?(adapt\w*|acclimat\w*|preadapt\w*|akklimat\w*|pre exposed)\b|\badapted\b|\badaptiert\w*",
+    )
+});
+/// Any word of denial: beside it a word for ready is not believed.
+static DENIAL: LazyLock<Regex> = LazyLock::new(|| {
+    fixed(
+        r"\b(no|not|non|never|neither|nor|cannot|without|unlikely|negative?|false|isn|doesn|nicht|kein\w*|nein|weder|ohne|negativ|falsch|kaum)\b",
+    )
+});
 pub(super) static NEGATIVE: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
-        r"\b(not|non|nicht) (\w+ )?(readily|ready|easily|leicht\w*|biodegrad\w*|biologisch abbaubar\w*|abbaubar\w*|",
-        r"bestanden|passed)\b|\bnonbiodegrad\w*\b|\bnot (bio)?degrad(able|ed)\b|\bfail(s|ed)?\b|\bschwer (biologisch )?",
-        r"abbaubar|\bpoorly (bio)?degrad|\bpersistent|^(no|nein|n|false|falsch|negative?|negativ)( \d.*| oecd.*)?$"
+        r"\b(not|non|no|cannot|isn t|unlikely|neither|nicht|keine?|weder) ((?:\w+ ){0,5}(?:readily|ready|easily|leicht\w*)\b|(?:\w+ )?(?:readily|ready|easily|leicht\w*|bio|biologisch\w*|biodegrad\w*|degrad\w*|",
+        r"abbaubar\w*|bestanden|passed|met|erfullt)\b)|\bnonbiodegrad\w*\b|\bnot (bio)?degrad\w*|\bfail\w*|\bschwer abbaubar|",
+        r"\bschwer biologisch|\bpoorly|\bpersistent|\b(bio)?degradation fails|^(no|nein|n|false|falsch|negative?|negativ|not|",
+        r"nicht)\b"
     ))
 });
 pub(super) static POSITIVE: LazyLock<Regex> = LazyLock::new(|| {
@@ -61,6 +83,9 @@ static O2_OR_CO2: LazyLock<Regex> = LazyLock::new(|| {
         r"\b(t?bod\d*|bsb\d*|th?co2|co2|thod|th o2|o2|oxygen|sauerstoff\w*|carbon dioxide|kohlendioxid|oecd 301 ?[bcdf]|301 ?[bcdf]|oecd 310|310)\b",
     )
 });
+/// Dissolved organic carbon has the higher pass level, whatever the guideline.
+static CARBON: LazyLock<Regex> =
+    LazyLock::new(|| fixed(r"\b(doc|toc|dissolved organic carbon|kohlenstoff\w*)\b"));
 static PERCENTAGE: LazyLock<Regex> = LazyLock::new(|| {
     fixed(
         r"(?:[<>≤≥~]=?\s*|ca\.?\s*)?\d+(?:[.,]\d+)?\s*(?:%?\s*(?:-|to|bis)\s*(?:[<>≤≥]=?\s*)?\d+(?:[.,]\d+)?\s*)?(?:%|percent|prozent)",
@@ -76,8 +101,8 @@ pub(super) struct ReadyCell {
 }
 
 impl ReadyCell {
-    pub(super) fn with_basis(self, basis: Basis) -> ReadyBiodegradability {
-        ReadyBiodegradability { result: self.result, basis, reported: self.reported }
+    pub(super) fn known_by(self, basis: Basis, reliability: Option<u8>) -> ReadyBiodegradability {
+        ReadyBiodegradability { result: self.result, basis, reliability, reported: self.reported }
     }
 }
 
@@ -110,7 +135,7 @@ pub(super) fn read_ready(
         let degraded = percentage_of_number(number)?;
         return plain_cell(result_of(degraded, None, Measure::Unnamed), text);
     }
-    let words = result_in_words(&text);
+    let words = result_in_words(&text)?;
     let numbers = result_in_numbers(&text, decimal);
     let speaks_of_inherent = INHERENT.is_match(&plain_words(&text));
     if speaks_of_inherent && words != Some(DegradationTest::NotReady) {
@@ -140,16 +165,29 @@ fn combined(
     }
 }
 
-fn result_in_words(text: &str) -> Option<DegradationTest> {
+fn result_in_words(text: &str) -> Read<DegradationTest> {
     let plain = plain_words(text);
     let without_window = WINDOW.replace_all(&plain, " ");
     let plain = without_window.trim();
-    if NEGATIVE.is_match(plain) {
-        Some(DegradationTest::NotReady)
-    } else {
-        (POSITIVE.is_match(plain) && !UNCERTAIN.is_match(plain)).then_some(DegradationTest::Ready)
+    let says_ready = POSITIVE.is_match(plain);
+    if NO_RESULT.is_match(plain) && !text.contains('%') {
+        return Err(NOT_READY_CELL);
     }
+    Ok(if NEGATIVE.is_match(plain) {
+        Some(DegradationTest::NotReady)
+    } else if says_ready && (DENIAL.is_match(plain) || ADAPTED.is_match(plain) || text.contains('?')) {
+        // `readily biodegradable: no` denies it; what else is denied, nobody knows.
+        Some(if DENIED_AT_THE_END.iter().any(|denial| plain.ends_with(denial)) {
+            DegradationTest::NotReady
+        } else {
+            DegradationTest::Open
+        })
+    } else {
+        (says_ready && !UNCERTAIN.is_match(plain)).then_some(DegradationTest::Ready)
+    })
 }
+
+const DENIED_AT_THE_END: [&str; 6] = [" no", " nein", " negative", " negativ", " false", " falsch"];
 
 /// Whether oxygen or carbon dioxide was measured.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
@@ -159,7 +197,12 @@ enum Measure {
 }
 
 fn result_in_numbers(text: &str, decimal: DecimalStyle) -> Option<DegradationTest> {
-    let measure = if O2_OR_CO2.is_match(&plain_words(text)) { Measure::O2OrCo2 } else { Measure::Unnamed };
+    let plain = plain_words(text);
+    let measure = if O2_OR_CO2.is_match(&plain) && !CARBON.is_match(&plain) {
+        Measure::O2OrCo2
+    } else {
+        Measure::Unnamed
+    };
     let days = days_in(text);
     let mut results =
         percentages(text, decimal).into_iter().map(|degraded| result_of(degraded, days, measure));

@@ -10,7 +10,10 @@ use super::{UnstatedBasis, degradability, inherent, kinds, statements};
 use crate::columns::Column;
 use crate::fault::{CellFault, CellFaultKind};
 use crate::quantity::Quantity;
-use crate::substance::{Basis, Cited, Conditions, Field, Property, Reading, RowType, Substance};
+use crate::substance::{
+    Basis, Cited, Compartment, Completeness, Conditions, Field, HazardStatements, Property, Reading, RowType,
+    Substance,
+};
 use crate::workbook::{Cell, CellContent, CellRef};
 
 /// A value whose basis and conditions still wait for the columns that speak of it.
@@ -35,6 +38,8 @@ pub(super) struct Draft {
     identity: IdentityCells,
     companions: Companions,
     values: Vec<AnyValue>,
+    /// Whether every cell of hazard statements was read; one that was not may hold any code.
+    statements: Completeness,
     molar_mass: Option<f64>,
 }
 
@@ -48,6 +53,7 @@ impl Draft {
             identity: IdentityCells::default(),
             companions: Companions::default(),
             values: Vec::new(),
+            statements: Completeness::Complete,
             molar_mass: None,
         }
     }
@@ -66,17 +72,19 @@ impl Draft {
             content => self.take_content(column, content, place.clone()),
         };
         if let Err(kind) = result {
-            let found = if kind == CellFaultKind::FormulaWithoutResult {
-                "=…".to_owned()
-            } else {
-                cell::shown(&cell.content)
-            };
-            self.substance.faults.push(CellFault { cell: place, found, kind });
+            if column.field == Field::HazardStatements {
+                self.statements = Completeness::Incomplete;
+            }
+            self.fault(&cell.content, place, kind);
         }
     }
 
     fn fault(&mut self, content: &CellContent, cell: CellRef, kind: CellFaultKind) {
-        let found = cell::shown(content);
+        let found = if kind == CellFaultKind::FormulaWithoutResult {
+            "=…".to_owned()
+        } else {
+            cell::shown(content)
+        };
         self.substance.faults.push(CellFault { cell, found, kind });
     }
 
@@ -254,6 +262,11 @@ impl Draft {
         for value in values {
             self.settle(value, &properties, unstated);
         }
+        if self.statements == Completeness::Incomplete
+            && let Some(cited) = &mut self.substance.hazard_statements
+        {
+            cited.value = cited.value.united(&HazardStatements::incomplete([]));
+        }
         self.identity.conclude(&mut self.substance);
         self.substance
     }
@@ -262,6 +275,13 @@ impl Draft {
         let substance = &mut self.substance;
         match value {
             AnyValue::Property(property, value) => {
+                let property = match (property, value.said.other_half_life) {
+                    // In air, light and hydroxyl radicals are how a substance degrades.
+                    (Property::HalfLife(compartment), Some(other)) if compartment != Compartment::Air => {
+                        other
+                    }
+                    (property, _) => property,
+                };
                 let speaking = self.companions.of_property(property, properties);
                 let mut reading = reading(value, &speaking, unstated);
                 self.companions.complete(property, &mut reading);
@@ -280,12 +300,18 @@ impl Draft {
                     &self.companions.of_tests(&["301", "310"]),
                     unstated,
                 );
-                substance.ready.push(Cited { value: value.value.with_basis(basis), cell: value.cell });
+                let reliability = self.companions.reliability_of_tests(&value.said);
+                substance
+                    .ready
+                    .push(Cited { value: value.value.known_by(basis, reliability), cell: value.cell });
             }
             AnyValue::Inherent(value) => {
                 let basis =
                     basis_of(&value.said, &value.header, &self.companions.of_tests(&["302"]), unstated);
-                substance.inherent.push(Cited { value: value.value.with_basis(basis), cell: value.cell });
+                let reliability = self.companions.reliability_of_tests(&value.said);
+                substance
+                    .inherent
+                    .push(Cited { value: value.value.known_by(basis, reliability), cell: value.cell });
             }
         }
     }
@@ -296,7 +322,7 @@ fn cited<T>(value: Option<T>, cell: CellRef) -> Option<Cited<T>> {
 }
 
 fn waiting<T>(column: &Column, value: T, said: Said, cell: &CellRef) -> Waiting<T> {
-    let header = Said { basis: column.basis, conditions: column.conditions.clone() };
+    let header = Said { basis: column.basis, conditions: column.conditions.clone(), other_half_life: None };
     Waiting { value, said, header, cell: cell.clone() }
 }
 

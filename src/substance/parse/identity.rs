@@ -240,8 +240,16 @@ fn looks_like_smiles(text: &str) -> bool {
         }
         before = character;
     }
-    !in_bracket && text.contains(|character: char| character.is_ascii_alphabetic())
+    // Aromatic atoms make rings, and a ring has its number: `no` and `con` are words.
+    let without_halogens = text.replace("Cl", "").replace("Br", "");
+    let aromatic = without_halogens.contains(|letter: char| letter.is_ascii_lowercase());
+    let has_digit = text.contains(|character: char| character.is_ascii_digit());
+    let is_word = !text.contains('[') && ((aromatic && !has_digit) || WORDS.contains(&text));
+    !in_bracket && !is_word && text.contains(|character: char| character.is_ascii_alphabetic())
 }
+
+/// Words in capitals that could be read as a structure.
+const WORDS: [&str; 6] = ["NO", "ON", "IN", "SO", "NON", "SI"];
 
 pub(super) fn read_inchi_key(content: &CellContent) -> Result<Option<String>, CellFaultKind> {
     let Some(text) = cell::value_text(content) else {

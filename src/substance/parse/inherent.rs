@@ -27,12 +27,13 @@ pub(super) struct InherentCell {
 }
 
 impl InherentCell {
-    pub(super) fn with_basis(self, basis: Basis) -> InherentBiodegradability {
+    pub(super) fn known_by(self, basis: Basis, reliability: Option<u8>) -> InherentBiodegradability {
         InherentBiodegradability {
             guideline: self.guideline,
             degraded: self.degraded,
             days: self.days,
             basis,
+            reliability,
             reported: self.reported,
         }
     }

@@ -16,6 +16,10 @@ const TYPE_WORDS: &[(&str, SubstanceType)] = &[
     ("multikonstituent", SubstanceType::MultiConstituent),
     ("mehrere bestandteile", SubstanceType::MultiConstituent),
     ("organometal", SubstanceType::Organometallic),
+    ("metal organic", SubstanceType::Organometallic),
+    ("organotin", SubstanceType::Organometallic),
+    ("organozinn", SubstanceType::Organometallic),
+    ("zinnorgan", SubstanceType::Organometallic),
     ("organo metal", SubstanceType::Organometallic),
     ("metallorganisch", SubstanceType::Organometallic),
     ("metalorganic", SubstanceType::Organometallic),
@@ -78,8 +82,11 @@ pub(super) fn read_substance_type(content: &CellContent) -> Result<Option<Substa
     let padded = format!(" {plain}");
     let found = TYPE_WORDS.iter().find(|(words, kind)| match kind {
         SubstanceType::OrganicSalt | SubstanceType::Organic => padded.contains(&format!(" {words}")),
-        SubstanceType::Inorganic
-        | SubstanceType::Organometallic
+        // A hybrid is organic as well, and so inside the instruments.
+        SubstanceType::Inorganic => {
+            plain.contains(words) && ![" organic", " organisch"].iter().any(|word| padded.contains(word))
+        }
+        SubstanceType::Organometallic
         | SubstanceType::Polymer
         | SubstanceType::Uvcb
         | SubstanceType::MultiConstituent

@@ -9,7 +9,7 @@ use regex::Regex;
 
 use super::pattern::fixed;
 use crate::quantity::{Unit, plain_words};
-use crate::substance::{Basis, Conditions, DegradationKind};
+use crate::substance::{Basis, Conditions, DegradationKind, Property};
 
 /// Basis and conditions as far as a text names them.
 #[derive(Debug, Clone, PartialEq, Default)]
@@ -18,19 +18,23 @@ pub(crate) struct Said {
     pub(crate) basis: Option<Basis>,
     /// Under which conditions.
     pub(crate) conditions: Conditions,
+    /// The half-life meant, where the words name another than that of degradation.
+    pub(crate) other_half_life: Option<Property>,
 }
 
 // These look at words folded by `plain_words`.
 static CALCULATED: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
-        r"\b(calc|calcd|calculat\w+|comput\w+|predict\w*|estimat\w*|est|qsars?|qspr|modell?ed|in silico|read across|",
-        r"extrapolat\w*|interpolat\w*|assum\w+|default|worst case|analogues?|berechn\w*|rechnerisch\w*|geschatzt\w*|",
-        r"geschaetzt\w*|schatz\w*|vorhergesagt\w*|modelliert\w*|angenommen\w*|analogie\w*)\b"
+        r"\b(calc|calcd|calculat\w+|comput\w+|predict\w*|estimat\w*|est|qsars?|qspr|model|models|modell\w*|modeling|",
+        r"in silico|read across|simul\w*|regression\w*|group contribution\w*|theor\w*|expected|presum\w*|probabl\w*|",
+        r"likely|expert (judge?ment|opinion|estimate)|expertenurteil|extrapolat\w*|interpolat\w*|assum\w+|default|",
+        r"worst case|analogues?|berechn\w*|rechnerisch\w*|kalkul\w*|(ab)?geschatzt\w*|(ab)?geschaetzt\w*|",
+        r"(ab)?schatz\w*|vorhergesagt\w*|vorhersag\w*|angenommen\w*|vermut\w*|voraussichtlich\w*|analogie\w*)\b"
     ))
 });
 static NOT_MEASURED: LazyLock<Regex> = LazyLock::new(|| {
     fixed(
-        r"\b(not|non|nicht|no|keine?) (measured|experiment\w*|gemessen\w*|experimentell\w*|messung|stud(y|ie)|test)\b",
+        r"\b(not|non|nicht|no|keine?|ohne|without|instead of|statt|anstatt) (\w+ ){0,2}(measured|experiment\w*|gemessen\w*|messung|messwert|stud(y|ie)|test|versuch|glp|oecd)\b",
     )
 });
 static MEASURED: LazyLock<Regex> = LazyLock::new(|| {
@@ -48,6 +52,23 @@ static GUIDELINE: LazyLock<Regex> = LazyLock::new(|| {
 });
 static ULTIMATE: LazyLock<Regex> =
     LazyLock::new(|| fixed(r"\b(ultimate|ultimativ\w*|mineralis\w*|mineraliz\w*|endabbau)\b"));
+/// A denial makes no degradation ultimate.
+static NOT_ULTIMATE: LazyLock<Regex> = LazyLock::new(|| {
+    fixed(concat!(
+        r"\b(no|not|non|without|incomplete|partial|little|low|nicht|keine?|ohne|geringe?|unvollstandige?|teilweise) ",
+        r"(\w+ )?(ultimate|ultimativ\w*|mineralis\w*|mineraliz\w*|endabbau)\b"
+    ))
+});
+/// Ways in which a substance goes that are not its degradation by organisms; the test guidelines by their titles.
+static DISSIPATION: LazyLock<Regex> =
+    LazyLock::new(|| fixed(r"\b(dissipat\w*|disappear\w*|verschwind\w*|volatili[sz]\w*|fluchtig\w*)\b"));
+static HYDROLYSIS: LazyLock<Regex> =
+    LazyLock::new(|| fixed(r"\b(hydrolys\w*|hydrolyt\w*|oecd (tg |no |test |guideline )?111)\b"));
+static PHOTOLYSIS: LazyLock<Regex> = LazyLock::new(|| {
+    fixed(
+        r"\b(photolys\w*|photolyt\w*|photodegrad\w*|photooxid\w*|photo ?abbau|oecd (tg |no |test |guideline )?316)\b",
+    )
+});
 static PRIMARY: LazyLock<Regex> = LazyLock::new(|| fixed(r"\b(primary|primar\w*|primaer\w*)\b"));
 static ORGANISM: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
@@ -106,6 +127,7 @@ impl Said {
             return;
         }
         let is_guideline = GUIDELINE.is_match(&plain);
+        self.other_half_life = self.other_half_life.or_else(|| other_half_life(&plain));
         let basis = basis_in(&plain);
         if basis.is_some() && self.basis != Some(Basis::Calculated) {
             self.basis = basis;
@@ -132,7 +154,9 @@ impl Said {
         let lipid =
             LIPID.captures(part).and_then(|found| decimal(found.get(1).or_else(|| found.get(2))?.as_str()));
         let reliability = RELIABILITY.captures(part).and_then(|found| found.get(1)?.as_str().parse().ok());
-        let degradation = match (ULTIMATE.is_match(plain), PRIMARY.is_match(plain)) {
+        // `mineralisation 12 %` is how far it went, not what the half-life is of.
+        let ultimate = ULTIMATE.is_match(plain) && !NOT_ULTIMATE.is_match(plain) && !part.contains('%');
+        let degradation = match (ultimate, PRIMARY.is_match(plain)) {
             (true, false) => DegradationKind::Ultimate,
             (false, true) => DegradationKind::Primary,
             (false, false) | (true, true) => DegradationKind::NotStated,
@@ -157,12 +181,23 @@ impl Said {
     }
 }
 
+fn other_half_life(plain: &str) -> Option<Property> {
+    if HYDROLYSIS.is_match(plain) {
+        Some(Property::HydrolysisHalfLife)
+    } else if PHOTOLYSIS.is_match(plain) {
+        Some(Property::PhotolysisHalfLife)
+    } else {
+        DISSIPATION.is_match(plain).then_some(Property::DissipationHalfLife)
+    }
+}
+
 /// How a folded text says that a value was obtained.
 pub(super) fn basis_in(plain: &str) -> Option<Basis> {
     if CALCULATED.is_match(plain) {
         return Some(Basis::Calculated);
     }
-    let measured = GUIDELINE.is_match(plain) || (MEASURED.is_match(plain) && !NOT_MEASURED.is_match(plain));
+    let named = GUIDELINE.is_match(plain) || MEASURED.is_match(plain);
+    let measured = named && !NOT_MEASURED.is_match(plain);
     measured.then_some(Basis::Measured)
 }
 
