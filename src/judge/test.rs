@@ -2,10 +2,11 @@
 
 use crate::evidence::{Evidence, Origin, Standing};
 use crate::judge::compare::{hold_against, outcome_of, reaches_within_one_sd};
-use crate::judge::{Answer, Carries, Closeness, Context, Stop, TestJudgement, TestOutcome, Used};
+use crate::judge::words::{judge_inherent, judge_ready, judge_statements};
+use crate::judge::{Carries, Closeness, Context, Stop, TestJudgement, TestOutcome, Used};
 use crate::quantity::{Interval, Outcome};
 use crate::rules::{Checked, Limit, Step, Subject, Test, Weight, WhenMissing};
-use crate::substance::{Basis, Compartment, Completeness, DegradationKind, DegradationTest, Property};
+use crate::substance::{Basis, Compartment, DegradationKind, Property};
 
 /// Judges one test of a step.
 pub(crate) fn judge_test(context: Context, step: &Step, test: &Test) -> TestJudgement {
@@ -32,8 +33,6 @@ fn without_value(outcome: TestOutcome) -> TestJudgement {
         stops: Vec::new(),
     }
 }
-
-// Numbers
 
 fn judge_number(context: Context, step: &Step, test: &Test, property: Property) -> Option<TestJudgement> {
     let mut used: Vec<Used> = match property {
@@ -133,7 +132,7 @@ fn counted<'run>(
 }
 
 /// Whether something of this standing counts in a step of this weight.
-fn counts(standing: Standing, weight: Weight) -> bool {
+pub(crate) fn counts(standing: Standing, weight: Weight) -> bool {
     match (standing, weight) {
         (Standing::Full, _) | (Standing::SupportingOnly, Weight::Supporting) => true,
         (Standing::SupportingOnly, Weight::Concern | Weight::Screening | Weight::Definitive) => false,
@@ -262,109 +261,4 @@ pub(crate) fn limit_stops(test: &Test) -> Vec<Stop> {
         Checked::Memory => vec![Stop::LimitFromMemory],
         Checked::Seen | Checked::SecondHand => Vec::new(),
     }
-}
-
-// Words
-
-fn in_words(
-    context: Context,
-    test: &Test,
-    outcome: TestOutcome,
-    answer: Answer,
-    carries: Carries,
-) -> TestJudgement {
-    let mut stops = limit_stops(test);
-    stops.extend(context.blocking(test.subject, None).map(Stop::Caution));
-    let carries = if test.checked == Checked::Memory { Carries::Screening } else { carries };
-    TestJudgement {
-        outcome,
-        used: Vec::new(),
-        answer: Some(answer),
-        closeness: Closeness::from_condition(outcome == TestOutcome::Undecided),
-        carries,
-        stops,
-    }
-}
-
-fn carried_by(basis: Basis) -> Carries {
-    match basis {
-        Basis::Measured => Carries::Definitive,
-        Basis::Unstated | Basis::Calculated | Basis::Estimated => Carries::Screening,
-    }
-}
-
-fn judge_ready(context: Context, step: &Step, test: &Test) -> Option<TestJudgement> {
-    let Limit::Is(wanted) = test.limit else {
-        return None;
-    };
-    let accepted: Vec<_> = context
-        .substance
-        .ready
-        .iter()
-        .enumerate()
-        .filter(|(_, entry)| test.bases.contains(&entry.value.basis))
-        .filter(|(_, entry)| counts(Standing::of_reliability(entry.value.reliability), step.weight))
-        .collect();
-    let best = accepted.iter().map(|(_, entry)| entry.value.basis).min()?;
-    accepted
-        .into_iter()
-        .filter(|(_, entry)| entry.value.basis == best)
-        .map(|(index, entry)| (ready_outcome(entry.value.result, wanted), std::cmp::Reverse(index)))
-        .max()
-        .map(|(outcome, std::cmp::Reverse(index))| {
-            in_words(context, test, outcome, Answer::Ready(index), carried_by(best))
-        })
-}
-
-fn ready_outcome(found: DegradationTest, wanted: DegradationTest) -> TestOutcome {
-    match found {
-        DegradationTest::Open => TestOutcome::Undecided,
-        DegradationTest::Ready | DegradationTest::NotReady if found == wanted => TestOutcome::Fired,
-        DegradationTest::Ready | DegradationTest::NotReady => TestOutcome::Clear,
-    }
-}
-
-/// An inherent test counts only if it followed the guideline and the level was reached, or missed, in time.
-fn judge_inherent(context: Context, step: &Step, test: &Test) -> Option<TestJudgement> {
-    let guideline = test.guideline.as_deref();
-    context
-        .substance
-        .inherent
-        .iter()
-        .enumerate()
-        .filter(|(_, entry)| test.bases.contains(&entry.value.basis))
-        .filter(|(_, entry)| counts(Standing::of_reliability(entry.value.reliability), step.weight))
-        .filter(|(_, entry)| guideline.is_none_or(|wanted| entry.value.guideline.as_deref() == Some(wanted)))
-        .filter_map(|(index, entry)| {
-            let outcome = outcome_of(test, entry.value.degraded?);
-            let in_time =
-                test.within.is_none_or(|within| entry.value.days.is_some_and(|days| days <= within));
-            let outcome = match (outcome, in_time) {
-                (Outcome::Clear, true) => TestOutcome::Clear,
-                (Outcome::Clear, false) | (Outcome::Undecided, _) => TestOutcome::Undecided,
-                (Outcome::Fired, _) => TestOutcome::Fired,
-            };
-            Some((outcome, std::cmp::Reverse(index), entry.value.basis))
-        })
-        .max()
-        .map(|(outcome, std::cmp::Reverse(index), basis)| {
-            in_words(context, test, outcome, Answer::Inherent(index), carried_by(basis))
-        })
-}
-
-/// A filled cell that lacks the codes is clear; one that was not read to its end leaves it open; an empty cell says
-/// nothing.
-fn judge_statements(context: Context, test: &Test) -> Option<TestJudgement> {
-    let Limit::AnyOfWords(codes) = &test.limit else {
-        return None;
-    };
-    let statements = &context.substance.hazard_statements.as_ref()?.value;
-    let found = codes.iter().find_map(|code| statements.find(code));
-    // The classification in force is itself what the instruments ask for, so a stated one counts in full.
-    let (outcome, answer, carries) = match (found, statements.completeness()) {
-        (Some(code), _) => (TestOutcome::Fired, Answer::Statement(code.to_owned()), Carries::Definitive),
-        (None, Completeness::Complete) => (TestOutcome::Clear, Answer::NoStatement, Carries::Screening),
-        (None, Completeness::Incomplete) => (TestOutcome::Undecided, Answer::NoStatement, Carries::Screening),
-    };
-    Some(in_words(context, test, outcome, answer, carries))
 }
