@@ -116,6 +116,15 @@ enum End {
     High,
 }
 
+impl End {
+    fn of(self, interval: Interval) -> Option<f64> {
+        match self {
+            Self::Low => interval.low().number(),
+            Self::High => interval.high().number(),
+        }
+    }
+}
+
 fn estimate(
     property: Property,
     end: End,
@@ -131,21 +140,26 @@ fn estimate(
         }
         End::Low => values.sort_by(|one, other| one.lower_value().total_cmp(&other.lower_value())),
     }
-    let (place, log_kow, estimate) = values.into_iter().enumerate().find_map(|(place, log_kow)| {
-        let entered = LogKow { interval: log_kow.interval, sd: log_kow.sd };
-        let estimate = relations.estimate(property, entered, ionisation(substance))?;
-        Some((place, log_kow, estimate))
-    })?;
+    let at = |interval, sd| relations.estimate(property, LogKow { interval, sd }, ionisation(substance));
+    let (place, log_kow, estimate) = values
+        .iter()
+        .enumerate()
+        .find_map(|(place, log_kow)| Some((place, *log_kow, at(log_kow.interval, log_kow.sd)?)))?;
     let relation = relations.relations.get(estimate.leading)?;
     let shift = if relation.molar { molar_shift(substance)? } else { 0.0 };
     let Origin::Cell(log_kow_cell) = &log_kow.origin else {
         return None;
     };
     let Estimate { leading, log_value, sd, others, low_side } = estimate;
-    // A log Kow of more concern that no relation takes leaves the estimate open on that side.
-    let (log_value, sd) = match place {
-        0 => (log_value, sd),
-        _ => (opened(property, log_value)?, None),
+    let (log_value, sd) = match values.get(..place) {
+        None | Some([]) => (log_value, sd),
+        Some(passed_over) => {
+            let bounds = passed_over.iter().map(|log_kow| {
+                let nearest = end.of(log_kow.interval)?;
+                at(Interval::point(nearest).ok()?, None)?.log_value.single()
+            });
+            (opened(end, property, log_value, bounds.collect())?, None)
+        }
     };
     Some(Evidence {
         property,
@@ -167,14 +181,21 @@ fn estimate(
     })
 }
 
-/// The estimate with its side of concern open, so that it may fire and never clears.
-fn opened(property: Property, log_value: Interval) -> Option<Interval> {
-    let opened = match property {
-        Property::Bcf => Interval::new(log_value.low(), Bound::Unbounded),
-        // Little sorption and a low effect concentration are of concern.
-        _ => Interval::new(Bound::Unbounded, log_value.high()),
+/// A log Kow of more concern that no relation takes, such as `> 5`, widens the estimate on its side of concern: to what a
+/// relation makes of the end that is known, or without bound where none does. It may then fire and does not clear.
+fn opened(end: End, property: Property, log_value: Interval, bounds: Option<Vec<f64>>) -> Option<Interval> {
+    let far = |pick: fn(f64, f64) -> f64, start: Option<f64>| match (&bounds, start) {
+        (Some(bounds), Some(start)) => Bound::Included(bounds.iter().copied().fold(start, pick)),
+        (None, _) | (_, None) => Bound::Unbounded,
     };
-    opened.ok()
+    match (property, end) {
+        // A high log Kow means a high BCF, but only up to the top of its curve.
+        (Property::Bcf, _) => Interval::new(log_value.low(), Bound::Unbounded).ok(),
+        // Low log Kow, little sorption; high log Kow, low effect concentrations: both are of concern downward.
+        (_, End::Low | End::High) => {
+            Interval::new(far(f64::min, log_value.low().number()), log_value.high()).ok()
+        }
+    }
 }
 
 /// log10 of the factor from mol/L to mg/L, where the row gives the molar mass.
