@@ -8,8 +8,12 @@ mod decimals;
 mod header;
 mod header_row;
 mod reading;
+mod second_header;
 mod words;
 
+pub use second_header::HeaderAgain;
+use second_header::HeaderWatch;
+pub(crate) use second_header::second_header_fault;
 pub use words::{BUILT_IN_COLUMN_WORDS, ColumnWords};
 
 use crate::quantity::{DecimalStyle, Unit};
@@ -54,6 +58,8 @@ pub struct Recognised {
     pub unknown: Vec<(u16, String)>,
     /// Doubled and doubtful columns and what to do about them, in words.
     pub remarks: Vec<String>,
+    /// Knows a header further down when it comes.
+    watch: HeaderWatch,
 }
 
 impl Recognised {
@@ -113,8 +119,13 @@ pub fn recognise(
     overrides: &[ColumnOverride],
 ) -> Option<Recognised> {
     let found = header_row::find(first_rows, words, overrides)?;
-    let data: Vec<&Row> = first_rows.iter().filter(|row| row.index > found.row).collect();
+    let header_row = found.row;
     let mut recognised = choice::choose(sheet, found, words);
+    let data: Vec<&Row> = first_rows
+        .iter()
+        .filter(|row| row.index > header_row)
+        .take_while(|row| recognised.header_again(row, words) != HeaderAgain::Other)
+        .collect();
     decimals::set_styles(sheet, &mut recognised, &data);
     Some(recognised)
 }

@@ -10,7 +10,7 @@ mod record;
 mod rulebooks;
 mod run_record;
 
-pub use added::{AddedColumns, added_columns, added_entries};
+pub use added::{AddedColumns, added_columns, added_entries, unscreened_entries};
 pub use cautions_of_use::CAUTIONS_OF_USE;
 pub use lines::{REASONING_COLUMNS, ReasoningMode, reasoning_entries};
 pub use record::{RECORD_FORMAT, record_entries, record_head};

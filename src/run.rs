@@ -6,6 +6,7 @@
 mod judged_row;
 mod output;
 mod plan;
+mod tables;
 
 use std::collections::BTreeMap;
 use std::path::PathBuf;
@@ -16,7 +17,7 @@ use rayon::iter::{IntoParallelIterator, ParallelIterator};
 pub use judged_row::JudgedRow;
 pub use plan::{RecognisedSheet, recognise_columns};
 
-use crate::columns::{BUILT_IN_COLUMN_WORDS, ColumnOverride};
+use crate::columns::{BUILT_IN_COLUMN_WORDS, ColumnOverride, ColumnWords};
 use crate::fault::{CellFault, FileFault, Refusal};
 use crate::judge::{Judge, Verdict};
 use crate::quantity::Date;
@@ -27,6 +28,7 @@ use crate::workbook::{Inventory, Overwrite, Row, open_inventory};
 use judged_row::judge_row;
 use output::Output;
 use plan::{Plan, SheetPlan};
+use tables::Tables;
 
 /// What a run is asked to do.
 #[derive(Debug, Clone)]
@@ -69,6 +71,9 @@ pub struct Summary {
     pub output: PathBuf,
     /// Rows that were screened.
     pub screened: usize,
+    /// Rows that were left aside below the header of another table: the sheet, the header's row as the user counts it,
+    /// and how many.
+    pub unscreened: Vec<(String, u32, usize)>,
     /// Sheets that were screened and sheets that were copied.
     pub sheets: (usize, usize),
     /// For each rulebook, its short name and how many headlines have each verdict; listed rows apart.
@@ -99,7 +104,7 @@ pub fn screen(settings: &ScreenSettings) -> Result<Summary, Refusal> {
     let pool = rayon::ThreadPoolBuilder::new().num_threads(settings.threads.unwrap_or(0)).build().map_err(
         |error| Refusal::Usage(format!("the threads could not be started ({error}); try --threads 1")),
     )?;
-    let bench = Bench { judge: Judge::new(&rules), reasoning: plan.reasoning, pool };
+    let bench = Bench { judge: Judge::new(&rules), words: &plan.words, reasoning: plan.reasoning, pool };
     for sheet in &plan.sheets {
         stream_sheet(&mut inventory, sheet, &bench, &mut output)?;
     }
@@ -116,6 +121,7 @@ fn load_rules(settings: &ScreenSettings) -> Result<RuleSet, Refusal> {
 /// Who judges rows, and on how many threads.
 struct Bench<'rules> {
     judge: Judge<'rules>,
+    words: &'rules ColumnWords,
     reasoning: ReasoningMode,
     pool: rayon::ThreadPool,
 }
@@ -165,10 +171,13 @@ fn judge_batches(
     bench: &Bench,
     to_write: &SyncSender<Batch<JudgedRow>>,
 ) {
+    let mut tables = Tables::default();
     for batch in rows {
         let judged = batch.map(|rows| {
-            let judged = rows.into_par_iter().map(|row| judge_row(row, sheet, bench.reasoning, &bench.judge));
-            bench.pool.install(|| judged.collect::<Vec<_>>())
+            bench.pool.install(|| {
+                let placed = tables.place(rows, sheet, bench.words).into_par_iter();
+                placed.map(|row| judge_row(row, sheet, bench.reasoning, &bench.judge)).collect::<Vec<_>>()
+            })
         });
         if to_write.send(judged).is_err() {
             return;

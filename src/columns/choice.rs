@@ -25,14 +25,6 @@ pub(super) fn choose(sheet: &str, found: Found, words: &ColumnWords) -> Recognis
             )
         })
         .collect();
-    remarks.extend(found.others_below.iter().map(|row| {
-        format!(
-            "{sheet}: row {} looks like a header, too, but the rows below it are read with the columns of row {}; \
-             give each table a sheet of its own",
-            row + 1,
-            found.row + 1
-        )
-    }));
     take_product_name(&mut cells, words);
     let doubled = doubled_fields(&cells);
     let mut taken: BTreeMap<Field, (u16, String)> = BTreeMap::new();
@@ -54,7 +46,10 @@ pub(super) fn choose(sheet: &str, found: Found, words: &ColumnWords) -> Recognis
                 remarks.push(doubled_remark(sheet, field, (*first, first_text), &cell));
                 unknown.push((cell.column, cell.text));
             }
-            _ => {
+            first => {
+                if let Some((first, first_text)) = first.filter(|_| is_number_of_registry(field)) {
+                    remarks.push(both_read_remark(sheet, field, (*first, first_text), &cell));
+                }
                 taken.entry(field).or_insert((cell.column, cell.text.clone()));
                 let (column, remark) = column(sheet, cell, field, words);
                 remarks.extend(remark);
@@ -79,7 +74,14 @@ pub(super) fn choose(sheet: &str, found: Found, words: &ColumnWords) -> Recognis
             column.about = about;
         }
     }
-    Recognised { header_row: found.row, first_data_row: found.row + 1, columns, unknown, remarks }
+    Recognised {
+        header_row: found.row,
+        first_data_row: found.row + 1,
+        columns,
+        unknown,
+        remarks,
+        watch: found.watch,
+    }
 }
 
 /// Where a second table begins: an identity repeated word by word, and right of it a property, too. Its values may be
@@ -118,17 +120,41 @@ fn doubled_fields(cells: &[HeaderCell]) -> BTreeSet<Field> {
     cells.iter().filter_map(HeaderCell::field).filter(|field| !seen.insert(*field)).collect()
 }
 
+/// Both of two such columns are read, because a row in which they differ does not say which substance it means.
+fn is_number_of_registry(field: Field) -> bool {
+    matches!(field, Field::CasNumber | Field::EcNumber)
+}
+
 /// Several values of a property are several readings; several companions speak of different ones.
 fn may_be_doubled(field: Field) -> bool {
-    matches!(
-        field,
-        Field::Property(_)
-            | Field::Reliability
-            | Field::Guideline
-            | Field::HalfLifeTemperature
-            | Field::HazardStatements
-            | Field::ReadyBiodegradability
-            | Field::InherentBiodegradability
+    is_number_of_registry(field)
+        || matches!(
+            field,
+            Field::Property(_)
+                | Field::Reliability
+                | Field::Guideline
+                | Field::HalfLifeTemperature
+                | Field::HazardStatements
+                | Field::ReadyBiodegradability
+                | Field::InherentBiodegradability
+        )
+}
+
+fn both_read_remark(sheet: &str, field: Field, first: (u16, &str), second: &HeaderCell) -> String {
+    let way_out = if first.1 == second.text {
+        "rename one of them to take one alone".to_owned()
+    } else {
+        let (first, second) = (one_line(first.1), one_line(&second.text));
+        format!("to take one alone: --column '{first}=ignore' or --column '{second}=ignore'")
+    };
+    format!(
+        "{sheet}: columns {} (`{}`) and {} (`{}`) both name {}; both are read, and a row in which they differ is not \
+         identified; {way_out}",
+        column_letters(first.0),
+        one_line(first.1),
+        column_letters(second.column),
+        one_line(&second.text),
+        field.id(),
     )
 }
 

@@ -4,6 +4,7 @@ use std::collections::BTreeSet;
 
 use super::ColumnOverride;
 use super::header::{Header, Named, header_words};
+use super::second_header::HeaderWatch;
 use super::words::ColumnWords;
 use crate::quantity::{is_missing, parse_unit, tidy};
 use crate::substance::Field;
@@ -52,8 +53,8 @@ pub(super) struct Found {
     pub(super) cells: Vec<HeaderCell>,
     /// Rows above it that could be a header, too.
     pub(super) others_above: Vec<u32>,
-    /// Rows below it that look like the header of another table.
-    pub(super) others_below: Vec<u32>,
+    /// Knows a header further down when it comes.
+    pub(super) watch: HeaderWatch,
 }
 
 /// The row with the most recognised headers, of several such the one with the most cells, then the first.
@@ -74,37 +75,27 @@ pub(super) fn find(first_rows: &[Row], words: &ColumnWords, overrides: &[ColumnO
         }
     }
     let (_, place, cells) = best?;
-    let others_below: Vec<u32> = first_rows
-        .iter()
-        .skip(place + 1)
-        .filter(|row| names_columns(&header_cells(texts_of(row), words, overrides)))
-        .map(|row| row.index)
-        .collect();
     let upper = first_rows.get(place)?;
     let below = first_rows.get(place + 1).filter(|row| row.index == upper.index + 1);
-    Some(match below.and_then(|row| Some((row, units_below(row)?))) {
-        Some((row, units)) => {
-            let joined = texts_of(upper).into_iter().map(|(column, text)| {
-                let unit = units.iter().find(|(place, _)| *place == column);
-                let joined = unit.map(|(_, unit)| with_unit(&text, unit));
-                (column, joined.unwrap_or(text))
-            });
-            Found {
-                row: row.index,
-                cells: header_cells(joined.collect(), words, overrides),
-                others_above,
-                others_below,
-            }
-        }
-        None => Found { row: upper.index, cells, others_above, others_below },
-    })
+    let Some((row, units)) = below.and_then(|row| Some((row, units_below(row)?))) else {
+        let watch = HeaderWatch::new(&[upper], overrides);
+        return Some(Found { row: upper.index, cells, others_above, watch });
+    };
+    let joined = texts_of(upper).into_iter().map(|(column, text)| {
+        let unit = units.iter().find(|(place, _)| *place == column);
+        let joined = unit.map(|(_, unit)| with_unit(&text, unit));
+        (column, joined.unwrap_or(text))
+    });
+    let watch = HeaderWatch::new(&[upper, row], overrides);
+    let cells = header_cells(joined.collect(), words, overrides);
+    Some(Found { row: row.index, cells, others_above, watch })
 }
 
 fn with_unit(name: &str, unit: &str) -> String {
     if unit.starts_with(['(', '[']) { format!("{name} {unit}") } else { format!("{name} [{unit}]") }
 }
 
-fn texts_of(row: &Row) -> Vec<(u16, String)> {
+pub(super) fn texts_of(row: &Row) -> Vec<(u16, String)> {
     row.cells.iter().filter_map(|cell| Some((cell.column, text_of(cell)?))).collect()
 }
 
@@ -120,7 +111,7 @@ fn text_of(cell: &Cell) -> Option<String> {
     }
 }
 
-fn header_cells(
+pub(super) fn header_cells(
     texts: Vec<(u16, String)>,
     words: &ColumnWords,
     overrides: &[ColumnOverride],
@@ -148,12 +139,7 @@ pub(super) fn is_for_name(told: &ColumnOverride, text: &str) -> bool {
     text.rsplit_once(" [").is_some_and(|(name, _)| header_words(name) == header_words(&told.header))
 }
 
-/// Whether a row among the data is a header of its own: an identity and something else, each named.
-fn names_columns(cells: &[HeaderCell]) -> bool {
-    is_inventory(cells) && cells.iter().filter(|cell| cell.field().is_some()).count() > 1
-}
-
-fn is_inventory(cells: &[HeaderCell]) -> bool {
+pub(super) fn is_inventory(cells: &[HeaderCell]) -> bool {
     let fields: BTreeSet<Field> = cells.iter().filter_map(HeaderCell::field).collect();
     // A product's name is the substance's where there is no other, see `choice`.
     let named = fields.iter().any(|field| matches!(field, Field::RowId | Field::Name | Field::Product));

@@ -114,6 +114,24 @@ pub enum CellFaultKind {
         /// `CAS numbers` or `EC numbers`.
         what: &'static str,
     },
+    /// A valid number in the column of the other kind of number.
+    NumberOfOtherKind {
+        /// What the column holds, `CAS number` or `EC number`.
+        what: &'static str,
+        /// What stands there, the other of the two.
+        found: &'static str,
+    },
+    /// A number beside a different one of the same kind in the same row.
+    OtherIdentity {
+        /// `CAS number` or `EC number`.
+        what: &'static str,
+        /// The other number.
+        number: String,
+        /// Where the other number stands.
+        other: CellRef,
+    },
+    /// The header of another table below the one that is screened.
+    SecondHeader,
     /// A row that describes a mixture.
     MixtureRow,
     /// A row that describes an article.
@@ -247,6 +265,22 @@ impl fmt::Display for CellFaultKind {
             Self::SeveralIdentities { what } => {
                 write!(formatter, "holds several {what}, so the row is not identified; write one a row")
             }
+            Self::NumberOfOtherKind { what, found } => write!(
+                formatter,
+                "is no {what} but {} {found}, which belongs in a column of its own; put it in one with the header \
+                 `{found}`",
+                if *found == "EC number" { "an" } else { "a" }
+            ),
+            Self::OtherIdentity { what, number, other } => write!(
+                formatter,
+                "is another {what} than `{number}` in {other}, so the row is not identified; correct one of them, or \
+                 give each substance a row of its own"
+            ),
+            Self::SecondHeader => write!(
+                formatter,
+                "begins the header of another table, whose columns may hold other things; the rows from here on are \
+                 not screened: put that table on a sheet of its own"
+            ),
             Self::MixtureRow => write!(
                 formatter,
                 "says that the row is a mixture; mixtures are screened by their components: give each a row of its own"

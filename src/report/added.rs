@@ -104,6 +104,14 @@ pub fn added_entries(told: Told, faults: &[CellFault]) -> Vec<Entry> {
     entries
 }
 
+/// The added cells of a row that is not screened: why, among the cautions.
+pub fn unscreened_entries(columns: &AddedColumns, why: &str) -> Vec<Entry> {
+    let cautions = columns.headers.len().saturating_sub(ASSESSOR.len() + 2);
+    let mut entries = vec![Entry::text("", Look::Text); cautions];
+    entries.push(Entry::text(format!("not screened: {why}"), Look::Aside));
+    entries
+}
+
 fn cautions_and_faults(told: Told, faults: &[CellFault]) -> String {
     let mut parts = Vec::new();
     let cautions = cautions_text(told);

@@ -38,6 +38,8 @@ pub struct SheetFacts {
     pub name: String,
     /// Rows that were screened.
     pub screened: usize,
+    /// The row of another table's header, counted from 0, and how many rows were left aside below it.
+    pub unscreened: Option<(u32, usize)>,
     /// What its columns hold; none where it was copied only.
     pub recognised: Option<Recognised>,
     /// Why it was copied only.
@@ -102,6 +104,10 @@ fn sheet_rows(sheet: &SheetFacts) -> Vec<Vec<Entry>> {
         return rows;
     };
     rows.push(pair("Rows screened", sheet.screened.to_string()));
+    if let Some((header, left)) = sheet.unscreened {
+        let why = format!("{left}; they stand below the header of another table in row {}", header + 1);
+        rows.push(pair("Rows not screened", why));
+    }
     rows.push(pair("Header in row", (recognised.header_row + 1).to_string()));
     for column in &recognised.columns {
         let unit = match (column.unit, column.field.default_unit()) {

@@ -1,21 +1,36 @@
 //! One row from cells to the cells, lines and counts that come out of it.
 
+use crate::columns::second_header_fault;
 use crate::evidence::gather_evidence;
 use crate::fault::CellFault;
 use crate::judge::{Judge, Judgement, TestOutcome, Verdict};
 use crate::reasoning::{Told, headline_verdict};
 use crate::report::{Entry, ReasoningMode, added_entries, reasoning_entries, record_entries};
 use crate::rules::RuleSet;
-use crate::run::plan::SheetPlan;
-use crate::workbook::{CellContent, Row};
+use crate::run::plan::{Screened, SheetPlan};
+use crate::run::tables::RowPlace;
+use crate::workbook::{Cell, CellContent, Row};
 
 /// A row with what is written for it.
 #[derive(Debug)]
 pub struct JudgedRow {
     /// The user's cells.
     pub(crate) row: Row,
-    /// What is added; none for rows above the data, blank rows and sheets that are only copied.
-    pub(crate) added: Option<Added>,
+    /// What is written beside them.
+    pub(crate) outcome: Outcome,
+}
+
+/// What became of a row.
+#[derive(Debug)]
+pub(crate) enum Outcome {
+    /// Nothing is added: rows above the data, blank rows, repeated headers and sheets that are only copied.
+    Copied,
+    /// It was screened.
+    Screened(Box<Added>),
+    /// It is the header of another table.
+    SecondHeader(CellFault),
+    /// It stands below the header of another table, in the row named here, counted from 0.
+    BelowSecondHeader(u32),
 }
 
 /// What is added for a screened row.
@@ -36,17 +51,38 @@ pub(crate) struct Added {
 }
 
 /// Takes one row its whole way.
-pub(crate) fn judge_row(row: Row, sheet: &SheetPlan, reasoning: ReasoningMode, judge: &Judge) -> JudgedRow {
+pub(crate) fn judge_row(
+    (row, place): (Row, RowPlace),
+    sheet: &SheetPlan,
+    reasoning: ReasoningMode,
+    judge: &Judge,
+) -> JudgedRow {
     let Some(screened) = &sheet.screened else {
-        return JudgedRow { row, added: None };
+        return JudgedRow { row, outcome: Outcome::Copied };
     };
-    let holds_data = row.index >= screened.recognised.first_data_row
-        && screened.recognised.columns.iter().any(|column| is_filled(&row, column.index));
-    if !holds_data {
-        return JudgedRow { row, added: None };
-    }
+    let outcome = match place {
+        RowPlace::InTable if holds_data(&row, screened) => {
+            Outcome::Screened(Box::new(screen_row(&row, screened, reasoning, judge)))
+        }
+        RowPlace::SecondHeader => {
+            second_header_fault(&sheet.name, &row).map_or(Outcome::Copied, Outcome::SecondHeader)
+        }
+        RowPlace::BelowSecondHeader(header) if row.cells.iter().any(is_filled) => {
+            Outcome::BelowSecondHeader(header)
+        }
+        RowPlace::InTable | RowPlace::RepeatedHeader | RowPlace::BelowSecondHeader(_) => Outcome::Copied,
+    };
+    JudgedRow { row, outcome }
+}
+
+fn holds_data(row: &Row, screened: &Screened) -> bool {
+    row.index >= screened.recognised.first_data_row
+        && screened.recognised.columns.iter().filter_map(|column| row.cell(column.index)).any(is_filled)
+}
+
+fn screen_row(row: &Row, screened: &Screened, reasoning: ReasoningMode, judge: &Judge) -> Added {
     let rules = judge.rules();
-    let substance = screened.reader.read(&row);
+    let substance = screened.reader.read(row);
     let evidence = gather_evidence(&substance, &rules.relations);
     let judgement = judge.judge(&substance, &evidence);
     let told = Told { substance: &substance, evidence: &evidence, rules, judgement: &judgement };
@@ -58,18 +94,18 @@ pub(crate) fn judge_row(row: Row, sheet: &SheetPlan, reasoning: ReasoningMode, j
         reached: reached(rules, &judgement),
         faults: Vec::new(),
     };
-    JudgedRow { row, added: Some(Added { faults: substance.faults, ..added }) }
+    Added { faults: substance.faults, ..added }
 }
 
-fn is_filled(row: &Row, column: u16) -> bool {
-    row.cell(column).is_some_and(|cell| match &cell.content {
+fn is_filled(cell: &Cell) -> bool {
+    match &cell.content {
         CellContent::Empty => cell.formula,
         CellContent::Text(text) => !text.trim().is_empty(),
         CellContent::Number(_)
         | CellContent::Boolean(_)
         | CellContent::DateTime(_)
         | CellContent::Error(_) => true,
-    })
+    }
 }
 
 /// Which tests found a value, in the order of the rule set; a criterion that took no steps reached none of its tests.

@@ -6,10 +6,10 @@ use crate::fault::{CellFault, FileFault, Refusal};
 use crate::judge::Verdict;
 use crate::report::{
     Entry, EntryContent, REASONING_COLUMNS, ReasoningMode, RunFacts, SheetFacts, Table, record_head,
-    rulebooks_table, run_record_table,
+    rulebooks_table, run_record_table, unscreened_entries,
 };
 use crate::rules::{RuleSet, Weight};
-use crate::run::judged_row::{Added, JudgedRow};
+use crate::run::judged_row::{Added, JudgedRow, Outcome};
 use crate::run::plan::{Plan, SheetPlan};
 use crate::run::{ScreenSettings, Summary};
 use crate::substance::UnstatedBasis;
@@ -27,6 +27,8 @@ pub(crate) struct Output {
     reasoning: Option<SheetWriter>,
     record: SheetWriter,
     screened: Vec<usize>,
+    /// For each sheet, the row of another table's header and how many rows were left aside below it.
+    unscreened: Vec<Option<(u32, usize)>>,
     headlines: Vec<(BTreeMap<Verdict, usize>, usize)>,
     reached: Vec<bool>,
     faults: Vec<CellFault>,
@@ -81,6 +83,7 @@ impl Output {
             reasoning,
             record,
             screened: vec![0; plan.sheets.len()],
+            unscreened: vec![None; plan.sheets.len()],
             headlines: vec![(BTreeMap::new(), 0); rules.rulebooks.len()],
             reached: Vec::new(),
             faults: Vec::new(),
@@ -107,16 +110,46 @@ impl Output {
                 self.workbook.write(id, index, column, &Value::Text(header), Look::Header)?;
             }
         }
-        if let Some(added) = row.added {
-            if let Some(count) = self.screened.get_mut(sheet.index) {
-                *count += 1;
+        let added = &screened.added;
+        match row.outcome {
+            Outcome::Copied => {}
+            Outcome::Screened(row) => {
+                if let Some(count) = self.screened.get_mut(sheet.index) {
+                    *count += 1;
+                }
+                self.write_added(id, index, screened.first_added, &row.entries)?;
+                self.count(*row)?;
             }
-            for (column, entry) in (screened.first_added..).zip(&added.entries) {
-                write_entry(&mut self.workbook, id, index, column, entry)?;
+            Outcome::SecondHeader(fault) => {
+                if let Some(unscreened) = self.unscreened.get_mut(sheet.index) {
+                    *unscreened = Some((index, 0));
+                }
+                let why = unscreened_entries(added, &fault.to_string());
+                self.write_added(id, index, screened.first_added, &why)?;
+                self.keep_faults(vec![fault]);
             }
-            self.count(added)?;
+            Outcome::BelowSecondHeader(header) => {
+                if let Some(Some((_, left))) = self.unscreened.get_mut(sheet.index) {
+                    *left += 1;
+                }
+                let why = format!("row {} is the header of another table", header + 1);
+                self.write_added(id, index, screened.first_added, &unscreened_entries(added, &why))?;
+            }
         }
         Ok(())
+    }
+
+    fn write_added(&mut self, id: SheetId, row: u32, first: u16, entries: &[Entry]) -> Result<(), Refusal> {
+        for (column, entry) in (first..).zip(entries) {
+            write_entry(&mut self.workbook, id, row, column, entry)?;
+        }
+        Ok(())
+    }
+
+    fn keep_faults(&mut self, faults: Vec<CellFault>) {
+        self.fault_total += faults.len();
+        let room = FAULTS_KEPT.saturating_sub(self.faults.len());
+        self.faults.extend(faults.into_iter().take(room));
     }
 
     fn count(&mut self, added: Added) -> Result<(), Refusal> {
@@ -136,9 +169,7 @@ impl Output {
         for (so_far, reached) in self.reached.iter_mut().zip(added.reached) {
             *so_far |= reached;
         }
-        self.fault_total += added.faults.len();
-        let room = FAULTS_KEPT.saturating_sub(self.faults.len());
-        self.faults.extend(added.faults.into_iter().take(room));
+        self.keep_faults(added.faults);
         Ok(())
     }
 
@@ -178,6 +209,12 @@ impl Output {
         Ok(Summary {
             output: settings.output.clone(),
             screened: self.screened.iter().sum(),
+            unscreened: plan
+                .sheets
+                .iter()
+                .zip(&self.unscreened)
+                .filter_map(|(sheet, left)| left.map(|(row, left)| (sheet.name.to_string(), row + 1, left)))
+                .collect(),
             sheets: (plan.sheets.len() - copied, copied),
             headlines: rules
                 .rulebooks
@@ -214,10 +251,11 @@ impl Output {
             sheets: plan
                 .sheets
                 .iter()
-                .zip(&self.screened)
-                .map(|(sheet, screened)| SheetFacts {
+                .zip(self.screened.iter().zip(&self.unscreened))
+                .map(|(sheet, (screened, unscreened))| SheetFacts {
                     name: sheet.name.to_string(),
                     screened: *screened,
+                    unscreened: *unscreened,
                     recognised: sheet.screened.as_ref().map(|screened| screened.recognised.clone()),
                     copied_because: sheet.copied_because.clone(),
                 })

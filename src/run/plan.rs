@@ -21,6 +21,8 @@ const LINES_IN_FULL: usize = 200_000;
 pub(crate) struct Plan {
     /// The sheets, in order.
     pub(crate) sheets: Vec<SheetPlan>,
+    /// What headers are recognised by.
+    pub(crate) words: ColumnWords,
     /// Which lines the Reasoning sheet holds.
     pub(crate) reasoning: ReasoningMode,
 }
@@ -71,7 +73,10 @@ pub fn recognise_columns(
     let names: Vec<Arc<str>> = inventory.sheets().iter().map(|sheet| sheet.name.clone()).collect();
     for (index, name) in names.iter().enumerate() {
         let first_rows = inventory.first_rows(index, ROWS_LOOKED_AT)?;
-        let recognised = recognise(name, &first_rows, &words, overrides);
+        let mut recognised = recognise(name, &first_rows, &words, overrides);
+        if let Some(recognised) = &mut recognised {
+            recognised.remark_on_second_header(name, &first_rows, &words);
+        }
         sheets.push(RecognisedSheet { name: name.to_string(), recognised });
     }
     let recognised: Vec<&Recognised> =
@@ -141,7 +146,7 @@ impl Plan {
             ReasoningChoice::Auto if lines <= LINES_IN_FULL => ReasoningMode::All,
             ReasoningChoice::Auto => ReasoningMode::Concern,
         };
-        Ok(Self { sheets, reasoning })
+        Ok(Self { sheets, words, reasoning })
     }
 }
 

@@ -175,9 +175,9 @@ fn columns_tells_what_was_found_and_what_was_not() {
       A   Name                              name                        named by `name`
       B   CAS No.                           cas-number                  named by `cas`
       C   log Kow                           log-kow                     named by `log kow`
-      D   CAS number                        not recognised
+      D   CAS number                        cas-number                  named by `cas`
       E   Colour                            not recognised
-      Substances: columns B (`CAS No.`) and D (`CAS number`) both name cas-number; B is taken; to take the other: --column 'CAS No.=ignore' --column 'CAS number=cas-number'
+      Substances: columns B (`CAS No.`) and D (`CAS number`) both name cas-number; both are read, and a row in which they differ is not identified; to take one alone: --column 'CAS No.=ignore' or --column 'CAS number=ignore'
     ");
     assert_eq!(place.files(), ["inventory.xlsx"]);
 }

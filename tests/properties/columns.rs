@@ -114,15 +114,28 @@ fn a_product_name_is_the_name_of_the_substance_only_where_no_other_column_is() {
 }
 
 #[test]
-fn of_doubled_identity_columns_the_first_is_taken_and_the_way_out_is_named() {
-    let recognised = columns_of(&[text_row(0, &["CAS", "Name", "CAS-Nr. (neu)"])]).unwrap();
+fn of_doubled_columns_the_first_is_taken_and_the_way_out_is_named() {
+    let recognised = columns_of(&[text_row(0, &["SMILES", "Name", "SMILES (neu)"])]).unwrap();
     assert_eq!(recognised.columns.len(), 2);
-    assert_eq!(recognised.unknown, [(2, "CAS-Nr. (neu)".to_owned())]);
+    assert_eq!(recognised.unknown, [(2, "SMILES (neu)".to_owned())]);
     assert_eq!(
         recognised.remarks,
         [
-            "Sheet: columns A (`CAS`) and C (`CAS-Nr. (neu)`) both name cas-number; A is taken; to take the other: \
-          --column 'CAS=ignore' --column 'CAS-Nr. (neu)=cas-number'"
+            "Sheet: columns A (`SMILES`) and C (`SMILES (neu)`) both name smiles; A is taken; to take the other: \
+          --column 'SMILES=ignore' --column 'SMILES (neu)=smiles'"
+        ]
+    );
+}
+
+#[test]
+fn of_doubled_columns_of_registry_numbers_both_are_read_and_the_way_out_is_named() {
+    let recognised = columns_of(&[text_row(0, &["CAS", "Name", "CAS-Nr. (neu)"])]).unwrap();
+    assert_eq!((recognised.columns.len(), recognised.unknown.len()), (3, 0));
+    assert_eq!(
+        recognised.remarks,
+        [
+            "Sheet: columns A (`CAS`) and C (`CAS-Nr. (neu)`) both name cas-number; both are read, and a row in which \
+             they differ is not identified; to take one alone: --column 'CAS=ignore' or --column 'CAS-Nr. (neu)=ignore'"
         ]
     );
 }

@@ -160,3 +160,92 @@ fn a_row_number_is_kept_as_shown() {
     let substance = read_cells(&["No.", "CAS"], &[CellContent::Number(17.0), CellContent::Empty]).unwrap();
     assert_eq!(substance.row_id.map(|id| id.value).as_deref(), Some("17"));
 }
+
+#[test]
+fn numbers_of_two_columns_must_agree_and_the_filled_one_counts_where_one_is_empty() {
+    for (headers, one, other, kind) in [
+        (["CAS", "CAS-Nr. (neu)"], "50-29-3", "108-95-2", "CAS number"),
+        (["EC number", "EG-Nr."], "200-024-3", "200-001-8", "EC number"),
+    ] {
+        let read = |cells: [&str; 2]| read_last(&[&headers, &cells]).unwrap();
+        let number = |substance: &Substance| {
+            let cas = substance.cas.as_ref().map(|cas| cas.value.to_string());
+            cas.or(substance.ec.as_ref().map(|ec| ec.value.to_string()))
+        };
+        let differing = read([one, other]);
+        assert_eq!((differing.identity, number(&differing)), (Identity::NotIdentified, None));
+        assert_eq!(
+            faults(&differing),
+            [format!(
+                "Sheet!B2: `{other}` is another {kind} than `{one}` in Sheet!A2, so the row is not identified; correct \
+                 one of them, or give each substance a row of its own"
+            )]
+        );
+        for cells in [[one, one], [one, ""], ["", one], [one, "n.a."], ["n.a.", one]] {
+            let substance = read(cells);
+            assert_eq!(
+                (substance.identity, number(&substance).as_deref()),
+                (Identity::Identified, Some(one))
+            );
+            assert!(substance.faults.is_empty(), "{cells:?}");
+        }
+    }
+}
+
+#[test]
+fn of_two_columns_a_faulty_number_leaves_the_valid_one_and_a_written_one_confirms_a_date() {
+    let read = |cells: [&str; 2]| read_last(&[&["CAS", "CAS-Nr. (neu)"], &cells]).unwrap();
+    let substance = read(["50-29-4", "50-29-3"]);
+    assert_eq!((substance.identity, substance.faults.len()), (Identity::Identified, 1));
+    assert_eq!(read(["1975-05-08", ""]).identity, Identity::RepairedDate);
+    for cells in [["1975-05-08", "75-05-8"], ["75-05-8", "1975-05-08"]] {
+        assert_eq!(read(cells).identity, Identity::Identified, "{cells:?}");
+    }
+    assert_eq!(read(["1975-05-08", "50-29-3"]).identity, Identity::NotIdentified);
+}
+
+#[test]
+fn an_ec_number_in_the_cas_column_is_told_and_names_the_row_where_nothing_else_does() {
+    let substance = row("203-441-9", "", "").unwrap();
+    assert_eq!(
+        faults(&substance),
+        [
+            "Sheet!B2: `203-441-9` is no CAS number but an EC number, which belongs in a column of its own; put it in one \
+          with the header `EC number`"
+        ]
+    );
+    assert_eq!((substance.identity, substance.cas.is_none()), (Identity::Identified, true));
+    assert_eq!(substance.ec.unwrap().value.to_string(), "203-441-9");
+    let beside = row("203-441-9", "", "CCO").unwrap();
+    assert_eq!((beside.identity, beside.ec.is_none()), (Identity::Identified, true));
+    let wrong = row("203-441-8", "", "").unwrap();
+    assert_eq!((wrong.identity, wrong.ec.is_none()), (Identity::NameAlone, true));
+}
+
+#[test]
+fn a_cas_number_in_the_ec_column_is_told_and_names_the_row_where_nothing_else_does() {
+    let substance = row("", "50-29-3", "").unwrap();
+    assert_eq!(
+        faults(&substance),
+        [
+            "Sheet!C2: `50-29-3` is no EC number but a CAS number, which belongs in a column of its own; put it in one \
+          with the header `CAS number`"
+        ]
+    );
+    assert_eq!((substance.identity, substance.ec.is_none()), (Identity::Identified, true));
+    assert_eq!(substance.cas.unwrap().value.to_string(), "50-29-3");
+    let swapped = row("200-024-3", "50-29-3", "").unwrap();
+    assert_eq!((swapped.identity, swapped.faults.len()), (Identity::Identified, 2));
+    assert_eq!(swapped.cas.unwrap().value.to_string(), "50-29-3");
+    assert_eq!(swapped.ec.unwrap().value.to_string(), "200-024-3");
+}
+
+#[test]
+fn a_number_in_the_wrong_column_that_contradicts_its_own_identifies_nothing() {
+    let agreeing = row("200-024-3", "200-024-3", "").unwrap();
+    assert_eq!((agreeing.identity, agreeing.faults.len()), (Identity::Identified, 1));
+    let differing = row("203-441-9", "200-024-3", "").unwrap();
+    assert_eq!((differing.identity, differing.ec.is_none()), (Identity::NotIdentified, true));
+    assert!(faults(&differing)[1].contains("is another EC number than `200-024-3` in Sheet!C2"));
+    assert_eq!(row("50-29-3", "108-95-2", "").unwrap().identity, Identity::NotIdentified);
+}

@@ -24,7 +24,11 @@ impl Console {
     /// What came out of a run.
     pub(crate) fn summary(&self, summary: &Summary) {
         show_faults(summary);
+        let remarks: Vec<String> =
+            summary.column_remarks.iter().map(|remark| format!("Columns of {remark}")).collect();
         if self.quiet {
+            // A remark may mean that data were left aside.
+            print_error(&remarks);
             return;
         }
         let mut lines = vec![format!(
@@ -45,7 +49,7 @@ impl Console {
             }
             format!("  {short}: {}", parts.join(", "))
         }));
-        lines.extend(summary.column_remarks.iter().map(|remark| format!("Columns of {remark}")));
+        lines.extend(remarks);
         if !summary.unreached.is_empty() {
             lines.push(format!("No row had a value for: {}.", summary.unreached.join("; ")));
         }
@@ -73,6 +77,12 @@ fn show_faults(summary: &Summary) {
             count(summary.fault_total, "cell", "cells")
         ));
     }
+    lines.extend(summary.unscreened.iter().map(|(sheet, header, left)| {
+        format!(
+            "{sheet}: {} not screened, below the header of another table in row {header}.",
+            count(*left, "row was", "rows were")
+        )
+    }));
     print_error(&lines);
 }
 

@@ -1,15 +1,16 @@
 //! Which substance a row means, and how sure that is.
 
+use std::fmt::Display;
 use std::sync::LazyLock;
 
 use regex::Regex;
 
 use super::cell;
 use super::pattern::fixed;
-use crate::fault::CellFaultKind;
+use crate::fault::{CellFault, CellFaultKind};
 use crate::quantity::{Date, is_missing, tidy};
 use crate::substance::{
-    CasError, CasNumber, Cited, EcError, EcNumber, Identity, RowType, Substance, SubstanceType,
+    CasError, CasNumber, Cited, EcError, EcNumber, Field, Identity, RowType, Substance, SubstanceType,
 };
 use crate::workbook::{CellContent, CellRef};
 
@@ -20,14 +21,26 @@ static POINT_DATE: LazyLock<Regex> = LazyLock::new(|| fixed(r"^(\d{1,2})\.(\d{1,
 static INCHI_KEY: LazyLock<Regex> = LazyLock::new(|| fixed(r"^(?:InChIKey=)?([A-Z]{14}-[A-Z]{10}-[A-Z])$"));
 
 /// How the number columns of a row were read.
+#[derive(Debug, Clone, PartialEq, Default)]
+pub(super) struct IdentityCells {
+    reading: NumberReading,
+    /// The CAS column and the EC column, where two cells of the row disagree.
+    contradicted: Vec<Field>,
+    /// A CAS number that stands in an EC column.
+    misplaced_cas: Option<Cited<CasNumber>>,
+    /// An EC number that stands in a CAS column.
+    misplaced_ec: Option<Cited<EcNumber>>,
+}
+
+/// How sure the numbers of a row are.
 #[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord, Default)]
-pub(super) enum IdentityCells {
+enum NumberReading {
     /// As they stand.
     #[default]
     AsWritten,
     /// The CAS number from a date.
     FromDate,
-    /// A cell holds several numbers.
+    /// A cell holds several numbers, or two cells disagree.
     Several,
 }
 
@@ -36,10 +49,18 @@ enum CasCell {
     Missing,
     Number(CasNumber),
     FromDate(CasNumber),
+    Misplaced(EcNumber),
+}
+
+/// What an EC cell holds.
+enum EcCell {
+    Missing,
+    Number(EcNumber),
+    Misplaced(CasNumber),
 }
 
 impl IdentityCells {
-    /// Takes a cell of the CAS column.
+    /// Takes a cell of a CAS column.
     pub(super) fn take_cas(
         &mut self,
         substance: &mut Substance,
@@ -48,34 +69,80 @@ impl IdentityCells {
     ) -> Result<(), CellFaultKind> {
         let (value, how) = match read_cas(content).inspect_err(|fault| self.note_several(fault))? {
             CasCell::Missing => return Ok(()),
-            CasCell::Number(number) => (number, Self::AsWritten),
-            CasCell::FromDate(number) => (number, Self::FromDate),
+            CasCell::Number(number) => (number, NumberReading::AsWritten),
+            CasCell::FromDate(number) => (number, NumberReading::FromDate),
+            CasCell::Misplaced(value) => {
+                self.misplaced_ec.get_or_insert(Cited { value, cell });
+                return Err(CellFaultKind::NumberOfOtherKind { what: CAS_NUMBER, found: EC_NUMBER });
+            }
         };
-        *self = (*self).max(how);
-        substance.cas = Some(Cited { value, cell });
+        match &substance.cas {
+            None => {
+                self.reading = self.reading.max(how);
+                substance.cas = Some(Cited { value, cell });
+            }
+            Some(other) if other.value != value => {
+                return Err(self.contradiction(Field::CasNumber, CAS_NUMBER, other));
+            }
+            // A number as written confirms the one from a date.
+            Some(_) if self.reading == NumberReading::FromDate => self.reading = how,
+            Some(_) => {}
+        }
         Ok(())
     }
 
-    /// Takes a cell of the EC column.
+    /// Takes a cell of an EC column.
     pub(super) fn take_ec(
         &mut self,
         substance: &mut Substance,
         content: &CellContent,
         cell: CellRef,
     ) -> Result<(), CellFaultKind> {
-        let read = read_ec(content).inspect_err(|fault| self.note_several(fault))?;
-        substance.ec = read.map(|value| Cited { value, cell });
+        let value = match read_ec(content).inspect_err(|fault| self.note_several(fault))? {
+            EcCell::Missing => return Ok(()),
+            EcCell::Number(number) => number,
+            EcCell::Misplaced(value) => {
+                self.misplaced_cas.get_or_insert(Cited { value, cell });
+                return Err(CellFaultKind::NumberOfOtherKind { what: EC_NUMBER, found: CAS_NUMBER });
+            }
+        };
+        match &substance.ec {
+            None => substance.ec = Some(Cited { value, cell }),
+            Some(other) if other.value != value => {
+                return Err(self.contradiction(Field::EcNumber, EC_NUMBER, other));
+            }
+            Some(_) => {}
+        }
         Ok(())
     }
 
     fn note_several(&mut self, fault: &CellFaultKind) {
         if matches!(fault, CellFaultKind::SeveralIdentities { .. }) {
-            *self = Self::Several;
+            self.reading = NumberReading::Several;
         }
     }
 
+    fn contradiction<T: Display>(
+        &mut self,
+        field: Field,
+        what: &'static str,
+        other: &Cited<T>,
+    ) -> CellFaultKind {
+        self.reading = NumberReading::Several;
+        self.contradicted.push(field);
+        let (number, other) = (other.value.to_string(), other.cell.clone());
+        CellFaultKind::OtherIdentity { what, number, other }
+    }
+
     /// Sets how sure the identity of the row is.
-    pub(super) fn conclude(self, substance: &mut Substance) {
+    pub(super) fn conclude(mut self, substance: &mut Substance) {
+        self.place_misplaced(substance);
+        if self.contradicted.contains(&Field::CasNumber) {
+            substance.cas = None;
+        }
+        if self.contradicted.contains(&Field::EcNumber) {
+            substance.ec = None;
+        }
         let is_mixture = match substance.row_type {
             RowType::Mixture | RowType::Article => true,
             RowType::Substance => false,
@@ -85,15 +152,48 @@ impl IdentityCells {
         };
         let second_identifier =
             substance.ec.is_some() || substance.smiles.is_some() || substance.inchi_key.is_some();
-        substance.identity = match self {
-            Self::Several => Identity::NotIdentified,
-            Self::AsWritten | Self::FromDate if is_mixture => Identity::NotIdentified,
-            Self::AsWritten | Self::FromDate if second_identifier => Identity::Identified,
-            Self::AsWritten if substance.cas.is_some() => Identity::Identified,
-            Self::FromDate => Identity::RepairedDate,
-            Self::AsWritten => Identity::NameAlone,
+        substance.identity = match self.reading {
+            NumberReading::Several => Identity::NotIdentified,
+            NumberReading::AsWritten | NumberReading::FromDate if is_mixture => Identity::NotIdentified,
+            NumberReading::AsWritten | NumberReading::FromDate if second_identifier => Identity::Identified,
+            NumberReading::AsWritten if substance.cas.is_some() => Identity::Identified,
+            NumberReading::FromDate => Identity::RepairedDate,
+            NumberReading::AsWritten => Identity::NameAlone,
         };
     }
+
+    /// A number in the other number's column names the row where nothing else does, and must not contradict one in
+    /// its own column.
+    fn place_misplaced(&mut self, substance: &mut Substance) {
+        let (cas, ec) = (self.misplaced_cas.take(), self.misplaced_ec.take());
+        if let Some((own, found)) = substance.cas.as_ref().zip(cas.as_ref())
+            && own.value != found.value
+        {
+            let kind = self.contradiction(Field::CasNumber, CAS_NUMBER, own);
+            substance.faults.push(fault_at(found, kind));
+        }
+        if let Some((own, found)) = substance.ec.as_ref().zip(ec.as_ref())
+            && own.value != found.value
+        {
+            let kind = self.contradiction(Field::EcNumber, EC_NUMBER, own);
+            substance.faults.push(fault_at(found, kind));
+        }
+        let named = substance.cas.is_some()
+            || substance.ec.is_some()
+            || substance.smiles.is_some()
+            || substance.inchi_key.is_some();
+        if !named {
+            substance.cas = cas;
+            substance.ec = ec;
+        }
+    }
+}
+
+const CAS_NUMBER: &str = "CAS number";
+const EC_NUMBER: &str = "EC number";
+
+fn fault_at<T: Display>(found: &Cited<T>, kind: CellFaultKind) -> CellFault {
+    CellFault { cell: found.cell.clone(), found: found.value.to_string(), kind }
 }
 
 fn read_cas(content: &CellContent) -> Result<CasCell, CellFaultKind> {
@@ -112,10 +212,27 @@ fn read_cas(content: &CellContent) -> Result<CasCell, CellFaultKind> {
         CAS.find_iter(&text).map(|number| number.as_str().replace(' ', "")).collect();
     found.dedup();
     match found.as_slice() {
-        [] => read_cas_digits(&text),
+        [] => match ec_alone(&text) {
+            Some(number) => Ok(CasCell::Misplaced(number)),
+            None => read_cas_digits(&text),
+        },
         [number] => CasNumber::parse(number).map(CasCell::Number).map_err(|error| cas_fault(number, error)),
         [_, _, ..] => Err(CellFaultKind::SeveralIdentities { what: "CAS numbers" }),
     }
+}
+
+/// The one EC number of a text, if its check digit is right.
+fn ec_alone(text: &str) -> Option<EcNumber> {
+    let mut found = EC.find_iter(text);
+    let number = found.next().filter(|_| found.next().is_none())?;
+    EcNumber::parse(&number.as_str().replace(' ', "")).ok()
+}
+
+/// The one CAS number of a text, if its check digit is right.
+fn cas_alone(text: &str) -> Option<CasNumber> {
+    let mut found = CAS.find_iter(text);
+    let number = found.next().filter(|_| found.next().is_none())?;
+    CasNumber::parse(&number.as_str().replace(' ', "")).ok()
 }
 
 /// A number whose hyphens are lost, as 50293.
@@ -172,26 +289,31 @@ fn from_date(year: i64, month: i64, day: i64) -> Result<CasCell, CellFaultKind> 
         .ok_or(CellFaultKind::DateIsNoCas)
 }
 
-fn read_ec(content: &CellContent) -> Result<Option<EcNumber>, CellFaultKind> {
+fn read_ec(content: &CellContent) -> Result<EcCell, CellFaultKind> {
+    let not_a = CellFaultKind::NotA { what: EC_NUMBER, example: "200-024-3" };
     if matches!(content, CellContent::DateTime(_)) {
-        return Err(CellFaultKind::NotA { what: "EC number", example: "200-024-3" });
+        return Err(not_a);
     }
     let Some(text) = cell::value_text(content) else {
-        return Ok(None);
+        return Ok(EcCell::Missing);
     };
     let mut found: Vec<String> =
         EC.find_iter(&text).map(|number| number.as_str().replace(' ', "").to_uppercase()).collect();
     found.dedup();
     let number = match found.as_slice() {
-        [] => ec_from_digits(&text).ok_or(CellFaultKind::NotA { what: "EC number", example: "200-024-3" })?,
+        [] => match (cas_alone(&text), ec_from_digits(&text)) {
+            (Some(number), _) => return Ok(EcCell::Misplaced(number)),
+            (None, Some(number)) => number,
+            (None, None) => return Err(not_a),
+        },
         [number] => number.clone(),
         [_, _, ..] => return Err(CellFaultKind::SeveralIdentities { what: "EC numbers" }),
     };
-    EcNumber::parse(&number).map(Some).map_err(|error| match error {
-        EcError::Form => CellFaultKind::NotA { what: "EC number", example: "200-024-3" },
+    EcNumber::parse(&number).map(EcCell::Number).map_err(|error| match error {
+        EcError::Form => not_a,
         EcError::NoSuchNumber => CellFaultKind::NoSuchEcNumber,
         EcError::CheckDigit { expected } => CellFaultKind::CheckDigit {
-            what: "EC number",
+            what: EC_NUMBER,
             expected,
             corrected: with_last_digit(&number, expected),
         },
