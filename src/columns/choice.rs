@@ -240,7 +240,10 @@ fn column(sheet: &str, cell: HeaderCell, field: Field, words: &ColumnWords) -> (
         matches!(field, Field::Property(_) | Field::ReadyBiodegradability | Field::InherentBiodegradability);
     let said = if has_conditions { Said::in_header(&tidy(&text)) } else { Said::default() };
     let about = is_companion(field).then(|| header.as_ref()?.property_beside(words)).flatten();
-    let reason = reason(&meaning, unit.map(crate::quantity::Unit::symbol), dimension);
+    let mut reason = reason(&meaning, unit.map(crate::quantity::Unit::symbol), dimension);
+    if let Some(basis) = said.basis {
+        let _ = write!(reason, "; values are taken as {}", basis.word());
+    }
     let column = Column {
         index: column,
         header: text,

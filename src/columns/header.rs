@@ -17,6 +17,8 @@ pub(super) struct Header {
     pub(super) brackets: Vec<String>,
     pub(super) words: Vec<String>,
     pub(super) bracket_words: Vec<String>,
+    /// The words and those in brackets as a reader knows them, umlauts kept.
+    shown: [Vec<String>; 2],
 }
 
 /// A field and the words that named it.
@@ -28,12 +30,13 @@ pub(super) struct Named {
 
 /// The words of a text as headers are compared: folded, umlauts written as `ae` the same as `ä`.
 pub(super) fn header_words(text: &str) -> Vec<String> {
+    let umlauts = |word: String| word.replace("ae", "a").replace("oe", "o").replace("ue", "u");
+    shown_words(text).into_iter().map(umlauts).collect()
+}
+
+fn shown_words(text: &str) -> Vec<String> {
     let folded = plain_words(&parted_at_capitals(text));
-    folded
-        .split(' ')
-        .filter(|word| !word.is_empty())
-        .map(|word| word.replace("ae", "a").replace("oe", "o").replace("ue", "u"))
-        .collect()
+    folded.split(' ').filter(|word| !word.is_empty()).map(str::to_owned).collect()
 }
 
 /// `WaterSolubility` is two words; `pKa` and `mmHg` are one.
@@ -66,7 +69,9 @@ impl Header {
         };
         let words = header_words(&plain);
         let bracket_words = brackets.iter().flat_map(|bracket| header_words(bracket)).collect();
-        (!words.is_empty()).then_some(Self { plain, brackets, words, bracket_words })
+        let shown_in_brackets = brackets.iter().flat_map(|bracket| shown_words(bracket)).collect();
+        let shown = [shown_words(&plain), shown_in_brackets];
+        (!words.is_empty()).then_some(Self { plain, brackets, words, bracket_words, shown })
     }
 
     /// The field the header names.
@@ -149,11 +154,11 @@ impl Header {
 
     fn words_of(&self, concept: usize, known: &ColumnWords) -> Option<String> {
         let concept = known.concepts.get(concept)?;
-        [&self.words, &self.bracket_words].into_iter().find_map(|words| {
+        [&self.words, &self.bracket_words].into_iter().zip(&self.shown).find_map(|(words, shown)| {
             (0..words.len()).find_map(|start| {
                 let length =
                     concept.phrases.iter().filter_map(|phrase| phrase.length_at(words, start)).max()?;
-                Some(words.get(start..start + length)?.join(" "))
+                Some(shown.get(start..start + length)?.join(" "))
             })
         })
     }

@@ -2,7 +2,7 @@
 
 use crate::evidence::{Evidence, Origin};
 use crate::judge::{Adjustment, Closeness, Context, Used};
-use crate::quantity::{Comparison, Interval, Outcome, chance_beyond};
+use crate::quantity::{Bound, Comparison, Interval, Outcome, chance_beyond};
 use crate::rules::{HalfLifeReference, Limit, Test};
 use crate::substance::{Compartment, Property};
 
@@ -50,6 +50,9 @@ pub(crate) fn arrhenius_factor(activation_energy: f64, from: f64, to: f64) -> f6
 const LEANEST_FISH: f64 = 1.0;
 
 /// BCF at the rulebook's lipid content: BCF x lipid / lipid of the fish (OECD 305).
+///
+/// The conversion is practice and not in the instruments' text, so it may fire a test and does not clear one that the
+/// value as reported does not clear: a reported value above the converted one widens the interval.
 fn at_lipid(evidence: &Evidence, to: f64) -> Option<(Interval, Option<Adjustment>)> {
     let from = evidence.conditions.lipid.filter(|lipid| *lipid > 0.0)?;
     let at = |percent: f64| evidence.interval.map_increasing(|bcf| bcf * to / percent).ok();
@@ -57,7 +60,8 @@ fn at_lipid(evidence: &Evidence, to: f64) -> Option<(Interval, Option<Adjustment
     if from < LEANEST_FISH {
         return Some((moved.hull(at(from * 100.0)?), Some(Adjustment::LipidDoubtful { from, to })));
     }
-    Some((moved, Some(Adjustment::Lipid { from, to })))
+    let compared = if from > to { moved.hull(evidence.interval) } else { moved };
+    Some((compared, Some(Adjustment::Lipid { from, to })))
 }
 
 /// How an interval stands to the limit of a test.
@@ -95,7 +99,9 @@ pub(crate) fn hold_against(
     let (compared, adjustment) = as_compared(context, evidence);
     let outcome = outcome(compared);
     let margin = margin(test, evidence.property, compared);
-    let within_one_sd = margin.zip(evidence.sd).is_some_and(|(margin, sd)| margin.abs() <= sd);
+    let within_one_sd = nearest_distance(test, evidence.property, compared)
+        .zip(evidence.sd)
+        .is_some_and(|(distance, sd)| distance <= sd);
     Used {
         property: evidence.property,
         index,
@@ -113,6 +119,16 @@ fn in_log_units(property: Property, value: f64) -> Option<f64> {
         return Some(value);
     }
     (value > 0.0).then(|| value.log10())
+}
+
+/// Log units from the limit to the nearer end of the value.
+fn nearest_distance(test: &Test, property: Property, compared: Interval) -> Option<f64> {
+    let Limit::Number { value: limit, .. } = test.limit else {
+        return None;
+    };
+    let limit = in_log_units(property, limit)?;
+    let ends = [compared.low(), compared.high()].into_iter().filter_map(Bound::number);
+    ends.filter_map(|end| Some((in_log_units(property, end)? - limit).abs())).min_by(f64::total_cmp)
 }
 
 /// Log units by which a single value lies beyond the limit.

@@ -76,7 +76,10 @@ fn fill_value(line: &mut Line, told: Told, used: &Used) {
     line.chance = used.chance;
     if let Some(evidence) = evidence_of(told, used) {
         line.sd = evidence.sd;
-        evidence.basis.word().clone_into(&mut line.basis);
+        line.basis = match used.adjustment {
+            None => evidence.basis.word().to_owned(),
+            Some(_) => format!("{}, converted", evidence.basis.word()),
+        };
         line.origin = origin_phrase(told, evidence);
     }
 }
@@ -91,18 +94,23 @@ fn source(test: &Test) -> String {
     }
 }
 
-/// The test a line shows: of the deciding step; else of the first stopped clear; else of the first step with data.
-fn shown_test<'run>(
-    criterion: &'run Criterion,
-    judged: &'run CriterionJudgement,
-) -> Option<(&'run Test, &'run TestJudgement)> {
-    let step = match judged.decision {
+/// The step a line shows: the deciding one; else that of the first stopped clear; else the first with data.
+pub(crate) fn shown_step(judged: &CriterionJudgement) -> Option<usize> {
+    match judged.decision {
         Decision::In(step) | Decision::Out(step) => Some(step),
         Decision::Open => judged.stopped.first().map(|clear| clear.step).or_else(|| {
             judged.steps.iter().position(|step| !matches!(step.state, StepState::Empty | StepState::Skipped))
         }),
         Decision::Assess | Decision::OutOfScope(_) | Decision::Rating => None,
-    }?;
+    }
+}
+
+/// The test a line shows: of the deciding step; else of the first stopped clear; else of the first step with data.
+fn shown_test<'run>(
+    criterion: &'run Criterion,
+    judged: &'run CriterionJudgement,
+) -> Option<(&'run Test, &'run TestJudgement)> {
+    let step = shown_step(judged)?;
     let (rule, came_out) = (criterion.steps.get(step)?, judged.steps.get(step)?);
     let with_value = came_out.tests.iter().position(|test| !test.used.is_empty() || test.answer.is_some());
     let chosen = match came_out.state {

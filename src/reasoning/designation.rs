@@ -3,10 +3,12 @@
 use crate::judge::{
     Closeness, CriterionJudgement, Decision, DesignationJudgement, Headline, StepJudgement, Verdict,
 };
-use crate::reasoning::sentence::deciding_sentence;
+use crate::reasoning::criterion::shown_step;
+use crate::reasoning::sentence::{deciding_sentence, places_with_value};
 use crate::reasoning::value::{listed, telling_tests, test_brief};
 use crate::reasoning::{Book, Told};
 use crate::rules::{Criterion, Designation, DesignationPart, Step};
+use crate::substance::Identity;
 
 /// The words of a criterion's cell: the verdict, or the ratings its value may have.
 pub fn verdict_text(criterion: &Criterion, judged: &CriterionJudgement) -> String {
@@ -92,7 +94,13 @@ fn designation_why(book: Book, index: usize) -> String {
         return scope_caution(book).map_or(String::new(), |caution| out_of_scope(book, caution));
     }
     let parts: Vec<String> = rule.parts.iter().map(|part| part_brief(book, *part)).collect();
-    parts.join("; ")
+    let doubt = match book.told.substance.identity {
+        Identity::Identified => "",
+        Identity::NameAlone | Identity::RepairedDate | Identity::NotIdentified => {
+            "Which substance it is is not sure, so nothing clears it; "
+        }
+    };
+    format!("{doubt}{}", parts.join("; "))
 }
 
 /// Which caution puts the substance outside the instrument, and what raised it.
@@ -130,7 +138,7 @@ fn criterion_brief(told: Told, rule: &Criterion, judged: &CriterionJudgement) ->
             .get(step)
             .zip(judged.steps.get(step))
             .map_or(String::new(), |(rule, came_out)| step_brief(told, rule, came_out)),
-        Decision::Open => judged.deciding.as_ref().map_or(String::new(), deciding_sentence),
+        Decision::Open => open_brief(told, rule, judged),
         Decision::Assess => "no number settles it".to_owned(),
         Decision::OutOfScope(_) | Decision::Rating => String::new(),
     };
@@ -140,14 +148,24 @@ fn criterion_brief(told: Told, rule: &Criterion, judged: &CriterionJudgement) ->
 /// The first reasons of a step; the Reasoning sheet has them all.
 fn step_brief(told: Told, rule: &Step, came_out: &StepJudgement) -> String {
     const REASONS: usize = 2;
-    let briefs: Vec<String> = telling_tests(rule, came_out)
-        .into_iter()
-        .map(|(test, judged)| test_brief(told, test, judged))
-        .collect();
+    let telling = telling_tests(rule, came_out, &came_out.by);
+    let briefs: Vec<String> = telling.iter().map(|telling| test_brief(told, telling)).collect();
     match briefs.get(..REASONS) {
         Some(first) if briefs.len() > REASONS => {
             format!("{} and {} more", first.join(", "), briefs.len() - REASONS)
         }
         Some(_) | None => listed(&briefs),
     }
+}
+
+/// What is known of an open criterion, and what would settle it.
+fn open_brief(told: Told, rule: &Criterion, judged: &CriterionJudgement) -> String {
+    let known = shown_step(judged).and_then(|step| {
+        let (rule, came_out) = (rule.steps.get(step)?, judged.steps.get(step)?);
+        let with_value = places_with_value(came_out);
+        let telling = telling_tests(rule, came_out, &with_value);
+        telling.first().map(|telling| test_brief(told, telling))
+    });
+    let settled = judged.deciding.as_ref().map(deciding_sentence);
+    known.into_iter().chain(settled).collect::<Vec<_>>().join("; ")
 }

@@ -44,6 +44,9 @@ pub fn cautions_text(told: Told) -> String {
             Some(format!("{}: {} ({})", caution.id, caution.sentence.trim_end_matches('.'), raised.reason))
         })
         .collect();
+    if sentences.is_empty() {
+        return "none raised by type, name, formula or data; the structure was not looked at".to_owned();
+    }
     sentences.join("; ")
 }
 
@@ -87,7 +90,7 @@ pub(crate) fn deciding_phrase(deciding: &Deciding) -> String {
             const NAMED: usize = 3;
             let titles = titles(subjects.iter().copied());
             let named = if titles.len() > NAMED { "any datum".to_owned() } else { titles.join(" or ") };
-            format!("{named}, only by pointing to concern")
+            format!("{named} (could show concern, not clear)")
         }
         Deciding::ExpertJudgement => "expert judgement".to_owned(),
     }

@@ -1,6 +1,9 @@
 //! The sentences behind a verdict.
 
-use crate::judge::{Carries, Closeness, CriterionJudgement, Deciding, Decision, StepJudgement, StepState};
+use crate::judge::{
+    Carries, Closeness, CriterionJudgement, Deciding, Decision, StepJudgement, StepState, TestJudgement,
+    Verdict,
+};
 use crate::reasoning::designation::out_of_scope;
 use crate::reasoning::stops::stops_phrase;
 use crate::reasoning::value::{listed, telling_tests, test_clause, titles, value_phrase};
@@ -10,9 +13,19 @@ use crate::rules::{Criterion, Step, Weight};
 /// Why a criterion came out as it did.
 pub(crate) fn sentence(book: Book, criterion: &Criterion, judged: &CriterionJudgement) -> String {
     let told = book.told;
+    let id = &criterion.id;
     let mut sentences = match judged.decision {
-        Decision::In(step) => decided(book, criterion, judged, step, "Points to"),
-        Decision::Out(step) => decided(book, criterion, judged, step, "Points away from"),
+        Decision::In(step) | Decision::Out(step) => {
+            let finding = match judged.verdict {
+                Verdict::Fulfilled => format!("{id} is fulfilled"),
+                Verdict::NotFulfilled => format!("{id} is not fulfilled"),
+                Verdict::ScreensOut => format!("Points away from {id}"),
+                Verdict::ScreensIn | Verdict::Unresolved | Verdict::NoData | Verdict::OutOfScope => {
+                    format!("Points to {id}")
+                }
+            };
+            decided(book, criterion, judged, step, &finding)
+        }
         Decision::Open => open(told, criterion, judged),
         Decision::Assess => vec![criterion.assess.clone().unwrap_or_default()],
         Decision::OutOfScope(caution) => vec![out_of_scope(book, caution)],
@@ -27,8 +40,8 @@ pub(crate) fn sentence(book: Book, criterion: &Criterion, judged: &CriterionJudg
 fn closed(sentence: &str) -> String {
     let sentence = sentence.trim();
     let mut characters = sentence.chars();
-    // Names such as `log Kow` keep their small letter, which is how the trade writes them.
-    let keeps_small = ["log ", "pKa"].iter().any(|start| sentence.starts_with(start));
+    // Names such as `log Kow` and `vB` keep their small letter, which is how the trade writes them.
+    let keeps_small = ["log ", "pKa", "vP", "vB", "vM"].iter().any(|start| sentence.starts_with(start));
     let capital = match characters.next() {
         Some(first) if !keeps_small => first.to_uppercase().chain(characters).collect(),
         Some(_) | None => sentence.to_owned(),
@@ -41,13 +54,13 @@ fn decided(
     criterion: &Criterion,
     judged: &CriterionJudgement,
     step: usize,
-    direction: &str,
+    finding: &str,
 ) -> Vec<String> {
     let (Some(rule), Some(came_out)) = (criterion.steps.get(step), judged.steps.get(step)) else {
         return Vec::new();
     };
     let because = listed(&clauses(book.told, rule, came_out));
-    let mut sentences = vec![format!("{direction} {} because {because}", criterion.id)];
+    let mut sentences = vec![format!("{finding} because {because}")];
     sentences.extend(margin(rule, came_out));
     match came_out.closeness {
         Closeness::Clear => {}
@@ -62,14 +75,26 @@ fn decided(
 }
 
 fn clauses(told: Told, rule: &Step, came_out: &StepJudgement) -> Vec<String> {
-    telling_tests(rule, came_out).into_iter().map(|(test, judged)| test_clause(told, test, judged)).collect()
+    clauses_at(told, rule, came_out, &came_out.by)
+}
+
+fn clauses_at(told: Told, rule: &Step, came_out: &StepJudgement, places: &[usize]) -> Vec<String> {
+    telling_tests(rule, came_out, places).iter().map(|telling| test_clause(told, telling)).collect()
+}
+
+/// The places of a step's tests that found a value or an answer.
+pub(crate) fn places_with_value(came_out: &StepJudgement) -> Vec<usize> {
+    let found = |test: &TestJudgement| !test.used.is_empty() || test.answer.is_some();
+    came_out.tests.iter().enumerate().filter(|(_, test)| found(test)).map(|(place, _)| place).collect()
 }
 
 /// How far, and how sure, where a single value decided.
 fn margin(rule: &Step, came_out: &StepJudgement) -> Option<String> {
-    let telling = telling_tests(rule, came_out);
-    let [(_, only)] = telling.as_slice() else { return None };
-    let used = only.used.first()?;
+    let telling = telling_tests(rule, came_out, &came_out.by);
+    let [only] = telling.as_slice() else {
+        return None;
+    };
+    let used = only.judged.used.first()?;
     let chance = used.chance.map_or(String::new(), |chance| {
         let percent = percent(chance);
         format!("; given its error, the chance that the value lies beyond the limit is {percent} %")
@@ -102,7 +127,7 @@ fn weight_remark(book: Book, rule: &Step, came_out: &StepJudgement) -> Option<St
     let strongest = book.rulebook.strongest;
     match rule.weight {
         Weight::Definitive if strongest != Weight::Definitive => Some(format!(
-            "{} leaves the decision to a review, so this is a screening result",
+            "{} also takes evidence that no number settles and leaves the decision to a review, so this is a screening result",
             book.rulebook.short
         )),
         Weight::Definitive if !carried => Some(
@@ -118,6 +143,7 @@ fn weight_remark(book: Book, rule: &Step, came_out: &StepJudgement) -> Option<St
 fn passed_over(told: Told, criterion: &Criterion, judged: &CriterionJudgement, end: usize) -> Vec<String> {
     let mut sentences = Vec::new();
     let mut absent = Vec::new();
+    let mut said = Vec::new();
     for (index, (rule, came_out)) in criterion.steps.iter().zip(&judged.steps).enumerate().take(end) {
         match rule.weight {
             Weight::Supporting | Weight::Concern => {}
@@ -125,7 +151,7 @@ fn passed_over(told: Told, criterion: &Criterion, judged: &CriterionJudgement, e
                 absent.extend(rule.tests.iter().map(|test| test.subject));
             }
             Weight::Screening | Weight::Definitive => {
-                sentences.extend(step_sentence(told, criterion, judged, index));
+                sentences.extend(step_sentence(told, criterion, judged, index, &mut said));
             }
         }
     }
@@ -147,35 +173,41 @@ fn alternatives(parts: &[String]) -> String {
     }
 }
 
-/// What a step with data came to that did not decide.
+/// What a step with data came to that did not decide; nothing where an earlier sentence said all of it.
 fn step_sentence(
     told: Told,
     criterion: &Criterion,
     judged: &CriterionJudgement,
     index: usize,
+    said: &mut Vec<String>,
 ) -> Option<String> {
     let (rule, came_out) = (criterion.steps.get(index)?, judged.steps.get(index)?);
     if let Some(stopped) = judged.stopped.iter().find(|clear| clear.step == index) {
         let clauses = listed(&clauses(told, rule, came_out));
         return Some(format!("{clauses}, but {}", stops_phrase(told, criterion, judged, stopped)));
     }
-    match came_out.state {
-        StepState::Partial => {
-            let known: Vec<String> = rule
-                .tests
-                .iter()
-                .zip(&came_out.tests)
-                .filter(|(_, test)| !test.used.is_empty() || test.answer.is_some())
-                .map(|(rule, test)| test_clause(told, rule, test))
-                .collect();
-            let missing =
-                came_out.by.iter().filter_map(|test| rule.tests.get(*test)).filter(|test| !test.optional);
-            let missing = titles(missing.map(|test| test.subject));
-            Some(format!("{}, but there is no {}", listed(&known), alternatives(&missing)))
-        }
-        StepState::Undecided => Some(listed(&clauses(told, rule, came_out))),
-        StepState::Empty | StepState::Clear | StepState::Fired | StepState::Skipped => None,
+    let known = match came_out.state {
+        StepState::Partial => clauses_at(told, rule, came_out, &places_with_value(came_out)),
+        StepState::Undecided => clauses(told, rule, came_out),
+        StepState::Empty | StepState::Clear | StepState::Fired | StepState::Skipped => return None,
+    };
+    if known.iter().all(|clause| said.contains(clause)) {
+        return None;
     }
+    let sentence = match came_out.state {
+        StepState::Partial => {
+            let missing = came_out.by.iter().filter_map(|test| rule.tests.get(*test));
+            let needed = titles(missing.filter(|test| !test.optional).map(|test| test.subject));
+            format!("{}, but there is no {}", listed(&known), alternatives(&needed))
+        }
+        StepState::Undecided
+        | StepState::Empty
+        | StepState::Clear
+        | StepState::Fired
+        | StepState::Skipped => listed(&known),
+    };
+    said.extend(known);
+    Some(sentence)
 }
 
 fn open(told: Told, criterion: &Criterion, judged: &CriterionJudgement) -> Vec<String> {
@@ -196,9 +228,9 @@ pub(crate) fn deciding_sentence(deciding: &Deciding) -> String {
             const NAMED: usize = 3;
             let titles = titles(subjects.iter().copied());
             if titles.len() > NAMED {
-                "only data that point to concern would settle it".to_owned()
+                "no datum can clear it here, though some could show concern".to_owned()
             } else {
-                format!("{} would settle it only by pointing to concern", alternatives(&titles))
+                format!("{} could show concern here, but not clear it", alternatives(&titles))
             }
         }
         Deciding::ExpertJudgement => {

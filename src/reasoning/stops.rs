@@ -75,10 +75,8 @@ fn guard_brief(told: Told, criterion: &Criterion, judged: &CriterionJudgement, s
     let (Some(rule), Some(came_out)) = (criterion.steps.get(step), judged.steps.get(step)) else {
         return String::new();
     };
-    let briefs: Vec<String> = telling_tests(rule, came_out)
-        .into_iter()
-        .map(|(test, judged)| test_brief(told, test, judged))
-        .collect();
+    let telling = telling_tests(rule, came_out, &came_out.by);
+    let briefs: Vec<String> = telling.iter().map(|telling| test_brief(told, telling)).collect();
     briefs.join("; ")
 }
 

@@ -93,7 +93,7 @@ pub(crate) fn value_phrase(told: Told, used: &Used) -> String {
         Some(Adjustment::Lipid { from, to }) => beside.push(format!(
             "fish with {} % lipid; {} at {} % lipid",
             format_number(from),
-            format_interval(used.compared, unit),
+            at_lipid(evidence, from, to),
             format_number(to)
         )),
         None => {}
@@ -107,7 +107,7 @@ pub(crate) fn value_phrase(told: Told, used: &Used) -> String {
 /// The limit as a reader knows it: `> 2000 L/kg`, `H350 or H340`, `not readily biodegradable`.
 pub fn limit_phrase(test: &Test) -> String {
     match &test.limit {
-        Limit::Number { comparison, .. } => format!("{} {}", comparison.sign(), test.limit_text),
+        Limit::Number { comparison, .. } => format!("{} {}", comparison.sign(), limit_text(test)),
         Limit::Between { .. } => test.limit_text.clone(),
         Limit::AnyOfWords(codes) => codes.join(", "),
         Limit::Is(DegradationTest::Ready) => "readily biodegradable".to_owned(),
@@ -117,7 +117,9 @@ pub fn limit_phrase(test: &Test) -> String {
 }
 
 /// The test in one clause: `BCF 2300 L/kg (measured, Substances!K12) is above the limit of 2000 L/kg`.
-pub(crate) fn test_clause(told: Told, test: &Test, judged: &TestJudgement) -> String {
+pub(crate) fn test_clause(told: Told, telling: &Telling) -> String {
+    let Some(test) = telling.tests.first() else { return String::new() };
+    let judged = telling.judged;
     if let Some(answer) = &judged.answer {
         return answer_clause(told, test, judged.outcome, answer);
     }
@@ -127,7 +129,7 @@ pub(crate) fn test_clause(told: Told, test: &Test, judged: &TestJudgement) -> St
     let value = value_phrase(told, used);
     match &test.limit {
         Limit::Number { comparison, .. } => {
-            format!("{value} {} {}", standing(*comparison, judged.outcome), test.limit_text)
+            format!("{value} {} the {}", standing(*comparison, judged.outcome), telling.limits())
         }
         Limit::Between { .. } | Limit::AnyOfWords(_) | Limit::Is(_) => {
             format!("{value} against {}", limit_phrase(test))
@@ -137,17 +139,13 @@ pub(crate) fn test_clause(told: Told, test: &Test, judged: &TestJudgement) -> St
 
 fn standing(comparison: Comparison, outcome: TestOutcome) -> &'static str {
     match (outcome, comparison) {
-        (TestOutcome::Fired, Comparison::Above) | (TestOutcome::Clear, Comparison::AtMost) => {
-            "is above the limit of"
-        }
-        (TestOutcome::Fired, Comparison::AtLeast) => "reaches the limit of",
-        (TestOutcome::Fired, Comparison::Below) => "is below the limit of",
-        (TestOutcome::Fired, Comparison::AtMost) | (TestOutcome::Clear, Comparison::Above) => {
-            "is not above the limit of"
-        }
-        (TestOutcome::Clear, Comparison::AtLeast) => "stays below the limit of",
-        (TestOutcome::Clear, Comparison::Below) => "is not below the limit of",
-        (TestOutcome::Undecided | TestOutcome::Missing, _) => "may lie on either side of the limit of",
+        (TestOutcome::Fired, Comparison::Above) | (TestOutcome::Clear, Comparison::AtMost) => "is above",
+        (TestOutcome::Fired, Comparison::AtLeast) => "reaches",
+        (TestOutcome::Fired, Comparison::Below) => "is below",
+        (TestOutcome::Fired, Comparison::AtMost) | (TestOutcome::Clear, Comparison::Above) => "is not above",
+        (TestOutcome::Clear, Comparison::AtLeast) => "stays below",
+        (TestOutcome::Clear, Comparison::Below) => "is not below",
+        (TestOutcome::Undecided | TestOutcome::Missing, _) => "may lie on either side of",
     }
 }
 
@@ -213,7 +211,9 @@ fn answer_clause(told: Told, test: &Test, outcome: TestOutcome, answer: &Answer)
 }
 
 /// The same in a few words, for the sentence beside a headline: `BCF 2300 L/kg (measured), above 2000 L/kg`.
-pub(crate) fn test_brief(told: Told, test: &Test, judged: &TestJudgement) -> String {
+pub(crate) fn test_brief(told: Told, telling: &Telling) -> String {
+    let Some(test) = telling.tests.first() else { return String::new() };
+    let judged = telling.judged;
     match (&judged.answer, judged.used.first()) {
         (Some(Answer::Ready(index)), _) => {
             match told.substance.ready.get(*index).map(|entry| entry.value.result) {
@@ -234,39 +234,101 @@ pub(crate) fn test_brief(told: Told, test: &Test, judged: &TestJudgement) -> Str
             }
         },
         (None, Some(used)) => {
-            let value = format_interval(used.compared, used.property.default_unit());
-            let basis = evidence_of(told, used).map_or("", |evidence| basis_phrase(evidence.basis));
             let standing = match &test.limit {
                 Limit::Number { comparison, .. } => brief_standing(*comparison, judged.outcome),
                 Limit::Between { .. } | Limit::AnyOfWords(_) | Limit::Is(_) => "against",
             };
-            format!("{} {value} ({basis}), {standing} {}", used.property.title(), test.limit_text)
+            format!(
+                "{}, {standing} {}",
+                brief_value(told, used),
+                telling.limits().trim_start_matches("limit of ").trim_start_matches("limits of ")
+            )
         }
         (None, None) => format!("{} missing", test.subject.title()),
     }
 }
 
-/// The tests that make a step's outcome, each value once: a value that stands for two compartments is named with the
-/// higher of its limits, which it meets as well.
+/// A value, or an answer, and the tests of a step that it was held against.
+pub(crate) struct Telling<'run> {
+    /// The tests; a half-life in water not further specified stands for several compartments.
+    pub(crate) tests: Vec<&'run Test>,
+    /// What the first of them came to.
+    pub(crate) judged: &'run TestJudgement,
+}
+
+/// The tests of a step at these places, each value once.
 pub(crate) fn telling_tests<'run>(
     rule: &'run Step,
     came_out: &'run StepJudgement,
-) -> Vec<(&'run Test, &'run TestJudgement)> {
-    let mut telling: Vec<(&Test, &TestJudgement)> = Vec::new();
+    places: &[usize],
+) -> Vec<Telling<'run>> {
+    let mut telling: Vec<Telling> = Vec::new();
     let tests =
-        came_out.by.iter().filter_map(|index| Some((rule.tests.get(*index)?, came_out.tests.get(*index)?)));
+        places.iter().filter_map(|place| Some((rule.tests.get(*place)?, came_out.tests.get(*place)?)));
     for (test, judged) in tests {
         let same_value =
-            telling.iter_mut().find(|(_, known)| match (known.used.first(), judged.used.first()) {
+            telling.iter_mut().find(|known| match (known.judged.used.first(), judged.used.first()) {
                 (Some(known), Some(used)) => (known.property, known.index) == (used.property, used.index),
                 (None, _) | (_, None) => false,
             });
         match same_value {
-            Some(known) => *known = (test, judged),
-            None => telling.push((test, judged)),
+            Some(known) => known.tests.push(test),
+            None => telling.push(Telling { tests: vec![test], judged }),
         }
     }
     telling
+}
+
+impl Telling<'_> {
+    /// `limit of 40 d`, `limits of 40 d and 60 d`.
+    fn limits(&self) -> String {
+        let mut limits: Vec<String> = Vec::new();
+        for text in self.tests.iter().map(|test| limit_text(test)) {
+            if !limits.contains(&text) {
+                limits.push(text);
+            }
+        }
+        let noun = if limits.len() > 1 { "limits" } else { "limit" };
+        format!("{noun} of {}", listed(&limits))
+    }
+}
+
+/// `BCF 5800 L/kg (measured; 3494 L/kg at 5 % lipid)`: what the row says first, what was made of it after.
+fn brief_value(told: Told, used: &Used) -> String {
+    let unit = used.property.default_unit();
+    let Some(evidence) = evidence_of(told, used) else { return used.property.title().to_owned() };
+    let value = format_interval(evidence.interval, unit);
+    let converted = match used.adjustment {
+        None => String::new(),
+        Some(Adjustment::HalfLifeTemperature { to, .. }) => {
+            format!("; {} at {} °C", format_interval(used.compared, unit), format_number(to))
+        }
+        Some(Adjustment::HalfLifeTemperatureUnstated { to, factor, .. }) => {
+            format!("; up to {factor:.2} times longer at {} °C", format_number(to))
+        }
+        Some(Adjustment::Lipid { from, to } | Adjustment::LipidDoubtful { from, to }) => {
+            format!("; {} at {} % lipid", at_lipid(evidence, from, to), format_number(to))
+        }
+    };
+    format!("{} {value} ({}{converted})", used.property.title(), basis_phrase(evidence.basis))
+}
+
+/// The value at another lipid content, as the judge converts it.
+fn at_lipid(evidence: &Evidence, from: f64, to: f64) -> String {
+    let converted = evidence.interval.map_increasing(|bcf| bcf * to / from);
+    converted.map_or(String::new(), |converted| format_interval(converted, evidence.property.default_unit()))
+}
+
+/// The limit as the rule file writes it; months with the days they were counted as.
+pub(crate) fn limit_text(test: &Test) -> String {
+    match test.limit {
+        Limit::Number { value, .. } if test.limit_text.contains("month") => {
+            format!("{} ({value:.1} d)", test.limit_text)
+        }
+        Limit::Number { .. } | Limit::Between { .. } | Limit::AnyOfWords(_) | Limit::Is(_) => {
+            test.limit_text.clone()
+        }
+    }
 }
 
 /// A list a reader can follow: `a`, `a and b`, `a, b and c`.

@@ -1,6 +1,6 @@
 //! Writing a run: the user's sheets row by row, then the added sheets.
 
-use std::collections::BTreeMap;
+use std::collections::{BTreeMap, BTreeSet};
 
 use crate::fault::{CellFault, FileFault, Refusal};
 use crate::judge::Verdict;
@@ -309,16 +309,24 @@ fn unreached(rules: &RuleSet, reached: &[bool]) -> Vec<String> {
             })
         })
     });
+    let tests: Vec<_> =
+        tests.zip(reached).filter(|((weight, ..), _)| *weight != Weight::Supporting).collect();
+    // A criterion may ask for a property twice, for example given and estimated.
+    let had: BTreeSet<(&str, &str)> = tests
+        .iter()
+        .filter(|(_, reached)| **reached)
+        .map(|((_, test, criterion), _)| (test.subject.title(), criterion.as_str()))
+        .collect();
     let mut asked: Vec<(&'static str, Vec<String>)> = Vec::new();
-    for ((weight, test, criterion), reached) in tests.zip(reached) {
-        if *reached || weight == Weight::Supporting {
+    for ((_, test, criterion), _) in &tests {
+        let property = test.subject.title();
+        if had.contains(&(property, criterion.as_str())) {
             continue;
         }
-        let property = test.subject.title();
         match asked.iter_mut().find(|(known, _)| *known == property) {
-            Some((_, criteria)) if criteria.contains(&criterion) => {}
-            Some((_, criteria)) => criteria.push(criterion),
-            None => asked.push((property, vec![criterion])),
+            Some((_, criteria)) if criteria.contains(criterion) => {}
+            Some((_, criteria)) => criteria.push(criterion.clone()),
+            None => asked.push((property, vec![criterion.clone()])),
         }
     }
     asked.into_iter().map(|(property, criteria)| format!("{property} ({})", criteria.join(", "))).collect()

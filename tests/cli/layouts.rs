@@ -247,7 +247,7 @@ fn names_of_the_user_stay_and_ours_give_way() {
         assert_eq!(written.under(1, header, 2), held);
     }
     assert_eq!(written.under(1, "REACH (screened 2)", 2), "vPvB: screens in");
-    assert_eq!(written.under(1, "Cautions (screened)", 2), "");
+    assert!(written.under(1, "Cautions (screened)", 2).starts_with("none raised"));
 }
 
 #[test]

@@ -148,7 +148,7 @@ fn codes_in(text: &str) -> Vec<String> {
     for found in CODE.captures_iter(text) {
         let part = |group| found.get(group).map_or("", |part: regex::Match<'_>| part.as_str());
         let prefix = part(1).to_uppercase();
-        codes.push(format!("{prefix}{}{}", part(2), part(3).to_uppercase()));
+        codes.push(format!("{prefix}{}{}", part(2), part(3)));
         codes.extend(FURTHER_CODE.find_iter(part(4)).map(|number| format!("{prefix}{}", number.as_str())));
     }
     codes
