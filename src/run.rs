@@ -6,6 +6,8 @@
 mod judged_row;
 mod output;
 mod plan;
+mod sheets;
+mod summing_up;
 mod tables;
 
 use std::collections::BTreeMap;
@@ -82,6 +84,8 @@ pub struct Summary {
     pub unreached: Vec<String>,
     /// Remarks on columns, each with its sheet.
     pub column_remarks: Vec<String>,
+    /// Columns with a header that is not recognised, each sheet in one sentence.
+    pub unrecognised: Vec<String>,
     /// What could not be carried over.
     pub not_carried: Vec<String>,
     /// Cells that could not be read, the first of them.

@@ -158,7 +158,8 @@ fn estimate(
                 let nearest = end.of(log_kow.interval)?;
                 at(Interval::point(nearest).ok()?, None)?.log_value.single()
             });
-            (opened(end, property, log_value, bounds.collect())?, None)
+            let bounds: Option<Vec<f64>> = bounds.collect();
+            (opened(end, property, log_value, bounds.as_deref())?, None)
         }
     };
     Some(Evidence {
@@ -183,8 +184,8 @@ fn estimate(
 
 /// A log Kow of more concern that no relation takes, such as `> 5`, widens the estimate on its side of concern: to what a
 /// relation makes of the end that is known, or without bound where none does. It may then fire and does not clear.
-fn opened(end: End, property: Property, log_value: Interval, bounds: Option<Vec<f64>>) -> Option<Interval> {
-    let far = |pick: fn(f64, f64) -> f64, start: Option<f64>| match (&bounds, start) {
+fn opened(end: End, property: Property, log_value: Interval, bounds: Option<&[f64]>) -> Option<Interval> {
+    let far = |pick: fn(f64, f64) -> f64, start: Option<f64>| match (bounds, start) {
         (Some(bounds), Some(start)) => Bound::Included(bounds.iter().copied().fold(start, pick)),
         (None, _) | (_, None) => Bound::Unbounded,
     };

@@ -25,7 +25,7 @@ pub const REASONING_COLUMNS: [(&str, f64); 19] = [
     ("CAS number", 13.0),
     ("Name", 28.0),
     ("Rulebook", 12.0),
-    ("Criterion", 10.0),
+    ("Criterion", 17.0),
     ("Verdict", 24.0),
     ("Value", 12.0),
     ("Unit", 8.0),
@@ -77,7 +77,7 @@ pub fn reasoning_entries(told: Told, mode: ReasoningMode) -> Vec<Vec<Entry>> {
                 Entry::text(line.origin, Look::Wrapped),
                 Entry::text(line.limit, Look::Wrapped),
                 Entry::number(line.margin, Look::TwoDecimals),
-                Entry::number(line.chance, Look::TwoDecimals),
+                chance_entry(line.chance),
                 Entry::text(line.sentence, Look::Wrapped),
                 Entry::text(line.cautions, Look::Wrapped),
                 Entry::text(line.source, Look::Wrapped),
@@ -86,6 +86,15 @@ pub fn reasoning_entries(told: Told, mode: ReasoningMode) -> Vec<Vec<Entry>> {
         }
     }
     lines
+}
+
+/// A chance; near its ends in words, because no value is certain.
+fn chance_entry(chance: Option<f64>) -> Entry {
+    match chance {
+        Some(chance) if chance < 0.01 => Entry::text("< 0.01", Look::Text),
+        Some(chance) if chance > 0.99 => Entry::text("> 0.99", Look::Text),
+        Some(_) | None => Entry::number(chance, Look::TwoDecimals),
+    }
 }
 
 /// A number to the four significant digits that sentences show; what was compared had them all.

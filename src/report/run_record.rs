@@ -1,7 +1,7 @@
 //! The Run record: what was read, with what, and what was left out.
 
 use crate::columns::Recognised;
-use crate::quantity::Date;
+use crate::quantity::{Date, format_number};
 use crate::report::{CAUTIONS_OF_USE, Entry, Table};
 use crate::rules::RuleSet;
 use crate::workbook::{Look, column_letters};
@@ -55,6 +55,11 @@ pub fn run_record_table(facts: &RunFacts, rules: &RuleSet) -> Table {
     rows.push(pair("SHA-256 of the inventory", facts.fingerprint.clone()));
     rows.extend(facts.options.iter().map(|(name, value)| pair(name, value.clone())));
     rows.push(pair("Reasoning sheet", facts.reasoning.clone()));
+    rows.push(pair(
+        "Hidden sheet",
+        "A very hidden sheet `Record` keeps the rule texts, values and verdicts for a later comparison."
+            .to_owned(),
+    ));
     rows.push(title("Cautions of use"));
     rows.extend(CAUTIONS_OF_USE.iter().map(|sentence| pair("", (*sentence).to_owned())));
     rows.push(title("Rulebooks applied"));
@@ -64,6 +69,7 @@ pub fn run_record_table(facts: &RunFacts, rules: &RuleSet) -> Table {
             format!("{} — {}, edition {}", rulebook.title, rulebook.source, rulebook.edition),
         )
     }));
+    rows.extend(error_rows(rules));
     rows.push(title("SHA-256 of the rule files"));
     rows.extend(facts.rule_fingerprints.iter().map(|(name, hash)| pair(name, hash.clone())));
     for sheet in &facts.sheets {
@@ -95,6 +101,19 @@ fn lists_not_consulted(rules: &RuleSet) -> String {
     format!(
         "{consulted}. Candidate and authorisation lists, annexes of treaties, harmonised classifications and national inventories have to be looked up separately."
     )
+}
+
+/// The standard deviations behind `close call` and `chance`, where the row gives none with `±`.
+fn error_rows(rules: &RuleSet) -> Vec<Vec<Entry>> {
+    let mut rows =
+        vec![title("Standard deviations of values that state none, log units; errors are taken as normal")];
+    rows.extend(rules.relations.default_sds.iter().map(|line| {
+        let bases: Vec<&str> = line.bases.iter().map(|basis| basis.word()).collect();
+        let above = line.above.map_or(String::new(), |above| format!(" above {}", format_number(above)));
+        let name = format!("{}{above} {}", line.property, bases.join(", "));
+        pair(name.trim(), format!("{} ({})", format_number(line.sd), line.source))
+    }));
+    rows
 }
 
 fn sheet_rows(sheet: &SheetFacts) -> Vec<Vec<Entry>> {

@@ -1,18 +1,21 @@
 //! Writing a run: the user's sheets row by row, then the added sheets.
 
-use std::collections::{BTreeMap, BTreeSet};
+use std::collections::BTreeMap;
 
-use crate::fault::{CellFault, FileFault, Refusal};
+use crate::fault::{CellFault, Refusal};
 use crate::judge::Verdict;
 use crate::report::{
-    Entry, EntryContent, REASONING_COLUMNS, ReasoningMode, RunFacts, SheetFacts, Table, record_head,
-    rulebooks_table, run_record_table, unscreened_entries,
+    Entry, ReasoningMode, RunFacts, SheetFacts, record_head, rulebooks_table, run_record_table,
+    unscreened_entries,
 };
-use crate::rules::{RuleSet, Weight};
+use crate::rules::RuleSet;
 use crate::run::judged_row::{Added, JudgedRow, Outcome};
 use crate::run::plan::{Plan, SheetPlan};
+use crate::run::sheets::{
+    SheetWriter, lay_out_added, new_reasoning_sheet, span, write_entry, write_line, write_table,
+};
+use crate::run::summing_up::{column_remarks, options, unreached, unrecognised};
 use crate::run::{ScreenSettings, Summary};
-use crate::substance::UnstatedBasis;
 use crate::workbook::{AnnotatedWorkbook, Inventory, Look, SheetId, Value, Visibility, fingerprint_of_text};
 
 /// Faults that are kept with their wording; the others are counted.
@@ -33,14 +36,6 @@ pub(crate) struct Output {
     reached: Vec<bool>,
     faults: Vec<CellFault>,
     fault_total: usize,
-}
-
-/// A sheet of ours that grows row by row, and goes on in another at the format's row limit.
-struct SheetWriter {
-    name: &'static str,
-    sheet: SheetId,
-    next_row: u32,
-    part: u32,
 }
 
 impl Output {
@@ -224,6 +219,7 @@ impl Output {
                 .collect(),
             unreached: unreached(rules, &self.reached),
             column_remarks: column_remarks(plan),
+            unrecognised: unrecognised(plan),
             not_carried: facts.not_carried,
             faults: self.faults,
             fault_total: self.fault_total,
@@ -272,139 +268,4 @@ impl Output {
             fault_total: self.fault_total,
         }
     }
-}
-
-fn options(settings: &ScreenSettings) -> Vec<(&'static str, String)> {
-    let mut options = Vec::new();
-    let unstated = match settings.unstated {
-        UnstatedBasis::Measured => "measured",
-        UnstatedBasis::Unstated => "unstated (a rank of its own)",
-        UnstatedBasis::Calculated => "calculated",
-    };
-    options.push(("Values without a word on how they were obtained count as", unstated.to_owned()));
-    if !settings.sheets.is_empty() {
-        options.push(("Sheets named", settings.sheets.join(", ")));
-    }
-    for column in &settings.columns {
-        let field = column.field.map_or("ignore", crate::substance::Field::id);
-        options.push(("Column named", format!("{}={field}", column.header)));
-    }
-    options
-}
-
-fn column_remarks(plan: &Plan) -> Vec<String> {
-    let screened = plan.sheets.iter().filter_map(|sheet| sheet.screened.as_ref());
-    screened.flat_map(|screened| screened.recognised.remarks.iter().cloned()).collect()
-}
-
-/// Properties that deciding tests ask for and no row had, with the criteria that ask, so that a rule nobody's data
-/// reach does not go unnoticed.
-fn unreached(rules: &RuleSet, reached: &[bool]) -> Vec<String> {
-    let tests = rules.rulebooks.iter().flat_map(|rulebook| {
-        rulebook.criteria.iter().flat_map(move |criterion| {
-            criterion.steps.iter().flat_map(move |step| {
-                step.tests
-                    .iter()
-                    .map(move |test| (step.weight, test, format!("{} {}", rulebook.short, criterion.id)))
-            })
-        })
-    });
-    let tests: Vec<_> =
-        tests.zip(reached).filter(|((weight, ..), _)| *weight != Weight::Supporting).collect();
-    // A criterion may ask for a property twice, for example given and estimated.
-    let had: BTreeSet<(&str, &str)> = tests
-        .iter()
-        .filter(|(_, reached)| **reached)
-        .map(|((_, test, criterion), _)| (test.subject.title(), criterion.as_str()))
-        .collect();
-    let mut asked: Vec<(&'static str, Vec<String>)> = Vec::new();
-    for ((_, test, criterion), _) in &tests {
-        let property = test.subject.title();
-        if had.contains(&(property, criterion.as_str())) {
-            continue;
-        }
-        match asked.iter_mut().find(|(known, _)| *known == property) {
-            Some((_, criteria)) if criteria.contains(criterion) => {}
-            Some((_, criteria)) => criteria.push(criterion.clone()),
-            None => asked.push((property, vec![criterion.clone()])),
-        }
-    }
-    asked.into_iter().map(|(property, criteria)| format!("{property} ({})", criteria.join(", "))).collect()
-}
-
-fn span(sheet: &SheetPlan) -> Option<(String, u32, u16, Vec<String>)> {
-    let screened = sheet.screened.as_ref()?;
-    let headers = screened.added.headers.clone();
-    Some((sheet.name.to_string(), screened.recognised.header_row, screened.first_added, headers))
-}
-
-fn lay_out_added(workbook: &mut AnnotatedWorkbook, id: SheetId, sheet: &SheetPlan) -> Result<(), FileFault> {
-    let Some(screened) = &sheet.screened else {
-        return Ok(());
-    };
-    for (column, width) in (screened.first_added..).zip(&screened.added.widths) {
-        workbook.set_column_width(id, column, column, *width)?;
-    }
-    for (first, last) in &screened.added.folded {
-        let place = |offset: usize| u16::try_from(usize::from(screened.first_added) + offset).ok();
-        if let (Some(first), Some(last)) = (place(*first), place(*last)) {
-            workbook.group_columns(id, first, last)?;
-        }
-    }
-    workbook.freeze(id, screened.recognised.header_row + 1, 0)
-}
-
-fn new_reasoning_sheet(workbook: &mut AnnotatedWorkbook, part: u32) -> Result<SheetWriter, FileFault> {
-    let name = "Reasoning";
-    let title = if part == 1 { name.to_owned() } else { format!("{name} {part}") };
-    let sheet = workbook.add_sheet(&title, Visibility::Visible)?;
-    for (column, (header, width)) in (0u16..).zip(REASONING_COLUMNS) {
-        workbook.set_column_width(sheet, column, column, width)?;
-        workbook.write(sheet, 0, column, &Value::Text(header), Look::Header)?;
-    }
-    workbook.freeze(sheet, 1, 0)?;
-    Ok(SheetWriter { name, sheet, next_row: 1, part })
-}
-
-fn write_line(
-    workbook: &mut AnnotatedWorkbook,
-    writer: &mut SheetWriter,
-    line: &[Entry],
-) -> Result<(), Refusal> {
-    for (column, entry) in (0u16..).zip(line) {
-        write_entry(workbook, writer.sheet, writer.next_row, column, entry)?;
-    }
-    writer.next_row += 1;
-    Ok(())
-}
-
-fn write_table(workbook: &mut AnnotatedWorkbook, table: &Table) -> Result<(), FileFault> {
-    let sheet = workbook.add_sheet(table.name, Visibility::Visible)?;
-    for (column, width) in (0u16..).zip(&table.widths) {
-        workbook.set_column_width(sheet, column, column, *width)?;
-    }
-    if table.frozen_rows > 0 {
-        workbook.freeze(sheet, table.frozen_rows, 0)?;
-    }
-    for (row, entries) in (0u32..).zip(&table.rows) {
-        for (column, entry) in (0u16..).zip(entries) {
-            write_entry(workbook, sheet, row, column, entry)?;
-        }
-    }
-    Ok(())
-}
-
-fn write_entry(
-    workbook: &mut AnnotatedWorkbook,
-    sheet: SheetId,
-    row: u32,
-    column: u16,
-    entry: &Entry,
-) -> Result<(), FileFault> {
-    let value = match &entry.content {
-        EntryContent::Empty => Value::Empty,
-        EntryContent::Text(text) => Value::Text(text),
-        EntryContent::Number(number) => Value::Number(*number),
-    };
-    workbook.write(sheet, row, column, &value, entry.look)
 }

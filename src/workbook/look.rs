@@ -119,7 +119,7 @@ impl Looks {
                 .set_foreground_color(FRAME)
                 .set_background_color(MISTY),
             screens_out: verdict().set_background_color(PALEST),
-            not_fulfilled: verdict(),
+            not_fulfilled: framed(FormatBorder::Hair),
             out_of_scope: indented().set_italic().set_font_color(GREY),
         }
     }

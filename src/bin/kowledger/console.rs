@@ -26,6 +26,8 @@ impl Console {
         show_faults(summary);
         let remarks: Vec<String> =
             summary.column_remarks.iter().map(|remark| format!("Columns of {remark}")).collect();
+        let unrecognised = summary.unrecognised.iter().map(|sentence| format!("Columns of {sentence}"));
+        let remarks: Vec<String> = remarks.into_iter().chain(unrecognised).collect();
         if self.quiet {
             // A remark may mean that data were left aside.
             print_error(&remarks);

@@ -156,6 +156,8 @@ pub(super) fn read_quantity(
             Ok(Some((quantity, said)))
         }
         Err(QuantityFault::NoValue) => Ok(None),
+        // `miscible` is how the trade writes it; it holds no number, and nothing is lost by saying so to nobody.
+        Err(QuantityFault::WordOnly) if expected.what == Property::WaterSolubility.title() => Ok(None),
         Err(fault) => Err(word_fault(fault, expected)),
     }
 }

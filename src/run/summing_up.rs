@@ -1,0 +1,87 @@
+//! What a run tells at its end: options, columns, properties that no row had.
+
+use std::collections::BTreeSet;
+
+use crate::rules::{RuleSet, Weight};
+use crate::run::ScreenSettings;
+use crate::run::plan::Plan;
+use crate::substance::UnstatedBasis;
+use crate::workbook::column_letters;
+
+pub(crate) fn options(settings: &ScreenSettings) -> Vec<(&'static str, String)> {
+    let mut options = Vec::new();
+    let unstated = match settings.unstated {
+        UnstatedBasis::Measured => "measured",
+        UnstatedBasis::Unstated => "unstated (a rank of its own)",
+        UnstatedBasis::Calculated => "calculated",
+    };
+    options.push(("Values without a word on how they were obtained count as", unstated.to_owned()));
+    if !settings.sheets.is_empty() {
+        options.push(("Sheets named", settings.sheets.join(", ")));
+    }
+    for column in &settings.columns {
+        let field = column.field.map_or("ignore", crate::substance::Field::id);
+        options.push(("Column named", format!("{}={field}", column.header)));
+    }
+    options
+}
+
+pub(crate) fn column_remarks(plan: &Plan) -> Vec<String> {
+    let screened = plan.sheets.iter().filter_map(|sheet| sheet.screened.as_ref());
+    screened.flat_map(|screened| screened.recognised.remarks.iter().cloned()).collect()
+}
+
+pub(crate) fn unrecognised(plan: &Plan) -> Vec<String> {
+    let screened = plan.sheets.iter().filter_map(|sheet| Some((sheet, sheet.screened.as_ref()?)));
+    screened
+        .filter(|(_, screened)| !screened.recognised.unknown.is_empty())
+        .map(|(sheet, screened)| {
+            let unknown = screened.recognised.unknown.iter();
+            let headers: Vec<String> = unknown
+                .map(|(column, header)| {
+                    format!("{} `{}`", column_letters(*column), header.replace('\n', " "))
+                })
+                .collect();
+            format!(
+                "{}: not recognised and not used: {}; `--column 'Header=field'` says what a column holds",
+                sheet.name,
+                headers.join(", ")
+            )
+        })
+        .collect()
+}
+
+/// Properties that deciding tests ask for and no row had, with the criteria that ask, so that a rule nobody's data
+/// reach does not go unnoticed.
+pub(crate) fn unreached(rules: &RuleSet, reached: &[bool]) -> Vec<String> {
+    let tests = rules.rulebooks.iter().flat_map(|rulebook| {
+        rulebook.criteria.iter().flat_map(move |criterion| {
+            criterion.steps.iter().flat_map(move |step| {
+                step.tests
+                    .iter()
+                    .map(move |test| (step.weight, test, format!("{} {}", rulebook.short, criterion.id)))
+            })
+        })
+    });
+    let tests: Vec<_> =
+        tests.zip(reached).filter(|((weight, ..), _)| *weight != Weight::Supporting).collect();
+    // A criterion may ask for a property twice, for example given and estimated.
+    let had: BTreeSet<(&str, &str)> = tests
+        .iter()
+        .filter(|(_, reached)| **reached)
+        .map(|((_, test, criterion), _)| (test.subject.title(), criterion.as_str()))
+        .collect();
+    let mut asked: Vec<(&'static str, Vec<String>)> = Vec::new();
+    for ((_, test, criterion), _) in &tests {
+        let property = test.subject.title();
+        if had.contains(&(property, criterion.as_str())) {
+            continue;
+        }
+        match asked.iter_mut().find(|(known, _)| *known == property) {
+            Some((_, criteria)) if criteria.contains(criterion) => {}
+            Some((_, criteria)) => criteria.push(criterion.clone()),
+            None => asked.push((property, vec![criterion.clone()])),
+        }
+    }
+    asked.into_iter().map(|(property, criteria)| format!("{property} ({})", criteria.join(", "))).collect()
+}
