@@ -42,7 +42,8 @@ def main(screened: str, picture: str) -> None:
         book.save(copy)
         subprocess.run(["soffice", "--headless", "--convert-to", "pdf", "--outdir", folder, str(copy)], check=True, capture_output=True)
         stem = picture.removesuffix(".png")
-        command = ["pdftoppm", "-png", "-r", "110", "-f", "1", "-l", "1", "-singlefile", str(pathlib.Path(folder, "copy.pdf")), stem]
+        crop = ["-x", "85", "-y", "95", "-W", "1265", "-H", "530"]
+        command = ["pdftoppm", "-png", "-r", "130", *crop, "-singlefile", str(pathlib.Path(folder, "copy.pdf")), stem]
         subprocess.run(command, check=True)
 
 
