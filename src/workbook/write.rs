@@ -10,7 +10,7 @@ mod tests;
 use std::collections::BTreeMap;
 use std::path::Path;
 
-use rust_xlsxwriter::{DocProperties, ExcelDateTime, Workbook, Worksheet, XlsxError};
+use rust_xlsxwriter::{DocProperties, ExcelDateTime, Format, Workbook, Worksheet, XlsxError};
 
 use crate::fault::FileFault;
 use crate::quantity::Date;
@@ -18,6 +18,7 @@ use crate::quantity::Date;
 use super::appearance::Appearance;
 use super::caught::without_panic;
 use super::look::Looks;
+use super::place::LAST_ROW;
 use super::survey::{ColumnLayout, Visibility};
 pub use cells::{Target, Value};
 use height::USUAL_WIDTH;
@@ -199,12 +200,32 @@ impl AnnotatedWorkbook {
             sheet.set_active(true);
             Ok(())
         })?;
+        self.leave_last_rows()?;
         let Self { mut book, output, .. } = self;
         output.fill(|file| {
             without_panic(|| book.save_to_writer(file))
                 .map_err(|reason| output.failed(&reason))?
                 .map_err(|error| output.failed(&reason_of(&error)))
         })
+    }
+
+    /// At the end the writing library writes a last row that has a height twice, the second time empty, and spreadsheet
+    /// programs then call the file damaged. A blank cell below makes it leave the row before the end.
+    fn leave_last_rows(&mut self) -> Result<(), FileFault> {
+        let last: Vec<(SheetId, u32)> = self
+            .sheets
+            .iter()
+            .enumerate()
+            .filter(|(_, state)| state.lines > 1 && state.row < LAST_ROW)
+            .map(|(place, state)| (SheetId(place), state.row))
+            .collect();
+        for (sheet, row) in last {
+            self.on_sheet(sheet, |sheet| {
+                sheet.write_blank(row + 1, 0, &Format::new())?;
+                Ok(())
+            })?;
+        }
+        Ok(())
     }
 
     /// The writing library drops cells of rows it has left; that must never happen silently.

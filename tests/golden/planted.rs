@@ -85,3 +85,22 @@ fn every_screened_row_has_a_line_for_each_rulebook_and_criterion() {
     let criteria = 5 + 7 + 4 + 2;
     assert_eq!(EXAMPLE.sheets["Reasoning"].len(), 1 + EXAMPLE.summary.screened * criteria);
 }
+
+/// The guard that every inventory passes looks at the order of rows and cells, so the output has to pass it as well.
+#[test]
+fn the_output_is_itself_a_sound_workbook() {
+    let folder = tempfile::tempdir().unwrap();
+    let output = folder.path().join("screened.xlsx");
+    kowledger::run::screen(&crate::annotated::settings(&output)).unwrap();
+    let mut again = kowledger::workbook::open_inventory(&output).unwrap();
+    for sheet in 0..again.sheets().len() {
+        let mut rows = 0;
+        again
+            .stream_rows(sheet, |_| {
+                rows += 1;
+                std::ops::ControlFlow::Continue(())
+            })
+            .unwrap();
+        assert!(rows > 0, "sheet {sheet}");
+    }
+}

@@ -8,7 +8,7 @@ use crate::fault::FileFault;
 use crate::workbook::appearance::{Appearance, Lines};
 use crate::workbook::content::{Cell, CellContent, Row};
 use crate::workbook::look::Look;
-use crate::workbook::place::CellRef;
+use crate::workbook::place::{CellRef, LAST_ROW};
 
 use super::height::{height_of, lines_of};
 use super::names::cut;
@@ -133,7 +133,8 @@ impl AnnotatedWorkbook {
         };
         state.lines = state.lines.max(lines_of(text, state.width(column)));
         let lines = state.lines;
-        if lines == 1 {
+        // Below the last possible row there is none to go to, see `leave_last_rows`.
+        if lines == 1 || row == LAST_ROW {
             return Ok(());
         }
         self.on_sheet(sheet, |sheet| {
