@@ -13,7 +13,7 @@ mod run_record;
 pub use added::{AddedColumns, added_columns, added_entries, unscreened_entries};
 pub use cautions_of_use::CAUTIONS_OF_USE;
 pub use lines::{REASONING_COLUMNS, ReasoningMode, reasoning_entries};
-pub use record::{RECORD_FORMAT, record_entries, record_head};
+pub use record::{RECORD_FORMAT, RECORD_MARK, RECORD_SHEET, record_entries, record_head};
 pub use rulebooks::rulebooks_table;
 pub use run_record::{RunFacts, SheetFacts, run_record_table};
 

@@ -92,6 +92,14 @@ pub enum FileFault {
         /// Columns to add.
         needed: usize,
     },
+    /// The inventory is an output of this program.
+    #[error(
+        "{path}: has been screened already (it holds the hidden sheet `Record`); screen the inventory it was made from, which the sheet `Run record` names"
+    )]
+    AlreadyScreened {
+        /// The path as given.
+        path: String,
+    },
     /// The output exists and may not be replaced.
     #[error("{path}: exists already; add `--force` to replace it, or choose another `--output`")]
     OutputExists {

@@ -8,6 +8,12 @@ use crate::report::Entry;
 use crate::rules::RuleSet;
 use crate::workbook::Look;
 
+/// The name of the very hidden sheet.
+pub const RECORD_SHEET: &str = "Record";
+
+/// What its first cell holds.
+pub const RECORD_MARK: &str = "format";
+
 /// The number of the Record's format.
 pub const RECORD_FORMAT: u32 = 1;
 
@@ -18,7 +24,7 @@ const CHARACTERS_A_CELL: usize = 30_000;
 pub fn record_head(rules: &RuleSet, spans: &[(String, u32, u16, Vec<String>)]) -> Vec<Vec<Entry>> {
     let text = |text: &str| Entry::text(text, Look::Text);
     let mut rows = vec![
-        vec![text("format"), Entry::number(Some(f64::from(RECORD_FORMAT)), Look::Text)],
+        vec![text(RECORD_MARK), Entry::number(Some(f64::from(RECORD_FORMAT)), Look::Text)],
         vec![text("version"), text(env!("CARGO_PKG_VERSION"))],
     ];
     for rule in &rules.texts {

@@ -5,7 +5,7 @@ use std::collections::BTreeMap;
 use crate::fault::{CellFault, Refusal};
 use crate::judge::Verdict;
 use crate::report::{
-    Entry, ReasoningMode, RunFacts, SheetFacts, record_head, rulebooks_table, run_record_table,
+    Entry, RECORD_SHEET, ReasoningMode, RunFacts, SheetFacts, record_head, rulebooks_table, run_record_table,
     unscreened_entries,
 };
 use crate::rules::RuleSet;
@@ -67,8 +67,8 @@ impl Output {
             ReasoningMode::None => None,
         };
         let record = SheetWriter {
-            name: "Record",
-            sheet: workbook.add_sheet("Record", Visibility::VeryHidden)?,
+            name: RECORD_SHEET,
+            sheet: workbook.add_sheet(RECORD_SHEET, Visibility::VeryHidden)?,
             next_row: 0,
             part: 1,
         };

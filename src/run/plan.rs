@@ -5,11 +5,11 @@ use std::sync::Arc;
 
 use crate::columns::{ColumnOverride, ColumnWords, Recognised, recognise};
 use crate::fault::{FileFault, Refusal, nearest};
-use crate::report::{AddedColumns, ReasoningMode, added_columns};
+use crate::report::{AddedColumns, RECORD_MARK, RECORD_SHEET, ReasoningMode, added_columns};
 use crate::rules::RuleSet;
 use crate::run::{ReasoningChoice, ScreenSettings};
 use crate::substance::RowReader;
-use crate::workbook::{CellContent, Inventory, Row, open_inventory};
+use crate::workbook::{CellContent, Inventory, Row, Visibility, open_inventory};
 
 /// Rows at the top of a sheet in which a header is looked for and decimal styles are sampled.
 const ROWS_LOOKED_AT: usize = 200;
@@ -94,6 +94,7 @@ impl Plan {
         settings: &ScreenSettings,
     ) -> Result<Self, Refusal> {
         refuse_unknown_sheets(inventory, settings)?;
+        refuse_own_output(inventory, settings)?;
         let words = ColumnWords::built_in().map_err(Refusal::Usage)?;
         let mut sheets = Vec::new();
         let mut lines = 0;
@@ -196,6 +197,30 @@ fn refuse_unknown_sheets(inventory: &Inventory, settings: &ScreenSettings) -> Re
                 names.join(", ")
             )));
         }
+    }
+    Ok(())
+}
+
+/// An output fed in again is recognised by its Record and by nothing else. Its added columns and sheets are no inventory.
+fn refuse_own_output(inventory: &mut Inventory, settings: &ScreenSettings) -> Result<(), Refusal> {
+    let record = inventory
+        .sheets()
+        .iter()
+        .position(|sheet| sheet.visibility == Visibility::VeryHidden && &*sheet.name == RECORD_SHEET);
+    let Some(record) = record else {
+        return Ok(());
+    };
+    let first = inventory.first_rows(record, 1)?;
+    let is_ours = first.first().and_then(|row| row.cell(0)).is_some_and(|cell| match &cell.content {
+        CellContent::Text(text) => text == RECORD_MARK,
+        CellContent::Empty
+        | CellContent::Number(_)
+        | CellContent::Boolean(_)
+        | CellContent::DateTime(_)
+        | CellContent::Error(_) => false,
+    });
+    if is_ours {
+        return Err(FileFault::AlreadyScreened { path: settings.inventory.display().to_string() }.into());
     }
     Ok(())
 }

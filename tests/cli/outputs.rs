@@ -90,3 +90,13 @@ fn another_day_is_another_date_in_the_run_record() {
     place.run(&["screen", "inventory.xlsx", "--date", "2026-12-02"]);
     assert!(place.screened("Run record").text().contains("Date of the run|2026-12-02"));
 }
+
+#[test]
+fn an_output_fed_in_again_is_refused_and_says_what_to_screen() {
+    let place = Place::with_rows(sound_rows());
+    place.run(&["screen", "inventory.xlsx", "--output", "once.xlsx"]);
+    let again = place.run(&["screen", "once.xlsx", "--output", "twice.xlsx"]);
+    assert_eq!(again.status, 2);
+    assert!(again.complained.contains("has been screened already"), "{}", again.complained);
+    assert!(!place.path("twice.xlsx").exists());
+}

@@ -166,15 +166,30 @@ fn of_the_books(
     })
 }
 
+/// The same cases in every run, so that a change is to blame for a failure; `PROPTEST_RNG_SEED` and `PROPTEST_CASES`
+/// draw others.
+fn sampling() -> proptest::test_runner::Config {
+    let chosen = proptest::test_runner::Config::default();
+    let rng_seed = match chosen.rng_seed {
+        proptest::test_runner::RngSeed::Random => proptest::test_runner::RngSeed::Fixed(20_261_201),
+        fixed @ proptest::test_runner::RngSeed::Fixed(_) => fixed,
+    };
+    proptest::test_runner::Config { rng_seed, failure_persistence: None, ..chosen }
+}
+
 proptest! {
+    #![proptest_config(sampling())]
+
     /// Of several values of one basis the one of more concern counts, so that a further one, whatever it is, lowers no
     /// concern. Restricted to a basis and to conditions that the property has already: a value of a better basis
-    /// replaces the others, and the first value of a property may keep an `only-if` step from being taken.
+    /// replaces the others, and the first value of a property may keep an `only-if` step from being taken. Not of pKa,
+    /// which is held against no limit but says what a measured log Kow means.
     #[test]
     fn a_further_value_of_the_same_basis_never_lowers_a_verdict(
         readings in vec(drawn(), 1..9), words in words(), which in any::<proptest::sample::Index>(), share in 0.0..1.0,
     ) {
         let mut known = which.get(&readings).clone();
+        proptest::prop_assume!(known.property != Property::PkaAcid);
         known.conditions.reliability = None;
         let mut readings = readings;
         for alike in readings.iter_mut().filter(|reading| reading.property == known.property) {

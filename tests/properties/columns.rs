@@ -268,6 +268,8 @@ fn rows_without_text_are_no_header() {
 }
 
 proptest::proptest! {
+    #![proptest_config(crate::sampling())]
+
     #[test]
     fn no_header_panics(headers in proptest::collection::vec(proptest::prelude::any::<String>(), 1..6)) {
         let texts: Vec<&str> = headers.iter().map(String::as_str).collect();

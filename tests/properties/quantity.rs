@@ -80,6 +80,8 @@ fn members(interval: Interval, limit: f64, shares: &[f64]) -> Vec<f64> {
 }
 
 proptest! {
+    #![proptest_config(crate::sampling())]
+
     #[test]
     fn no_text_panics(text in any::<String>(), comma in any::<bool>()) {
         let style = if comma { DecimalStyle::Comma } else { DecimalStyle::Point };

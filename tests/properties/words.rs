@@ -410,6 +410,8 @@ fn one_reader_serves_all_threads() {
 }
 
 proptest::proptest! {
+    #![proptest_config(crate::sampling())]
+
     #[test]
     fn no_row_of_text_panics(text in proptest::prelude::any::<String>()) {
         let headers = [
