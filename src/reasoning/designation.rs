@@ -7,7 +7,7 @@ use crate::reasoning::criterion::shown_step;
 use crate::reasoning::sentence::{deciding_sentence, places_with_value};
 use crate::reasoning::value::{listed, telling_tests, test_brief};
 use crate::reasoning::{Book, Told};
-use crate::rules::{Criterion, Designation, DesignationPart, Step};
+use crate::rules::{Criterion, Designation, DesignationPart, Step, Weight};
 use crate::substance::Identity;
 
 /// The words of a criterion's cell: the verdict, or the ratings its value may have.
@@ -100,7 +100,11 @@ fn designation_why(book: Book, index: usize) -> String {
             "Which substance it is is not sure, so nothing clears it; "
         }
     };
-    format!("{doubt}{}", parts.join("; "))
+    let unseen = match (book.rulebook.strongest, judged.verdict) {
+        (Weight::Screening, Verdict::ScreensOut) => "; other evidence that the instrument takes was not looked at",
+        (_, _) => "",
+    };
+    format!("{doubt}{}{unseen}", parts.join("; "))
 }
 
 /// Which caution puts the substance outside the instrument, and what raised it.
