@@ -101,7 +101,9 @@ fn designation_why(book: Book, index: usize) -> String {
         }
     };
     let unseen = match (book.rulebook.strongest, judged.verdict) {
-        (Weight::Screening, Verdict::ScreensOut) => "; other evidence that the instrument takes was not looked at",
+        (Weight::Screening, Verdict::ScreensOut) => {
+            "; other evidence that the instrument takes was not looked at"
+        }
         (_, _) => "",
     };
     format!("{doubt}{}{unseen}", parts.join("; "))

@@ -155,7 +155,9 @@ fn passed_over(told: Told, criterion: &Criterion, judged: &CriterionJudgement, e
             }
         }
     }
-    let absent = titles(absent.into_iter());
+    // What a sentence before has told to be missing need not be told again.
+    let absent: Vec<String> =
+        titles(absent.into_iter()).into_iter().filter(|title| !said.contains(title)).collect();
     if !absent.is_empty() {
         sentences.push(format!(
             "The inventory holds no {}, which does not mean that there is none",
@@ -198,7 +200,9 @@ fn step_sentence(
         StepState::Partial => {
             let missing = came_out.by.iter().filter_map(|test| rule.tests.get(*test));
             let needed = titles(missing.filter(|test| !test.optional).map(|test| test.subject));
-            format!("{}, but there is no {}", listed(&known), alternatives(&needed))
+            let sentence = format!("{}, but there is no {}", listed(&known), alternatives(&needed));
+            said.extend(needed);
+            sentence
         }
         StepState::Undecided
         | StepState::Empty
