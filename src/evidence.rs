@@ -7,7 +7,7 @@ mod gather;
 
 use std::collections::BTreeMap;
 
-pub use gather::{gather_evidence, ionisation};
+pub use gather::gather_evidence;
 
 use crate::quantity::Interval;
 use crate::substance::{Basis, Conditions, Property};

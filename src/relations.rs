@@ -6,7 +6,7 @@
 mod estimate;
 mod file;
 
-pub use estimate::{Estimate, Ionisation, LogKow};
+pub use estimate::{Estimate, LogKow};
 pub(crate) use file::read_relations;
 
 use crate::quantity::Interval;

@@ -123,6 +123,11 @@ pub enum Identity {
     NotIdentified,
 }
 
+/// Decades of pH from its pKa at which a tenth of a group is left in the other form: log10(9).
+const NINE_TO_ONE: f64 = 0.954_242_509_439_324_9;
+/// The environment's pH, lowest and highest, as rulebooks on mobility take it.
+const ENVIRONMENTAL_PH: (f64, f64) = (4.0, 9.0);
+
 /// One row of an inventory, as far as it could be read.
 #[derive(Debug, Clone, PartialEq)]
 pub struct Substance {
@@ -193,6 +198,20 @@ impl Substance {
             texts: BTreeMap::new(),
             faults: Vec::new(),
         }
+    }
+
+    /// The pKa of the row that puts at least a tenth of the substance into its ionised form somewhere from pH 4 to 9.
+    pub fn ionising_pka(&self) -> Option<(Property, &Reading)> {
+        let acid = self.readings_of(Property::PkaAcid).iter().find(|reading| {
+            let low = reading.quantity.interval.low().number();
+            low.is_none_or(|low| low < ENVIRONMENTAL_PH.1 + NINE_TO_ONE)
+        });
+        let base = self.readings_of(Property::PkaBase).iter().find(|reading| {
+            let high = reading.quantity.interval.high().number();
+            high.is_none_or(|high| high > ENVIRONMENTAL_PH.0 - NINE_TO_ONE)
+        });
+        let acid = acid.map(|reading| (Property::PkaAcid, reading));
+        acid.or_else(|| base.map(|reading| (Property::PkaBase, reading)))
     }
 
     /// The values of a property, in order of column.

@@ -2,7 +2,7 @@
 
 use crate::evidence::{Evidence, EvidenceSet, Origin, Standing, best_ranked};
 use crate::quantity::{Bound, Interval, Unit};
-use crate::relations::{Estimate, Ionisation, LogKow, Relations};
+use crate::relations::{Estimate, LogKow, Relations};
 use crate::substance::{Basis, Conditions, Property, Reading, Substance};
 
 /// Everything the row says and everything the relations make of it.
@@ -21,21 +21,6 @@ pub fn gather_evidence(substance: &Substance, relations: &Relations) -> Evidence
         }
     }
     evidence
-}
-
-/// Whether a pKa of the row puts more than a tenth of the substance into its ionised form somewhere from pH 4 to 9.
-pub fn ionisation(substance: &Substance) -> Ionisation {
-    let acid = substance.readings_of(Property::PkaAcid).iter().any(|reading| may_lie_below(reading, 10.0));
-    let base = substance.readings_of(Property::PkaBase).iter().any(|reading| may_lie_above(reading, 3.0));
-    if acid || base { Ionisation::Ionisable } else { Ionisation::Unknown }
-}
-
-fn may_lie_below(reading: &Reading, limit: f64) -> bool {
-    reading.quantity.interval.low().number().is_none_or(|low| low < limit)
-}
-
-fn may_lie_above(reading: &Reading, limit: f64) -> bool {
-    reading.quantity.interval.high().number().is_none_or(|high| high > limit)
 }
 
 fn from_reading(
@@ -140,7 +125,7 @@ fn estimate(
         }
         End::Low => values.sort_by(|one, other| one.lower_value().total_cmp(&other.lower_value())),
     }
-    let at = |interval, sd| relations.estimate(property, LogKow { interval, sd }, ionisation(substance));
+    let at = |interval, sd| relations.estimate(property, LogKow { interval, sd });
     let (place, log_kow, estimate) = values
         .iter()
         .enumerate()

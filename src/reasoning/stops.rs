@@ -57,6 +57,9 @@ fn low_side_phrase(told: Told, relation: usize, log_value: f64) -> String {
     let Some(line) = told.rules.relations.relations.get(relation) else { return String::new() };
     let unit = line.to.default_unit().symbol();
     let kind = match line.side {
+        Side::Ionised if told.substance.ionising_pka().is_some() => {
+            "ionised, as its pKa says it is between pH 4 and 9"
+        }
         Side::Ionised => "if it ionises between pH 4 and 9, which is not known",
         Side::Class | Side::Central => "if it belongs to another class of substances, which is not known",
     };

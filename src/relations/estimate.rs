@@ -5,15 +5,6 @@ use crate::quantity::{Bound, Interval, chance_beyond, normal_cumulative};
 use crate::relations::{Relation, Relations, Side};
 use crate::substance::Property;
 
-/// Whether the substance is ionised between pH 4 and 9, as far as the row tells.
-#[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord, Hash)]
-pub enum Ionisation {
-    /// Nothing in the row tells.
-    Unknown,
-    /// A pKa of the row puts it there.
-    Ionisable,
-}
-
 /// A log Kow and its standard deviation, as it enters a relation.
 #[derive(Debug, Clone, Copy, PartialEq)]
 pub struct LogKow {
@@ -86,7 +77,7 @@ impl Relations {
     /// The estimate of a property from a log Kow, or nothing where no leading relation holds.
     ///
     /// For a molar relation the caller adds the logarithm of the molar mass in mg/mmol.
-    pub fn estimate(&self, to: Property, log_kow: LogKow, ionisation: Ionisation) -> Option<Estimate> {
+    pub fn estimate(&self, to: Property, log_kow: LogKow) -> Option<Estimate> {
         let of_target = || self.relations.iter().enumerate().filter(move |(_, relation)| relation.to == to);
         let (leading, relation) = of_target()
             .find(|(_, relation)| relation.side == Side::Central && relation.holds_for(log_kow.interval))?;
@@ -110,13 +101,13 @@ impl Relations {
                 .zip(log_kow.sd)
                 .map(|(value, sd)| (relation.slope(value) * sd).hypot(relation.sd)),
             others,
-            low_side: self.low_side(to, log_kow.interval, ionisation),
+            low_side: self.low_side(to, log_kow.interval),
         })
     }
 
     /// The class of a substance is not known without its structure, so every line in domain could apply; and a
     /// substance that ionises, or may, is also held against the lines for the ionised form.
-    fn low_side(&self, to: Property, log_kow: Interval, ionisation: Ionisation) -> Option<(usize, f64)> {
+    fn low_side(&self, to: Property, log_kow: Interval) -> Option<(usize, f64)> {
         let ends = [log_kow.low().number()?, log_kow.high().number()?];
         self.relations
             .iter()
@@ -124,9 +115,7 @@ impl Relations {
             .filter(|(_, relation)| relation.to == to)
             .filter(|(_, relation)| match relation.side {
                 Side::Central | Side::Class => relation.holds_for(log_kow),
-                Side::Ionised => match ionisation {
-                    Ionisation::Unknown | Ionisation::Ionisable => true,
-                },
+                Side::Ionised => true,
             })
             .flat_map(|(index, relation)| ends.map(|end| (index, relation.log_value(end) - relation.sd)))
             .min_by(|one, other| one.1.total_cmp(&other.1))
@@ -178,7 +167,7 @@ impl Relations {
 
 #[cfg(test)]
 mod tests {
-    use super::{Ionisation, LogKow};
+    use super::LogKow;
     use crate::quantity::{Bound, Interval};
     use crate::relations::{Relation, Relations, Side};
     use crate::rules::Checked;
@@ -218,7 +207,7 @@ mod tests {
     #[test]
     fn the_first_relation_whose_domain_holds_leads() {
         let relations = relations();
-        let at = |value| relations.estimate(Property::Bcf, point(value, 0.2), Ionisation::Unknown);
+        let at = |value| relations.estimate(Property::Bcf, point(value, 0.2));
         assert_eq!(at(6.0).map(|estimate| estimate.leading), Some(0));
         assert_eq!(at(6.1).map(|estimate| estimate.leading), Some(1));
         assert_eq!(at(10.1), None);
@@ -229,21 +218,21 @@ mod tests {
     fn an_open_interval_gives_no_estimate() {
         let open =
             LogKow { interval: Interval::new(Bound::Excluded(6.0), Bound::Unbounded).unwrap(), sd: None };
-        assert_eq!(relations().estimate(Property::Bcf, open, Ionisation::Unknown), None);
+        assert_eq!(relations().estimate(Property::Bcf, open), None);
     }
 
     #[test]
     fn a_range_over_the_top_of_a_curve_reaches_the_top() {
         let range =
             LogKow { interval: Interval::new(Bound::Included(6.2), Bound::Included(7.5)).unwrap(), sd: None };
-        let estimate = relations().estimate(Property::Bcf, range, Ionisation::Unknown).unwrap();
+        let estimate = relations().estimate(Property::Bcf, range).unwrap();
         // The parabola's maximum is -4.72 + 2.74^2 / (4 x 0.20) = 4.6645 at 6.85.
         assert!((estimate.log_value.high().number().unwrap() - 4.6645).abs() < 1e-4);
     }
 
     #[test]
     fn the_low_side_is_the_lowest_line_in_domain_less_its_error() {
-        let estimate = relations().estimate(Property::Bcf, point(4.0, 0.2), Ionisation::Unknown).unwrap();
+        let estimate = relations().estimate(Property::Bcf, point(4.0, 0.2)).unwrap();
         let (index, lowest) = estimate.low_side.unwrap();
         assert_eq!(index, 2);
         assert!((lowest - (0.39 * 4.0 + 0.5 - 0.4)).abs() < 1e-12);

@@ -56,11 +56,6 @@ pub enum Blocks {
     Subjects(BTreeSet<Subject>),
 }
 
-/// Decades of pH above its pKa at which 10 % of a group is left in the other form: log10(9).
-const NINE_TO_ONE: f64 = 0.954_242_509_439_324_9;
-/// The environment's pH, lowest and highest, as rulebooks on mobility take it.
-const PH_RANGE: (f64, f64) = (4.0, 9.0);
-
 impl Caution {
     /// What of the substance raises the caution, in words; `None` if nothing does.
     pub fn is_raised_by(&self, substance: &Substance) -> Option<String> {
@@ -127,17 +122,7 @@ impl Triggers {
         if !self.ionisable {
             return None;
         }
-        let acid = substance.readings_of(Property::PkaAcid).iter().find(|reading| {
-            let low = reading.quantity.interval.low().number();
-            low.is_none_or(|low| low < PH_RANGE.1 + NINE_TO_ONE)
-        });
-        let base = substance.readings_of(Property::PkaBase).iter().find(|reading| {
-            let high = reading.quantity.interval.high().number();
-            high.is_none_or(|high| high > PH_RANGE.0 - NINE_TO_ONE)
-        });
-        let (property, reading) = acid
-            .map(|reading| (Property::PkaAcid, reading))
-            .or_else(|| base.map(|reading| (Property::PkaBase, reading)))?;
+        let (property, reading) = substance.ionising_pka()?;
         Some(format!("the {} is {}", property.title(), reading.quantity.reported))
     }
 }

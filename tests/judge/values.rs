@@ -126,3 +126,12 @@ fn baseline_toxicity_needs_the_molar_mass() {
     let found = evidence.of(Property::AcuteToxicity)[0].interval.single().expect("a value");
     assert!((found.log10() - (-3.94 + 5.0)).abs() < 1e-9, "{found}");
 }
+
+#[test]
+fn whether_a_substance_ionises_is_told_as_not_known_only_where_no_pka_tells() {
+    let lipophilic = || row().measured(Property::LogKow, Value::Point(5.0));
+    let unknown = lipophilic().judged().sentence("CLP", "M");
+    assert!(unknown.contains("if it ionises between pH 4 and 9, which is not known"), "{unknown}");
+    let acid = lipophilic().measured(Property::PkaAcid, Value::Point(4.5)).judged().sentence("CLP", "M");
+    assert!(acid.contains("as its pKa says") && !acid.contains("which is not known"), "{acid}");
+}

@@ -84,13 +84,13 @@ fn the_leading_koc_line_has_the_error_against_measurements_that_was_computed_ind
 #[test]
 fn the_low_side_of_an_estimated_koc_lies_below_every_measured_value() {
     use kowledger::quantity::Interval;
-    use kowledger::relations::{Ionisation, LogKow};
+    use kowledger::relations::LogKow;
     use kowledger::substance::Property;
     for line in lines("koc_measured.csv") {
         let interval = Interval::point(number(&line, "log_kow")).expect("a number");
         let estimate = RULES
             .relations
-            .estimate(Property::Koc, LogKow { interval, sd: Some(0.2) }, Ionisation::Unknown)
+            .estimate(Property::Koc, LogKow { interval, sd: Some(0.2) })
             .expect("an estimate in domain");
         let (_, low_side) = estimate.low_side.expect("a low side");
         assert!(low_side < number(&line, "log_koc"), "{}: {low_side}", line["name"]);
