@@ -135,3 +135,16 @@ fn whether_a_substance_ionises_is_told_as_not_known_only_where_no_pka_tells() {
     let acid = lipophilic().measured(Property::PkaAcid, Value::Point(4.5)).judged().sentence("CLP", "M");
     assert!(acid.contains("as its pKa says") && !acid.contains("which is not known"), "{acid}");
 }
+
+/// `> 2.79` gives no estimate of its own, but it says that Koc is at least that of 2.79: 0.81 x 2.79 + 0.10 = 2.36, above
+/// the limit of 2 by less than the line's error of 0.45.
+#[test]
+fn a_log_kow_without_an_estimate_opens_the_estimate_only_as_far_as_it_could_reach() {
+    let open = || {
+        row().measured(Property::LogKow, Value::Greater(2.79)).measured(Property::LogKow, Value::Point(3.64))
+    };
+    assert_eq!(open().judged().cell("CLP", "M"), "screens in (close call)");
+    assert_eq!(open().judged().cell("CLP", "vM"), "unresolved (close call)");
+    let further = open().measured(Property::LogKow, Value::Point(2.73));
+    assert_eq!(further.judged().cell("CLP", "vM"), "unresolved (close call)");
+}
