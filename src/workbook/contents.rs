@@ -80,8 +80,7 @@ fn main_part(package: &mut Package) -> Result<String, FileFault> {
             Err(package.damaged(format!("its main part `{main}` is missing")))
         }
         Some(_) | None => {
-            let media_type = package.beginning_of("mimetype");
-            let found = guard::kind_of_parts(package.part_names(), &media_type);
+            let found = guard::kind_of_package(package);
             Err(match found {
                 FileKind::Archive if package.has("xl/workbook.xml") => {
                     package.damaged("it does not say which part is the workbook")

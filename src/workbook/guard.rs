@@ -6,14 +6,26 @@ use std::path::Path;
 
 use crate::fault::{FileFault, FileKind};
 
+use super::package::Package;
+
 /// How much of an old binary file is searched for the names of its streams, in bytes.
 const SEARCHED: u64 = 32 << 20;
 
 /// How much of a text is looked at to tell what kind it is, in bytes.
 const GLANCED_AT: u64 = 4096;
 
-/// Opens a file that begins as a zip container; whether a workbook is in it shows later.
-pub(super) fn open_container(path: &Path) -> Result<File, FileFault> {
+/// A file that may hold an inventory, by how it begins.
+pub(super) enum Container {
+    /// A zip container; what is in it shows later.
+    Zip(File),
+    /// A workbook of the old binary format, in its compound file or bare.
+    Compound(File),
+    /// Lines of text.
+    Text(File),
+}
+
+/// Opens a file that may hold an inventory; anything else is named as what it is.
+pub(super) fn open(path: &Path) -> Result<Container, FileFault> {
     let shown = path.display().to_string();
     let unreadable = |error: std::io::Error| FileFault::Unreadable {
         path: path.display().to_string(),
@@ -33,9 +45,13 @@ pub(super) fn open_container(path: &Path) -> Result<File, FileFault> {
         return Err(FileFault::Unreadable { path: shown, reason: "it is not a regular file".to_owned() });
     }
     let mut file = File::open(path).map_err(unreadable)?;
-    match kind_by_content(&mut file).map_err(unreadable)? {
+    let found = kind_by_content(&mut file).map_err(unreadable)?;
+    file.seek(SeekFrom::Start(0)).map_err(unreadable)?;
+    match found {
+        None => Ok(Container::Zip(file)),
+        Some(FileKind::Xls) => Ok(Container::Compound(file)),
+        Some(FileKind::Text) => Ok(Container::Text(file)),
         Some(found) => Err(FileFault::AnotherKind { path: shown, found }),
-        None => Ok(file),
     }
 }
 
@@ -126,8 +142,14 @@ fn kind_of_text(text: &str) -> FileKind {
     }
 }
 
+/// What a zip container holds, as far as the names of its parts tell; an xlsx workbook is an archive here.
+pub(super) fn kind_of_package(package: &mut Package) -> FileKind {
+    let media_type = package.beginning_of("mimetype");
+    kind_of_parts(package.part_names(), &media_type)
+}
+
 /// What a container without an xlsx workbook holds, by the names of its parts.
-pub(super) fn kind_of_parts<'name>(names: impl Iterator<Item = &'name str>, media_type: &str) -> FileKind {
+fn kind_of_parts<'name>(names: impl Iterator<Item = &'name str>, media_type: &str) -> FileKind {
     if media_type.starts_with("application/vnd.oasis.opendocument.spreadsheet") {
         return FileKind::Ods;
     }

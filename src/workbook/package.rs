@@ -12,8 +12,6 @@ use zip::result::ZipError;
 
 use crate::fault::FileFault;
 
-use super::guard;
-
 /// How far a workbook may unpack.
 #[derive(Debug, Clone, Copy)]
 pub(super) struct Limits {
@@ -45,9 +43,8 @@ pub(super) struct Package {
 }
 
 impl Package {
-    /// Opens the container, refusing what is none or cannot be listed.
-    pub(super) fn open(path: &Path, limits: Limits) -> Result<Self, FileFault> {
-        let file = guard::open_container(path)?;
+    /// Lists the container's parts, refusing one that cannot be listed.
+    pub(super) fn new(path: &Path, file: File, limits: Limits) -> Result<Self, FileFault> {
         let path = path.display().to_string();
         let damaged = |error: ZipError| FileFault::Damaged {
             path: path.clone(),

@@ -1,67 +1,88 @@
-//! Opens an inventory and streams its rows. It gives no cell a meaning and never holds a whole sheet.
+//! Opens an inventory of any kind and streams its rows. It gives no cell a meaning.
+//!
+//! What a file is, its content says. Each kind has a module of its own that surveys it once and then streams it as often
+//! as asked; past them nobody knows which kind it was.
 
-mod rows;
+mod ods;
 #[cfg(test)]
 mod tests;
+mod text;
+mod xls;
+mod xlsb;
+mod xlsx;
 
 use std::fs::File;
-use std::io::BufReader;
 use std::ops::ControlFlow;
 use std::path::Path;
 
-use calamine::{Reader, Xlsx};
 use sha2::{Digest, Sha256};
 
-use crate::fault::{FileFault, SheetFault};
+use crate::fault::{FileFault, FileKind, SheetFault};
 
 use super::appearance::Appearance;
-use super::caught::without_panic;
 use super::content::Row;
-use super::contents::{Contents, read_contents};
-use super::not_carried::parts_not_carried;
+use super::guard::{self, Container};
 use super::package::{Limits, Package};
-use super::survey::{SheetSurvey, survey_sheet};
-use rows::{Rows, Styles};
+use super::survey::SheetSurvey;
 
 /// An inventory, surveyed and ready to be streamed, sheet by sheet.
 pub struct Inventory {
     path: String,
-    book: Xlsx<BufReader<File>>,
+    source: Source,
     sheets: Vec<SheetSurvey>,
     appearances: Vec<Appearance>,
     not_carried: Vec<String>,
     fingerprint: String,
 }
 
+/// What a module for one kind of file found when it opened and surveyed it.
+struct Opened {
+    source: Source,
+    /// The worksheets in the order of their tabs.
+    sheets: Vec<SheetSurvey>,
+    /// The cell formats; format 0 is that of every cell without one.
+    appearances: Vec<Appearance>,
+    /// What an annotated copy will lack, in sentences.
+    not_carried: Vec<String>,
+}
+
+/// The opened file.
+enum Source {
+    Xlsx(xlsx::Book),
+    Xlsb(xlsb::Book),
+    Xls(xls::Book),
+    Ods(ods::Book),
+    Text(text::Book),
+}
+
+/// Takes rows as they come; breaks off when it has enough.
+type Visit<'visit> = dyn FnMut(Row) -> ControlFlow<()> + 'visit;
+
 /// Opens and surveys an inventory.
 ///
 /// # Errors
-/// A [`FileFault`] if the file is no xlsx workbook, is damaged, or has cells that would be misread.
+/// A [`FileFault`] if the file is no inventory, is damaged, or has cells that would be misread.
 pub fn open_inventory(path: &Path) -> Result<Inventory, FileFault> {
     open_within(path, Limits::USUAL)
 }
 
 fn open_within(path: &Path, limits: Limits) -> Result<Inventory, FileFault> {
-    let mut package = Package::open(path, limits)?;
-    let contents = read_contents(&mut package)?;
-    package.allow_sheets();
-    let mut sheets = Vec::new();
-    for entry in &contents.sheets {
-        sheets.push(survey_sheet(&mut package, entry, contents.shared_texts)?);
-    }
-    let mut book = open_book(path)?;
-    check_same_sheets(&book, &package, &contents)?;
-    let appearances = read_appearances(&mut book, &package, &sheets)?;
-    let mut not_carried = parts_not_carried(package.part_names(), &contents);
-    not_carried.extend(sheets.iter().flat_map(SheetSurvey::not_carried));
-    Ok(Inventory {
-        path: path.display().to_string(),
-        book,
-        sheets,
-        appearances,
-        not_carried,
-        fingerprint: fingerprint_of(path)?,
-    })
+    let opened = match guard::open(path)? {
+        Container::Zip(file) => {
+            let mut package = Package::new(path, file, limits)?;
+            match guard::kind_of_package(&mut package) {
+                FileKind::Ods => ods::open(path, package)?,
+                FileKind::Xlsb => xlsb::open(path, package)?,
+                // Whether it is a workbook at all is for its own description of itself to say.
+                _ => xlsx::open(path, package)?,
+            }
+        }
+        Container::Compound(file) => xls::open(path, file, limits)?,
+        Container::Text(file) => text::open(path, file, limits)?,
+    };
+    let Opened { source, sheets, appearances, not_carried } = opened;
+    let fingerprint = fingerprint_of(path)?;
+    Ok(Inventory { path: path.display().to_string(), source, sheets, appearances, not_carried, fingerprint })
 }
 
 impl Inventory {
@@ -114,78 +135,21 @@ impl Inventory {
         let Some(survey) = self.sheets.get(sheet) else {
             return Ok(());
         };
-        let fault = |reason: String| FileFault::Sheet {
+        let outcome = match &mut self.source {
+            Source::Xlsx(book) => book.stream(survey, &self.appearances, &mut visit),
+            Source::Xlsb(book) => book.stream(sheet, survey, &mut visit),
+            Source::Xls(book) => book.stream(sheet, &mut visit),
+            Source::Ods(book) => book.stream(sheet, survey, &mut visit),
+            Source::Text(book) => book.stream(&mut visit),
+        };
+        outcome.map_err(|reason| FileFault::Sheet {
             path: self.path.clone(),
             fault: SheetFault::Whole {
                 sheet: survey.name.to_string(),
                 what: format!("could not be read to its end: {reason}"),
             },
-        };
-        let styles = Styles {
-            plain: self.appearances.first().is_none_or(Appearance::is_plain),
-            known: self.appearances.len(),
-        };
-        let counts_from_1904 = self.book.has_1904_epoch();
-        let reader = without_panic(|| self.book.worksheet_cells_reader(&survey.name))
-            .map_err(&fault)?
-            .map_err(|error| fault(error.to_string()))?;
-        let mut rows = Rows::new(reader, survey, styles, counts_from_1904);
-        loop {
-            match without_panic(|| rows.next_row()).map_err(&fault)?.map_err(&fault)? {
-                Some(row) => {
-                    if visit(row).is_break() {
-                        return Ok(());
-                    }
-                }
-                None => return Ok(()),
-            }
-        }
+        })
     }
-}
-
-fn open_book(path: &Path) -> Result<Xlsx<BufReader<File>>, FileFault> {
-    let shown = path.display().to_string();
-    let file = File::open(path)
-        .map_err(|error| FileFault::Unreadable { path: shown.clone(), reason: error.to_string() })?;
-    let damaged = |what: String| FileFault::Damaged { path: shown.clone(), what };
-    without_panic(|| Xlsx::new(BufReader::new(file)))
-        .map_err(damaged)?
-        .map_err(|error| damaged(error.to_string()))
-}
-
-/// Guards against the survey and the reading library having looked at different sheets.
-fn check_same_sheets(
-    book: &Xlsx<BufReader<File>>,
-    package: &Package,
-    contents: &Contents,
-) -> Result<(), FileFault> {
-    let read = book
-        .sheets_metadata()
-        .iter()
-        .filter(|sheet| sheet.typ == calamine::SheetType::WorkSheet)
-        .map(|sheet| sheet.name.as_str());
-    if read.eq(contents.sheets.iter().map(|sheet| sheet.name.as_str())) {
-        Ok(())
-    } else {
-        Err(package.damaged("its list of sheets can be read in two ways"))
-    }
-}
-
-fn read_appearances(
-    book: &mut Xlsx<BufReader<File>>,
-    package: &Package,
-    sheets: &[SheetSurvey],
-) -> Result<Vec<Appearance>, FileFault> {
-    let Some(first) = sheets.first() else {
-        return Ok(Vec::new());
-    };
-    // The formats belong to the workbook, but only a sheet's reader gives them away.
-    without_panic(|| {
-        book.worksheet_cells_reader(&first.name)
-            .map(|reader| reader.styles().iter().map(Appearance::from).collect())
-    })
-    .map_err(|reason| package.damaged(reason))?
-    .map_err(|error| package.damaged(error.to_string()))
 }
 
 /// The SHA-256 of a text, in hexadecimal.
