@@ -2,6 +2,7 @@
 
 mod appearance;
 mod caught;
+mod compound;
 mod content;
 mod contents;
 mod guard;

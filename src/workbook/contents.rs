@@ -41,9 +41,10 @@ pub(super) struct SheetEntry {
     pub(super) part: String,
 }
 
-struct Relation {
-    kind: String,
-    target: String,
+/// What a part refers to.
+pub(super) struct Relation {
+    pub(super) kind: String,
+    pub(super) target: String,
 }
 
 /// Reads the workbook's own description of itself.
@@ -95,13 +96,15 @@ fn is_document(main: &str) -> bool {
     main.starts_with("word/") || main.starts_with("ppt/")
 }
 
+/// What the relations of a part are found by.
 #[derive(Clone, Copy)]
-enum Keyed {
+pub(super) enum Keyed {
     ById,
     ByType,
 }
 
-fn read_relations(
+/// Reads what a part refers to.
+pub(super) fn read_relations(
     package: &mut Package,
     part: &str,
     keyed: Keyed,
@@ -143,7 +146,8 @@ fn refuse_unusual_places(
     Ok(())
 }
 
-fn full_name(target: &str, folder: &str) -> String {
+/// The full name of a part that is named from a folder.
+pub(super) fn full_name(target: &str, folder: &str) -> String {
     target.strip_prefix('/').map_or_else(|| format!("{folder}{target}"), ToOwned::to_owned)
 }
 

@@ -6,9 +6,10 @@ use std::path::Path;
 
 use crate::fault::{FileFault, FileKind};
 
+use super::compound::{Compound, MAGIC};
 use super::package::Package;
 
-/// How much of an old binary file is searched for the names of its streams, in bytes.
+/// How much of a damaged container is searched for the names of its streams, in bytes.
 const SEARCHED: u64 = 32 << 20;
 
 /// How much of a text is looked at to tell what kind it is, in bytes.
@@ -63,7 +64,7 @@ fn kind_by_content(file: &mut File) -> std::io::Result<Option<FileKind>> {
     if beginning.starts_with(b"PK\x03\x04") || beginning.starts_with(b"PK\x05\x06") {
         return Ok(None);
     }
-    if beginning.starts_with(&[0xD0, 0xCF, 0x11, 0xE0, 0xA1, 0xB1, 0x1A, 0xE1]) {
+    if beginning.starts_with(&MAGIC) {
         return kind_of_compound_file(file).map(Some);
     }
     Ok(Some(kind_of_flat_file(&beginning)))
@@ -71,21 +72,36 @@ fn kind_by_content(file: &mut File) -> std::io::Result<Option<FileKind>> {
 
 /// An encrypted workbook stands in the same container as an old binary one; the names of the streams tell.
 fn kind_of_compound_file(file: &mut File) -> std::io::Result<FileKind> {
+    match Compound::open(file.try_clone()?) {
+        Ok(compound) => {
+            let names = compound.names();
+            Ok(kind_by_streams(|name| names.iter().any(|known| known.eq_ignore_ascii_case(name))))
+        }
+        Err(_damaged) => kind_of_damaged_compound_file(file),
+    }
+}
+
+/// Where the container cannot be listed, the names of its streams can still be found.
+fn kind_of_damaged_compound_file(file: &mut File) -> std::io::Result<FileKind> {
     let mut content = Vec::new();
+    file.seek(SeekFrom::Start(0))?;
     file.take(SEARCHED).read_to_end(&mut content)?;
-    let names = |name: &str| {
+    Ok(kind_by_streams(|name| {
         let wide: Vec<u8> = name.encode_utf16().flat_map(u16::to_le_bytes).collect();
         content.windows(wide.len()).any(|window| window == wide)
-    };
-    Ok(if names("EncryptedPackage") {
+    }))
+}
+
+fn kind_by_streams(has: impl Fn(&str) -> bool) -> FileKind {
+    if has("EncryptedPackage") {
         FileKind::Encrypted
-    } else if names("WordDocument") || names("PowerPoint Document") {
-        FileKind::Document
-    } else if names("Workbook") || names("Book") {
+    } else if has("Workbook") || has("Book") {
         FileKind::Xls
+    } else if has("WordDocument") || has("PowerPoint Document") {
+        FileKind::Document
     } else {
         FileKind::Unknown
-    })
+    }
 }
 
 fn kind_of_flat_file(beginning: &[u8]) -> FileKind {

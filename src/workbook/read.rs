@@ -3,6 +3,7 @@
 //! What a file is, its content says. Each kind has a module of its own that surveys it once and then streams it as often
 //! as asked; past them nobody knows which kind it was.
 
+mod binary;
 mod ods;
 #[cfg(test)]
 mod tests;

@@ -91,7 +91,8 @@ impl SheetSurvey {
         })
     }
 
-    fn note_formula(&mut self, row: u32, column: u16) {
+    /// Notes that a cell is a formula; within a column the rows must come in order.
+    pub(super) fn note_formula(&mut self, row: u32, column: u16) {
         self.formulas += 1;
         let runs = self.formula_runs.entry(column).or_default();
         match runs.last_mut() {
@@ -231,7 +232,7 @@ fn read_tail(event: &Event<'_>, survey: &mut SheetSurvey) -> Result<(), SheetFau
 }
 
 /// Widths beyond the last used column would fall on the columns that are added there.
-fn clip_widths(survey: &mut SheetSurvey) {
+pub(super) fn clip_widths(survey: &mut SheetSurvey) {
     let Some(last_used) = survey.used_columns.checked_sub(1) else {
         return survey.column_widths.clear();
     };

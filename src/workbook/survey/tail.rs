@@ -5,8 +5,8 @@ use crate::fault::count;
 /// What stands on a sheet besides its cells.
 #[derive(Debug, Clone, Default, PartialEq, Eq)]
 pub(in crate::workbook) struct Extras {
-    pub(super) hidden_rows: usize,
-    pub(super) row_heights: usize,
+    pub(in crate::workbook) hidden_rows: usize,
+    pub(in crate::workbook) row_heights: usize,
     merges: usize,
     links: usize,
     filters: usize,
@@ -23,7 +23,7 @@ pub(in crate::workbook) struct Extras {
 
 impl Extras {
     /// Counts an element that stands after the rows, by its local name.
-    pub(super) fn note(&mut self, element: &str) {
+    pub(in crate::workbook) fn note(&mut self, element: &str) {
         let counter = match element {
             "mergeCell" => &mut self.merges,
             "hyperlink" => &mut self.links,
