@@ -106,6 +106,16 @@ impl Package {
     where
         Visit: FnMut(&Event<'_>) -> Result<(), FileFault>,
     {
+        self.read_part(part, |source, damaged| read_events(source, &mut visit, damaged))
+    }
+
+    /// Hands one part to `work`, unpacked within the limits; `work` need not read it to its end.
+    ///
+    /// A part that unpacks too far is a fault. A missing part is none.
+    pub(super) fn read_part<Work>(&mut self, part: &str, work: Work) -> Result<Found, FileFault>
+    where
+        Work: FnOnce(&mut dyn Read, &dyn Fn(&dyn std::fmt::Display) -> FileFault) -> Result<(), FileFault>,
+    {
         let path = self.path.clone();
         let damaged = |error: &dyn std::fmt::Display| FileFault::Damaged {
             path: path.clone(),
@@ -125,7 +135,7 @@ impl Package {
             before: self.unpacked,
             over: None,
         };
-        let outcome = read_events(&mut counted, &mut visit, &damaged);
+        let outcome = work(&mut counted, &damaged);
         self.unpacked = self.unpacked.saturating_add(counted.unpacked);
         if let Some((found, limit)) = counted.over {
             return Err(FileFault::TooLarge {
@@ -136,6 +146,11 @@ impl Package {
             });
         }
         outcome.map(|()| Found::Yes)
+    }
+
+    /// What was read so far is known to be within the limits, and is read again.
+    pub(super) fn start_over(&mut self) {
+        self.unpacked = 0;
     }
 }
 

@@ -6,6 +6,7 @@ pub(super) mod formats;
 pub(super) mod looks;
 pub(super) mod numbers;
 pub(super) mod rows;
+pub(super) mod texts;
 
 use std::collections::BTreeMap;
 

@@ -151,7 +151,7 @@ impl Found {
 
     fn not_carried(&mut self, globals: &Globals) -> Vec<String> {
         self.contents.defined_names = globals.defined_names;
-        self.contents.mixed_texts += globals.texts.mixed;
+        self.contents.mixed_texts += globals.mixed_texts;
         self.parts.extend(std::iter::repeat_n("xl/externallinks/externallink", globals.links));
         let mut sentences = parts_not_carried(self.parts.iter().copied(), &self.contents);
         if globals.version == Version::Biff5 && matches!(globals.alphabet, Alphabet::NotSaid) {

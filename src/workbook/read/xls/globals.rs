@@ -4,10 +4,11 @@ use std::collections::{BTreeMap, BTreeSet};
 
 use super::looks::{self, CellFormat};
 use super::records::{CutOff, Record, Records};
-use super::texts::{Alphabet, Pieces, SharedTexts, Version};
+use super::texts::{Alphabet, Pieces, Version, read_shared_texts};
 use crate::workbook::read::binary::bytes::{byte, long, short};
 use crate::workbook::read::binary::looks::Palette;
 use crate::workbook::read::binary::rows::DayZero;
+use crate::workbook::read::binary::texts::SharedTexts;
 use crate::workbook::survey::Visibility;
 
 /// What the workbook says of itself.
@@ -18,6 +19,8 @@ pub(super) struct Globals {
     pub(super) day_zero: DayZero,
     pub(super) sheets: Vec<SheetEntry>,
     pub(super) texts: SharedTexts,
+    /// How many of them change their font within the text.
+    pub(super) mixed_texts: u64,
     pub(super) formats: BTreeMap<u16, String>,
     pub(super) fonts: Vec<calamine::Font>,
     pub(super) cell_formats: Vec<CellFormat>,
@@ -30,6 +33,9 @@ pub(super) struct Globals {
     /// The fonts wait for the colours, which come later.
     waiting_fonts: Vec<looks::FontRecord>,
 }
+
+/// More sheets, fonts or cell formats than this no program writes: the numbers of fonts and formats have two bytes.
+const MOST_ENTRIES: usize = 65_536;
 
 /// Whether the workbook names the version of the program that last computed its formulas.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
@@ -95,6 +101,7 @@ impl Globals {
             day_zero: DayZero::In1900,
             sheets: Vec::new(),
             texts: SharedTexts::default(),
+            mixed_texts: 0,
             formats: BTreeMap::new(),
             fonts: Vec::new(),
             cell_formats: Vec::new(),
@@ -114,6 +121,10 @@ impl Globals {
                 0x0085 => listed.push(record),
                 _ => globals.note(&record, &records)?,
             }
+            let entries = [listed.len(), globals.cell_formats.len(), globals.waiting_fonts.len()];
+            if entries.iter().any(|number| *number > MOST_ENTRIES) {
+                return Err(damaged(format!("it lists more than {MOST_ENTRIES} sheets, fonts or formats")));
+            }
         }
         Err(CutOff.into())
     }
@@ -125,7 +136,7 @@ impl Globals {
             0x0042 => self.alphabet = Alphabet::of_code_page(short(data, 0).unwrap_or(0)),
             0x0022 if short(data, 0) == Some(1) => self.day_zero = DayZero::In1904,
             0x00FC => {
-                self.texts = SharedTexts::read(Pieces::new(records.pieces(record)?))
+                (self.texts, self.mixed_texts) = read_shared_texts(Pieces::new(records.pieces(record)?))
                     .ok_or_else(|| damaged("its list of shared texts is cut off"))?;
             }
             0x041E => self.note_format(data)?,

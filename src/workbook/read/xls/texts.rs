@@ -3,6 +3,7 @@
 use encoding_rs::{Encoding, WINDOWS_1252};
 
 use crate::workbook::read::binary::bytes::{long, short};
+use crate::workbook::read::binary::texts::SharedTexts;
 
 /// The version of the format.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
@@ -202,47 +203,27 @@ enum Font {
     Changes,
 }
 
-/// The texts that cells share, one behind the other.
-#[derive(Debug, Clone, Default)]
-pub(super) struct SharedTexts {
-    all: String,
-    ends: Vec<usize>,
-    /// How many of them change their font within the text.
-    pub(super) mixed: u64,
-}
-
-impl SharedTexts {
-    /// Reads the table; what it claims to hold is not believed but counted.
-    pub(super) fn read(mut pieces: Pieces<'_>) -> Option<Self> {
-        let mut texts = Self::default();
-        pieces.long()?;
-        let claimed = pieces.long()?;
-        for _ in 0..claimed {
-            if pieces.is_at_end() {
-                break;
-            }
-            if pieces.rich_text(&mut texts.all)? == Font::Changes {
-                texts.mixed += 1;
-            }
-            texts.ends.push(texts.all.len());
+/// Reads the table of the texts that cells share, and how many of them change their font; what it claims to hold is not
+/// believed but counted.
+pub(super) fn read_shared_texts(mut pieces: Pieces<'_>) -> Option<(SharedTexts, u64)> {
+    let mut texts = SharedTexts::default();
+    let mut mixed = 0;
+    pieces.long()?;
+    let claimed = pieces.long()?;
+    for _ in 0..claimed {
+        if pieces.is_at_end() {
+            break;
         }
-        Some(texts)
+        if texts.add(|text| pieces.rich_text(text))? == Font::Changes {
+            mixed += 1;
+        }
     }
-
-    /// A text by its number.
-    pub(super) fn get(&self, number: u32) -> Option<&str> {
-        let place = usize::try_from(number).ok()?;
-        let begin = match place.checked_sub(1) {
-            Some(before) => *self.ends.get(before)?,
-            None => 0,
-        };
-        self.all.get(begin..*self.ends.get(place)?)
-    }
+    Some((texts, mixed))
 }
 
 #[cfg(test)]
 mod tests {
-    use super::{Alphabet, Pieces, SharedTexts, Version};
+    use super::{Alphabet, Pieces, Version, read_shared_texts};
 
     #[test]
     fn a_text_goes_on_in_the_next_record_in_its_own_width() {
@@ -257,10 +238,10 @@ mod tests {
     #[test]
     fn shared_texts_are_found_by_number_and_a_false_number_of_them_changes_nothing() {
         let table = [9, 0, 0, 0, 0xFF, 0xFF, 0xFF, 0xFF, 1, 0, 0, b'a', 0, 0, 0, 2, 0, 8, 1, 0, b'b', b'c', 1, 0, 5, 0];
-        let texts = SharedTexts::read(Pieces::new(vec![&table])).unwrap();
+        let (texts, mixed) = read_shared_texts(Pieces::new(vec![&table])).unwrap();
         let found: Vec<_> = (0..4).map(|number| texts.get(number)).collect();
         assert_eq!(found, [Some("a"), Some(""), Some("bc"), None]);
-        assert_eq!(texts.mixed, 1);
+        assert_eq!(mixed, 1);
     }
 
     #[test]
