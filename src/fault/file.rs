@@ -146,7 +146,7 @@ pub enum FileKind {
     Empty,
     /// A workbook that needs a password.
     Encrypted,
-    /// A workbook of the binary format before 2007.
+    /// A workbook of the binary format before 2007; as a fault, one from before 1993.
     Xls,
     /// A binary workbook in a zip container.
     Xlsb,
@@ -191,8 +191,8 @@ impl fmt::Display for FileKind {
         formatter.write_str(match self {
             Self::Empty => "the file is empty",
             Self::Encrypted => "the workbook is protected by a password",
-            Self::Xls => "this is a workbook of the old binary format (xls), which is not read yet",
-            Self::Xlsb => "this is a binary workbook (xlsb), which is not read yet",
+            Self::Xls => "this is a worksheet of a binary format from before 1993, which is not read",
+            Self::Xlsb => "this is a binary workbook (xlsb) without its main part",
             Self::Ods => "this is an OpenDocument workbook (ods), which is not read yet",
             Self::XmlSpreadsheet => "this is a workbook written as XML text, which is not read",
             Self::Html => "this is a web page (HTML), whatever its name says",

@@ -72,11 +72,8 @@ fn kind_by_content(file: &mut File) -> std::io::Result<Option<FileKind>> {
 
 /// An encrypted workbook stands in the same container as an old binary one; the names of the streams tell.
 fn kind_of_compound_file(file: &mut File) -> std::io::Result<FileKind> {
-    match Compound::open(file.try_clone()?) {
-        Ok(compound) => {
-            let names = compound.names();
-            Ok(kind_by_streams(|name| names.iter().any(|known| known.eq_ignore_ascii_case(name))))
-        }
+    match Compound::open(file.try_clone()?).and_then(|compound| compound.names()) {
+        Ok(names) => Ok(kind_by_streams(|name| names.iter().any(|known| known.eq_ignore_ascii_case(name)))),
         Err(_damaged) => kind_of_damaged_compound_file(file),
     }
 }

@@ -6,6 +6,8 @@ pub(super) mod formats;
 pub(super) mod looks;
 pub(super) mod numbers;
 pub(super) mod rows;
+#[cfg(test)]
+mod tests;
 pub(super) mod texts;
 
 use std::collections::BTreeMap;

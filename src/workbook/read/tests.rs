@@ -9,19 +9,19 @@ use super::open_inventory;
 use crate::workbook::{CellContent, Row, Visibility};
 
 #[path = "../../../tests/make/hostile.rs"]
-mod hostile;
+pub(super) mod hostile;
 
 use hostile::RawBook;
 
 /// A folder that vanishes with the test, and a path in it.
-fn place(name: &str) -> (TempDir, PathBuf) {
+pub(super) fn place(name: &str) -> (TempDir, PathBuf) {
     let folder = tempfile::tempdir().unwrap();
     let path = folder.path().join(name);
     (folder, path)
 }
 
 /// The refusal of a file made by `make`, without the path before it.
-fn refusal(name: &str, make: impl FnOnce(&std::path::Path) -> std::io::Result<()>) -> String {
+pub(super) fn refusal(name: &str, make: impl FnOnce(&std::path::Path) -> std::io::Result<()>) -> String {
     let (_folder, path) = place(name);
     make(&path).unwrap();
     let said = match open_inventory(&path) {
@@ -85,7 +85,10 @@ fn a_file_of_another_kind_is_named_as_what_it_is() {
         ),
         (
             refusal("a.xls", |path| hostile::write_compound_file(path, "Workbook")),
-            format!("this is a workbook of the old binary format (xls), which is not read yet; {save_as}"),
+            format!(
+                "the workbook is damaged (the container around it cannot be read, perhaps the file was cut off: its \
+                 sectors have a size no program uses); {SAVE_AGAIN}"
+            ),
         ),
         (
             refusal("a.xlsx", hostile::write_text_document),
@@ -98,7 +101,10 @@ fn a_file_of_another_kind_is_named_as_what_it_is() {
         ),
         (
             refusal("a.xlsb", hostile::write_xlsb),
-            format!("this is a binary workbook (xlsb), which is not read yet; {save_as}"),
+            format!(
+                "the workbook is damaged (the part `xl/workbook.bin` cannot be read: it ends in the middle of a \
+                 record); {SAVE_AGAIN}"
+            ),
         ),
         (
             refusal("a.zip", |path| hostile::write_zip(path, &[("readme.txt", b"hello")])),

@@ -11,6 +11,7 @@ mod tests;
 mod texts;
 
 use std::fs::File;
+use std::io::Read;
 use std::path::Path;
 
 use self::cells::{Ordered, Unreadable};
@@ -21,7 +22,7 @@ use super::binary::rows::{Formats, Rows};
 use super::{Opened, Source, Visit};
 use crate::fault::{FileFault, FileKind};
 use crate::workbook::appearance::Appearance;
-use crate::workbook::compound::Compound;
+use crate::workbook::compound::{Compound, MAGIC};
 use crate::workbook::contents::Contents;
 use crate::workbook::not_carried::parts_not_carried;
 use crate::workbook::package::Limits;
@@ -73,7 +74,7 @@ pub(super) fn open(path: &Path, file: File, limits: Limits) -> Result<Opened, Fi
 }
 
 /// The stream of records; since 1997 it has another name, and a file may hold it in both versions.
-fn read_stream(path: &str, file: File, limits: Limits) -> Result<Vec<u8>, FileFault> {
+fn read_stream(path: &str, mut file: File, limits: Limits) -> Result<Vec<u8>, FileFault> {
     let damaged = |error: std::io::Error| FileFault::Damaged {
         path: path.to_owned(),
         what: format!("the container around it cannot be read, perhaps the file was cut off: {error}"),
@@ -87,6 +88,12 @@ fn read_stream(path: &str, file: File, limits: Limits) -> Result<Vec<u8>, FileFa
             found: format!("{} MB", length / 1_000_000),
             limit: format!("{} MB", most / 1_000_000),
         });
+    }
+    let mut beginning = [0; 8];
+    file.read_exact(&mut beginning).map_err(damaged)?;
+    if beginning != MAGIC {
+        // Before 1993 the records stood in a file without a container.
+        return Err(FileFault::AnotherKind { path: path.to_owned(), found: FileKind::Xls });
     }
     let mut compound = Compound::open(file).map_err(damaged)?;
     for name in ["Workbook", "Book"] {

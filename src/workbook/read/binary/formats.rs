@@ -55,9 +55,9 @@ pub(in crate::workbook::read) fn shown_by_code(code: &str) -> Shown {
 
 /// `[h]`, `[mm]`, `[ss]`: hours, minutes or seconds counted on beyond their usual limit.
 fn is_span(inner: &str) -> bool {
-    ['h', 'm', 's'].iter().any(|unit| {
-        !inner.is_empty() && inner.chars().all(|character| character.eq_ignore_ascii_case(unit))
-    })
+    ['h', 'm', 's']
+        .iter()
+        .any(|unit| !inner.is_empty() && inner.chars().all(|character| character.eq_ignore_ascii_case(unit)))
 }
 
 /// An era or a Buddhist year is followed by its year or month: `gge`, `bbbb`.

@@ -78,7 +78,11 @@ pub(in crate::workbook::read) fn font(
 }
 
 /// A fill by the code of its pattern.
-pub(in crate::workbook::read) fn fill(pattern: u8, front: Option<Color>, back: Option<Color>) -> Option<Fill> {
+pub(in crate::workbook::read) fn fill(
+    pattern: u8,
+    front: Option<Color>,
+    back: Option<Color>,
+) -> Option<Fill> {
     let pattern = match pattern {
         1 => FillPattern::Solid,
         2 => FillPattern::MediumGray,

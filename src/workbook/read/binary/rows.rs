@@ -46,11 +46,7 @@ impl Formats {
     }
 
     fn shown(&self, number: u32) -> Shown {
-        usize::try_from(number)
-            .ok()
-            .and_then(|place| self.shown.get(place))
-            .copied()
-            .unwrap_or(Shown::Number)
+        usize::try_from(number).ok().and_then(|place| self.shown.get(place)).copied().unwrap_or(Shown::Number)
     }
 
     fn cell(&self, stored: Stored) -> Cell {

@@ -39,10 +39,7 @@ pub(super) fn places(record: &Record<'_>) -> Option<(u16, RangeInclusive<u16>)> 
 
 /// Whether a record stores cells.
 pub(super) fn stores_cells(kind: u16) -> bool {
-    matches!(
-        kind,
-        0x0201 | 0x00BE | 0x0203 | 0x027E | 0x00BD | 0x00FD | 0x0204 | 0x00D6 | 0x0205 | 0x0006
-    )
+    matches!(kind, 0x0201 | 0x00BE | 0x0203 | 0x027E | 0x00BD | 0x00FD | 0x0204 | 0x00D6 | 0x0205 | 0x0006)
 }
 
 /// Reads one of the cells a record stores.
@@ -95,9 +92,10 @@ impl Reader<'_> {
             0x027E => StoredValue::Number(short_number(long(data, 6).ok_or_else(short_of)?)),
             0x00FD => {
                 let number = long(data, 6).ok_or_else(short_of)?;
-                let text = self.globals.texts.get(number).ok_or_else(|| {
-                    format!("a reference to text number `{number}`, which is not stored")
-                })?;
+                let text =
+                    self.globals.texts.get(number).ok_or_else(|| {
+                        format!("a reference to text number `{number}`, which is not stored")
+                    })?;
                 StoredValue::Text(text.to_owned())
             }
             0x0204 | 0x00D6 => StoredValue::Text(self.text_after(6)?),

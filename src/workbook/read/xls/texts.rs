@@ -49,7 +49,10 @@ impl Alphabet {
         };
         let (text, damaged) = encoding.decode_without_bom_handling(bytes);
         if damaged {
-            return Err(format!("a text with bytes that are no letters of its alphabet, {}", encoding.name()));
+            return Err(format!(
+                "a text with bytes that are no letters of its alphabet, {}",
+                encoding.name()
+            ));
         }
         Ok(text.into_owned())
     }
@@ -232,12 +235,17 @@ mod tests {
         let text = pieces.clone().text(Version::Biff8, Alphabet::NotSaid);
         assert_eq!(text, Ok("Aä日本".to_owned()));
         let cut = Pieces::new(vec![&[4, 0, 0, b'A', 0xE4], &[1, 0xE5, 0x65, 0x2C]]);
-        assert_eq!(cut.clone().text(Version::Biff8, Alphabet::NotSaid), Err("a text that is cut off".to_owned()));
+        assert_eq!(
+            cut.clone().text(Version::Biff8, Alphabet::NotSaid),
+            Err("a text that is cut off".to_owned())
+        );
     }
 
     #[test]
     fn shared_texts_are_found_by_number_and_a_false_number_of_them_changes_nothing() {
-        let table = [9, 0, 0, 0, 0xFF, 0xFF, 0xFF, 0xFF, 1, 0, 0, b'a', 0, 0, 0, 2, 0, 8, 1, 0, b'b', b'c', 1, 0, 5, 0];
+        let table = [
+            9, 0, 0, 0, 0xFF, 0xFF, 0xFF, 0xFF, 1, 0, 0, b'a', 0, 0, 0, 2, 0, 8, 1, 0, b'b', b'c', 1, 0, 5, 0,
+        ];
         let (texts, mixed) = read_shared_texts(Pieces::new(vec![&table])).unwrap();
         let found: Vec<_> = (0..4).map(|number| texts.get(number)).collect();
         assert_eq!(found, [Some("a"), Some(""), Some("bc"), None]);

@@ -43,9 +43,12 @@ impl<'book> Cells<'book> {
     pub(super) fn take(&mut self, kind: u16, data: &[u8]) -> Result<Taken, SheetFault> {
         match kind {
             0x0000 => self.open_row(data).map(Taken::Row),
-            0x0001..=0x000B | 0x003E => self.read_cell(kind, data).map(Taken::Cell),
-            // Cells that leave out their column: no program is known to write them.
-            0x000C..=0x0012 => Err(self.whole("stores cells without saying in which column they stand")),
+            0x0001..=0x000B | 0x003E => self.read_cell(kind, long(data, 0), data.get(4..)).map(Taken::Cell),
+            // Cells that leave out their column, since they stand right of the one before; otherwise as 1 to 7.
+            0x000C..=0x0012 => {
+                let column = self.column.map_or(0, |last| u32::from(last) + 1);
+                self.read_cell(kind - 0x000B, Some(column), Some(data)).map(Taken::Cell)
+            }
             0x0092 => Ok(Taken::End),
             _ => Ok(Taken::Other),
         }
@@ -65,9 +68,16 @@ impl<'book> Cells<'book> {
         Ok(RowFlags { hidden: flags & 0x10 != 0, own_height: flags & 0x20 != 0 })
     }
 
-    fn read_cell(&mut self, kind: u16, data: &[u8]) -> Result<Stored, SheetFault> {
+    /// Reads a cell from what stands behind its column: its format, and then its value.
+    fn read_cell(
+        &mut self,
+        kind: u16,
+        column: Option<u32>,
+        data: Option<&[u8]>,
+    ) -> Result<Stored, SheetFault> {
         let row = self.row.ok_or_else(|| self.whole("stores a cell outside its rows"))?;
-        let (Some(column), Some(style)) = (long(data, 0), long(data, 4)) else {
+        let data = data.unwrap_or_default();
+        let (Some(column), Some(style)) = (column, long(data, 0)) else {
             return Err(self.whole(&format!("has a cell in row {} that is cut off", row + 1)));
         };
         let Some(column) = u16::try_from(column).ok().filter(|column| *column <= LAST_COLUMN) else {
@@ -87,21 +97,21 @@ impl<'book> Cells<'book> {
         Ok(Stored { row, column, style: style & 0x00FF_FFFF, value, origin })
     }
 
-    /// What stands after the column and the format; none if the record is too short for it.
+    /// What stands after the format; none if the record is too short for it.
     fn value(&self, kind: u16, data: &[u8]) -> Result<Option<StoredValue>, String> {
         Ok(match kind {
-            0x0002 => long(data, 8).map(|number| StoredValue::Number(short_number(number))),
-            0x0003 | 0x000B => byte(data, 8).map(StoredValue::Error),
-            0x0004 | 0x000A => byte(data, 8).map(|boolean| StoredValue::Boolean(boolean != 0)),
-            0x0005 => real(data, 8).map(StoredValue::Number),
-            0x0009 => real(data, 8).zip(short(data, 16)).map(|(number, flags)| {
+            0x0002 => long(data, 4).map(|number| StoredValue::Number(short_number(number))),
+            0x0003 | 0x000B => byte(data, 4).map(StoredValue::Error),
+            0x0004 | 0x000A => byte(data, 4).map(|boolean| StoredValue::Boolean(boolean != 0)),
+            0x0005 => real(data, 4).map(StoredValue::Number),
+            0x0009 => real(data, 4).zip(short(data, 12)).map(|(number, flags)| {
                 // Programs that write formulas without computing them store 0 and ask for it to be computed.
                 let asked = flags & 2 != 0 && number.to_bits() == 0;
                 if asked { StoredValue::NoResult } else { StoredValue::Number(number) }
             }),
-            0x0006 | 0x0008 => own_text(data, 8),
-            0x003E => own_text(data, 9),
-            0x0007 => match long(data, 8) {
+            0x0006 | 0x0008 => own_text(data, 4),
+            0x003E => own_text(data, 5),
+            0x0007 => match long(data, 4) {
                 Some(number) => Some(self.shared_text(number)?),
                 None => None,
             },

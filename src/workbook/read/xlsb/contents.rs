@@ -5,9 +5,7 @@ use std::ops::ControlFlow;
 
 use super::for_each_record;
 use crate::fault::FileFault;
-use crate::workbook::contents::{
-    Contents, Keyed, Relation, SheetEntry, full_name, read_relations,
-};
+use crate::workbook::contents::{Contents, Keyed, Relation, SheetEntry, full_name, read_relations};
 use crate::workbook::package::Package;
 use crate::workbook::read::binary::bytes::{byte, long};
 use crate::workbook::read::binary::rows::DayZero;

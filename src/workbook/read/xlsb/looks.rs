@@ -10,9 +10,7 @@ use crate::fault::FileFault;
 use crate::workbook::package::Package;
 use crate::workbook::read::binary::bytes::{bits, byte, long, short};
 use crate::workbook::read::binary::formats::{Shown, shown_by_built_in, shown_by_code};
-use crate::workbook::read::binary::looks::{
-    Palette, Placed, alignment, borders, fill, font, number_format,
-};
+use crate::workbook::read::binary::looks::{Palette, Placed, alignment, borders, fill, font, number_format};
 use crate::workbook::read::binary::texts::wide_text;
 
 /// More entries of a kind than this no program writes: their numbers have two bytes.

@@ -39,7 +39,7 @@ pub(super) fn survey_sheet(
                 *mixed_texts += u64::from(kind == 0x003E);
                 read_data(kind, data, &mut survey, &mut cells, &mut place)
             }
-            Place::Tail => read_tail(kind, &mut survey),
+            Place::Tail => read_tail(kind, data, &mut survey),
         };
         Ok(match outcome {
             Ok(()) => ControlFlow::Continue(()),
@@ -67,8 +67,8 @@ fn read_head(kind: u16, data: &[u8], survey: &mut SheetSurvey, place: &mut Place
     match kind {
         0x0091 => *place = Place::Data,
         0x003C => {
-            let layout = column_layout(data)
-                .ok_or_else(|| whole(survey, "gives a width to columns no sheet has"))?;
+            let layout =
+                column_layout(data).ok_or_else(|| whole(survey, "gives a width to columns no sheet has"))?;
             survey.column_widths.push(layout);
         }
         // A pane that stays in place: how many columns and rows of it.
@@ -119,7 +119,7 @@ fn read_data(
     Ok(())
 }
 
-fn read_tail(kind: u16, survey: &mut SheetSurvey) -> Result<(), SheetFault> {
+fn read_tail(kind: u16, data: &[u8], survey: &mut SheetSurvey) -> Result<(), SheetFault> {
     let element = match kind {
         0x0091 => return Err(whole(survey, "stores its rows in two places")),
         0x00B0 => "mergeCell",
@@ -127,7 +127,7 @@ fn read_tail(kind: u16, survey: &mut SheetSurvey) -> Result<(), SheetFault> {
         0x00A1 => "autoFilter",
         0x01CD => "conditionalFormatting",
         0x0040 => "dataValidation",
-        0x0217 => "sheetProtection",
+        0x0217 if long(data, 2).is_some_and(|locked| locked != 0) => "sheetProtection",
         0x0295 => "tablePart",
         0x0226 => "drawing",
         0x0227 => "legacyDrawing",
