@@ -4,12 +4,14 @@ mod appearance;
 mod caught;
 mod content;
 mod contents;
+mod encoding;
 mod guard;
 mod look;
 mod not_carried;
 mod package;
 mod place;
 mod read;
+mod serial;
 mod survey;
 mod write;
 

@@ -231,7 +231,7 @@ fn read_tail(event: &Event<'_>, survey: &mut SheetSurvey) -> Result<(), SheetFau
 }
 
 /// Widths beyond the last used column would fall on the columns that are added there.
-fn clip_widths(survey: &mut SheetSurvey) {
+pub(super) fn clip_widths(survey: &mut SheetSurvey) {
     let Some(last_used) = survey.used_columns.checked_sub(1) else {
         return survey.column_widths.clear();
     };

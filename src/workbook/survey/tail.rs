@@ -5,20 +5,20 @@ use crate::fault::count;
 /// What stands on a sheet besides its cells.
 #[derive(Debug, Clone, Default, PartialEq, Eq)]
 pub(in crate::workbook) struct Extras {
-    pub(super) hidden_rows: usize,
-    pub(super) row_heights: usize,
-    merges: usize,
-    links: usize,
-    filters: usize,
-    conditional_formats: usize,
-    cell_checks: usize,
-    protections: usize,
-    tables: usize,
-    drawings: usize,
-    notes: usize,
-    objects: usize,
-    sparklines: usize,
-    page_breaks: usize,
+    pub(in crate::workbook) hidden_rows: usize,
+    pub(in crate::workbook) row_heights: usize,
+    pub(in crate::workbook) merges: usize,
+    pub(in crate::workbook) links: usize,
+    pub(in crate::workbook) filters: usize,
+    pub(in crate::workbook) conditional_formats: usize,
+    pub(in crate::workbook) cell_checks: usize,
+    pub(in crate::workbook) protections: usize,
+    pub(in crate::workbook) tables: usize,
+    pub(in crate::workbook) drawings: usize,
+    pub(in crate::workbook) notes: usize,
+    pub(in crate::workbook) objects: usize,
+    pub(in crate::workbook) sparklines: usize,
+    pub(in crate::workbook) page_breaks: usize,
 }
 
 impl Extras {
