@@ -53,7 +53,9 @@ pub enum LinesFault {
         line: u64,
     },
     /// More rows than a sheet has.
-    #[error("has more than 1048576 rows, the most a sheet can have; split the file into several, each with the header")]
+    #[error(
+        "has more than 1048576 rows, the most a sheet can have; split the file into several, each with the header"
+    )]
     TooManyRows,
     /// The system stopped giving the file.
     #[error("could not be read to its end ({reason})")]

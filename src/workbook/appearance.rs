@@ -60,11 +60,7 @@ impl Appearance {
 
     /// Nothing but a way to show numbers, written as spreadsheet programs write it.
     pub(super) fn of_numbers(code: &str) -> Self {
-        Self {
-            format: Format::new().set_num_format(code),
-            numbers: Numbers::Formatted,
-            lines: Lines::One,
-        }
+        Self { format: Format::new().set_num_format(code), numbers: Numbers::Formatted, lines: Lines::One }
     }
 
     /// Nothing but room for several lines of text.

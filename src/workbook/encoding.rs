@@ -4,8 +4,8 @@ use std::io::Read;
 
 use chardetng::{EncodingDetector, Iso2022JpDetection, Utf8Detection};
 use encoding_rs::{
-    BIG5, Decoder, EUC_JP, EUC_KR, Encoding, GB18030, GBK, ISO_8859_2, SHIFT_JIS, UTF_8, UTF_16BE, UTF_16LE, WINDOWS_1250,
-    WINDOWS_1251, WINDOWS_1252, WINDOWS_1253, WINDOWS_1254, WINDOWS_1257,
+    BIG5, Decoder, EUC_JP, EUC_KR, Encoding, GB18030, GBK, ISO_8859_2, SHIFT_JIS, UTF_8, UTF_16BE, UTF_16LE,
+    WINDOWS_1250, WINDOWS_1251, WINDOWS_1252, WINDOWS_1253, WINDOWS_1254, WINDOWS_1257,
 };
 
 /// Bytes that are read at a time.
@@ -17,8 +17,8 @@ const SOUND_A_BROKEN: u64 = 20;
 /// Letters of Western Europe aside, the signs a list of chemicals has above ASCII in Windows-1252: no-break space, §, ©, ®,
 /// °, ±, ², ³, µ, ·, ¼, ½, ¾, ×, and the dashes, quotation marks, dots and per mille sign.
 const SIGNS: [u8; 24] = [
-    0xA0, 0xA7, 0xA9, 0xAE, 0xB0, 0xB1, 0xB2, 0xB3, 0xB5, 0xB7, 0xBC, 0xBD, 0xBE, 0xD7, 0x80, 0x85, 0x89, 0x91, 0x92, 0x93,
-    0x94, 0x95, 0x96, 0x97,
+    0xA0, 0xA7, 0xA9, 0xAE, 0xB0, 0xB1, 0xB2, 0xB3, 0xB5, 0xB7, 0xBC, 0xBD, 0xBE, 0xD7, 0x80, 0x85, 0x89,
+    0x91, 0x92, 0x93, 0x94, 0x95, 0x96, 0x97,
 ];
 
 /// The encoding of a text, and how it is known.
@@ -105,7 +105,16 @@ fn of_those_lists_come_in(guess: &'static Encoding) -> &'static Encoding {
         return GB18030;
     }
     let usual = [
-        SHIFT_JIS, EUC_JP, GB18030, BIG5, EUC_KR, ISO_8859_2, WINDOWS_1250, WINDOWS_1251, WINDOWS_1253, WINDOWS_1254,
+        SHIFT_JIS,
+        EUC_JP,
+        GB18030,
+        BIG5,
+        EUC_KR,
+        ISO_8859_2,
+        WINDOWS_1250,
+        WINDOWS_1251,
+        WINDOWS_1253,
+        WINDOWS_1254,
         WINDOWS_1257,
     ];
     if usual.contains(&guess) { guess } else { WINDOWS_1252 }
@@ -135,7 +144,11 @@ impl Soundness {
                 Ok(_) => (rest, &[][..], false),
                 Err(error) => {
                     let (sound, after) = rest.split_at_checked(error.valid_up_to()).unwrap_or((rest, &[]));
-                    (sound, after.get(error.error_len().unwrap_or(0)..).unwrap_or_default(), error.error_len().is_none())
+                    (
+                        sound,
+                        after.get(error.error_len().unwrap_or(0)..).unwrap_or_default(),
+                        error.error_len().is_none(),
+                    )
                 }
             };
             let ended = sound.len() == rest.len();
@@ -200,7 +213,8 @@ impl<R: Read> Decoded<R> {
             }
             let at_end = self.bytes_left.is_empty();
             let bytes = self.bytes.get(self.bytes_left.clone()).unwrap_or_default();
-            let (result, read, written, _replaced) = self.decoder.decode_to_utf8(bytes, &mut self.text, at_end);
+            let (result, read, written, _replaced) =
+                self.decoder.decode_to_utf8(bytes, &mut self.text, at_end);
             self.bytes_left.start += read;
             self.text_left = 0..written;
             self.ended = at_end && result == encoding_rs::CoderResult::InputEmpty;

@@ -93,9 +93,7 @@ impl Book {
         }
         let mut walk = Walk::new(Wanted::Only(sheet));
         let outcome = self.xml.read(|event| {
-            let found = walk
-                .visit(event)
-                .map_err(|fault| FileFault::Sheet { path: String::new(), fault })?;
+            let found = walk.visit(event).map_err(|fault| FileFault::Sheet { path: String::new(), fault })?;
             Ok(match found {
                 Some(Found::Row(row)) => hand_over(row, visit),
                 Some(Found::End(_)) => ControlFlow::Break(()),

@@ -54,7 +54,7 @@ pub(super) fn open(path: &Path, file: File) -> Result<Opened, FileFault> {
     let written = Written { encoding, dialect };
     let of_lines = |fault| FileFault::Lines { path: path.display().to_string(), fault };
     let mut records = written.records(&file).map_err(of_lines)?;
-    let mut surveyor = Surveyor::new(path, dialect.usual_fields);
+    let mut surveyor = Surveyor::new(path, dialect);
     let mut record = Record::default();
     while records.next(&mut record).map_err(of_lines)? {
         surveyor.note(&record).map_err(of_lines)?;
@@ -62,8 +62,7 @@ pub(super) fn open(path: &Path, file: File) -> Result<Opened, FileFault> {
     let surveyed = surveyor.finish(records.zeros());
     let how_read = remarks::how_read(&written.encoding, &dialect, &surveyed);
     let not_carried = remarks::not_carried(&surveyed);
-    let book =
-        Book { path: path.to_path_buf(), written, first_fields: surveyed.first_fields, how_read };
+    let book = Book { path: path.to_path_buf(), written, first_fields: surveyed.first_fields, how_read };
     Ok(Opened {
         source: Source::Text(book),
         sheets: vec![surveyed.sheet],
@@ -105,8 +104,7 @@ impl Written {
         &self,
         mut file: &'file File,
     ) -> Result<Records<BufReader<Decoded<&'file File>>>, LinesFault> {
-        file.seek(SeekFrom::Start(0))
-            .map_err(|error| LinesFault::BrokenOff { reason: error.to_string() })?;
+        file.seek(SeekFrom::Start(0)).map_err(|error| LinesFault::BrokenOff { reason: error.to_string() })?;
         let text = BufReader::with_capacity(1 << 16, Decoded::new(file, self.encoding.encoding));
         let mut records = Records::new(text, self.dialect.separator);
         if self.dialect.why == Why::Told {

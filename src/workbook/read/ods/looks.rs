@@ -10,8 +10,7 @@ pub(super) const SEVERAL_LINES: StyleId = StyleId(4);
 /// Percentages without decimals; with them in the places that follow.
 const PERCENTAGE: StyleId = StyleId(5);
 
-const PERCENTAGES: [&str; 7] =
-    ["0%", "0.0%", "0.00%", "0.000%", "0.0000%", "0.00000%", "0.000000%"];
+const PERCENTAGES: [&str; 7] = ["0%", "0.0%", "0.00%", "0.000%", "0.0000%", "0.00000%", "0.000000%"];
 
 /// The looks in the order of their numbers; the first is that of every cell without one.
 pub(super) fn appearances() -> Vec<Appearance> {

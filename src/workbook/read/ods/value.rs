@@ -147,7 +147,8 @@ fn is_error_name(text: &str) -> bool {
     let Some(name) = text.strip_prefix('#') else {
         return false;
     };
-    let is_name = |character: char| character.is_uppercase() || matches!(character, '/' | '0' | '_' | '?' | '!' | '¡');
+    let is_name =
+        |character: char| character.is_uppercase() || matches!(character, '/' | '0' | '_' | '?' | '!' | '¡');
     (2..=16).contains(&name.chars().count())
         && name.chars().all(is_name)
         && name.chars().any(char::is_alphabetic)
@@ -181,7 +182,9 @@ mod tests {
 
     #[test]
     fn names_of_errors_are_known_and_numbers_marked_with_a_sign_are_not() {
-        for name in ["#N/A", "#DIV/0!", "#VALUE!", "#WERT!", "#NV", "#BEZUG!", "#NOM?", "Err:502", "#ZAHL!", "#¡REF!"] {
+        for name in
+            ["#N/A", "#DIV/0!", "#VALUE!", "#WERT!", "#NV", "#BEZUG!", "#NOM?", "Err:502", "#ZAHL!", "#¡REF!"]
+        {
             assert!(is_error_name(name), "{name}");
         }
         for other in ["####", "#12", "# 4", "#", "12", "Err:", "Err: none", "#A1b", ""] {

@@ -143,7 +143,9 @@ impl Walk {
                 self.cell.text.push(&text.xml10_content());
                 return self.keep_within_row(self.cell.text.len()).map(|()| None);
             }
-            Event::CData(text) if self.place == Place::Paragraph => self.cell.text.push(&text.xml10_content()),
+            Event::CData(text) if self.place == Place::Paragraph => {
+                self.cell.text.push(&text.xml10_content())
+            }
             Event::GeneralRef(reference) if self.place == Place::Paragraph => {
                 let character = cell::character_of(reference).map_err(|what| self.unreadable(what))?;
                 self.cell.text.push(character.encode_utf8(&mut [0; 4]));
@@ -209,7 +211,8 @@ impl Walk {
                 self.pass_by();
             }
             "table:database-range" => {
-                let filters = named(element, "table:display-filter-buttons").is_some_and(|said| said == "true");
+                let filters =
+                    named(element, "table:display-filter-buttons").is_some_and(|said| said == "true");
                 self.book.filters += usize::from(filters);
                 self.pass_by();
             }
@@ -229,7 +232,10 @@ impl Walk {
         if self.name.is_empty() {
             self.name = format!("Sheet {}", self.sheets);
         }
-        Found::Sheet { name: self.name.clone(), style: named(element, "table:style-name").unwrap_or_default() }
+        Found::Sheet {
+            name: self.name.clone(),
+            style: named(element, "table:style-name").unwrap_or_default(),
+        }
     }
 
     fn open_in_sheet(&mut self, element: &BytesStart<'_>) -> Result<Option<Found>, SheetFault> {
@@ -304,7 +310,8 @@ impl Walk {
                 return Ok(Some(Found::End(std::mem::take(&mut self.extras))));
             }
             (Place::Book, "office:spreadsheet") => self.place = Place::Before,
-            (Place::Before | Place::Book | Place::Sheet | Place::Row | Place::Cell | Place::Paragraph, _) => {}
+            (Place::Before | Place::Book | Place::Sheet | Place::Row | Place::Cell | Place::Paragraph, _) => {
+            }
         }
         Ok(None)
     }
@@ -321,9 +328,8 @@ impl Walk {
         }
         let stored = u64::try_from(self.row.cells.len()).unwrap_or(u64::MAX);
         let there: u64 = self.row.cells.iter().map(|cell| u64::from(cell.repeated)).sum();
-        self.repeated = self
-            .repeated
-            .saturating_add(there.saturating_mul(self.row_repeated).saturating_sub(stored));
+        self.repeated =
+            self.repeated.saturating_add(there.saturating_mul(self.row_repeated).saturating_sub(stored));
         if self.repeated > MOST_REPEATED {
             let what = format!(
                 "a value that is said to repeat; with it more than {MOST_REPEATED} cells are only there by repetition"
@@ -349,10 +355,8 @@ impl Walk {
     fn keep_within_row(&self, more: usize) -> Result<(), SheetFault> {
         let bytes = self.row_bytes.saturating_add(u64::try_from(more).unwrap_or(u64::MAX));
         if bytes > LONGEST_ROW {
-            return Err(self.unreadable(format!(
-                "so much text that its row has more than {} characters",
-                LONGEST_ROW
-            )));
+            return Err(self
+                .unreadable(format!("so much text that its row has more than {} characters", LONGEST_ROW)));
         }
         Ok(())
     }

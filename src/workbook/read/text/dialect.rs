@@ -5,7 +5,8 @@ use std::io::Cursor;
 use super::records::{Record, Records};
 
 /// Separators that lists come with, in the order in which equal ones are preferred: the comma also stands in numbers.
-const CANDIDATES: [(u8, &str); 4] = [(b'\t', "tab"), (b';', "semicolon"), (b'|', "vertical bar"), (b',', "comma")];
+const CANDIDATES: [(u8, &str); 4] =
+    [(b'\t', "tab"), (b';', "semicolon"), (b'|', "vertical bar"), (b',', "comma")];
 
 /// Rows that are looked at.
 const ROWS: usize = 500;
@@ -140,16 +141,32 @@ mod tests {
     fn the_separator_is_what_cuts_rows_alike() {
         for (text, separator, why) in [
             ("CAS;Name;log Kow\n50-29-3;DDT;6,91\n67-56-1;Methanol;-0,77\n", Some(b';'), Why::Fits),
-            ("CAS,Name,log Kow\n50-29-3,DDT,6.91\n107-06-2,\"1,2-Dichloroethane\",1.48\n", Some(b','), Why::Fits),
-            ("CAS\tName\tlog Kow\n107-06-2\t1,2-Dichloroethane\t1,48\n71-55-6\t1,1,1-Tri\t2,49\n", Some(b'\t'), Why::Fits),
+            (
+                "CAS,Name,log Kow\n50-29-3,DDT,6.91\n107-06-2,\"1,2-Dichloroethane\",1.48\n",
+                Some(b','),
+                Why::Fits,
+            ),
+            (
+                "CAS\tName\tlog Kow\n107-06-2\t1,2-Dichloroethane\t1,48\n71-55-6\t1,1,1-Tri\t2,49\n",
+                Some(b'\t'),
+                Why::Fits,
+            ),
             ("CAS|Name\n50-29-3|DDT\n", Some(b'|'), Why::Fits),
             // Decimal commas in every field, and title lines above.
             ("a;b;c\n1,5;2,5;3,5\n1,0;2,0;3,0\n", Some(b';'), Why::Fits),
-            ("Inventory of the northern works\n\nCAS;Name;log Kow\n50-29-3;DDT;6,91\n67-56-1;x;-0,77\n", Some(b';'), Why::Fits),
+            (
+                "Inventory of the northern works\n\nCAS;Name;log Kow\n50-29-3;DDT;6,91\n67-56-1;x;-0,77\n",
+                Some(b';'),
+                Why::Fits,
+            ),
             // A comma in the header as in every row.
             ("CAS;log Kow, exp.\n50-29-3;6,91\n67-56-1;-0,77\n", Some(b';'), Why::FitsLike(b',')),
             // Semicolons within the texts of a list with commas.
-            ("CAS,Name,Other names (a; b)\n64-17-5,Ethanol,alcohol; EtOH\n67-56-1,Methanol,x; y\n", Some(b','), Why::FitsLike(b';')),
+            (
+                "CAS,Name,Other names (a; b)\n64-17-5,Ethanol,alcohol; EtOH\n67-56-1,Methanol,x; y\n",
+                Some(b','),
+                Why::FitsLike(b';'),
+            ),
             // Blank fields at the end left out.
             ("a;b;c;d\n1;2;3\n1;2\n1;2;3;4;5\n1;2;3;4;5;6\n", Some(b';'), Why::Stands),
             ("CAS\n50-29-3\n67-56-1\n", None, Why::None),

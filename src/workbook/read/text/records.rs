@@ -139,7 +139,8 @@ mod tests {
 
     fn rows(text: &str, separator: u8) -> Result<Vec<(u64, Vec<String>)>, LinesFault> {
         // A small buffer, so that every state meets the end of a portion.
-        let mut records = Records::new(std::io::BufReader::with_capacity(3, text.as_bytes()), Some(separator));
+        let mut records =
+            Records::new(std::io::BufReader::with_capacity(3, text.as_bytes()), Some(separator));
         let (mut record, mut rows) = (Record::default(), Vec::new());
         while records.next(&mut record)? {
             rows.push((record.row, record.iter().map(str::to_owned).collect()));

@@ -8,8 +8,10 @@ use super::survey::{Count, Surveyed};
 
 /// How encoding and separator were decided, and what did not fit.
 pub(super) fn how_read(encoding: &TextEncoding, dialect: &Dialect, surveyed: &Surveyed) -> Vec<String> {
-    let mut sentences =
-        vec![encoding_in_words(encoding, surveyed), format!("Separator of the fields: {}.", dialect.in_words())];
+    let mut sentences = vec![
+        encoding_in_words(encoding, surveyed),
+        format!("Separator of the fields: {}.", dialect.in_words()),
+    ];
     if let Some(first) = &surveyed.broken.first {
         sentences.push(format!(
             "{} not in this encoding and read as `\u{FFFD}`, the first in {first}; export the list again as UTF-8, or \
@@ -22,6 +24,14 @@ pub(super) fn how_read(encoding: &TextEncoding, dialect: &Dialect, surveyed: &Su
             "{} no text, the first in {first}; if letters are missing there, the encoding is another one: save the list \
              as UTF-8 or xlsx.",
             count(surveyed.controls.number, "character is", "characters are")
+        ));
+    }
+    if let Some(first) = &surveyed.short.first {
+        sentences.push(format!(
+            "{} fewer fields than the others, the first is row {}; if a line break within a text cut such a row in two, \
+             put the text into quotation marks.",
+            count(surveyed.short.number, "row has", "rows have"),
+            first.row + 1
         ));
     }
     if surveyed.zeros > 0 {

@@ -8,6 +8,7 @@ use crate::workbook::place::{CellRef, LAST_ROW};
 use crate::workbook::survey::{Extras, SheetSurvey, Visibility};
 use crate::workbook::write::free_sheet_name;
 
+use super::dialect::Dialect;
 use super::records::Record;
 use super::text_meant;
 
@@ -42,6 +43,8 @@ pub(super) struct Surveyed {
     pub(super) overlong: Count,
     /// Texts written as a formula that only gives a text.
     pub(super) unwrapped: Count,
+    /// Rows in the table with fewer fields than usual.
+    pub(super) short: Count,
     /// Zero characters, which are left out.
     pub(super) zeros: u64,
 }
@@ -65,11 +68,13 @@ impl Count {
 /// The survey while it goes on.
 pub(super) struct Surveyor {
     surveyed: Surveyed,
-    usual_fields: usize,
+    dialect: Dialect,
+    /// The first row with the usual number of fields, in which the table begins, has been seen.
+    in_table: bool,
 }
 
 impl Surveyor {
-    pub(super) fn new(path: &Path, usual_fields: usize) -> Self {
+    pub(super) fn new(path: &Path, dialect: Dialect) -> Self {
         let stem = path.file_stem().map(|stem| stem.to_string_lossy().into_owned()).unwrap_or_default();
         let sheet = SheetSurvey {
             name: free_sheet_name(stem.trim(), []).into(),
@@ -93,9 +98,10 @@ impl Surveyor {
             controls: Count::default(),
             overlong: Count::default(),
             unwrapped: Count::default(),
+            short: Count::default(),
             zeros: 0,
         };
-        Self { surveyed, usual_fields }
+        Self { surveyed, dialect, in_table: false }
     }
 
     /// Takes note of a row.
@@ -104,6 +110,11 @@ impl Surveyor {
         let row = u32::try_from(record.row).unwrap_or(LAST_ROW);
         if row < FIRST_ROWS {
             self.surveyed.first_fields.insert(row, record.fields);
+        }
+        self.in_table |= record.fields >= self.dialect.usual_fields;
+        if self.in_table && record.fields < self.dialect.usual_fields && !record.is_blank() {
+            let name = self.surveyed.sheet.name.clone();
+            self.surveyed.short.add(1, || CellRef { sheet: name, row, column: 0 });
         }
         for (column, field) in (0u16..).zip(record.iter()).filter(|(_, field)| !field.is_empty()) {
             let sheet = &mut self.surveyed.sheet;
@@ -147,14 +158,12 @@ impl Surveyor {
 
     /// Two stray quotation marks make one text of the rows between them.
     fn refuse_swallowed_rows(&self, record: &Record) -> Result<(), LinesFault> {
-        let separators = self.usual_fields.saturating_sub(1);
-        if separators < SEPARATORS_OF_A_ROW {
+        let separators = self.dialect.usual_fields.saturating_sub(1);
+        let Some(separator) = self.dialect.separator.filter(|_| separators >= SEPARATORS_OF_A_ROW) else {
             return Ok(());
-        }
+        };
         for (field, line) in &record.of_several_lines {
-            let is_row = |text: &str| {
-                [';', ',', '\t', '|'].iter().any(|separator| text.matches(*separator).count() == separators)
-            };
+            let is_row = |text: &str| text.bytes().filter(|byte| *byte == separator).count() == separators;
             if record.get(*field).lines().any(is_row) {
                 return Err(LinesFault::Swallowed { row: record.row + 1, line: *line });
             }

@@ -29,9 +29,8 @@ enum Fonts {
 impl Walk {
     pub(super) fn begin_cell(&mut self, element: &BytesStart<'_>) -> Result<(), SheetFault> {
         self.place = Place::Cell;
-        let stored = Stored::of(element).map_err(|what| {
-            self.unreadable(format!("something that cannot be read ({what})"))
-        })?;
+        let stored = Stored::of(element)
+            .map_err(|what| self.unreadable(format!("something that cannot be read ({what})")))?;
         if named(element, "table:content-validation-name").is_some() {
             self.extras.cell_checks += 1;
         }
@@ -54,7 +53,8 @@ impl Walk {
     pub(super) fn open_in_paragraph(&mut self, element: &BytesStart<'_>) {
         match element.name().as_ref() {
             "text:s" => {
-                let spaces = named(element, "text:c").and_then(|count| count.parse::<u16>().ok()).unwrap_or(1);
+                let spaces =
+                    named(element, "text:c").and_then(|count| count.parse::<u16>().ok()).unwrap_or(1);
                 for _ in 0..spaces {
                     self.cell.text.push_meant(' ');
                 }
