@@ -4,10 +4,12 @@
 
 mod cell;
 mod file;
+mod lines;
 mod rule;
 
 pub use cell::{CellFault, CellFaultKind};
 pub use file::{FileFault, FileKind, SheetFault};
+pub use lines::LinesFault;
 pub use rule::{Drawing, OwnerKind, RuleFault, RuleFaults, RuleMistake, unknown_rulebook};
 
 /// Why nothing could be written.

@@ -26,7 +26,7 @@ use crate::quantity::Date;
 use crate::report::ReasoningMode;
 use crate::rules::{RuleSet, RuleText, load_rule_set};
 use crate::substance::UnstatedBasis;
-use crate::workbook::{Inventory, Overwrite, Row, open_inventory};
+use crate::workbook::{Cell, CellContent, Inventory, Overwrite, Row, open_inventory};
 use judged_row::judge_row;
 use output::Output;
 use plan::{Plan, SheetPlan};
@@ -86,6 +86,8 @@ pub struct Summary {
     pub column_remarks: Vec<String>,
     /// Columns with a header that is not recognised, each sheet in one sentence.
     pub unrecognised: Vec<String>,
+    /// How the file was read where it does not say so itself, such as its encoding.
+    pub how_read: Vec<String>,
     /// What could not be carried over.
     pub not_carried: Vec<String>,
     /// Cells that could not be read, the first of them.
@@ -96,6 +98,8 @@ pub struct Summary {
 
 /// Rows that travel together.
 const ROWS_A_BATCH: usize = 512;
+/// Text that travels together, in bytes; rows of an inventory have some hundred each.
+const BYTES_A_BATCH: usize = 4 << 20;
 /// Batches that may wait between two stages.
 const BATCHES_WAITING: usize = 4;
 
@@ -156,17 +160,28 @@ type Batch<T> = Result<Vec<T>, FileFault>;
 /// A closed channel means that a later stage gave up, with the reason on its own way to the user.
 fn read_batches(inventory: &mut Inventory, sheet: &SheetPlan, to_judge: &SyncSender<Batch<Row>>) {
     let mut batch = Vec::with_capacity(ROWS_A_BATCH);
+    let mut bytes = 0_usize;
     let read = inventory.stream_rows(sheet.index, |row| {
+        bytes = bytes.saturating_add(bytes_of_texts(&row));
         batch.push(row);
-        if batch.len() < ROWS_A_BATCH {
+        if batch.len() < ROWS_A_BATCH && bytes < BYTES_A_BATCH {
             return std::ops::ControlFlow::Continue(());
         }
+        bytes = 0;
         match to_judge.send(Ok(std::mem::replace(&mut batch, Vec::with_capacity(ROWS_A_BATCH)))) {
             Ok(()) => std::ops::ControlFlow::Continue(()),
             Err(_) => std::ops::ControlFlow::Break(()),
         }
     });
     let _ = to_judge.send(read.map(|()| batch));
+}
+
+fn bytes_of_texts(row: &Row) -> usize {
+    let of_cell = |cell: &Cell| match &cell.content {
+        CellContent::Text(text) | CellContent::Error(text) => text.len(),
+        CellContent::Empty | CellContent::Number(_) | CellContent::Boolean(_) | CellContent::DateTime(_) => 0,
+    };
+    row.cells.iter().map(of_cell).sum()
 }
 
 fn judge_batches(

@@ -5,12 +5,14 @@ mod caught;
 mod compound;
 mod content;
 mod contents;
+mod encoding;
 mod guard;
 mod look;
 mod not_carried;
 mod package;
 mod place;
 mod read;
+mod serial;
 mod survey;
 mod write;
 

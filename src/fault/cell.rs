@@ -154,6 +154,13 @@ pub enum CellFaultKind {
         /// The part, for example `350`.
         part: String,
     },
+    /// A field to the right of the header's last one, in a file whose lines are cut into fields.
+    BeyondHeader {
+        /// How many fields the row has.
+        fields: usize,
+        /// How many the header has.
+        header: usize,
+    },
 }
 
 impl fmt::Display for CellFault {
@@ -314,6 +321,12 @@ impl fmt::Display for CellFaultKind {
                 formatter,
                 "holds `{part}`, which may be a hazard statement and was not read; write each code in full, for example \
                  `H302; H350`"
+            ),
+            Self::BeyondHeader { fields, header } => write!(
+                formatter,
+                "is field {fields} of its row, but the header has {header}, so that a separator within a text or number \
+                 may have moved the values into wrong columns; the row is not screened: put that text into quotation \
+                 marks, or give the column a header"
             ),
         }
     }

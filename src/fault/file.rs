@@ -2,6 +2,7 @@
 
 use std::fmt;
 
+use super::LinesFault;
 use crate::workbook::CellRef;
 
 /// Why an inventory could not be read or an output not written.
@@ -126,6 +127,14 @@ pub enum FileFault {
         /// What the system said.
         reason: String,
     },
+    /// Lines of text that cannot be cut into the cells of a table.
+    #[error("{path}: {fault}")]
+    Lines {
+        /// The path as given.
+        path: String,
+        /// What is wrong, and in which row and line.
+        fault: LinesFault,
+    },
     /// Writing began and failed.
     #[error(
         "{path}: could not be written ({reason}); nothing was left there. Check the space on the disk, \
@@ -168,6 +177,8 @@ pub enum FileKind {
     Archive,
     /// None of these.
     Unknown,
+    /// Data written for programs.
+    Json,
 }
 
 impl FileKind {
@@ -179,7 +190,7 @@ impl FileKind {
             Self::Xls | Self::Xlsb | Self::Ods | Self::XmlSpreadsheet | Self::Html | Self::Text => {
                 "open it in a spreadsheet program, save it as xlsx and use that file"
             }
-            Self::Xml | Self::Pdf | Self::Document | Self::Archive | Self::Unknown => {
+            Self::Xml | Self::Pdf | Self::Document | Self::Archive | Self::Unknown | Self::Json => {
                 "name an xlsx workbook with one substance a row"
             }
         }
@@ -193,15 +204,16 @@ impl fmt::Display for FileKind {
             Self::Encrypted => "the workbook is protected by a password",
             Self::Xls => "this is a worksheet of a binary format from before 1993, which is not read",
             Self::Xlsb => "this is a binary workbook (xlsb) without its main part",
-            Self::Ods => "this is an OpenDocument workbook (ods), which is not read yet",
+            Self::Ods => "this is an OpenDocument workbook (ods)",
             Self::XmlSpreadsheet => "this is a workbook written as XML text, which is not read",
             Self::Html => "this is a web page (HTML), whatever its name says",
             Self::Xml => "this is an XML file, not a workbook",
-            Self::Text => "this is plain text (such as csv), which is not read yet",
+            Self::Text => "this is plain text",
             Self::Pdf => "this is a PDF, not a workbook",
             Self::Document => "this is a text document or a presentation, not a workbook",
             Self::Archive => "this is an archive without a workbook in it",
             Self::Unknown => "this is not a workbook",
+            Self::Json => "this is a JSON file, not a table",
         })
     }
 }

@@ -21,6 +21,8 @@ pub struct RunFacts {
     pub rule_fingerprints: Vec<(String, String)>,
     /// The sheets, in order.
     pub sheets: Vec<SheetFacts>,
+    /// How the file was read where it does not say so itself, in sentences.
+    pub how_read: Vec<String>,
     /// What could not be carried over.
     pub not_carried: Vec<String>,
     /// Which lines the Reasoning sheet holds, in words.
@@ -53,6 +55,7 @@ pub fn run_record_table(facts: &RunFacts, rules: &RuleSet) -> Table {
     rows.push(pair("Date of the run", facts.date.to_string()));
     rows.push(pair("Inventory", facts.inventory.clone()));
     rows.push(pair("SHA-256 of the inventory", facts.fingerprint.clone()));
+    rows.extend(facts.how_read.iter().map(|text| pair("How it was read", text.clone())));
     rows.extend(facts.options.iter().map(|(name, value)| pair(name, value.clone())));
     rows.push(pair("Reasoning sheet", facts.reasoning.clone()));
     rows.push(pair(

@@ -2,14 +2,14 @@
 
 use crate::columns::second_header_fault;
 use crate::evidence::gather_evidence;
-use crate::fault::CellFault;
+use crate::fault::{CellFault, CellFaultKind};
 use crate::judge::{Judge, Judgement, TestOutcome, Verdict};
 use crate::reasoning::{Told, headline_verdict};
 use crate::report::{Entry, ReasoningMode, added_entries, reasoning_entries, record_entries};
 use crate::rules::RuleSet;
 use crate::run::plan::{Screened, SheetPlan};
 use crate::run::tables::RowPlace;
-use crate::workbook::{Cell, CellContent, Row};
+use crate::workbook::{Cell, CellContent, CellRef, Row};
 
 /// A row with what is written for it.
 #[derive(Debug)]
@@ -31,6 +31,8 @@ pub(crate) enum Outcome {
     SecondHeader(CellFault),
     /// It stands below the header of another table, in the row named here, counted from 0.
     BelowSecondHeader(u32),
+    /// It has more fields than the header, so that its values may stand in wrong columns.
+    Displaced(CellFault),
 }
 
 /// What is added for a screened row.
@@ -61,9 +63,10 @@ pub(crate) fn judge_row(
         return JudgedRow { row, outcome: Outcome::Copied };
     };
     let outcome = match place {
-        RowPlace::InTable if holds_data(&row, screened) => {
-            Outcome::Screened(Box::new(screen_row(&row, screened, reasoning, judge)))
-        }
+        RowPlace::InTable if holds_data(&row, screened) => match beyond_header(&row, sheet, screened) {
+            Some(fault) => Outcome::Displaced(fault),
+            None => Outcome::Screened(Box::new(screen_row(&row, screened, reasoning, judge))),
+        },
         RowPlace::SecondHeader => {
             second_header_fault(&sheet.name, &row).map_or(Outcome::Copied, Outcome::SecondHeader)
         }
@@ -78,6 +81,23 @@ pub(crate) fn judge_row(
 fn holds_data(row: &Row, screened: &Screened) -> bool {
     row.index >= screened.recognised.first_data_row
         && screened.recognised.columns.iter().filter_map(|column| row.cell(column.index)).any(is_filled)
+}
+
+/// The first filled field to the right of the header's last one.
+fn beyond_header(row: &Row, sheet: &SheetPlan, screened: &Screened) -> Option<CellFault> {
+    let header = screened.header_fields?;
+    let cell = row.cells.iter().find(|cell| usize::from(cell.column) >= header && is_filled(cell))?;
+    let found = match &cell.content {
+        CellContent::Text(text) | CellContent::Error(text) => text.clone(),
+        CellContent::Empty | CellContent::Number(_) | CellContent::Boolean(_) | CellContent::DateTime(_) => {
+            String::new()
+        }
+    };
+    Some(CellFault {
+        cell: CellRef { sheet: sheet.name.clone(), row: row.index, column: cell.column },
+        found,
+        kind: CellFaultKind::BeyondHeader { fields: usize::from(cell.column) + 1, header },
+    })
 }
 
 fn screen_row(row: &Row, screened: &Screened, reasoning: ReasoningMode, judge: &Judge) -> Added {

@@ -14,7 +14,7 @@ use crate::run::plan::{Plan, SheetPlan};
 use crate::run::sheets::{
     SheetWriter, lay_out_added, new_reasoning_sheet, span, write_entry, write_line, write_table,
 };
-use crate::run::summing_up::{column_remarks, options, unreached, unrecognised};
+use crate::run::summing_up::{column_remarks, how_read, options, unreached, unrecognised};
 use crate::run::{ScreenSettings, Summary};
 use crate::workbook::{AnnotatedWorkbook, Inventory, Look, SheetId, Value, Visibility, fingerprint_of_text};
 
@@ -32,6 +32,8 @@ pub(crate) struct Output {
     screened: Vec<usize>,
     /// For each sheet, the row of another table's header and how many rows were left aside below it.
     unscreened: Vec<Option<(u32, usize)>>,
+    /// Rows with more fields than the header, which were left aside.
+    displaced: usize,
     headlines: Vec<(BTreeMap<Verdict, usize>, usize)>,
     reached: Vec<bool>,
     faults: Vec<CellFault>,
@@ -79,6 +81,7 @@ impl Output {
             record,
             screened: vec![0; plan.sheets.len()],
             unscreened: vec![None; plan.sheets.len()],
+            displaced: 0,
             headlines: vec![(BTreeMap::new(), 0); rules.rulebooks.len()],
             reached: Vec::new(),
             faults: Vec::new(),
@@ -119,6 +122,12 @@ impl Output {
                 if let Some(unscreened) = self.unscreened.get_mut(sheet.index) {
                     *unscreened = Some((index, 0));
                 }
+                let why = unscreened_entries(added, &fault.to_string());
+                self.write_added(id, index, screened.first_added, &why)?;
+                self.keep_faults(vec![fault]);
+            }
+            Outcome::Displaced(fault) => {
+                self.displaced += 1;
                 let why = unscreened_entries(added, &fault.to_string());
                 self.write_added(id, index, screened.first_added, &why)?;
                 self.keep_faults(vec![fault]);
@@ -220,6 +229,7 @@ impl Output {
             unreached: unreached(rules, &self.reached),
             column_remarks: column_remarks(plan),
             unrecognised: unrecognised(plan),
+            how_read: facts.how_read,
             not_carried: facts.not_carried,
             faults: self.faults,
             fault_total: self.fault_total,
@@ -256,6 +266,7 @@ impl Output {
                     copied_because: sheet.copied_because.clone(),
                 })
                 .collect(),
+            how_read: how_read(inventory, self.displaced),
             not_carried: inventory.not_carried().to_vec(),
             reasoning: match plan.reasoning {
                 ReasoningMode::All => "a line for every row, rulebook and criterion".to_owned(),

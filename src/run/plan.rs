@@ -51,6 +51,8 @@ pub(crate) struct Screened {
     pub(crate) added: AddedColumns,
     /// The first added column.
     pub(crate) first_added: u16,
+    /// How many fields the header has, where lines are cut into fields.
+    pub(crate) header_fields: Option<usize>,
 }
 
 /// A sheet and what was recognised on it, for `kowledger columns`.
@@ -120,7 +122,9 @@ impl Plan {
                         let first_added = survey.used_columns;
                         refuse_overwide(&survey.name, first_added, added.headers.len())?;
                         let reader = RowReader::new(survey.name.clone(), &recognised, settings.unstated);
-                        sheet.screened = Some(Screened { recognised, reader, added, first_added });
+                        let header_fields = fields_of_header(inventory, recognised.header_row);
+                        sheet.screened =
+                            Some(Screened { recognised, reader, added, first_added, header_fields });
                         lines += usize::try_from(survey.last_row)
                             .unwrap_or(usize::MAX)
                             .saturating_mul(lines_a_row);
@@ -149,6 +153,12 @@ impl Plan {
         };
         Ok(Self { sheets, words, reasoning })
     }
+}
+
+/// Of a header of two rows, the lower one may have fewer fields.
+fn fields_of_header(inventory: &Inventory, header_row: u32) -> Option<usize> {
+    let above = header_row.checked_sub(1).and_then(|row| inventory.fields_in_row(row));
+    inventory.fields_in_row(header_row).max(above)
 }
 
 /// A `--column` that speaks of no column there is would be obeyed by doing nothing.
@@ -206,7 +216,8 @@ fn refuse_own_output(inventory: &mut Inventory, settings: &ScreenSettings) -> Re
     let record = inventory
         .sheets()
         .iter()
-        .position(|sheet| sheet.visibility == Visibility::VeryHidden && &*sheet.name == RECORD_SHEET);
+        // Saved in another format it may be only hidden.
+        .position(|sheet| sheet.visibility != Visibility::Visible && &*sheet.name == RECORD_SHEET);
     let Some(record) = record else {
         return Ok(());
     };

@@ -2,11 +2,12 @@
 
 use std::collections::BTreeSet;
 
+use crate::fault::count;
 use crate::rules::{RuleSet, Weight};
 use crate::run::ScreenSettings;
 use crate::run::plan::Plan;
 use crate::substance::UnstatedBasis;
-use crate::workbook::column_letters;
+use crate::workbook::{Inventory, column_letters};
 
 pub(crate) fn options(settings: &ScreenSettings) -> Vec<(&'static str, String)> {
     let mut options = Vec::new();
@@ -24,6 +25,18 @@ pub(crate) fn options(settings: &ScreenSettings) -> Vec<(&'static str, String)> 
         options.push(("Column named", format!("{}={field}", column.header)));
     }
     options
+}
+
+/// How a file without cells of its own was read, and what did not fit.
+pub(crate) fn how_read(inventory: &Inventory, displaced: usize) -> Vec<String> {
+    let mut sentences = inventory.how_read().to_vec();
+    if displaced > 0 {
+        sentences.push(format!(
+            "{} not screened, with more fields than the header; each is among the cells that could not be read.",
+            count(displaced, "row was", "rows were")
+        ));
+    }
+    sentences
 }
 
 pub(crate) fn column_remarks(plan: &Plan) -> Vec<String> {

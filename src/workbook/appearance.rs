@@ -57,6 +57,16 @@ impl Appearance {
     pub(super) fn is_plain(&self) -> bool {
         self == &Self::default()
     }
+
+    /// Nothing but a way to show numbers, written as spreadsheet programs write it.
+    pub(super) fn of_numbers(code: &str) -> Self {
+        Self { format: Format::new().set_num_format(code), numbers: Numbers::Formatted, lines: Lines::One }
+    }
+
+    /// Nothing but room for several lines of text.
+    pub(super) fn of_several_lines() -> Self {
+        Self { format: Format::new().set_text_wrap(), numbers: Numbers::AsTyped, lines: Lines::Wrapped }
+    }
 }
 
 impl From<&Style> for Appearance {

@@ -7,13 +7,17 @@ use std::path::Path;
 use crate::fault::{FileFault, FileKind};
 
 use super::compound::{Compound, MAGIC};
+use super::encoding::wide_encoding;
 use super::package::Package;
 
 /// How much of a damaged container is searched for the names of its streams, in bytes.
 const SEARCHED: u64 = 32 << 20;
 
 /// How much of a text is looked at to tell what kind it is, in bytes.
-const GLANCED_AT: u64 = 4096;
+const GLANCED_AT: u64 = 8192;
+
+/// One control character in so many bytes is a slip of an export; more of them are no text.
+const BYTES_A_CONTROL: usize = 50;
 
 /// A file that may hold an inventory, by how it begins.
 pub(super) enum Container {
@@ -23,6 +27,8 @@ pub(super) enum Container {
     Compound(File),
     /// Lines of text.
     Text(File),
+    /// An OpenDocument workbook written as one XML file.
+    FlatOds(File),
 }
 
 /// Opens a file that may hold an inventory; anything else is named as what it is.
@@ -52,6 +58,7 @@ pub(super) fn open(path: &Path) -> Result<Container, FileFault> {
         None => Ok(Container::Zip(file)),
         Some(FileKind::Xls) => Ok(Container::Compound(file)),
         Some(FileKind::Text) => Ok(Container::Text(file)),
+        Some(FileKind::Ods) => Ok(Container::FlatOds(file)),
         Some(found) => Err(FileFault::AnotherKind { path: shown, found }),
     }
 }
@@ -129,20 +136,33 @@ fn kind_of_flat_file(beginning: &[u8]) -> FileKind {
 
 /// The beginning as lower-case text, if it looks like text in some encoding.
 fn text_of(beginning: &[u8]) -> Option<String> {
-    let wide = beginning.starts_with(&[0xFF, 0xFE]) || beginning.starts_with(&[0xFE, 0xFF]);
+    if let Some((encoding, _)) = wide_encoding(beginning) {
+        let (text, _) = encoding.decode_with_bom_removal(beginning);
+        return few_controls(text.chars().map(u32::from), text.chars().count()).then(|| text.to_lowercase());
+    }
     // Telling the kind of a text needs its ASCII letters only.
-    let letters: Vec<u8> =
-        beginning.iter().copied().filter(|byte| !wide || (*byte != 0 && *byte < 0xFE)).collect();
-    let control = letters.iter().any(|byte| *byte < 0x20 && !matches!(byte, b'\t' | b'\n' | b'\r' | 0x0C));
-    (!control).then(|| String::from_utf8_lossy(&letters).to_lowercase())
+    few_controls(beginning.iter().copied().map(u32::from), beginning.len())
+        .then(|| String::from_utf8_lossy(beginning).to_lowercase())
+}
+
+/// What is no text has many characters that control a device; the text of an export has a slip at most.
+fn few_controls(characters: impl Iterator<Item = u32>, length: usize) -> bool {
+    let controls = characters
+        .filter(|character| *character < 0x20 && !matches!(*character, 0x09 | 0x0A | 0x0C | 0x0D | 0x1A))
+        .count();
+    controls * BYTES_A_CONTROL <= length
 }
 
 fn kind_of_text(text: &str) -> FileKind {
     let text = text.trim_start_matches('\u{feff}').trim_start();
     if text.is_empty() {
         FileKind::Empty
+    } else if text.starts_with('{') || text.starts_with("[{") || text.starts_with("[[") {
+        FileKind::Json
     } else if !text.starts_with('<') {
         FileKind::Text
+    } else if text.contains("application/vnd.oasis.opendocument.spreadsheet") {
+        FileKind::Ods
     } else if text.contains("schemas-microsoft-com:office:spreadsheet") && !text.contains("<html") {
         FileKind::XmlSpreadsheet
     } else if ["<html", "<!doctype html", "<table", "<head", "<body", "<meta"]
@@ -170,7 +190,10 @@ fn kind_of_parts<'name>(names: impl Iterator<Item = &'name str>, media_type: &st
         return FileKind::Document;
     }
     let mut found = FileKind::Archive;
+    let mut open_document = (false, false);
     for name in names {
+        open_document.0 |= name == "content.xml";
+        open_document.1 |= name == "META-INF/manifest.xml";
         if name.eq_ignore_ascii_case("xl/workbook.bin") {
             return FileKind::Xlsb;
         }
@@ -178,5 +201,6 @@ fn kind_of_parts<'name>(names: impl Iterator<Item = &'name str>, media_type: &st
             found = FileKind::Document;
         }
     }
-    found
+    // Packed anew by a program that left the media type out; the content will say which kind it is.
+    if found == FileKind::Archive && open_document == (true, true) { FileKind::Ods } else { found }
 }

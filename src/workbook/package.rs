@@ -2,7 +2,7 @@
 
 use std::collections::BTreeMap;
 use std::fs::File;
-use std::io::{BufRead, BufReader, Read};
+use std::io::{BufRead, BufReader, Read, Seek, SeekFrom};
 use std::path::Path;
 
 use quick_xml::Reader;
@@ -68,6 +68,11 @@ impl Package {
     /// From here on sheets are read, which pass by and are not held.
     pub(super) fn allow_sheets(&mut self) {
         self.allowed = self.limits.total;
+    }
+
+    /// A sheet is read once more: what was unpacked before does not add to it.
+    pub(super) fn read_again(&mut self) {
+        self.unpacked = 0;
     }
 
     /// The names of all parts, as they are stored.
@@ -147,11 +152,23 @@ impl Package {
         }
         outcome.map(|()| Found::Yes)
     }
+}
 
-    /// What was read so far is known to be within the limits, and is read again.
-    pub(super) fn start_over(&mut self) {
-        self.unpacked = 0;
-    }
+/// Reads an XML file that stands alone as [`Package::read_xml`] reads a part.
+pub(super) fn read_flat_xml<Visit>(
+    path: &Path,
+    file: &mut File,
+    limits: Limits,
+    mut visit: Visit,
+) -> Result<(), FileFault>
+where
+    Visit: FnMut(&Event<'_>) -> Result<(), FileFault>,
+{
+    let shown = path.display().to_string();
+    let damaged =
+        |error: &dyn std::fmt::Display| FileFault::Damaged { path: shown.clone(), what: error.to_string() };
+    file.seek(SeekFrom::Start(0)).map_err(|error| damaged(&error))?;
+    read_events(file.take(limits.total), &mut visit, &damaged)
 }
 
 /// Whether a part was there.
@@ -182,7 +199,7 @@ fn read_events(
     visit: &mut dyn FnMut(&Event<'_>) -> Result<(), FileFault>,
     damaged: &dyn Fn(&dyn std::fmt::Display) -> FileFault,
 ) -> Result<(), FileFault> {
-    let mut source = BufReader::with_capacity(1 << 16, source);
+    let mut source = BufReader::with_capacity(1 << 16, Pieces { inner: source, since_last: 0 });
     refuse_other_encodings(&mut source, damaged)?;
     let mut reader = Reader::from_reader(source);
     reader.config_mut().expand_empty_elements = true;
@@ -190,11 +207,15 @@ fn read_events(
     let mut buffer = Vec::with_capacity(1024);
     loop {
         buffer.clear();
+        reader.get_mut().get_mut().since_last = 0;
         let event = reader.read_event_into(&mut buffer).map_err(|error| damaged(&error))?;
         match &event {
             Event::Eof if depth == 0 => return Ok(()),
             Event::Eof => return Err(damaged(&"it ends in the middle")),
             Event::DocType(_) => return Err(damaged(&"it declares a document type, which no workbook does")),
+            Event::Start(_) if depth >= DEEPEST => {
+                return Err(damaged(&format!("its elements stand within each other {DEEPEST} deep")));
+            }
             Event::Start(_) => depth += 1,
             Event::End(_) => depth = depth.saturating_sub(1),
             Event::Decl(declaration) => {
@@ -225,6 +246,33 @@ fn refuse_other_encodings(
         return Err(damaged(&"it is written in UTF-16 instead of UTF-8"));
     }
     Ok(())
+}
+
+/// The most bytes of one tag, text or comment, which the XML library holds in memory whole; the longest text of a cell
+/// takes a thousandth of it, a picture stored as text some.
+const LONGEST_PIECE: u64 = 64 << 20;
+
+/// Elements within elements; workbooks need about twenty.
+const DEEPEST: usize = 1_000;
+
+/// Stops a source of XML that does not come to the end of a piece.
+struct Pieces<R> {
+    inner: R,
+    since_last: u64,
+}
+
+impl<R: Read> Read for Pieces<R> {
+    fn read(&mut self, buffer: &mut [u8]) -> std::io::Result<usize> {
+        let count = self.inner.read(buffer)?;
+        self.since_last = self.since_last.saturating_add(u64::try_from(count).unwrap_or(u64::MAX));
+        if self.since_last > LONGEST_PIECE {
+            return Err(std::io::Error::other(format!(
+                "one text in it is longer than {}",
+                megabytes(LONGEST_PIECE)
+            )));
+        }
+        Ok(count)
+    }
 }
 
 /// Counts what is really unpacked; the sizes a container declares may be false.

@@ -79,7 +79,8 @@ fn open_within(path: &Path, limits: Limits) -> Result<Inventory, FileFault> {
             }
         }
         Container::Compound(file) => xls::open(path, file, limits)?,
-        Container::Text(file) => text::open(path, file, limits)?,
+        Container::Text(file) => text::open(path, file)?,
+        Container::FlatOds(file) => ods::open_flat(path, file, limits)?,
     };
     let Opened { source, sheets, appearances, not_carried } = opened;
     let fingerprint = fingerprint_of(path)?;
@@ -100,6 +101,23 @@ impl Inventory {
     /// The cell formats; a cell's [`StyleId`](super::StyleId) is an index into them.
     pub fn appearances(&self) -> &[Appearance] {
         &self.appearances
+    }
+
+    /// How the file was read where it does not say so itself, in sentences: its encoding and separator.
+    pub fn how_read(&self) -> &[String] {
+        match &self.source {
+            Source::Text(book) => book.how_read(),
+            Source::Xlsx(_) | Source::Xlsb(_) | Source::Xls(_) | Source::Ods(_) => &[],
+        }
+    }
+
+    /// How many fields one of the first rows has where the file's lines are cut into fields, be they empty; none where
+    /// cells know their column.
+    pub fn fields_in_row(&self, row: u32) -> Option<usize> {
+        match &self.source {
+            Source::Text(book) => book.fields_in_row(row),
+            Source::Xlsx(_) | Source::Xlsb(_) | Source::Xls(_) | Source::Ods(_) => None,
+        }
     }
 
     /// What an annotated copy of the inventory will lack, in sentences.

@@ -52,6 +52,7 @@ impl Console {
             format!("  {short}: {}", parts.join(", "))
         }));
         lines.extend(remarks);
+        lines.extend(summary.how_read.iter().cloned());
         if !summary.unreached.is_empty() {
             lines.push(format!("No row had a value for: {}.", summary.unreached.join("; ")));
         }

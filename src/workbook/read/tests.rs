@@ -8,6 +8,8 @@ use tempfile::TempDir;
 use super::open_inventory;
 use crate::workbook::{CellContent, Row, Visibility};
 
+#[path = "../../../tests/make/binary.rs"]
+pub(super) mod binary;
 #[path = "../../../tests/make/hostile.rs"]
 pub(super) mod hostile;
 

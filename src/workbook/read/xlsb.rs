@@ -70,7 +70,7 @@ impl Book {
         let mut rows = Rows::new(&self.formats, survey.used_columns, visit);
         let mut inside = false;
         let mut enough = false;
-        self.package.start_over();
+        self.package.read_again();
         for_each_record(&mut self.package, part, |kind, data| {
             if !inside {
                 inside = kind == 0x0091;

@@ -1,12 +1,11 @@
-//! What a number format makes of a number: a date, a duration, a percentage, or just a number.
+//! What a number format makes of a number: a date, a duration, or just a number. Whether it
+//! shows percentages is for [`Appearance`](crate::workbook::Appearance) to say.
 
 /// What a number under a format is.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
 pub(in crate::workbook::read) enum Shown {
-    /// A number, however many decimals it shows.
+    /// A number, however many decimals it shows, or a percentage.
     Number,
-    /// A number shown a hundred times as large, with a percent sign.
-    Percent,
     /// A day, a time of day, or both.
     Date,
     /// A span of time that may exceed a day.
@@ -16,7 +15,6 @@ pub(in crate::workbook::read) enum Shown {
 /// What a built-in format shows (ECMA-376 part 1, 18.8.30; 27 to 36 and 50 to 58 are the East Asian dates).
 pub(in crate::workbook::read) fn shown_by_built_in(number: u16) -> Shown {
     match number {
-        9 | 10 => Shown::Percent,
         14..=22 | 27..=36 | 45 | 47 | 50..=58 => Shown::Date,
         46 => Shown::Duration,
         _ => Shown::Number,
@@ -30,7 +28,6 @@ pub(in crate::workbook::read) fn shown_by_code(code: &str) -> Shown {
         return Shown::Number;
     }
     let mut characters = code.chars();
-    let mut found = Shown::Number;
     while let Some(character) = characters.next() {
         match character {
             ';' => break,
@@ -46,11 +43,10 @@ pub(in crate::workbook::read) fn shown_by_code(code: &str) -> Shown {
             'd' | 'D' | 'm' | 'M' | 'y' | 'Y' | 'h' | 'H' | 's' | 'S' => return Shown::Date,
             // The day and the half of the day in words of some regions, and the years of East Asian eras.
             'g' | 'G' | 'b' | 'B' if is_era(characters.as_str()) => return Shown::Date,
-            '%' => found = Shown::Percent,
             _ => {}
         }
     }
-    found
+    Shown::Number
 }
 
 /// `[h]`, `[mm]`, `[ss]`: hours, minutes or seconds counted on beyond their usual limit.
@@ -86,9 +82,7 @@ mod tests {
             ("Standard", Shown::Number),
             ("0;yyyy", Shown::Number),
             ("@", Shown::Number),
-            ("0%", Shown::Percent),
-            ("0.00%;[Red]-0.00%", Shown::Percent),
-            ("0\"%\"", Shown::Number),
+            ("0.00%;[Red]-0.00%", Shown::Number),
             ("yyyy-mm-dd", Shown::Date),
             ("[$-407]d. mmmm yyyy", Shown::Date),
             ("DD.MM.YYYY hh:mm", Shown::Date),
@@ -105,8 +99,7 @@ mod tests {
     fn a_built_in_format_is_known_by_its_number() {
         for (number, shown) in [
             (0, Shown::Number),
-            (9, Shown::Percent),
-            (10, Shown::Percent),
+            (10, Shown::Number),
             (11, Shown::Number),
             (13, Shown::Number),
             (14, Shown::Date),

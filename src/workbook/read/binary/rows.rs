@@ -8,9 +8,7 @@ use super::{Origin, Stored, StoredValue};
 use crate::workbook::appearance::Appearance;
 use crate::workbook::content::{Cell, CellContent, Row, StyleId};
 use crate::workbook::read::Visit;
-
-/// Days from the beginning of the 1900 system to that of the 1904 system (ECMA-376 part 1, 18.17.4.1).
-const DAYS_1900_TO_1904: f64 = 1462.0;
+use crate::workbook::serial::DAYS_1900_TO_1904;
 
 /// From when a workbook counts its days.
 #[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
@@ -75,7 +73,7 @@ impl Formats {
             return CellContent::Text(number.to_string());
         }
         match shown {
-            Shown::Number | Shown::Percent => CellContent::Number(number),
+            Shown::Number => CellContent::Number(number),
             Shown::Duration => CellContent::DateTime(number),
             Shown::Date => CellContent::DateTime(match self.day_zero {
                 DayZero::In1900 => number,

@@ -140,7 +140,7 @@ impl Globals {
                     .ok_or_else(|| damaged("its list of shared texts is cut off"))?;
             }
             0x041E => self.note_format(data)?,
-            0x0031 => self.waiting_fonts.extend(looks::font_record(data, self.version, self.alphabet)),
+            0x0031 => self.waiting_fonts.push(looks::font_record(data, self.version, self.alphabet)),
             0x00E0 => {
                 let format = looks::cell_format(data, self.version)
                     .ok_or_else(|| damaged("one of its cell formats is cut off"))?;

@@ -22,7 +22,7 @@ pub(super) struct FontRecord {
 }
 
 /// Reads a font; one that cannot be read leaves the usual font in its place.
-pub(super) fn font_record(data: &[u8], version: Version, alphabet: Alphabet) -> Option<FontRecord> {
+pub(super) fn font_record(data: &[u8], version: Version, alphabet: Alphabet) -> FontRecord {
     let unreadable = FontRecord {
         name: String::new(),
         twentieths: 0,
@@ -41,7 +41,7 @@ pub(super) fn font_record(data: &[u8], version: Version, alphabet: Alphabet) -> 
             name: Pieces::new(vec![data.get(14..)?]).short_text(version, alphabet).ok()?,
         })
     };
-    Some(read().unwrap_or(unreadable))
+    read().unwrap_or(unreadable)
 }
 
 impl FontRecord {

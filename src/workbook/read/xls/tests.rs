@@ -6,11 +6,7 @@ use super::super::tests::{place, refusal};
 use crate::workbook::read::{Inventory, open_inventory};
 use crate::workbook::{CellContent, Visibility};
 
-#[path = "../../../../tests/make/binary.rs"]
-#[expect(dead_code, reason = "other tests use the rest of the makers")]
-mod binary;
-
-use binary::{RawXls, compound_file, formula, label, number, record, shorts};
+use super::super::tests::binary::{RawXls, compound_file, formula, label, number, record, shorts};
 
 const SAVE_AGAIN: &str = "open it in a spreadsheet program, save it again as xlsx and use that file";
 

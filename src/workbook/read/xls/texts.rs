@@ -40,12 +40,11 @@ impl Alphabet {
     /// The text of some bytes; what is wrong if it cannot be told.
     pub(super) fn text_of(self, bytes: &[u8]) -> Result<String, String> {
         let encoding = match self {
-            Self::NotSaid => WINDOWS_1252,
             Self::Known(encoding) => encoding,
             Self::Unknown(number) if !bytes.is_ascii() => {
                 return Err(format!("a text in the unknown alphabet number {number}"));
             }
-            Self::Unknown(_) => WINDOWS_1252,
+            Self::NotSaid | Self::Unknown(_) => WINDOWS_1252,
         };
         let (text, damaged) = encoding.decode_without_bom_handling(bytes);
         if damaged {

@@ -4,11 +4,7 @@ use super::super::tests::{hostile, place, refusal};
 use crate::workbook::CellContent;
 use crate::workbook::read::{Inventory, open_inventory};
 
-#[path = "../../../../tests/make/binary.rs"]
-#[expect(dead_code, reason = "other tests use the rest of the makers")]
-mod binary;
-
-use binary::{longs, shorts, wide_number, wide_record, wide_row, wide_text, xlsb_parts};
+use super::super::tests::binary::{longs, shorts, wide_number, wide_record, wide_row, wide_text, xlsb_parts};
 
 const SAVE_AGAIN: &str = "open it in a spreadsheet program, save it again as xlsx and use that file";
 
@@ -216,7 +212,7 @@ fn a_workbook_that_contradicts_itself_is_refused() {
 
 #[test]
 fn a_sheet_that_unpacks_to_far_more_than_it_takes_is_refused() {
-    let bomb = wide_record(0x0025, &[0; 1 << 20]).repeat(40);
+    let bomb = wide_record(0x0025, &vec![0; 1 << 20]).repeat(40);
     let said = refusal("a.xlsb", write(&xlsb_parts(&bomb, 0)));
     assert!(said.contains("unpacks to over 250 times its size in the file"), "{said}");
 }
