@@ -48,7 +48,7 @@ struct Opened {
 
 /// The opened file.
 enum Source {
-    Xlsx(xlsx::Book),
+    Xlsx(Box<xlsx::Book>),
     Xlsb(xlsb::Book),
     Xls(xls::Book),
     Ods(ods::Book),
@@ -78,7 +78,7 @@ fn open_within(path: &Path, limits: Limits) -> Result<Inventory, FileFault> {
             }
         }
         Container::Compound(file) => xls::open(path, file, limits)?,
-        Container::Text(file) => text::open(path, file)?,
+        Container::Text(file) => text::open(path, &file)?,
         Container::FlatOds(file) => ods::open_flat(path, file, limits)?,
     };
     let Opened { source, sheets, appearances, not_carried } = opened;

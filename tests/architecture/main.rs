@@ -54,11 +54,13 @@ fn imports_point_one_way() {
 
 #[test]
 fn each_outside_crate_is_named_in_its_own_rooms() {
-    let table: [(&str, &[&str]); 15] = [
+    let table: [(&str, &[&str]); 17] = [
         ("calamine", &["workbook"]),
         ("rust_xlsxwriter", &["workbook"]),
         ("zip", &["workbook"]),
         ("quick_xml", &["workbook"]),
+        ("encoding_rs", &["workbook"]),
+        ("chardetng", &["workbook"]),
         ("tempfile", &["workbook"]),
         ("sha2", &["workbook"]),
         ("rayon", &["run"]),
