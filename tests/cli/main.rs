@@ -17,6 +17,7 @@ mod sheets;
 mod cells;
 mod commands;
 mod inputs;
+mod kinds;
 mod layouts;
 mod outputs;
 mod place;
