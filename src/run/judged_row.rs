@@ -8,6 +8,7 @@ use crate::reasoning::{Told, headline_verdict};
 use crate::report::{Entry, ReasoningMode, added_entries, reasoning_entries, record_entries};
 use crate::rules::RuleSet;
 use crate::run::plan::{Screened, SheetPlan};
+use crate::run::standing::Standing;
 use crate::run::tables::RowPlace;
 use crate::workbook::{Cell, CellContent, Row};
 
@@ -48,6 +49,8 @@ pub(crate) struct Added {
     pub(crate) reached: Vec<bool>,
     /// Cells that could not be read.
     pub(crate) faults: Vec<CellFault>,
+    /// What it is held against other rows by, at the end.
+    pub(crate) standing: Standing,
 }
 
 /// Takes one row its whole way.
@@ -93,6 +96,7 @@ fn screen_row(row: &Row, screened: &Screened, reasoning: ReasoningMode, judge: &
         headlines: told.books().map(headline_verdict).collect(),
         reached: reached(rules, &judgement),
         faults: Vec::new(),
+        standing: Standing::of(told),
     };
     Added { faults: substance.faults, ..added }
 }

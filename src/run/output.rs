@@ -2,13 +2,14 @@
 
 use std::collections::BTreeMap;
 
-use crate::fault::{CellFault, Refusal};
+use crate::fault::{ConflictCounts, Refusal};
 use crate::judge::Verdict;
 use crate::report::{
     Entry, RECORD_SHEET, ReasoningMode, RunFacts, SheetFacts, record_head, rulebooks_table, run_record_table,
     unscreened_entries,
 };
 use crate::rules::RuleSet;
+use crate::run::conflicts::{Conflicts, Written};
 use crate::run::judged_row::{Added, JudgedRow, Outcome};
 use crate::run::plan::{Plan, SheetPlan};
 use crate::run::sheets::{
@@ -18,8 +19,6 @@ use crate::run::summing_up::{column_remarks, options, unreached, unrecognised};
 use crate::run::{ScreenSettings, Summary};
 use crate::workbook::{AnnotatedWorkbook, Inventory, Look, SheetId, Value, Visibility, fingerprint_of_text};
 
-/// Faults that are kept with their wording; the others are counted.
-const FAULTS_KEPT: usize = 1_000;
 /// Rows of a sheet, less the header.
 const LINES_A_SHEET: u32 = 1_048_575;
 
@@ -34,8 +33,7 @@ pub(crate) struct Output {
     unscreened: Vec<Option<(u32, usize)>>,
     headlines: Vec<(BTreeMap<Verdict, usize>, usize)>,
     reached: Vec<bool>,
-    faults: Vec<CellFault>,
-    fault_total: usize,
+    conflicts: Conflicts,
 }
 
 impl Output {
@@ -81,8 +79,7 @@ impl Output {
             unscreened: vec![None; plan.sheets.len()],
             headlines: vec![(BTreeMap::new(), 0); rules.rulebooks.len()],
             reached: Vec::new(),
-            faults: Vec::new(),
-            fault_total: 0,
+            conflicts: Conflicts::new(plan.sheets.iter().map(|sheet| sheet.name.clone()).collect()),
         };
         let spans: Vec<_> = plan.sheets.iter().filter_map(span).collect();
         for row in record_head(rules, &spans) {
@@ -113,7 +110,7 @@ impl Output {
                     *count += 1;
                 }
                 self.write_added(id, index, screened.first_added, &row.entries)?;
-                self.count(*row)?;
+                self.count(sheet.index, index, *row)?;
             }
             Outcome::SecondHeader(fault) => {
                 if let Some(unscreened) = self.unscreened.get_mut(sheet.index) {
@@ -121,7 +118,7 @@ impl Output {
                 }
                 let why = unscreened_entries(added, &fault.to_string());
                 self.write_added(id, index, screened.first_added, &why)?;
-                self.keep_faults(vec![fault]);
+                self.conflicts.take_faults(sheet.index, vec![fault], None);
             }
             Outcome::BelowSecondHeader(header) => {
                 if let Some(Some((_, left))) = self.unscreened.get_mut(sheet.index) {
@@ -141,13 +138,7 @@ impl Output {
         Ok(())
     }
 
-    fn keep_faults(&mut self, faults: Vec<CellFault>) {
-        self.fault_total += faults.len();
-        let room = FAULTS_KEPT.saturating_sub(self.faults.len());
-        self.faults.extend(faults.into_iter().take(room));
-    }
-
-    fn count(&mut self, added: Added) -> Result<(), Refusal> {
+    fn count(&mut self, sheet: usize, row: u32, added: Added) -> Result<(), Refusal> {
         for line in &added.lines {
             self.write_reasoning(line)?;
         }
@@ -164,7 +155,8 @@ impl Output {
         for (so_far, reached) in self.reached.iter_mut().zip(added.reached) {
             *so_far |= reached;
         }
-        self.keep_faults(added.faults);
+        self.conflicts.take_faults(sheet, added.faults, Some(&added.standing.name));
+        self.conflicts.take_row(sheet, row, added.standing);
         Ok(())
     }
 
@@ -196,8 +188,10 @@ impl Output {
         plan: &Plan,
         rules: &RuleSet,
     ) -> Result<Summary, Refusal> {
+        let written = Written { plans: &plan.sheets, ids: &self.sheets, unscreened: &self.unscreened, rules };
+        let (conflicts_sheet, conflicts) = self.conflicts.write(&mut self.workbook, written)?;
         write_table(&mut self.workbook, &rulebooks_table(rules))?;
-        let facts = self.facts(settings, inventory, plan, rules);
+        let facts = self.facts(settings, inventory, plan, rules, (&conflicts_sheet, &conflicts));
         write_table(&mut self.workbook, &run_record_table(&facts, rules))?;
         self.workbook.finish()?;
         let copied = plan.sheets.iter().filter(|sheet| sheet.screened.is_none()).count();
@@ -221,8 +215,10 @@ impl Output {
             column_remarks: column_remarks(plan),
             unrecognised: unrecognised(plan),
             not_carried: facts.not_carried,
-            faults: self.faults,
-            fault_total: self.fault_total,
+            tally: self.conflicts.tally().clone(),
+            faults: self.conflicts.into_faults(),
+            conflicts_sheet,
+            conflicts,
         })
     }
 
@@ -232,6 +228,7 @@ impl Output {
         inventory: &Inventory,
         plan: &Plan,
         rules: &RuleSet,
+        (conflicts_sheet, conflicts): (&str, &ConflictCounts),
     ) -> RunFacts {
         let file_name = settings.inventory.file_name().map(|name| name.to_string_lossy().into_owned());
         RunFacts {
@@ -264,8 +261,9 @@ impl Output {
                 }
                 ReasoningMode::None => "not written (`--reasoning none`)".to_owned(),
             },
-            faults: self.faults.iter().map(ToString::to_string).collect(),
-            fault_total: self.fault_total,
+            fault_kinds: self.conflicts.tally().kinds(),
+            conflicts: conflicts.clone(),
+            conflicts_sheet: conflicts_sheet.to_owned(),
         }
     }
 }
