@@ -141,11 +141,11 @@ impl Shared {
                  different substances"
             }
             (SharedBy::Cas | SharedBy::Ec, Agreement::Verdicts) => {
-                "decide which row is right and correct the other; each was screened on its own data, and neither is \
-                 preferred"
+                "decide which row is right, or bring their data together; each was screened on its own data, and none \
+                 is preferred"
             }
             (SharedBy::Cas | SharedBy::Ec, Agreement::Data) => {
-                "decide which values are right, although the headlines are the same"
+                "decide which values are right, or bring them together; the headlines are the same"
             }
             (SharedBy::Cas | SharedBy::Ec, Agreement::Same) => {
                 "nothing, if the substance is meant to stand on several rows, as in several products; otherwise delete \

@@ -12,8 +12,8 @@ pub const CONFLICT_COLUMNS: [(&str, f64); 10] = [
     ("Name", 28.0),
     ("CAS or EC number", 14.0),
     ("Column", 24.0),
-    ("Kind", 26.0),
-    ("Found", 26.0),
+    ("Kind", 32.0),
+    ("Found", 24.0),
     ("What is wrong", 60.0),
     ("What to do", 60.0),
 ];

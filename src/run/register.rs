@@ -5,6 +5,8 @@
 
 mod details;
 mod group;
+#[cfg(test)]
+mod tests;
 
 use std::collections::BTreeMap;
 use std::num::NonZeroU64;
@@ -32,8 +34,11 @@ struct Entry {
     data: u32,
 }
 
+/// Bytes of names and digests that are kept; 200,000 rows and more of a usual inventory.
+const DETAIL: usize = 48 << 20;
+
 /// The screened rows of a run.
-#[derive(Debug, Default)]
+#[derive(Debug)]
 pub(crate) struct Register {
     /// The names of the sheets.
     sheets: Vec<Arc<str>>,
@@ -68,7 +73,8 @@ impl Headlines {
 impl Register {
     /// A register of no rows yet, for sheets of these names.
     pub(crate) fn new(sheets: Vec<Arc<str>>) -> Self {
-        Self { sheets, ..Self::default() }
+        let details = Details::with_room(DETAIL);
+        Self { sheets, rows: Vec::new(), headlines: Headlines::default(), details }
     }
 
     /// Takes the next screened row.

@@ -16,7 +16,9 @@ mod sheets;
 
 mod cells;
 mod commands;
+mod conflicts;
 mod inputs;
 mod layouts;
 mod outputs;
 mod place;
+mod wording;

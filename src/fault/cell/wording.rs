@@ -53,7 +53,7 @@ impl CellFaultKind {
             Self::UnknownUnit { word, nearest: None, example } => say(
                 "unknown unit",
                 format!("has the unknown unit `{word}`"),
-                format!("write, for example, `{example}`, and remarks in brackets"),
+                format!("write, for example, `{example}`, and put remarks in brackets"),
             ),
             Self::WrongUnit { unit, what, example } => say(
                 "unit that does not fit",
@@ -63,7 +63,7 @@ impl CellFaultKind {
             Self::NeedsMolarMass => say(
                 "molar mass missing",
                 "is in moles, but the row has no molar mass",
-                "add a molar mass in g/mol or write it in mg/L",
+                "add a molar mass in g/mol, or write the value in mg/L",
             ),
             Self::OutOfSense { what } => say(
                 "far out of range",
@@ -113,12 +113,14 @@ impl CellFaultKind {
             Self::CheckDigit { what, expected, corrected } => say(
                 "check digit",
                 format!("is no {what}: its check digit should be {expected}"),
-                format!("write `{corrected}` if the other digits are right, or correct them"),
+                format!(
+                    "look the number up, and write `{corrected}` if the other digits are right, or correct them"
+                ),
             ),
             Self::NoSuchEcNumber => say(
                 "no such EC number",
                 "is no EC number: none starts with these six characters",
-                "write, for example, `200-024-3`",
+                "look the number up and write it again, for example `200-024-3`",
             ),
             Self::DateIsNoCas => say(
                 "date instead of a CAS number",
@@ -128,7 +130,7 @@ impl CellFaultKind {
             Self::SeveralIdentities { what } => say(
                 "more than one substance",
                 format!("holds several {what}, so the row is not identified"),
-                "write one a row",
+                "give each substance a row of its own",
             ),
             Self::NumberOfOtherKind { what, found } => say(
                 "number in another column",

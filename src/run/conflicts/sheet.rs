@@ -64,9 +64,9 @@ impl<'run> ConflictsSheet<'run> {
             About::Cell(line) => {
                 let header = self.header_of(item.sheet, item.column);
                 let wording = line.fault.kind.wording();
-                // On its own the phrase lacks the text as found, which stands in the cell before it.
-                let wording = Wording { wrong: format!("this {}", wording.wrong), ..wording };
-                self.write(&cell, line.row.as_deref(), header, &line.fault.shown(), &wording)
+                let found = line.fault.shown();
+                let wording = Wording { wrong: format!("`{found}` {}", wording.wrong), ..wording };
+                self.write(&cell, line.row.as_deref(), header, &found, &wording)
             }
             About::Sheet(conflict) => self.write(&cell, None, "", "", &conflict.wording()),
         }

@@ -2,15 +2,14 @@
 
 use crate::report::RowName;
 
-/// Bytes of detail that are kept; 200,000 rows and more of a usual inventory.
-const DETAIL: usize = 48 << 20;
-
 /// What separates a row's own number from its name and the name from the CAS or EC number.
 const SEPARATOR: char = '\u{1f}';
 
 /// The details of the first rows.
-#[derive(Debug, Default)]
+#[derive(Debug)]
 pub(super) struct Details {
+    /// Bytes that may be kept.
+    room: usize,
     text: String,
     data: Vec<(u8, u32)>,
     /// Where the text and the data of each row end.
@@ -20,10 +19,22 @@ pub(super) struct Details {
 }
 
 impl Details {
+    /// No details yet, and so many bytes of room.
+    pub(super) fn with_room(room: usize) -> Self {
+        Self {
+            room,
+            text: String::new(),
+            data: Vec::new(),
+            ends: Vec::new(),
+            titles: Vec::new(),
+            full: false,
+        }
+    }
+
     /// Keeps the details of the next row, if there is room.
     pub(super) fn add(&mut self, name: &RowName, data: &[(&'static str, u32)]) {
         let size = self.text.len() + (self.data.len() + data.len()) * 8 + self.ends.len() * 16;
-        self.full |= size > DETAIL;
+        self.full |= size > self.room;
         if self.full {
             return;
         }
