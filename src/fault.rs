@@ -3,14 +3,18 @@
 //! Faults carry data; their wording lives here and nowhere else.
 
 mod cell;
+mod conflict;
 mod file;
 mod lines;
 mod rule;
+mod tally;
 
-pub use cell::{CellFault, CellFaultKind};
+pub use cell::{CellFault, CellFaultKind, Wording};
+pub use conflict::{Agreement, Conflict, ConflictCounts, Contrast, Shared, SharedBy};
 pub use file::{FileFault, FileKind, SheetFault};
 pub use lines::LinesFault;
 pub use rule::{Drawing, OwnerKind, RuleFault, RuleFaults, RuleMistake, unknown_rulebook};
+pub use tally::FaultTally;
 
 /// Why nothing could be written.
 #[derive(Debug, thiserror::Error)]

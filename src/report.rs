@@ -5,6 +5,7 @@
 
 mod added;
 mod cautions_of_use;
+mod conflicts;
 mod lines;
 mod record;
 mod rulebooks;
@@ -12,12 +13,13 @@ mod run_record;
 
 pub use added::{AddedColumns, added_columns, added_entries, unscreened_entries};
 pub use cautions_of_use::CAUTIONS_OF_USE;
+pub use conflicts::{CONFLICT_COLUMNS, ConflictLine, RowName, conflict_entries};
 pub use lines::{REASONING_COLUMNS, ReasoningMode, reasoning_entries};
 pub use record::{RECORD_FORMAT, RECORD_MARK, RECORD_SHEET, record_entries, record_head};
 pub use rulebooks::rulebooks_table;
 pub use run_record::{RunFacts, SheetFacts, run_record_table};
 
-use crate::workbook::Look;
+use crate::workbook::{CellRef, Look};
 
 /// One cell that we add.
 #[derive(Debug, Clone, PartialEq)]
@@ -37,6 +39,8 @@ pub enum EntryContent {
     Text(String),
     /// A number.
     Number(f64),
+    /// A cell of the workbook, shown without its sheet, to click on.
+    Link(CellRef),
 }
 
 impl Entry {
@@ -45,6 +49,11 @@ impl Entry {
         let text = text.into();
         let content = if text.is_empty() { EntryContent::Empty } else { EntryContent::Text(text) };
         Self { content, look }
+    }
+
+    /// A cell to click on.
+    pub fn link(cell: CellRef) -> Self {
+        Self { content: EntryContent::Link(cell), look: Look::Link }
     }
 
     /// A number, or nothing.

@@ -3,10 +3,13 @@
 //! One thread reads rows, the rayon pool judges a batch at a time, and this thread writes them in the order they were
 //! read. Rows are judged alone, so the number of threads changes no byte of the output.
 
+mod conflicts;
 mod judged_row;
 mod output;
 mod plan;
+mod register;
 mod sheets;
+mod standing;
 mod summing_up;
 mod tables;
 
@@ -20,7 +23,7 @@ pub use judged_row::JudgedRow;
 pub use plan::{RecognisedSheet, recognise_columns};
 
 use crate::columns::{BUILT_IN_COLUMN_WORDS, ColumnOverride, ColumnWords};
-use crate::fault::{CellFault, FileFault, Refusal};
+use crate::fault::{CellFault, ConflictCounts, FaultTally, FileFault, Refusal};
 use crate::judge::{Judge, Verdict};
 use crate::quantity::Date;
 use crate::report::ReasoningMode;
@@ -92,8 +95,12 @@ pub struct Summary {
     pub not_carried: Vec<String>,
     /// Cells that could not be read, the first of them.
     pub faults: Vec<CellFault>,
-    /// How many cells could not be read.
-    pub fault_total: usize,
+    /// All of them, counted.
+    pub tally: FaultTally,
+    /// The sheet that lists them.
+    pub conflicts_sheet: String,
+    /// What that sheet counts.
+    pub conflicts: ConflictCounts,
 }
 
 /// Rows that travel together.

@@ -1,9 +1,15 @@
 //! Faults of single cells and columns. A row with faults is still screened with what remains.
+//!
+//! What is said of each kind stands in `wording`.
 
+mod wording;
+
+use std::borrow::Cow;
 use std::fmt;
 
 use crate::quantity::Unit;
 use crate::workbook::CellRef;
+pub use wording::Wording;
 
 /// A cell that could not be read as what its column promises.
 #[derive(Debug, Clone, PartialEq, Eq)]
@@ -163,173 +169,39 @@ pub enum CellFaultKind {
     },
 }
 
-impl fmt::Display for CellFault {
-    fn fmt(&self, formatter: &mut fmt::Formatter<'_>) -> fmt::Result {
-        write!(formatter, "{}: `{}` {}", self.cell, shortened(&self.found), self.kind)
+impl CellFault {
+    /// The text as found, on one line and short enough for a message.
+    pub fn shown(&self) -> Cow<'_, str> {
+        shown(&self.found)
     }
 }
 
-/// A cell may hold 32,767 characters; a message shows the first ones.
-fn shortened(found: &str) -> String {
-    const SHOWN: usize = 60;
-    if found.chars().count() <= SHOWN {
-        return found.to_owned();
+impl fmt::Display for CellFault {
+    fn fmt(&self, formatter: &mut fmt::Formatter<'_>) -> fmt::Result {
+        write!(formatter, "{}: `{}` {}", self.cell, self.shown(), self.kind)
     }
-    let mut start: String = found.chars().take(SHOWN).collect();
-    start.push('…');
-    start
 }
 
 impl fmt::Display for CellFaultKind {
-    #[expect(clippy::too_many_lines, reason = "one sentence for each kind and nothing else")]
     fn fmt(&self, formatter: &mut fmt::Formatter<'_>) -> fmt::Result {
-        match self {
-            Self::NotA { what, example } => {
-                write!(formatter, "is no {what}; write, for example, `{example}`")
-            }
-            Self::WordNoNumber { what, example } => write!(
-                formatter,
-                "is a word and no number for {what}; write a number, or a bound with `<` or `>`, for example `{example}`"
-            ),
-            Self::BadNumber { example } => write!(
-                formatter,
-                "cannot be read as one number; write it with one decimal separator, for example `{example}`"
-            ),
-            Self::SeveralValues { what } => write!(
-                formatter,
-                "holds more than one value of {what}; write one, a range such as `3–5`, or use a column for each"
-            ),
-            Self::UnknownUnit { word, nearest: Some(unit), .. } => {
-                write!(formatter, "has the unknown unit `{word}`; did you mean `{unit}`?")
-            }
-            Self::UnknownUnit { word, nearest: None, example } => write!(
-                formatter,
-                "has the unknown unit `{word}`; write, for example, `{example}`, and remarks in brackets"
-            ),
-            Self::WrongUnit { unit, what, example } => write!(
-                formatter,
-                "is in {}, which does not measure {what}; write, for example, `{example}`",
-                unit.symbol()
-            ),
-            Self::NeedsMolarMass => write!(
-                formatter,
-                "is in moles, but the row has no molar mass; add a molar mass in g/mol or write it in mg/L"
-            ),
-            Self::OutOfSense { what } => write!(
-                formatter,
-                "is far outside what {what} can be; check the number, its unit and its decimal separator"
-            ),
-            Self::BadRange { what } => write!(
-                formatter,
-                "is no sensible {what}: its ends are the wrong way round or the number is out of any range; \
-                 write the lower end first and check the unit"
-            ),
-            Self::Negative { what } => {
-                write!(
-                    formatter,
-                    "is negative, which {what} cannot be; check the sign or leave the cell empty"
-                )
-            }
-            Self::Zero { what, example } => write!(
-                formatter,
-                "is zero, which {what} cannot be; leave the cell empty if there is no value, or write the bound \
-                 that was measured, for example `{example}`"
-            ),
-            Self::BecameDate { what } => write!(
-                formatter,
-                "is a date; a spreadsheet may have made it of a number such as `4.5`. Format the column as text or \
-                 number and write the {what} again"
-            ),
-            Self::TooLong => write!(
-                formatter,
-                "is too long to be a value; write the value alone and keep the rest in a column of its own"
-            ),
-            Self::FormulaWithoutResult => write!(
-                formatter,
-                "is a formula without a stored result; open the workbook in a spreadsheet program, save it and use \
-                 that file"
-            ),
-            Self::SheetError => {
-                write!(
-                    formatter,
-                    "is an error of the spreadsheet; correct the formula or leave the cell empty"
-                )
-            }
-            Self::CheckDigit { what, expected, corrected } => write!(
-                formatter,
-                "is no {what}: its check digit should be {expected}; write `{corrected}` if the other digits are \
-                 right, or correct them"
-            ),
-            Self::NoSuchEcNumber => write!(
-                formatter,
-                "is no EC number: none starts with these six characters; write, for example, `200-024-3`"
-            ),
-            Self::DateIsNoCas => write!(
-                formatter,
-                "is a date and gives no CAS number when read back; format the column as text and write the number \
-                 again, for example `50-29-3`"
-            ),
-            Self::SeveralIdentities { what } => {
-                write!(formatter, "holds several {what}, so the row is not identified; write one a row")
-            }
-            Self::NumberOfOtherKind { what, found } => write!(
-                formatter,
-                "is no {what} but {} {found}, which belongs in a column of its own; put it in one with the header \
-                 `{found}`",
-                if *found == "EC number" { "an" } else { "a" }
-            ),
-            Self::OtherIdentity { what, number, other } => write!(
-                formatter,
-                "is another {what} than `{number}` in {other}, so the row is not identified; correct one of them, or \
-                 give each substance a row of its own"
-            ),
-            Self::SecondHeader => write!(
-                formatter,
-                "begins the header of another table, whose columns may hold other things; the rows from here on are \
-                 not screened: put that table on a sheet of its own"
-            ),
-            Self::MixtureRow => write!(
-                formatter,
-                "says that the row is a mixture; mixtures are screened by their components: give each a row of its own"
-            ),
-            Self::ArticleRow => write!(
-                formatter,
-                "says that the row is an article; articles are screened by their substances: give each a row of its own"
-            ),
-            Self::InherentlySettlesNothing => write!(
-                formatter,
-                "speaks of inherent biodegradability, which does not settle ready biodegradability; write `ready`, \
-                 `not ready` or the result, for example `82 %, 28 d, OECD 301B`"
-            ),
-            Self::FractionOrPercent => write!(
-                formatter,
-                "may be a fraction or a percentage; write it with its sign, for example `82 %`"
-            ),
-            Self::WordsAgainstNumber => write!(
-                formatter,
-                "says one thing in words and another in its number; it counts as open: correct one of them"
-            ),
-            Self::NoStatement => write!(
-                formatter,
-                "names no hazard statement; write the codes, for example `H350; H361d`, or `none`"
-            ),
-            Self::ClassWithoutCategory { class } => write!(
-                formatter,
-                "names the hazard class `{class}` without its category; write, for example, `Carc. 1B` or `H350`"
-            ),
-            Self::StatementUnread { part } => write!(
-                formatter,
-                "holds `{part}`, which may be a hazard statement and was not read; write each code in full, for example \
-                 `H302; H350`"
-            ),
-            Self::BeyondHeader { fields, header } => write!(
-                formatter,
-                "is field {fields} of its row, but the header has {header}, so that a separator within a text or number \
-                 may have moved the values into wrong columns; the row is not screened: put that text into quotation \
-                 marks, or give the column a header"
-            ),
-        }
+        let Wording { wrong, remedy, .. } = self.wording();
+        write!(formatter, "{wrong}; {remedy}")
     }
+}
+
+/// A cell may hold 32,767 characters and line breaks; a message shows the first ones on one line.
+pub(super) fn shown(found: &str) -> Cow<'_, str> {
+    const SHOWN: usize = 60;
+    let end = found.char_indices().nth(SHOWN).map(|(end, _)| end);
+    let start = end.and_then(|end| found.get(..end)).unwrap_or(found);
+    if end.is_none() && !start.contains(char::is_control) {
+        return Cow::Borrowed(found);
+    }
+    let mut start = start.replace(char::is_control, " ");
+    if end.is_some() {
+        start.push('…');
+    }
+    Cow::Owned(start)
 }
 
 #[cfg(test)]
@@ -366,7 +238,17 @@ mod tests {
 
     #[test]
     fn a_long_text_is_shortened_in_the_message() {
-        let text = message(&"x".repeat(30_000), CellFaultKind::TooLong);
-        assert!(text.len() < 250, "{text}");
+        let long = "x".repeat(61);
+        let text = message(&long[1..], CellFaultKind::TooLong);
+        assert!(text.starts_with(&format!("Substances!C7: `{}` is", &long[1..])), "{text}");
+        let text = message(&long, CellFaultKind::TooLong);
+        assert!(text.starts_with(&format!("Substances!C7: `{}…` is", &long[1..])), "{text}");
+        assert!(message(&"ä".repeat(30_000), CellFaultKind::TooLong).chars().count() < 250);
+    }
+
+    #[test]
+    fn a_message_stays_on_one_line_whatever_the_cell_holds() {
+        let text = message("4.5\n\u{1b}[31mred\t", CellFaultKind::TooLong);
+        assert!(text.starts_with("Substances!C7: `4.5  [31mred ` is too long"), "{text}");
     }
 }

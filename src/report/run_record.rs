@@ -1,6 +1,7 @@
 //! The Run record: what was read, with what, and what was left out.
 
 use crate::columns::Recognised;
+use crate::fault::ConflictCounts;
 use crate::quantity::{Date, format_number};
 use crate::report::{CAUTIONS_OF_USE, Entry, Table};
 use crate::rules::RuleSet;
@@ -27,10 +28,12 @@ pub struct RunFacts {
     pub not_carried: Vec<String>,
     /// Which lines the Reasoning sheet holds, in words.
     pub reasoning: String,
-    /// The cells that could not be read, as told, the first of them.
-    pub faults: Vec<String>,
-    /// How many cells could not be read.
-    pub fault_total: usize,
+    /// How many cells could not be read or used, by kind.
+    pub fault_kinds: Vec<(&'static str, usize)>,
+    /// What the Conflicts sheet counts.
+    pub conflicts: ConflictCounts,
+    /// The name of that sheet in the output.
+    pub conflicts_sheet: String,
 }
 
 /// One sheet of the inventory.
@@ -153,11 +156,21 @@ fn sheet_rows(sheet: &SheetFacts) -> Vec<Vec<Entry>> {
 }
 
 fn fault_rows(facts: &RunFacts) -> Vec<Vec<Entry>> {
-    let mut rows = vec![title(&format!("Cells that could not be read: {}", facts.fault_total))];
-    rows.extend(facts.faults.iter().map(|fault| pair("", fault.clone())));
-    if facts.fault_total > facts.faults.len() {
-        let rest = facts.fault_total - facts.faults.len();
-        rows.push(pair("", format!("and {rest} more; each stands in the Cautions cell of its row")));
+    let ConflictCounts { cells, .. } = facts.conflicts;
+    let mut rows = vec![title(&format!("Cells that could not be read or used: {cells}"))];
+    rows.extend(facts.fault_kinds.iter().map(|(kind, number)| pair(kind, number.to_string())));
+    if cells > 0 {
+        let where_listed = format!(
+            "The sheet {} says cell by cell what to do; each also stands in the Cautions cell of its row.",
+            facts.conflicts_sheet
+        );
+        rows.push(pair("", where_listed));
+    }
+    let repeated = facts.conflicts.repeated();
+    if !repeated.is_empty() {
+        rows.push(title("Rows that share a number or a name"));
+        rows.extend(repeated.into_iter().map(|phrase| pair("", format!("{phrase}."))));
+        rows.push(pair("", format!("The sheet {} says where they differ.", facts.conflicts_sheet)));
     }
     rows
 }

@@ -8,6 +8,7 @@ use crate::reasoning::{Told, headline_verdict};
 use crate::report::{Entry, ReasoningMode, added_entries, reasoning_entries, record_entries};
 use crate::rules::RuleSet;
 use crate::run::plan::{Screened, SheetPlan};
+use crate::run::standing::Standing;
 use crate::run::tables::RowPlace;
 use crate::workbook::{Cell, CellContent, CellRef, Row};
 
@@ -31,8 +32,8 @@ pub(crate) enum Outcome {
     SecondHeader(CellFault),
     /// It stands below the header of another table, in the row named here, counted from 0.
     BelowSecondHeader(u32),
-    /// It has more fields than the header, so that its values may stand in wrong columns.
-    Displaced(CellFault),
+    /// It holds no substance, or has more fields than the header, so that its values may stand in wrong columns.
+    LeftAside(CellFault),
 }
 
 /// What is added for a screened row.
@@ -50,6 +51,8 @@ pub(crate) struct Added {
     pub(crate) reached: Vec<bool>,
     /// Cells that could not be read.
     pub(crate) faults: Vec<CellFault>,
+    /// What it is held against other rows by, at the end.
+    pub(crate) standing: Standing,
 }
 
 /// Takes one row its whole way.
@@ -64,7 +67,7 @@ pub(crate) fn judge_row(
     };
     let outcome = match place {
         RowPlace::InTable if holds_data(&row, screened) => match beyond_header(&row, sheet, screened) {
-            Some(fault) => Outcome::Displaced(fault),
+            Some(fault) => Outcome::LeftAside(fault),
             None => Outcome::Screened(Box::new(screen_row(&row, screened, reasoning, judge))),
         },
         RowPlace::SecondHeader => {
@@ -113,6 +116,7 @@ fn screen_row(row: &Row, screened: &Screened, reasoning: ReasoningMode, judge: &
         headlines: told.books().map(headline_verdict).collect(),
         reached: reached(rules, &judgement),
         faults: Vec::new(),
+        standing: Standing::of(told),
     };
     Added { faults: substance.faults, ..added }
 }

@@ -2,13 +2,14 @@
 
 use std::collections::BTreeMap;
 
-use crate::fault::{CellFault, Refusal};
+use crate::fault::{ConflictCounts, Refusal};
 use crate::judge::Verdict;
 use crate::report::{
     Entry, RECORD_SHEET, ReasoningMode, RunFacts, SheetFacts, record_head, rulebooks_table, run_record_table,
     unscreened_entries,
 };
 use crate::rules::RuleSet;
+use crate::run::conflicts::{Conflicts, Written};
 use crate::run::judged_row::{Added, JudgedRow, Outcome};
 use crate::run::plan::{Plan, SheetPlan};
 use crate::run::sheets::{
@@ -18,8 +19,6 @@ use crate::run::summing_up::{column_remarks, how_read, options, unreached, unrec
 use crate::run::{ScreenSettings, Summary};
 use crate::workbook::{AnnotatedWorkbook, Inventory, Look, SheetId, Value, Visibility, fingerprint_of_text};
 
-/// Faults that are kept with their wording; the others are counted.
-const FAULTS_KEPT: usize = 1_000;
 /// Rows of a sheet, less the header.
 const LINES_A_SHEET: u32 = 1_048_575;
 
@@ -32,12 +31,11 @@ pub(crate) struct Output {
     screened: Vec<usize>,
     /// For each sheet, the row of another table's header and how many rows were left aside below it.
     unscreened: Vec<Option<(u32, usize)>>,
-    /// Rows with more fields than the header, which were left aside.
-    displaced: usize,
+    /// Rows that hold no substance, or whose values may stand in wrong columns.
+    left_aside: usize,
     headlines: Vec<(BTreeMap<Verdict, usize>, usize)>,
     reached: Vec<bool>,
-    faults: Vec<CellFault>,
-    fault_total: usize,
+    conflicts: Conflicts,
 }
 
 impl Output {
@@ -81,11 +79,10 @@ impl Output {
             record,
             screened: vec![0; plan.sheets.len()],
             unscreened: vec![None; plan.sheets.len()],
-            displaced: 0,
+            left_aside: 0,
             headlines: vec![(BTreeMap::new(), 0); rules.rulebooks.len()],
             reached: Vec::new(),
-            faults: Vec::new(),
-            fault_total: 0,
+            conflicts: Conflicts::new(plan.sheets.iter().map(|sheet| sheet.name.clone()).collect()),
         };
         let spans: Vec<_> = plan.sheets.iter().filter_map(span).collect();
         for row in record_head(rules, &spans) {
@@ -116,7 +113,7 @@ impl Output {
                     *count += 1;
                 }
                 self.write_added(id, index, screened.first_added, &row.entries)?;
-                self.count(*row)?;
+                self.count(sheet.index, index, *row)?;
             }
             Outcome::SecondHeader(fault) => {
                 if let Some(unscreened) = self.unscreened.get_mut(sheet.index) {
@@ -124,13 +121,13 @@ impl Output {
                 }
                 let why = unscreened_entries(added, &fault.to_string());
                 self.write_added(id, index, screened.first_added, &why)?;
-                self.keep_faults(vec![fault]);
+                self.conflicts.take_faults(sheet.index, vec![fault], None);
             }
-            Outcome::Displaced(fault) => {
-                self.displaced += 1;
+            Outcome::LeftAside(fault) => {
+                self.left_aside += 1;
                 let why = unscreened_entries(added, &fault.to_string());
                 self.write_added(id, index, screened.first_added, &why)?;
-                self.keep_faults(vec![fault]);
+                self.conflicts.take_faults(sheet.index, vec![fault], None);
             }
             Outcome::BelowSecondHeader(header) => {
                 if let Some(Some((_, left))) = self.unscreened.get_mut(sheet.index) {
@@ -150,13 +147,7 @@ impl Output {
         Ok(())
     }
 
-    fn keep_faults(&mut self, faults: Vec<CellFault>) {
-        self.fault_total += faults.len();
-        let room = FAULTS_KEPT.saturating_sub(self.faults.len());
-        self.faults.extend(faults.into_iter().take(room));
-    }
-
-    fn count(&mut self, added: Added) -> Result<(), Refusal> {
+    fn count(&mut self, sheet: usize, row: u32, added: Added) -> Result<(), Refusal> {
         for line in &added.lines {
             self.write_reasoning(line)?;
         }
@@ -173,7 +164,8 @@ impl Output {
         for (so_far, reached) in self.reached.iter_mut().zip(added.reached) {
             *so_far |= reached;
         }
-        self.keep_faults(added.faults);
+        self.conflicts.take_faults(sheet, added.faults, Some(&added.standing.name));
+        self.conflicts.take_row(sheet, row, added.standing);
         Ok(())
     }
 
@@ -205,8 +197,10 @@ impl Output {
         plan: &Plan,
         rules: &RuleSet,
     ) -> Result<Summary, Refusal> {
+        let written = Written { plans: &plan.sheets, ids: &self.sheets, unscreened: &self.unscreened, rules };
+        let (conflicts_sheet, conflicts) = self.conflicts.write(&mut self.workbook, written)?;
         write_table(&mut self.workbook, &rulebooks_table(rules))?;
-        let facts = self.facts(settings, inventory, plan, rules);
+        let facts = self.facts(settings, inventory, plan, rules, (&conflicts_sheet, &conflicts));
         write_table(&mut self.workbook, &run_record_table(&facts, rules))?;
         self.workbook.finish()?;
         let copied = plan.sheets.iter().filter(|sheet| sheet.screened.is_none()).count();
@@ -231,8 +225,10 @@ impl Output {
             unrecognised: unrecognised(plan),
             how_read: facts.how_read,
             not_carried: facts.not_carried,
-            faults: self.faults,
-            fault_total: self.fault_total,
+            tally: self.conflicts.tally().clone(),
+            faults: self.conflicts.into_faults(),
+            conflicts_sheet,
+            conflicts,
         })
     }
 
@@ -242,6 +238,7 @@ impl Output {
         inventory: &Inventory,
         plan: &Plan,
         rules: &RuleSet,
+        (conflicts_sheet, conflicts): (&str, &ConflictCounts),
     ) -> RunFacts {
         let file_name = settings.inventory.file_name().map(|name| name.to_string_lossy().into_owned());
         RunFacts {
@@ -266,7 +263,7 @@ impl Output {
                     copied_because: sheet.copied_because.clone(),
                 })
                 .collect(),
-            how_read: how_read(inventory, self.displaced),
+            how_read: how_read(inventory, self.left_aside),
             not_carried: inventory.not_carried().to_vec(),
             reasoning: match plan.reasoning {
                 ReasoningMode::All => "a line for every row, rulebook and criterion".to_owned(),
@@ -275,8 +272,9 @@ impl Output {
                 }
                 ReasoningMode::None => "not written (`--reasoning none`)".to_owned(),
             },
-            faults: self.faults.iter().map(ToString::to_string).collect(),
-            fault_total: self.fault_total,
+            fault_kinds: self.conflicts.tally().kinds(),
+            conflicts: conflicts.clone(),
+            conflicts_sheet: conflicts_sheet.to_owned(),
         }
     }
 }

@@ -3,7 +3,7 @@
 use crate::fault::{FileFault, Refusal};
 use crate::report::{Entry, EntryContent, REASONING_COLUMNS, Table};
 use crate::run::plan::SheetPlan;
-use crate::workbook::{AnnotatedWorkbook, Look, SheetId, Value, Visibility};
+use crate::workbook::{AnnotatedWorkbook, Look, SheetId, Target, Value, Visibility};
 
 /// A sheet of ours that grows row by row, and goes on in another at the format's row limit.
 pub(crate) struct SheetWriter {
@@ -89,10 +89,15 @@ pub(crate) fn write_entry(
     column: u16,
     entry: &Entry,
 ) -> Result<(), FileFault> {
+    let address;
     let value = match &entry.content {
         EntryContent::Empty => Value::Empty,
         EntryContent::Text(text) => Value::Text(text),
         EntryContent::Number(number) => Value::Number(*number),
+        EntryContent::Link(cell) => {
+            address = cell.address();
+            Value::Link { text: &address, target: Target::Cell(cell) }
+        }
     };
     workbook.write(sheet, row, column, &value, entry.look)
 }

@@ -27,13 +27,13 @@ pub(crate) fn options(settings: &ScreenSettings) -> Vec<(&'static str, String)> 
     options
 }
 
-/// How a file without cells of its own was read, and what did not fit.
-pub(crate) fn how_read(inventory: &Inventory, displaced: usize) -> Vec<String> {
+/// How a file without cells of its own was read, and which rows were left aside.
+pub(crate) fn how_read(inventory: &Inventory, left_aside: usize) -> Vec<String> {
     let mut sentences = inventory.how_read().to_vec();
-    if displaced > 0 {
+    if left_aside > 0 {
         sentences.push(format!(
-            "{} not screened, with more fields than the header; each is among the cells that could not be read.",
-            count(displaced, "row was", "rows were")
+            "{} not screened, because of a cell that is told among the faults.",
+            count(left_aside, "row was", "rows were")
         ));
     }
     sentences

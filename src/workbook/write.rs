@@ -2,6 +2,7 @@
 
 mod cells;
 mod height;
+mod layout;
 mod names;
 mod output;
 #[cfg(test)]
@@ -19,7 +20,7 @@ use super::appearance::Appearance;
 use super::caught::without_panic;
 use super::look::Looks;
 use super::place::LAST_ROW;
-use super::survey::{ColumnLayout, Visibility};
+use super::survey::Visibility;
 pub use cells::{Target, Value};
 use height::USUAL_WIDTH;
 pub use names::free_sheet_name;
@@ -136,52 +137,6 @@ impl AnnotatedWorkbook {
         self.sheets.get(sheet.0).map_or("", |sheet| sheet.name.as_str())
     }
 
-    /// Sets the width of columns, or hides them.
-    pub fn set_columns(&mut self, sheet: SheetId, layout: ColumnLayout) -> Result<(), FileFault> {
-        if let (Some(width), Some(state)) = (layout.width, self.sheets.get_mut(sheet.0)) {
-            state.widths.extend((layout.first..=layout.last).map(|column| (column, width)));
-        }
-        self.on_sheet(sheet, |sheet| {
-            if let Some(width) = layout.width {
-                sheet.set_column_range_width_pixels(layout.first, layout.last, pixels(width))?;
-            }
-            if layout.hidden {
-                sheet.set_column_range_hidden(layout.first, layout.last)?;
-            }
-            Ok(())
-        })
-    }
-
-    /// Sets the width of columns, in characters of the usual font, padding included.
-    pub fn set_column_width(
-        &mut self,
-        sheet: SheetId,
-        first: u16,
-        last: u16,
-        width: f64,
-    ) -> Result<(), FileFault> {
-        self.set_columns(sheet, ColumnLayout { first, last, width: Some(width), hidden: false })
-    }
-
-    /// Folds columns away under an outline, which the user opens with a click.
-    pub fn group_columns(&mut self, sheet: SheetId, first: u16, last: u16) -> Result<(), FileFault> {
-        self.on_sheet(sheet, |sheet| {
-            // The library notes the depth of the outline for columns it knows already only; hiding makes them known,
-            // and a folded column is hidden anyway.
-            sheet.set_column_range_hidden(first, last)?;
-            sheet.group_columns_collapsed(first, last)?;
-            Ok(())
-        })
-    }
-
-    /// Keeps the first rows and columns in place when the user scrolls.
-    pub fn freeze(&mut self, sheet: SheetId, rows: u32, columns: u16) -> Result<(), FileFault> {
-        self.on_sheet(sheet, |sheet| {
-            sheet.set_freeze_panes(rows, columns)?;
-            Ok(())
-        })
-    }
-
     /// Completes the workbook and puts it at the target.
     ///
     /// # Errors
@@ -280,17 +235,6 @@ fn properties(date: Date) -> Result<DocProperties, XlsxError> {
         u8::try_from(day).unwrap_or(0),
     )?;
     Ok(DocProperties::new().set_creation_datetime(&created))
-}
-
-/// A width in characters of 7 pixels, the widest digit of the usual font.
-fn pixels(width: f64) -> u32 {
-    #[expect(
-        clippy::cast_possible_truncation,
-        clippy::cast_sign_loss,
-        reason = "bounded just before to the widths a column can have"
-    )]
-    let pixels = (width.clamp(0.0, 255.0) * 7.0).round() as u32;
-    pixels
 }
 
 fn reason_of(error: &XlsxError) -> String {

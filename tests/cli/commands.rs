@@ -125,7 +125,8 @@ fn quiet_prints_faults_only() {
     assert_eq!(
         run.complained,
         "Substances!E3: `soon` is no half-life in soil; write, for example, `40 d`\n\
-         1 cell could not be read; the rows were screened with what remains.\n"
+         1 cell could not be read or used: 1 not a value of its column. The rows were screened with what remains; the \
+         sheet `Conflicts` says cell by cell what to do.\n"
     );
 }
 

@@ -121,9 +121,10 @@ fn rows_below_the_header_of_another_table_are_not_screened_at_any_depth() {
             run.complained,
             format!(
                 "Substances!A{header}: `Name` begins the header of another table, whose columns may hold other \
-                 things; the rows from here on are not screened: put that table on a sheet of its own\n1 cell could \
-                 not be read; the rows were screened with what remains.\nSubstances: 2 rows were not screened, below \
-                 the header of another table in row {header}.\n"
+                 things, so the rows from here on are not screened; put that table on a sheet of its own\n1 cell could \
+                 not be read or used: 1 header of another table. The rows were screened with what remains; the sheet \
+                 `Conflicts` says cell by cell what to do.\nSubstances: 2 rows were not screened, below the header of \
+                 another table in row {header}.\n"
             )
         );
         let written = place.screened("Substances");
@@ -238,6 +239,7 @@ fn names_of_the_user_stay_and_ours_give_way() {
             "Rulebooks",
             "Reasoning (screened)",
             "Record (screened)",
+            "Conflicts",
             "Rulebooks (screened)",
             "Run record (screened)",
         ]

@@ -16,8 +16,10 @@ mod sheets;
 
 mod cells;
 mod commands;
+mod conflicts;
 mod inputs;
 mod kinds;
 mod layouts;
 mod outputs;
 mod place;
+mod wording;

@@ -15,7 +15,7 @@ fn an_output_that_exists_is_untouched_without_force_and_replaced_with_it() {
     assert_eq!(place.screen(&["--force"]).status, 0);
     assert_eq!(
         place.names_of_sheets("inventory-screened.xlsx"),
-        ["Substances", "Reasoning", "Record", "Rulebooks", "Run record"]
+        ["Substances", "Reasoning", "Record", "Conflicts", "Rulebooks", "Run record"]
     );
     assert_eq!(place.files(), ["inventory-screened.xlsx", "inventory.xlsx"]);
 }

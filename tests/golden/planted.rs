@@ -76,7 +76,7 @@ fn the_sheets_are_those_of_the_documentation() {
     let names: Vec<&str> = EXAMPLE.sheets.keys().map(String::as_str).collect();
     assert_eq!(
         names,
-        ["Read me", "Reasoning", "Record", "Rohstoffe", "Rulebooks", "Run record", "Substances"]
+        ["Conflicts", "Read me", "Reasoning", "Record", "Rohstoffe", "Rulebooks", "Run record", "Substances"]
     );
 }
 

@@ -8,7 +8,7 @@ use kowledger::rules::RulebookSummary;
 use kowledger::run::{RecognisedSheet, Summary};
 use kowledger::workbook::column_letters;
 
-/// Faults that are shown one by one; the total follows.
+/// Different faults that are shown, a sentence each; the total by kind follows.
 const FAULTS_SHOWN: usize = 20;
 
 /// How much a run says.
@@ -56,6 +56,11 @@ impl Console {
         if !summary.unreached.is_empty() {
             lines.push(format!("No row had a value for: {}.", summary.unreached.join("; ")));
         }
+        let repeated = summary.conflicts.repeated();
+        if !repeated.is_empty() {
+            let sheet = &summary.conflicts_sheet;
+            lines.push(format!("{}; the sheet `{sheet}` says where they differ.", repeated.join("; ")));
+        }
         lines.extend(summary.not_carried.iter().cloned());
         lines.push(format!("Written: {}", summary.output.display()));
         lines.push(
@@ -67,19 +72,7 @@ impl Console {
 }
 
 fn show_faults(summary: &Summary) {
-    let mut lines: Vec<String> = summary.faults.iter().take(FAULTS_SHOWN).map(ToString::to_string).collect();
-    if summary.fault_total > FAULTS_SHOWN {
-        lines.push(format!(
-            "... and {} more; each stands in the Cautions cell of its row.",
-            summary.fault_total - FAULTS_SHOWN
-        ));
-    }
-    if summary.fault_total > 0 {
-        lines.push(format!(
-            "{} could not be read; the rows were screened with what remains.",
-            count(summary.fault_total, "cell", "cells")
-        ));
-    }
+    let mut lines = summary.tally.lines(FAULTS_SHOWN, &summary.conflicts_sheet);
     lines.extend(summary.unscreened.iter().map(|(sheet, header, left)| {
         format!(
             "{sheet}: {} not screened, below the header of another table in row {header}.",

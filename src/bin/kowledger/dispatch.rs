@@ -19,7 +19,7 @@ pub(crate) fn dispatch(command: Command) -> Result<Outcome, Refusal> {
             let console = console::Console::new(arguments.quiet);
             let summary = run::screen(&arguments.into_settings()?)?;
             console.summary(&summary);
-            Ok(if summary.fault_total == 0 { Outcome::Done } else { Outcome::DoneWithFaults })
+            Ok(if summary.tally.total() == 0 { Outcome::Done } else { Outcome::DoneWithFaults })
         }
         Command::Columns(arguments) => {
             console::columns(&run::recognise_columns(&arguments.inventory, &arguments.overrides()?)?);

@@ -215,7 +215,10 @@ fn write_cell(
 
 fn url(target: Target<'_>) -> Url {
     match target {
-        Target::Cell(cell) => Url::new(format!("internal:{cell}")),
+        // Quoted always: a sheet called 2026 or A1 would be taken for something else.
+        Target::Cell(cell) => {
+            Url::new(format!("internal:'{}'!{}", cell.sheet.replace('\'', "''"), cell.address()))
+        }
         Target::Web(page) => Url::new(page),
     }
 }

@@ -1,0 +1,204 @@
+//! What is said of each kind of fault: its title, what is wrong, and what to do about it.
+//!
+//! One arm a kind. The title counts kinds and filters the Conflicts sheet; what is wrong follows the text as found
+//! (`12 wekks` has ...); what to do is an order to the user.
+
+use super::CellFaultKind;
+
+/// What is said of a fault.
+#[derive(Debug, Clone, PartialEq, Eq)]
+pub struct Wording {
+    /// The kind, in a few words.
+    pub title: &'static str,
+    /// What is wrong, to follow the text as found.
+    pub wrong: String,
+    /// What to write or do instead.
+    pub remedy: String,
+}
+
+fn say(title: &'static str, wrong: impl Into<String>, remedy: impl Into<String>) -> Wording {
+    Wording { title, wrong: wrong.into(), remedy: remedy.into() }
+}
+
+impl CellFaultKind {
+    /// What is said of this kind.
+    #[expect(clippy::too_many_lines, reason = "one arm for each kind and nothing else")]
+    pub fn wording(&self) -> Wording {
+        match self {
+            Self::NotA { what, example } => say(
+                "not a value of its column",
+                format!("is no {what}"),
+                format!("write, for example, `{example}`"),
+            ),
+            Self::WordNoNumber { what, example } => say(
+                "word instead of a number",
+                format!("is a word and no number for {what}"),
+                format!("write a number, or a bound with `<` or `>`, for example `{example}`"),
+            ),
+            Self::BadNumber { example } => say(
+                "malformed number",
+                "cannot be read as one number",
+                format!("write it with one decimal separator, for example `{example}`"),
+            ),
+            Self::SeveralValues { what } => say(
+                "more than one value",
+                format!("holds more than one value of {what}"),
+                "write one, a range such as `3–5`, or use a column for each",
+            ),
+            Self::UnknownUnit { word, nearest: Some(unit), .. } => say(
+                "unknown unit",
+                format!("has the unknown unit `{word}`"),
+                format!("did you mean `{unit}`?"),
+            ),
+            Self::UnknownUnit { word, nearest: None, example } => say(
+                "unknown unit",
+                format!("has the unknown unit `{word}`"),
+                format!("write, for example, `{example}`, and put remarks in brackets"),
+            ),
+            Self::WrongUnit { unit, what, example } => say(
+                "unit that does not fit",
+                format!("is in {}, which does not measure {what}", unit.symbol()),
+                format!("write, for example, `{example}`"),
+            ),
+            Self::NeedsMolarMass => say(
+                "molar mass missing",
+                "is in moles, but the row has no molar mass",
+                "add a molar mass in g/mol, or write the value in mg/L",
+            ),
+            Self::OutOfSense { what } => say(
+                "far out of range",
+                format!("is far outside what {what} can be"),
+                "check the number, its unit and its decimal separator",
+            ),
+            Self::BadRange { what } => say(
+                "no sensible range",
+                format!(
+                    "is no sensible {what}: its ends are the wrong way round or the number is out of any range"
+                ),
+                "write the lower end first and check the unit",
+            ),
+            Self::Negative { what } => say(
+                "negative number",
+                format!("is negative, which {what} cannot be"),
+                "check the sign or leave the cell empty",
+            ),
+            Self::Zero { what, example } => say(
+                "zero",
+                format!("is zero, which {what} cannot be"),
+                format!(
+                    "leave the cell empty if there is no value, or write the bound that was measured, for example \
+                     `{example}`"
+                ),
+            ),
+            Self::BecameDate { what } => say(
+                "date instead of a number",
+                "is a date, which a spreadsheet may have made of a number such as `4.5`",
+                format!("format the column as text or number and write the {what} again"),
+            ),
+            Self::TooLong => say(
+                "text too long",
+                "is too long to be a value",
+                "write the value alone and keep the rest in a column of its own",
+            ),
+            Self::FormulaWithoutResult => say(
+                "formula without a result",
+                "is a formula without a stored result",
+                "open the workbook in a spreadsheet program, save it and use that file",
+            ),
+            Self::SheetError => say(
+                "error of the spreadsheet",
+                "is an error of the spreadsheet",
+                "correct the formula or leave the cell empty",
+            ),
+            Self::CheckDigit { what, expected, corrected } => say(
+                "check digit",
+                format!("is no {what}: its check digit should be {expected}"),
+                format!(
+                    "look the number up, and write `{corrected}` if the other digits are right, or correct them"
+                ),
+            ),
+            Self::NoSuchEcNumber => say(
+                "no such EC number",
+                "is no EC number: none starts with these six characters",
+                "look the number up and write it again, for example `200-024-3`",
+            ),
+            Self::DateIsNoCas => say(
+                "date instead of a CAS number",
+                "is a date and gives no CAS number when read back",
+                "format the column as text and write the number again, for example `50-29-3`",
+            ),
+            Self::SeveralIdentities { what } => say(
+                "more than one substance",
+                format!("holds several {what}, so the row is not identified"),
+                "give each substance a row of its own",
+            ),
+            Self::NumberOfOtherKind { what, found } => say(
+                "number in another column",
+                format!(
+                    "is no {what} but {} {found}, which belongs in a column of its own",
+                    if *found == "EC number" { "an" } else { "a" }
+                ),
+                format!("put it in one with the header `{found}`"),
+            ),
+            Self::OtherIdentity { what, number, other } => say(
+                "numbers that contradict each other",
+                format!("is another {what} than `{number}` in {other}, so the row is not identified"),
+                "correct one of them, or give each substance a row of its own",
+            ),
+            Self::SecondHeader => say(
+                "header of another table",
+                "begins the header of another table, whose columns may hold other things, so the rows from here on \
+                 are not screened",
+                "put that table on a sheet of its own",
+            ),
+            Self::MixtureRow => say(
+                "mixture",
+                "says that the row is a mixture, and mixtures are screened by their components",
+                "give each component a row of its own",
+            ),
+            Self::ArticleRow => say(
+                "article",
+                "says that the row is an article, and articles are screened by their substances",
+                "give each substance a row of its own",
+            ),
+            Self::InherentlySettlesNothing => say(
+                "inherent biodegradability",
+                "speaks of inherent biodegradability, which does not settle ready biodegradability",
+                "write `ready`, `not ready` or the result, for example `82 %, 28 d, OECD 301B`",
+            ),
+            Self::FractionOrPercent => say(
+                "fraction or percentage",
+                "may be a fraction or a percentage",
+                "write it with its sign, for example `82 %`",
+            ),
+            Self::WordsAgainstNumber => say(
+                "words against number",
+                "says one thing in words and another in its number, and counts as open",
+                "correct one of them",
+            ),
+            Self::NoStatement => say(
+                "no hazard statement",
+                "names no hazard statement",
+                "write the codes, for example `H350; H361d`, or `none`",
+            ),
+            Self::ClassWithoutCategory { class } => say(
+                "hazard class without category",
+                format!("names the hazard class `{class}` without its category"),
+                "write, for example, `Carc. 1B` or `H350`",
+            ),
+            Self::StatementUnread { part } => say(
+                "hazard statement not read",
+                format!("holds `{part}`, which may be a hazard statement and was not read"),
+                "write each code in full, for example `H302; H350`",
+            ),
+            Self::BeyondHeader { fields, header } => say(
+                "row with too many fields",
+                format!(
+                    "is field {fields} of its row, but the header has {header}, so that a separator within a text or \
+                     number may have moved the values into wrong columns, and the row is not screened"
+                ),
+                "put that text into quotation marks, or give the column a header",
+            ),
+        }
+    }
+}

@@ -1,0 +1,283 @@
+//! What else stands apart in an inventory: rows left aside, doubtful columns, one substance on several rows.
+//!
+//! None of these is a cell that could not be read, so they do not change the exit status.
+
+use super::cell::Wording;
+use super::count;
+use crate::workbook::CellRef;
+
+/// Something of a row or sheet that a reader has to look at.
+#[derive(Debug, Clone, PartialEq, Eq)]
+pub enum Conflict {
+    /// Rows below the header of another table.
+    RowsLeftAside {
+        /// How many.
+        rows: usize,
+        /// The row of that header, as the user counts it.
+        header: u32,
+    },
+    /// A remark on the columns of a sheet, as the columns' room words it.
+    Columns {
+        /// The remark.
+        remark: String,
+    },
+    /// A row that shares its number or name with other rows.
+    Shared(Shared),
+}
+
+/// What rows share, and in what they differ.
+#[derive(Debug, Clone, PartialEq, Eq)]
+pub struct Shared {
+    /// What they share.
+    pub by: SharedBy,
+    /// The number or name.
+    pub named: String,
+    /// The first of the other rows' cells with it.
+    pub others: Vec<CellRef>,
+    /// How many other rows there are.
+    pub other_rows: usize,
+    /// How far the rows agree.
+    pub agreement: Agreement,
+    /// Other numbers and headlines that differ.
+    pub contrasts: Vec<Contrast>,
+    /// Titles of data that differ between rows that have them.
+    pub differing: Vec<&'static str>,
+    /// Titles of data that some of the rows lack.
+    pub lacking: Vec<&'static str>,
+}
+
+/// Something that one row says otherwise than others.
+#[derive(Debug, Clone, PartialEq, Eq)]
+pub struct Contrast {
+    /// The other number or the rulebook.
+    pub what: String,
+    /// What this row says; none where it says nothing.
+    pub here: Option<String>,
+    /// The first of the different things that the others say.
+    pub there: Vec<String>,
+}
+
+/// What rows share.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord)]
+pub enum SharedBy {
+    /// The CAS number.
+    Cas,
+    /// The EC number.
+    Ec,
+    /// The name, without one number that all of them share.
+    Name,
+}
+
+/// How far rows with the same number or name agree, the most serious first.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord)]
+pub enum Agreement {
+    /// Their other numbers contradict each other.
+    OtherNumbers,
+    /// Their headlines differ.
+    Verdicts,
+    /// Their data differ, their headlines do not.
+    Data,
+    /// Nothing that was read differs.
+    Same,
+}
+
+impl Conflict {
+    /// What is said of it.
+    pub fn wording(&self) -> Wording {
+        match self {
+            Self::RowsLeftAside { rows, header } => Wording {
+                title: "rows not screened",
+                wrong: format!(
+                    "{} not screened, below the header of another table in row {header}",
+                    count(*rows, "row was", "rows were")
+                ),
+                remedy: "put that table on a sheet of its own and screen again".to_owned(),
+            },
+            Self::Columns { remark } => Wording {
+                title: "doubtful column",
+                wrong: remark.clone(),
+                remedy: "check that the right column was read; the Run record says what each was taken for"
+                    .to_owned(),
+            },
+            Self::Shared(shared) => shared.wording(),
+        }
+    }
+}
+
+impl Shared {
+    fn wording(&self) -> Wording {
+        let mut parts = vec![format!("{} stands in {} as well", self.subject(), self.places())];
+        parts.extend(self.contrasts.iter().map(Contrast::phrase));
+        if !self.differing.is_empty() {
+            parts.push(format!("the rows differ in {}", listed(&self.differing)));
+        }
+        if !self.lacking.is_empty() {
+            parts.push(format!("not all of them have {}", listed(&self.lacking)));
+        }
+        Wording { title: self.title(), wrong: parts.join("; "), remedy: self.remedy().to_owned() }
+    }
+
+    fn title(&self) -> &'static str {
+        match (self.by, self.agreement) {
+            (SharedBy::Cas, Agreement::OtherNumbers) => "same CAS number, other EC numbers",
+            (SharedBy::Cas, Agreement::Verdicts) => "same CAS number, headlines differ",
+            (SharedBy::Cas, Agreement::Data) => "same CAS number, data differ",
+            (SharedBy::Cas, Agreement::Same) => "same CAS number, same data",
+            (SharedBy::Ec, Agreement::OtherNumbers) => "same EC number, other CAS numbers",
+            (SharedBy::Ec, Agreement::Verdicts) => "same EC number, headlines differ",
+            (SharedBy::Ec, Agreement::Data) => "same EC number, data differ",
+            (SharedBy::Ec, Agreement::Same) => "same EC number, same data",
+            (SharedBy::Name, Agreement::OtherNumbers) => "same name, other numbers",
+            (SharedBy::Name, Agreement::Verdicts | Agreement::Data | Agreement::Same) => {
+                "same name, number missing"
+            }
+        }
+    }
+
+    fn remedy(&self) -> &'static str {
+        match (self.by, self.agreement) {
+            (SharedBy::Cas | SharedBy::Ec, Agreement::OtherNumbers) => {
+                "look up which numbers belong together and correct the wrong one; until then the rows may be about \
+                 different substances"
+            }
+            (SharedBy::Cas | SharedBy::Ec, Agreement::Verdicts) => {
+                "decide which row is right, or bring their data together; each was screened on its own data, and none \
+                 is preferred"
+            }
+            (SharedBy::Cas | SharedBy::Ec, Agreement::Data) => {
+                "decide which values are right, or bring them together; the headlines are the same"
+            }
+            (SharedBy::Cas | SharedBy::Ec, Agreement::Same) => {
+                "nothing, if the substance is meant to stand on several rows, as in several products; otherwise delete \
+                 what is doubled"
+            }
+            (SharedBy::Name, Agreement::OtherNumbers) => {
+                "check the numbers: one may be wrong, or the name may stand for more than one substance"
+            }
+            (SharedBy::Name, Agreement::Verdicts | Agreement::Data | Agreement::Same) => {
+                "if they are one substance, write its CAS or EC number on every row; by a name alone nothing is cleared"
+            }
+        }
+    }
+
+    fn subject(&self) -> String {
+        match self.by {
+            SharedBy::Cas => format!("CAS number {}", self.named),
+            SharedBy::Ec => format!("EC number {}", self.named),
+            SharedBy::Name if self.named.is_empty() => "its name".to_owned(),
+            SharedBy::Name => format!("the name `{}`", super::cell::shown(&self.named)),
+        }
+    }
+
+    /// `Substances!B7, Substances!B9 and 3 more rows`.
+    fn places(&self) -> String {
+        let mut places: Vec<String> = self.others.iter().map(ToString::to_string).collect();
+        let more = self.other_rows.saturating_sub(places.len());
+        if more > 0 {
+            places.push(count(more, "more row", "more rows"));
+        }
+        listed(&places)
+    }
+}
+
+impl Contrast {
+    /// `REACH: ``PBT: screens in`` here, ``PBT: unresolved`` there`.
+    fn phrase(&self) -> String {
+        let here = self.here.as_ref().map_or("none".to_owned(), |here| format!("`{here}`"));
+        let there: Vec<String> = self.there.iter().map(|there| format!("`{there}`")).collect();
+        format!("{}: {here} here, {} there", self.what, there.join(" or "))
+    }
+}
+
+/// `a`, `a and b`, `a, b and c`.
+fn listed<Word: AsRef<str>>(words: &[Word]) -> String {
+    let words: Vec<&str> = words.iter().map(AsRef::as_ref).collect();
+    match words.as_slice() {
+        [] => String::new(),
+        [word] => (*word).to_owned(),
+        [first @ .., last] => format!("{} and {last}", first.join(", ")),
+    }
+}
+
+/// How much of each kind an inventory holds, and how much of it the Conflicts sheet lists.
+#[derive(Debug, Clone, PartialEq, Eq, Default)]
+pub struct ConflictCounts {
+    /// Cells that could not be read or used.
+    pub cells: usize,
+    /// Those of them that are listed.
+    pub cells_listed: usize,
+    /// Rows left aside below the header of another table.
+    pub rows_left: usize,
+    /// Remarks on columns.
+    pub columns: usize,
+    /// CAS and EC numbers that stand on more than one row.
+    pub numbers: usize,
+    /// Names that stand on more than one row without one number that all of these share.
+    pub names: usize,
+    /// Rows that share a number or a name, once for each.
+    pub rows: usize,
+    /// Those of them that are listed.
+    pub rows_listed: usize,
+}
+
+impl ConflictCounts {
+    /// What the sheet says above its list.
+    pub fn heading(&self) -> Vec<String> {
+        let mut found = Vec::new();
+        if self.cells > 0 {
+            found.push(format!("{} could not be read or used", count(self.cells, "cell", "cells")));
+        }
+        if self.rows_left > 0 {
+            found.push(format!("{} not screened", count(self.rows_left, "row was", "rows were")));
+        }
+        if self.columns > 0 {
+            found.push(format!("{} in doubt", count(self.columns, "column is", "columns are")));
+        }
+        found.extend(self.repeated());
+        if found.is_empty() {
+            return vec![
+                "Nothing to list: every cell could be read, no row was left aside, no column is in doubt, and no CAS \
+                 number, EC number or name stands on more than one row."
+                    .to_owned(),
+            ];
+        }
+        let mut lines = vec![
+            format!("{}.", found.join("; ")),
+            "Rows are screened alone, each on what could be read of it: nothing that is listed here changed another row."
+                .to_owned(),
+        ];
+        lines.extend(self.cut());
+        lines
+    }
+
+    /// What stands on more than one row, in a phrase for each of numbers and names.
+    pub fn repeated(&self) -> Vec<String> {
+        let mut phrases = Vec::new();
+        if self.numbers > 0 {
+            let numbers = count(self.numbers, "CAS or EC number stands", "CAS or EC numbers stand");
+            phrases.push(format!("{numbers} on more than one row"));
+        }
+        if self.names > 0 {
+            let names = count(self.names, "name stands", "names stand");
+            phrases.push(format!("{names} on more than one row without one number for all of them"));
+        }
+        phrases
+    }
+
+    fn cut(&self) -> Vec<String> {
+        let mut lines = Vec::new();
+        if self.cells > self.cells_listed {
+            lines.push(format!(
+                "Only the first {} of the {} cells are listed; each of the others stands in the Cautions cell of its row.",
+                self.cells_listed, self.cells
+            ));
+        }
+        if self.rows > self.rows_listed {
+            lines.push(format!(
+                "Only {} of the {} lines on rows that share a number or a name are listed, the most serious first.",
+                self.rows_listed, self.rows
+            ));
+        }
+        lines
+    }
+}
