@@ -154,6 +154,39 @@ pub enum CellFaultKind {
         /// The part, for example `350`.
         part: String,
     },
+    /// A word that is none of those a column of kinds may hold.
+    NotOneOf {
+        /// What the column holds, for example `row type`.
+        what: &'static str,
+        /// The words that it may hold.
+        words: &'static str,
+    },
+    /// The index number of a harmonised classification, which looks like a CAS or EC number.
+    IndexNumber {
+        /// What the column holds, `CAS number` or `EC number`.
+        what: &'static str,
+        /// What could stand there.
+        example: &'static str,
+    },
+    /// The label of a row that holds a total and no substance.
+    TotalsRow,
+    /// A risk phrase of the system before hazard statements.
+    RiskPhrase {
+        /// The phrase as found, for example `R45`.
+        phrase: String,
+    },
+    /// A hazard class with a category 2 that may be one of the system before, where it meant what is 1B today.
+    OldCategory {
+        /// The class and category as found.
+        class: String,
+    },
+    /// The words of a cell say yes and no.
+    SaysBoth,
+    /// A test of another kind where ready biodegradability is asked for.
+    OtherDegradationTest {
+        /// The test as found, for example `oecd 306`.
+        test: String,
+    },
 }
 
 impl fmt::Display for CellFault {
@@ -314,6 +347,35 @@ impl fmt::Display for CellFaultKind {
                 formatter,
                 "holds `{part}`, which may be a hazard statement and was not read; write each code in full, for example \
                  `H302; H350`"
+            ),
+            Self::NotOneOf { what, words } => write!(formatter, "is no {what}; write one of: {words}"),
+            Self::IndexNumber { what, example } => write!(
+                formatter,
+                "is an index number of a harmonised classification and no {what}; write, for example, `{example}`"
+            ),
+            Self::TotalsRow => write!(
+                formatter,
+                "says that the row holds a total, so it was not screened; if it is a substance, give it a CAS number"
+            ),
+            Self::RiskPhrase { phrase } => write!(
+                formatter,
+                "holds the risk phrase `{phrase}` of the system before hazard statements, which is not read; write the \
+                 hazard statement of today, for example `H350`"
+            ),
+            Self::OldCategory { class } => write!(
+                formatter,
+                "names `{class}`, which in the old system meant what is category 1B today; write the hazard statement, \
+                 for example `H350` or `H351`"
+            ),
+            Self::SaysBoth => write!(
+                formatter,
+                "says both yes and no; it counts as open: write `ready`, `not ready` or the result, for example \
+                 `82 %, 28 d, OECD 301B`"
+            ),
+            Self::OtherDegradationTest { test } => write!(
+                formatter,
+                "names `{test}`, which does not settle ready biodegradability; write `ready`, `not ready` or the result \
+                 of a test for it, for example `82 %, 28 d, OECD 301B`"
             ),
         }
     }

@@ -5,6 +5,7 @@ mod columns;
 mod identity;
 mod quantity;
 mod sheet;
+mod tables;
 mod words;
 
 /// The same cases in every run, so that a change is to blame for a failure; `PROPTEST_RNG_SEED` and `PROPTEST_CASES`
