@@ -31,6 +31,8 @@ pub(crate) enum Outcome {
     SecondHeader(CellFault),
     /// It stands below the header of another table, in the row named here, counted from 0.
     BelowSecondHeader(u32),
+    /// It holds a total and no substance.
+    Totals(CellFault),
 }
 
 /// What is added for a screened row.
@@ -61,9 +63,10 @@ pub(crate) fn judge_row(
         return JudgedRow { row, outcome: Outcome::Copied };
     };
     let outcome = match place {
-        RowPlace::InTable if holds_data(&row, screened) => {
-            Outcome::Screened(Box::new(screen_row(&row, screened, reasoning, judge)))
-        }
+        RowPlace::InTable if holds_data(&row, screened) => match screened.reader.totals_row(&row) {
+            Some(totals) => Outcome::Totals(totals),
+            None => Outcome::Screened(Box::new(screen_row(&row, screened, reasoning, judge))),
+        },
         RowPlace::SecondHeader => {
             second_header_fault(&sheet.name, &row).map_or(Outcome::Copied, Outcome::SecondHeader)
         }

@@ -123,6 +123,11 @@ impl Output {
                 self.write_added(id, index, screened.first_added, &why)?;
                 self.keep_faults(vec![fault]);
             }
+            Outcome::Totals(fault) => {
+                let why = unscreened_entries(added, &fault.to_string());
+                self.write_added(id, index, screened.first_added, &why)?;
+                self.keep_faults(vec![fault]);
+            }
             Outcome::BelowSecondHeader(header) => {
                 if let Some(Some((_, left))) = self.unscreened.get_mut(sheet.index) {
                     *left += 1;

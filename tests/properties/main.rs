@@ -5,6 +5,7 @@ mod columns;
 mod identity;
 mod quantity;
 mod sheet;
+mod spellings;
 mod tables;
 mod words;
 

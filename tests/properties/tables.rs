@@ -6,7 +6,7 @@ use kowledger::quantity::{Date, format_number};
 use kowledger::substance::{Completeness, DegradationTest, Identity, RowType, Substance, SubstanceType};
 use kowledger::workbook::CellContent;
 
-use crate::sheet::{content_row, read_last_row, text_row};
+use crate::sheet::{columns_of, content_row, read_last_row, text_row};
 
 /// A cell as the tables write it.
 fn content(written: &str) -> CellContent {
@@ -186,5 +186,18 @@ fn every_cell_on_inherent_biodegradability_of_the_table_is_read_as_written_there
             format!("{guideline} | {} | {}", number(lowest), number(cited.value.days))
         });
         Ok((found, first_fault(&substance)))
+    });
+}
+
+#[test]
+fn every_row_of_totals_of_the_table_is_told_from_substances() {
+    check(include_str!("../fixtures/totals.tsv"), 5, 60, |cells| {
+        let headers = ["Item no.", "Name", "CAS", "log Kow", "Tonnes per year"];
+        let contents: Vec<CellContent> = cells.iter().map(|cell| content(cell)).collect();
+        let rows = [text_row(0, &headers), content_row(1, &contents)];
+        let columns = columns_of(&rows)?;
+        let reader = RowReader::new("Sheet".into(), &columns, UnstatedBasis::Unstated);
+        let totals = rows.last().and_then(|row| reader.totals_row(row));
+        Ok((if totals.is_some() { "total" } else { "substance" }.to_owned(), String::new()))
     });
 }

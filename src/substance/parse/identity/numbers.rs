@@ -80,7 +80,8 @@ impl Numbers {
             Form::Cas(number) => (&mut self.cas, number),
             Form::Ec(number) => (&mut self.ec, number),
         };
-        if !known.contains(&number) {
+        // Two are as many as it takes to be several.
+        if known.len() < 2 && !known.contains(&number) {
             known.push(number);
         }
     }
@@ -140,6 +141,9 @@ fn without_label(group: &str) -> &str {
 /// The digits of a text that holds one number and its label only: whole, in groups without hyphens, with zeros behind
 /// a separator, or with an exponent that hides none of them.
 pub(super) fn bare_digits(text: &str, groups: [std::ops::RangeInclusive<usize>; 3]) -> Option<String> {
+    if text.starts_with('-') {
+        return None;
+    }
     if let Some(found) = SCIENTIFIC.captures(text) {
         let part = |group| found.get(group).map_or("", |part: regex::Match<'_>| part.as_str());
         let complete = part(3).parse() == Ok(part(2).len());

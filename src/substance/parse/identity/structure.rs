@@ -27,7 +27,8 @@ pub(super) fn read_smiles(content: &CellContent) -> Result<Option<String>, CellF
         return Ok(Some(text));
     }
     let tidied = tidy(&text);
-    if is_missing(&tidied) || absence(&tidied).is_some() {
+    // `[Na+` is no word for missing.
+    if (is_missing(&tidied) && !tidied.contains('[')) || absence(&tidied).is_some() {
         return Ok(None);
     }
     let separators = |character: char| character.is_whitespace() || matches!(character, ';' | ',' | '|');
