@@ -13,8 +13,7 @@ use crate::substance::parse::pattern::fixed;
 use crate::workbook::CellContent;
 
 /// The ninth letter of the second block says whether the key is a standard one.
-static INCHI_KEY: LazyLock<Regex> =
-    LazyLock::new(|| fixed(r"(?:^|[^A-Z0-9-])([A-Z]{14}-[A-Z]{8}[SN]A-[A-Z])(?:$|[^A-Z0-9-])"));
+static INCHI_KEY: LazyLock<Regex> = LazyLock::new(|| fixed(r"(?-u:\b)[A-Z]{14}-[A-Z]{8}[SN]A-[A-Z](?-u:\b)"));
 static KEY_ALONE: LazyLock<Regex> =
     LazyLock::new(|| fixed(r"^(?:InChI ?Key)? ?[=:]? ?([A-Z]{14}-[A-Z]{8}[SN]A-[A-Z])$"));
 
