@@ -12,7 +12,7 @@ mod kind;
 mod parse;
 mod property;
 
-use std::collections::BTreeMap;
+use std::collections::{BTreeMap, BTreeSet};
 use std::sync::Arc;
 
 pub use cas::{CasError, CasNumber};
@@ -121,6 +121,8 @@ pub enum Identity {
     NameAlone,
     /// Several substances in one cell, or a mixture or article row.
     NotIdentified,
+    /// By a CAS or EC number that had lost its hyphens and nothing else.
+    BareNumber,
 }
 
 /// Decades of pH from its pKa at which a tenth of a group is left in the other form: log10(9).
@@ -153,6 +155,8 @@ pub struct Substance {
     pub formula: Option<Cited<String>>,
     /// Its type.
     pub substance_type: Option<Cited<SubstanceType>>,
+    /// Further types that the same cell names.
+    pub further_types: BTreeSet<SubstanceType>,
     /// How sure its identity is.
     pub identity: Identity,
     /// Its numeric values by property, in order of column.
@@ -188,6 +192,7 @@ impl Substance {
             inchi_key: None,
             formula: None,
             substance_type: None,
+            further_types: BTreeSet::new(),
             identity: Identity::NameAlone,
             readings: BTreeMap::new(),
             ready: Vec::new(),

@@ -167,6 +167,39 @@ pub enum CellFaultKind {
         /// How many the header has.
         header: usize,
     },
+    /// A word that is none of those a column of kinds may hold.
+    NotOneOf {
+        /// What the column holds, for example `row type`.
+        what: &'static str,
+        /// The words that it may hold.
+        words: &'static str,
+    },
+    /// The index number of a harmonised classification, which looks like a CAS or EC number.
+    IndexNumber {
+        /// What the column holds, `CAS number` or `EC number`.
+        what: &'static str,
+        /// What could stand there.
+        example: &'static str,
+    },
+    /// The label of a row that holds a total and no substance.
+    TotalsRow,
+    /// A risk phrase of the system before hazard statements.
+    RiskPhrase {
+        /// The phrase as found, for example `R45`.
+        phrase: String,
+    },
+    /// A hazard class with a category 2 that may be one of the system before, where it meant what is 1B today.
+    OldCategory {
+        /// The class and category as found.
+        class: String,
+    },
+    /// The words of a cell say yes and no.
+    SaysBoth,
+    /// A test of another kind where ready biodegradability is asked for.
+    OtherDegradationTest {
+        /// The test as found, for example `oecd 306`.
+        test: String,
+    },
 }
 
 impl CellFault {

@@ -96,7 +96,7 @@ fn designation_why(book: Book, index: usize) -> String {
     let parts: Vec<String> = rule.parts.iter().map(|part| part_brief(book, *part)).collect();
     let doubt = match book.told.substance.identity {
         Identity::Identified => "",
-        Identity::NameAlone | Identity::RepairedDate | Identity::NotIdentified => {
+        Identity::NameAlone | Identity::RepairedDate | Identity::BareNumber | Identity::NotIdentified => {
             "Which substance it is is not sure, so nothing clears it; "
         }
     };

@@ -69,10 +69,12 @@ pub fn deciding_text(told: Told) -> String {
     }
     let mut parts: Vec<String> = match told.substance.identity {
         Identity::Identified => Vec::new(),
-        Identity::NameAlone | Identity::RepairedDate | Identity::NotIdentified if groups.is_empty() => {
+        Identity::NameAlone | Identity::RepairedDate | Identity::BareNumber | Identity::NotIdentified
+            if groups.is_empty() =>
+        {
             Vec::new()
         }
-        Identity::NameAlone | Identity::RepairedDate | Identity::NotIdentified => {
+        Identity::NameAlone | Identity::RepairedDate | Identity::BareNumber | Identity::NotIdentified => {
             vec!["first a CAS number, EC number or structure that says which substance it is".to_owned()]
         }
     };

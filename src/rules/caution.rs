@@ -77,10 +77,10 @@ impl Caution {
         if self.triggers.inorganic_formula && self.triggers.says_organic(substance) {
             return None;
         }
-        self.triggers
-            .substance_types
-            .contains(&stated.value)
-            .then(|| format!("the substance type is `{}`", stated.value.id()))
+        let mut types = std::iter::once(&stated.value).chain(&substance.further_types);
+        types
+            .find(|kind| self.triggers.substance_types.contains(*kind))
+            .map(|kind| format!("the substance type is `{}`", kind.id()))
     }
 }
 
@@ -142,6 +142,7 @@ fn identity_reason(identity: Identity) -> String {
         Identity::RepairedDate => "the CAS number was read back from a date",
         Identity::NameAlone => "the row has a name or a number of its own only",
         Identity::NotIdentified => "the row does not say which one substance it means",
+        Identity::BareNumber => "the number was written without its hyphens",
     }
     .to_owned()
 }

@@ -66,10 +66,12 @@ pub(crate) fn judge_row(
         return JudgedRow { row, outcome: Outcome::Copied };
     };
     let outcome = match place {
-        RowPlace::InTable if holds_data(&row, screened) => match beyond_header(&row, sheet, screened) {
-            Some(fault) => Outcome::LeftAside(fault),
-            None => Outcome::Screened(Box::new(screen_row(&row, screened, reasoning, judge))),
-        },
+        RowPlace::InTable if holds_data(&row, screened) => {
+            match beyond_header(&row, sheet, screened).or_else(|| screened.reader.totals_row(&row)) {
+                Some(fault) => Outcome::LeftAside(fault),
+                None => Outcome::Screened(Box::new(screen_row(&row, screened, reasoning, judge))),
+            }
+        }
         RowPlace::SecondHeader => {
             second_header_fault(&sheet.name, &row).map_or(Outcome::Copied, Outcome::SecondHeader)
         }

@@ -35,7 +35,9 @@ impl Standing {
     pub(crate) fn of(told: Told) -> Self {
         let substance = told.substance;
         let identified = match substance.identity {
-            Identity::Identified | Identity::RepairedDate | Identity::NameAlone => Some(substance),
+            Identity::Identified | Identity::RepairedDate | Identity::BareNumber | Identity::NameAlone => {
+                Some(substance)
+            }
             Identity::NotIdentified => None,
         };
         let cas = identified.and_then(|row| row.cas.as_ref());

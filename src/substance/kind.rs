@@ -35,11 +35,15 @@ pub enum SubstanceType {
     Surfactant,
     /// A salt of an organic ion.
     OrganicSalt,
+    /// A substance with a perfluorinated or polyfluorinated chain.
+    Perfluoroalkyl,
+    /// An acid or base that ionises in the environment.
+    Ionisable,
 }
 
 impl SubstanceType {
     /// Every type.
-    pub const ALL: [Self; 9] = [
+    pub const ALL: [Self; 11] = [
         Self::Organic,
         Self::Inorganic,
         Self::Organometallic,
@@ -49,6 +53,8 @@ impl SubstanceType {
         Self::Mixture,
         Self::Surfactant,
         Self::OrganicSalt,
+        Self::Perfluoroalkyl,
+        Self::Ionisable,
     ];
 
     /// The name in rule files.
@@ -63,6 +69,8 @@ impl SubstanceType {
             Self::Mixture => "mixture",
             Self::Surfactant => "surfactant",
             Self::OrganicSalt => "organic-salt",
+            Self::Perfluoroalkyl => "perfluoroalkyl",
+            Self::Ionisable => "ionisable",
         }
     }
 

@@ -13,14 +13,16 @@ mod kinds;
 mod pattern;
 mod remark;
 mod statements;
+mod totals;
 
 use std::sync::Arc;
 
 pub(crate) use remark::Said;
 
 use crate::columns::{Column, Recognised};
+use crate::fault::{CellFault, CellFaultKind};
 use crate::substance::{Basis, Field, Property, Substance};
-use crate::workbook::Row;
+use crate::workbook::{CellRef, Row};
 use draft::Draft;
 
 /// What a value without a word on how it was obtained counts as (`--unstated`).
@@ -60,6 +62,13 @@ impl RowReader {
         let mut columns = columns.columns.clone();
         columns.sort_by_key(|column| column.field != Field::Property(Property::MolarMass));
         Self { sheet, columns, unstated }
+    }
+
+    /// The cell that says that the row holds a total and no substance, as a fault; `None` for a row of a substance.
+    pub fn totals_row(&self, row: &Row) -> Option<CellFault> {
+        let (column, found) = totals::totals_label(&self.columns, row)?;
+        let cell = CellRef { sheet: Arc::clone(&self.sheet), row: row.index, column };
+        Some(CellFault { cell, found, kind: CellFaultKind::TotalsRow })
     }
 
     /// What the row says of its substance.

@@ -233,7 +233,7 @@ proptest! {
 
     #[test]
     fn what_a_caution_blocks_altogether_is_never_cleared(readings in vec(drawn(), 0..12), words in words()) {
-        for identity in [Identity::NameAlone, Identity::RepairedDate, Identity::NotIdentified] {
+        for identity in [Identity::NameAlone, Identity::RepairedDate, Identity::BareNumber, Identity::NotIdentified] {
             let words = Words { identity, ..words.clone() };
             for (place, verdict) in verdicts(&made(&readings, &words)) {
                 prop_assert!(!cleared(verdict), "{place:?} {identity:?}");

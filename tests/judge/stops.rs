@@ -151,7 +151,7 @@ type CautionLine = (&'static str, fn(Row) -> Row, [bool; 3]);
 fn each_caution_stops_what_it_says_and_nothing_more() {
     let everything = [true, true, true];
     let whole_log_kow = [true, false, false];
-    let table: [CautionLine; 9] = [
+    let table: [CautionLine; 10] = [
         ("perfluoroalkyl", |row| row.named("perfluorooctanoic acid"), [true, true, false]),
         ("surfactant", |row| row.of_type(SubstanceType::Surfactant), whole_log_kow),
         ("permanent-charge", |row| row.named("hexadecyltrimethylammonium bromide"), whole_log_kow),
@@ -161,6 +161,7 @@ fn each_caution_stops_what_it_says_and_nothing_more() {
         ("multi-constituent", |row| row.of_type(SubstanceType::MultiConstituent), everything),
         ("identity-by-name-alone", Row::by_name_alone, everything),
         ("identity-by-repaired-date", |row| row.identified_as(Identity::RepairedDate), everything),
+        ("identity-by-bare-number", |row| row.identified_as(Identity::BareNumber), everything),
     ];
     for (caution, make, [log_kow, bcf, ready]) in table {
         let stopped = |row: Row, book: &str, criterion: &str| {

@@ -27,7 +27,6 @@ fn a_cas_number_is_read_in_every_usual_form() {
         "CAS: 50-29-3",
         "50 - 29 - 3",
         "50-29-3 (tech.)",
-        "50293",
         "50-29-3; 50-29-3",
     ] {
         let substance = row(text, "", "").unwrap();
@@ -35,8 +34,18 @@ fn a_cas_number_is_read_in_every_usual_form() {
         assert_eq!(substance.identity, Identity::Identified, "{text}");
         assert!(substance.faults.is_empty(), "{text}");
     }
-    let number = cas_cell(CellContent::Number(50_293.0)).unwrap();
-    assert_eq!(number.cas.map(|cas| cas.value.to_string()).as_deref(), Some("50-29-3"));
+}
+
+#[test]
+fn a_number_without_hyphens_is_read_where_its_check_digit_agrees_and_identifies_beside_a_second_one_only() {
+    for content in [CellContent::Number(50_293.0), CellContent::Text("50293".to_owned())] {
+        let number = cas_cell(content).unwrap();
+        assert_eq!(number.cas.map(|cas| cas.value.to_string()).as_deref(), Some("50-29-3"));
+        assert_eq!(number.identity, Identity::BareNumber);
+        assert!(number.faults.is_empty());
+    }
+    assert_eq!(row("50293", "200-024-3", "").unwrap().identity, Identity::Identified);
+    assert_eq!(row("50294", "", "").unwrap().identity, Identity::NameAlone);
 }
 
 #[test]

@@ -5,6 +5,8 @@ mod columns;
 mod identity;
 mod quantity;
 mod sheet;
+mod spellings;
+mod tables;
 mod words;
 
 /// The same cases in every run, so that a change is to blame for a failure; `PROPTEST_RNG_SEED` and `PROPTEST_CASES`

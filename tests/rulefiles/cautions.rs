@@ -240,11 +240,21 @@ fn a_stated_type_raises_its_caution_whatever_the_name() {
         (SubstanceType::Mixture, vec!["mixture"]),
         (SubstanceType::Surfactant, vec!["surfactant"]),
         (SubstanceType::OrganicSalt, vec!["permanent-charge", "ionisable"]),
+        (SubstanceType::Perfluoroalkyl, vec!["perfluoroalkyl"]),
+        (SubstanceType::Ionisable, vec!["ionisable"]),
     ] {
         let mut substance = named("Product 4711");
         substance.substance_type = Some(cited(kind));
         assert_eq!(raised(&cautions, &substance), expected, "{kind:?}");
     }
+}
+
+#[test]
+fn further_types_of_a_cell_raise_their_cautions_beside_the_first() {
+    let mut substance = named("Product 4711");
+    substance.substance_type = Some(cited(SubstanceType::Surfactant));
+    substance.further_types = [SubstanceType::Perfluoroalkyl].into();
+    assert_eq!(raised(&cautions(), &substance), ["surfactant", "perfluoroalkyl"]);
 }
 
 #[test]
@@ -254,6 +264,7 @@ fn identity_and_row_type_raise_their_cautions() {
         (Identity::Identified, vec![]),
         (Identity::NameAlone, vec!["identity-by-name-alone"]),
         (Identity::RepairedDate, vec!["identity-by-repaired-date"]),
+        (Identity::BareNumber, vec!["identity-by-bare-number"]),
         (Identity::NotIdentified, vec!["not-identified"]),
     ] {
         let mut substance = named("Toluene");

@@ -199,6 +199,41 @@ impl CellFaultKind {
                 ),
                 "put that text into quotation marks, or give the column a header",
             ),
+            Self::NotOneOf { what, words } => {
+                say("word that is not known", format!("is no {what}"), format!("write one of: {words}"))
+            }
+            Self::IndexNumber { what, example } => say(
+                "index number",
+                format!("is an index number of a harmonised classification and no {what}"),
+                format!("write, for example, `{example}`"),
+            ),
+            Self::TotalsRow => say(
+                "total",
+                "says that the row holds a total, so it was not screened",
+                "if it is a substance, give it a CAS number",
+            ),
+            Self::RiskPhrase { phrase } => say(
+                "risk phrase",
+                format!(
+                    "holds the risk phrase `{phrase}` of the system before hazard statements, which is not read"
+                ),
+                "write the hazard statement of today, for example `H350`",
+            ),
+            Self::OldCategory { class } => say(
+                "category of the old system",
+                format!("names `{class}`, which in the old system meant what is category 1B today"),
+                "write the hazard statement, for example `H350` or `H351`",
+            ),
+            Self::SaysBoth => say(
+                "says yes and no",
+                "says both yes and no, and counts as open",
+                "write `ready`, `not ready` or the result, for example `82 %, 28 d, OECD 301B`",
+            ),
+            Self::OtherDegradationTest { test } => say(
+                "test of another kind",
+                format!("names `{test}`, which does not settle ready biodegradability"),
+                "write `ready`, `not ready` or the result of a test for it, for example `82 %, 28 d, OECD 301B`",
+            ),
         }
     }
 }

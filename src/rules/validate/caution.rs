@@ -16,10 +16,11 @@ use crate::substance::{Identity, RowType, SubstanceType};
 
 const ROW_TYPES: [(&str, RowType); 3] =
     [("substance", RowType::Substance), ("mixture", RowType::Mixture), ("article", RowType::Article)];
-const IDENTITIES: [(&str, Identity); 3] = [
+const IDENTITIES: [(&str, Identity); 4] = [
     ("name-alone", Identity::NameAlone),
     ("repaired-date", Identity::RepairedDate),
     ("not-identified", Identity::NotIdentified),
+    ("bare-number", Identity::BareNumber),
 ];
 const TRIGGER_KEYS: [&str; 7] =
     ["substance-types", "row-types", "identities", "name-patterns", "formula", "ionisable", "log-kow-spread"];

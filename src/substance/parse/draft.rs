@@ -102,12 +102,10 @@ impl Draft {
             Field::Formula => self.substance.formula = cited(identity::read_name(content), cell),
             Field::CasNumber => self.identity.take_cas(&mut self.substance, content, cell)?,
             Field::EcNumber => self.identity.take_ec(&mut self.substance, content, cell)?,
-            Field::Smiles => self.substance.smiles = cited(identity::read_smiles(content)?, cell),
-            Field::InchiKey => self.substance.inchi_key = cited(identity::read_inchi_key(content)?, cell),
+            Field::Smiles => self.identity.take_smiles(&mut self.substance, content, cell)?,
+            Field::InchiKey => self.identity.take_inchi_key(&mut self.substance, content, cell)?,
             Field::RowType => self.take_row_type(content)?,
-            Field::SubstanceType => {
-                self.substance.substance_type = cited(kinds::read_substance_type(content)?, cell);
-            }
+            Field::SubstanceType => self.take_substance_type(content, cell)?,
             Field::Property(property) => self.take_property(property, column, content, &cell)?,
             Field::LogKowMethod => self.companions.take_method(content),
             Field::LogKowSd => {
@@ -184,6 +182,14 @@ impl Draft {
             RowType::Article => Err(CellFaultKind::ArticleRow),
             RowType::NotStated | RowType::Substance => Ok(()),
         }
+    }
+
+    fn take_substance_type(&mut self, content: &CellContent, cell: CellRef) -> Result<(), CellFaultKind> {
+        if let Some((value, further)) = kinds::read_substance_type(content)? {
+            self.substance.substance_type = Some(Cited { value, cell });
+            self.substance.further_types = further;
+        }
+        Ok(())
     }
 
     fn take_property(

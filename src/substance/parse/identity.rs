@@ -1,29 +1,28 @@
 //! Which substance a row means, and how sure that is.
 
-use std::fmt::Display;
-use std::sync::LazyLock;
+mod cells;
+mod dates;
+mod numbers;
+mod structure;
+mod words;
 
-use regex::Regex;
+use std::fmt::Display;
 
 use super::cell;
-use super::pattern::fixed;
 use crate::fault::{CellFault, CellFaultKind};
-use crate::quantity::{Date, is_missing, tidy};
-use crate::substance::{
-    CasError, CasNumber, Cited, EcError, EcNumber, Field, Identity, RowType, Substance, SubstanceType,
-};
+use crate::quantity::{is_missing, tidy};
+use crate::substance::{CasNumber, Cited, EcNumber, Field, Identity, RowType, Substance, SubstanceType};
 use crate::workbook::{CellContent, CellRef};
+use cells::{CasCell, EcCell, Written, read_cas, read_ec};
 
-static CAS: LazyLock<Regex> = LazyLock::new(|| fixed(r"\b\d{2,7} ?- ?\d{2} ?- ?\d\b"));
-static EC: LazyLock<Regex> = LazyLock::new(|| fixed(r"\b[0-9A-Z]\d{2} ?- ?\d{3} ?- ?\d\b"));
-static ISO_DATE: LazyLock<Regex> = LazyLock::new(|| fixed(r"^(\d{4})-(\d{1,2})-(\d{2})(?:[ T]00:00.*)?$"));
-static POINT_DATE: LazyLock<Regex> = LazyLock::new(|| fixed(r"^(\d{1,2})\.(\d{1,2})\.(\d{4})$"));
-static INCHI_KEY: LazyLock<Regex> = LazyLock::new(|| fixed(r"^(?:InChIKey=)?([A-Z]{14}-[A-Z]{10}-[A-Z])$"));
-
-/// How the number columns of a row were read.
+/// How the identity cells of a row were read.
 #[derive(Debug, Clone, PartialEq, Default)]
 pub(super) struct IdentityCells {
-    reading: NumberReading,
+    /// How the CAS number of the row stood in its cell.
+    cas: Option<Written>,
+    /// How the EC number of the row stood in its cell.
+    ec: Option<Written>,
+    several: Several,
     /// The CAS column and the EC column, where two cells of the row disagree.
     contradicted: Vec<Field>,
     /// A CAS number that stands in an EC column.
@@ -32,31 +31,13 @@ pub(super) struct IdentityCells {
     misplaced_ec: Option<Cited<EcNumber>>,
 }
 
-/// How sure the numbers of a row are.
-#[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord, Default)]
-enum NumberReading {
-    /// As they stand.
+/// Whether the row speaks of more than one substance.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
+enum Several {
     #[default]
-    AsWritten,
-    /// The CAS number from a date.
-    FromDate,
-    /// A cell holds several numbers, or two cells disagree.
-    Several,
-}
-
-/// What a CAS cell holds.
-enum CasCell {
-    Missing,
-    Number(CasNumber),
-    FromDate(CasNumber),
-    Misplaced(EcNumber),
-}
-
-/// What an EC cell holds.
-enum EcCell {
-    Missing,
-    Number(EcNumber),
-    Misplaced(CasNumber),
+    No,
+    /// A cell holds several numbers or says that they are several, or two cells disagree.
+    Yes,
 }
 
 impl IdentityCells {
@@ -69,25 +50,22 @@ impl IdentityCells {
     ) -> Result<(), CellFaultKind> {
         let (value, how) = match read_cas(content).inspect_err(|fault| self.note_several(fault))? {
             CasCell::Missing => return Ok(()),
-            CasCell::Number(number) => (number, NumberReading::AsWritten),
-            CasCell::FromDate(number) => (number, NumberReading::FromDate),
+            CasCell::Mixture => {
+                self.several = Several::Yes;
+                return Ok(());
+            }
+            CasCell::Number(number, how) => (number, how),
             CasCell::Misplaced(value) => {
                 self.misplaced_ec.get_or_insert(Cited { value, cell });
                 return Err(CellFaultKind::NumberOfOtherKind { what: CAS_NUMBER, found: EC_NUMBER });
             }
         };
-        match &substance.cas {
-            None => {
-                self.reading = self.reading.max(how);
-                substance.cas = Some(Cited { value, cell });
-            }
-            Some(other) if other.value != value => {
-                return Err(self.contradiction(Field::CasNumber, CAS_NUMBER, other));
-            }
-            // A number as written confirms the one from a date.
-            Some(_) if self.reading == NumberReading::FromDate => self.reading = how,
-            Some(_) => {}
+        if let Some(other) = substance.cas.as_ref().filter(|other| other.value != value) {
+            return Err(self.contradiction(Field::CasNumber, CAS_NUMBER, other));
         }
+        // A number as written confirms one from a date.
+        self.cas = Some(self.cas.map_or(how, |before| before.min(how)));
+        substance.cas.get_or_insert(Cited { value, cell });
         Ok(())
     }
 
@@ -98,27 +76,57 @@ impl IdentityCells {
         content: &CellContent,
         cell: CellRef,
     ) -> Result<(), CellFaultKind> {
-        let value = match read_ec(content).inspect_err(|fault| self.note_several(fault))? {
+        let (value, how) = match read_ec(content).inspect_err(|fault| self.note_several(fault))? {
             EcCell::Missing => return Ok(()),
-            EcCell::Number(number) => number,
+            EcCell::Mixture => {
+                self.several = Several::Yes;
+                return Ok(());
+            }
+            EcCell::Number(number, how) => (number, how),
             EcCell::Misplaced(value) => {
                 self.misplaced_cas.get_or_insert(Cited { value, cell });
                 return Err(CellFaultKind::NumberOfOtherKind { what: EC_NUMBER, found: CAS_NUMBER });
             }
         };
-        match &substance.ec {
-            None => substance.ec = Some(Cited { value, cell }),
-            Some(other) if other.value != value => {
-                return Err(self.contradiction(Field::EcNumber, EC_NUMBER, other));
-            }
-            Some(_) => {}
+        if let Some(other) = substance.ec.as_ref().filter(|other| other.value != value) {
+            return Err(self.contradiction(Field::EcNumber, EC_NUMBER, other));
+        }
+        self.ec = Some(self.ec.map_or(how, |before| before.min(how)));
+        substance.ec.get_or_insert(Cited { value, cell });
+        Ok(())
+    }
+
+    /// Takes a cell of a SMILES column.
+    pub(super) fn take_smiles(
+        &mut self,
+        substance: &mut Substance,
+        content: &CellContent,
+        cell: CellRef,
+    ) -> Result<(), CellFaultKind> {
+        let smiles = structure::read_smiles(content).inspect_err(|fault| self.note_several(fault))?;
+        if let Some(value) = smiles {
+            substance.smiles = Some(Cited { value, cell });
+        }
+        Ok(())
+    }
+
+    /// Takes a cell of a column of InChI keys.
+    pub(super) fn take_inchi_key(
+        &mut self,
+        substance: &mut Substance,
+        content: &CellContent,
+        cell: CellRef,
+    ) -> Result<(), CellFaultKind> {
+        let key = structure::read_inchi_key(content).inspect_err(|fault| self.note_several(fault))?;
+        if let Some(value) = key {
+            substance.inchi_key = Some(Cited { value, cell });
         }
         Ok(())
     }
 
     fn note_several(&mut self, fault: &CellFaultKind) {
-        if matches!(fault, CellFaultKind::SeveralIdentities { .. }) {
-            self.reading = NumberReading::Several;
+        if matches!(fault, CellFaultKind::SeveralIdentities { .. } | CellFaultKind::MixtureRow) {
+            self.several = Several::Yes;
         }
     }
 
@@ -128,7 +136,7 @@ impl IdentityCells {
         what: &'static str,
         other: &Cited<T>,
     ) -> CellFaultKind {
-        self.reading = NumberReading::Several;
+        self.several = Several::Yes;
         self.contradicted.push(field);
         let (number, other) = (other.value.to_string(), other.cell.clone());
         CellFaultKind::OtherIdentity { what, number, other }
@@ -147,19 +155,31 @@ impl IdentityCells {
             RowType::Mixture | RowType::Article => true,
             RowType::Substance => false,
             RowType::NotStated => {
-                substance.substance_type.as_ref().map(|cited| cited.value) == Some(SubstanceType::Mixture)
+                let stated = substance.substance_type.as_ref().map(|cited| cited.value);
+                stated == Some(SubstanceType::Mixture)
+                    || substance.further_types.contains(&SubstanceType::Mixture)
             }
         };
-        let second_identifier =
-            substance.ec.is_some() || substance.smiles.is_some() || substance.inchi_key.is_some();
-        substance.identity = match self.reading {
-            NumberReading::Several => Identity::NotIdentified,
-            NumberReading::AsWritten | NumberReading::FromDate if is_mixture => Identity::NotIdentified,
-            NumberReading::AsWritten | NumberReading::FromDate if second_identifier => Identity::Identified,
-            NumberReading::AsWritten if substance.cas.is_some() => Identity::Identified,
-            NumberReading::FromDate => Identity::RepairedDate,
-            NumberReading::AsWritten => Identity::NameAlone,
+        substance.identity = match self.several {
+            Several::Yes => Identity::NotIdentified,
+            Several::No if is_mixture => Identity::NotIdentified,
+            Several::No => self.by_identifiers(substance),
         };
+    }
+
+    /// A number that was mended may be another one: a date or digits without hyphens pass a check digit by chance in
+    /// one case of ten. Two such numbers, or one beside a number in full or a structure, agree.
+    fn by_identifiers(&self, substance: &Substance) -> Identity {
+        let has_structure = substance.smiles.is_some() || substance.inchi_key.is_some();
+        match (self.cas, self.ec) {
+            (_, _) if has_structure => Identity::Identified,
+            (Some(Written::InFull), _) | (_, Some(Written::InFull)) | (Some(_), Some(_)) => {
+                Identity::Identified
+            }
+            (Some(Written::AsDate), None) | (None, Some(Written::AsDate)) => Identity::RepairedDate,
+            (Some(Written::Bare), None) | (None, Some(Written::Bare)) => Identity::BareNumber,
+            (None, None) => Identity::NameAlone,
+        }
     }
 
     /// A number in the other number's column names the row where nothing else does, and must not contradict one in
@@ -183,6 +203,8 @@ impl IdentityCells {
             || substance.smiles.is_some()
             || substance.inchi_key.is_some();
         if !named {
+            self.cas = cas.as_ref().map(|_| Written::InFull);
+            self.ec = ec.as_ref().map(|_| Written::InFull);
             substance.cas = cas;
             substance.ec = ec;
         }
@@ -194,192 +216,6 @@ const EC_NUMBER: &str = "EC number";
 
 fn fault_at<T: Display>(found: &Cited<T>, kind: CellFaultKind) -> CellFault {
     CellFault { cell: found.cell.clone(), found: found.value.to_string(), kind }
-}
-
-fn read_cas(content: &CellContent) -> Result<CasCell, CellFaultKind> {
-    if let CellContent::DateTime(serial) = content {
-        let date = Date::from_serial(*serial).ok_or(CellFaultKind::DateIsNoCas)?;
-        let (year, month, day) = date.parts();
-        return from_date(i64::from(year), i64::from(month), i64::from(day));
-    }
-    let Some(text) = cell::value_text(content) else {
-        return Ok(CasCell::Missing);
-    };
-    if let Some((year, month, day)) = date_in(&text) {
-        return from_date(year, month, day);
-    }
-    let mut found: Vec<String> =
-        CAS.find_iter(&text).map(|number| number.as_str().replace(' ', "")).collect();
-    found.dedup();
-    match found.as_slice() {
-        [] => match ec_alone(&text) {
-            Some(number) => Ok(CasCell::Misplaced(number)),
-            None => read_cas_digits(&text),
-        },
-        [number] => CasNumber::parse(number).map(CasCell::Number).map_err(|error| cas_fault(number, error)),
-        [_, _, ..] => Err(CellFaultKind::SeveralIdentities { what: "CAS numbers" }),
-    }
-}
-
-/// The one EC number of a text, if its check digit is right.
-fn ec_alone(text: &str) -> Option<EcNumber> {
-    let mut found = EC.find_iter(text);
-    let number = found.next().filter(|_| found.next().is_none())?;
-    EcNumber::parse(&number.as_str().replace(' ', "")).ok()
-}
-
-/// The one CAS number of a text, if its check digit is right.
-fn cas_alone(text: &str) -> Option<CasNumber> {
-    let mut found = CAS.find_iter(text);
-    let number = found.next().filter(|_| found.next().is_none())?;
-    CasNumber::parse(&number.as_str().replace(' ', "")).ok()
-}
-
-/// A number whose hyphens are lost, as 50293.
-fn read_cas_digits(text: &str) -> Result<CasCell, CellFaultKind> {
-    let not_a = CellFaultKind::NotA { what: "CAS number", example: "50-29-3" };
-    let only_digits = text.bytes().all(|byte| byte.is_ascii_digit());
-    let digits: u64 = text.parse().ok().filter(|_| only_digits && text.len() <= 10).ok_or(not_a.clone())?;
-    let written = format!("{}-{:02}-{}", digits / 1000, digits / 10 % 100, digits % 10);
-    match CasNumber::from_digits(digits) {
-        Ok(number) => Ok(CasCell::Number(number)),
-        Err(CasError::Form) => Err(not_a),
-        Err(error @ CasError::CheckDigit { .. }) => Err(cas_fault(&written, error)),
-    }
-}
-
-fn cas_fault(number: &str, error: CasError) -> CellFaultKind {
-    match error {
-        CasError::Form => CellFaultKind::NotA { what: "CAS number", example: "50-29-3" },
-        CasError::CheckDigit { expected } => CellFaultKind::CheckDigit {
-            what: "CAS number",
-            expected,
-            corrected: with_last_digit(number, expected),
-        },
-    }
-}
-
-fn with_last_digit(number: &str, digit: u8) -> String {
-    let mut corrected = number.to_owned();
-    corrected.pop();
-    corrected.push(char::from(b'0' + digit.min(9)));
-    corrected
-}
-
-/// Year, month and day of `1918-02-01` or `01.02.1918`.
-fn date_in(text: &str) -> Option<(i64, i64, i64)> {
-    let number = |found: &regex::Captures<'_>, group| found.get(group)?.as_str().parse().ok();
-    if let Some(found) = ISO_DATE.captures(text) {
-        return Some((number(&found, 1)?, number(&found, 2)?, number(&found, 3)?));
-    }
-    let found = POINT_DATE.captures(text)?;
-    Some((number(&found, 3)?, number(&found, 2)?, number(&found, 1)?))
-}
-
-/// The CAS number of which a spreadsheet made this date. A year of the last or this century may have been written
-/// with two digits; the check digit never fits both readings.
-fn from_date(year: i64, month: i64, day: i64) -> Result<CasCell, CellFaultKind> {
-    let short = (1930..2030).contains(&year).then(|| format!("{:02}-{month:02}-{day}", year % 100));
-    let candidates = [Some(format!("{year}-{month:02}-{day}")), short];
-    candidates
-        .into_iter()
-        .flatten()
-        .find_map(|candidate| CasNumber::parse(&candidate).ok())
-        .map(CasCell::FromDate)
-        .ok_or(CellFaultKind::DateIsNoCas)
-}
-
-fn read_ec(content: &CellContent) -> Result<EcCell, CellFaultKind> {
-    let not_a = CellFaultKind::NotA { what: EC_NUMBER, example: "200-024-3" };
-    if matches!(content, CellContent::DateTime(_)) {
-        return Err(not_a);
-    }
-    let Some(text) = cell::value_text(content) else {
-        return Ok(EcCell::Missing);
-    };
-    let mut found: Vec<String> =
-        EC.find_iter(&text).map(|number| number.as_str().replace(' ', "").to_uppercase()).collect();
-    found.dedup();
-    let number = match found.as_slice() {
-        [] => match (cas_alone(&text), ec_from_digits(&text)) {
-            (Some(number), _) => return Ok(EcCell::Misplaced(number)),
-            (None, Some(number)) => number,
-            (None, None) => return Err(not_a),
-        },
-        [number] => number.clone(),
-        [_, _, ..] => return Err(CellFaultKind::SeveralIdentities { what: "EC numbers" }),
-    };
-    EcNumber::parse(&number).map(EcCell::Number).map_err(|error| match error {
-        EcError::Form => not_a,
-        EcError::NoSuchNumber => CellFaultKind::NoSuchEcNumber,
-        EcError::CheckDigit { expected } => CellFaultKind::CheckDigit {
-            what: EC_NUMBER,
-            expected,
-            corrected: with_last_digit(&number, expected),
-        },
-    })
-}
-
-/// A number whose hyphens are lost, as 2000243.
-fn ec_from_digits(text: &str) -> Option<String> {
-    let only_digits = text.len() == 7 && text.bytes().all(|byte| byte.is_ascii_digit());
-    let (first, rest) = text.split_at_checked(3).filter(|_| only_digits)?;
-    let (second, check) = rest.split_at_checked(3)?;
-    Some(format!("{first}-{second}-{check}"))
-}
-
-/// A SMILES by its characters only; whether it is a molecule is for the structure to find.
-pub(super) fn read_smiles(content: &CellContent) -> Result<Option<String>, CellFaultKind> {
-    let Some(text) = cell::text_of(content) else {
-        return Ok(None);
-    };
-    if is_missing(&tidy(&text)) {
-        return Ok(None);
-    }
-    if looks_like_smiles(&text) {
-        Ok(Some(text))
-    } else {
-        Err(CellFaultKind::NotA { what: "SMILES", example: "CCO" })
-    }
-}
-
-fn looks_like_smiles(text: &str) -> bool {
-    const BONDS_AND_RINGS: &str = "-=#$:/\\.%()+@*~0123456789";
-    let mut in_bracket = false;
-    let mut before = ' ';
-    for character in text.chars() {
-        let belongs = match character {
-            '[' => !std::mem::replace(&mut in_bracket, true),
-            ']' => std::mem::replace(&mut in_bracket, false),
-            _ if in_bracket => character.is_ascii_graphic(),
-            'l' => before == 'C',
-            'r' => before == 'B',
-            'B' | 'C' | 'N' | 'O' | 'P' | 'S' | 'F' | 'I' | 'b' | 'c' | 'n' | 'o' | 'p' | 's' => true,
-            _ => BONDS_AND_RINGS.contains(character),
-        };
-        if !belongs {
-            return false;
-        }
-        before = character;
-    }
-    // Aromatic atoms make rings, and a ring has its number: `no` and `con` are words.
-    let without_halogens = text.replace("Cl", "").replace("Br", "");
-    let aromatic = without_halogens.contains(|letter: char| letter.is_ascii_lowercase());
-    let has_digit = text.contains(|character: char| character.is_ascii_digit());
-    let is_word = !text.contains('[') && ((aromatic && !has_digit) || WORDS.contains(&text));
-    !in_bracket && !is_word && text.contains(|character: char| character.is_ascii_alphabetic())
-}
-
-/// Words in capitals that could be read as a structure.
-const WORDS: [&str; 6] = ["NO", "ON", "IN", "SO", "NON", "SI"];
-
-pub(super) fn read_inchi_key(content: &CellContent) -> Result<Option<String>, CellFaultKind> {
-    let Some(text) = cell::value_text(content) else {
-        return Ok(None);
-    };
-    let key = INCHI_KEY.captures(&text).and_then(|found| Some(found.get(1)?.as_str().to_uppercase()));
-    let not_a = CellFaultKind::NotA { what: "InChI key", example: "LFQSCWFLJHTTHZ-UHFFFAOYSA-N" };
-    key.map(Some).ok_or(not_a)
 }
 
 /// A name or formula as written. `Na`, `Nb` and `Nd` are elements and no words for missing.

@@ -6,7 +6,7 @@ use regex::Regex;
 
 use super::cell::value_text;
 use super::degradability::{
-    INHERENT, NEGATIVE, POSITIVE, Read, bare_number, days_in, percentage_of_number, percentages,
+    Read, bare_number, days_in, percentage_of_number, percentages, says_inherent, says_ready_or_not,
 };
 use super::pattern::fixed;
 use super::remark::Said;
@@ -63,7 +63,7 @@ pub(super) fn read_inherent(content: &CellContent, decimal: DecimalStyle) -> Rea
             .min_by(|one, other| lowest(*one).total_cmp(&lowest(*other))),
     };
     let guideline = inherent_guideline(&plain);
-    let in_words = INHERENT.is_match(&plain) || POSITIVE.is_match(&plain) || NEGATIVE.is_match(&plain);
+    let in_words = says_inherent(&text) || says_ready_or_not(&text);
     if degraded.is_none() && guideline.is_none() && !in_words {
         return Err(not_a);
     }
