@@ -5,11 +5,22 @@
 
 mod choice;
 mod decimals;
+mod doubled;
+mod folding;
 mod header;
+mod header_cell;
 mod header_row;
+mod hints;
+mod logarithms;
+mod misspelt;
+mod phrase;
 mod reading;
 mod second_header;
+mod stack;
+mod taken;
 mod words;
+
+use std::collections::{BTreeMap, BTreeSet};
 
 pub use second_header::HeaderAgain;
 use second_header::HeaderWatch;
@@ -19,7 +30,7 @@ pub use words::{BUILT_IN_COLUMN_WORDS, ColumnWords};
 use crate::quantity::{DecimalStyle, Unit};
 use crate::substance::{Basis, Conditions, Field, Property};
 use crate::workbook::Row;
-use header::header_words;
+use folding::header_words;
 
 /// A column whose meaning was recognised.
 #[derive(Debug, Clone, PartialEq)]
@@ -48,7 +59,9 @@ pub struct Column {
 /// The header of a sheet and what its columns hold.
 #[derive(Debug, Clone, PartialEq)]
 pub struct Recognised {
-    /// The row of the header, counted from 0: the row our own headers go in (the lower one of two).
+    /// The first row of the header, counted from 0: above `header_row` where several rows were read together.
+    pub header_top: u32,
+    /// The row of the header, counted from 0: the row our own headers go in (the lowest of several).
     pub header_row: u32,
     /// The first row of data.
     pub first_data_row: u32,
@@ -56,8 +69,12 @@ pub struct Recognised {
     pub columns: Vec<Column>,
     /// The other columns with a header: index and header.
     pub unknown: Vec<(u16, String)>,
+    /// Of some of these, why they are not taken or which field they nearly name, in words.
+    pub not_taken: BTreeMap<u16, String>,
     /// Doubled and doubtful columns and what to do about them, in words.
     pub remarks: Vec<String>,
+    /// Every way in which the user may write a header.
+    names: Vec<String>,
     /// Knows a header further down when it comes.
     watch: HeaderWatch,
 }
@@ -71,7 +88,7 @@ impl Recognised {
 
     /// Whether there is a column of which the user speaks.
     pub fn has_column_of(&self, told: &ColumnOverride) -> bool {
-        self.headers().any(|header| told.is_for(header) || header_row::is_for_name(told, header))
+        self.names.iter().any(|name| told.is_for(name) || header_cell::is_for_name(told, name))
     }
 }
 
@@ -120,6 +137,12 @@ pub fn recognise(
 ) -> Option<Recognised> {
     let found = header_row::find(first_rows, words, overrides)?;
     let header_row = found.row;
+    let told: BTreeSet<u16> = found
+        .cells
+        .iter()
+        .filter(|cell| matches!(cell.meaning, header_cell::Meaning::Told(_)))
+        .map(|cell| cell.column)
+        .collect();
     let mut recognised = choice::choose(sheet, found, words);
     let data: Vec<&Row> = first_rows
         .iter()
@@ -127,5 +150,10 @@ pub fn recognise(
         .take_while(|row| recognised.header_again(row, words) != HeaderAgain::Other)
         .collect();
     decimals::set_styles(sheet, &mut recognised, &data);
+    logarithms::leave_doubtful_aside(sheet, &mut recognised, &data, &told);
     Some(recognised)
+}
+
+fn one_line(text: &str) -> String {
+    text.split_whitespace().collect::<Vec<_>>().join(" ")
 }
