@@ -2,14 +2,16 @@
 
 use std::collections::BTreeSet;
 
-use kowledger::columns::{Column, ColumnOverride, ColumnWords, Recognised, recognise};
+use kowledger::columns::{Column, ColumnOverride, Recognised, recognise};
 use kowledger::quantity::{DecimalStyle, Unit};
 use kowledger::substance::{Basis, Field, Property};
 use kowledger::workbook::{CellContent, Row};
 
-use crate::sheet::{columns_of, content_row, text_row};
+use crate::sheet::{columns_of, content_row, text_row, words};
 
 const TABLE: &str = include_str!("../fixtures/headers.tsv");
+
+const LANGUAGES: [&str; 8] = ["en", "de", "fr", "es", "it", "nl", "ja", "zh"];
 
 /// Language, header, field and unit of each line of the table.
 fn table() -> impl Iterator<Item = (&'static str, String, &'static str, &'static str)> {
@@ -39,8 +41,8 @@ fn every_header_of_the_table_names_its_field_and_unit() {
 }
 
 #[test]
-fn every_field_is_named_in_both_languages() {
-    for language in ["en", "de"] {
+fn every_field_is_named_in_all_eight_languages() {
+    for language in LANGUAGES {
         let named: BTreeSet<&str> =
             table().filter(|(of, ..)| *of == language).map(|(_, _, field, _)| field).collect();
         let missing: Vec<&str> = Field::all().map(Field::id).filter(|id| !named.contains(id)).collect();
@@ -200,8 +202,7 @@ fn numbers_that_could_group_thousands_are_remarked_on() {
 fn recognised_with(headers: &[&str], overrides: &[&str]) -> Result<Recognised, String> {
     let overrides =
         overrides.iter().map(|text| ColumnOverride::parse(text)).collect::<Result<Vec<_>, _>>()?;
-    recognise("Sheet", &[text_row(0, headers)], &ColumnWords::built_in()?, &overrides)
-        .ok_or_else(|| "no inventory".to_owned())
+    recognise("Sheet", &[text_row(0, headers)], words()?, &overrides).ok_or_else(|| "no inventory".to_owned())
 }
 
 #[test]
