@@ -154,6 +154,31 @@ pub enum CellFaultKind {
         /// The part, for example `350`.
         part: String,
     },
+    /// A number too large to be the logarithm that is asked for.
+    NotALogarithm {
+        /// The field's title.
+        what: &'static str,
+        /// How to write the value itself, for example `Kow = 50000`.
+        example: &'static str,
+    },
+    /// A negative number where its logarithm may have been written.
+    MayBeLogarithm {
+        /// The field's title.
+        what: &'static str,
+        /// How to write the logarithm, for example `log BCF = 3.2`.
+        example: &'static str,
+    },
+    /// A small number said to be a value where its logarithm is asked for.
+    LogarithmOrNot {
+        /// The field's title.
+        what: &'static str,
+        /// How to write the logarithm, for example `log Kow = 4.5`.
+        example: &'static str,
+    },
+    /// `j` without a word that tells whether days or years are meant.
+    DaysOrYears,
+    /// Henry's law constant without a unit, which stands for a ratio of concentrations.
+    DimensionlessHenry,
 }
 
 impl fmt::Display for CellFault {
@@ -190,7 +215,8 @@ impl fmt::Display for CellFaultKind {
             ),
             Self::SeveralValues { what } => write!(
                 formatter,
-                "holds more than one value of {what}; write one, a range such as `3–5`, or use a column for each"
+                "holds more than one value of {what} and cannot be taken apart; write one, a range such as `3–5`, or \
+                 whole values with semicolons between, and remarks in brackets"
             ),
             Self::UnknownUnit { word, nearest: Some(unit), .. } => {
                 write!(formatter, "has the unknown unit `{word}`; did you mean `{unit}`?")
@@ -199,6 +225,12 @@ impl fmt::Display for CellFaultKind {
                 formatter,
                 "has the unknown unit `{word}`; write, for example, `{example}`, and remarks in brackets"
             ),
+            Self::WrongUnit { unit, what, example } if unit.symbol().is_empty() => {
+                write!(
+                    formatter,
+                    "is said to have no unit, but {what} has one; write, for example, `{example}`"
+                )
+            }
             Self::WrongUnit { unit, what, example } => write!(
                 formatter,
                 "is in {}, which does not measure {what}; write, for example, `{example}`",
@@ -314,6 +346,30 @@ impl fmt::Display for CellFaultKind {
                 formatter,
                 "holds `{part}`, which may be a hazard statement and was not read; write each code in full, for example \
                  `H302; H350`"
+            ),
+            Self::NotALogarithm { what, example } => write!(
+                formatter,
+                "is far outside what {what} can be as a logarithm; if it is the value itself, write it with its name, for \
+                 example `{example}`"
+            ),
+            Self::MayBeLogarithm { what, example } => write!(
+                formatter,
+                "is negative, which {what} cannot be; if it is a logarithm, write, for example, `{example}`, else check \
+                 the sign"
+            ),
+            Self::LogarithmOrNot { what, example } => write!(
+                formatter,
+                "may be a value of {what} or its logarithm; write `{example}` for the logarithm, and the value in a column \
+                 without `log` in its header"
+            ),
+            Self::DaysOrYears => write!(
+                formatter,
+                "may be in days or in years, since `j` stands for both; write `d` or `a`, for example `40 d`"
+            ),
+            Self::DimensionlessHenry => write!(
+                formatter,
+                "has no unit; as a ratio of concentrations it depends on a temperature that is not certain: write it in \
+                 Pa m3/mol, for example `1.5 Pa m3/mol`"
             ),
         }
     }

@@ -12,7 +12,7 @@ use super::pattern::fixed;
 use super::remark::Said;
 use crate::fault::CellFaultKind;
 use crate::quantity::{
-    Comparison, DecimalStyle, Dimension, Interval, Outcome, ReadAs, Unit, parse_quantity, plain_words,
+    Comparison, DecimalStyle, Dimension, Interval, Outcome, ReadAs, Scale, Unit, parse_quantity, plain_words,
 };
 use crate::substance::{Basis, DegradationTest, ReadyBiodegradability};
 use crate::workbook::CellContent;
@@ -234,7 +234,13 @@ pub(super) fn percentage_of_number(number: f64) -> Result<Interval, CellFaultKin
 }
 
 const fn percent(decimal: DecimalStyle) -> ReadAs {
-    ReadAs { dimension: Dimension::Percent, default_unit: Unit::Percent, decimal, molar_mass: None }
+    ReadAs {
+        dimension: Dimension::Percent,
+        default_unit: Unit::Percent,
+        decimal,
+        scale: Scale::Linear,
+        molar_mass: None,
+    }
 }
 
 pub(super) fn bare_number(text: &str, decimal: DecimalStyle) -> Option<f64> {
