@@ -33,7 +33,8 @@ pub(super) fn joined(words: &[String]) -> String {
     let mut text = String::new();
     for word in words {
         let after_sign = text.chars().next_back().is_some_and(is_sign);
-        if !text.is_empty() && !(after_sign && word.starts_with(is_sign)) {
+        let is_joined = text.is_empty() || (after_sign && word.starts_with(is_sign));
+        if !is_joined {
             text.push(' ');
         }
         text.push_str(word);
@@ -46,13 +47,14 @@ pub(super) fn is_sign(character: char) -> bool {
     matches!(character, '\u{3005}'..='\u{3007}' | '\u{3040}'..='\u{30FF}' | '\u{3400}'..='\u{9FFF}' | '\u{F900}'..='\u{FAFF}' | '\u{20000}'..='\u{2FA1F}')
 }
 
-/// Half-width kana, signs copied from PDF files as radicals, and units written as one sign (`㎎`) in their usual form.
+/// `N°` as `No`; half-width kana, signs copied from PDF files as radicals, and units written as one sign (`㎎`) in their usual form.
 pub(super) fn composed(text: &str) -> String {
     let is_other_form = |character: char| matches!(character, '\u{2E80}'..='\u{2FDF}' | '\u{3099}' | '\u{309A}' | '\u{3300}'..='\u{33FF}' | '\u{F900}'..='\u{FAFF}' | '\u{FF61}'..='\u{FF9F}');
-    if !text.contains(is_other_form) {
-        return text.to_owned();
-    }
-    text.nfkc().collect()
+    let numero = text.replace(['º', '˚'], "°");
+    let numero = ["N.°", "n.°", "N°", "n°", "№"]
+        .iter()
+        .fold(numero, |text, sign| if text.contains(sign) { text.replace(sign, "No ") } else { text });
+    if numero.contains(is_other_form) { numero.nfkc().collect() } else { numero }
 }
 
 /// `WaterSolubility` is two words; `pKa` and `mmHg` are one.

@@ -3,7 +3,7 @@
 use super::folding::{composed, header_words, is_sign, shown_words};
 use super::reading::{Brackets, NamesValue, Reading};
 use super::words::ColumnWords;
-use crate::quantity::{Dimension, Unit, parse_unit, tidy};
+use crate::quantity::{Dimension, Unit, parse_unit, parse_unit_of, tidy};
 use crate::substance::{Field, Property};
 
 /// The longest text, in characters, that is taken for a header.
@@ -35,8 +35,8 @@ impl Header {
         if text.chars().count() > LONGEST_HEADER {
             return None;
         }
-        let whole = composed(text).replace("(E)C", "C").replace("(e)c", "c");
-        let (plain, brackets) = part_brackets(&tidy(&whole));
+        let whole = tidy(&composed(text)).replace("(E)C", "C").replace("(e)c", "c");
+        let (plain, brackets) = part_brackets(&whole);
         let (plain, brackets) = if header_words(&plain).is_empty() {
             (brackets.join(" "), Vec::new())
         } else {
@@ -83,7 +83,7 @@ impl Header {
             .brackets
             .iter()
             .flat_map(|bracket| bracket.split([',', ';']).chain([bracket.as_str()]))
-            .filter_map(|part| parse_unit(without_preposition(part)));
+            .filter_map(|part| parse_unit_of(without_preposition(part), dimension));
         let after_signs = self.plain.rfind(is_sign).and_then(|place| {
             self.plain
                 .get(place..)?
@@ -93,10 +93,10 @@ impl Header {
         });
         let words: Vec<&str> =
             after_signs.map_or(self.plain.as_str(), str::trim).split_whitespace().collect();
-        let after_signs = after_signs.and_then(|end| parse_unit(without_preposition(end)));
-        let at_end = (1..words.len().min(5)).rev().filter_map(|length| {
+        let after_signs = after_signs.and_then(|end| parse_unit_of(without_preposition(end), dimension));
+        let at_end = (1..=words.len().min(4)).rev().filter_map(|length| {
             let end = words.get(words.len() - length..)?.join(" ");
-            parse_unit(without_preposition(end.trim_start_matches([',', '/', '-', ' '])))
+            parse_unit_of(without_preposition(end.trim_start_matches([',', '/', '-', ' '])), dimension)
         });
         in_brackets.chain(after_signs).chain(at_end).find(measures)
     }

@@ -210,11 +210,10 @@ fn decide(own: Option<Field>, joined: Option<Field>, extent: Extent, groups: &[&
         (None, _) => Decision::Joined,
         (Some(own), None) if is_value(own) => Decision::NotInGroup(own),
         (Some(_), None) => Decision::Own,
+        // What the file does not show makes nothing measured.
         (Some(own), Some(joined)) if own == joined => match extent {
-            Extent::Shown => Decision::Joined,
-            // What the file does not show makes nothing measured.
             Extent::Assumed if says_measured() => Decision::Own,
-            Extent::Assumed => Decision::Joined,
+            Extent::Assumed | Extent::Shown => Decision::Joined,
         },
         (Some(own), Some(joined)) if own.property().is_some() && joined.property().is_some() => {
             if is_half_life(own) && is_half_life(joined) {
@@ -224,6 +223,8 @@ fn decide(own: Option<Field>, joined: Option<Field>, extent: Extent, groups: &[&
             }
         }
         (Some(own), Some(_)) if own.property().is_some() => Decision::Joined,
+        // `Supplier` under `log Kow` is a supplier.
+        (Some(_), Some(joined)) if is_value(joined) => Decision::Own,
         (Some(_), Some(_)) => match extent {
             Extent::Shown => Decision::Joined,
             Extent::Assumed => Decision::Own,

@@ -102,7 +102,8 @@ impl<'sheet> Reader<'sheet> {
         if is_inventory(&cells) {
             return Some((rank(&cells), alone));
         }
-        if cells.is_empty() || !self.is_below(alone) {
+        let (upper, lower) = (self.rows.get(place)?, self.rows.get(place + 1)?);
+        if cells.is_empty() || is_title(upper, lower) || !self.is_below(alone) {
             return None;
         }
         let both = Block { first: place, last: place + 1 };
@@ -202,12 +203,15 @@ impl<'sheet> Reader<'sheet> {
             return false;
         }
         let texts = texts_of(upper);
-        let first_below = texts_of(lower).first().map(|(column, _)| *column);
-        // A single text at the left is a title.
-        let is_title = texts.len() < 2 && texts.first().map(|(column, _)| *column) <= first_below;
         let groups = texts.iter().filter(|(_, text)| is_group_text(text, self.words)).count();
-        !is_title && groups > 0 && groups * 2 >= texts.len()
+        !is_title(upper, lower) && groups > 0 && groups * 2 >= texts.len()
     }
+}
+
+/// A single text at the left above a row is its title.
+fn is_title(upper: &Row, lower: &Row) -> bool {
+    let first = |row: &Row| texts_of(row).first().map(|(column, _)| *column);
+    texts_of(upper).len() < 2 && first(upper) <= first(lower)
 }
 
 /// Whether words in a column of this field are no data.

@@ -6,6 +6,7 @@ use super::misspelt::nearly_named;
 use super::one_line;
 use super::reading::Reading;
 use super::words::ColumnWords;
+use crate::substance::Field;
 use crate::workbook::column_letters;
 
 /// What is said of a column that is not taken.
@@ -45,17 +46,17 @@ pub(super) fn hint(sheet: &str, cell: &HeaderCell, words: &ColumnWords) -> Hint 
             short: Some("left aside because of the row above".to_owned()),
         };
     }
-    if let Some(doubt) = doubt(header, words) {
+    let nearly = nearly_named(header, words);
+    if let Some(doubt) = doubt(header, words).filter(|_| nearly.is_none()) {
         let fields: Vec<String> = doubt.fields.iter().map(|field| told(field)).collect();
         return Hint {
             remark: Some(format!("{place} {}: {}", doubt.why, fields.join(" or "))),
             short: Some(doubt.short.to_owned()),
         };
     }
-    let Some(field) = nearly_named(header, words) else {
+    let Some(id) = nearly.map(Field::id) else {
         return Hint::default();
     };
-    let id = field.id();
     Hint {
         remark: Some(format!("{place} is not recognised; if it is {id}: {}", told(id))),
         short: Some(format!("not recognised; nearest field: {id}")),
@@ -75,7 +76,7 @@ fn doubt(header: &Header, words: &ColumnWords) -> Option<Doubt> {
         return doubt(why, "acid or base not said", &["pka-acid", "pka-base"]);
     }
     if speaks_of("half-life") {
-        return half_life_doubt(speaks_of);
+        return Some(half_life_doubt(speaks_of));
     }
     if speaks_of("kow") {
         let why = "does not say whether it holds the logarithm; if it does";
@@ -101,7 +102,7 @@ fn doubt(header: &Header, words: &ColumnWords) -> Option<Doubt> {
     None
 }
 
-fn half_life_doubt(speaks_of: impl Fn(&str) -> bool) -> Option<Doubt> {
+fn half_life_doubt(speaks_of: impl Fn(&str) -> bool) -> Doubt {
     let compartments = ["water", "sediment", "soil", "air", "fresh", "marine"];
     let named = compartments.iter().filter(|compartment| speaks_of(compartment)).count();
     let (why, short, fields): (_, _, &[&str]) = if speaks_of("water-and-sediment") {
@@ -109,6 +110,12 @@ fn half_life_doubt(speaks_of: impl Fn(&str) -> bool) -> Option<Doubt> {
             "names water and sediment together, so it is left aside; if it is one of them",
             "water or sediment not said",
             &["half-life-water", "half-life-sediment"],
+        )
+    } else if named == 0 && speaks_of("lake-or-sea") {
+        (
+            "says `meer`, a lake in Dutch and the sea in German, so it is left aside; if it is one of them",
+            "lake or sea not said",
+            &["half-life-fresh-water", "half-life-marine-water"],
         )
     } else if named > 1 {
         (
@@ -123,5 +130,5 @@ fn half_life_doubt(speaks_of: impl Fn(&str) -> bool) -> Option<Doubt> {
             &["half-life-soil"],
         )
     };
-    Some(Doubt { why: why.to_owned(), short, fields })
+    Doubt { why: why.to_owned(), short, fields }
 }

@@ -81,10 +81,14 @@ fn close(word: &str, known: &str) -> Option<usize> {
         8..=13 => 2,
         _ => 3,
     };
-    if word == known || word.len().abs_diff(known.len()) > most {
+    // The first letter is seldom wrong, and of a long word either the first or the last is right.
+    let (word_letters, known_letters) = (word.as_bytes(), known.as_bytes());
+    let same_start = word_letters.first() == known_letters.first();
+    let same_end = word_letters.last() == known_letters.last();
+    let may_be = same_start || (known.len() > 5 && same_end);
+    if word == known || !may_be || word.len().abs_diff(known.len()) > most {
         return None;
     }
-    let same_start = word.as_bytes().first() == known.as_bytes().first();
     let edits = edits(word, known);
-    (edits <= most && (same_start || known.len() > 5)).then_some(edits)
+    (edits <= most).then_some(edits)
 }

@@ -142,20 +142,23 @@ impl PhraseIndex {
     }
 }
 
-/// In a script without spaces, a phrase within a longer one is another word: `水` in `加水分解` is no water.
-fn without_parts_of_longer_ones(spans: Vec<Span>, words: &[String]) -> Vec<Span> {
-    let of_signs = |span: &Span| {
-        words
-            .get(span.start..span.start + span.length)
-            .is_some_and(|words| words.iter().all(|word| word.starts_with(is_sign)))
-    };
-    let within = |inner: &Span, outer: &Span| {
-        outer.start <= inner.start
-            && inner.start + inner.length <= outer.start + outer.length
-            && inner.length < outer.length
-    };
-    let kept = |span: &&Span| !of_signs(span) || !spans.iter().any(|other| within(span, other));
-    spans.iter().filter(kept).copied().collect()
+/// In a script without spaces, a phrase that begins within a longer one is no word: `水` in `加水分解` is no water. Read
+/// from the left, the longest phrase at each place counts.
+fn without_parts_of_longer_ones(mut spans: Vec<Span>, words: &[String]) -> Vec<Span> {
+    let mut end = 0;
+    let mut longest = None;
+    spans.sort_by_key(|span| (span.start, std::cmp::Reverse(span.length)));
+    spans.retain(|span| {
+        if !words.get(span.start).is_some_and(|word| word.starts_with(is_sign)) {
+            return true;
+        }
+        if span.start >= end {
+            end = span.start + span.length;
+            longest = Some(*span);
+        }
+        longest.is_some_and(|longest| (longest.start, longest.length) == (span.start, span.length))
+    });
+    spans
 }
 
 #[cfg(test)]

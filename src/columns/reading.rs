@@ -71,7 +71,7 @@ impl Reading {
             words().filter(|(place, word)| is_unknown(place, word)).map(|(_, word)| word.len()).sum();
         let understood: usize =
             words().filter(|(place, _)| covered.contains(place)).map(|(_, word)| word.len()).sum();
-        let mostly_unknown = unknown > understood;
+        let mostly_unknown = unknown > 0 && unknown >= understood;
         let wholly_known = unknown == 0;
         Self { main, everywhere, covered, mostly_unknown, wholly_known, value, spans, bracket_spans }
     }
