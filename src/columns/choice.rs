@@ -69,6 +69,7 @@ pub(super) fn choose(sheet: &str, found: Found, words: &ColumnWords) -> Recognis
         unknown,
         not_taken,
         remarks,
+        sheet: sheet.to_owned(),
         names,
         watch: found.watch,
     }

@@ -4,6 +4,7 @@ use std::collections::BTreeSet;
 
 use super::header_cell::HeaderCell;
 use super::one_line;
+use super::overrides::place_of;
 use crate::substance::Field;
 use crate::workbook::column_letters;
 
@@ -35,7 +36,8 @@ pub(super) fn may_be_doubled(field: Field) -> bool {
 
 pub(super) fn both_read_remark(sheet: &str, field: Field, first: (u16, &str), second: &HeaderCell) -> String {
     let way_out = if first.1 == second.text {
-        "rename one of them to take one alone".to_owned()
+        let (first, second) = (place_of(sheet, first.0), place_of(sheet, second.column));
+        format!("to take one alone: --column '{first}=ignore' or --column '{second}=ignore'")
     } else {
         let (first, second) = (one_line(first.1), one_line(&second.text));
         format!("to take one alone: --column '{first}=ignore' or --column '{second}=ignore'")
@@ -54,10 +56,7 @@ pub(super) fn both_read_remark(sheet: &str, field: Field, first: (u16, &str), se
 pub(super) fn doubled_remark(sheet: &str, field: Field, first: (u16, &str), second: &HeaderCell) -> String {
     let id = field.id();
     let way_out = if first.1 == second.text {
-        format!(
-            "rename one of them to choose the other, or leave both aside with --column '{}=ignore'",
-            second.text
-        )
+        format!("to take the other: --column '{}=ignore'", place_of(sheet, first.0))
     } else {
         format!("to take the other: --column '{}=ignore' --column '{}={id}'", first.1, second.text)
     };

@@ -108,7 +108,8 @@ impl HeaderCell {
 
     /// Whether the user speaks of this column.
     pub(super) fn is_spoken_of(&self, told: &ColumnOverride) -> bool {
-        told.is_for(&self.text)
+        told.is_for_column(self.column)
+            || told.is_for(&self.text)
             || is_for_name(told, &self.text)
             || self.names.iter().any(|name| told.is_for(name))
     }

@@ -72,7 +72,7 @@ pub(super) fn find(first_rows: &[Row], words: &ColumnWords, overrides: &[ColumnO
     Some(Found {
         top,
         row,
-        cells: reader.cells(block),
+        cells: reader.with_nameless(reader.cells(block)),
         others_above,
         watch: HeaderWatch::new(&rows, overrides),
     })
@@ -92,6 +92,19 @@ impl<'sheet> Reader<'sheet> {
                 .map(|column| HeaderCell::stacked(column, self.words, self.overrides))
                 .collect(),
         }
+    }
+
+    /// Columns without a header that the user names by their letter.
+    fn with_nameless(self, mut cells: Vec<HeaderCell>) -> Vec<HeaderCell> {
+        for column in self.overrides.iter().filter_map(ColumnOverride::column) {
+            let filled = |row: &Row| row.cell(column).is_some_and(|cell| cell.content != CellContent::Empty);
+            if cells.iter().all(|cell| cell.column != column) && self.rows.iter().any(filled) {
+                let name = "(no header)".to_owned();
+                cells.push(HeaderCell::alone(column, name, self.words, self.overrides));
+            }
+        }
+        cells.sort_by_key(|cell| cell.column);
+        cells
     }
 
     /// The header of an inventory at a place, in one row or two, with its rank.

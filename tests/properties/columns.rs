@@ -255,7 +255,8 @@ fn numbers_that_could_group_thousands_are_remarked_on() {
 fn recognised_with(headers: &[&str], overrides: &[&str]) -> Result<Recognised, String> {
     let overrides =
         overrides.iter().map(|text| ColumnOverride::parse(text)).collect::<Result<Vec<_>, _>>()?;
-    recognise("Sheet", &[text_row(0, headers)], words()?, &overrides).ok_or_else(|| "no inventory".to_owned())
+    let rows = [text_row(0, headers), text_row(1, &vec!["x"; headers.len()])];
+    recognise("Sheet", &rows, words()?, &overrides).ok_or_else(|| "no inventory".to_owned())
 }
 
 #[test]
@@ -266,6 +267,29 @@ fn the_user_can_name_a_column_or_leave_it_aside() {
     assert_eq!(fields, ["cas-number", "log-kow"]);
     assert_eq!(recognised.unknown, [(2, "log Kow".to_owned())]);
     assert_eq!(recognised.columns[1].reason, "told by --column");
+}
+
+#[test]
+fn the_user_can_name_a_column_by_its_letter_with_or_without_a_header() {
+    let headers = ["CAS", "SMILES", "SMILES", "", "H:H"];
+    let doubled = recognised_with(&headers, &[]).unwrap();
+    assert_eq!(
+        doubled.remarks,
+        [
+            "Sheet: columns B (`SMILES`) and C (`SMILES`) both name smiles; B is taken; to take the other: --column \
+             'Sheet!B:B=ignore'"
+        ]
+    );
+    let told = ["Sheet!B:B=ignore", "D:D=bcf", "Other!A:A=ignore"];
+    let recognised = recognised_with(&headers, &told).unwrap();
+    let columns: Vec<(u16, &str)> =
+        recognised.columns.iter().map(|column| (column.index, column.field.id())).collect();
+    assert_eq!(columns, [(0, "cas-number"), (2, "smiles"), (3, "bcf")]);
+    assert_eq!(recognised.columns[2].header, "(no header)");
+    let has = |text: &str| recognised.has_column_of(&ColumnOverride::parse(text).unwrap());
+    assert!(has("C:C=bcf") && !has("F:F=bcf") && !has("Other!A:A=ignore"));
+    // A header that is written like a column is still one.
+    assert!(has("H:H=bcf"));
 }
 
 #[test]
