@@ -5,12 +5,25 @@
 
 mod choice;
 mod decimals;
+mod doubled;
+mod folding;
 mod header;
+mod header_cell;
 mod header_row;
+mod hints;
+mod logarithms;
+mod misspelt;
+mod overrides;
+mod phrase;
 mod reading;
 mod second_header;
+mod stack;
+mod taken;
 mod words;
 
+use std::collections::{BTreeMap, BTreeSet};
+
+pub use overrides::ColumnOverride;
 pub use second_header::HeaderAgain;
 use second_header::HeaderWatch;
 pub(crate) use second_header::second_header_fault;
@@ -19,7 +32,6 @@ pub use words::{BUILT_IN_COLUMN_WORDS, ColumnWords};
 use crate::quantity::{DecimalStyle, Unit};
 use crate::substance::{Basis, Conditions, Field, Property};
 use crate::workbook::Row;
-use header::header_words;
 
 /// A column whose meaning was recognised.
 #[derive(Debug, Clone, PartialEq)]
@@ -48,7 +60,9 @@ pub struct Column {
 /// The header of a sheet and what its columns hold.
 #[derive(Debug, Clone, PartialEq)]
 pub struct Recognised {
-    /// The row of the header, counted from 0: the row our own headers go in (the lower one of two).
+    /// The first row of the header, counted from 0: above `header_row` where several rows were read together.
+    pub header_top: u32,
+    /// The row of the header, counted from 0: the row our own headers go in (the lowest of several).
     pub header_row: u32,
     /// The first row of data.
     pub first_data_row: u32,
@@ -56,8 +70,14 @@ pub struct Recognised {
     pub columns: Vec<Column>,
     /// The other columns with a header: index and header.
     pub unknown: Vec<(u16, String)>,
+    /// Of some of these, why they are not taken or which field they nearly name, in words.
+    pub not_taken: BTreeMap<u16, String>,
     /// Doubled and doubtful columns and what to do about them, in words.
     pub remarks: Vec<String>,
+    /// The sheet's name.
+    sheet: String,
+    /// Every way in which the user may write a header.
+    names: Vec<String>,
     /// Knows a header further down when it comes.
     watch: HeaderWatch,
 }
@@ -71,39 +91,11 @@ impl Recognised {
 
     /// Whether there is a column of which the user speaks.
     pub fn has_column_of(&self, told: &ColumnOverride) -> bool {
-        self.headers().any(|header| told.is_for(header) || header_row::is_for_name(told, header))
-    }
-}
-
-/// `--column 'Header=field'`.
-#[derive(Debug, Clone, PartialEq, Eq)]
-pub struct ColumnOverride {
-    /// The header as written, compared after folding.
-    pub header: String,
-    /// The field; `None` leaves the column aside (`--column 'Header=ignore'`).
-    pub field: Option<Field>,
-}
-
-impl ColumnOverride {
-    /// Reads `Header=field` or `Header=ignore`; what is wrong with it in words.
-    pub fn parse(text: &str) -> Result<Self, String> {
-        let example = "write --column 'Header=field', for example --column 'Stoff=name', or 'Header=ignore'";
-        let (header, field) =
-            text.rsplit_once('=').ok_or_else(|| format!("`{text}` names no field; {example}"))?;
-        if header_words(header).is_empty() {
-            return Err(format!("`{text}` names no header; {example}"));
-        }
-        let id = field.trim();
-        let field = match id {
-            "ignore" => None,
-            _ => Some(Field::from_id(id).ok_or_else(|| words::unknown_field(id))?),
-        };
-        Ok(Self { header: header.trim().to_owned(), field })
-    }
-
-    /// Whether this speaks of a header.
-    pub fn is_for(&self, header: &str) -> bool {
-        header_words(&self.header) == header_words(header)
+        let columns = self.columns.iter().map(|column| column.index);
+        let mut columns = columns.chain(self.unknown.iter().map(|(index, _)| *index));
+        let named =
+            || self.names.iter().any(|name| told.is_for(name) || header_cell::is_for_name(told, name));
+        told.is_for_sheet(&self.sheet) && (columns.any(|column| told.is_for_column(column)) || named())
     }
 }
 
@@ -118,8 +110,16 @@ pub fn recognise(
     words: &ColumnWords,
     overrides: &[ColumnOverride],
 ) -> Option<Recognised> {
-    let found = header_row::find(first_rows, words, overrides)?;
+    let overrides: Vec<ColumnOverride> =
+        overrides.iter().filter(|told| told.is_for_sheet(sheet)).cloned().collect();
+    let found = header_row::find(first_rows, words, &overrides)?;
     let header_row = found.row;
+    let told: BTreeSet<u16> = found
+        .cells
+        .iter()
+        .filter(|cell| matches!(cell.meaning, header_cell::Meaning::Told(_)))
+        .map(|cell| cell.column)
+        .collect();
     let mut recognised = choice::choose(sheet, found, words);
     let data: Vec<&Row> = first_rows
         .iter()
@@ -127,5 +127,10 @@ pub fn recognise(
         .take_while(|row| recognised.header_again(row, words) != HeaderAgain::Other)
         .collect();
     decimals::set_styles(sheet, &mut recognised, &data);
+    logarithms::leave_doubtful_aside(sheet, &mut recognised, &data, &told);
     Some(recognised)
+}
+
+fn one_line(text: &str) -> String {
+    text.split_whitespace().collect::<Vec<_>>().join(" ")
 }

@@ -9,7 +9,7 @@ use std::collections::BTreeMap;
 
 pub use gather::gather_evidence;
 
-use crate::quantity::Interval;
+use crate::quantity::{Interval, Unit};
 use crate::substance::{Basis, Conditions, Property};
 use crate::workbook::CellRef;
 
@@ -73,6 +73,8 @@ pub struct Evidence {
     pub conditions: Conditions,
     /// The text of the cell; for an estimate, empty.
     pub reported: String,
+    /// The unit in which the cell writes it; for an estimate, that of the interval.
+    pub unit: Unit,
     /// The interval was opened upward because the substance was partly ionised when log Kow was measured.
     pub lower_bound_by_ionisation: Option<f64>,
 }

@@ -40,6 +40,11 @@ pub fn nearest<'word>(unknown: &str, known: impl IntoIterator<Item = &'word str>
         .map(|(_, word)| word)
 }
 
+/// How many letters differ between two words, two that changed places as one.
+pub(crate) fn edits(one: &str, other: &str) -> usize {
+    strsim::damerau_levenshtein(one, other)
+}
+
 /// A noun with its number: `1 row`, `2 rows`.
 pub fn count(number: usize, singular: &str, plural: &str) -> String {
     if number == 1 { format!("1 {singular}") } else { format!("{number} {plural}") }

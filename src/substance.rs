@@ -95,6 +95,8 @@ pub struct Conditions {
     pub reliability: Option<u8>,
     /// Kind of degradation, for half-lives.
     pub degradation: DegradationKind,
+    /// Year of the study or its publication.
+    pub year: Option<u16>,
 }
 
 /// A numeric value of the row.

@@ -49,6 +49,7 @@ pub(super) fn set_styles(sheet: &str, recognised: &mut Recognised, data: &[&Row]
         ambiguous: None,
     };
     for (column, shown) in recognised.columns.iter_mut().zip(own) {
+        let is_shown = shown.style().is_some();
         let (style, why) = match (shown.style(), whole.style()) {
             (Some(style), _) => (style, "as the column's other cells show"),
             (None, Some(style)) => (style, "as the sheet's other cells show"),
@@ -59,8 +60,8 @@ pub(super) fn set_styles(sheet: &str, recognised: &mut Recognised, data: &[&Row]
             DecimalStyle::Point => "point",
             DecimalStyle::Comma => "comma",
         };
-        if style == DecimalStyle::Comma {
-            let _ = write!(column.reason, "; decimal comma, {why}");
+        if style == DecimalStyle::Comma || is_shown {
+            let _ = write!(column.reason, "; decimal {word}, {why}");
         }
         if let Some(example) = shown.ambiguous {
             recognised.remarks.push(format!(

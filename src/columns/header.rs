@@ -1,8 +1,9 @@
 //! One header: its words, its brackets, and the field they name.
 
+use super::folding::{composed, header_words, is_sign, shown_words};
 use super::reading::{Brackets, NamesValue, Reading};
 use super::words::ColumnWords;
-use crate::quantity::{Dimension, Unit, parse_unit, plain_words, tidy};
+use crate::quantity::{Dimension, Unit, parse_unit, parse_unit_of, tidy};
 use crate::substance::{Field, Property};
 
 /// The longest text, in characters, that is taken for a header.
@@ -18,7 +19,7 @@ pub(super) struct Header {
     pub(super) words: Vec<String>,
     pub(super) bracket_words: Vec<String>,
     /// The words and those in brackets as a reader knows them, umlauts kept.
-    shown: [Vec<String>; 2],
+    pub(super) shown: [Vec<String>; 2],
 }
 
 /// A field and the words that named it.
@@ -28,40 +29,14 @@ pub(super) struct Named {
     pub(super) by: Vec<String>,
 }
 
-/// The words of a text as headers are compared: folded, umlauts written as `ae` the same as `ä`.
-pub(super) fn header_words(text: &str) -> Vec<String> {
-    let umlauts = |word: String| word.replace("ae", "a").replace("oe", "o").replace("ue", "u");
-    shown_words(text).into_iter().map(umlauts).collect()
-}
-
-fn shown_words(text: &str) -> Vec<String> {
-    let folded = plain_words(&parted_at_capitals(text));
-    folded.split(' ').filter(|word| !word.is_empty()).map(str::to_owned).collect()
-}
-
-/// `WaterSolubility` is two words; `pKa` and `mmHg` are one.
-fn parted_at_capitals(text: &str) -> String {
-    const SHORTEST_WORD: usize = 3;
-    let mut parted = String::with_capacity(text.len());
-    let mut small_letters = 0;
-    for character in text.chars() {
-        if character.is_uppercase() && small_letters >= SHORTEST_WORD {
-            parted.push(' ');
-        }
-        small_letters = if character.is_lowercase() { small_letters + 1 } else { 0 };
-        parted.push(character);
-    }
-    parted
-}
-
 impl Header {
     /// Takes a header apart; a text too long to be one gives nothing.
     pub(super) fn new(text: &str) -> Option<Self> {
         if text.chars().count() > LONGEST_HEADER {
             return None;
         }
-        let whole = text.replace("(E)C", "C").replace("(e)c", "c");
-        let (plain, brackets) = part_brackets(&tidy(&whole));
+        let whole = tidy(&composed(text)).replace("(E)C", "C").replace("(e)c", "c");
+        let (plain, brackets) = part_brackets(&whole);
         let (plain, brackets) = if header_words(&plain).is_empty() {
             (brackets.join(" "), Vec::new())
         } else {
@@ -84,7 +59,7 @@ impl Header {
         let first_pass = known.rules.iter().find(|rule| reading.fits(rule, Brackets::ForProperties, value));
         let rule = first_pass
             .or_else(|| known.rules.iter().find(|rule| reading.fits(rule, Brackets::ForEveryField, value)))?;
-        let by = rule.needs.iter().filter_map(|need| self.words_of(*need, known)).collect();
+        let by = rule.needs.iter().filter_map(|need| reading.words_of(*need, self)).collect();
         Some(Named { field: rule.field, by })
     }
 
@@ -108,13 +83,22 @@ impl Header {
             .brackets
             .iter()
             .flat_map(|bracket| bracket.split([',', ';']).chain([bracket.as_str()]))
-            .filter_map(|part| parse_unit(without_preposition(part)));
-        let words: Vec<&str> = self.plain.split_whitespace().collect();
-        let at_end = (1..words.len().min(5)).rev().filter_map(|length| {
-            let end = words.get(words.len() - length..)?.join(" ");
-            parse_unit(without_preposition(end.trim_start_matches([',', '/', '-', ' '])))
+            .filter_map(|part| parse_unit_of(without_preposition(part), dimension));
+        let after_signs = self.plain.rfind(is_sign).and_then(|place| {
+            self.plain
+                .get(place..)?
+                .char_indices()
+                .nth(1)
+                .and_then(|(next, _)| self.plain.get(place + next..))
         });
-        in_brackets.chain(at_end).find(measures)
+        let words: Vec<&str> =
+            after_signs.map_or(self.plain.as_str(), str::trim).split_whitespace().collect();
+        let after_signs = after_signs.and_then(|end| parse_unit_of(without_preposition(end), dimension));
+        let at_end = (1..=words.len().min(4)).rev().filter_map(|length| {
+            let end = words.get(words.len() - length..)?.join(" ");
+            parse_unit_of(without_preposition(end.trim_start_matches([',', '/', '-', ' '])), dimension)
+        });
+        in_brackets.chain(after_signs).chain(at_end).find(measures)
     }
 
     /// A unit in brackets that does not measure what the column holds.
@@ -125,48 +109,44 @@ impl Header {
             .find(|unit| unit.dimension() != dimension && *unit != Unit::One)
     }
 
-    /// The first word of no concept with a known one close to it put in its place.
-    pub(super) fn with_nearest_word(&self, known: &ColumnWords) -> Option<Self> {
-        let reading = Reading::new(self, known);
-        let (place, word) = self
-            .words
-            .iter()
-            .enumerate()
-            .find(|(place, word)| !reading.covered.contains(place) && word.len() >= 4)?;
-        let close = crate::fault::nearest(word, known.all_words())?;
+    /// The same with another word at a place.
+    pub(super) fn with_word(&self, place: usize, word: &str) -> Self {
         let mut corrected = self.clone();
         if let Some(slot) = corrected.words.get_mut(place) {
-            close.clone_into(slot);
+            word.clone_into(slot);
         }
-        Some(corrected)
+        corrected
     }
 
+    /// `log BCF`, `Koc (log)`; the logarithm of another quantity, as in `BCF (from log Kow)`, is none of this one.
     fn names_logarithm(&self) -> bool {
-        let mut words = self.words.iter().chain(&self.bracket_words);
-        words.any(|word| word.starts_with("log") || word == "lg" || word.starts_with("lgk"))
+        const SIGNS: [[&str; 2]; 3] = [["対", "数"], ["对", "数"], ["對", "數"]];
+        const OF_OTHERS: [&str; 10] = ["kow", "pow", "p", "d", "koa", "dow", "ko", "po", "kaw", "koe"];
+        [&self.words, &self.bracket_words].into_iter().any(|words| {
+            words.iter().enumerate().any(|(place, word)| {
+                let next = words.get(place + 1).map_or("", String::as_str);
+                let after_next = words.get(place + 2).map_or("", String::as_str);
+                let of_other = OF_OTHERS.contains(&next) || (next == "k" && after_next != "oc");
+                let is_log = matches!(word.as_str(), "log" | "lg" | "log10") || word.starts_with("logarit");
+                let joined = ["log", "lg", "log10"].iter().any(|start| {
+                    word.strip_prefix(start).is_some_and(|rest| {
+                        rest.starts_with("koc") || rest.starts_with("bcf") || rest.starts_with("baf")
+                    })
+                });
+                joined || (is_log && !of_other) || SIGNS.contains(&[word.as_str(), next])
+            })
+        })
     }
 
     /// Whether the header speaks of a concept with this name.
     pub(super) fn speaks_of(&self, concept: &str, known: &ColumnWords) -> bool {
-        let place = known.concepts.iter().position(|one| one.id == concept);
-        place.is_some_and(|place| self.words_of(place, known).is_some())
-    }
-
-    fn words_of(&self, concept: usize, known: &ColumnWords) -> Option<String> {
-        let concept = known.concepts.get(concept)?;
-        [&self.words, &self.bracket_words].into_iter().zip(&self.shown).find_map(|(words, shown)| {
-            (0..words.len()).find_map(|start| {
-                let length =
-                    concept.phrases.iter().filter_map(|phrase| phrase.length_at(words, start)).max()?;
-                Some(shown.get(start..start + length)?.join(" "))
-            })
-        })
+        known.concept(concept).is_some_and(|place| Reading::new(self, known).everywhere.contains(&place))
     }
 }
 
 fn without_preposition(text: &str) -> &str {
     let text = text.trim();
-    text.strip_prefix("in ").unwrap_or(text)
+    text.strip_prefix("in ").or_else(|| text.strip_prefix("en ")).unwrap_or(text)
 }
 
 fn part_brackets(text: &str) -> (String, Vec<String>) {
@@ -176,8 +156,8 @@ fn part_brackets(text: &str) -> (String, Vec<String>) {
     let mut depth = 0usize;
     for character in text.chars() {
         match character {
-            '(' | '[' | '{' => depth += 1,
-            ')' | ']' | '}' if depth > 0 => {
+            '(' | '[' | '{' | '【' | '〔' | '〈' | '《' | '「' => depth += 1,
+            ')' | ']' | '}' | '】' | '〕' | '〉' | '》' | '」' if depth > 0 => {
                 depth -= 1;
                 if depth == 0 {
                     brackets.push(std::mem::take(&mut inside).trim().to_owned());

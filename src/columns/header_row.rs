@@ -1,10 +1,14 @@
-//! Which row of a sheet is its header, and whether a row of units stands below it.
+//! Which rows of a sheet are its header: names, groups above them, units and conditions below.
 
 use std::collections::BTreeSet;
 
 use super::ColumnOverride;
-use super::header::{Header, Named, header_words};
-use super::second_header::HeaderWatch;
+use super::choice::dimension_of;
+use super::header::Header;
+use super::header_cell::{HeaderCell, is_group_text};
+use super::reading::Reading;
+use super::second_header::{HeaderWatch, is_number};
+use super::stack::{is_unit, stack};
 use super::words::ColumnWords;
 use crate::quantity::{is_missing, parse_unit, tidy};
 use crate::substance::Field;
@@ -12,42 +16,14 @@ use crate::workbook::{Cell, CellContent, Row};
 
 /// Rows at the top of a sheet among which the header is looked for.
 const HEADER_WITHIN: usize = 30;
-
-/// A header and what it may name.
-#[derive(Debug, Clone)]
-pub(super) struct HeaderCell {
-    pub(super) column: u16,
-    pub(super) text: String,
-    pub(super) header: Option<Header>,
-    pub(super) meaning: Meaning,
-}
-
-/// What a header names.
-#[derive(Debug, Clone, PartialEq, Eq)]
-pub(super) enum Meaning {
-    /// A field, by its words.
-    Named(Named),
-    /// A field, because the user says so.
-    Told(Field),
-    /// Nothing, because the user says so.
-    LeftAside,
-    /// No field that is known.
-    Unknown,
-}
-
-impl HeaderCell {
-    pub(super) fn field(&self) -> Option<Field> {
-        match &self.meaning {
-            Meaning::Named(named) => Some(named.field),
-            Meaning::Told(field) => Some(*field),
-            Meaning::LeftAside | Meaning::Unknown => None,
-        }
-    }
-}
+/// Rows of groups above the names, and rows below them, that are read together with them.
+const ROWS_BESIDE: usize = 2;
 
 /// The header of a sheet.
 #[derive(Debug, Clone)]
 pub(super) struct Found {
+    /// The first row of the header, counted from 0.
+    pub(super) top: u32,
     /// The row in which our own headers go, counted from 0.
     pub(super) row: u32,
     pub(super) cells: Vec<HeaderCell>,
@@ -57,42 +33,235 @@ pub(super) struct Found {
     pub(super) watch: HeaderWatch,
 }
 
-/// The row with the most recognised headers, of several such the one with the most cells, then the first.
-pub(super) fn find(first_rows: &[Row], words: &ColumnWords, overrides: &[ColumnOverride]) -> Option<Found> {
-    let mut best: Option<((usize, usize), usize, Vec<HeaderCell>)> = None;
-    let mut others_above = Vec::new();
-    for (place, row) in first_rows.iter().take(HEADER_WITHIN).enumerate() {
-        let cells = header_cells(texts_of(row), words, overrides);
-        if !is_inventory(&cells) {
-            continue;
-        }
-        let recognised = cells.iter().filter(|cell| cell.field().is_some()).count();
-        let rank = (recognised, cells.len());
-        if best.as_ref().is_none_or(|(best_rank, ..)| rank > *best_rank) {
-            let passed_over = best.as_ref().filter(|((recognised, _), ..)| *recognised > 1);
-            others_above.extend(passed_over.and_then(|(_, place, _)| Some(first_rows.get(*place)?.index)));
-            best = Some((rank, place, cells));
-        }
-    }
-    let (_, place, cells) = best?;
-    let upper = first_rows.get(place)?;
-    let below = first_rows.get(place + 1).filter(|row| row.index == upper.index + 1);
-    let Some((row, units)) = below.and_then(|row| Some((row, units_below(row)?))) else {
-        let watch = HeaderWatch::new(&[upper], overrides);
-        return Some(Found { row: upper.index, cells, others_above, watch });
-    };
-    let joined = texts_of(upper).into_iter().map(|(column, text)| {
-        let unit = units.iter().find(|(place, _)| *place == column);
-        let joined = unit.map(|(_, unit)| with_unit(&text, unit));
-        (column, joined.unwrap_or(text))
-    });
-    let watch = HeaderWatch::new(&[upper, row], overrides);
-    let cells = header_cells(joined.collect(), words, overrides);
-    Some(Found { row: row.index, cells, others_above, watch })
+/// How headers are read.
+#[derive(Clone, Copy)]
+struct Reader<'sheet> {
+    rows: &'sheet [Row],
+    words: &'sheet ColumnWords,
+    overrides: &'sheet [ColumnOverride],
 }
 
-fn with_unit(name: &str, unit: &str) -> String {
-    if unit.starts_with(['(', '[']) { format!("{name} {unit}") } else { format!("{name} [{unit}]") }
+/// Rows that are read together, by place, the last one included.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+struct Block {
+    first: usize,
+    last: usize,
+}
+
+/// The rows with the most recognised headers, of several such the ones with the most cells, then the first.
+pub(super) fn find(first_rows: &[Row], words: &ColumnWords, overrides: &[ColumnOverride]) -> Option<Found> {
+    let reader = Reader { rows: first_rows, words, overrides };
+    let mut best: Option<((usize, usize), Block)> = None;
+    let mut others_above = Vec::new();
+    for place in 0..first_rows.len().min(HEADER_WITHIN) {
+        let Some((rank, block)) = reader.inventory_at(place) else {
+            continue;
+        };
+        if best.is_none_or(|(best_rank, _)| rank > best_rank) {
+            others_above
+                .extend(best.filter(|((recognised, _), _)| *recognised > 1).map(|(_, block)| block.last));
+            best = Some((rank, block));
+        }
+    }
+    let (_, names) = best?;
+    let block = reader.with_groups(reader.with_rows_below(names));
+    let rows = reader.of(block);
+    let (top, row) = (rows.first()?.index, rows.last()?.index);
+    let others_above = others_above.into_iter().filter(|place| *place < block.first);
+    let others_above = others_above.filter_map(|place| Some(first_rows.get(place)?.index)).collect();
+    Some(Found {
+        top,
+        row,
+        cells: reader.with_nameless(reader.cells(block)),
+        others_above,
+        watch: HeaderWatch::new(&rows, overrides),
+    })
+}
+
+impl<'sheet> Reader<'sheet> {
+    fn of(self, block: Block) -> Vec<&'sheet Row> {
+        self.rows.get(block.first..=block.last).unwrap_or_default().iter().collect()
+    }
+
+    fn cells(self, block: Block) -> Vec<HeaderCell> {
+        let rows = self.of(block);
+        match rows.as_slice() {
+            [row] => header_cells(texts_of(row), self.words, self.overrides),
+            rows => stack(rows)
+                .into_iter()
+                .map(|column| HeaderCell::stacked(column, self.words, self.overrides))
+                .collect(),
+        }
+    }
+
+    /// Columns without a header that the user names by their letter.
+    fn with_nameless(self, mut cells: Vec<HeaderCell>) -> Vec<HeaderCell> {
+        for column in self.overrides.iter().filter_map(ColumnOverride::column) {
+            let filled = |row: &Row| row.cell(column).is_some_and(|cell| cell.content != CellContent::Empty);
+            if cells.iter().all(|cell| cell.column != column) && self.rows.iter().any(filled) {
+                let name = "(no header)".to_owned();
+                cells.push(HeaderCell::alone(column, name, self.words, self.overrides));
+            }
+        }
+        cells.sort_by_key(|cell| cell.column);
+        cells
+    }
+
+    /// The header of an inventory at a place, in one row or two, with its rank.
+    fn inventory_at(self, place: usize) -> Option<((usize, usize), Block)> {
+        let rank = |cells: &[HeaderCell]| (recognised(cells), cells.len());
+        let alone = Block { first: place, last: place };
+        let cells = self.cells(alone);
+        if is_inventory(&cells) {
+            return Some((rank(&cells), alone));
+        }
+        let (upper, lower) = (self.rows.get(place)?, self.rows.get(place + 1)?);
+        if cells.is_empty() || is_title(upper, lower) || !self.is_below(alone) {
+            return None;
+        }
+        let both = Block { first: place, last: place + 1 };
+        let cells = self.cells(both);
+        is_inventory(&cells).then(|| (rank(&cells), both))
+    }
+
+    fn with_rows_below(self, mut block: Block) -> Block {
+        for _ in 0..ROWS_BESIDE {
+            if !self.is_below(block) {
+                break;
+            }
+            block.last += 1;
+        }
+        block
+    }
+
+    /// Whether the row below these is part of the same header.
+    fn is_below(self, block: Block) -> bool {
+        let (Some(upper), Some(lower)) = (self.rows.get(block.last), self.rows.get(block.last + 1)) else {
+            return false;
+        };
+        if lower.index != upper.index + 1 {
+            return false;
+        }
+        let before = self.cells(block);
+        if holds_units(lower) {
+            return true;
+        }
+        let Some(sign) = self.reads_as_header(lower, &before) else {
+            return false;
+        };
+        let together = self.cells(Block { first: block.first, last: block.last + 1 });
+        let gained = recognised(&together).checked_sub(recognised(&before));
+        gained.is_some_and(|gained| gained > 0 || sign == Sign::Certain)
+    }
+
+    /// Whether a row below names holds words of headers and no data, and how surely.
+    fn reads_as_header(self, row: &Row, above: &[HeaderCell]) -> Option<Sign> {
+        let filled = row.cells.iter().filter(|cell| cell.content != CellContent::Empty);
+        if filled.clone().any(|cell| text_of(cell).is_none() || is_number(&cell.content)) {
+            return None;
+        }
+        let mut sign = Sign::Possible;
+        let (mut understood, mut others) = (0, 0);
+        for (column, text) in texts_of(row) {
+            let field = above.iter().find(|cell| cell.column == column).and_then(HeaderCell::field);
+            match self.kind_below(&text, field)? {
+                Below::Missing => {}
+                Below::Words if field.is_some_and(holds_numbers) => {
+                    understood += 1;
+                    sign = Sign::Certain;
+                }
+                Below::Words => understood += 1,
+                Below::Other => others += 1,
+            }
+        }
+        (understood > others).then_some(sign)
+    }
+
+    /// What a text below the header of a field is; none where it must be data.
+    fn kind_below(self, text: &str, field: Option<Field>) -> Option<Below> {
+        if is_missing(text) {
+            return Some(Below::Missing);
+        }
+        let header = Header::new(text)?;
+        let reading = Reading::new(&header, self.words);
+        let dimension = field.and_then(dimension_of);
+        let is_value = tidy(text).starts_with(|first: char| first.is_ascii_digit())
+            && dimension.is_none_or(|dimension| measures_value(text) == Some(dimension));
+        let is_text_of_field = field.is_some() && dimension.is_none();
+        if is_value || (is_text_of_field && header.field(self.words).is_none() && !is_unit(text)) {
+            return None;
+        }
+        Some(if reading.wholly_known && !reading.covered.is_empty() { Below::Words } else { Below::Other })
+    }
+
+    /// Rows of groups above the names.
+    fn with_groups(self, mut block: Block) -> Block {
+        for _ in 0..ROWS_BESIDE {
+            if !self.is_groups_above(block) {
+                break;
+            }
+            block.first -= 1;
+        }
+        block
+    }
+
+    fn is_groups_above(self, block: Block) -> bool {
+        let Some(upper) = block.first.checked_sub(1).and_then(|place| self.rows.get(place)) else {
+            return false;
+        };
+        let Some(lower) = self.rows.get(block.first) else {
+            return false;
+        };
+        if upper.index + 1 != lower.index || upper.cells.iter().any(|cell| is_number(&cell.content)) {
+            return false;
+        }
+        let texts = texts_of(upper);
+        let groups = texts.iter().filter(|(_, text)| is_group_text(text, self.words)).count();
+        !is_title(upper, lower) && groups > 0 && groups * 2 >= texts.len()
+    }
+}
+
+/// A single text at the left above a row is its title.
+fn is_title(upper: &Row, lower: &Row) -> bool {
+    let first = |row: &Row| texts_of(row).first().map(|(column, _)| *column);
+    texts_of(upper).len() < 2 && first(upper) <= first(lower)
+}
+
+/// Whether words in a column of this field are no data.
+fn holds_numbers(field: Field) -> bool {
+    let of_words = matches!(field, Field::ReadyBiodegradability | Field::InherentBiodegradability);
+    dimension_of(field).is_some() && !of_words
+}
+
+/// How surely a row belongs to the header above it.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+enum Sign {
+    /// Words of headers stand below columns of numbers, where data would be numbers.
+    Certain,
+    /// Only if the header is understood better with it.
+    Possible,
+}
+
+/// A text below a header.
+enum Below {
+    /// A word for a missing value.
+    Missing,
+    /// Words that headers are made of.
+    Words,
+    Other,
+}
+
+/// What a number with a unit measures.
+fn measures_value(text: &str) -> Option<crate::quantity::Dimension> {
+    let text = tidy(text);
+    let unit = text.trim_start_matches(|character: char| {
+        character.is_ascii_digit() || matches!(character, '.' | ',' | ' ' | '-' | '±')
+    });
+    parse_unit(unit).map(crate::quantity::Unit::dimension)
+}
+
+fn recognised(cells: &[HeaderCell]) -> usize {
+    cells.iter().filter(|cell| cell.field().is_some()).count()
 }
 
 pub(super) fn texts_of(row: &Row) -> Vec<(u16, String)> {
@@ -116,27 +285,7 @@ pub(super) fn header_cells(
     words: &ColumnWords,
     overrides: &[ColumnOverride],
 ) -> Vec<HeaderCell> {
-    texts
-        .into_iter()
-        .map(|(column, text)| {
-            let header = Header::new(&text);
-            let told = overrides.iter().find(|told| told.is_for(&text) || is_for_name(told, &text));
-            let meaning = match told {
-                Some(ColumnOverride { field: Some(field), .. }) => Meaning::Told(*field),
-                Some(ColumnOverride { field: None, .. }) => Meaning::LeftAside,
-                None => header
-                    .as_ref()
-                    .and_then(|header| header.field(words))
-                    .map_or(Meaning::Unknown, Meaning::Named),
-            };
-            HeaderCell { column, text, header, meaning }
-        })
-        .collect()
-}
-
-/// The user may give a header of two rows without its unit.
-pub(super) fn is_for_name(told: &ColumnOverride, text: &str) -> bool {
-    text.rsplit_once(" [").is_some_and(|(name, _)| header_words(name) == header_words(&told.header))
+    texts.into_iter().map(|(column, text)| HeaderCell::alone(column, text, words, overrides)).collect()
 }
 
 pub(super) fn is_inventory(cells: &[HeaderCell]) -> bool {
@@ -146,19 +295,15 @@ pub(super) fn is_inventory(cells: &[HeaderCell]) -> bool {
     fields.iter().any(|field| field.identifies()) || (named && fields.len() >= 2)
 }
 
-/// The units of a row that holds nothing else: text only, at least half of it units.
-fn units_below(row: &Row) -> Option<Vec<(u16, String)>> {
+/// Whether a row holds units and little else: text only, at least half of it units.
+fn holds_units(row: &Row) -> bool {
     let filled = row.cells.iter().filter(|cell| cell.content != CellContent::Empty).count();
     let texts = texts_of(row);
     let starts_number = |text: &str| text.starts_with(|first: char| first.is_ascii_digit());
     if texts.len() < filled || texts.iter().any(|(_, text)| starts_number(text)) {
-        return None;
+        return false;
     }
-    let is_unit = |text: &str| {
-        let bare = tidy(text);
-        parse_unit(bare.trim_matches(['(', ')', '[', ']'])).is_some()
-    };
     let real_units = texts.iter().filter(|(_, text)| is_unit(text) && !is_missing(text)).count();
     let others = texts.iter().filter(|(_, text)| !is_unit(text) && !is_missing(text)).count();
-    (real_units > 0 && real_units >= others).then_some(texts)
+    real_units > 0 && real_units >= others
 }

@@ -2,7 +2,9 @@
 
 use std::collections::BTreeSet;
 
-use super::header::{Header, header_words};
+use super::folding::{header_words, joined};
+use super::header::Header;
+use super::phrase::Span;
 use super::words::{ColumnWords, ConceptSet, FieldRule};
 use crate::quantity::parse_unit;
 use crate::substance::Field;
@@ -19,11 +21,15 @@ pub(super) enum Brackets {
 /// The concepts a header speaks of.
 pub(super) struct Reading {
     pub(super) main: ConceptSet,
-    everywhere: ConceptSet,
-    /// Places of words that belong to a concept or are numbers.
+    pub(super) everywhere: ConceptSet,
+    /// Places of words that belong to a concept.
     pub(super) covered: BTreeSet<usize>,
     pub(super) mostly_unknown: bool,
+    /// Whether every word is known or a number.
+    pub(super) wholly_known: bool,
     pub(super) value: NamesValue,
+    spans: Vec<Span>,
+    bracket_spans: Vec<Span>,
 }
 
 /// Whether a header can name the value of a property, or names something beside one.
@@ -35,51 +41,39 @@ pub(super) enum NamesValue {
 
 impl Reading {
     pub(super) fn new(header: &Header, known: &ColumnWords) -> Self {
+        let spans = known.index.spans(&header.words);
+        let bracket_spans = known.index.spans(&header.bracket_words);
         let mut main = ConceptSet::new();
+        let mut everywhere: ConceptSet =
+            spans.iter().chain(&bracket_spans).map(|span| span.concept).collect();
         let mut covered = BTreeSet::new();
         let mut value = NamesValue::Perhaps;
-        for (place, concept) in known.concepts.iter().enumerate() {
-            for start in 0..header.words.len() {
-                let longest =
-                    concept.phrases.iter().filter_map(|phrase| phrase.length_at(&header.words, start)).max();
-                let Some(length) = longest else {
-                    continue;
-                };
-                main.insert(place);
-                covered.extend(start..start + length);
-                let a_number_follows = header
-                    .words
-                    .get(start + length)
-                    .is_some_and(|word| word.starts_with(|first: char| first.is_ascii_digit()));
-                if known.not_a_value.contains(&place) && !a_number_follows {
-                    value = NamesValue::No;
-                }
+        for span in &spans {
+            covered.extend(span.start..span.start + span.length);
+            let number = number_beside(&header.words, *span);
+            let is_condition = known.conditions.contains(&span.concept) && number != NumberBeside::None;
+            if !is_condition {
+                main.insert(span.concept);
             }
-        }
-        let mut everywhere = main.clone();
-        for (place, concept) in known.concepts.iter().enumerate() {
-            let stands = |start| {
-                concept.phrases.iter().any(|phrase| phrase.length_at(&header.bracket_words, start).is_some())
-            };
-            if (0..header.bracket_words.len()).any(stands) {
-                everywhere.insert(place);
+            if known.not_a_value.contains(&span.concept) && !is_condition && number != NumberBeside::After {
+                value = NamesValue::No;
             }
         }
         for bracket in &header.brackets {
             add_companion(bracket, known, &mut main, &mut value);
         }
-        let unknown = header
-            .words
-            .iter()
-            .enumerate()
-            .filter(|(place, word)| {
-                !covered.contains(place) && !word.chars().all(|digit| digit.is_ascii_digit())
-            })
-            .map(|(_, word)| word.len())
-            .sum::<usize>();
+        everywhere.extend(&main);
+        let is_unknown = |place: &usize, word: &str| {
+            !covered.contains(place) && !word.chars().all(|digit| digit.is_ascii_digit())
+        };
+        let words = || header.words.iter().enumerate();
+        let unknown: usize =
+            words().filter(|(place, word)| is_unknown(place, word)).map(|(_, word)| word.len()).sum();
         let understood: usize =
-            covered.iter().filter_map(|place| header.words.get(*place)).map(String::len).sum();
-        Self { main, everywhere, covered, mostly_unknown: unknown > understood, value }
+            words().filter(|(place, _)| covered.contains(place)).map(|(_, word)| word.len()).sum();
+        let mostly_unknown = unknown > 0 && unknown >= understood;
+        let wholly_known = unknown == 0;
+        Self { main, everywhere, covered, mostly_unknown, wholly_known, value, spans, bracket_spans }
     }
 
     pub(super) fn fits(&self, rule: &FieldRule, brackets: Brackets, value: NamesValue) -> bool {
@@ -94,6 +88,40 @@ impl Reading {
             && (named_outside || brackets == Brackets::ForEveryField)
             && rule.without.is_disjoint(&self.everywhere)
     }
+
+    /// Whether it names something beside a value.
+    pub(super) fn names_no_value(&self) -> bool {
+        self.value == NamesValue::No
+    }
+
+    /// The first words of the header that speak of a concept, as a reader knows them.
+    pub(super) fn words_of(&self, concept: usize, header: &Header) -> Option<String> {
+        let [main, in_brackets] = &header.shown;
+        [(&self.spans, main), (&self.bracket_spans, in_brackets)].into_iter().find_map(|(spans, shown)| {
+            let span = spans.iter().find(|span| span.concept == concept)?;
+            Some(joined(shown.get(span.start..span.start + span.length)?))
+        })
+    }
+}
+
+/// Whether a number stands beside a word.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+enum NumberBeside {
+    Before,
+    After,
+    None,
+}
+
+/// `pH 7`, `5 % lipid`: a condition with its number.
+fn number_beside(words: &[String], span: Span) -> NumberBeside {
+    let is_number = |word: &String| word.starts_with(|first: char| first.is_ascii_digit());
+    let after = words.get(span.start + span.length).is_some_and(is_number);
+    let before = span.start.checked_sub(1).and_then(|place| words.get(place)).is_some_and(is_number);
+    match (before, after) {
+        (_, true) => NumberBeside::After,
+        (true, false) => NumberBeside::Before,
+        (false, false) => NumberBeside::None,
+    }
 }
 
 /// `log Kow (method)`: a bracket with nothing but a companion's word counts as if it stood outside.
@@ -102,13 +130,10 @@ fn add_companion(bracket: &str, known: &ColumnWords, main: &mut ConceptSet, valu
         return;
     }
     let words = header_words(bracket);
-    for place in &known.not_a_value {
-        let Some(concept) = known.concepts.get(*place) else {
-            continue;
-        };
-        if concept.phrases.iter().any(|phrase| phrase.length_at(&words, 0) == Some(words.len())) {
-            main.insert(*place);
-            *value = NamesValue::No;
-        }
+    let whole =
+        known.index.spans(&words).into_iter().filter(|span| span.start == 0 && span.length == words.len());
+    for span in whole.filter(|span| known.not_a_value.contains(&span.concept)) {
+        main.insert(span.concept);
+        *value = NamesValue::No;
     }
 }

@@ -6,7 +6,8 @@
 use std::collections::BTreeSet;
 
 use super::choice::dimension_of;
-use super::header_row::{HeaderCell, header_cells, is_inventory, texts_of};
+use super::header_cell::HeaderCell;
+use super::header_row::{header_cells, is_inventory, texts_of};
 use super::words::ColumnWords;
 use super::{ColumnOverride, Recognised};
 use crate::fault::{CellFault, CellFaultKind};
@@ -104,7 +105,7 @@ fn names_columns(cells: &[HeaderCell]) -> bool {
 }
 
 /// A number, or a text of digits without letters, such as `50-29-3` or `< 5`.
-fn is_number(content: &CellContent) -> bool {
+pub(super) fn is_number(content: &CellContent) -> bool {
     match content {
         CellContent::Number(_) | CellContent::DateTime(_) => true,
         CellContent::Text(text) => {

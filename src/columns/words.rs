@@ -4,7 +4,7 @@ use std::collections::{BTreeMap, BTreeSet};
 
 use serde::Deserialize;
 
-use super::header::header_words;
+use super::phrase::{KnownPart, Phrase, PhraseIndex};
 use crate::fault::nearest;
 use crate::substance::Field;
 
@@ -15,6 +15,8 @@ pub struct ColumnWords {
     pub(super) rules: Vec<FieldRule>,
     pub(super) never: ConceptSet,
     pub(super) not_a_value: ConceptSet,
+    pub(super) conditions: ConceptSet,
+    pub(super) index: PhraseIndex,
 }
 
 /// Places in [`ColumnWords::concepts`].
@@ -25,16 +27,6 @@ pub(super) type ConceptSet = BTreeSet<usize>;
 pub(super) struct Concept {
     pub(super) id: String,
     pub(super) phrases: Vec<Phrase>,
-}
-
-/// Words that stand one after the other.
-#[derive(Debug, Clone, PartialEq, Eq)]
-pub(super) struct Phrase(Vec<WordPattern>);
-
-/// A word, with `*` at either end for any letters and within for any letters between.
-#[derive(Debug, Clone, PartialEq, Eq)]
-struct WordPattern {
-    parts: Vec<String>,
 }
 
 /// One way of naming a field.
@@ -52,6 +44,8 @@ struct File {
     never: Vec<String>,
     #[serde(default)]
     not_a_value: Vec<String>,
+    #[serde(default)]
+    conditions: Vec<String>,
     concept: Vec<FileConcept>,
     field: Vec<FileField>,
 }
@@ -102,16 +96,30 @@ impl ColumnWords {
             let known = Field::from_id(&field.id).ok_or_else(|| unknown_field(&field.id))?;
             rules.push(FieldRule { field: known, needs: set(&field.needs)?, without: set(&field.without)? });
         }
-        Ok(Self { concepts, rules, never: set(&file.never)?, not_a_value: set(&file.not_a_value)? })
+        let mut index = PhraseIndex::default();
+        for (place, concept) in concepts.iter().enumerate() {
+            concept.phrases.iter().for_each(|phrase| index.add(place, phrase));
+        }
+        Ok(Self {
+            rules,
+            never: set(&file.never)?,
+            not_a_value: set(&file.not_a_value)?,
+            conditions: set(&file.conditions)?,
+            concepts,
+            index,
+        })
     }
 
-    /// Every word of every phrase, for the nearest one to a word that is not known.
-    pub(super) fn all_words(&self) -> impl Iterator<Item = &str> {
-        self.concepts
-            .iter()
-            .flat_map(|concept| &concept.phrases)
-            .flat_map(|phrase| &phrase.0)
-            .filter_map(|word| word.parts.iter().find(|part| part.len() >= 3).map(String::as_str))
+    /// The place of a concept.
+    pub(super) fn concept(&self, id: &str) -> Option<usize> {
+        self.concepts.iter().position(|concept| concept.id == id)
+    }
+
+    /// Every part of every word, for the nearest one to a word that is not known.
+    pub(super) fn known_parts(&self) -> impl Iterator<Item = (usize, KnownPart<'_>)> {
+        self.concepts.iter().enumerate().flat_map(|(place, concept)| {
+            concept.phrases.iter().flat_map(Phrase::parts).map(move |part| (place, part))
+        })
     }
 }
 
@@ -134,75 +142,16 @@ fn with_hint(message: &str, nearest: Option<&str>) -> String {
 impl Concept {
     fn new(concept: FileConcept) -> Result<Self, String> {
         let phrases: Vec<Phrase> = concept.words.values().flatten().map(|words| Phrase::new(words)).collect();
-        if phrases.iter().any(|phrase| phrase.0.is_empty()) {
+        if phrases.iter().any(Phrase::is_empty) {
             return Err(format!("the concept `{}` has a word without letters", concept.id));
         }
         Ok(Self { id: concept.id, phrases })
     }
 }
 
-impl Phrase {
-    fn new(words: &str) -> Self {
-        let patterns = words.split_whitespace().map(WordPattern::new);
-        Self(patterns.filter(|pattern| pattern.parts.iter().any(|part| !part.is_empty())).collect())
-    }
-
-    /// How many words of a header the phrase covers from a place on; none if it does not stand there.
-    pub(super) fn length_at(&self, words: &[String], start: usize) -> Option<usize> {
-        let here = words.get(start..start + self.0.len())?;
-        let fits = self.0.iter().zip(here).all(|(pattern, word)| pattern.fits(word));
-        fits.then_some(self.0.len())
-    }
-}
-
-impl WordPattern {
-    fn new(word: &str) -> Self {
-        let fold = |part: &str| header_words(part).concat();
-        Self { parts: word.split('*').map(fold).collect() }
-    }
-
-    fn fits(&self, word: &str) -> bool {
-        let [first, middle @ .., last] = self.parts.as_slice() else {
-            return self.parts.first().is_some_and(|only| only == word);
-        };
-        let Some(inner) = word.strip_prefix(first.as_str()).and_then(|rest| rest.strip_suffix(last.as_str()))
-        else {
-            return false;
-        };
-        let mut rest = inner;
-        middle.iter().all(|part| match rest.find(part.as_str()) {
-            Some(position) => {
-                rest = rest.get(position + part.len()..).unwrap_or_default();
-                true
-            }
-            None => false,
-        })
-    }
-}
-
 #[cfg(test)]
 mod tests {
-    use super::{ColumnWords, Phrase};
-
-    fn words(text: &str) -> Vec<String> {
-        text.split(' ').map(str::to_owned).collect()
-    }
-
-    #[test]
-    fn stars_stand_for_any_letters() {
-        for (pattern, word, fits) in [
-            ("*solubility", "watersolubility", true),
-            ("*solubility", "solubility", true),
-            ("boden*", "bodenhalbwertszeit", true),
-            ("*halbwertszeit*", "bodenhalbwertszeit", true),
-            ("cas*number", "casnumber", true),
-            ("cas", "case", false),
-            ("*oktanol*wasser*", "noktanolwasserkoeffizient", true),
-        ] {
-            assert_eq!(Phrase::new(pattern).length_at(&words(word), 0).is_some(), fits, "{pattern} {word}");
-        }
-        assert_eq!(Phrase::new("half life").length_at(&words("soil half life"), 1), Some(2));
-    }
+    use super::ColumnWords;
 
     #[test]
     fn a_file_that_means_nothing_is_refused_with_the_nearest_word() {

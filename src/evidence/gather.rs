@@ -48,6 +48,7 @@ fn from_reading(
         standing: Standing::of_reliability(reading.conditions.reliability),
         conditions: reading.conditions.clone(),
         reported: reading.quantity.reported.clone(),
+        unit: reading.quantity.unit,
         lower_bound_by_ionisation,
     }
 }
@@ -163,6 +164,7 @@ fn estimate(
         standing: Standing::Full,
         conditions: Conditions::default(),
         reported: String::new(),
+        unit: property.default_unit(),
         lower_bound_by_ionisation: None,
     })
 }

@@ -200,6 +200,31 @@ pub enum CellFaultKind {
         /// The test as found, for example `oecd 306`.
         test: String,
     },
+    /// A number too large to be the logarithm that is asked for.
+    NotALogarithm {
+        /// The field's title.
+        what: &'static str,
+        /// How to write the value itself, for example `Kow = 50000`.
+        example: &'static str,
+    },
+    /// A negative number where its logarithm may have been written.
+    MayBeLogarithm {
+        /// The field's title.
+        what: &'static str,
+        /// How to write the logarithm, for example `log BCF = 3.2`.
+        example: &'static str,
+    },
+    /// A small number said to be a value where its logarithm is asked for.
+    LogarithmOrNot {
+        /// The field's title.
+        what: &'static str,
+        /// How to write the logarithm, for example `log Kow = 4.5`.
+        example: &'static str,
+    },
+    /// `j` without a word that tells whether days or years are meant.
+    DaysOrYears,
+    /// Henry's law constant without a unit, which stands for a ratio of concentrations.
+    DimensionlessHenry,
 }
 
 impl CellFault {

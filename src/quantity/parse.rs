@@ -3,25 +3,39 @@
 //! It finds the number, its qualifier or range and its unit, and hands everything else on as remarks without asking
 //! what they mean. Linear in the length of the text, which is capped.
 
+mod brackets;
 mod expression;
+mod fold;
 mod format;
+mod label;
 mod number;
 mod qualifier;
+mod segment;
+mod several;
+mod symbols;
 mod text;
 mod units;
 mod value;
 mod words;
 
+pub use fold::{part_scripts, plain_words};
 pub use format::{format_interval, format_number};
-pub use text::{plain_words, tidy};
-pub use units::{parse_unit, unit_words};
+pub use text::tidy;
+pub use units::{parse_unit, parse_unit_of, unit_words};
 pub use words::is_missing;
 
-use crate::quantity::{Dimension, Interval, Quantity, Unit};
+use crate::quantity::{Dimension, Interval, IntervalError, Quantity, Unit};
 use expression::Expression;
+use several::read_all;
+use words::is_missing_number;
 
 /// The longest text, in bytes, in which a quantity is looked for.
 const LONGEST: usize = 2_000;
+/// More values than a cell can mean.
+const MOST_VALUES: usize = 20;
+/// Of a value that is written without `log` where its logarithm is asked for, numbers up to this one may be the logarithm
+/// all the same.
+const LARGEST_LOGARITHM: f64 = 20.0;
 
 /// How a column of a sheet writes decimals; decides only where a separator is followed by exactly three digits.
 #[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
@@ -33,6 +47,16 @@ pub enum DecimalStyle {
     Comma,
 }
 
+/// Whether a field holds values or their logarithms.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
+pub enum Scale {
+    /// Values: a BCF, a half-life, a BMF.
+    #[default]
+    Linear,
+    /// Logarithms: log Kow, pKa, a column of log Koc.
+    Logarithm,
+}
+
 /// What a text is expected to hold.
 #[derive(Debug, Clone, Copy, PartialEq)]
 pub struct ReadAs {
@@ -42,6 +66,8 @@ pub struct ReadAs {
     pub default_unit: Unit,
     /// How decimals are written around it.
     pub decimal: DecimalStyle,
+    /// Whether logarithms are expected.
+    pub scale: Scale,
     /// Molar mass, g/mol, for molar concentrations.
     pub molar_mass: Option<f64>,
 }
@@ -67,7 +93,7 @@ pub enum QuantityFault {
     WordOnly,
     /// Digits that make no number: `1.2.3`, `1,23.4`.
     BadNumber,
-    /// More than one value, and no range.
+    /// More than one value where they cannot be told apart, or where one is asked for.
     SeveralValues,
     /// A word where the unit should be that is no unit.
     UnknownUnit(String),
@@ -79,19 +105,46 @@ pub enum QuantityFault {
     BadRange,
     /// A text too long to be a value.
     TooLong,
+    /// A small number said to be a value where its logarithm is asked for: `Kow = 4.5` may be either.
+    LogarithmOrNot,
+    /// A number too large for any, such as ten to the power of a BCF that is no logarithm.
+    NotFinite,
 }
 
-/// Reads a quantity.
+/// Reads the one quantity of a text.
 pub fn parse_quantity(text: &str, read_as: ReadAs) -> Result<Parsed, QuantityFault> {
+    let mut parsed = parse_quantities(text, read_as)?;
+    match (parsed.pop(), parsed.is_empty()) {
+        (Some(only), true) => Ok(only),
+        (Some(_), false) => Err(QuantityFault::SeveralValues),
+        (None, _) => Err(QuantityFault::NoNumber),
+    }
+}
+
+/// Reads every quantity of a text, at least one and at most twenty. If a part cannot be read, none is.
+pub fn parse_quantities(text: &str, read_as: ReadAs) -> Result<Vec<Parsed>, QuantityFault> {
     if text.len() > LONGEST {
         return Err(QuantityFault::TooLong);
     }
-    let tidied = tidy(text);
-    if is_missing(&tidied) {
+    let tidied = part_scripts(tidy(text));
+    if is_missing_number(&tidied) {
         return Err(QuantityFault::NoValue);
     }
-    let expression = Expression::read(&tidied, read_as)?;
-    let unit = expression.unit.unwrap_or(read_as.default_unit);
+    let values = read_all(&tidied, read_as)?;
+    let several = values.len() > 1;
+    let parsed = values.into_iter().map(|value| {
+        let reported = if several { &value.written } else { text };
+        let reported = reported.split_whitespace().collect::<Vec<_>>().join(" ");
+        to_parsed(value, reported, read_as)
+    });
+    parsed.collect()
+}
+
+fn to_parsed(value: Expression, reported: String, read_as: ReadAs) -> Result<Parsed, QuantityFault> {
+    let unit = value.unit.unwrap_or(read_as.default_unit);
+    if may_be_logarithm(&value, unit, read_as) {
+        return Err(QuantityFault::LogarithmOrNot);
+    }
     let convert = |number: f64, own: Option<Unit>| {
         let unit = own.unwrap_or(unit);
         if unit.dimension() != read_as.dimension {
@@ -99,19 +152,39 @@ pub fn parse_quantity(text: &str, read_as: ReadAs) -> Result<Parsed, QuantityFau
         }
         unit.to_canonical(number, read_as.molar_mass).ok_or(QuantityFault::NeedsMolarMass)
     };
-    let low = expression.low.convert(convert)?;
-    let high = expression.high.convert(convert)?;
-    let interval = Interval::new(low, high).map_err(|_| QuantityFault::BadRange)?;
+    let low = value.low.convert(convert)?;
+    let high = value.high.convert(convert)?;
+    let interval = Interval::new(low, high).map_err(fault_of_interval)?;
     Ok(Parsed {
         quantity: Quantity {
             interval,
             unit,
-            written_sd: expression.written_sd,
-            approximate: expression.approximate,
-            reported: text.trim().to_owned(),
+            written_sd: value.written_sd,
+            approximate: value.approximate,
+            reported,
         },
-        remarks: expression.remarks,
+        remarks: value.remarks,
     })
+}
+
+fn fault_of_interval(error: IntervalError) -> QuantityFault {
+    match error {
+        IntervalError::NotFinite => QuantityFault::NotFinite,
+        IntervalError::Reversed => QuantityFault::BadRange,
+    }
+}
+
+/// Many who write `Kow = 4.5` or `3.4 L/kg` in a column of logarithms mean the logarithm.
+fn may_be_logarithm(value: &Expression, unit: Unit, read_as: ReadAs) -> bool {
+    let written_as_value = match read_as.dimension {
+        Dimension::VolumePerMass => {
+            unit.dimension() == read_as.dimension && unit != Unit::LogLitrePerKilogram
+        }
+        _ => unit == Unit::Ratio,
+    };
+    read_as.scale == Scale::Logarithm
+        && written_as_value
+        && value.numbers().any(|number| number <= LARGEST_LOGARITHM)
 }
 
 /// The quantity of a cell that holds a number already.
@@ -122,7 +195,7 @@ pub fn quantity_of_number(number: f64, read_as: ReadAs) -> Result<Quantity, Quan
     }
     let canonical = unit.to_canonical(number, read_as.molar_mass).ok_or(QuantityFault::NeedsMolarMass)?;
     Ok(Quantity {
-        interval: Interval::point(canonical).map_err(|_| QuantityFault::BadRange)?,
+        interval: Interval::point(canonical).map_err(fault_of_interval)?,
         unit,
         written_sd: None,
         approximate: false,
@@ -148,7 +221,9 @@ pub fn parse_limit(text: &str, dimension: Dimension) -> Result<f64, QuantityFaul
         }
         Unit::One
     } else {
-        parse_unit(rest).ok_or_else(|| QuantityFault::UnknownUnit(rest.to_owned()))?
+        // `j` is a day in one language and a year in another.
+        let unit = parse_unit_of(rest, dimension).filter(|unit| *unit != Unit::Jour);
+        unit.ok_or_else(|| QuantityFault::UnknownUnit(rest.to_owned()))?
     };
     if unit.dimension() != dimension {
         return Err(QuantityFault::WrongDimension(unit));

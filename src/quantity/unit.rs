@@ -118,35 +118,161 @@ pub enum Unit {
     KilogramPerYear,
     /// kJ/mol
     KilojoulePerMole,
+    /// pg/L
+    PicogramPerLitre,
+    /// kg/L, also g/mL and g/cm³
+    KilogramPerLitre,
+    /// g/100 mL, also % w/v
+    GramPerDecilitre,
+    /// mg/100 mL
+    MilligramPerDecilitre,
+    /// nmol/L; becomes mg/L only with the molar mass
+    NanomolePerLitre,
+    /// L/g, also m³/kg
+    LitrePerGram,
+    /// µPa
+    Micropascal,
+    /// mPa
+    Millipascal,
+    /// MPa
+    Megapascal,
+    /// mTorr
+    Millitorr,
+    /// psi
+    PoundPerSquareInch,
+    /// kg/mol, also kDa
+    KilogramPerMole,
+    /// kPa m³/mol
+    KilopascalCubicMetrePerMole,
+    /// atm L/mol
+    AtmosphereLitrePerMole,
+    /// g/kg, also ‰
+    GramPerKilogram,
+    /// mg/kg, also ppm of a content
+    MilligramPerKilogram,
+    /// µg/kg, also ppb of a content
+    MicrogramPerKilogram,
+    /// kt/a
+    KilotonnePerYear,
+    /// `j`, days in a French text and years in a German one; who reads it must know which
+    Jour,
+    /// A ratio where its logarithm is asked for: `Kow = 50000`. Becomes its decimal logarithm
+    Ratio,
+    /// A logarithm where the ratio is asked for: `log BMF = 0.3`. Becomes the ratio
+    LogarithmOfRatio,
+    /// A logarithm written as its power of ten: `10^4.5`. Becomes the exponent
+    PowerOfTen,
 }
 
 impl Unit {
+    /// Every unit.
+    pub const ALL: [Self; 55] = [
+        Self::One,
+        Self::Second,
+        Self::Minute,
+        Self::Hour,
+        Self::Day,
+        Self::Week,
+        Self::Month,
+        Self::Year,
+        Self::NanogramPerLitre,
+        Self::MicrogramPerLitre,
+        Self::MilligramPerLitre,
+        Self::GramPerLitre,
+        Self::MolePerLitre,
+        Self::MillimolePerLitre,
+        Self::MicromolePerLitre,
+        Self::LitrePerKilogram,
+        Self::LogLitrePerKilogram,
+        Self::Pascal,
+        Self::Hectopascal,
+        Self::Kilopascal,
+        Self::Bar,
+        Self::MillimetreMercury,
+        Self::Atmosphere,
+        Self::Celsius,
+        Self::Kelvin,
+        Self::Fahrenheit,
+        Self::GramPerMole,
+        Self::PascalCubicMetrePerMole,
+        Self::AtmosphereCubicMetrePerMole,
+        Self::Percent,
+        Self::TonnePerYear,
+        Self::KilogramPerYear,
+        Self::KilojoulePerMole,
+        Self::PicogramPerLitre,
+        Self::KilogramPerLitre,
+        Self::GramPerDecilitre,
+        Self::MilligramPerDecilitre,
+        Self::NanomolePerLitre,
+        Self::LitrePerGram,
+        Self::Micropascal,
+        Self::Millipascal,
+        Self::Megapascal,
+        Self::Millitorr,
+        Self::PoundPerSquareInch,
+        Self::KilogramPerMole,
+        Self::KilopascalCubicMetrePerMole,
+        Self::AtmosphereLitrePerMole,
+        Self::GramPerKilogram,
+        Self::MilligramPerKilogram,
+        Self::MicrogramPerKilogram,
+        Self::KilotonnePerYear,
+        Self::Jour,
+        Self::Ratio,
+        Self::LogarithmOfRatio,
+        Self::PowerOfTen,
+    ];
+
     /// What the unit measures.
     pub fn dimension(self) -> Dimension {
         match self {
-            Self::One => Dimension::Dimensionless,
-            Self::Second | Self::Minute | Self::Hour | Self::Day | Self::Week | Self::Month | Self::Year => {
-                Dimension::Time
-            }
+            Self::One | Self::Ratio | Self::LogarithmOfRatio | Self::PowerOfTen => Dimension::Dimensionless,
+            Self::Second
+            | Self::Minute
+            | Self::Hour
+            | Self::Day
+            | Self::Week
+            | Self::Month
+            | Self::Year
+            | Self::Jour => Dimension::Time,
             Self::NanogramPerLitre
             | Self::MicrogramPerLitre
             | Self::MilligramPerLitre
             | Self::GramPerLitre
             | Self::MolePerLitre
             | Self::MillimolePerLitre
-            | Self::MicromolePerLitre => Dimension::Concentration,
-            Self::LitrePerKilogram | Self::LogLitrePerKilogram => Dimension::VolumePerMass,
+            | Self::MicromolePerLitre
+            | Self::PicogramPerLitre
+            | Self::KilogramPerLitre
+            | Self::GramPerDecilitre
+            | Self::MilligramPerDecilitre
+            | Self::NanomolePerLitre => Dimension::Concentration,
+            Self::LitrePerKilogram | Self::LogLitrePerKilogram | Self::LitrePerGram => {
+                Dimension::VolumePerMass
+            }
             Self::Pascal
             | Self::Hectopascal
             | Self::Kilopascal
             | Self::Bar
             | Self::MillimetreMercury
-            | Self::Atmosphere => Dimension::Pressure,
+            | Self::Atmosphere
+            | Self::Micropascal
+            | Self::Millipascal
+            | Self::Megapascal
+            | Self::Millitorr
+            | Self::PoundPerSquareInch => Dimension::Pressure,
             Self::Celsius | Self::Kelvin | Self::Fahrenheit => Dimension::Temperature,
-            Self::GramPerMole => Dimension::MolarMass,
-            Self::PascalCubicMetrePerMole | Self::AtmosphereCubicMetrePerMole => Dimension::Henry,
-            Self::Percent => Dimension::Percent,
-            Self::TonnePerYear | Self::KilogramPerYear => Dimension::Tonnage,
+            Self::GramPerMole | Self::KilogramPerMole => Dimension::MolarMass,
+            Self::PascalCubicMetrePerMole
+            | Self::AtmosphereCubicMetrePerMole
+            | Self::KilopascalCubicMetrePerMole
+            | Self::AtmosphereLitrePerMole => Dimension::Henry,
+            Self::Percent
+            | Self::GramPerKilogram
+            | Self::MilligramPerKilogram
+            | Self::MicrogramPerKilogram => Dimension::Percent,
+            Self::TonnePerYear | Self::KilogramPerYear | Self::KilotonnePerYear => Dimension::Tonnage,
             Self::KilojoulePerMole => Dimension::MolarEnergy,
         }
     }
@@ -154,7 +280,7 @@ impl Unit {
     /// How a reader writes the unit.
     pub fn symbol(self) -> &'static str {
         match self {
-            Self::One => "",
+            Self::One | Self::Ratio | Self::LogarithmOfRatio | Self::PowerOfTen => "",
             Self::Second => "s",
             Self::Minute => "min",
             Self::Hour => "h",
@@ -187,7 +313,31 @@ impl Unit {
             Self::TonnePerYear => "t/a",
             Self::KilogramPerYear => "kg/a",
             Self::KilojoulePerMole => "kJ/mol",
+            Self::PicogramPerLitre => "pg/L",
+            Self::KilogramPerLitre => "kg/L",
+            Self::GramPerDecilitre => "g/100 mL",
+            Self::MilligramPerDecilitre => "mg/100 mL",
+            Self::NanomolePerLitre => "nmol/L",
+            Self::LitrePerGram => "L/g",
+            Self::Micropascal => "µPa",
+            Self::Millipascal => "mPa",
+            Self::Megapascal => "MPa",
+            Self::Millitorr => "mTorr",
+            Self::PoundPerSquareInch => "psi",
+            Self::KilogramPerMole => "kg/mol",
+            Self::KilopascalCubicMetrePerMole => "kPa m³/mol",
+            Self::AtmosphereLitrePerMole => "atm L/mol",
+            Self::GramPerKilogram => "g/kg",
+            Self::MilligramPerKilogram => "mg/kg",
+            Self::MicrogramPerKilogram => "µg/kg",
+            Self::KilotonnePerYear => "kt/a",
+            Self::Jour => "j",
         }
+    }
+
+    /// Whether a value of this unit was written as its logarithm, or as the value where its logarithm is kept.
+    pub fn is_rescaled(self) -> bool {
+        matches!(self, Self::LogLitrePerKilogram | Self::Ratio | Self::LogarithmOfRatio | Self::PowerOfTen)
     }
 
     /// The number in the canonical unit of the dimension; every conversion increases with the number.
@@ -195,6 +345,8 @@ impl Unit {
     /// `molar_mass` (g/mol) is needed for the molar concentrations only; without it they give `None`.
     pub fn to_canonical(self, number: f64, molar_mass: Option<f64>) -> Option<f64> {
         const PASCALS_PER_ATMOSPHERE: f64 = 101_325.0;
+        // The conventional millimetre of mercury (ISO 80000-4).
+        const PASCALS_PER_MILLIMETRE_MERCURY: f64 = 133.322_387_415;
         Some(match self {
             Self::One
             | Self::Day
@@ -206,24 +358,44 @@ impl Unit {
             | Self::PascalCubicMetrePerMole
             | Self::Percent
             | Self::TonnePerYear
-            | Self::KilojoulePerMole => number,
+            | Self::KilojoulePerMole
+            | Self::Jour
+            | Self::PowerOfTen => number,
             Self::Second => number / 86_400.0,
             Self::Minute => number / 1_440.0,
             Self::Hour => number / 24.0,
             Self::Week => number * 7.0,
             Self::Month => number * DAYS_PER_MONTH,
             Self::Year => number * 12.0 * DAYS_PER_MONTH,
-            Self::NanogramPerLitre => number / 1e6,
-            Self::MicrogramPerLitre | Self::KilogramPerYear => number / 1e3,
-            Self::GramPerLitre | Self::Kilopascal => number * 1e3,
+            Self::NanogramPerLitre | Self::Micropascal => number / 1e6,
+            Self::MicrogramPerLitre | Self::KilogramPerYear | Self::Millipascal => number / 1e3,
+            Self::GramPerLitre
+            | Self::Kilopascal
+            | Self::LitrePerGram
+            | Self::KilogramPerMole
+            | Self::KilopascalCubicMetrePerMole
+            | Self::KilotonnePerYear => number * 1e3,
+            Self::PicogramPerLitre => number / 1e9,
+            Self::KilogramPerLitre | Self::Megapascal => number * 1e6,
+            Self::GramPerDecilitre => number * 1e4,
+            Self::MilligramPerDecilitre => number * 10.0,
+            Self::NanomolePerLitre => number * molar_mass? / 1e6,
+            Self::Millitorr => number * PASCALS_PER_MILLIMETRE_MERCURY / 1e3,
+            // One pound-force (0.45359237 kg at 9.80665 m/s²) on a square of 0.0254 m.
+            Self::PoundPerSquareInch => number * 6_894.757_293_168,
+            Self::AtmosphereLitrePerMole => number * PASCALS_PER_ATMOSPHERE / 1e3,
+            Self::GramPerKilogram => number / 10.0,
+            Self::MilligramPerKilogram => number / 1e4,
+            Self::MicrogramPerKilogram => number / 1e7,
+            // A ratio that is not positive has no logarithm; what is not finite is no interval.
+            Self::Ratio => number.log10(),
             Self::MolePerLitre => number * molar_mass? * 1e3,
             Self::MillimolePerLitre => number * molar_mass?,
             Self::MicromolePerLitre => number * molar_mass? / 1e3,
-            Self::LogLitrePerKilogram => 10f64.powf(number),
+            Self::LogLitrePerKilogram | Self::LogarithmOfRatio => 10f64.powf(number),
             Self::Hectopascal => number * 1e2,
             Self::Bar => number * 1e5,
-            // The conventional millimetre of mercury, 133.322387415 Pa (ISO 80000-4).
-            Self::MillimetreMercury => number * 133.322_387_415,
+            Self::MillimetreMercury => number * PASCALS_PER_MILLIMETRE_MERCURY,
             Self::Atmosphere | Self::AtmosphereCubicMetrePerMole => number * PASCALS_PER_ATMOSPHERE,
             Self::Kelvin => number - 273.15,
             Self::Fahrenheit => (number - 32.0) / 1.8,

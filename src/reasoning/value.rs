@@ -73,6 +73,9 @@ pub(crate) fn value_phrase(told: Told, used: &Used) -> String {
     let basis = basis_phrase(evidence.basis);
     let origin = origin_phrase(told, evidence);
     let mut beside = vec![format!("{basis}, {origin}")];
+    if evidence.unit.is_rescaled() {
+        beside.push(format!("written as {}", as_written(evidence)));
+    }
     match used.adjustment {
         Some(Adjustment::HalfLifeTemperature { from, to, factor }) => beside.push(format!(
             "tested at {} °C; {} at {} °C, {factor:.2} times that",
@@ -102,6 +105,12 @@ pub(crate) fn value_phrase(told: Told, used: &Used) -> String {
         beside.push("a lower bound, since the substance was partly ionised at the pH of the test".to_owned());
     }
     format!("{} {value} ({})", used.property.title(), beside.join("; "))
+}
+
+/// What the cell says where the value is kept as its logarithm or without it.
+fn as_written(evidence: &Evidence) -> String {
+    let bare = evidence.reported.parse::<f64>().is_ok();
+    if bare { format!("the logarithm {}", evidence.reported) } else { format!("`{}`", evidence.reported) }
 }
 
 /// The limit as a reader knows it: `> 2000 L/kg`, `H350 or H340`, `not readily biodegradable`.

@@ -15,6 +15,7 @@ mod remark;
 mod statements;
 mod totals;
 
+use std::collections::BTreeSet;
 use std::sync::Arc;
 
 pub(crate) use remark::Said;
@@ -22,7 +23,7 @@ pub(crate) use remark::Said;
 use crate::columns::{Column, Recognised};
 use crate::fault::{CellFault, CellFaultKind};
 use crate::substance::{Basis, Field, Property, Substance};
-use crate::workbook::{CellRef, Row};
+use crate::workbook::{Cell, CellContent, CellRef, Row, StyleId};
 use draft::Draft;
 
 /// What a value without a word on how it was obtained counts as (`--unstated`).
@@ -54,6 +55,7 @@ pub struct RowReader {
     /// Molar mass first, because molar concentrations need it.
     columns: Vec<Column>,
     unstated: UnstatedBasis,
+    percentages: BTreeSet<StyleId>,
 }
 
 impl RowReader {
@@ -61,7 +63,14 @@ impl RowReader {
     pub fn new(sheet: Arc<str>, columns: &Recognised, unstated: UnstatedBasis) -> Self {
         let mut columns = columns.columns.clone();
         columns.sort_by_key(|column| column.field != Field::Property(Property::MolarMass));
-        Self { sheet, columns, unstated }
+        Self { sheet, columns, unstated, percentages: BTreeSet::new() }
+    }
+
+    /// The same reader, which knows the cell formats that show numbers as percentages: 0.12 as `12 %`.
+    #[must_use]
+    pub fn with_percentages(mut self, formats: impl IntoIterator<Item = StyleId>) -> Self {
+        self.percentages = formats.into_iter().collect();
+        self
     }
 
     /// The cell that says that the row holds a total and no substance, as a fault; `None` for a row of a substance.
@@ -76,9 +85,57 @@ impl RowReader {
         let mut draft = Draft::new(Arc::clone(&self.sheet), row.index);
         for column in &self.columns {
             if let Some(cell) = row.cell(column.index) {
-                draft.take(column, cell);
+                match self.as_percentage(cell) {
+                    Some(shown) => draft.take(column, &shown),
+                    None => draft.take(column, cell),
+                }
             }
         }
         draft.finish(self.unstated)
+    }
+
+    /// A number that the sheet shows as a percentage, with what it shows as its text.
+    fn as_percentage(&self, cell: &Cell) -> Option<Cell> {
+        let shown = cell.style.is_some_and(|style| self.percentages.contains(&style));
+        match &cell.content {
+            CellContent::Number(number) if shown => {
+                Some(Cell { content: CellContent::Text(percentage_of(*number)), ..cell.clone() })
+            }
+            _ => None,
+        }
+    }
+}
+
+/// A hundred times a number with its sign, every digit kept: 0.07 is `7 %`.
+fn percentage_of(number: f64) -> String {
+    let scientific = format!("{number:e}");
+    let moved = scientific.split_once('e').and_then(|(digits, power)| {
+        let power = power.parse::<i32>().ok()? + 2;
+        format!("{digits}e{power}").parse::<f64>().ok()
+    });
+    let text = moved.unwrap_or(number * 100.0).to_string();
+    // Three decimals could be read as thousands.
+    let three = text.rsplit_once('.').is_some_and(|(_, decimals)| decimals.len() == 3);
+    if three { format!("{text}0 %") } else { format!("{text} %") }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::percentage_of;
+
+    #[test]
+    fn a_number_shown_as_a_percentage_keeps_its_digits() {
+        for (number, text) in [
+            (0.12, "12 %"),
+            (0.07, "7 %"),
+            (0.001, "0.1 %"),
+            (1.0, "100 %"),
+            (0.0, "0 %"),
+            (-0.05, "-5 %"),
+            (0.123_45, "12.3450 %"),
+            (1e-7, "0.00001 %"),
+        ] {
+            assert_eq!(percentage_of(number), text);
+        }
     }
 }

@@ -16,6 +16,16 @@ pub struct Appearance {
     format: Format,
     numbers: Numbers,
     lines: Lines,
+    scale: Scale,
+}
+
+/// What a number is shown as.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
+enum Scale {
+    #[default]
+    Itself,
+    /// A hundred times the number, and a percent sign.
+    Percentage,
 }
 
 /// Whether a text runs over several lines.
@@ -48,6 +58,11 @@ impl Appearance {
         }
     }
 
+    /// Whether it shows a number such as 0.12 as `12 %`.
+    pub fn shows_percentages(&self) -> bool {
+        self.scale == Scale::Percentage
+    }
+
     /// Whether its text runs over several lines.
     pub(super) fn lines(&self) -> Lines {
         self.lines
@@ -60,12 +75,17 @@ impl Appearance {
 
     /// Nothing but a way to show numbers, written as spreadsheet programs write it.
     pub(super) fn of_numbers(code: &str) -> Self {
-        Self { format: Format::new().set_num_format(code), numbers: Numbers::Formatted, lines: Lines::One }
+        Self {
+            format: Format::new().set_num_format(code),
+            numbers: Numbers::Formatted,
+            scale: if has_percent_sign(code) { Scale::Percentage } else { Scale::Itself },
+            lines: Lines::One,
+        }
     }
 
     /// Nothing but room for several lines of text.
     pub(super) fn of_several_lines() -> Self {
-        Self { format: Format::new().set_text_wrap(), numbers: Numbers::AsTyped, lines: Lines::Wrapped }
+        Self { format: Format::new().set_text_wrap(), lines: Lines::Wrapped, ..Self::default() }
     }
 }
 
@@ -85,7 +105,8 @@ impl From<&Style> for Appearance {
             format = with_alignment(format, alignment);
         }
         let wraps = style.alignment.as_ref().is_some_and(|alignment| alignment.wrap_text);
-        Self { format, numbers, lines: if wraps { Lines::Wrapped } else { Lines::One } }
+        let scale = scale_of(style.number_format.as_ref());
+        Self { format, numbers, lines: if wraps { Lines::Wrapped } else { Lines::One }, scale }
     }
 }
 
@@ -101,6 +122,34 @@ fn number_format(number: Option<&NumberFormat>) -> (Format, Numbers) {
         _ if number.format_code == "General" => (format, Numbers::AsTyped),
         _ => (format.set_num_format(number.format_code.as_str()), Numbers::Formatted),
     }
+}
+
+/// A percent sign in the part of a format for positive numbers, outside quotation marks, shows a percentage. The built-in
+/// formats 9 and 10 are `0%` and `0.00%`.
+fn scale_of(number: Option<&NumberFormat>) -> Scale {
+    let Some(number) = number else {
+        return Scale::Itself;
+    };
+    let built_in = number.format_id.is_some_and(|id| id == 9 || id == 10);
+    if built_in || has_percent_sign(&number.format_code) { Scale::Percentage } else { Scale::Itself }
+}
+
+fn has_percent_sign(format_code: &str) -> bool {
+    let mut quoted = false;
+    let mut characters = format_code.chars();
+    while let Some(character) = characters.next() {
+        match character {
+            '"' => quoted = !quoted,
+            // The next character is shown as it is, or left as wide a gap.
+            '\\' | '_' | '*' if !quoted => {
+                characters.next();
+            }
+            ';' if !quoted => return false,
+            '%' if !quoted => return true,
+            _ => {}
+        }
+    }
+    false
 }
 
 fn with_font(mut format: Format, font: &Font) -> Format {
@@ -263,5 +312,20 @@ fn translate_pattern(pattern: FillPattern) -> FormatPattern {
         FillPattern::LightGrid => FormatPattern::LightGrid,
         FillPattern::LightTrellis => FormatPattern::LightTrellis,
         _ => FormatPattern::None,
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::has_percent_sign;
+
+    #[test]
+    fn a_percent_sign_counts_where_the_format_shows_numbers_by_it() {
+        for code in ["0%", "0.00%", "0.0 %", "[Red]0%", "#,##0.0%;-0%"] {
+            assert!(has_percent_sign(code), "{code}");
+        }
+        for code in ["0.00", "General", "0\" %\"", "0\\%", "0;0%", ""] {
+            assert!(!has_percent_sign(code), "{code}");
+        }
     }
 }

@@ -54,7 +54,7 @@ fn imports_point_one_way() {
 
 #[test]
 fn each_outside_crate_is_named_in_its_own_rooms() {
-    let table: [(&str, &[&str]); 17] = [
+    let table: [(&str, &[&str]); 21] = [
         ("calamine", &["workbook"]),
         ("rust_xlsxwriter", &["workbook"]),
         ("zip", &["workbook"]),
@@ -74,6 +74,8 @@ fn each_outside_crate_is_named_in_its_own_rooms() {
         ("clap", &["bin"]),
         ("encoding_rs", &["workbook"]),
         ("codepage", &["workbook"]),
+        ("unicode_normalization", &["columns"]),
+        ("unicode_width", &["bin"]),
     ];
     for (name, rooms) in table {
         let (path, import) = (format!("{name}::"), format!("use {name}"));

@@ -173,14 +173,46 @@ fn columns_tells_what_was_found_and_what_was_not() {
     assert_eq!(run.status, 0);
     insta::assert_snapshot!(run.said.trim_end(), @r"
     Substances: header in row 2.
-      A   Name                              name                        named by `name`
-      B   CAS No.                           cas-number                  named by `cas`
-      C   log Kow                           log-kow                     named by `log kow`
-      D   CAS number                        cas-number                  named by `cas`
-      E   Colour                            not recognised
-      Substances: columns B (`CAS No.`) and D (`CAS number`) both name cas-number; both are read, and a row in which they differ is not identified; to take one alone: --column 'CAS No.=ignore' or --column 'CAS number=ignore'
+      A  Name        name        named by `name`
+      B  CAS No.     cas-number  named by `cas`
+      C  log Kow     log-kow     named by `log kow`; decimal point, as the column's other cells show
+      D  CAS number  cas-number  named by `cas`
+      E  Colour      not used    not recognised
+      Note: Substances: columns B (`CAS No.`) and D (`CAS number`) both name cas-number; both are read, and a row in which they differ is not identified; to take one alone: --column 'CAS No.=ignore' or --column 'CAS number=ignore'
     ");
     assert_eq!(place.files(), ["inventory.xlsx"]);
+}
+
+#[test]
+fn columns_lines_up_headers_of_several_rows_and_wide_signs() {
+    let place = Place::with_rows(vec![
+        texts(&["物質名", "CAS番号", "土壌半減期", "", "Water solubility", "BCF", "Half-lfe air", "Stock"]),
+        texts(&["", "", "測定", "推算", "mg/L", "fish", "", ""]),
+        texts(&["DDT", "50-29-3", "2000", "1500", "0,005", "3,1", "", "12"]),
+        texts(&["Phenol", "108-95-2", "3", "4", "84000", "1,2", "", "12"]),
+        texts(&["a", "", "3", "4", "84000", "2,2", "", "12"]),
+        texts(&["b", "", "3", "4", "84000", "4,5", "", "12"]),
+        texts(&["c", "", "3", "4", "84000", "3,25", "", "12"]),
+    ]);
+    let run = place.run(&["columns", "inventory.xlsx"]);
+    assert_eq!(run.status, 0);
+    insta::assert_snapshot!(run.said.trim_end(), @"");
+}
+
+#[test]
+fn a_column_named_by_its_letter_is_taken_and_one_that_is_not_there_is_refused() {
+    let place = Place::with_rows(sound_rows());
+    assert_eq!(place.screen(&["--column", "Substances!A:A=ignore"]).status, 0);
+    assert!(!place.screened("Record").text().contains("|DDT|"));
+    for other in ["Z:Z=bcf", "Other!A:A=bcf"] {
+        let run = place.run(&["columns", "inventory.xlsx", "--column", other]);
+        assert_eq!(run.status, 2, "{other}");
+        assert!(
+            run.complained.starts_with("--column: no sheet has a column with the header"),
+            "{}",
+            run.complained
+        );
+    }
 }
 
 #[test]

@@ -2,34 +2,48 @@
 
 use std::collections::BTreeSet;
 
-use kowledger::columns::{Column, ColumnOverride, ColumnWords, Recognised, recognise};
-use kowledger::quantity::{DecimalStyle, Unit};
-use kowledger::substance::{Basis, Field, Property};
+use kowledger::columns::{Column, ColumnOverride, Recognised, recognise};
+use kowledger::quantity::{DecimalStyle, Unit, format_number};
+use kowledger::substance::{Basis, DegradationKind, Field, Property};
 use kowledger::workbook::{CellContent, Row};
 
-use crate::sheet::{columns_of, content_row, text_row};
+use crate::sheet::{columns_of, content_row, text_row, words};
 
 const TABLE: &str = include_str!("../fixtures/headers.tsv");
 
-/// Language, header, field and unit of each line of the table.
-fn table() -> impl Iterator<Item = (&'static str, String, &'static str, &'static str)> {
+const LANGUAGES: [&str; 8] = ["en", "de", "fr", "es", "it", "nl", "ja", "zh"];
+
+/// A line of the table.
+struct Known {
+    language: &'static str,
+    header: String,
+    field: &'static str,
+    unit: &'static str,
+    said: &'static str,
+}
+
+fn table() -> impl Iterator<Item = Known> {
     TABLE.lines().filter(|line| !line.starts_with('#')).map(|line| {
         let mut parts = line.split('\t');
         let mut next = || parts.next().unwrap_or_default();
-        let (language, header, field) = (next(), next(), next());
-        (language, header.replace("\\n", "\n"), field, next())
+        let (language, header) = (next(), next().replace("\\n", "\n"));
+        Known { language, header, field: next(), unit: next(), said: next() }
     })
+}
+
+/// The column of a header beside others. A SMILES column makes the sheet an inventory and is named by no other header,
+/// but by its own.
+fn column_of(header: &str) -> Option<Column> {
+    let recognised = columns_of(&[text_row(0, &[header, "SMILES", "Supplier", "Name"])]).unwrap();
+    recognised.columns.into_iter().find(|column| column.index == 0)
 }
 
 #[test]
 fn every_header_of_the_table_names_its_field_and_unit() {
     let mut wrong = Vec::new();
-    for (_, header, field, unit) in table() {
-        // A SMILES column makes the sheet an inventory and is named by no other header, but by its own.
-        let rows = [text_row(0, &[&header, "SMILES", "Supplier", "Name"])];
-        let recognised = columns_of(&rows).unwrap();
-        let found = recognised.columns.iter().find(|column| column.index == 0);
-        let found_field = found.map_or("none", |column| column.field.id());
+    for Known { header, field, unit, .. } in table() {
+        let found = column_of(&header);
+        let found_field = found.as_ref().map_or("none", |column| column.field.id());
         let found_unit = found.and_then(|column| column.unit).map_or("", Unit::symbol);
         if (found_field, found_unit) != (field, unit) {
             wrong.push(format!("`{header}`: expected {field} {unit}, found {found_field} {found_unit}"));
@@ -38,11 +52,52 @@ fn every_header_of_the_table_names_its_field_and_unit() {
     assert!(wrong.is_empty(), "{}", wrong.join("\n"));
 }
 
+/// Basis and conditions as the table writes them.
+fn said(column: &Column) -> String {
+    let conditions = &column.conditions;
+    let degradation = match conditions.degradation {
+        DegradationKind::Ultimate => Some("ultimate".to_owned()),
+        DegradationKind::Primary => Some("primary".to_owned()),
+        DegradationKind::NotStated => None,
+    };
+    let parts = [
+        column.basis.map(|basis| basis.word().to_owned()),
+        conditions.temperature.map(|degrees| format!("{} °C", format_number(degrees))),
+        conditions.ph.map(|ph| format!("pH {}", format_number(ph))),
+        conditions.lipid.map(|lipid| format!("{} % lipid", format_number(lipid))),
+        degradation,
+        conditions.organism.as_ref().map(|_| "organism".to_owned()),
+        conditions.method.as_ref().map(|_| "guideline".to_owned()),
+    ];
+    parts.into_iter().flatten().collect::<Vec<_>>().join("; ")
+}
+
 #[test]
-fn every_field_is_named_in_both_languages() {
-    for language in ["en", "de"] {
+fn headers_of_the_table_carry_their_basis_and_conditions() {
+    let mut wrong = Vec::new();
+    for known in table().filter(|known| !known.said.is_empty()) {
+        let found = column_of(&known.header).map(|column| said(&column)).unwrap_or_default();
+        if found != known.said {
+            wrong.push(format!("`{}`: expected {}, found {found}", known.header, known.said));
+        }
+    }
+    assert!(wrong.is_empty(), "{}", wrong.join("\n"));
+}
+
+#[test]
+fn every_language_has_its_headers_that_name_a_field_and_that_name_none() {
+    for language in LANGUAGES {
+        let (none, named): (Vec<Known>, Vec<Known>) =
+            table().filter(|known| known.language == language).partition(|known| known.field == "none");
+        assert!(named.len() >= 90 && none.len() >= 10, "{language}: {} and {}", named.len(), none.len());
+    }
+}
+
+#[test]
+fn every_field_is_named_in_all_eight_languages() {
+    for language in LANGUAGES {
         let named: BTreeSet<&str> =
-            table().filter(|(of, ..)| *of == language).map(|(_, _, field, _)| field).collect();
+            table().filter(|known| known.language == language).map(|known| known.field).collect();
         let missing: Vec<&str> = Field::all().map(Field::id).filter(|id| !named.contains(id)).collect();
         assert!(missing.is_empty(), "{language}: {missing:?}");
     }
@@ -200,8 +255,8 @@ fn numbers_that_could_group_thousands_are_remarked_on() {
 fn recognised_with(headers: &[&str], overrides: &[&str]) -> Result<Recognised, String> {
     let overrides =
         overrides.iter().map(|text| ColumnOverride::parse(text)).collect::<Result<Vec<_>, _>>()?;
-    recognise("Sheet", &[text_row(0, headers)], &ColumnWords::built_in()?, &overrides)
-        .ok_or_else(|| "no inventory".to_owned())
+    let rows = [text_row(0, headers), text_row(1, &vec!["x"; headers.len()])];
+    recognise("Sheet", &rows, words()?, &overrides).ok_or_else(|| "no inventory".to_owned())
 }
 
 #[test]
@@ -212,6 +267,29 @@ fn the_user_can_name_a_column_or_leave_it_aside() {
     assert_eq!(fields, ["cas-number", "log-kow"]);
     assert_eq!(recognised.unknown, [(2, "log Kow".to_owned())]);
     assert_eq!(recognised.columns[1].reason, "told by --column");
+}
+
+#[test]
+fn the_user_can_name_a_column_by_its_letter_with_or_without_a_header() {
+    let headers = ["CAS", "SMILES", "SMILES", "", "H:H"];
+    let doubled = recognised_with(&headers, &[]).unwrap();
+    assert_eq!(
+        doubled.remarks,
+        [
+            "Sheet: columns B (`SMILES`) and C (`SMILES`) both name smiles; B is taken; to take the other: --column \
+             'Sheet!B:B=ignore'"
+        ]
+    );
+    let told = ["Sheet!B:B=ignore", "D:D=bcf", "Other!A:A=ignore"];
+    let recognised = recognised_with(&headers, &told).unwrap();
+    let columns: Vec<(u16, &str)> =
+        recognised.columns.iter().map(|column| (column.index, column.field.id())).collect();
+    assert_eq!(columns, [(0, "cas-number"), (2, "smiles"), (3, "bcf")]);
+    assert_eq!(recognised.columns[2].header, "(no header)");
+    let has = |text: &str| recognised.has_column_of(&ColumnOverride::parse(text).unwrap());
+    assert!(has("C:C=bcf") && !has("F:F=bcf") && !has("Other!A:A=ignore"));
+    // A header that is written like a column is still one.
+    assert!(has("H:H=bcf"));
 }
 
 #[test]
@@ -265,6 +343,101 @@ fn several_columns_of_reliability_speak_of_the_value_to_their_left() {
 fn rows_without_text_are_no_header() {
     let rows = [content_row(0, &[CellContent::Number(1.0), CellContent::Empty]), text_row(1, &[])];
     assert!(columns_of(&rows).is_err());
+}
+
+/// The brackets of a header in another form.
+fn with_brackets(header: &str, open: char, close: char) -> String {
+    header
+        .chars()
+        .map(|character| match character {
+            '(' | '[' | '（' | '［' | '【' => open,
+            ')' | ']' | '）' | '］' | '】' => close,
+            other => other,
+        })
+        .collect()
+}
+
+/// ASCII letters and digits as Japanese programs write them.
+fn full_width(header: &str) -> String {
+    let wide = |character: char| match character {
+        '!'..='~' => char::from_u32(u32::from(character) + 0xFEE0).unwrap_or(character),
+        other => other,
+    };
+    header.chars().map(wide).collect()
+}
+
+fn without_accents(header: &str) -> String {
+    let plain = |character: char| match character {
+        'é' | 'è' | 'ê' | 'ë' => 'e',
+        'É' | 'È' => 'E',
+        'à' | 'á' | 'â' => 'a',
+        'ì' | 'í' => 'i',
+        'ò' | 'ó' => 'o',
+        'ù' | 'ú' => 'u',
+        'ñ' => 'n',
+        'ç' => 'c',
+        other => other,
+    };
+    header.chars().map(plain).collect()
+}
+
+#[test]
+fn case_accents_brackets_width_and_line_breaks_make_no_difference() {
+    let mut wrong = Vec::new();
+    for known in table() {
+        // In `L(E)C50` the brackets are no remark, and capitals within a word part it.
+        let header = known.header.as_str();
+        let bracketed = |open, close| {
+            if header.contains("(E)") { header.to_owned() } else { with_brackets(header, open, close) }
+        };
+        let mut forms = vec![
+            format!(" {}\t", without_accents(header).replace(' ', "  ")),
+            full_width(header),
+            bracketed('[', ']').replace(' ', "\n"),
+            bracketed('（', '）').replace(' ', "\u{A0}"),
+        ];
+        if !header.contains("WaterS") && !header.contains("LogK") {
+            forms.extend([bracketed('【', '】').to_lowercase(), header.to_uppercase()]);
+        }
+        for form in forms {
+            let found = column_of(&form).map_or("none", |column| column.field.id());
+            if found != known.field {
+                wrong.push(format!("`{form:?}`: expected {}, found {found}", known.field));
+            }
+        }
+    }
+    assert!(wrong.is_empty(), "{}", wrong.join("\n"));
+}
+
+/// The shortest of three times.
+fn time_of(work: impl Fn()) -> std::time::Duration {
+    let once = |_| {
+        let start = std::time::Instant::now();
+        work();
+        start.elapsed()
+    };
+    (0..3).map(once).min().unwrap_or_default()
+}
+
+#[test]
+fn a_header_row_of_four_times_as_many_columns_takes_no_more_than_eight_times_as_long() {
+    let row = |columns: usize| {
+        let headers: Vec<String> = table().map(|known| known.header).collect();
+        let texts: Vec<&str> = headers.iter().map(String::as_str).cycle().take(columns).collect();
+        text_row(0, &texts)
+    };
+    let (short, long) = ([row(500)], [row(2000)]);
+    let (short, long) = (time_of(|| drop(columns_of(&short))), time_of(|| drop(columns_of(&long))));
+    assert!(long < short * 8, "{short:?} and {long:?}");
+}
+
+#[test]
+fn a_text_of_any_length_is_looked_at_quickly() {
+    for text in ["水".repeat(30_000), "half life ".repeat(3_000), "(".repeat(30_000), "a".repeat(30_000)] {
+        let rows = [text_row(0, &["CAS", &text]), text_row(1, &[&text, &text])];
+        let taken = time_of(|| drop(columns_of(&rows)));
+        assert!(taken < std::time::Duration::from_secs(2), "{taken:?}");
+    }
 }
 
 proptest::proptest! {

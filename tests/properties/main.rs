@@ -2,6 +2,8 @@
 
 mod cells;
 mod columns;
+mod doubtful_columns;
+mod header_rows;
 mod identity;
 mod quantity;
 mod sheet;

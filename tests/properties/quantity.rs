@@ -1,7 +1,7 @@
 //! What holds for every text and every interval.
 
 use kowledger::quantity::{
-    Bound, Comparison, DecimalStyle, Dimension, Interval, Outcome, ReadAs, Unit, format_interval,
+    Bound, Comparison, DecimalStyle, Dimension, Interval, Outcome, ReadAs, Scale, Unit, format_interval,
     format_number, parse_limit, parse_quantity,
 };
 use proptest::prelude::{Just, Strategy, any, prop_assert, prop_assert_eq, prop_oneof, proptest};
@@ -21,7 +21,7 @@ const DIMENSIONS: [Dimension; 11] = [
 ];
 
 fn read_as(dimension: Dimension, decimal: DecimalStyle) -> ReadAs {
-    ReadAs { dimension, default_unit: dimension.canonical(), decimal, molar_mass: None }
+    ReadAs { dimension, default_unit: dimension.canonical(), decimal, scale: Scale::Linear, molar_mass: None }
 }
 
 /// Numbers with at most four digits, as they are written in cells.

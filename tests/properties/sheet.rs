@@ -1,5 +1,7 @@
 //! Small sheets written as text, and what the library makes of their rows.
 
+use std::sync::LazyLock;
+
 use kowledger::columns::{ColumnWords, Recognised, recognise};
 use kowledger::substance::{RowReader, Substance, UnstatedBasis};
 use kowledger::workbook::{Cell, CellContent, Row};
@@ -24,9 +26,17 @@ pub fn content_row(index: usize, contents: &[CellContent]) -> Row {
     Row { index: u32::try_from(index).unwrap_or(u32::MAX), cells }
 }
 
+/// Read once, because that takes longer than a test.
+static WORDS: LazyLock<Result<ColumnWords, String>> = LazyLock::new(ColumnWords::built_in);
+
+/// The built-in words of columns.
+pub fn words() -> Result<&'static ColumnWords, String> {
+    WORDS.as_ref().map_err(Clone::clone)
+}
+
 /// The columns of a sheet with these rows.
 pub fn columns_of(rows: &[Row]) -> Result<Recognised, String> {
-    recognise("Sheet", rows, &ColumnWords::built_in()?, &[]).ok_or_else(|| "no inventory".to_owned())
+    recognise("Sheet", rows, words()?, &[]).ok_or_else(|| "no inventory".to_owned())
 }
 
 /// The last row of a sheet of text rows, the first of which is the header.

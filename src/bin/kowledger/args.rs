@@ -50,7 +50,8 @@ pub(crate) struct ScreenArguments {
     /// Screen this sheet only; may be repeated [default: every sheet with a recognised header]
     #[arg(long, value_name = "NAME")]
     sheet: Vec<String>,
-    /// Say what a column holds, for example `--column 'Pow=log-kow'`, or `'Pow=ignore'`; may be repeated
+    /// Say what a column holds, for example `--column 'Pow=log-kow'`, or `'Pow=ignore'`, or by its letter, `'H:H=log-kow'`
+    /// or `'Sheet1!H:H=log-kow'`; may be repeated
     #[arg(long, value_name = "HEADER=FIELD")]
     column: Vec<String>,
     /// What a value counts as that does not say how it was obtained

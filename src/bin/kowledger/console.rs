@@ -6,7 +6,8 @@ use kowledger::fault::{Refusal, count};
 use kowledger::judge::Verdict;
 use kowledger::rules::RulebookSummary;
 use kowledger::run::{RecognisedSheet, Summary};
-use kowledger::workbook::column_letters;
+
+use crate::listing::columns_listing;
 
 /// Different faults that are shown, a sentence each; the total by kind follows.
 const FAULTS_SHOWN: usize = 20;
@@ -89,29 +90,7 @@ pub(crate) fn refuse(refusal: &Refusal) {
 
 /// What was recognised on each sheet, and why.
 pub(crate) fn columns(sheets: &[RecognisedSheet]) {
-    let mut lines = Vec::new();
-    lines.extend(sheets.iter().flat_map(|sheet| sheet.how_read.iter().cloned()));
-    for sheet in sheets {
-        let Some(recognised) = &sheet.recognised else {
-            lines.push(format!("{}: no header recognised; the sheet would be copied.", sheet.name));
-            continue;
-        };
-        lines.push(format!("{}: header in row {}.", sheet.name, recognised.header_row + 1));
-        lines.extend(recognised.columns.iter().map(|column| {
-            format!(
-                "  {:<4}{:<34}{:<28}{}",
-                column_letters(column.index),
-                column.header.replace('\n', " "),
-                column.field.id(),
-                column.reason
-            )
-        }));
-        lines.extend(recognised.unknown.iter().map(|(index, header)| {
-            format!("  {:<4}{:<34}not recognised", column_letters(*index), header.replace('\n', " "))
-        }));
-        lines.extend(recognised.remarks.iter().map(|remark| format!("  {remark}")));
-    }
-    print(&lines);
+    print(&columns_listing(sheets));
 }
 
 /// The built-in rulebooks.

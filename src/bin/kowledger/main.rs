@@ -3,6 +3,7 @@
 mod args;
 mod console;
 mod dispatch;
+mod listing;
 
 use std::process::ExitCode;
 

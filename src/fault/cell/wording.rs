@@ -42,8 +42,8 @@ impl CellFaultKind {
             ),
             Self::SeveralValues { what } => say(
                 "more than one value",
-                format!("holds more than one value of {what}"),
-                "write one, a range such as `3–5`, or use a column for each",
+                format!("holds more than one value of {what} and cannot be taken apart"),
+                "write one, a range such as `3–5`, or whole values with semicolons between, and remarks in brackets",
             ),
             Self::UnknownUnit { word, nearest: Some(unit), .. } => say(
                 "unknown unit",
@@ -54,6 +54,11 @@ impl CellFaultKind {
                 "unknown unit",
                 format!("has the unknown unit `{word}`"),
                 format!("write, for example, `{example}`, and put remarks in brackets"),
+            ),
+            Self::WrongUnit { unit, what, example } if unit.symbol().is_empty() => say(
+                "unit that does not fit",
+                format!("is said to have no unit, but {what} has one"),
+                format!("write, for example, `{example}`"),
             ),
             Self::WrongUnit { unit, what, example } => say(
                 "unit that does not fit",
@@ -233,6 +238,33 @@ impl CellFaultKind {
                 "test of another kind",
                 format!("names `{test}`, which does not settle ready biodegradability"),
                 "write `ready`, `not ready` or the result of a test for it, for example `82 %, 28 d, OECD 301B`",
+            ),
+            Self::NotALogarithm { what, example } => say(
+                "logarithm expected",
+                format!("is far outside what {what} can be as a logarithm"),
+                format!("if it is the value itself, write it with its name, for example `{example}`"),
+            ),
+            Self::MayBeLogarithm { what, example } => say(
+                "negative number",
+                format!("is negative, which {what} cannot be"),
+                format!("if it is a logarithm, write, for example, `{example}`, else check the sign"),
+            ),
+            Self::LogarithmOrNot { what, example } => say(
+                "logarithm or not",
+                format!("may be a value of {what} or its logarithm"),
+                format!(
+                    "write `{example}` for the logarithm, and the value in a column without `log` in its header"
+                ),
+            ),
+            Self::DaysOrYears => say(
+                "days or years",
+                "may be in days or in years, since `j` stands for both",
+                "write `d` or `a`, for example `40 d`",
+            ),
+            Self::DimensionlessHenry => say(
+                "unit missing",
+                "has no unit, and as a ratio of concentrations it depends on a temperature that is not certain",
+                "write it in Pa m3/mol, for example `1.5 Pa m3/mol`",
             ),
         }
     }

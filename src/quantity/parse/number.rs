@@ -29,6 +29,9 @@ pub(super) fn read_number(text: &str, decimal: DecimalStyle) -> Result<Option<(f
         let (exponent, rest) = take_exponent(digits.rest)?;
         (plain_decimal(digits.written, decimal, exponent)?, exponent, rest)
     };
+    if goes_on_like_a_number(rest) {
+        return Err(QuantityFault::BadNumber);
+    }
     let written = format!("{sign}{mantissa}e{}", exponent.unwrap_or("0"));
     let number: f64 = written.parse().map_err(|_| QuantityFault::BadNumber)?;
     let vanished =
@@ -37,6 +40,12 @@ pub(super) fn read_number(text: &str, decimal: DecimalStyle) -> Result<Option<(f
         return Err(QuantityFault::BadRange);
     }
     Ok(Some((number, rest)))
+}
+
+/// `4.2e4.8` is no number and `4.2` no part of it.
+fn goes_on_like_a_number(rest: &str) -> bool {
+    let exponent = rest.strip_prefix(['e', 'E']).map(|after| after.trim_start_matches(['-', '+']));
+    exponent.is_some_and(|after| after.starts_with(|first: char| first.is_ascii_digit()))
 }
 
 /// Whether a number starts here.
@@ -171,12 +180,40 @@ fn without_groups(whole: &str, separator: char) -> Result<String, QuantityFault>
 
 /// `10^-3` standing alone.
 fn power_of_ten(text: &str) -> Option<(&str, &str)> {
-    take_integer(text.strip_prefix("10^")?)
+    let power = raised(text.strip_prefix("10")?)?;
+    in_brackets(power, take_integer)
 }
 
-/// `E-3`, `·10^-3`, `x 10^3`, `×10-3`; nothing if none of these follows.
+/// The exponent of a power of ten that stands alone, decimals and all: `10^4.5`.
+pub(super) fn read_power(text: &str, decimal: DecimalStyle) -> Option<(f64, &str)> {
+    let power = raised(text.trim_start().strip_prefix("10")?)?;
+    in_brackets(power, |power| read_number(power, decimal).ok().flatten())
+}
+
+fn raised(text: &str) -> Option<&str> {
+    text.strip_prefix("**").or_else(|| text.strip_prefix('^'))
+}
+
+/// What is read after an opening bracket, if there is one, and the rest after the closing one.
+fn in_brackets<'text, T>(
+    power: &'text str,
+    read: impl Fn(&'text str) -> Option<(T, &'text str)>,
+) -> Option<(T, &'text str)> {
+    match power.strip_prefix('(') {
+        None => read(power),
+        Some(inside) => {
+            let (exponent, rest) = read(inside.trim_start())?;
+            Some((exponent, rest.trim_start().strip_prefix(')')?))
+        }
+    }
+}
+
+/// `E-3`, `·10^-3`, `x 10^3`, `×10-3`; nothing if none of these follows. A space before `E` needs a sign after it.
 fn take_exponent(text: &str) -> Result<(Option<&str>, &str), QuantityFault> {
-    if let Some(after) = text.strip_prefix(['e', 'E']) {
+    let spaced = text.trim_start();
+    if let Some(after) = spaced.strip_prefix(['e', 'E'])
+        && (spaced.len() == text.len() || after.starts_with(['-', '+']))
+    {
         return Ok(match take_integer(after) {
             Some((exponent, rest)) => (Some(exponent), rest),
             None => (None, text),
@@ -189,16 +226,13 @@ fn take_exponent(text: &str) -> Result<(Option<&str>, &str), QuantityFault> {
     else {
         return Ok((None, text));
     };
-    let raised = after.strip_prefix("**").or_else(|| after.strip_prefix('^'));
-    let power = match raised {
+    let power = match raised(after) {
         Some(power) => power,
         // `10-3` has lost its superscript and can mean nothing else; `103` could be a number.
         None if after.starts_with('-') => after,
         None => return Err(QuantityFault::BadNumber),
     };
-    let bracketed = power.strip_prefix('(').map_or(power, str::trim_start);
-    let (exponent, rest) = take_integer(bracketed).ok_or(QuantityFault::BadNumber)?;
-    let rest = if bracketed.len() == power.len() { rest } else { rest.strip_prefix(')').unwrap_or(rest) };
+    let (exponent, rest) = in_brackets(power, take_integer).ok_or(QuantityFault::BadNumber)?;
     Ok((Some(exponent), rest))
 }
 
@@ -263,6 +297,8 @@ mod tests {
             ("3.4 * 10**2", 340.0),
             ("2 x 10-5", 2e-5),
             ("10^-3", 1e-3),
+            ("10**(-3)", 1e-3),
+            ("1.2 E-3", 1.2e-3),
         ] {
             assert!(read(text, DecimalStyle::Point).total_cmp(&number).is_eq(), "{text}");
         }
@@ -270,7 +306,8 @@ mod tests {
 
     #[test]
     fn digits_that_make_no_number_are_refused() {
-        for text in ["1.2.3", "1,23.4", "1.234.5", "01.02.2003", "3 x 103", "1,2345,678"] {
+        for text in ["1.2.3", "1,23.4", "1.234.5", "01.02.2003", "3 x 103", "1,2345,678", "4.2e4.8", "12E3.5"]
+        {
             assert_eq!(read_number(text, DecimalStyle::Point), Err(QuantityFault::BadNumber), "{text}");
         }
         for text in ["1e999", "1e-999"] {

@@ -1,4 +1,10 @@
-//! Signs and words that qualify a number, in English and German.
+//! Signs and words that qualify a number.
+
+mod phrases;
+
+use std::sync::LazyLock;
+
+use super::fold::{Plain, is_east_asian, unaccented};
 
 /// How a number is qualified.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
@@ -8,8 +14,10 @@ pub(super) enum Qualifier {
     Below,
     AtMost,
     About,
-    /// `=`, `from`, `von`: nothing is added to the number.
+    /// `=`, `is`: nothing is added to the number.
     Exactly,
+    /// `from`, `de`: nothing is added to the number, and a word for `to` may follow.
+    From,
     /// `between`, `zwischen`: `and` then parts the ends of a range.
     Between,
 }
@@ -28,118 +36,43 @@ const SIGNS: &[(&str, Qualifier)] = &[
     ("=", Qualifier::Exactly),
 ];
 
-/// Lower case. Longer phrases stand before those that start them.
-const PHRASES: &[(&str, Qualifier)] = &[
-    ("greater than or equal to", Qualifier::AtLeast),
-    ("more than or equal to", Qualifier::AtLeast),
-    ("not less than", Qualifier::AtLeast),
-    ("no less than", Qualifier::AtLeast),
-    ("at least", Qualifier::AtLeast),
-    ("minimum", Qualifier::AtLeast),
-    ("min.", Qualifier::AtLeast),
-    ("min", Qualifier::AtLeast),
-    ("größer oder gleich", Qualifier::AtLeast),
-    ("groesser oder gleich", Qualifier::AtLeast),
-    ("größer gleich", Qualifier::AtLeast),
-    ("groesser gleich", Qualifier::AtLeast),
-    ("mindestens", Qualifier::AtLeast),
-    ("ab", Qualifier::AtLeast),
-    ("less than or equal to", Qualifier::AtMost),
-    ("lower than or equal to", Qualifier::AtMost),
-    ("not more than", Qualifier::AtMost),
-    ("no more than", Qualifier::AtMost),
-    ("at most", Qualifier::AtMost),
-    ("up to", Qualifier::AtMost),
-    ("maximum", Qualifier::AtMost),
-    ("maximal", Qualifier::AtMost),
-    ("max.", Qualifier::AtMost),
-    ("max", Qualifier::AtMost),
-    ("kleiner oder gleich", Qualifier::AtMost),
-    ("kleiner gleich", Qualifier::AtMost),
-    ("höchstens", Qualifier::AtMost),
-    ("hoechstens", Qualifier::AtMost),
-    ("nicht mehr als", Qualifier::AtMost),
-    ("bis zu", Qualifier::AtMost),
-    ("bis", Qualifier::AtMost),
-    ("greater than", Qualifier::Above),
-    ("larger than", Qualifier::Above),
-    ("higher than", Qualifier::Above),
-    ("more than", Qualifier::Above),
-    ("above", Qualifier::Above),
-    ("over", Qualifier::Above),
-    ("exceeds", Qualifier::Above),
-    ("größer als", Qualifier::Above),
-    ("grösser als", Qualifier::Above),
-    ("groesser als", Qualifier::Above),
-    ("größer", Qualifier::Above),
-    ("groesser", Qualifier::Above),
-    ("mehr als", Qualifier::Above),
-    ("oberhalb", Qualifier::Above),
-    ("über", Qualifier::Above),
-    ("ueber", Qualifier::Above),
-    ("less than", Qualifier::Below),
-    ("lower than", Qualifier::Below),
-    ("smaller than", Qualifier::Below),
-    ("fewer than", Qualifier::Below),
-    ("below", Qualifier::Below),
-    ("under", Qualifier::Below),
-    ("kleiner als", Qualifier::Below),
-    ("kleiner", Qualifier::Below),
-    ("weniger als", Qualifier::Below),
-    ("unterhalb", Qualifier::Below),
-    ("unter", Qualifier::Below),
-    ("approximately", Qualifier::About),
-    ("approx.", Qualifier::About),
-    ("approx", Qualifier::About),
-    ("about", Qualifier::About),
-    ("around", Qualifier::About),
-    ("roughly", Qualifier::About),
-    ("circa", Qualifier::About),
-    ("zirka", Qualifier::About),
-    ("ca.", Qualifier::About),
-    ("ca", Qualifier::About),
-    ("c.", Qualifier::About),
-    ("etwa", Qualifier::About),
-    ("ungefähr", Qualifier::About),
-    ("ungefaehr", Qualifier::About),
-    ("rund", Qualifier::About),
-    ("between", Qualifier::Between),
-    ("zwischen", Qualifier::Between),
-    ("from", Qualifier::Exactly),
-    ("von", Qualifier::Exactly),
-];
+struct Phrase {
+    folded: String,
+    qualifier: Qualifier,
+}
 
-/// Words after a number that qualify it; lower case.
-const AFTER: &[(&str, Qualifier)] = &[
-    ("or more", Qualifier::AtLeast),
-    ("or higher", Qualifier::AtLeast),
-    ("or above", Qualifier::AtLeast),
-    ("or greater", Qualifier::AtLeast),
-    ("or longer", Qualifier::AtLeast),
-    ("and above", Qualifier::AtLeast),
-    ("and more", Qualifier::AtLeast),
-    ("oder mehr", Qualifier::AtLeast),
-    ("oder höher", Qualifier::AtLeast),
-    ("oder länger", Qualifier::AtLeast),
-    ("und mehr", Qualifier::AtLeast),
-    ("und höher", Qualifier::AtLeast),
-    ("or less", Qualifier::AtMost),
-    ("or lower", Qualifier::AtMost),
-    ("or below", Qualifier::AtMost),
-    ("or shorter", Qualifier::AtMost),
-    ("and below", Qualifier::AtMost),
-    ("oder weniger", Qualifier::AtMost),
-    ("oder kürzer", Qualifier::AtMost),
-    ("und weniger", Qualifier::AtMost),
-];
+static BEFORE: LazyLock<Vec<Phrase>> = LazyLock::new(|| longest_first(phrases::BEFORE));
+static AFTER: LazyLock<Vec<Phrase>> = LazyLock::new(|| longest_first(phrases::AFTER));
 
-/// The qualifier that stands after a number: `6 or more`, `6 oder weniger`, `6+`.
+fn longest_first(table: &[(Qualifier, &[&str])]) -> Vec<Phrase> {
+    let mut phrases: Vec<Phrase> = table
+        .iter()
+        .flat_map(|(qualifier, lines)| {
+            lines.iter().flat_map(|line| line.split('|')).map(|phrase| Phrase {
+                folded: phrase.chars().flat_map(char::to_lowercase).fold(String::new(), fold_onto),
+                qualifier: *qualifier,
+            })
+        })
+        .collect();
+    phrases.sort_by_key(|phrase| std::cmp::Reverse(phrase.folded.chars().count()));
+    phrases
+}
+
+fn fold_onto(mut folded: String, character: char) -> String {
+    match unaccented(character) {
+        Plain::Letters(letters) => folded.push_str(letters),
+        Plain::Same => folded.push(character),
+    }
+    folded
+}
+
+/// The qualifier that stands after a number: `6 or more`, `6 oder weniger`, `6以上`, `6+`.
 pub(super) fn take_qualifier_after(text: &str) -> Option<(Qualifier, &str)> {
     let text = text.trim_start();
     if let Some(rest) = text.strip_prefix('+').filter(|rest| rest.trim().is_empty()) {
         return Some((Qualifier::AtLeast, rest));
     }
-    AFTER.iter().find_map(|(phrase, qualifier)| strip_phrase(text, phrase).map(|rest| (*qualifier, rest)))
+    take_phrase(text, &AFTER)
 }
 
 /// The qualifier at the start of a text, if any, and what follows it.
@@ -147,38 +80,48 @@ pub(super) fn take_qualifier(text: &str) -> Option<(Qualifier, &str)> {
     let text = text.trim_start();
     let sign =
         SIGNS.iter().find_map(|(sign, qualifier)| text.strip_prefix(sign).map(|rest| (*qualifier, rest)));
-    sign.or_else(|| {
-        if !text.starts_with(char::is_alphabetic) {
-            return None;
-        }
-        PHRASES
-            .iter()
-            .find_map(|(phrase, qualifier)| strip_phrase(text, phrase).map(|rest| (*qualifier, rest)))
+    sign.or_else(|| take_phrase(text, &BEFORE))
+}
+
+fn take_phrase<'text>(text: &'text str, phrases: &[Phrase]) -> Option<(Qualifier, &'text str)> {
+    if !text.starts_with(char::is_alphabetic) {
+        return None;
+    }
+    phrases.iter().find_map(|phrase| {
+        let rest = strip_phrase(text, &phrase.folded)?;
+        Some((phrase.qualifier, rest))
     })
 }
 
-/// What follows a phrase at the start of a text, whatever its case and spaces, if it ends where a word ends.
-fn strip_phrase<'text>(text: &'text str, phrase: &str) -> Option<&'text str> {
+/// What follows a folded phrase at the start of a text, whatever its case, accents and spaces, if it ends where a word
+/// ends.
+pub(super) fn strip_phrase<'text>(text: &'text str, phrase: &str) -> Option<&'text str> {
     let mut rest = text;
-    for (place, word) in phrase.split(' ').enumerate() {
-        if place > 0 {
-            rest = rest.strip_prefix(' ')?.trim_start();
+    let mut expected = phrase;
+    while !expected.is_empty() {
+        let found = rest.chars().next()?;
+        rest = rest.get(found.len_utf8()..)?;
+        if found.is_whitespace() {
+            expected = expected.strip_prefix(' ')?;
+            rest = rest.trim_start();
+            continue;
         }
-        for expected in word.chars() {
-            let found = rest.chars().next()?;
-            if !found.to_lowercase().eq(expected.to_lowercase()) {
-                return None;
-            }
-            rest = rest.get(found.len_utf8()..)?;
+        for lower in found.to_lowercase() {
+            expected = match unaccented(lower) {
+                Plain::Letters(letters) => expected.strip_prefix(letters)?,
+                Plain::Same => expected.strip_prefix(lower)?,
+            };
         }
     }
-    let ends_word = phrase.ends_with('.') || !rest.starts_with(char::is_alphanumeric);
+    let rest = rest.trim_start_matches(|character| matches!(character, '\u{300}'..='\u{36F}'));
+    let open_end = phrase.ends_with(|last: char| last == '.' || is_east_asian(last));
+    let ends_word = open_end || !rest.starts_with(char::is_alphanumeric);
     ends_word.then_some(rest)
 }
 
 #[cfg(test)]
 mod tests {
-    use super::{Qualifier, take_qualifier};
+    use super::{Qualifier, take_qualifier, take_qualifier_after};
 
     #[test]
     fn qualifier_words_end_where_words_end() {
@@ -187,5 +130,27 @@ mod tests {
         assert_eq!(take_qualifier("ca.4"), Some((Qualifier::About, "4")));
         assert_eq!(take_qualifier("bisphenol 4"), None);
         assert_eq!(take_qualifier("=> 4"), Some((Qualifier::AtLeast, " 4")));
+    }
+
+    #[test]
+    fn accents_may_be_missing_or_written_apart() {
+        for text in ["supérieur à 6", "superieur a 6", "SUPÉRIEUR À 6", "supe\u{301}rieur a\u{300} 6"] {
+            assert_eq!(take_qualifier(text), Some((Qualifier::Above, " 6")), "{text}");
+        }
+    }
+
+    #[test]
+    fn a_denied_qualifier_is_its_opposite() {
+        assert_eq!(take_qualifier("not greater than 6"), Some((Qualifier::AtMost, " 6")));
+        assert_eq!(take_qualifier("不小于 6"), Some((Qualifier::AtLeast, " 6")));
+        assert_eq!(take_qualifier("niet meer dan 6"), Some((Qualifier::AtMost, " 6")));
+    }
+
+    #[test]
+    fn qualifiers_may_follow_the_number() {
+        assert_eq!(take_qualifier_after(" 以上"), Some((Qualifier::AtLeast, "")));
+        assert_eq!(take_qualifier_after("未満"), Some((Qualifier::Below, "")));
+        assert_eq!(take_qualifier_after(" o más"), Some((Qualifier::AtLeast, "")));
+        assert_eq!(take_qualifier_after(" overnight"), None);
     }
 }

@@ -1,12 +1,18 @@
 //! Text as people's programs leave it, made plain: one kind of space, of minus, of digit.
 
+use std::borrow::Cow;
+
+use super::symbols::{entities_read, symbol};
+
 /// The text with one kind of space, hyphen, micro sign and digit, without invisible characters; line breaks become
-/// semicolons, superscript digits `^2` after a number and plain digits after a letter.
+/// semicolons, superscript digits `^2` after a number and plain digits after a letter, `&lt;` the sign it stands for.
 pub fn tidy(text: &str) -> String {
+    let text: Cow<str> = if text.contains('&') { entities_read(text) } else { Cow::Borrowed(text) };
     let mut plain = String::with_capacity(text.len());
     let mut raised = Raised::No;
-    for character in text.chars() {
-        raised = push_tidied(&mut plain, character, raised);
+    let mut characters = text.chars().peekable();
+    while let Some(character) = characters.next() {
+        raised = push_tidied(&mut plain, character, characters.peek().copied(), raised);
     }
     for (ending, replacement) in [("(s)", "s"), ("(en)", "en"), ("(e)", "e")] {
         if plain.contains(ending) {
@@ -21,32 +27,25 @@ pub fn tidy(text: &str) -> String {
 }
 
 /// Appends what stands for a character; says whether it was a superscript.
-fn push_tidied(plain: &mut String, character: char, raised: Raised) -> Raised {
+fn push_tidied(plain: &mut String, character: char, next: Option<char>, raised: Raised) -> Raised {
+    let before_digit = next.is_some_and(|next| next.is_ascii_digit());
     match character {
-        '\n' | '\r' => {
-            // Only what was just written is looked at, so that a text of line breaks stays linear.
-            let before = plain.strip_suffix(' ').unwrap_or(plain);
-            if before.ends_with([':', '=', ';']) {
-                if before.len() == plain.len() {
-                    plain.push(' ');
-                }
-            } else {
-                plain.push_str("; ");
-            }
+        '\n' | '\r' => push_line_break(plain),
+        // Some programs write a soft hyphen for a minus or a dash: before a digit it is kept, and then makes no number.
+        '\u{AD}' if before_digit && !plain.ends_with([',', '.']) => plain.push(character),
+        // Soft hyphen, zero-width spaces and joiners, marks of direction, byte order mark.
+        '\u{AD}' | '\u{200B}'..='\u{200F}' | '\u{202A}'..='\u{202E}' | '\u{2060}' | '\u{FEFF}' => {}
+        '\u{2010}'..='\u{2015}' | '\u{2212}' | '\u{FE58}' | '\u{FE63}' | '\u{2043}' | '\u{2D7}' => {
+            plain.push('-')
         }
-        // Soft hyphen, zero-width spaces and joiners, byte order mark.
-        '\u{AD}' | '\u{200B}'..='\u{200F}' | '\u{2060}' | '\u{FEFF}' => {}
-        '\u{2010}'..='\u{2015}' | '\u{2212}' | '\u{FE58}' | '\u{FE63}' | '\u{2043}' => plain.push('-'),
-        '\u{3BC}' => plain.push('µ'),
-        '\u{2103}' => plain.push_str("°C"),
-        '\u{2109}' => plain.push_str("°F"),
-        'º' | '˚' => plain.push('°'),
-        '½' => plain.push_str("1/2"),
-        '≧' | '⩾' => plain.push('≥'),
-        '≦' | '⩽' => plain.push('≤'),
-        '∼' | '～' | '≈' | '≅' | '≃' => plain.push('~'),
-        '’' | '‘' | '´' | '`' => plain.push('\''),
-        '…' => plain.push_str("..."),
+        // The mark of a long vowel, where it stands for a dash.
+        'ー' | 'ｰ'
+            if plain.ends_with(|last: char| last.is_ascii_digit()) || (plain.is_empty() && before_digit) =>
+        {
+            plain.push('-');
+        }
+        '½' if plain.ends_with(|last: char| last.is_ascii_digit()) => plain.push_str(".5"),
+        '½' if plain.is_empty() => plain.push_str("0.5"),
         // Full-width forms of ASCII.
         '\u{FF01}'..='\u{FF5E}' => plain.extend(char::from_u32(u32::from(character) - 0xFEE0)),
         '⁻' => {
@@ -58,15 +57,28 @@ fn push_tidied(plain: &mut String, character: char, raised: Raised) -> Raised {
             return Raised::Yes;
         }
         _ if character.is_whitespace() => plain.push(' '),
-        _ => match superscript_digit(character) {
-            Some(digit) => {
+        _ => match (superscript_digit(character), symbol(character)) {
+            (Some(digit), _) => {
                 push_superscript(plain, digit, raised);
                 return Raised::Yes;
             }
-            None => plain.push(character),
+            (None, Some(written)) => plain.push_str(written),
+            (None, None) => plain.push(character),
         },
     }
     Raised::No
+}
+
+fn push_line_break(plain: &mut String) {
+    // Only what was just written is looked at, so that a text of line breaks stays linear.
+    let before = plain.strip_suffix(' ').unwrap_or(plain);
+    if before.ends_with([':', '=', ';']) {
+        if before.len() == plain.len() {
+            plain.push(' ');
+        }
+    } else {
+        plain.push_str("; ");
+    }
 }
 
 /// `raised` tells whether the character before was a superscript too.
@@ -96,67 +108,9 @@ fn superscript_digit(character: char) -> Option<char> {
     }
 }
 
-/// The words of a text in lower case, without accents or punctuation, parted by single spaces. `ß` becomes `ss`,
-/// subscript digits become digits.
-pub fn plain_words(text: &str) -> String {
-    let mut words = String::with_capacity(text.len());
-    for character in tidy(text).chars().flat_map(char::to_lowercase) {
-        match unaccented(character) {
-            Plain::Letters(letters) => words.push_str(letters),
-            Plain::Same if character.is_alphanumeric() => words.push(character),
-            Plain::Same => {
-                if !words.ends_with(' ') && !words.is_empty() {
-                    words.push(' ');
-                }
-            }
-        }
-    }
-    if words.ends_with(' ') {
-        words.pop();
-    }
-    words
-}
-
-enum Plain {
-    Letters(&'static str),
-    Same,
-}
-
-fn unaccented(character: char) -> Plain {
-    let letters = match character {
-        // Combining marks.
-        '\u{300}'..='\u{36F}' => "",
-        'à' | 'á' | 'â' | 'ã' | 'ä' | 'å' | 'ā' | 'ă' | 'ą' => "a",
-        'æ' => "ae",
-        'ç' | 'ć' | 'č' => "c",
-        'ď' | 'đ' => "d",
-        'è' | 'é' | 'ê' | 'ë' | 'ē' | 'ę' | 'ě' => "e",
-        'ì' | 'í' | 'î' | 'ï' | 'ī' => "i",
-        'ł' => "l",
-        'ñ' | 'ń' | 'ň' => "n",
-        'ò' | 'ó' | 'ô' | 'õ' | 'ö' | 'ø' | 'ō' | 'ő' => "o",
-        'œ' => "oe",
-        'ř' => "r",
-        'ß' => "ss",
-        'ś' | 'š' | 'ş' => "s",
-        'ť' | 'ţ' => "t",
-        'ù' | 'ú' | 'û' | 'ü' | 'ū' | 'ű' | 'ů' => "u",
-        'ý' | 'ÿ' => "y",
-        'ź' | 'ż' | 'ž' => "z",
-        '₀' => "0",
-        '₁' => "1",
-        '₂' => "2",
-        '₃' => "3",
-        '₄' => "4",
-        '₅' => "5",
-        _ => return Plain::Same,
-    };
-    Plain::Letters(letters)
-}
-
 #[cfg(test)]
 mod tests {
-    use super::{plain_words, tidy};
+    use super::tidy;
 
     #[test]
     fn invisible_and_lookalike_characters_become_plain_ones() {
@@ -170,10 +124,19 @@ mod tests {
     }
 
     #[test]
-    fn words_lose_case_accents_and_punctuation() {
-        assert_eq!(plain_words("Löslichkeit\n(Wasser) [mg/L]"), "loslichkeit wasser mg l");
-        assert_eq!(plain_words("CAS-Nr."), "cas nr");
-        assert_eq!(plain_words("ThCO₂"), "thco2");
-        assert_eq!(plain_words("GRÖßER"), "grosser");
+    fn characters_made_of_several_become_those() {
+        assert_eq!(tidy("12㎎/ℓ"), "12mg/l");
+        assert_eq!(tidy("5 ％、20 ℃"), "5 %, 20 °C");
+        assert_eq!(tidy("&lt;&nbsp;5 &#181;g/L"), "< 5 µg/L");
+        assert_eq!(tidy("&amp;gt; 6"), "> 6");
+        assert_eq!(tidy("R&D; 5"), "R&D; 5");
+    }
+
+    #[test]
+    fn a_dash_in_disguise_is_a_dash_or_left_to_be_refused() {
+        assert_eq!(tidy("4.2ー4.8"), "4.2-4.8");
+        assert_eq!(tidy("ー0.3"), "-0.3");
+        assert_eq!(tidy("データなし"), "データなし");
+        assert_eq!(tidy("10\u{AD}20"), "10\u{AD}20");
     }
 }

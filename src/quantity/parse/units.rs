@@ -1,82 +1,50 @@
-//! Unit words in English and German.
+//! Which unit a text names.
+
+mod fold;
+mod spellings;
 
 use std::collections::BTreeMap;
 use std::sync::LazyLock;
 
+use super::fold::is_east_asian;
 use crate::quantity::{Dimension, Unit};
+use fold::fold;
+use spellings::{EXACT, IN_DIMENSION, SPELLINGS};
 
-/// Spellings in lower case, without spaces and multiplication signs, `per` written `/`; see [`fold`]. Parted by spaces.
-const SPELLINGS: &[(Unit, &str)] = &[
-    (Unit::One, "- none dimensionless dimensionslos unitless einheitenlos"),
-    (Unit::Second, "s sec secs sek second seconds sekunde sekunden"),
-    (Unit::Minute, "min mins minute minutes minuten"),
-    (Unit::Hour, "h hr hrs hour hours std stunde stunden"),
-    (Unit::Day, "d day days tag tage tagen"),
-    (Unit::Week, "w wk wks week weeks wo woche wochen"),
-    (Unit::Month, "mo mos mon mth mths month months monat monate monaten"),
-    (Unit::Year, "a y yr yrs year years j jahr jahre jahren"),
-    (Unit::NanogramPerLitre, "ng/l ngl-1 ng/liter ng/litre pg/ml ng/dm3 µg/m3"),
-    (
-        Unit::MicrogramPerLitre,
-        "µg/l ug/l mcg/l µgl-1 ugl-1 µg/liter µg/litre ug/liter ug/litre ppb ng/ml mg/m3 µg/dm3 ug/dm3",
-    ),
-    (Unit::MilligramPerLitre, "mg/l mgl-1 mg/liter mg/litre ppm µg/ml ug/ml g/m3 mg/dm3 mgdm-3"),
-    (Unit::GramPerLitre, "g/l gl-1 g/liter g/litre mg/ml kg/m3 g/dm3 mg/cm3 gdm-3"),
-    (Unit::MolePerLitre, "mol/l moll-1 mol/liter mol/litre mol/dm3 moldm-3"),
-    (Unit::MillimolePerLitre, "mmol/l mmoll-1 mmol/liter mmol/litre mmol/dm3 mol/m3"),
-    (
-        Unit::MicromolePerLitre,
-        "µmol/l umol/l µmoll-1 umoll-1 µmol/liter µmol/litre µmol/dm3 umol/dm3 mmol/m3",
-    ),
-    (
-        Unit::LitrePerKilogram,
-        "l/kg lkg-1 liter/kg litre/kg litres/kg dm3/kg dm3kg-1 ml/g mlg-1 cm3/g cm3g-1 l/kgww l/kgwwt l/kgbw l/kgoc",
-    ),
-    (Unit::LogLitrePerKilogram, "logl/kg lgl/kg log(l/kg) lg(l/kg)"),
-    (Unit::Pascal, "pa pascal n/m2"),
-    (Unit::Hectopascal, "hpa mbar millibar hectopascal hektopascal"),
-    (Unit::Kilopascal, "kpa kilopascal"),
-    (Unit::Bar, "bar"),
-    (Unit::MillimetreMercury, "mmhg torr"),
-    (Unit::Atmosphere, "atm"),
-    (Unit::Celsius, "°c c degc °celsius celsius gradc gradcelsius degreescelsius"),
-    (Unit::Kelvin, "k kelvin °k"),
-    (Unit::Fahrenheit, "°f f degf fahrenheit gradfahrenheit"),
-    (Unit::GramPerMole, "g/mol gmol-1 g/mole da dalton u amu kg/kmol"),
-    (Unit::PascalCubicMetrePerMole, "pam3/mol pam3mol-1 pa/(mol/m3) pam3/mole pa/mol/m3 m3pa/mol"),
-    (Unit::AtmosphereCubicMetrePerMole, "atmm3/mol atmm3mol-1 atm-m3/mol atm-m3/mole atmm3/mole m3atm/mol"),
-    (
-        Unit::Percent,
-        "% percent prozent wt% wt.% wt-% gew% gew.% gew-% gew.-% %w/w %(w/w) %m/m %wt %gew vol% pct ma% ma.-% ma-% mass% masse% masse-%",
-    ),
-    (
-        Unit::TonnePerYear,
-        "t/a t/y t/yr t/year t/jahr ta-1 to/a to/jahr tpa t ton tons tonne tonnes tonnen tons/year tonnes/year tonnes/annum tonnen/jahr tons/a tonnes/a",
-    ),
-    (Unit::KilogramPerYear, "kg/a kg/y kg/yr kg/year kg/jahr kga-1 kg"),
-    (Unit::KilojoulePerMole, "kj/mol kjmol-1 kj/mole"),
-];
+type BySpelling = BTreeMap<&'static str, Unit>;
 
-static BY_SPELLING: LazyLock<BTreeMap<&'static str, Unit>> = LazyLock::new(|| {
-    SPELLINGS
-        .iter()
-        .flat_map(|(unit, spellings)| spellings.split(' ').map(|spelling| (spelling, *unit)))
-        .collect()
-});
+static BY_SPELLING: LazyLock<BySpelling> = LazyLock::new(|| by_spelling(SPELLINGS));
+static BY_EXACT_SPELLING: LazyLock<BySpelling> = LazyLock::new(|| by_spelling(EXACT));
+
+fn by_spelling(table: &'static [(Unit, &'static str)]) -> BySpelling {
+    table.iter().flat_map(|(unit, words)| words.split(' ').map(|word| (word, *unit))).collect()
+}
 
 /// The unit that a whole tidied text names, if it is one.
 pub fn parse_unit(text: &str) -> Option<Unit> {
     let text = text.trim();
-    if text.len() > 40 {
+    if text.is_empty() || text.len() > LONGEST_UNIT {
         return None;
     }
-    match text {
-        "M" => Some(Unit::MolePerLitre),
-        "mM" => Some(Unit::MillimolePerLitre),
-        "µM" | "uM" => Some(Unit::MicromolePerLitre),
-        _ => BY_SPELLING.get(fold(text).as_str()).copied(),
-    }
+    let exact = BY_EXACT_SPELLING.get(text).copied();
+    exact.or_else(|| BY_SPELLING.get(fold(text).as_str()).copied())
 }
+
+/// The unit that a whole tidied text names where numbers measure this: `ppm` of a content is mg/kg, else mg/L.
+pub fn parse_unit_of(text: &str, dimension: Dimension) -> Option<Unit> {
+    if text.len() > LONGEST_UNIT {
+        return None;
+    }
+    let folded = fold(text.trim());
+    let in_dimension = IN_DIMENSION
+        .iter()
+        .find(|(unit, word)| unit.dimension() == dimension && *word == folded)
+        .map(|(unit, _)| *unit);
+    in_dimension.or_else(|| parse_unit(text))
+}
+
+/// The longest unit, in bytes.
+const LONGEST_UNIT: usize = 40;
 
 /// The usual spellings of the units of a dimension, for the suggestion beside a misspelt one.
 pub fn unit_words(dimension: Dimension) -> impl Iterator<Item = &'static str> {
@@ -84,48 +52,37 @@ pub fn unit_words(dimension: Dimension) -> impl Iterator<Item = &'static str> {
         .iter()
         .filter(move |(unit, _)| unit.dimension() == dimension)
         .flat_map(|(unit, spellings)| std::iter::once(unit.symbol()).chain(spellings.split(' ')))
-        .filter(|word| word.chars().count() > 1)
-}
-
-fn fold(text: &str) -> String {
-    let mut folded = String::with_capacity(text.len());
-    for word in text.to_lowercase().split_whitespace() {
-        match word {
-            "per" | "pro" | "je" => folded.push('/'),
-            _ => folded
-                .extend(word.chars().filter(|character| !matches!(character, '·' | '*' | '⋅' | '∙' | '^'))),
-        }
-    }
-    let without_point = folded.trim_end_matches('.').len();
-    folded.truncate(without_point);
-    folded
+        .filter(|word| word.chars().count() > 1 && !word.starts_with('/'))
 }
 
 /// The longest unit at the start of a tidied text and what follows it.
-pub(super) fn take_unit(text: &str) -> Option<(Unit, &str)> {
+pub(super) fn take_unit(text: &str, dimension: Dimension) -> Option<(Unit, &str)> {
     let text = text.trim_start();
     unit_ends(text).into_iter().rev().find_map(|end| {
         let (word, rest) = text.split_at_checked(end)?;
-        parse_unit(word).map(|unit| (unit, rest))
+        parse_unit_of(word, dimension).map(|unit| (unit, rest))
     })
 }
 
-/// Where a unit could end: before a space, a bracket, a separator, or at the end of the text.
+/// Where a unit could end: before a space, a bracket, a separator, after an East Asian letter, or at the end of the text.
 fn unit_ends(text: &str) -> Vec<usize> {
-    const LONGEST_UNIT: usize = 40;
     let mut ends = Vec::new();
     let mut before = ' ';
     for (position, character) in text.char_indices() {
         if position > LONGEST_UNIT {
             return ends;
         }
-        let separates =
-            matches!(character, ' ' | ',' | ';' | '@' | '±' | '<' | '>' | '~' | '≤' | '≥' | '+' | '.')
-                || (character == '-' && !before.is_ascii_punctuation());
-        if separates && position > 0 && before != ' ' {
+        let separates = character.is_whitespace()
+            || matches!(
+                character,
+                ',' | ';' | '@' | '±' | '<' | '>' | '~' | '≤' | '≥' | '+' | '.' | '|' | '&'
+            )
+            || (character == '-' && !before.is_ascii_punctuation())
+            || (character == '/' && starts_second_value(text, position));
+        if separates && position > 0 && !before.is_whitespace() {
             ends.push(position);
         }
-        if before == '%' && character.is_alphanumeric() {
+        if (before == '%' && character.is_alphanumeric()) || (position > 0 && is_east_asian(before)) {
             ends.push(position);
         }
         before = character;
@@ -134,17 +91,43 @@ fn unit_ends(text: &str) -> Vec<usize> {
     ends
 }
 
+/// `45 d/60 d`: the stroke parts two values and belongs to no unit.
+fn starts_second_value(text: &str, stroke: usize) -> bool {
+    let after = text.get(stroke + 1..).unwrap_or_default().trim_start();
+    after.starts_with(|first: char| first.is_ascii_digit())
+}
+
 #[cfg(test)]
 mod tests {
-    use super::{BY_SPELLING, SPELLINGS, parse_unit, take_unit};
-    use crate::quantity::Unit;
+    use super::{
+        BY_EXACT_SPELLING, BY_SPELLING, EXACT, SPELLINGS, fold, parse_unit, parse_unit_of, take_unit,
+    };
+    use crate::quantity::{Dimension, Unit};
+
+    fn spellings(table: &[(Unit, &str)]) -> usize {
+        table.iter().map(|(_, words)| words.split(' ').count()).sum()
+    }
 
     #[test]
     fn no_spelling_names_two_units() {
-        assert_eq!(
-            BY_SPELLING.len(),
-            SPELLINGS.iter().map(|(_, words)| words.split(' ').count()).sum::<usize>()
-        );
+        assert_eq!(BY_SPELLING.len(), spellings(SPELLINGS));
+        assert_eq!(BY_EXACT_SPELLING.len(), spellings(EXACT));
+    }
+
+    #[test]
+    fn every_spelling_is_in_folded_form() {
+        for (_, words) in SPELLINGS {
+            for word in words.split(' ') {
+                assert_eq!(fold(word), word);
+            }
+        }
+    }
+
+    #[test]
+    fn every_symbol_names_its_unit() {
+        for unit in Unit::ALL.into_iter().filter(|unit| !unit.symbol().is_empty()) {
+            assert_eq!(parse_unit(unit.symbol()), Some(unit), "{}", unit.symbol());
+        }
     }
 
     #[test]
@@ -152,26 +135,70 @@ mod tests {
         for (text, unit) in [
             ("mg / l", Unit::MilligramPerLitre),
             ("mg·L-1", Unit::MilligramPerLitre),
+            ("mgL-1", Unit::MilligramPerLitre),
             ("mg per litre", Unit::MilligramPerLitre),
+            ("milligrams per liter", Unit::MilligramPerLitre),
+            ("毫克/升", Unit::MilligramPerLitre),
+            ("mg dm-3", Unit::MilligramPerLitre),
+            ("MG/L", Unit::MilligramPerLitre),
+            ("mg m-3", Unit::MicrogramPerLitre),
+            ("g/100 mL", Unit::GramPerDecilitre),
+            ("cm3 g-1", Unit::LitrePerKilogram),
             ("Pa·m^3/mol", Unit::PascalCubicMetrePerMole),
             ("Pa m3 mol-1", Unit::PascalCubicMetrePerMole),
+            ("atm-m3/mole", Unit::AtmosphereCubicMetrePerMole),
             ("Tonnen pro Jahr", Unit::TonnePerYear),
+            ("tonnes par an", Unit::TonnePerYear),
+            ("toneladas/año", Unit::TonnePerYear),
+            ("吨每年", Unit::TonnePerYear),
+            ("トン/年", Unit::TonnePerYear),
             ("Std.", Unit::Hour),
             ("Grad C", Unit::Celsius),
-            ("mM", Unit::MillimolePerLitre),
         ] {
             assert_eq!(parse_unit(text), Some(unit), "{text}");
         }
-        assert_eq!(parse_unit("mm"), None);
-        assert_eq!(parse_unit("m"), None);
+    }
+
+    #[test]
+    fn case_counts_where_it_tells_units_apart() {
+        for (text, unit) in [
+            ("mM", Some(Unit::MillimolePerLitre)),
+            ("M", Some(Unit::MolePerLitre)),
+            ("m", None),
+            ("mm", None),
+            ("MM", None),
+            ("mPa", Some(Unit::Millipascal)),
+            ("MPa", Some(Unit::Megapascal)),
+            ("mpa", None),
+            ("MPA", None),
+            ("KPA", Some(Unit::Kilopascal)),
+            ("J", Some(Unit::Year)),
+            ("j", Some(Unit::Jour)),
+        ] {
+            assert_eq!(parse_unit(text), unit, "{text}");
+        }
+    }
+
+    #[test]
+    fn some_spellings_follow_what_is_asked_for() {
+        assert_eq!(parse_unit_of("ppm", Dimension::Percent), Some(Unit::MilligramPerKilogram));
+        assert_eq!(parse_unit_of("ppm", Dimension::Concentration), Some(Unit::MilligramPerLitre));
+        assert_eq!(parse_unit_of("u", Dimension::Time), Some(Unit::Hour));
+        assert_eq!(parse_unit_of("u", Dimension::MolarMass), Some(Unit::GramPerMole));
     }
 
     #[test]
     fn the_longest_unit_is_taken() {
-        assert_eq!(take_unit(" t/a, food grade"), Some((Unit::TonnePerYear, ", food grade")));
-        assert_eq!(take_unit("d in soil"), Some((Unit::Day, " in soil")));
-        assert_eq!(take_unit("d-3 wk"), Some((Unit::Day, "-3 wk")));
-        assert_eq!(take_unit("mg L-1 water"), Some((Unit::MilligramPerLitre, " water")));
-        assert_eq!(take_unit("dogs"), None);
+        for (text, dimension, taken) in [
+            (" t/a, food grade", Dimension::Tonnage, Some((Unit::TonnePerYear, ", food grade"))),
+            ("d in soil", Dimension::Time, Some((Unit::Day, " in soil"))),
+            ("d-3 wk", Dimension::Time, Some((Unit::Day, "-3 wk"))),
+            ("d/60 d", Dimension::Time, Some((Unit::Day, "/60 d"))),
+            ("日以上", Dimension::Time, Some((Unit::Day, "以上"))),
+            ("mg L-1 water", Dimension::Concentration, Some((Unit::MilligramPerLitre, " water"))),
+            ("dogs", Dimension::Time, None),
+        ] {
+            assert_eq!(take_unit(text, dimension), taken, "{text}");
+        }
     }
 }

@@ -1,22 +1,30 @@
-//! One segment of text from its first word to the end: qualifiers, numbers, units, and what is left over.
+//! One value from its first word on: qualifiers, numbers, units.
 
 use super::expression::{End, Expression};
-use super::number::{read_number, starts_number};
-use super::qualifier::{Qualifier, take_qualifier, take_qualifier_after};
+use super::number::{read_number, read_power, starts_number};
+use super::qualifier::{Qualifier, strip_phrase, take_qualifier, take_qualifier_after};
 use super::units::take_unit;
-use super::words::starts_remark;
-use super::{QuantityFault, ReadAs};
+use super::{QuantityFault, ReadAs, Scale};
 use crate::quantity::{Bound, Dimension, Unit};
 
-/// What stands before the first number of a segment.
+/// What stands before the first number of a text.
+#[derive(Debug, Clone)]
 pub(super) struct Opening<'text> {
     /// Words that are no qualifier.
     pub(super) label: String,
-    qualifier: Qualifier,
+    pub(super) qualifier: Qualifier,
     approximate: bool,
-    between: bool,
+    frame: Frame,
     /// From the first number on.
     pub(super) rest: &'text str,
+}
+
+/// A word before the number that lets a second end follow.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+enum Frame {
+    None,
+    From,
+    Between,
 }
 
 pub(super) fn read_opening(text: &str) -> Opening<'_> {
@@ -24,7 +32,7 @@ pub(super) fn read_opening(text: &str) -> Opening<'_> {
         label: String::new(),
         qualifier: Qualifier::Exactly,
         approximate: false,
-        between: false,
+        frame: Frame::None,
         rest: text.trim_start(),
     };
     loop {
@@ -34,7 +42,8 @@ pub(super) fn read_opening(text: &str) -> Opening<'_> {
         if let Some((qualifier, after)) = take_qualifier(opening.rest) {
             match qualifier {
                 Qualifier::About => opening.approximate = true,
-                Qualifier::Between => opening.between = true,
+                Qualifier::Between => opening.frame = Frame::Between,
+                Qualifier::From => opening.frame = Frame::From,
                 Qualifier::Exactly => {}
                 Qualifier::Above | Qualifier::AtLeast | Qualifier::Below | Qualifier::AtMost => {
                     opening.qualifier = qualifier;
@@ -59,56 +68,122 @@ pub(super) fn read_opening(text: &str) -> Opening<'_> {
     }
 }
 
-pub(super) fn read_value(opening: &Opening<'_>, read_as: ReadAs) -> Result<Expression, QuantityFault> {
-    let (first, rest) = read_number(opening.rest, read_as.decimal)?.ok_or(QuantityFault::NoNumber)?;
-    let (first_unit, rest) = unit_of(rest);
-    let mut expression = Expression {
-        low: End::OPEN,
-        high: End::OPEN,
-        unit: first_unit,
-        written_sd: None,
-        approximate: opening.approximate,
-        remarks: Vec::new(),
-    };
-    let rest = if let Some(after) = take_plus_minus(rest) {
-        let (sd, after) = read_number(after, read_as.decimal)?.ok_or(QuantityFault::NoNumber)?;
-        let (sd_unit, after) = unit_of(after);
-        if let (Some(value_unit), Some(sd_unit)) = (first_unit, sd_unit)
-            && value_unit != sd_unit
-        {
-            return Err(QuantityFault::WrongDimension(sd_unit));
+/// A number, and its unit where its form says it: a power of ten whose exponent was taken.
+struct Number {
+    value: f64,
+    unit: Option<Unit>,
+}
+
+/// Where a logarithm is asked for, `10^4.5` is the logarithm 4.5.
+fn read_measure<'text>(
+    text: &'text str,
+    read_as: ReadAs,
+) -> Result<Option<(Number, &'text str)>, QuantityFault> {
+    let power = read_power(text, read_as.decimal).filter(|(_, rest)| !rest.starts_with(is_decimal_sign));
+    match (power, read_as.scale) {
+        (Some((exponent, rest)), Scale::Logarithm) => {
+            let unit = (read_as.dimension == Dimension::Dimensionless).then_some(Unit::PowerOfTen);
+            Ok(Some((Number { value: exponent, unit: unit.or(Some(read_as.default_unit)) }, rest)))
         }
-        expression.unit = first_unit.or(sd_unit);
-        expression.written_sd = Some(sd.abs());
-        (expression.low, expression.high) = ends(opening.qualifier, first, first_unit);
-        after
-    } else if let Some(upper) = read_upper_end(rest, opening, read_as)? {
+        (Some((exponent, rest)), Scale::Linear) if exponent.fract().abs() > 0.0 => {
+            Ok(Some((Number { value: 10f64.powf(exponent), unit: None }, rest)))
+        }
+        (Some(_) | None, Scale::Linear | Scale::Logarithm) => {
+            let number = read_number(text, read_as.decimal)?;
+            Ok(number.map(|(value, rest)| (Number { value, unit: None }, rest)))
+        }
+    }
+}
+
+fn is_decimal_sign(character: char) -> bool {
+    matches!(character, '.' | ',')
+}
+
+/// Reads the value that an opening leads to; what follows it is handed back.
+pub(super) fn read_value<'text>(
+    opening: &Opening<'text>,
+    read_as: ReadAs,
+) -> Result<(Expression, &'text str), QuantityFault> {
+    let (first, rest) = read_measure(opening.rest, read_as)?.ok_or(QuantityFault::NoNumber)?;
+    let (first_unit, rest) =
+        if goes_on_with_a_word(rest, opening, read_as) { (None, rest) } else { unit_of(rest, read_as) };
+    let first_unit = first_unit.or(first.unit);
+    let mut expression = Expression::of_unit(first_unit);
+    expression.approximate = opening.approximate;
+    let rest = if let Some(after) = take_plus_minus(rest) {
+        read_plus_minus(after, &mut expression, read_as)?
+    } else {
+        rest
+    };
+    if expression.written_sd.is_some() {
+        (expression.low, expression.high) = ends(opening.qualifier, first.value, expression.unit);
+        return Ok((expression, rest));
+    }
+    if let Some(upper) = read_upper_end(rest, opening, read_as)? {
         let low_unit = first_unit.or(upper.unit);
         expression.unit = low_unit;
         expression.approximate |= upper.approximate;
-        expression.low = End { bound: low_bound(opening.qualifier, first)?, unit: low_unit };
+        expression.low = End { bound: low_bound(opening.qualifier, first.value)?, unit: low_unit };
         expression.high =
             End { bound: high_bound(upper.qualifier, upper.number)?, unit: upper.unit.or(first_unit) };
-        upper.rest
-    } else if let Some((qualifier, after)) = take_qualifier_after(rest)
-        && opening.qualifier == Qualifier::Exactly
-    {
-        (expression.low, expression.high) = ends(qualifier, first, None);
-        after
-    } else {
-        (expression.low, expression.high) = ends(opening.qualifier, first, None);
-        rest
-    };
-    read_leftover(rest, &mut expression, read_as.dimension)?;
-    Ok(expression)
+        return Ok((expression, upper.rest));
+    }
+    let mut qualifier = opening.qualifier;
+    let mut rest = rest;
+    while let Some((after_number, after)) = take_qualifier_after(rest) {
+        match (after_number, qualifier) {
+            (Qualifier::About, _) => expression.approximate = true,
+            (_, Qualifier::Exactly) => qualifier = after_number,
+            // `at most 6 or more` says nothing.
+            (_, _) => return Err(QuantityFault::BadRange),
+        }
+        rest = after;
+    }
+    (expression.low, expression.high) = ends(qualifier, first.value, None);
+    Ok((expression, rest))
 }
 
-fn unit_of(rest: &str) -> (Option<Unit>, &str) {
-    // A lone dash after a number parts a range and names no unit; a lone `1` is a second number.
-    match take_unit(rest) {
-        Some((unit, after)) if unit != Unit::One => (Some(unit), after),
+fn read_plus_minus<'text>(
+    text: &'text str,
+    expression: &mut Expression,
+    read_as: ReadAs,
+) -> Result<&'text str, QuantityFault> {
+    let (sd, after) = read_number(text, read_as.decimal)?.ok_or(QuantityFault::NoNumber)?;
+    let (sd_unit, after) = unit_of(after, read_as);
+    if let (Some(value_unit), Some(sd_unit)) = (expression.unit, sd_unit)
+        && value_unit != sd_unit
+    {
+        return Err(QuantityFault::WrongDimension(sd_unit));
+    }
+    expression.unit = expression.unit.or(sd_unit);
+    expression.written_sd = Some(sd.abs());
+    Ok(after)
+}
+
+fn unit_of(rest: &str, read_as: ReadAs) -> (Option<Unit>, &str) {
+    // A lone dash after a number parts a range and names no unit.
+    match take_unit(rest, read_as.dimension) {
+        Some((unit, after)) if unit != Unit::One || !rest.trim_start().starts_with('-') => {
+            (Some(unit), after)
+        }
         _ => (None, rest),
     }
+}
+
+/// `4,2 a 4,8`, `4,2 y 4,6`: letters that are units, too, where no time is asked for or the opening says that an end
+/// follows.
+fn goes_on_with_a_word(rest: &str, opening: &Opening<'_>, read_as: ReadAs) -> bool {
+    let rest = rest.trim_start();
+    let word = |word| {
+        strip_phrase(rest, word).is_some_and(|after| {
+            let after = read_opening(after);
+            after.label.is_empty() && starts_number(after.rest)
+        })
+    };
+    let is_no_unit = read_as.dimension != Dimension::Time;
+    word("to")
+        || (word("a") && (is_no_unit || opening.frame == Frame::From))
+        || (word("y") && (is_no_unit || opening.frame == Frame::Between))
 }
 
 fn ends(qualifier: Qualifier, number: f64, unit: Option<Unit>) -> (End, End) {
@@ -118,7 +193,7 @@ fn ends(qualifier: Qualifier, number: f64, unit: Option<Unit>) -> (End, End) {
         Qualifier::AtLeast => (end(Bound::Included(number)), End::OPEN),
         Qualifier::Below => (End::OPEN, end(Bound::Excluded(number))),
         Qualifier::AtMost => (End::OPEN, end(Bound::Included(number))),
-        Qualifier::About | Qualifier::Exactly | Qualifier::Between => {
+        Qualifier::About | Qualifier::Exactly | Qualifier::From | Qualifier::Between => {
             (end(Bound::Included(number)), end(Bound::Included(number)))
         }
     }
@@ -127,7 +202,7 @@ fn ends(qualifier: Qualifier, number: f64, unit: Option<Unit>) -> (End, End) {
 fn low_bound(qualifier: Qualifier, number: f64) -> Result<Bound, QuantityFault> {
     match qualifier {
         Qualifier::Above => Ok(Bound::Excluded(number)),
-        Qualifier::AtLeast | Qualifier::About | Qualifier::Exactly | Qualifier::Between => {
+        Qualifier::AtLeast | Qualifier::About | Qualifier::Exactly | Qualifier::From | Qualifier::Between => {
             Ok(Bound::Included(number))
         }
         Qualifier::Below | Qualifier::AtMost => Err(QuantityFault::BadRange),
@@ -137,7 +212,7 @@ fn low_bound(qualifier: Qualifier, number: f64) -> Result<Bound, QuantityFault> 
 fn high_bound(qualifier: Qualifier, number: f64) -> Result<Bound, QuantityFault> {
     match qualifier {
         Qualifier::Below => Ok(Bound::Excluded(number)),
-        Qualifier::AtMost | Qualifier::About | Qualifier::Exactly | Qualifier::Between => {
+        Qualifier::AtMost | Qualifier::About | Qualifier::Exactly | Qualifier::From | Qualifier::Between => {
             Ok(Bound::Included(number))
         }
         Qualifier::Above | Qualifier::AtLeast => Err(QuantityFault::BadRange),
@@ -152,6 +227,12 @@ struct UpperEnd<'text> {
     rest: &'text str,
 }
 
+/// Words between the ends of a range; folded.
+const TO: [&str; 14] =
+    ["to", "bis", "jusqu'a", "hasta", "tot", "fino a", "al", "~", "から", "至", "到", "乃至", "ないし", "a"];
+/// Words between the ends of a range after `between`, or after a qualifier; folded.
+const AND: [&str; 11] = ["and", "und", "et", "y", "e", "en", "と", "和", "与", "與", "及"];
+
 /// `- 4.8 d`, `to < 5`, `and 5` after `between`, or a second qualifier after a first.
 fn read_upper_end<'text>(
     text: &'text str,
@@ -162,60 +243,81 @@ fn read_upper_end<'text>(
     let parted = ["...", "..", "-", "~", "÷"]
         .iter()
         .find_map(|sign| text.strip_prefix(sign))
-        .or_else(|| strip_word(text, "to"))
-        .or_else(|| strip_word(text, "bis"));
-    let joined = strip_word(text, "and").or_else(|| strip_word(text, "und"));
-    let opened = opening.between || matches!(opening.qualifier, Qualifier::Above | Qualifier::AtLeast);
+        .or_else(|| TO.iter().find_map(|word| strip_phrase(text, word)));
+    let joined = AND.iter().find_map(|word| strip_phrase(text, word));
+    let opened =
+        opening.frame == Frame::Between || matches!(opening.qualifier, Qualifier::Above | Qualifier::AtLeast);
     let second_qualifier = opened && text.starts_with(['<', '≤']);
+    let low_end_before = take_qualifier_after(text).filter(|(qualifier, after)| {
+        matches!(qualifier, Qualifier::AtLeast | Qualifier::Above)
+            && starts_number(after.trim_start_matches([' ', ',', '~', '-']))
+    });
     let after = match (parted, joined) {
         (Some(after), _) => after,
         (None, Some(after)) if opened => after,
+        (None, Some(after)) if says_between_at_its_end(after) => after,
         (None, _) if second_qualifier => text,
+        // `4以上5未満`: a qualifier follows each end.
+        (None, _) if low_end_before.is_some() && opening.qualifier == Qualifier::Exactly => {
+            return read_qualified_ends(text, read_as);
+        }
         (None, _) => return Ok(None),
     };
     let upper = read_opening(after);
     if !upper.label.is_empty() || !starts_number(upper.rest) {
         return Ok(None);
     }
-    let Some((number, rest)) = read_number(upper.rest, read_as.decimal)? else {
+    let Some((number, rest)) = read_measure(upper.rest, read_as)? else {
         return Ok(None);
     };
-    let (unit, rest) = unit_of(rest);
-    Ok(Some(UpperEnd { number, unit, qualifier: upper.qualifier, approximate: upper.approximate, rest }))
+    let (unit, rest) = unit_of(rest, read_as);
+    // `4,7 a 25 °C` says where it was measured.
+    let by_a_word = !text.starts_with(['.', '-', '~', '÷', '<', '≤']);
+    if by_a_word && unit.is_some_and(|unit| unit.dimension() != read_as.dimension) {
+        return Ok(None);
+    }
+    let rest = ["まで", "之间", "之間", "の間"]
+        .iter()
+        .find_map(|word| rest.trim_start().strip_prefix(word))
+        .unwrap_or(rest);
+    Ok(Some(UpperEnd {
+        number: number.value,
+        unit: unit.or(number.unit),
+        qualifier: upper.qualifier,
+        approximate: upper.approximate,
+        rest,
+    }))
 }
 
-fn strip_word<'text>(text: &'text str, word: &str) -> Option<&'text str> {
-    let start = text.get(..word.len())?;
-    let rest = text.get(word.len()..)?;
-    (start.eq_ignore_ascii_case(word) && !rest.starts_with(char::is_alphanumeric)).then_some(rest)
+/// `4.2と4.8の間`.
+fn says_between_at_its_end(text: &str) -> bool {
+    let end = text.trim_end();
+    ["の間", "之间", "之間"].iter().any(|word| end.ends_with(word))
+}
+
+fn read_qualified_ends<'text>(
+    text: &'text str,
+    read_as: ReadAs,
+) -> Result<Option<UpperEnd<'text>>, QuantityFault> {
+    let Some((Qualifier::AtLeast, after)) = take_qualifier_after(text) else {
+        return Err(QuantityFault::SeveralValues);
+    };
+    let after = after.trim_start_matches([' ', ',', '~', '-']);
+    let (number, rest) = read_measure(after, read_as)?.ok_or(QuantityFault::NoNumber)?;
+    let (unit, rest) = unit_of(rest, read_as);
+    match take_qualifier_after(rest) {
+        Some((qualifier @ (Qualifier::Below | Qualifier::AtMost), rest)) => Ok(Some(UpperEnd {
+            number: number.value,
+            unit: unit.or(number.unit),
+            qualifier,
+            approximate: false,
+            rest,
+        })),
+        _ => Err(QuantityFault::SeveralValues),
+    }
 }
 
 pub(super) fn take_plus_minus(text: &str) -> Option<&str> {
     let text = text.trim_start();
-    ["±", "+/-", "+-"].iter().find_map(|sign| text.strip_prefix(sign))
-}
-
-/// What follows the value and its unit: a remark, a misspelt unit, or a second number.
-fn read_leftover(rest: &str, expression: &mut Expression, dimension: Dimension) -> Result<(), QuantityFault> {
-    // Asterisks point to footnotes.
-    let rest = rest
-        .trim_matches(|character: char| character.is_whitespace() || matches!(character, '.' | '*' | '†'));
-    if rest.is_empty() {
-        return Ok(());
-    }
-    if !rest.starts_with(char::is_alphabetic) {
-        let second_number = rest.contains(|character: char| character.is_ascii_digit());
-        return Err(if second_number {
-            QuantityFault::SeveralValues
-        } else {
-            QuantityFault::UnknownUnit(rest.to_owned())
-        });
-    }
-    let word = rest.split_whitespace().next().unwrap_or(rest);
-    let explained = expression.unit.is_some() || starts_remark(word);
-    if explained || dimension == Dimension::Dimensionless {
-        expression.remarks.push(rest.to_owned());
-        return Ok(());
-    }
-    Err(QuantityFault::UnknownUnit(word.to_owned()))
+    ["±", "+/-", "+-", "∓"].iter().find_map(|sign| text.strip_prefix(sign))
 }

@@ -1,74 +1,114 @@
-//! Words that stand for no value, for a value without a number, or beside one, in English and German.
+//! Words that stand for no value, for a value without a number, or beside one.
 
-use super::text::plain_words;
+mod lists;
 
-/// Folded by [`plain_words`], spaces left out.
-const MISSING: &str = concat!(
-    "nd na nb nv nr ka null nil none tbd tba tbc unknown unbekannt missing fehlt keine leer blank empty ",
-    "offen pending entfallt nodata nodataavailable datanotavailable notavailable notdetermined nottested ",
-    "notmeasured notreported notapplicable notknown notstated notspecified nichtbestimmt nichtverfugbar ",
-    "nichtanwendbar nichtbekannt nichtgemessen nichtgepruft nichtermittelt nichtvorhanden keineangabe ",
-    "keineangaben keinedaten keinedatenverfugbar keinedatenvorhanden nichtrelevant notrelevant keinwert ",
-    "novalue"
-);
+use std::collections::BTreeSet;
+use std::sync::LazyLock;
 
-/// Words that say something of a value but not how much, folded by [`plain_words`]; any of them may stand within.
-const VALUE_WORDS: &str = concat!(
-    "miscible mischbar immiscible insoluble soluble unloslich loslich negligible vernachlassigbar ",
-    "decomposes decomposition zersetzt zersetzung sublimes sublimiert stable stabil persistent hydrolyses ",
-    "hydrolysiert low high niedrig gering hoch reacts"
-);
+use super::fold::plain_words;
+use lists::{
+    DENIALS, LABELS, MISSING, MISSING_NUMBER, NUMBERED, OTHER_KINDS, REMARK_STARTS, VALUE_WORDS,
+    VALUE_WORDS_WITHIN,
+};
 
-/// Words after a bare number that are known to be remarks and no misspelt unit, in lower case.
-const REMARK_STARTS: &str = concat!(
-    "at bei in for für oecd eu ec epa iso ph ww dw wet dry measured gemessen exp exp. experimental ",
-    "experimentell calc calc. calculated berechnet estimated est. geschätzt predicted qsar fish fisch ",
-    "lipid glp study studie primary ultimate"
-);
+type Words = LazyLock<BTreeSet<&'static str>>;
 
-/// Words before a number, without `=` or `:`, that make the number theirs and no value.
-const NUMBERED: &str = concat!(
-    "oecd eu ec eg epa oppts ocspp iso din astm tg method methode guideline richtlinie test ph year jahr ",
-    "klimisch reliability ref ref. no. nr."
-);
+static MISSING_WORDS: Words = LazyLock::new(|| words_of(MISSING));
+static MISSING_NUMBER_WORDS: Words = LazyLock::new(|| words_of(MISSING_NUMBER));
+static VALUES: Words = LazyLock::new(|| words_of(VALUE_WORDS));
+static STARTS: Words = LazyLock::new(|| words_of(REMARK_STARTS));
+static LABEL_WORDS: Words = LazyLock::new(|| words_of(LABELS));
+static DENYING: Words = LazyLock::new(|| words_of(DENIALS));
+static OTHERS: Words = LazyLock::new(|| words_of(OTHER_KINDS));
 
-fn stands_in(list: &str, word: &str) -> bool {
-    list.split(' ').any(|known| known == word)
+fn words_of(lines: &[&'static str]) -> BTreeSet<&'static str> {
+    lines.iter().flat_map(|line| line.split(' ')).collect()
 }
 
 /// Whether a text is empty or one of the words for a missing value.
 pub fn is_missing(text: &str) -> bool {
-    if text.len() > 60 {
+    is_one_of(text, &MISSING_WORDS)
+}
+
+/// Whether a text is empty or stands for a missing value where a number is asked for.
+pub(super) fn is_missing_number(text: &str) -> bool {
+    is_missing(text) || is_one_of(text, &MISSING_NUMBER_WORDS)
+}
+
+fn is_one_of(text: &str, words: &BTreeSet<&str>) -> bool {
+    // Long enough for every phrase, in the widest script.
+    const LONGEST_PHRASE: usize = 90;
+    if text.len() > LONGEST_PHRASE {
         return false;
     }
     let has_letter_or_digit = text.chars().any(char::is_alphanumeric);
     if !has_letter_or_digit {
         return text.chars().all(|character| {
             character.is_whitespace()
-                || matches!(character, '-' | '–' | '—' | '−' | '?' | '.' | '/' | '_' | '*' | '#')
+                || matches!(character, '-' | '–' | '—' | '−' | '?' | '.' | '/' | '_' | '*' | '#' | '(' | ')')
         });
     }
     let joined: String = plain_words(text).split(' ').collect();
-    joined.is_empty() || stands_in(MISSING, &joined)
+    joined.is_empty() || words.contains(joined.as_str())
 }
 
 /// Whether a text holds a word that stands for a value without a number.
 pub(super) fn has_value_word(text: &str) -> bool {
-    plain_words(text).split(' ').any(|word| stands_in(VALUE_WORDS, word))
+    let plain = plain_words(text);
+    plain.split(' ').any(|word| VALUES.contains(word))
+        || VALUE_WORDS_WITHIN.split(' ').any(|word| plain.contains(word))
 }
 
+/// Whether a word after a bare number begins a remark.
 pub(super) fn starts_remark(word: &str) -> bool {
-    stands_in(REMARK_STARTS, &word.to_lowercase())
+    let plain = plain_words(word);
+    let first = plain.split(' ').next().unwrap_or_default();
+    STARTS.contains(first)
+        // `OECD117`, `pH7`: the number is the word's.
+        || STARTS.contains(first.trim_end_matches(|character: char| character.is_ascii_digit()))
 }
 
 /// Whether the words before a number make it the number of a guideline, a pH or the like.
 pub(super) fn numbers_something_else(label: &str) -> bool {
-    label.split_whitespace().last().is_some_and(|word| stands_in(NUMBERED, &word.to_lowercase()))
+    let plain = plain_words(label);
+    plain.split(' ').next_back().is_some_and(|word| NUMBERED.split(' ').any(|known| known == word))
+}
+
+/// What the words before a number are to it.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub(super) enum Lead {
+    /// They lead a value: `log Kow`, `DT50`, `measured`.
+    Value,
+    /// They name a value of another kind: `DT90`, `n`.
+    OtherKind,
+    /// They deny something: `no degradation after`, `minus`.
+    Denial,
+    /// They stand for a value without a number: `insoluble`, `stable for`.
+    ValueWord,
+    /// Nobody knows.
+    Unknown,
+}
+
+/// What the words before a number are to it.
+pub(super) fn lead_of(label: &str) -> Lead {
+    let plain = plain_words(label);
+    let words = || plain.split(' ');
+    if words().any(|word| DENYING.contains(word)) {
+        Lead::Denial
+    } else if has_value_word(label) {
+        Lead::ValueWord
+    } else if words().all(|word| LABEL_WORDS.contains(word)) {
+        Lead::Value
+    } else if words().next_back().is_some_and(|word| OTHERS.contains(word)) {
+        Lead::OtherKind
+    } else {
+        Lead::Unknown
+    }
 }
 
 #[cfg(test)]
 mod tests {
-    use super::is_missing;
+    use super::{Lead, is_missing, is_missing_number, lead_of};
 
     #[test]
     fn words_for_missing_are_known_in_every_spelling() {
@@ -91,11 +131,44 @@ mod tests {
             "nicht bestimmt",
             "No data available",
             "not determined",
+            "non déterminé",
+            "sin datos",
+            "dato non disponibile",
+            "geen gegevens",
+            "データなし",
+            "无数据",
+            "/",
         ] {
             assert!(is_missing(text), "{text}");
         }
-        for text in ["0", "insoluble", "4.5", "no", "> 3"] {
+        for text in ["0", "insoluble", "4.5", "no", "> 3", "NC", "sí", "S/D"] {
             assert!(!is_missing(text), "{text}");
+        }
+    }
+
+    #[test]
+    fn short_forms_stand_for_missing_only_where_a_number_is_asked_for() {
+        for text in ["s.o.", "n.c.", "S/D", "n.m.", "x"] {
+            assert!(is_missing_number(text), "{text}");
+        }
+        assert!(!is_missing_number("4.5"));
+    }
+
+    #[test]
+    fn words_before_a_number_lead_it_or_do_not() {
+        for (label, lead) in [
+            ("log Kow", Lead::Value),
+            ("DT50", Lead::Value),
+            ("t1/2", Lead::Value),
+            ("実測値", Lead::Value),
+            ("DT90", Lead::OtherKind),
+            ("n", Lead::OtherKind),
+            ("no degradation after", Lead::Denial),
+            ("stable for", Lead::ValueWord),
+            ("minus", Lead::Denial),
+            ("see report", Lead::Unknown),
+        ] {
+            assert_eq!(lead_of(label), lead, "{label}");
         }
     }
 }

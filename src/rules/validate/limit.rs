@@ -162,7 +162,9 @@ impl Measured {
                 | QuantityFault::BadNumber
                 | QuantityFault::SeveralValues
                 | QuantityFault::TooLong
-                | QuantityFault::BadRange => {
+                | QuantityFault::BadRange
+                | QuantityFault::LogarithmOrNot
+                | QuantityFault::NotFinite => {
                     let found = found.clone();
                     RuleMistake::NotAQuantity { found, property, unit }
                 }

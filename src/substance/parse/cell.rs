@@ -3,11 +3,12 @@
 use crate::columns::Column;
 use crate::fault::{CellFaultKind, nearest};
 use crate::quantity::{
-    Bound, Date, Dimension, Interval, Quantity, QuantityFault, ReadAs, is_missing, parse_quantity,
+    Bound, Date, Dimension, Quantity, QuantityFault, ReadAs, Scale, Unit, is_missing, parse_quantities,
     quantity_of_number, tidy, unit_words,
 };
 use crate::substance::Property;
 use crate::substance::parse::Said;
+use crate::substance::parse::remark::{Degraded, folded};
 use crate::workbook::CellContent;
 
 /// What a numeric column promises.
@@ -19,6 +20,8 @@ pub(super) struct Expected {
     dimension: Dimension,
     sign: Sign,
     sensible: (f64, f64),
+    /// The property, where it is one.
+    property: Option<Property>,
 }
 
 /// Which numbers a field can have.
@@ -37,6 +40,7 @@ impl Expected {
         dimension: Dimension::Tonnage,
         sign: Sign::NotNegative,
         sensible: (0.0, 1e12),
+        property: None,
     };
 
     pub(super) const fn percent(what: &'static str, example: &'static str) -> Self {
@@ -47,6 +51,7 @@ impl Expected {
             dimension: Dimension::Percent,
             sign: Sign::NotNegative,
             sensible: (0.0, 100.0),
+            property: None,
         }
     }
 
@@ -58,6 +63,7 @@ impl Expected {
             dimension: Dimension::Temperature,
             sign: Sign::Any,
             sensible: (-273.15, 1e4),
+            property: None,
         }
     }
 
@@ -70,6 +76,7 @@ impl Expected {
             dimension: Dimension::Dimensionless,
             sign: Sign::NotNegative,
             sensible,
+            property: None,
         }
     }
 
@@ -105,6 +112,45 @@ impl Expected {
             dimension,
             sign: if property.may_be_negative() { Sign::Any } else { Sign::Positive },
             sensible,
+            property: Some(property),
+        }
+    }
+
+    /// Whether logarithms are expected; a column of log Koc says so by its unit.
+    fn scale(self, default_unit: Unit) -> Scale {
+        let logarithmic = self.property.is_some_and(Property::is_logarithmic);
+        if logarithmic || default_unit == Unit::LogLitrePerKilogram {
+            Scale::Logarithm
+        } else {
+            Scale::Linear
+        }
+    }
+
+    /// How to write the value itself where its logarithm is expected.
+    fn unlogged(self) -> Option<&'static str> {
+        match self.property? {
+            Property::LogKow => Some("Kow = 50000"),
+            Property::LogKoa => Some("Koa = 5E8"),
+            Property::LogD => Some("D = 50000"),
+            Property::Koc => Some("Koc = 1500"),
+            Property::Bcf => Some("BCF = 1500"),
+            Property::Baf => Some("BAF = 1500"),
+            _ => None,
+        }
+    }
+
+    /// How to write the logarithm where the value itself is expected, or where it is not clear which is meant.
+    fn logged(self) -> Option<&'static str> {
+        match self.property? {
+            Property::LogKow => Some("log Kow = 4.5"),
+            Property::LogKoa => Some("log Koa = 8.7"),
+            Property::LogD => Some("log D = 4.5"),
+            Property::Koc => Some("log Koc = 3.2"),
+            Property::Bcf => Some("log BCF = 3.2"),
+            Property::Baf => Some("log BAF = 3.2"),
+            Property::Bmf => Some("log BMF = -0.3"),
+            Property::Tmf => Some("log TMF = -0.3"),
+            _ => None,
         }
     }
 
@@ -129,40 +175,63 @@ fn examples(dimension: Dimension) -> (&'static str, &'static str) {
     }
 }
 
-/// The quantity of a cell and what its remarks say; `None` where the cell says that there is none.
+/// A quantity and what the remarks beside it say.
+pub(super) type Read = (Quantity, Said);
+
+/// The one quantity of a cell; `None` where the cell says that there is none.
 pub(super) fn read_quantity(
     content: &CellContent,
     column: &Column,
     expected: Expected,
     molar_mass: Option<f64>,
-) -> Result<Option<(Quantity, Said)>, CellFaultKind> {
+) -> Result<Option<Read>, CellFaultKind> {
+    let mut read = read_quantities(content, column, expected, molar_mass)?;
+    let first = read.pop();
+    if read.is_empty() { Ok(first) } else { Err(CellFaultKind::SeveralValues { what: expected.what }) }
+}
+
+/// The quantities of a cell; none where the cell says that there is none.
+pub(super) fn read_quantities(
+    content: &CellContent,
+    column: &Column,
+    expected: Expected,
+    molar_mass: Option<f64>,
+) -> Result<Vec<Read>, CellFaultKind> {
     let default_unit = column.unit.unwrap_or_else(|| expected.dimension.canonical());
-    let read_as = ReadAs { dimension: expected.dimension, default_unit, decimal: column.decimal, molar_mass };
-    let read = match content {
+    let scale = expected.scale(default_unit);
+    let dimension = expected.dimension;
+    let read_as = ReadAs { dimension, default_unit, decimal: column.decimal, scale, molar_mass };
+    let read: Result<Vec<Read>, QuantityFault> = match content {
         CellContent::Number(number) => {
-            quantity_of_number(*number, read_as).map(|quantity| (quantity, Said::default()))
+            quantity_of_number(*number, read_as).map(|quantity| vec![(quantity, Said::default())])
         }
-        CellContent::Text(text) => {
-            parse_quantity(text, read_as).map(|parsed| (parsed.quantity, Said::in_remarks(&parsed.remarks)))
-        }
+        CellContent::Text(text) => parse_quantities(text, read_as).map(|values| {
+            let said = |remarks: &[String]| Said::in_remarks(remarks);
+            values.into_iter().map(|parsed| (parsed.quantity, said(&parsed.remarks))).collect()
+        }),
         CellContent::DateTime(_) => return Err(CellFaultKind::BecameDate { what: expected.what }),
         CellContent::Boolean(_) => return Err(expected.not_a()),
-        CellContent::Empty => return Ok(None),
+        CellContent::Empty => return Ok(Vec::new()),
         CellContent::Error(_) => return Err(CellFaultKind::SheetError),
     };
     match read {
-        Ok((quantity, said)) => {
-            check_sense(quantity.interval, expected)?;
-            Ok(Some((quantity, said)))
+        Ok(values) => {
+            for (quantity, said) in &values {
+                check_sense(quantity, expected, scale)?;
+                check_words(quantity, said, column, expected)?;
+            }
+            Ok(values)
         }
-        Err(QuantityFault::NoValue) => Ok(None),
+        Err(QuantityFault::NoValue) => Ok(Vec::new()),
         // `miscible` is how the trade writes it; it holds no number, and nothing is lost by saying so to nobody.
-        Err(QuantityFault::WordOnly) if expected.what == Property::WaterSolubility.title() => Ok(None),
-        Err(fault) => Err(word_fault(fault, expected)),
+        Err(QuantityFault::WordOnly) if expected.property == Some(Property::WaterSolubility) => {
+            Ok(Vec::new())
+        }
+        Err(fault) => Err(word_fault(fault, expected, scale)),
     }
 }
 
-fn word_fault(fault: QuantityFault, expected: Expected) -> CellFaultKind {
+fn word_fault(fault: QuantityFault, expected: Expected, scale: Scale) -> CellFaultKind {
     let Expected { what, example, .. } = expected;
     match fault {
         QuantityFault::NoValue | QuantityFault::NoNumber => expected.not_a(),
@@ -170,23 +239,48 @@ fn word_fault(fault: QuantityFault, expected: Expected) -> CellFaultKind {
         QuantityFault::BadNumber => CellFaultKind::BadNumber { example },
         QuantityFault::SeveralValues => CellFaultKind::SeveralValues { what },
         QuantityFault::UnknownUnit(word) => {
-            let nearest = nearest(&word.to_lowercase(), unit_words(expected.dimension));
+            let nearest = nearest_unit(&word, expected.dimension);
             CellFaultKind::UnknownUnit { word, nearest, example }
+        }
+        QuantityFault::WrongDimension(Unit::One) if expected.dimension == Dimension::Henry => {
+            CellFaultKind::DimensionlessHenry
         }
         QuantityFault::WrongDimension(unit) => CellFaultKind::WrongUnit { unit, what, example },
         QuantityFault::NeedsMolarMass => CellFaultKind::NeedsMolarMass,
         QuantityFault::BadRange => CellFaultKind::BadRange { what },
+        QuantityFault::NotFinite => match (scale, expected.unlogged()) {
+            (Scale::Logarithm, Some(example)) => CellFaultKind::NotALogarithm { what, example },
+            (Scale::Linear | Scale::Logarithm, _) => CellFaultKind::BadRange { what },
+        },
         QuantityFault::TooLong => CellFaultKind::TooLong,
+        QuantityFault::LogarithmOrNot => {
+            CellFaultKind::LogarithmOrNot { what, example: expected.logged().unwrap_or(example) }
+        }
     }
 }
 
-fn check_sense(interval: Interval, expected: Expected) -> Result<(), CellFaultKind> {
+/// The spelling a misspelt unit is close to; one that begins otherwise may differ by a factor of a thousand.
+fn nearest_unit(word: &str, dimension: Dimension) -> Option<&'static str> {
+    let word = word.to_lowercase();
+    // Parts per trillion in one country are parts per thousand in another.
+    if word.starts_with("ppt") {
+        return None;
+    }
+    let first = word.chars().next();
+    nearest(&word, unit_words(dimension).filter(|known| known.to_lowercase().chars().next() == first))
+}
+
+fn check_sense(quantity: &Quantity, expected: Expected, scale: Scale) -> Result<(), CellFaultKind> {
     let what = expected.what;
+    let interval = quantity.interval;
     let ends = [interval.low().number(), interval.high().number()];
     let (least, most) = expected.sensible;
     let below_zero = |end: &f64| *end < 0.0;
     if expected.sign != Sign::Any && ends.iter().flatten().any(below_zero) {
-        return Err(CellFaultKind::Negative { what });
+        return Err(match expected.logged() {
+            Some(example) => CellFaultKind::MayBeLogarithm { what, example },
+            None => CellFaultKind::Negative { what },
+        });
     }
     let reaches_zero_only = match interval.high() {
         Bound::Included(high) | Bound::Excluded(high) => high <= 0.0,
@@ -196,9 +290,43 @@ fn check_sense(interval: Interval, expected: Expected) -> Result<(), CellFaultKi
         return Err(CellFaultKind::Zero { what, example: expected.bound_example });
     }
     if ends.iter().flatten().any(|end| *end < least || *end > most) {
-        return Err(CellFaultKind::OutOfSense { what });
+        let too_high = ends.iter().flatten().any(|end| *end > most);
+        let bare = matches!(quantity.unit, Unit::One | Unit::LogLitrePerKilogram);
+        return Err(match expected.unlogged() {
+            Some(example) if too_high && bare && scale == Scale::Logarithm => {
+                CellFaultKind::NotALogarithm { what, example }
+            }
+            Some(_) | None => CellFaultKind::OutOfSense { what },
+        });
     }
     Ok(())
+}
+
+/// Words of the cell or its header that speak against the number or its unit.
+fn check_words(
+    quantity: &Quantity,
+    said: &Said,
+    column: &Column,
+    expected: Expected,
+) -> Result<(), CellFaultKind> {
+    if quantity.unit == Unit::Jour && !is_french(&column.header) {
+        return Err(CellFaultKind::DaysOrYears);
+    }
+    // `28 d (no degradation)` is the length of a test; `> 365 d (stable)` is a half-life.
+    let ends = quantity.interval.high() != Bound::Unbounded;
+    if expected.dimension == Dimension::Time && said.degraded == Degraded::Said && ends {
+        return Err(CellFaultKind::WordsAgainstNumber);
+    }
+    Ok(())
+}
+
+/// Whether a header has a French word that no other language has.
+fn is_french(header: &str) -> bool {
+    const FRENCH: [&str; 14] = [
+        "demi", "vie", "sol", "sols", "eau", "eaux", "douce", "mer", "temps", "jours", "dans", "periode",
+        "duree", "marine",
+    ];
+    folded(header).split(' ').any(|word| FRENCH.contains(&word))
 }
 
 /// The cell as a user would read it; nothing for an empty cell.

@@ -6,16 +6,19 @@ use regex::Regex;
 
 use super::cell::{self, Expected};
 use super::pattern::fixed;
-use super::remark::{Said, basis_in};
+use super::remark::{Said, basis_in, folded, reliability_in_words};
 use crate::columns::Column;
 use crate::fault::CellFaultKind;
-use crate::quantity::{Quantity, plain_words};
 use crate::substance::{Basis, Compartment, Property, Reading};
 use crate::workbook::CellContent;
 
 static TEST_NUMBER: LazyLock<Regex> =
     LazyLock::new(|| fixed(r"\b(?:oecd|tg|guideline)[a-z ]*(\d{3})[a-z]?\b"));
-static STUDY_WORD: LazyLock<Regex> = LazyLock::new(|| fixed(r"\b(study|studie|test|versuch)\b"));
+static STUDY_WORD: LazyLock<Regex> = LazyLock::new(|| {
+    fixed(
+        r"\b(study|studie|test|versuch|etude|essai|estudio|ensayo|studio|prova|proef|onderzoek)\b|試験|试验",
+    )
+});
 static SCORE: LazyLock<Regex> =
     LazyLock::new(|| fixed(r"^(?:\D*[\s=:(])?([1-4])[a-e]?(?:\.0)?(?:\W.*)?$|^rl ?([1-4])$"));
 
@@ -85,7 +88,7 @@ impl Companions {
         let Some(text) = cell::value_text(content) else {
             return;
         };
-        let plain = plain_words(&text);
+        let plain = folded(&text);
         // A column of guidelines may leave `OECD` out.
         let bare = plain.len() <= 4 && plain.starts_with(|first: char| first.is_ascii_digit());
         let plain = if bare { format!("oecd {plain}") } else { plain };
@@ -177,7 +180,7 @@ pub(super) fn single(
     expected: Expected,
 ) -> Result<Option<f64>, CellFaultKind> {
     let read = cell::read_quantity(content, column, expected, None)?;
-    Ok(read.and_then(|(quantity, _): (Quantity, Said)| quantity.single()))
+    Ok(read.and_then(|(quantity, _)| quantity.single()))
 }
 
 fn said_by_method(text: &str) -> Said {
@@ -224,21 +227,10 @@ fn read_reliability(content: &CellContent) -> Result<Option<u8>, CellFaultKind> 
     let Some(text) = cell::value_text(content) else {
         return Ok(None);
     };
-    let plain = plain_words(&text);
+    let plain = folded(&text);
     let score =
         SCORE.captures(&text).and_then(|found| found.get(1).or_else(|| found.get(2))?.as_str().parse().ok());
-    let has = |words: &str| plain.contains(words);
-    let in_words = if has("not assignable") || has("nicht bewertbar") || has("nicht zuordenbar") {
-        Some(4)
-    } else if has("not reliable") || has("unreliable") || has("nicht zuverlassig") || has("nicht valide") {
-        Some(3)
-    } else if has("without restriction") || has("ohne einschrankung") {
-        Some(1)
-    } else if has("with restriction") || has("mit einschrankung") {
-        Some(2)
-    } else {
-        None
-    };
+    let in_words = reliability_in_words(&plain);
     let not_a = CellFaultKind::NotA { what: "reliability score from 1 to 4", example: "2" };
     score.or(in_words).map(Some).ok_or(not_a)
 }

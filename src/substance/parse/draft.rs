@@ -200,15 +200,31 @@ impl Draft {
         place: &CellRef,
     ) -> Result<(), CellFaultKind> {
         let expected = Expected::property(property);
-        let Some((quantity, said)) = cell::read_quantity(content, column, expected, self.molar_mass)? else {
-            return Ok(());
-        };
         if property == Property::MolarMass {
-            self.molar_mass = self.molar_mass.or(quantity.single());
+            // Molar concentrations are converted by it: there can be one only.
+            let read = cell::read_quantity(content, column, expected, None)?;
+            self.molar_mass =
+                self.molar_mass.or_else(|| read.as_ref().and_then(|(quantity, _)| quantity.single()));
+            self.wait(property, column, read, place);
+            return Ok(());
         }
-        let value = waiting(column, quantity, said, place);
-        self.values.push(AnyValue::Property(property, value));
+        let read = cell::read_quantities(content, column, expected, self.molar_mass)?;
+        self.wait(property, column, read, place);
         Ok(())
+    }
+
+    /// Keeps the values of a cell until the columns that speak of them are known.
+    fn wait(
+        &mut self,
+        property: Property,
+        column: &Column,
+        read: impl IntoIterator<Item = cell::Read>,
+        place: &CellRef,
+    ) {
+        for (quantity, said) in read {
+            let value = waiting(column, quantity, said, place);
+            self.values.push(AnyValue::Property(property, value));
+        }
     }
 
     fn take_ready(
@@ -328,7 +344,7 @@ fn cited<T>(value: Option<T>, cell: CellRef) -> Option<Cited<T>> {
 }
 
 fn waiting<T>(column: &Column, value: T, said: Said, cell: &CellRef) -> Waiting<T> {
-    let header = Said { basis: column.basis, conditions: column.conditions.clone(), other_half_life: None };
+    let header = Said { basis: column.basis, conditions: column.conditions.clone(), ..Said::default() };
     Waiting { value, said, header, cell: cell.clone() }
 }
 

@@ -3,13 +3,22 @@
 //! A text that says nothing known is kept as the method. Calculated beats measured, because an estimate is never shown
 //! as measured.
 
+mod reliability;
+mod words;
+
 use std::sync::LazyLock;
 
 use regex::Regex;
 
 use super::pattern::fixed;
-use crate::quantity::{Unit, plain_words};
+use crate::quantity::{Unit, part_scripts, plain_words, tidy};
+pub(super) use reliability::in_words as reliability_in_words;
+
 use crate::substance::{Basis, Conditions, DegradationKind, Property};
+use words::{
+    CALCULATED, DISSIPATION, GUIDELINE, HYDROLYSIS, MEASURED, NO_DEGRADATION, NOT_MEASURED, NOT_ULTIMATE,
+    ORGANISM, PHOTOLYSIS, PRIMARY, ULTIMATE, VALUE_NAME,
+};
 
 /// Basis and conditions as far as a text names them.
 #[derive(Debug, Clone, PartialEq, Default)]
@@ -20,85 +29,43 @@ pub(crate) struct Said {
     pub(crate) conditions: Conditions,
     /// The half-life meant, where the words name another than that of degradation.
     pub(crate) other_half_life: Option<Property>,
+    /// Whether a remark says that nothing was degraded, or how much.
+    pub(crate) degraded: Degraded,
 }
 
-// These look at words folded by `plain_words`.
-static CALCULATED: LazyLock<Regex> = LazyLock::new(|| {
-    fixed(concat!(
-        r"\b(calc|calcd|calculat\w+|comput\w+|predict\w*|estimat\w*|est|qsars?|qspr|model|models|modell\w*|modeling|",
-        r"in silico|read across|simul\w*|regression\w*|group contribution\w*|theor\w*|expected|presum\w*|probabl\w*|",
-        r"likely|expert (judge?ment|opinion|estimate)|expertenurteil|extrapolat\w*|interpolat\w*|assum\w+|default|",
-        r"worst case|analogues?|berechn\w*|rechnerisch\w*|kalkul\w*|(ab)?geschatzt\w*|(ab)?geschaetzt\w*|",
-        r"(ab)?schatz\w*|vorhergesagt\w*|vorhersag\w*|angenommen\w*|vermut\w*|voraussichtlich\w*|analogie\w*)\b"
-    ))
-});
-static NOT_MEASURED: LazyLock<Regex> = LazyLock::new(|| {
-    fixed(
-        r"\b(not|non|nicht|no|keine?|ohne|without|instead of|statt|anstatt) (\w+ ){0,2}(measured|experiment\w*|gemessen\w*|messung|messwert|stud(y|ie)|test|versuch|glp|oecd)\b",
-    )
-});
-static MEASURED: LazyLock<Regex> = LazyLock::new(|| {
-    fixed(concat!(
-        r"\b(measured|meas|experiment\w*|exp|expt|exptl|glp|study|studie|versuch|gemessen\w*|messwert|messung|",
-        r"shake flask|slow stir\w*|generator column|hplc|schuttel\w*)\b"
-    ))
-});
-static GUIDELINE: LazyLock<Regex> = LazyLock::new(|| {
-    fixed(concat!(
-        r"\boecd (tg |no |nr |guideline |test |test guideline |method )?\d{3}[a-z]?\b|\boecd\d{3}[a-z]?\b|",
-        r"\b(eu|ec|eg) (test )?(method |methode )?[abc] \d{1,2}\b|\b(oppts|ocspp) \d{3}\b|\biso \d{4,5}\b|",
-        r"\bastm e ?\d{3,4}\b|\bdin (en )?(iso )?\d{4,5}\b|^[abc] \d{1,2}( [a-f])?$"
-    ))
-});
-static ULTIMATE: LazyLock<Regex> =
-    LazyLock::new(|| fixed(r"\b(ultimate|ultimativ\w*|mineralis\w*|mineraliz\w*|endabbau)\b"));
-/// A denial makes no degradation ultimate.
-static NOT_ULTIMATE: LazyLock<Regex> = LazyLock::new(|| {
-    fixed(concat!(
-        r"\b(no|not|non|without|incomplete|partial|little|low|nicht|keine?|ohne|geringe?|unvollstandige?|teilweise) ",
-        r"(\w+ )?(ultimate|ultimativ\w*|mineralis\w*|mineraliz\w*|endabbau)\b"
-    ))
-});
-/// Ways in which a substance goes that are not its degradation by organisms; the test guidelines by their titles.
-static DISSIPATION: LazyLock<Regex> =
-    LazyLock::new(|| fixed(r"\b(dissipat\w*|disappear\w*|verschwind\w*|volatili[sz]\w*|fluchtig\w*)\b"));
-static HYDROLYSIS: LazyLock<Regex> =
-    LazyLock::new(|| fixed(r"\b(hydrolys\w*|hydrolyt\w*|oecd (tg |no |test |guideline )?111)\b"));
-static PHOTOLYSIS: LazyLock<Regex> = LazyLock::new(|| {
-    fixed(
-        r"\b(photolys\w*|photolyt\w*|photodegrad\w*|photooxid\w*|photo ?abbau|oecd (tg |no |test |guideline )?316)\b",
-    )
-});
-static PRIMARY: LazyLock<Regex> = LazyLock::new(|| fixed(r"\b(primary|primar\w*|primaer\w*)\b"));
-static ORGANISM: LazyLock<Regex> = LazyLock::new(|| {
-    fixed(concat!(
-        r"\b(fish|fische?n?|daphni\w*|algae?|algal|algen?|grunalgen?|carp|karpfen|\w*trout|\w*forellen?|zebrafish|",
-        r"zebrabarbling|\w*minnow|medaka|bluegill|invertebrates?|wirbellosen?|mysids?|crustacea\w*|krebstiere?|mussels?|",
-        r"oncorhynchus|danio|cyprinus|pimephales|lemna|chironom\w*|pseudokirchneriella|raphidocelis|desmodesmus)\b"
-    ))
-});
-/// The names of the values themselves say nothing on how they were obtained.
-static VALUE_NAME: LazyLock<Regex> = LazyLock::new(|| {
-    fixed(concat!(
-        r"^((log|lg) ?(k?ow|pow|p|d|koa|koc|bcf|baf|kow)|dt ?50|t ?1 2|t half|bcf|baf|bmf|tmf|k?oc|lc ?50|ec ?50|noec|",
-        r"ec ?10|half life|halbwertszeit|pka|mw|mp|bp|vp|ww|wwt|wet weight|log k ?ow|log p ?ow|value|wert)( value| wert)?$"
-    ))
-});
+/// What remarks say of how much was degraded.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
+pub(crate) enum Degraded {
+    /// Nothing.
+    #[default]
+    NotSaid,
+    /// That there was no degradation, or its percentage: a number of days beside it is the length of the test.
+    Said,
+}
 
 // These look at the text as written.
 static TEMPERATURE: LazyLock<Regex> = LazyLock::new(|| {
-    fixed(r"(?:^|[^\d.,\-])(-?\d{1,4}(?:[.,]\d+)?)\s*(°\s*C|deg\.?\s*C|Grad\s*C|C|°\s*F|K)(?:\W|$)")
+    fixed(concat!(
+        r"(?:^|[^\d.,\-])(-?\d{1,4}(?:[.,]\d+)?)\s*(?:(°\s*C|deg\.?\s*C|(?:Grad|degr[ée]s?|degrees?|grados?|gradi|graden)\s*C|C|",
+        r"°\s*F|K)(?:\W|$)|((?:摄氏|攝氏)?度))"
+    ))
 });
-static PH: LazyLock<Regex> =
-    LazyLock::new(|| fixed(r"\bpH[\s=:]*(?:of\s*|von\s*)?(\d{1,2}(?:[.,]\d+)?)(\s*(?:-|to|bis)\s*\d)?"));
-static LIPID: LazyLock<Regex> = LazyLock::new(|| {
+static PH: LazyLock<Regex> = LazyLock::new(|| {
     fixed(
-        r"(\d{1,2}(?:[.,]\d+)?)\s*%\s*(?:lipid|fett)|(?:lipid|fett)\w*(?:\s+content)?[\s=:]*(\d{1,2}(?:[.,]\d+)?)\s*%",
+        r"\bpH[\s=:]*(?:(?:value|of|von|de|di|van|値|值)\s*)?(\d{1,2}(?:[.,]\d+)?)(\s*(?:-|to|bis|à|a|tot|~)\s*\d)?",
     )
 });
-static RELIABILITY: LazyLock<Regex> = LazyLock::new(|| {
-    fixed(r"\b(?:reliability|klimisch|zuverl(?:ä|ae)ssigkeit|rl)(?:\s+(?:score|code|index))?[\s=:]*([1-4])\b")
+static LIPID: LazyLock<Regex> = LazyLock::new(|| {
+    fixed(concat!(
+        r"(\d{1,2}(?:[.,]\d+)?)\s*%\s*(?:(?:de|di|en|of)\s+)?(?:l[ií]pid|fett|vet\b|graisse|gras|脂)|",
+        r"(?:l[ií]pid|fett|vetgehalte|脂[質质肪])\w*(?:\s+(?:content|gehalt|含量))?[\s=:]*(\d{1,2}(?:[.,]\d+)?)\s*%"
+    ))
 });
+static YEAR: LazyLock<Regex> =
+    LazyLock::new(|| fixed(r"(?:^|[\s,(])((?:19[3-9]|20[0-4])\d)(?:\s*年)?[.):]?$"));
+/// Standards have numbers that look like years.
+static NUMBER_OF_A_STANDARD: LazyLock<Regex> =
+    LazyLock::new(|| fixed(r"\b(?:iso|din|en|astm|jis|no|nr|report|page|p)\.?\s*[a-z]?\s*\d{4}\)?$"));
 
 impl Said {
     /// What the remarks of a cell say.
@@ -113,18 +80,25 @@ impl Said {
     /// What a header says beside the name of its field: words that are no guideline are no method.
     pub(crate) fn in_header(header: &str) -> Self {
         let mut said = Self::default();
+        let plain = folded(header);
         said.read_part(header);
-        if !GUIDELINE.is_match(&plain_words(header)) {
+        if !GUIDELINE.is_match(&plain) {
             said.conditions.method = None;
         }
-        said.conditions.organism = ORGANISM.find(&plain_words(header)).map(|found| found.as_str().to_owned());
+        // A year in a header is that of a tonnage or a revision.
+        said.conditions.year = None;
+        said.conditions.organism = ORGANISM.find(&plain).map(|found| found.as_str().to_owned());
         said
     }
 
     fn read_part(&mut self, part: &str) {
-        let plain = plain_words(part);
+        let part = self.without_year(part);
+        let plain = folded(part);
         if plain.is_empty() || VALUE_NAME.is_match(&plain) {
             return;
+        }
+        if NO_DEGRADATION.is_match(&plain) || says_percentage(part, &plain) {
+            self.degraded = Degraded::Said;
         }
         let is_guideline = GUIDELINE.is_match(&plain);
         self.other_half_life = self.other_half_life.or_else(|| other_half_life(&plain));
@@ -143,6 +117,18 @@ impl Said {
         }
     }
 
+    /// Takes the year at the end of a part: `Smith et al. 1998`, `1998`.
+    fn without_year<'part>(&mut self, part: &'part str) -> &'part str {
+        let Some(found) = YEAR.captures(part).and_then(|found| found.get(1)) else {
+            return part;
+        };
+        if NUMBER_OF_A_STANDARD.is_match(part) {
+            return part;
+        }
+        self.conditions.year = self.conditions.year.or(found.as_str().parse().ok());
+        part.get(..found.start()).unwrap_or_default().trim_end_matches([' ', ',', '(', ':'])
+    }
+
     /// Whether the part speaks of a condition.
     fn read_conditions(&mut self, part: &str, plain: &str) -> bool {
         let conditions = &mut self.conditions;
@@ -153,7 +139,7 @@ impl Said {
             .and_then(|found| decimal(found.get(1)?.as_str()));
         let lipid =
             LIPID.captures(part).and_then(|found| decimal(found.get(1).or_else(|| found.get(2))?.as_str()));
-        let reliability = RELIABILITY.captures(part).and_then(|found| found.get(1)?.as_str().parse().ok());
+        let reliability = reliability::reliability_in(part, plain);
         // `mineralisation 12 %` is how far it went, not what the half-life is of.
         let ultimate = ULTIMATE.is_match(plain) && !NOT_ULTIMATE.is_match(plain) && !part.contains('%');
         let degradation = match (ultimate, PRIMARY.is_match(plain)) {
@@ -181,6 +167,22 @@ impl Said {
     }
 }
 
+/// A text folded as the patterns of [`words`] need it.
+pub(super) fn folded(text: &str) -> String {
+    plain_words(&part_scripts(tidy(text)))
+}
+
+/// `5 %`, `5 % degradation`: how much was degraded, and not a lipid or carbon content.
+fn says_percentage(part: &str, plain: &str) -> bool {
+    static BARE: LazyLock<Regex> = LazyLock::new(|| fixed(r"^[<>≤≥~=]*\s*(?:ca\.?\s*)?\d+(?:[.,]\d+)?\s*%$"));
+    static AMOUNT: LazyLock<Regex> = LazyLock::new(|| {
+        fixed(
+            r"degrad|abbau|abgebaut|afbraak|afgebroken|elimin|removal|remaining|recover|mineral|分解|降解|bod|co2|doc\b",
+        )
+    });
+    part.contains('%') && (BARE.is_match(part.trim()) || AMOUNT.is_match(plain))
+}
+
 fn other_half_life(plain: &str) -> Option<Property> {
     if HYDROLYSIS.is_match(plain) {
         Some(Property::HydrolysisHalfLife)
@@ -191,7 +193,7 @@ fn other_half_life(plain: &str) -> Option<Property> {
     }
 }
 
-/// How a folded text says that a value was obtained.
+/// How a text folded by [`folded`] says that a value was obtained.
 pub(super) fn basis_in(plain: &str) -> Option<Basis> {
     if CALCULATED.is_match(plain) {
         return Some(Basis::Calculated);
@@ -207,6 +209,7 @@ pub(super) fn fill_conditions(conditions: &mut Conditions, others: &Conditions) 
     conditions.ph = conditions.ph.or(others.ph);
     conditions.lipid = conditions.lipid.or(others.lipid);
     conditions.reliability = conditions.reliability.or(others.reliability);
+    conditions.year = conditions.year.or(others.year);
     if conditions.degradation == DegradationKind::NotStated {
         conditions.degradation = others.degradation;
     }
@@ -238,7 +241,7 @@ fn parts(remark: &str) -> Vec<&str> {
 fn temperature_in(part: &str) -> Option<f64> {
     let found = TEMPERATURE.captures(part)?;
     let number = decimal(found.get(1)?.as_str())?;
-    let written = found.get(2)?.as_str();
+    let written = found.get(2).map_or("°C", |unit| unit.as_str());
     // `OECD 302 C` is a guideline.
     if written.len() == 1 && number > 100.0 && !written.eq_ignore_ascii_case("k") {
         return None;

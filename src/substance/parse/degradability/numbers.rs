@@ -8,7 +8,7 @@ use std::sync::LazyLock;
 use regex::{Captures, Regex};
 
 use super::window::without_window_as_written;
-use crate::quantity::{DecimalStyle, Dimension, Interval, ReadAs, Unit, parse_quantity, plain_words};
+use crate::quantity::{DecimalStyle, Dimension, Interval, ReadAs, Scale, Unit, parse_quantity, plain_words};
 use crate::substance::parse::pattern::fixed;
 
 /// Days of a month, to tell a test of some months from one of 28 days.
@@ -84,7 +84,13 @@ pub(super) fn measure_in(text: &str) -> Measure {
 }
 
 const fn percent(decimal: DecimalStyle) -> ReadAs {
-    ReadAs { dimension: Dimension::Percent, default_unit: Unit::Percent, decimal, molar_mass: None }
+    ReadAs {
+        dimension: Dimension::Percent,
+        default_unit: Unit::Percent,
+        decimal,
+        scale: Scale::Linear,
+        molar_mass: None,
+    }
 }
 
 /// The number of a text that holds nothing else.

@@ -1,0 +1,210 @@
+//! Columns that are left aside or remarked on, because what their header says is not certain.
+
+use kowledger::columns::{ColumnOverride, Recognised, recognise};
+use kowledger::substance::{Field, Property};
+use kowledger::workbook::{CellContent, Row};
+
+use crate::sheet::{columns_of, content_row, text_row, words};
+
+/// A sheet of one column beside a CAS number.
+fn sheet(header: &str, values: &[f64]) -> Vec<Row> {
+    let data = values
+        .iter()
+        .enumerate()
+        .map(|(place, value)| content_row(place + 1, &[CellContent::Empty, CellContent::Number(*value)]));
+    std::iter::once(text_row(0, &["CAS", header])).chain(data).collect()
+}
+
+fn takes(recognised: &Recognised, property: Property) -> bool {
+    recognised.columns.iter().any(|column| column.field == Field::Property(property))
+}
+
+const LOGARITHMS: [f64; 5] = [3.2, 4.15, 2.9, 1.8, 3.3];
+
+#[test]
+fn numbers_that_look_like_logarithms_keep_a_column_from_clearing_until_the_user_says_what_it_holds() {
+    for (header, property) in [("BCF", Property::Bcf), ("Koc", Property::Koc), ("BAF", Property::Baf)] {
+        let recognised = columns_of(&sheet(header, &LOGARITHMS)).unwrap();
+        assert!(!takes(&recognised, property), "{header}");
+        assert_eq!(
+            recognised.remarks,
+            [format!(
+                "Sheet: column B (`{header}`) is left aside, because its numbers look like logarithms and its header \
+                 does not say so; write `log {header}` as its header if they are, or say that they are none: --column \
+                 '{header}={}'",
+                property.id()
+            )]
+        );
+        assert_eq!(recognised.unknown, [(1, header.to_owned())]);
+    }
+}
+
+#[test]
+fn a_header_with_log_or_a_word_from_the_user_settles_it() {
+    assert!(takes(&columns_of(&sheet("log BCF", &LOGARITHMS)).unwrap(), Property::Bcf));
+    let told = [ColumnOverride::parse("BCF=bcf").unwrap()];
+    let recognised = recognise("Sheet", &sheet("BCF", &LOGARITHMS), words().unwrap(), &told).unwrap();
+    assert!(takes(&recognised, Property::Bcf) && recognised.remarks.is_empty());
+}
+
+#[test]
+fn a_header_with_its_unit_is_believed_and_remarked_on() {
+    let recognised = columns_of(&sheet("BCF (L/kg)", &LOGARITHMS)).unwrap();
+    assert!(takes(&recognised, Property::Bcf));
+    assert_eq!(
+        recognised.remarks,
+        [
+            "Sheet: column B (`BCF (L/kg)`) holds numbers that look like logarithms; they are read in L/kg, as the header \
+             says; write `log BCF` as its header if they are logarithms"
+        ]
+    );
+}
+
+#[test]
+fn only_five_numbers_with_decimals_and_none_above_eight_look_like_logarithms() {
+    for (values, taken) in [
+        (&[3.2, 4.1, 2.9, 1.8][..], true),
+        (&[3.2, 4.1, 2.9, 1.8, 3.3], false),
+        (&[3.2, 4.1, 2.9, 1.8, 8.0], false),
+        (&[3.2, 4.1, 2.9, 1.8, 8.1], true),
+        (&[3.2, 4.1, 2.9, 1.8, -1.0], false),
+        (&[3.2, 4.1, 2.9, 1.8, 120.0], true),
+        (&[3.0, 4.0, 2.0, 1.0, 8.0], true),
+        (&[3.0, 4.0, 2.9, 1.8, 8.5, 3.1], true),
+        (&[3.0, 4.0, 2.9, 1.8], true),
+        (&[3.0, 4.0, 2.0, 1.8, 1.2, 3.1], false),
+    ] {
+        let recognised = columns_of(&sheet("BCF", values)).unwrap();
+        assert_eq!(takes(&recognised, Property::Bcf), taken, "{values:?}");
+    }
+}
+
+#[test]
+fn texts_count_as_numbers_and_cells_with_their_unit_do_not() {
+    let rows = |texts: &[&str]| -> Vec<Row> {
+        let data = texts.iter().enumerate().map(|(place, text)| text_row(place + 1, &["", text]));
+        std::iter::once(text_row(0, &["CAS", "BCF"])).chain(data).collect()
+    };
+    let like_logarithms = rows(&["3,2", "< 4,1", "2,9", "1,8", "3,3"]);
+    assert!(!takes(&columns_of(&like_logarithms).unwrap(), Property::Bcf));
+    let with_unit = rows(&["3.2 L/kg", "4.1 L/kg", "2.9 L/kg", "1.8 L/kg", "3.3 L/kg"]);
+    assert!(takes(&columns_of(&with_unit).unwrap(), Property::Bcf));
+}
+
+#[test]
+fn a_number_above_ten_is_no_logarithm() {
+    assert!(takes(&columns_of(&sheet("log Koc", &[2.5, 10.0])).unwrap(), Property::Koc));
+    let recognised = columns_of(&sheet("log Koc", &[2.5, 480.0])).unwrap();
+    assert!(!takes(&recognised, Property::Koc));
+    assert_eq!(
+        recognised.remarks,
+        [
+            "Sheet: column B (`log Koc`) is left aside, because it holds 480, which is too high for a logarithm; write \
+             `Koc (L/kg)` as its header if its numbers are no logarithms, or correct the number, or say that they are: \
+             --column 'log Koc=koc'"
+        ]
+    );
+}
+
+/// The remark on one header beside a CAS number; none where there is none.
+fn remark_on(header: &str) -> Option<String> {
+    columns_of(&[text_row(0, &["CAS", header])]).unwrap().remarks.into_iter().next()
+}
+
+#[test]
+fn a_header_that_leaves_something_open_is_remarked_on_with_the_way_out() {
+    for (header, part) in [
+        ("pKa", "does not say whether its pKa is of an acid or a base: --column 'pKa=pka-acid' or --column"),
+        ("酸解離定数", "does not say whether its pKa is of an acid or a base"),
+        (
+            "Half-life",
+            "names no compartment, so it is left aside; for soil, for example: --column 'Half-life=",
+        ),
+        ("Demi-vie (jours)", "names no compartment"),
+        ("Halfwaardetijd meer", "says `meer`, a lake in Dutch and the sea in German, so it is left aside"),
+        ("半衰期", "names no compartment"),
+        ("Half-life (see note)", "names no compartment"),
+        (
+            "DT50 water/sediment",
+            "names water and sediment together, so it is left aside; if it is one of them: --column 'DT50 \
+             water/sediment=half-life-water' or --column 'DT50 water/sediment=half-life-sediment'",
+        ),
+        ("Demi-vie eau/sédiment", "names water and sediment together"),
+        ("DT50 soil, air", "names more than one compartment"),
+        ("Kow", "does not say whether it holds the logarithm; if it does: --column 'Kow=log-kow'"),
+        ("Kd (L/kg)", "which is no Koc, so it is left aside"),
+        ("LOEC fish (mg/L)", "which lies above the NOEC"),
+        ("NOEC / LC50 fish", "names acute and long-term values together"),
+        ("Primary biodegradation (%)", "which is no ready biodegradability"),
+        ("Anaerobe Abbaubarkeit", "which is no ready biodegradability"),
+    ] {
+        let remark = remark_on(header);
+        assert!(remark.as_ref().is_some_and(|remark| remark.contains(part)), "{header}: {remark:?}");
+    }
+}
+
+#[test]
+fn a_header_with_one_misspelt_word_is_told_the_nearest_field() {
+    for (header, field) in [
+        ("log kwo", "log-kow"),
+        ("Half-lfe soil", "half-life-soil"),
+        ("Half-life siol", "half-life-soil"),
+        ("Water solubillity", "water-solubility"),
+        ("Melitng point", "melting-point"),
+        ("Wasserlöslichkiet", "water-solubility"),
+        ("Halbwertzeti Boden", "half-life-soil"),
+        ("Schmezpunkt", "melting-point"),
+        ("Dampfdurck", "vapour-pressure"),
+        ("Solubillité dans l'eau", "water-solubility"),
+        ("Demi-vei sol", "half-life-soil"),
+        ("Fournisseru", "supplier"),
+        ("Solubildad en agua", "water-solubility"),
+        ("Provedor", "supplier"),
+        ("Solubiltà in acqua", "water-solubility"),
+        ("Fornitoer", "supplier"),
+        ("Oplosbaarhied in water", "water-solubility"),
+        ("Smletpunt", "melting-point"),
+        ("Leverancir", "supplier"),
+    ] {
+        // Some are near enough to be taken at once.
+        let recognised = columns_of(&[text_row(0, &["CAS", header])]).unwrap();
+        let taken = recognised.columns.get(1).map(|column| column.field.id());
+        let way_out = format!("is not recognised; if it is {field}: --column '{header}={field}'");
+        let hinted = recognised.remarks.iter().any(|remark| remark.contains(&way_out));
+        assert!(taken == Some(field) || hinted, "{header}: {taken:?} {:?}", recognised.remarks);
+    }
+}
+
+#[test]
+fn a_header_that_resembles_none_is_not_remarked_on() {
+    for header in [
+        "Colour",
+        "Stock",
+        "Lot no",
+        "Price (EUR)",
+        "Lagerort",
+        "Couleur",
+        "Ubicación",
+        "Colore",
+        "Kleur",
+        "備考",
+        "颜色",
+        "Demi-vie sol",
+        "Storage class",
+        "Plant",
+        "Note",
+        "Warehouse",
+        "Buyer",
+        "Cost centre",
+        "Date",
+        "Sol",
+        "Air",
+        "Preis",
+        "Comment on BCF",
+        "P flag",
+        "LD50 oral rat",
+        "Purity",
+    ] {
+        assert_eq!(remark_on(header), None, "{header}");
+    }
+}
