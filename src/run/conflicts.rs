@@ -17,7 +17,7 @@ use sheet::ConflictsSheet;
 /// Cells that are listed; the others are counted by kind and stand in the Cautions cell of their row.
 const CELLS_LISTED: usize = 100_000;
 /// Lines on rows that share a number or a name.
-const ROWS_LISTED: usize = 100_000;
+const ROWS_LISTED: usize = 50_000;
 /// Characters of a text that are kept; more than a message shows.
 const TEXT_KEPT: usize = 80;
 

@@ -116,7 +116,7 @@ impl Register {
         let key_of = |place: &u32| self.row(*place).and_then(&key);
         let all = 0..u32::try_from(self.rows.len()).unwrap_or(u32::MAX);
         let mut order: Vec<u32> = all.filter(|place| key_of(place).is_some()).collect();
-        order.sort_by(|one, other| key_of(one).cmp(&key_of(other)));
+        order.sort_by_key(key_of);
         let alike = order.chunk_by(|one, other| key_of(one) == key_of(other));
         alike.filter(|rows| rows.len() > 1).filter_map(|rows| self.group(by, rows)).collect()
     }

@@ -99,14 +99,16 @@ fn data_of(substance: &Substance) -> Vec<(&'static str, u32)> {
         data.push(("hazard statements", digest(&[cited.value.codes().collect()], hash)));
     }
     if let Some(cited) = &substance.substance_type {
-        data.push(("substance type", digest(&[cited.value], |value, hasher| value.hash(hasher))));
+        data.push(("substance type", digest(&[cited.value], Hash::hash)));
     }
     data
 }
 
 fn digest<Item>(items: &[Item], hash: impl Fn(&Item, &mut DefaultHasher)) -> u32 {
     let mut hasher = DefaultHasher::new();
-    items.iter().for_each(|item| hash(item, &mut hasher));
+    for item in items {
+        hash(item, &mut hasher);
+    }
     let [first, second, third, fourth, ..] = hasher.finish().to_le_bytes();
     u32::from_le_bytes([first, second, third, fourth])
 }

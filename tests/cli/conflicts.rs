@@ -96,7 +96,7 @@ fn many_cells_of_a_column_with_the_same_text_are_told_in_one_sentence_and_listed
     let numbers = ["71-43-2", "108-88-3", "67-64-1", "64-17-5"];
     rows.extend(numbers.map(|cas| texts(&["", cas, "see file", "17", "3"])));
     rows.extend((0..25).map(|_| texts(&["", "", "", "", ""])));
-    let odd: Vec<String> = (0..25).map(|number| format!("soon {number}")).collect();
+    let odd: Vec<String> = ('a'..='y').map(|letter| format!("soon {letter}")).collect();
     for (row, text) in rows.iter_mut().skip(7).zip(&odd) {
         row[1] = Put::Text("50-29-4");
         row[4] = Put::Text(text);
@@ -114,7 +114,7 @@ fn many_cells_of_a_column_with_the_same_text_are_told_in_one_sentence_and_listed
         "Substances!B8: `50-29-4` is no CAS number: its check digit should be 3; look the number up, and write \
          `50-29-3` if the other digits are right, or correct them (and 24 more cells of this column like it)"
     );
-    assert_eq!(told[2], "Substances!E8: `soon 0` is no half-life in soil; write, for example, `40 d`");
+    assert_eq!(told[2], "Substances!E8: `soon a` is no half-life in soil; write, for example, `40 d`");
     assert_eq!(told.len(), 22, "twenty faults, the rest and the total: {}", run.complained);
     // 4 + 25 + 18 of the 54 are told.
     assert_eq!(told[20], "... and 7 more");
