@@ -85,15 +85,17 @@ fn kind_of_compound_file(file: &mut File) -> std::io::Result<FileKind> {
     }
 }
 
-/// Where the container cannot be listed, the names of its streams can still be found.
+/// Where the container cannot be listed, the names of its streams may still be found. They often stand at its end, so that
+/// none is found in a file that was cut off: opening it as a workbook will then say that.
 fn kind_of_damaged_compound_file(file: &mut File) -> std::io::Result<FileKind> {
     let mut content = Vec::new();
     file.seek(SeekFrom::Start(0))?;
     file.take(SEARCHED).read_to_end(&mut content)?;
-    Ok(kind_by_streams(|name| {
+    let found = kind_by_streams(|name| {
         let wide: Vec<u8> = name.encode_utf16().flat_map(u16::to_le_bytes).collect();
         content.windows(wide.len()).any(|window| window == wide)
-    }))
+    });
+    Ok(if found == FileKind::Unknown { FileKind::Xls } else { found })
 }
 
 fn kind_by_streams(has: impl Fn(&str) -> bool) -> FileKind {

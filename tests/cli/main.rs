@@ -14,6 +14,7 @@ mod hostile;
 #[path = "../make/sheets.rs"]
 mod sheets;
 
+mod binary;
 mod cells;
 mod commands;
 mod conflicts;

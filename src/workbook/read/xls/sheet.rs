@@ -9,6 +9,9 @@ use crate::workbook::read::binary::bytes::{byte, short};
 use crate::workbook::read::binary::empty_survey;
 use crate::workbook::survey::{ColumnLayout, SheetSurvey, Visibility, clip_widths};
 
+/// The cells of a sheet: 65,536 rows of 256 columns.
+const MOST_CELLS: usize = 65_536 * 256;
+
 /// A sheet, surveyed.
 pub(super) struct Sheet {
     pub(super) survey: SheetSurvey,
@@ -118,6 +121,9 @@ impl Pass {
         if *columns.end() > LAST_COLUMN {
             let what = format!("has a cell in column {}, but has 256 columns", u32::from(*columns.end()) + 1);
             return Err(whole(name, what));
+        }
+        if self.cells.len() > MOST_CELLS {
+            return Err(whole(name, "stores more cells than a sheet has"));
         }
         // The stream is held to less than what four bytes count.
         let at = u32::try_from(record.at).unwrap_or(u32::MAX);

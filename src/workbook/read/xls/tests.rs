@@ -62,6 +62,14 @@ fn cells_in_any_order_are_read_in_theirs_and_one_stored_twice_is_named() {
 }
 
 #[test]
+fn blanks_without_end_are_refused_before_they_fill_the_memory() {
+    // A row of 256 blanks, stored half again as often as a sheet has rows.
+    let row = record(0x00BE, &[shorts(&[0, 0], &[0; 512]), shorts(&[255], &[])].concat());
+    let said = said_of(&RawXls::with_records(&row.repeat(98_304)));
+    assert_eq!(said, format!("sheet `Substances` stores more cells than a sheet has; {SAVE_AGAIN}"));
+}
+
+#[test]
 fn a_text_that_is_not_stored_is_named_by_cell() {
     let texts = record(0x00FC, &[1, 0, 0, 0, 0, 0xC2, 0xEB, 0x0B, 3, 0, 0, b'D', b'D', b'T']);
     let cell = |index: u8| record(0x00FD, &shorts(&[6, 2, 0], &[index, 0, 0, 0]));
