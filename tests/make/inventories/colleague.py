@@ -25,7 +25,7 @@ ROWS = {
     15: [6, "DEET", "134-62-3", "Bayou Chem", "'2.4", "11,2 g/l", "unbekannt", "> 90 d", "22 (fish)", "yes / ja", "H302 H315 H319 H412", 1.5, None],
     17: [7, "Schmieröl-Additiv XB-7", "68649-42-3 / 84605-29-8", "Lube & Co", "> 6", "unlöslich", None, None, None, "nein", "H315 H318 H411", 12,
          "zwei CAS im SDB"],
-    18: [8, "Terbutryn", "886-50-1", "Agro Süd", "3.66 (OECD 117)", "25 ppm", "52", "180 - 240 Tage", "181", "nein (0 %)", "H302, H317, H410", "0.01",
+    18: [8, "Terbutryn", "886-50-0", "Agro Süd", "3.66 (OECD 117)", "25 ppm", "52", "180 - 240 Tage", "181", "nein (0 %)", "H302, H317, H410", "0.01",
          "prüfen"],
     19: [9, "Isothiazolinone C(M)IT", "55965-84-9", "Bayou Chem", "0.401", "mischbar", "0,3 d", "1.8-2.5 d", "3,6", "nein", "H301, H310, H314, H317, H330, H410",
          "0,005", "Gemisch 3:1"],
@@ -47,7 +47,7 @@ NEW = [
 
 
 def make():
-    check_numbers(row[:2] + row[3:] for row in ROWS.values())
+    check_numbers(row for row in ROWS.values() if row[1] != "Tippfehler-Stoff")
     for number in list(DATES) + [row[0] for row in NEW[1:]]:
         cas(number)
     book = Workbook()
