@@ -2,7 +2,6 @@
 //! them, which was written down by hand.
 
 #![expect(
-    clippy::expect_used,
     clippy::indexing_slicing,
     clippy::panic,
     clippy::unwrap_used,
