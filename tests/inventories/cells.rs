@@ -95,6 +95,11 @@ impl Found {
     fn value(value: &str) -> Self {
         Self { value: value.to_owned(), why: String::new(), basis: "", conditions: Vec::new() }
     }
+
+    /// Two values of one cell.
+    fn and(self, other: Self) -> Self {
+        Self { value: format!("{} and {}", self.value, other.value), ..self }
+    }
 }
 
 fn found(substance: &Substance, field: Field, address: &str) -> Found {
@@ -102,10 +107,11 @@ fn found(substance: &Substance, field: Field, address: &str) -> Found {
         return Found { why: format!(" ({fault})"), ..Found::value("fault") };
     }
     let missing = || Found::value("missing");
-    let mut readings =
-        substance.readings.values().flatten().chain(&substance.tonnage).chain(&substance.content);
-    if let Some(reading) = readings.find(|reading| reading.cell.address() == address) {
-        return of_reading(reading);
+    let readings = substance.readings.values().flatten().chain(&substance.tonnage).chain(&substance.content);
+    let of_cell: Vec<Found> =
+        readings.filter(|reading| reading.cell.address() == address).map(of_reading).collect();
+    if let Some(all) = of_cell.into_iter().reduce(Found::and) {
+        return all;
     }
     let texts = [
         (Field::RowId, &substance.row_id),

@@ -1,6 +1,9 @@
 """An export of a German materials system: csv, semicolons, Windows-1252, decimal commas, short headers, empty columns
 at the end of each line, a line of totals."""
 
+import csv
+import io
+
 from common import FOLDER, check_numbers
 
 HEADER = [
@@ -55,8 +58,9 @@ def make():
     check_numbers(ROWS)
     lines = [HEADER] + [row + [""] * 3 for row in ROWS] + [TOTALS + [""] * 3]
     assert all(len(line) == len(HEADER) for line in lines)
-    text = "".join(";".join(line) + "\r\n" for line in lines)
-    (FOLDER / "german-erp.csv").write_bytes(text.encode("cp1252"))
+    text = io.StringIO(newline="")
+    csv.writer(text, delimiter=";").writerows(lines)
+    (FOLDER / "german-erp.csv").write_bytes(text.getvalue().encode("cp1252"))
 
 
 if __name__ == "__main__":
