@@ -97,7 +97,7 @@ impl Found {
     }
 
     /// Two values of one cell.
-    fn and(self, other: Self) -> Self {
+    fn and(self, other: &Self) -> Self {
         Self { value: format!("{} and {}", self.value, other.value), ..self }
     }
 }
@@ -110,7 +110,7 @@ fn found(substance: &Substance, field: Field, address: &str) -> Found {
     let readings = substance.readings.values().flatten().chain(&substance.tonnage).chain(&substance.content);
     let of_cell: Vec<Found> =
         readings.filter(|reading| reading.cell.address() == address).map(of_reading).collect();
-    if let Some(all) = of_cell.into_iter().reduce(Found::and) {
+    if let Some(all) = of_cell.into_iter().reduce(|first, next| first.and(&next)) {
         return all;
     }
     let texts = [
