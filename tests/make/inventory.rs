@@ -155,49 +155,40 @@ fn write_cell(
     text: &str,
 ) -> Result<(), XlsxError> {
     let format = cell_format(column, layout);
-    if text.is_empty() {
-        sheet.write_blank(row, place, &format)?;
-        return Ok(());
-    }
-    let number = text.parse::<f64>();
-    let text = text.trim_start_matches('\'');
     match column.holds {
+        _ if text.is_empty() => sheet.write_blank(row, place, &format)?,
         // A look-up that found nothing; what it looked for is of no account.
         Holds::Numbers(_) if text == "#N/A" => {
             let formula = Formula::new("VLOOKUP(\"none\",A4:B9,2,FALSE)").set_result(text);
             sheet.write_formula_with_format(row, place, formula, &format)?
         }
-        Holds::Numbers(_) => match number {
-            Ok(number) => sheet.write_with_format(row, place, number, &format)?,
-            Err(_) => sheet.write_with_format(row, place, text, &format)?,
-        },
-        Holds::Kilograms(_) => match number {
+        Holds::Kilograms(_) => match text.parse() {
             Ok(tonnes) => sheet.write_with_format(row, place, kilograms(tonnes), &format)?,
             Err(_) => sheet.write_blank(row, place, &format)?,
         },
-        Holds::TonnesOfKilograms(_) => match number {
-            Ok(_) => {
-                let left = row_col_to_cell(row, place.saturating_sub(1));
-                let formula = Formula::new(format!("{left}/1000")).set_result(text);
-                sheet.write_formula_with_format(row, place, formula, &format)?
-            }
-            Err(_) => sheet.write_with_format(row, place, text, &format)?,
-        },
+        Holds::TonnesOfKilograms(_) if text.parse::<f64>().is_ok() => {
+            let left = row_col_to_cell(row, place.saturating_sub(1));
+            let formula = Formula::new(format!("{left}/1000")).set_result(text);
+            sheet.write_formula_with_format(row, place, formula, &format)?
+        }
         Holds::Dates => write_date(sheet, (row, place), text, &format)?,
-        // The spreadsheet took one of the numbers for a day: `1983-10-04` is no CAS number, its last group has two digits.
-        Holds::RegistryNumbers
-            if text.len() == 10 && text.split('-').nth(2).is_some_and(|last| last.len() == 2) =>
-        {
+        Holds::RegistryNumbers if is_day(text) => {
             write_date(sheet, (row, place), text, &format.set_num_format(layout.date_format))?
         }
-        // Hyphens that were lost on the way leave a plain number.
-        Holds::RegistryNumbers => match number {
-            Ok(number) => sheet.write_with_format(row, place, number, &format)?,
-            Err(_) => sheet.write_with_format(row, place, text, &format)?,
-        },
         Holds::Words => sheet.write_with_format(row, place, text.replace("\\n", "\n"), &format)?,
+        // Registry numbers that lost their hyphens on the way are plain numbers, too.
+        Holds::Numbers(_) | Holds::RegistryNumbers | Holds::TonnesOfKilograms(_) => match text.parse::<f64>()
+        {
+            Ok(number) => sheet.write_with_format(row, place, number, &format)?,
+            Err(_) => sheet.write_with_format(row, place, text.trim_start_matches('\''), &format)?,
+        },
     };
     Ok(())
+}
+
+/// Whether the spreadsheet took a registry number for a day: `1983-10-04` is no CAS number, its last group has two digits.
+fn is_day(text: &str) -> bool {
+    text.len() == 10 && text.split('-').nth(2).is_some_and(|last| last.len() == 2)
 }
 
 /// Whole grams are as exact as the table's tonnes.
