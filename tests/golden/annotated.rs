@@ -11,15 +11,20 @@ use kowledger::run::{ReasoningChoice, ScreenSettings, Summary, screen};
 use kowledger::substance::UnstatedBasis;
 use kowledger::workbook::Overwrite;
 
-/// The example inventory.
-pub fn inventory() -> PathBuf {
-    Path::new(env!("CARGO_MANIFEST_DIR")).join("inputs-example/inventory.xlsx")
+/// One of the example files.
+pub fn example(file: &str) -> PathBuf {
+    Path::new(env!("CARGO_MANIFEST_DIR")).join("inputs-example").join(file)
 }
 
 /// Settings of a run as the README shows it, on a fixed day.
 pub fn settings(output: &Path) -> ScreenSettings {
+    settings_of("inventory.xlsx", output)
+}
+
+/// The same for any of the example files.
+pub fn settings_of(file: &str, output: &Path) -> ScreenSettings {
     ScreenSettings {
-        inventory: inventory(),
+        inventory: example(file),
         output: output.to_owned(),
         overwrite: Overwrite::Replace,
         rulebooks: Vec::new(),
@@ -40,23 +45,8 @@ pub struct Annotated {
     pub summary: Summary,
 }
 
-/// The example, screened once.
-pub static EXAMPLE: LazyLock<Annotated> = LazyLock::new(|| {
-    let folder = tempfile::tempdir().expect("a folder");
-    let output = folder.path().join("screened.xlsx");
-    let summary = screen(&settings(&output)).expect("the example is screened");
-    let mut book: Xlsx<_> = open_workbook(&output).expect("the output opens");
-    let sheets = book
-        .worksheets()
-        .into_iter()
-        .map(|(name, range)| {
-            // Ranges count from the first used cell; every sheet of the example uses its first column and row.
-            let rows = range.rows().map(|row| row.iter().map(text).collect()).collect();
-            (name, rows)
-        })
-        .collect();
-    Annotated { sheets, summary }
-});
+/// The example inventory, screened once.
+pub static EXAMPLE: LazyLock<Annotated> = LazyLock::new(|| Annotated::of("inventory.xlsx"));
 
 fn text(cell: &Data) -> String {
     match cell {
@@ -66,6 +56,36 @@ fn text(cell: &Data) -> String {
 }
 
 impl Annotated {
+    /// One of the example files, screened.
+    pub fn of(file: &str) -> Self {
+        let folder = tempfile::tempdir().expect("a folder");
+        let output = folder.path().join("screened.xlsx");
+        let summary = screen(&settings_of(file, &output)).expect("the example is screened");
+        let mut book: Xlsx<_> = open_workbook(&output).expect("the output opens");
+        let sheets = book
+            .worksheets()
+            .into_iter()
+            .map(|(name, range)| {
+                // Ranges count from the first used cell; every sheet of the examples uses its first column and row.
+                let rows = range.rows().map(|row| row.iter().map(text).collect()).collect();
+                (name, rows)
+            })
+            .collect();
+        Self { sheets, summary }
+    }
+
+    /// The cells of a row, counted from 1, under those of our headers that hold verdicts, each with its header.
+    pub fn verdicts(&self, sheet: &str, row: usize) -> Vec<(&str, &str)> {
+        let header = self.header(sheet).1;
+        let first = header.iter().position(|cell| cell == "log Kow basis").expect("our columns") + 1;
+        let last = header.iter().position(|cell| cell == "Cautions").expect("our columns");
+        let row = &self.sheets[sheet][row - 1];
+        (first..last)
+            .filter(|column| !header[*column].ends_with(" why"))
+            .map(|column| (header[column].as_str(), row[column].as_str()))
+            .collect()
+    }
+
     /// The row of the sheet's header: the one that holds our first column.
     pub fn header(&self, sheet: &str) -> (usize, &[String]) {
         let rows = &self.sheets[sheet];

@@ -6,7 +6,10 @@
     reason = "an example that cannot be read has to stop the test"
 )]
 
+mod added;
 mod annotated;
+mod beside;
 mod certain;
 mod planted;
+mod sources;
 mod threads;

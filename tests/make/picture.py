@@ -16,8 +16,8 @@ import openpyxl
 from openpyxl.utils import get_column_letter
 from openpyxl.worksheet.properties import PageSetupProperties
 
-SHOWN = {"CAS no.", "Substance name", "log Kow used", "log Kow basis", "REACH", "REACH why", "CLP", "STOCKHOLM", "CANADA"}
-ROWS = {4, 15, 29, 56, 65, 83, 90, 97, 106}
+SHOWN = {"CAS No.", "Substance name", "log Kow used", "log Kow basis", "REACH", "REACH why", "CLP", "STOCKHOLM", "CANADA"}
+ROWS = {4, 15, 29, 56, 66, 84, 91, 98, 107}
 
 
 def main(screened: str, picture: str) -> None:
@@ -42,7 +42,7 @@ def main(screened: str, picture: str) -> None:
         book.save(copy)
         subprocess.run(["soffice", "--headless", "--convert-to", "pdf", "--outdir", folder, str(copy)], check=True, capture_output=True)
         stem = picture.removesuffix(".png")
-        crop = ["-x", "85", "-y", "95", "-W", "1265", "-H", "530"]
+        crop = ["-x", "85", "-y", "95", "-W", "1265", "-H", "495"]
         command = ["pdftoppm", "-png", "-r", "130", *crop, "-singlefile", str(pathlib.Path(folder, "copy.pdf")), stem]
         subprocess.run(command, check=True)
 
