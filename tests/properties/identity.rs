@@ -54,8 +54,8 @@ fn a_wrong_check_digit_is_a_fault_that_names_the_right_one() {
     assert_eq!(
         faults(&substance),
         [
-            "Sheet!B2: `50-29-4` is no CAS number: its check digit should be 3; write `50-29-3` if the other digits are \
-          right, or correct them"
+            "Sheet!B2: `50-29-4` is no CAS number: its check digit should be 3; look the number up, and write `50-29-3` \
+          if the other digits are right, or correct them"
         ]
     );
     assert_eq!((substance.cas, substance.identity), (None, Identity::NameAlone));
