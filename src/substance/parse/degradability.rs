@@ -89,8 +89,8 @@ fn result_of_text(
     match other_test(text) {
         // What fails a test of inherent biodegradability fails the one of ready biodegradability as well.
         Some(OtherTest::Inherent(_)) if numbers == Some(DegradationTest::NotReady) => {}
-        Some(OtherTest::Inherent(test) | OtherTest::Further(test)) if words != Words::No => {
-            return Err(CellFaultKind::OtherDegradationTest { test });
+        Some(OtherTest::Inherent(named) | OtherTest::Further(named)) if words != Words::No => {
+            return Err(CellFaultKind::OtherDegradationTest { test: named });
         }
         Some(_) | None => {}
     }

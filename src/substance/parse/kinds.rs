@@ -191,6 +191,6 @@ pub(super) fn read_row_type(content: &CellContent) -> Result<Option<RowType>, Ce
     match (found.next(), found.next()) {
         (Some(_), Some(_)) if EITHER.is_match(&plain) => Err(unknown),
         (Some(row_type), _) if !DENIED.is_match(&plain) => Ok(Some(row_type)),
-        (Some(_), _) | (None, _) => Err(unknown),
+        (Some(_) | None, _) => Err(unknown),
     }
 }

@@ -61,7 +61,7 @@ impl Numbers {
             return;
         }
         let has_digit = |group: &&str| group.contains(|character: char| character.is_ascii_digit());
-        for run in groups.split(|group| !has_digit(&group)) {
+        for run in groups.split(|group| !has_digit(group)) {
             let mut run = run.to_vec();
             if let Some(first) = run.first_mut() {
                 *first = without_label(first);
