@@ -104,19 +104,23 @@ pub(super) fn encoding_of(mut source: impl Read) -> std::io::Result<TextEncoding
         (_, 0) => (UTF_8, KnownBy::Soundness),
         (sound, broken) if broken.saturating_mul(SOUND_A_BROKEN) <= sound => (UTF_8, KnownBy::NearSoundness),
         _ if only_signs => (WINDOWS_1252, KnownBy::Guess),
-        _ => {
-            let guess = of_those_lists_come_in(detector.guess(None, Utf8Detection::Deny));
-            // The two share their bytes; Japanese without its own syllables is Chinese.
-            let chinese = guess == EUC_JP && runs.kana * KANA_IN_JAPANESE < runs.all;
-            let guess = if chinese { GB18030 } else { guess };
-            // Single letters among ASCII are no words of characters of two bytes each, and a few letters say nothing of
-            // where in Europe a text was written.
-            let doubtful =
-                if guess.is_single_byte() { runs.all < FEWEST_LETTERS } else { runs.longest < SHORTEST_RUN };
-            (if doubtful { WINDOWS_1252 } else { guess }, KnownBy::Guess)
-        }
+        _ => (checked_guess(detector.guess(None, Utf8Detection::Deny), &runs), KnownBy::Guess),
     };
     Ok(TextEncoding { encoding, known_by })
+}
+
+/// A guess that the text bears out, else the encoding of Western Europe.
+fn checked_guess(guess: &'static Encoding, runs: &Runs) -> &'static Encoding {
+    let guess = of_those_lists_come_in(guess);
+    // The two share their bytes; Japanese without its own syllables is Chinese.
+    if guess == EUC_JP && runs.kana * KANA_IN_JAPANESE < runs.all {
+        return GB18030;
+    }
+    // Single letters among ASCII are no words of characters of two bytes each, and a few letters say nothing of where in
+    // Europe a text was written.
+    let doubtful =
+        if guess.is_single_byte() { runs.all < FEWEST_LETTERS } else { runs.longest < SHORTEST_RUN };
+    if doubtful { WINDOWS_1252 } else { guess }
 }
 
 /// Rare encodings are guessed for texts that are too short to tell.

@@ -178,3 +178,19 @@ fn a_text_that_is_no_list_is_refused() {
          letter: no header recognised; the sheet would be copied.\n"
     );
 }
+
+#[test]
+fn control_characters_of_an_export_do_not_break_the_output() {
+    let place = Place::new();
+    let mut list = "CAS No.,log Kow,Name\n108-95-2,1.46,Phe\u{1}nol\u{b}\u{1b}\u{fffe}\n".to_owned();
+    list.push_str(&"67-56-1,-0.77,Methanol\n".repeat(20));
+    std::fs::write(place.path("list.csv"), list).unwrap();
+    let run = place.run(&["screen", "list.csv", "--date", "2026-12-01"]);
+    assert_eq!(run.status, 0, "{}", run.complained);
+    let told = "3 characters are no text, the first in list!C2";
+    assert!(run.said.contains(told), "{}", run.said);
+    // The output can be read, by another reader and by the program itself.
+    let Rows(rows) = place.rows_of("list-screened.xlsx", "list");
+    assert_eq!(rows[20][0], Data::String("67-56-1".to_owned()));
+    assert_eq!(place.run(&["columns", "list-screened.xlsx"]).status, 0);
+}

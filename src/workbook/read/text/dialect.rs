@@ -81,8 +81,10 @@ pub(super) fn decide(beginning: &[u8]) -> Dialect {
         return Dialect { separator: Some(separator), why: Why::Told, usual_fields };
     }
     let cuts = CANDIDATES.map(|(separator, _)| cut(beginning, separator));
-    // Title lines and stray rows are allowed for: every second row has to be alike.
-    let fitting = cuts.iter().filter(|cut| cut.fields > 1 && cut.alike * 2 >= cut.rows);
+    // Title lines and stray rows are allowed for: every second row has to be alike, and two at least.
+    let fitting = cuts
+        .iter()
+        .filter(|cut| cut.alike * 2 >= cut.rows && (cut.alike > 1 || cut.rows == 1) && cut.fields > 1);
     // The first of equals, hence from behind.
     if let Some(best) = fitting.clone().rev().max_by_key(|cut| (cut.alike, cut.fields)) {
         let like = fitting.clone().find(|cut| cut.separator != best.separator && cut.alike == best.alike);
@@ -171,6 +173,8 @@ mod tests {
             ("a;b;c;d\n1;2;3\n1;2\n1;2;3;4;5\n1;2;3;4;5;6\n", Some(b';'), Why::Stands),
             ("CAS\n50-29-3\n67-56-1\n", None, Why::None),
             ("Dear colleague,\nplease find the list attached.\nKind regards\n", None, Why::None),
+            ("Dear colleague,\n\nplease find the list attached.\n", None, Why::None),
+            ("CAS;Name\n", Some(b';'), Why::Fits),
             ("", None, Why::None),
             ("sep=|\na;b|c\n", Some(b'|'), Why::Told),
             ("SEP=;\r\na;b\r\n", Some(b';'), Why::Told),

@@ -73,12 +73,7 @@ impl Cutter {
             return Ok(Step::Within);
         }
         match self.state {
-            State::Quoted(_) if line_end => self.keep_quoted(b'\n', record),
-            State::Quoted(opened) if byte == b'"' => {
-                self.written.push(byte);
-                self.state = State::Closing(opened);
-            }
-            State::Quoted(_) => self.keep_quoted(byte, record),
+            State::Quoted(opened) => self.step_quoted(byte, opened, record),
             State::Begin | State::Plain | State::Closing(_) | State::Closed(_) if line_end => {
                 self.end_field(record)?;
                 return Ok(Step::EndOfRecord);
@@ -89,16 +84,9 @@ impl Cutter {
                 self.end_field(record)?;
             }
             State::Begin if byte == b'"' => self.open_quotes(line, record),
-            State::Closing(opened) if byte == b'"' => {
-                // Written twice, it is a character.
-                self.keep_quoted(byte, record);
-                self.state = State::Quoted(opened);
+            State::Closing(opened) | State::Closed(opened) => {
+                self.step_behind_quotes(byte, opened, record)?;
             }
-            State::Closing(opened) | State::Closed(opened) if byte == b' ' => {
-                self.written.push(byte);
-                self.state = State::Closed(opened);
-            }
-            State::Closing(opened) | State::Closed(opened) => self.take_as_written(opened, byte, record)?,
             State::Begin | State::Plain => {
                 record.text.push(byte);
                 if byte != b' ' {
@@ -108,6 +96,33 @@ impl Cutter {
         }
         self.refuse_overlong(record)?;
         Ok(Step::Within)
+    }
+
+    fn step_quoted(&mut self, byte: u8, opened: u64, record: &mut Record) {
+        match byte {
+            b'"' => {
+                self.written.push(byte);
+                self.state = State::Closing(opened);
+            }
+            b'\r' => self.keep_quoted(b'\n', record),
+            _ => self.keep_quoted(byte, record),
+        }
+    }
+
+    fn step_behind_quotes(&mut self, byte: u8, opened: u64, record: &mut Record) -> Result<(), LinesFault> {
+        match byte {
+            // Written twice, it is a character.
+            b'"' if self.state == State::Closing(opened) => {
+                self.keep_quoted(byte, record);
+                self.state = State::Quoted(opened);
+            }
+            b' ' => {
+                self.written.push(byte);
+                self.state = State::Closed(opened);
+            }
+            _ => self.take_as_written(opened, byte, record)?,
+        }
+        Ok(())
     }
 
     /// The text is at its end; whether that ended a field.
