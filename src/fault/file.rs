@@ -73,11 +73,13 @@ pub enum FileFault {
     },
     /// No sheet has a header that is known.
     #[error(
-        "{path}: no sheet has a header that is recognised ({}); a header stands within the first 30 rows that hold anything and needs a column for a CAS number, an EC number or a structure, or a name beside another known column. `kowledger columns` shows what was found, and `--column 'Header=field'` names a column", .sheets.join(", ")
+        "{path}: no sheet has a header that is recognised ({}); a header stands within the first 30 rows that hold anything and needs a column for a CAS number, an EC number or a structure, or a name beside another known column. `kowledger columns` shows what was found, and `--column 'Header=field'` names a column{}", .sheets.join(", "), sentences_behind(.how_read)
     )]
     NoHeader {
         /// The path as given.
         path: String,
+        /// How the file was read where it does not say so itself, in sentences.
+        how_read: Vec<String>,
         /// The sheets that were looked at.
         sheets: Vec<String>,
     },
@@ -146,6 +148,13 @@ pub enum FileFault {
         /// What the system or the writer said.
         reason: String,
     },
+}
+
+/// Sentences behind one that has no full stop.
+fn sentences_behind(sentences: &[String]) -> String {
+    let text = sentences.join(" ");
+    let text = text.trim_end_matches('.');
+    if text.is_empty() { String::new() } else { format!(". {text}") }
 }
 
 /// What a file is, by its content, when it is not an xlsx workbook.

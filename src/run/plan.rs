@@ -62,6 +62,8 @@ pub struct RecognisedSheet {
     pub name: String,
     /// Its header and columns, if it has any that are known.
     pub recognised: Option<Recognised>,
+    /// How the file was read where it does not say so itself, in sentences.
+    pub how_read: Vec<String>,
 }
 
 /// What the columns of an inventory hold, and why.
@@ -79,7 +81,11 @@ pub fn recognise_columns(
         if let Some(recognised) = &mut recognised {
             recognised.remark_on_second_header(name, &first_rows, &words);
         }
-        sheets.push(RecognisedSheet { name: name.to_string(), recognised });
+        sheets.push(RecognisedSheet {
+            name: name.to_string(),
+            recognised,
+            how_read: inventory.how_read().to_vec(),
+        });
     }
     let recognised: Vec<&Recognised> =
         sheets.iter().filter_map(|sheet: &RecognisedSheet| sheet.recognised.as_ref()).collect();
@@ -137,6 +143,7 @@ impl Plan {
         if sheets.iter().all(|sheet| sheet.screened.is_none()) {
             return Err(FileFault::NoHeader {
                 path: settings.inventory.display().to_string(),
+                how_read: inventory.how_read().to_vec(),
                 sheets: sheets.iter().map(|sheet| sheet.name.to_string()).collect(),
             }
             .into());

@@ -1,12 +1,17 @@
 //! In which encoding a text file is written. What its bytes leave open is said, so that a wrong guess is seen.
 
+mod decoded;
+
 use std::io::Read;
 
 use chardetng::{EncodingDetector, Iso2022JpDetection, Utf8Detection};
 use encoding_rs::{
-    BIG5, Decoder, EUC_JP, EUC_KR, Encoding, GB18030, GBK, ISO_8859_2, SHIFT_JIS, UTF_8, UTF_16BE, UTF_16LE,
+    BIG5, EUC_JP, EUC_KR, Encoding, GB18030, GBK, ISO_8859_2, SHIFT_JIS, UTF_8, UTF_16BE, UTF_16LE,
     WINDOWS_1250, WINDOWS_1251, WINDOWS_1252, WINDOWS_1253, WINDOWS_1254, WINDOWS_1257,
 };
+
+pub(super) use decoded::Decoded;
+use decoded::fill;
 
 /// Bytes that are read at a time.
 const PORTION: usize = 1 << 16;
@@ -56,14 +61,17 @@ pub(super) fn wide_encoding(beginning: &[u8]) -> Option<(&'static Encoding, Know
     }
     let zeros = |first: usize| beginning.iter().skip(first).step_by(2).filter(|byte| **byte == 0).count();
     let (even, odd) = (zeros(0), zeros(1));
+    let (encoding, zeros) = match (even, odd) {
+        (0, odd) => (UTF_16LE, odd),
+        (even, 0) => (UTF_16BE, even),
+        (_, _) => return None,
+    };
+    // Separators, digits and line ends have a zero in every script. A zero that an export left in a text of one byte a
+    // character stands anywhere, and not beside its line ends.
     let pairs = beginning.len() / 2;
-    // Separators and line ends have a zero in every script.
-    match () {
-        () if pairs < 2 => None,
-        () if even == 0 && odd * 20 >= pairs.max(20) => Some((UTF_16LE, KnownBy::Zeros)),
-        () if odd == 0 && even * 20 >= pairs.max(20) => Some((UTF_16BE, KnownBy::Zeros)),
-        () => None,
-    }
+    let line_ends = || encoding.decode_without_bom_handling(beginning).0.contains(['\n', '\r']);
+    let enough = zeros >= 2 && (zeros * 3 >= pairs || (zeros * 20 >= pairs && line_ends()));
+    enough.then_some((encoding, KnownBy::Zeros))
 }
 
 /// Finds out the encoding; reads the text to its end unless its beginning tells.
@@ -80,10 +88,12 @@ pub(super) fn encoding_of(mut source: impl Read) -> std::io::Result<TextEncoding
     let mut detector = EncodingDetector::new(Iso2022JpDetection::Deny);
     let mut soundness = Soundness::default();
     let mut only_signs = true;
+    let mut runs = Runs::default();
     while count > 0 {
         let bytes = portion.get(..count).unwrap_or_default();
         soundness.feed(bytes);
         detector.feed(bytes, false);
+        runs.feed(bytes);
         only_signs = only_signs && bytes.iter().all(|byte| byte.is_ascii() || SIGNS.contains(byte));
         count = fill(&mut source, &mut portion)?;
     }
@@ -94,7 +104,17 @@ pub(super) fn encoding_of(mut source: impl Read) -> std::io::Result<TextEncoding
         (_, 0) => (UTF_8, KnownBy::Soundness),
         (sound, broken) if broken.saturating_mul(SOUND_A_BROKEN) <= sound => (UTF_8, KnownBy::NearSoundness),
         _ if only_signs => (WINDOWS_1252, KnownBy::Guess),
-        _ => (of_those_lists_come_in(detector.guess(None, Utf8Detection::Deny)), KnownBy::Guess),
+        _ => {
+            let guess = of_those_lists_come_in(detector.guess(None, Utf8Detection::Deny));
+            // The two share their bytes; Japanese without its own syllables is Chinese.
+            let chinese = guess == EUC_JP && runs.kana * KANA_IN_JAPANESE < runs.all;
+            let guess = if chinese { GB18030 } else { guess };
+            // Single letters among ASCII are no words of characters of two bytes each, and a few letters say nothing of
+            // where in Europe a text was written.
+            let doubtful =
+                if guess.is_single_byte() { runs.all < FEWEST_LETTERS } else { runs.longest < SHORTEST_RUN };
+            (if doubtful { WINDOWS_1252 } else { guess }, KnownBy::Guess)
+        }
     };
     Ok(TextEncoding { encoding, known_by })
 }
@@ -118,6 +138,37 @@ fn of_those_lists_come_in(guess: &'static Encoding) -> &'static Encoding {
         WINDOWS_1257,
     ];
     if usual.contains(&guess) { guess } else { WINDOWS_1252 }
+}
+
+/// The fewest bytes beyond ASCII that stand in a row where a text has words in Japanese, Chinese or Korean: the second
+/// byte of a character may be ASCII.
+const SHORTEST_RUN: usize = 3;
+
+/// The fewest letters beyond ASCII that a guess at a rarer encoding takes.
+const FEWEST_LETTERS: usize = 12;
+
+/// One in so many bytes beyond ASCII begins a Japanese syllable sign in a Japanese text, at least.
+const KANA_IN_JAPANESE: usize = 40;
+
+/// Bytes beyond ASCII, and how many stand in a row.
+#[derive(Debug, Default)]
+struct Runs {
+    all: usize,
+    /// Those that begin a Japanese syllable sign in EUC-JP.
+    kana: usize,
+    longest: usize,
+    present: usize,
+}
+
+impl Runs {
+    fn feed(&mut self, bytes: &[u8]) {
+        for byte in bytes {
+            self.all += usize::from(!byte.is_ascii());
+            self.present = if byte.is_ascii() { 0 } else { self.present + 1 };
+            self.kana += usize::from(matches!(byte, 0xA4 | 0xA5) && self.present % 2 == 1);
+            self.longest = self.longest.max(self.present);
+        }
+    }
 }
 
 /// Counts what is sound and what is broken as UTF-8.
@@ -168,70 +219,53 @@ impl Soundness {
     }
 }
 
-/// Reads until the buffer is full or the source at its end.
-fn fill(source: &mut impl Read, buffer: &mut [u8]) -> std::io::Result<usize> {
-    let mut filled = 0;
-    while let Some(room) = buffer.get_mut(filled..).filter(|room| !room.is_empty()) {
-        match source.read(room) {
-            Ok(0) => break,
-            Ok(count) => filled += count,
-            Err(error) if error.kind() == std::io::ErrorKind::Interrupted => {}
-            Err(error) => return Err(error),
-        }
-    }
-    Ok(filled)
-}
+#[cfg(test)]
+mod tests {
+    use std::io::Read;
 
-/// Gives a text in whatever encoding as UTF-8, without its mark; what cannot be decoded becomes `U+FFFD`.
-pub(super) struct Decoded<R> {
-    source: R,
-    decoder: Decoder,
-    bytes: Vec<u8>,
-    bytes_left: std::ops::Range<usize>,
-    text: Vec<u8>,
-    text_left: std::ops::Range<usize>,
-    ended: bool,
-}
+    use encoding_rs::{BIG5, GB18030, SHIFT_JIS, UTF_8, UTF_16BE, UTF_16LE, WINDOWS_1252};
 
-impl<R: Read> Decoded<R> {
-    pub(super) fn new(source: R, encoding: &'static Encoding) -> Self {
-        Self {
-            source,
-            decoder: encoding.new_decoder_with_bom_removal(),
-            bytes: vec![0; PORTION],
-            bytes_left: 0..0,
-            text: vec![0; PORTION],
-            text_left: 0..0,
-            ended: false,
+    use super::{Decoded, KnownBy, encoding_of, wide_encoding};
+
+    #[test]
+    fn an_encoding_is_known_by_its_mark_its_zeros_its_soundness_or_guessed() {
+        let japanese = SHIFT_JIS.encode("CAS番号,メタノール\n").0.into_owned();
+        for (bytes, encoding, known_by) in [
+            (&b"CAS,Name\n"[..], UTF_8, KnownBy::Ascii),
+            ("CAS,Säure\n".as_bytes(), UTF_8, KnownBy::Soundness),
+            (b"\xEF\xBB\xBFCAS", UTF_8, KnownBy::Mark),
+            (b"\xFF\xFEC\0A\0", UTF_16LE, KnownBy::Mark),
+            (b"\xFE\xFF\0C\0A", UTF_16BE, KnownBy::Mark),
+            (b"C\0A\0S\0,\0\n\0", UTF_16LE, KnownBy::Zeros),
+            (b"\0C\0A\0S\0,\0\n", UTF_16BE, KnownBy::Zeros),
+            (b"CAS,20 \xB0C\n", WINDOWS_1252, KnownBy::Guess),
+            // A character cut off at the end.
+            (b"CAS,S\xC3", WINDOWS_1252, KnownBy::Guess),
+            (&japanese, SHIFT_JIS, KnownBy::Guess),
+            // Letters of code page 850, which stand alone as no Japanese does.
+            (b"Pr\x81fung,L\x94sung\n", WINDOWS_1252, KnownBy::Guess),
+        ] {
+            let found = encoding_of(bytes).unwrap();
+            assert_eq!((found.encoding, found.known_by), (encoding, known_by), "{bytes:?}");
         }
     }
 
-    fn decode_more(&mut self) -> std::io::Result<()> {
-        while self.text_left.is_empty() && !self.ended {
-            if self.bytes_left.is_empty() {
-                self.bytes_left = 0..fill(&mut self.source, &mut self.bytes)?;
-            }
-            let at_end = self.bytes_left.is_empty();
-            let bytes = self.bytes.get(self.bytes_left.clone()).unwrap_or_default();
-            let (result, read, written, _replaced) =
-                self.decoder.decode_to_utf8(bytes, &mut self.text, at_end);
-            self.bytes_left.start += read;
-            self.text_left = 0..written;
-            self.ended = at_end && result == encoding_rs::CoderResult::InputEmpty;
-        }
-        Ok(())
+    #[test]
+    fn four_bytes_a_character_are_no_text_of_two() {
+        assert!(wide_encoding(b"\xFF\xFE\0\0C\0\0\0").is_none());
+        assert!(wide_encoding(b"CAS,Name\0").is_none());
+        assert!(wide_encoding(b"CAS,Na\0me\0x,50-29-3\n").is_none());
     }
-}
 
-impl<R: Read> Read for Decoded<R> {
-    fn read(&mut self, buffer: &mut [u8]) -> std::io::Result<usize> {
-        self.decode_more()?;
-        let text = self.text.get(self.text_left.clone()).unwrap_or_default();
-        let count = text.len().min(buffer.len());
-        if let (Some(to), Some(from)) = (buffer.get_mut(..count), text.get(..count)) {
-            to.copy_from_slice(from);
+    #[test]
+    fn a_text_is_decoded_across_the_ends_of_its_portions() {
+        for encoding in [SHIFT_JIS, GB18030, BIG5, UTF_8] {
+            let text = format!("a{}", "水溶解度".repeat(20_000));
+            let bytes = encoding.encode(&text).0.into_owned();
+            assert_eq!(encoding_of(bytes.as_slice()).unwrap().encoding, encoding, "{}", encoding.name());
+            let mut decoded = String::new();
+            Decoded::new(bytes.as_slice(), encoding).read_to_string(&mut decoded).unwrap();
+            assert!(decoded == text, "{}", encoding.name());
         }
-        self.text_left.start += count;
-        Ok(count)
     }
 }

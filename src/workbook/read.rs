@@ -49,7 +49,7 @@ struct Opened {
 
 /// The opened file.
 enum Source {
-    Xlsx(xlsx::Book),
+    Xlsx(Box<xlsx::Book>),
     Xlsb(xlsb::Book),
     Xls(xls::Book),
     Ods(ods::Book),
@@ -79,7 +79,7 @@ fn open_within(path: &Path, limits: Limits) -> Result<Inventory, FileFault> {
             }
         }
         Container::Compound(file) => xls::open(path, file, limits)?,
-        Container::Text(file) => text::open(path, file)?,
+        Container::Text(file) => text::open(path, &file)?,
         Container::FlatOds(file) => ods::open_flat(path, file, limits)?,
     };
     let Opened { source, sheets, appearances, not_carried } = opened;

@@ -59,6 +59,8 @@ fn each_outside_crate_is_named_in_its_own_rooms() {
         ("rust_xlsxwriter", &["workbook"]),
         ("zip", &["workbook"]),
         ("quick_xml", &["workbook"]),
+        ("encoding_rs", &["workbook"]),
+        ("chardetng", &["workbook"]),
         ("tempfile", &["workbook"]),
         ("sha2", &["workbook"]),
         ("rayon", &["run"]),

@@ -18,10 +18,7 @@ fn a_file_of_another_kind_is_named_as_what_it_is_and_what_to_do() {
     let other = "name an xlsx workbook with one substance a row";
     let written: [(&[u8], String); 4] = [
         (b"", "the file is empty; check that the export or the download was finished".to_owned()),
-        (
-            b"CAS;log Kow\n50-29-3;6,91\n",
-            format!("this is plain text (such as csv), which is not read yet; {save}"),
-        ),
+        (b"{\"cas\": \"50-29-3\"}\n", format!("this is a JSON file, not a table; {other}")),
         (
             b"<html><body><table></table></body></html>",
             format!("this is a web page (HTML), whatever its name says; {save}"),

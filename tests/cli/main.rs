@@ -18,6 +18,7 @@ mod binary;
 mod cells;
 mod commands;
 mod inputs;
+mod kinds;
 mod layouts;
 mod outputs;
 mod place;

@@ -97,6 +97,7 @@ pub(crate) fn refuse(refusal: &Refusal) {
 /// What was recognised on each sheet, and why.
 pub(crate) fn columns(sheets: &[RecognisedSheet]) {
     let mut lines = Vec::new();
+    lines.extend(sheets.iter().flat_map(|sheet| sheet.how_read.iter().cloned()));
     for sheet in sheets {
         let Some(recognised) = &sheet.recognised else {
             lines.push(format!("{}: no header recognised; the sheet would be copied.", sheet.name));

@@ -7,6 +7,8 @@ mod looks;
 mod not_carried;
 mod styles;
 mod survey;
+#[cfg(test)]
+mod tests;
 mod text;
 mod value;
 mod walk;
@@ -63,9 +65,8 @@ fn survey_book(path: &Path, mut xml: Xml, parts: Vec<String>) -> Result<Opened, 
         Ok(ControlFlow::Continue(()))
     })?;
     let damaged = |what: &str| FileFault::Damaged { path: shown.clone(), what: what.to_owned() };
-    let (sheets, book) = match surveyor.into_sheets() {
-        Some(surveyed) => surveyed,
-        None => return Err(FileFault::AnotherKind { path: shown, found: FileKind::Document }),
+    let Some((sheets, book)) = surveyor.into_sheets() else {
+        return Err(FileFault::AnotherKind { path: shown, found: FileKind::Document });
     };
     if sheets.is_empty() {
         return Err(damaged("it has no sheet"));
@@ -155,7 +156,8 @@ impl Xml {
 /// A workbook protected by a password lists its parts as encrypted.
 fn refuse_encrypted(package: &mut Package) -> Result<(), FileFault> {
     let mut encrypted = package.has("encrypted-package");
-    let listed = package.read_xml("META-INF/manifest.xml", |event| {
+    // Old programs declare a document type in this list, which is then not read; the content will show what it is.
+    let _unreadable = package.read_xml("META-INF/manifest.xml", |event| {
         if let Event::Start(element) = event {
             encrypted |= element.local_name().as_ref() == "encryption-data";
         }
@@ -164,7 +166,5 @@ fn refuse_encrypted(package: &mut Package) -> Result<(), FileFault> {
     if encrypted {
         return Err(FileFault::AnotherKind { path: package.path.clone(), found: FileKind::Encrypted });
     }
-    // Old programs declare a document type in this list, which is not needed any further.
-    let _unneeded = listed;
     Ok(())
 }

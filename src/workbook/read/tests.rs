@@ -76,8 +76,12 @@ fn a_file_of_another_kind_is_named_as_what_it_is() {
             format!("this is a workbook written as XML text, which is not read; {save_as}"),
         ),
         (
-            refusal("a.csv", text(b"CAS;Name\n50-00-0;Formaldehyde\n")),
-            format!("this is plain text (such as csv), which is not read yet; {save_as}"),
+            refusal("a.csv", text(b"[{\"cas\": \"50-00-0\"}]")),
+            "this is a JSON file, not a table; name an xlsx workbook with one substance a row".to_owned(),
+        ),
+        (
+            refusal("a.csv", text(b"\x00\x01\x02\x03binary\xFF\xFE\x10\x11")),
+            "this is not a workbook; name an xlsx workbook with one substance a row".to_owned(),
         ),
         (
             refusal("a.xlsx", |path| hostile::write_compound_file(path, "EncryptedPackage")),
@@ -99,7 +103,8 @@ fn a_file_of_another_kind_is_named_as_what_it_is() {
         ),
         (
             refusal("a.ods", hostile::write_open_document),
-            format!("this is an OpenDocument workbook (ods), which is not read yet; {save_as}"),
+            "this is a text document or a presentation, not a workbook; name an xlsx workbook with one substance a row"
+                .to_owned(),
         ),
         (
             refusal("a.xlsb", hostile::write_xlsb),

@@ -7,6 +7,8 @@ mod dialect;
 mod records;
 mod remarks;
 mod survey;
+#[cfg(test)]
+mod tests;
 
 use std::collections::BTreeMap;
 use std::fs::File;
@@ -44,16 +46,16 @@ struct Written {
 }
 
 /// Opens and surveys the file.
-pub(super) fn open(path: &Path, file: File) -> Result<Opened, FileFault> {
+pub(super) fn open(path: &Path, file: &File) -> Result<Opened, FileFault> {
     let unreadable = |error: std::io::Error| FileFault::Unreadable {
         path: path.display().to_string(),
         reason: error.to_string(),
     };
-    let encoding = encoding_of(&file).map_err(unreadable)?;
-    let dialect = decide(&beginning(&file, encoding).map_err(unreadable)?);
+    let encoding = encoding_of(file).map_err(unreadable)?;
+    let dialect = decide(&beginning(file, encoding).map_err(unreadable)?);
     let written = Written { encoding, dialect };
     let of_lines = |fault| FileFault::Lines { path: path.display().to_string(), fault };
-    let mut records = written.records(&file).map_err(of_lines)?;
+    let mut records = written.records(file).map_err(of_lines)?;
     let mut surveyor = Surveyor::new(path, dialect);
     let mut record = Record::default();
     while records.next(&mut record).map_err(of_lines)? {
@@ -133,7 +135,7 @@ fn row_of(record: &Record) -> Option<Row> {
     let cells: Vec<Cell> = filled
         .map(|(column, field)| Cell {
             column,
-            content: CellContent::Text(text_meant(field).map_or_else(|| field.to_owned(), |text| text)),
+            content: CellContent::Text(text_meant(field).unwrap_or_else(|| field.to_owned())),
             style: field.contains('\n').then_some(SEVERAL_LINES),
             formula: false,
         })

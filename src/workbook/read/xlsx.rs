@@ -36,7 +36,7 @@ pub(super) fn open(path: &Path, mut package: Package) -> Result<Opened, FileFaul
     let appearances = read_appearances(&mut book, &package, &sheets)?;
     let mut not_carried = parts_not_carried(package.part_names(), &contents);
     not_carried.extend(sheets.iter().flat_map(SheetSurvey::not_carried));
-    Ok(Opened { source: Source::Xlsx(Book { book }), sheets, appearances, not_carried })
+    Ok(Opened { source: Source::Xlsx(Box::new(Book { book })), sheets, appearances, not_carried })
 }
 
 impl Book {

@@ -42,7 +42,7 @@ impl Surveyor {
                 }
             }
             Some(Found::Row(row)) => self.note_row(&row),
-            Some(Found::End(extras)) => self.end_sheet(extras),
+            Some(Found::End(extras)) => self.end_sheet(&extras),
             None => {}
         }
         Ok(())
@@ -103,10 +103,10 @@ impl Surveyor {
         }
     }
 
-    fn end_sheet(&mut self, extras: Extras) {
+    fn end_sheet(&mut self, extras: &Extras) {
         if let Some(survey) = self.sheets.last_mut() {
             let row_heights = survey.extras.row_heights;
-            survey.extras = Extras { row_heights, ..extras };
+            survey.extras = Extras { row_heights, ..extras.clone() };
             clip_widths(survey);
         }
     }

@@ -3,7 +3,8 @@
 /// A cell's text while its paragraphs are read.
 ///
 /// Runs of white space count as one space, and none at the ends of a paragraph (OpenDocument 1.3 part 3, 6.1.2);
-/// spaces, tabs and line breaks that are meant have elements of their own.
+/// spaces, tabs and line breaks that are meant have elements of their own. LibreOffice, though, stores a last single space
+/// as it is, and it is kept.
 #[derive(Debug, Default)]
 pub(super) struct CellText {
     text: String,
@@ -19,13 +20,16 @@ enum Gap {
     Beginning,
     /// Nothing.
     None,
-    /// White space, which is one space if text follows.
+    /// A space.
     Space,
+    /// White space of other kinds or length, which is one space if text follows.
+    Spaces,
 }
 
 impl CellText {
     /// A paragraph begins, on a line of its own.
     pub(super) fn begin_paragraph(&mut self) {
+        self.keep_last_space();
         if self.paragraphs > 0 {
             self.text.push('\n');
         }
@@ -37,9 +41,11 @@ impl CellText {
     pub(super) fn push(&mut self, text: &str) {
         for character in text.chars() {
             if matches!(character, ' ' | '\t' | '\r' | '\n') {
-                if self.gap == Gap::None {
-                    self.gap = Gap::Space;
-                }
+                self.gap = match self.gap {
+                    Gap::Beginning => Gap::Beginning,
+                    Gap::None if character == ' ' => Gap::Space,
+                    Gap::None | Gap::Space | Gap::Spaces => Gap::Spaces,
+                };
             } else {
                 self.push_meant(character);
             }
@@ -48,11 +54,18 @@ impl CellText {
 
     /// A character that is meant, be it a space.
     pub(super) fn push_meant(&mut self, character: char) {
-        if self.gap == Gap::Space {
+        if self.gap == Gap::Spaces || self.gap == Gap::Space {
             self.text.push(' ');
         }
         self.gap = Gap::None;
         self.text.push(character);
+    }
+
+    fn keep_last_space(&mut self) {
+        if self.gap == Gap::Space {
+            self.text.push(' ');
+        }
+        self.gap = Gap::Beginning;
     }
 
     /// How many bytes there are so far.
@@ -61,7 +74,8 @@ impl CellText {
     }
 
     /// The whole text; none if the cell has no paragraph.
-    pub(super) fn into_text(self) -> Option<String> {
+    pub(super) fn into_text(mut self) -> Option<String> {
+        self.keep_last_space();
         (self.paragraphs > 0).then_some(self.text)
     }
 }
@@ -90,8 +104,8 @@ mod tests {
         text.push_meant(' ');
         text.push("b");
         text.push_meant('\n');
-        text.push("c");
-        assert_eq!(text.into_text().as_deref(), Some(" a  b\nc"));
+        text.push("c ");
+        assert_eq!(text.into_text().as_deref(), Some(" a  b\nc "));
     }
 
     #[test]

@@ -19,6 +19,8 @@ pub(super) struct Stored {
     /// The cell is said to hold an error.
     error: bool,
     pub(super) formula: bool,
+    /// What the formula says that only says true or false, which LibreOffice stores for either; its value is a number.
+    truth: Option<bool>,
     /// How many columns in a row hold the same.
     pub(super) repeated: Option<String>,
     pub(super) spans: bool,
@@ -42,7 +44,10 @@ impl Stored {
                 }
                 "office:string-value" => stored.string = Some(value()?),
                 "calcext:value-type" => stored.error = value()? == "error",
-                "table:formula" => stored.formula = true,
+                "table:formula" => {
+                    stored.formula = true;
+                    stored.truth = truth(&value()?);
+                }
                 "table:number-columns-repeated" => stored.repeated = Some(value()?),
                 "table:number-columns-spanned" | "table:number-rows-spanned" => {
                     stored.spans |= value()? != "1";
@@ -62,6 +67,9 @@ impl Stored {
         let number_shown_as_error = self.value.is_some() && shown.as_deref().is_some_and(is_error_name);
         if number_shown_as_error || (self.formula && shown.as_deref().is_some_and(is_error_name)) {
             return Ok((CellContent::Error(shown.unwrap_or_default()), None));
+        }
+        if let Some(truth) = self.truth {
+            return Ok((CellContent::Boolean(truth), None));
         }
         let Some(value) = self.value.filter(|_| self.kind.as_deref() != Some("string")) else {
             return Ok(self::text(self.string.or(shown), self.formula));
@@ -83,6 +91,14 @@ impl Stored {
             },
             other => Err(format!("a value of the unknown type `{other}`")),
         }
+    }
+}
+
+fn truth(formula: &str) -> Option<bool> {
+    match formula {
+        "of:=TRUE()" => Some(true),
+        "of:=FALSE()" => Some(false),
+        _ => None,
     }
 }
 

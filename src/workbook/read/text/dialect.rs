@@ -71,7 +71,7 @@ struct Cut {
     /// That number.
     fields: usize,
     /// Rows it cuts at all.
-    cut: usize,
+    divided: usize,
 }
 
 /// Decides from the beginning of a text, which ends with a line if the text goes on.
@@ -90,8 +90,8 @@ pub(super) fn decide(beginning: &[u8]) -> Dialect {
         return Dialect { separator: Some(best.separator), why, usual_fields: best.fields };
     }
     // Exports that leave blank fields at the end of a row out.
-    let standing = cuts.iter().filter(|cut| cut.cut * 5 >= cut.rows * 4 && cut.cut > 1);
-    if let Some(best) = standing.rev().max_by_key(|cut| cut.cut) {
+    let standing = cuts.iter().filter(|cut| cut.divided * 5 >= cut.rows * 4 && cut.divided > 1);
+    if let Some(best) = standing.rev().max_by_key(|cut| cut.divided) {
         return Dialect { separator: Some(best.separator), why: Why::Stands, usual_fields: best.fields };
     }
     Dialect { separator: None, why: Why::None, usual_fields: 1 }
@@ -129,7 +129,7 @@ fn cut(beginning: &[u8], separator: u8) -> Cut {
         rows,
         alike: most.map_or(0, |(_, alike)| *alike),
         fields: most.map_or(1, |(fields, _)| *fields),
-        cut: several.map(|(_, alike)| *alike).sum(),
+        divided: several.map(|(_, alike)| *alike).sum(),
     }
 }
 
