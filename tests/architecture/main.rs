@@ -72,7 +72,6 @@ fn each_outside_crate_is_named_in_its_own_rooms() {
         ("libm", &["quantity"]),
         ("jiff", &["quantity"]),
         ("clap", &["bin"]),
-        ("encoding_rs", &["workbook"]),
         ("codepage", &["workbook"]),
         ("unicode_normalization", &["columns"]),
         ("unicode_width", &["bin"]),

@@ -118,35 +118,46 @@ impl RawXls {
     }
 }
 
-/// A compound file with one stream at the top: the head, sectors with the list of sectors, one with the list of streams, and
-/// the stream.
+/// How many sectors the head of a compound file can name as its list of sectors.
+const NAMED: usize = 109;
+
+/// A compound file with one stream at the top: the head, sectors with the list of sectors, one with the list of streams, the
+/// stream, and for a large file sectors that name further ones of the list.
 pub fn compound_file(name: &str, stream: &[u8]) -> Vec<u8> {
     let content = stream.len().max(4096).div_ceil(SECTOR);
-    let lists = (content + 1).div_ceil(SECTOR / 4 - 1);
+    let a_sector = SECTOR / 4;
+    let lists = (content + 4).div_ceil(a_sector - 2);
+    let further = lists.saturating_sub(NAMED).div_ceil(a_sector - 1);
+    let long = |number: usize| u32::try_from(number).unwrap_or(0);
+    let (end, none) = (0xFFFF_FFFE, u32::MAX);
     let mut next: Vec<u32> = vec![0xFFFF_FFFD; lists];
-    next.push(0xFFFF_FFFE);
-    let first = u32::try_from(lists + 1).unwrap_or(0);
-    next.extend((1..).take(content - 1).map(|step| first + step));
-    next.push(0xFFFF_FFFE);
-    next.resize(lists * SECTOR / 4, u32::MAX);
+    next.push(end);
+    next.extend((1..).take(content - 1).map(|step| long(lists + 1) + step));
+    next.push(end);
+    next.extend(vec![0xFFFF_FFFC; further]);
+    next.resize(lists * a_sector, none);
+    let first_further = lists + 1 + content;
     let mut file = vec![0xD0, 0xCF, 0x11, 0xE0, 0xA1, 0xB1, 0x1A, 0xE1];
     file.extend([0; 16]);
     file.extend(shorts(&[0x3E, 3, 0xFFFE, 9, 6, 0, 0, 0, 0, 0], &[]));
-    let longs = [lists, 0].map(|number| u32::try_from(number).unwrap_or(0));
-    let [lists_long, _] = longs;
-    for number in [lists_long, lists_long, 0, 4096, 0xFFFF_FFFE, 0, 0xFFFF_FFFE, 0] {
-        file.extend(number.to_le_bytes());
-    }
-    for place in 0..109 {
-        let sector = if place < lists_long { place } else { u32::MAX };
-        file.extend(sector.to_le_bytes());
-    }
-    file.extend(next.iter().flat_map(|sector| sector.to_le_bytes()));
-    file.extend(entry("Root Entry", 5, 1, 0xFFFF_FFFE, 0));
-    file.extend(entry(name, 2, u32::MAX, first, content * SECTOR));
+    let begin = if further == 0 { end } else { long(first_further) };
+    file.extend(longs(&[long(lists), long(lists), 0, 4096, end, 0, begin, long(further)], &[]));
+    let mut named: Vec<u32> = (0..long(lists)).collect();
+    named.resize(lists.max(NAMED), none);
+    let later = named.split_off(NAMED);
+    file.extend(longs(&named, &[]));
+    file.extend(longs(&next, &[]));
+    file.extend(entry("Root Entry", 5, 1, end, 0));
+    file.extend(entry(name, 2, none, long(lists + 1), content * SECTOR));
     file.extend([0; 2 * 128]);
     file.extend(stream);
     file.resize((lists + 2 + content) * SECTOR, 0);
+    for (place, piece) in (1..).zip(later.chunks(a_sector - 1)) {
+        let mut sector = piece.to_vec();
+        sector.resize(a_sector - 1, none);
+        sector.push(if place == further { end } else { long(first_further + place) });
+        file.extend(longs(&sector, &[]));
+    }
     file
 }
 

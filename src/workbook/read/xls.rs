@@ -43,9 +43,9 @@ pub(super) struct Book {
 /// Opens and surveys a workbook.
 pub(super) fn open(path: &Path, file: File, limits: Limits) -> Result<Opened, FileFault> {
     let shown = path.display().to_string();
-    let stream = read_stream(&shown, file, limits)?;
+    let (stream, beside) = read_stream(&shown, file, limits)?;
     let globals = Globals::read(&stream).map_err(|refused| fault_of(&shown, refused))?;
-    let mut found = Found::default();
+    let mut found = Found { parts: parts_beside(&beside), ..Found::default() };
     for (entry, end) in with_ends(&globals, stream.len()) {
         if entry.kind == SheetKind::Other {
             found.contents.other_sheets.push(entry.name.clone());
@@ -73,8 +73,8 @@ pub(super) fn open(path: &Path, file: File, limits: Limits) -> Result<Opened, Fi
     Ok(Opened { source: Source::Xls(book), sheets: surveys, appearances, not_carried })
 }
 
-/// The stream of records; since 1997 it has another name, and a file may hold it in both versions.
-fn read_stream(path: &str, mut file: File, limits: Limits) -> Result<Vec<u8>, FileFault> {
+/// The stream of records, and the names of all streams; since 1997 it has another name, and a file may hold both versions.
+fn read_stream(path: &str, mut file: File, limits: Limits) -> Result<(Vec<u8>, Vec<String>), FileFault> {
     let damaged = |error: std::io::Error| FileFault::Damaged {
         path: path.to_owned(),
         what: format!("the container around it cannot be read, perhaps the file was cut off: {error}"),
@@ -98,10 +98,22 @@ fn read_stream(path: &str, mut file: File, limits: Limits) -> Result<Vec<u8>, Fi
     let mut compound = Compound::open(file).map_err(damaged)?;
     for name in ["Workbook", "Book"] {
         if let Some(stream) = compound.stream(name).map_err(damaged)? {
-            return Ok(stream);
+            return Ok((stream, compound.names().map_err(damaged)?));
         }
     }
     Err(FileFault::AnotherKind { path: path.to_owned(), found: FileKind::Unknown })
+}
+
+/// Macros and embedded files, which stand beside the records, by the names of the parts an xlsx keeps them in.
+fn parts_beside(names: &[String]) -> Vec<&'static str> {
+    names
+        .iter()
+        .filter_map(|name| match name.as_str() {
+            "_VBA_PROJECT_CUR" => Some("xl/vbaproject.bin"),
+            name if name.starts_with("MBD") => Some("xl/embeddings/"),
+            _ => None,
+        })
+        .collect()
 }
 
 fn fault_of(path: &str, refused: Refused) -> FileFault {

@@ -63,10 +63,22 @@ fn cells_in_any_order_are_read_in_theirs_and_one_stored_twice_is_named() {
 
 #[test]
 fn blanks_without_end_are_refused_before_they_fill_the_memory() {
-    // A row of 256 blanks, stored half again as often as a sheet has rows.
+    // A row of 256 blanks, stored more often than a sheet has rows.
     let row = record(0x00BE, &[shorts(&[0, 0], &[0; 512]), shorts(&[255], &[])].concat());
-    let said = said_of(&RawXls::with_records(&row.repeat(98_304)));
+    let said = said_of(&RawXls::with_records(&row.repeat(65_538)));
     assert_eq!(said, format!("sheet `Substances` stores more cells than a sheet has; {SAVE_AGAIN}"));
+}
+
+#[test]
+fn a_file_whose_list_of_sectors_goes_on_beyond_its_head_is_read_to_its_end() {
+    // The head names the sectors of a list for about 7 MB.
+    let rows =
+        (0..32_000).flat_map(|row| [label(row, 0, &[b'x'; 250]), number(row, 1, f64::from(row))].concat());
+    let book = RawXls::with_records(&rows.collect::<Vec<u8>>());
+    assert!(book.stream().len() > 8_000_000);
+    let read = contents(&book);
+    assert_eq!(read.len(), 2 * 32_000);
+    assert_eq!(read.last(), Some(&(31_999, 1, CellContent::Number(31_999.0))));
 }
 
 #[test]
@@ -345,4 +357,10 @@ fn no_damage_makes_the_reader_panic_or_misorder_cells() {
         assert!(places.is_sorted_by(|one, next| one < next), "{places:?}");
     }
     assert!(opened > 200, "only {opened} of the damaged workbooks were still readable");
+}
+
+#[test]
+fn macros_and_embedded_files_stand_beside_the_records() {
+    let names = ["Workbook", "_VBA_PROJECT_CUR", "MBD0001A2B3", "\u{5}SummaryInformation"].map(str::to_owned);
+    assert_eq!(super::parts_beside(&names), ["xl/vbaproject.bin", "xl/embeddings/"]);
 }

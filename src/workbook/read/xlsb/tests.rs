@@ -211,6 +211,38 @@ fn a_workbook_that_contradicts_itself_is_refused() {
 }
 
 #[test]
+fn sheets_that_hold_no_cells_are_named_and_not_read() {
+    let kinds = "http://schemas.openxmlformats.org/officeDocument/2006/relationships";
+    let relations = format!(
+        r#"<Relationships><Relationship Id="a" Type="{kinds}/chartsheet" Target="chartsheets/sheet1.bin"/>
+           <Relationship Id="b" Type="{kinds}/worksheet" Target="worksheets/sheet1.bin"/>
+           <Relationship Id="c" Type="http://schemas.microsoft.com/office/2006/relationships/xlMacrosheet"
+             Target="macrosheets/sheet1.bin"/></Relationships>"#
+    );
+    let listed = |state: u32, relation: &str, name: &str| {
+        wide_record(0x009C, &[longs(&[state, 1], &[]), wide_text(relation), wide_text(name)].concat())
+    };
+    let workbook = [
+        listed(0, "a", "Chart"),
+        listed(2, "b", "Cells"),
+        listed(0, "c", "Old macros"),
+        wide_record(0x0027, &[]),
+    ];
+    let parts = with_part(xlsb_parts(&[], 0), "xl/workbook.bin", workbook.concat());
+    let parts = with_part(parts, "xl/_rels/workbook.bin.rels", relations.into());
+    let (_folder, inventory) = opened(&with_part(parts, "xl/vbaProject.bin", vec![0]));
+    let sheets: Vec<_> = inventory.sheets().iter().map(|sheet| (&*sheet.name, sheet.visibility)).collect();
+    assert_eq!(sheets, [("Cells", crate::workbook::Visibility::VeryHidden)]);
+    assert_eq!(
+        inventory.not_carried(),
+        [
+            "Workbook, not carried over: 1 macro project, 1 defined name.",
+            "Workbook, not carried over: sheets `Chart`, `Old macros`, without cells."
+        ]
+    );
+}
+
+#[test]
 fn a_sheet_that_unpacks_to_far_more_than_it_takes_is_refused() {
     let bomb = wide_record(0x0025, &vec![0; 1 << 20]).repeat(40);
     let said = refusal("a.xlsb", write(&xlsb_parts(&bomb, 0)));
