@@ -2,7 +2,7 @@
 
 use super::reading::{Brackets, NamesValue, Reading};
 use super::words::ColumnWords;
-use crate::quantity::{Dimension, Unit, parse_unit, plain_words, tidy};
+use crate::quantity::{Dimension, Unit, parse_unit_of, plain_words, tidy};
 use crate::substance::{Field, Property};
 
 /// The longest text, in characters, that is taken for a header.
@@ -108,11 +108,11 @@ impl Header {
             .brackets
             .iter()
             .flat_map(|bracket| bracket.split([',', ';']).chain([bracket.as_str()]))
-            .filter_map(|part| parse_unit(without_preposition(part)));
+            .filter_map(|part| parse_unit_of(without_preposition(part), dimension));
         let words: Vec<&str> = self.plain.split_whitespace().collect();
         let at_end = (1..words.len().min(5)).rev().filter_map(|length| {
             let end = words.get(words.len() - length..)?.join(" ");
-            parse_unit(without_preposition(end.trim_start_matches([',', '/', '-', ' '])))
+            parse_unit_of(without_preposition(end.trim_start_matches([',', '/', '-', ' '])), dimension)
         });
         in_brackets.chain(at_end).find(measures)
     }
@@ -121,7 +121,7 @@ impl Header {
     pub(super) fn strange_unit(&self, dimension: Dimension) -> Option<Unit> {
         self.brackets
             .iter()
-            .filter_map(|bracket| parse_unit(without_preposition(bracket)))
+            .filter_map(|bracket| parse_unit_of(without_preposition(bracket), dimension))
             .find(|unit| unit.dimension() != dimension && *unit != Unit::One)
     }
 

@@ -1,5 +1,7 @@
 //! Small sheets written as text, and what the library makes of their rows.
 
+use std::sync::LazyLock;
+
 use kowledger::columns::{ColumnWords, Recognised, recognise};
 use kowledger::substance::{RowReader, Substance, UnstatedBasis};
 use kowledger::workbook::{Cell, CellContent, Row};
@@ -26,7 +28,9 @@ pub fn content_row(index: usize, contents: &[CellContent]) -> Row {
 
 /// The columns of a sheet with these rows.
 pub fn columns_of(rows: &[Row]) -> Result<Recognised, String> {
-    recognise("Sheet", rows, &ColumnWords::built_in()?, &[]).ok_or_else(|| "no inventory".to_owned())
+    static WORDS: LazyLock<Result<ColumnWords, String>> = LazyLock::new(ColumnWords::built_in);
+    let words = WORDS.as_ref().map_err(Clone::clone)?;
+    recognise("Sheet", rows, words, &[]).ok_or_else(|| "no inventory".to_owned())
 }
 
 /// The last row of a sheet of text rows, the first of which is the header.

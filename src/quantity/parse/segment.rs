@@ -197,7 +197,8 @@ fn read_values(
         let start = values.last().map_or(0, |(_, end)| *end);
         if let Some(next) = next_in_list(rest)? {
             check_list(opening.rest, rest, &next, &expression, read_as)?;
-            let end = text.len() - rest.len();
+            // The brackets before the joining word belong to this value; their marks are white space.
+            let end = text.len() - rest.trim_start().len();
             expression.written = text.get(start..end).unwrap_or_default().to_owned();
             values.push((expression, end));
             if values.len() > super::MOST_VALUES {

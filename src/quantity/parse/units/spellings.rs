@@ -64,7 +64,7 @@ pub(super) const SPELLINGS: &[(Unit, &str)] = &[
     (Unit::Millipascal, "millipascal 毫帕"),
     (
         Unit::Celsius,
-        "°c c degc °celsius celsius gradc gradcelsius degreescelsius degreec degreesc degresc degresce degrec degrescelsius gradosc gradoscelsius gradic gradicelsius gradenc gradencelsius 摄氏度 攝氏度 セ氏",
+        "°c c degc deg.c °celsius celsius gradc gradcelsius degreescelsius degreec degreesc degresc degresce degrec degrescelsius gradosc gradoscelsius gradic gradicelsius gradenc gradencelsius 摄氏度 攝氏度 セ氏",
     ),
     (Unit::Kelvin, "k kelvin °k 开尔文 ケルビン"),
     (Unit::Fahrenheit, "°f f degf fahrenheit gradfahrenheit 华氏度 華氏度"),

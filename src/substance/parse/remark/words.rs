@@ -89,7 +89,7 @@ pub(super) static GUIDELINE: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
         r"\boecd (tg |no |nr |guideline |test |test guideline |method |ligne directrice |richtlinie |richtlijn )?\d{3}[a-z]?\b|\boecd\d{3}[a-z]?\b|",
         r"\b(eu|ec|eg|ue|ce) (test )?(method |methode |metodo )?[abc] \d{1,2}\b|\b(oppts|ocspp) \d{3}\b|\biso \d{4,5}\b|",
-        r"\bastm e ?\d{3,4}\b|\bdin (en )?(iso )?\d{4,5}\b|\bjis [a-z] ?\d{4}\b|\bgb t ?\d{4,5}\b|^[abc] \d{1,2}( [a-f])?$"
+        r"\bastm e ?\d{3,4}\b|\bdin (en )?(iso )?\d{4,5}\b|\bjis [a-z] ?\d{4}\b|\bgb t ?\d{4,5}\b|^[abc] \d{1,2}$|^c 4 [a-f]$"
     ))
 });
 
@@ -159,7 +159,7 @@ pub(super) static ORGANISM: LazyLock<Regex> = LazyLock::new(|| {
             r"poissons?|truites?|carpes?|algues?|daphnies?|crustaces?|moules?|invertebres?|lentilles? d eau",
             r"pez|peces|pescados?|truchas?|carpas?|algas?|dafnias?|crustaceos?|mejillon\w*|invertebrados?",
             r"pesc[ei]|trot[ae]|carp[ae]|alg[ae]|alghe|dafni\w*|crostace\w*|mitili|invertebrat\w*",
-            r"vis|vissen|forel|karper|algen|watervlo\w*|kreeftachtig\w*|mossel\w*|ongewervelden",
+            r"vis|vissen|forel|karper|algen|watervlo\w*|kreeftachtig\w*|mossel\w*|ongewervelden|コイ",
         ],
         &[
             "魚",
