@@ -66,7 +66,7 @@ fn unescaped(text: &str) -> String {
     plain
 }
 
-fn describe(header: &str, cell: &str) -> String {
+pub fn describe(header: &str, cell: &str) -> String {
     let substance = match read_last(&[&["CAS", header], &["50-29-3", cell]]) {
         Ok(substance) => substance,
         Err(error) => return error,
@@ -77,19 +77,25 @@ fn describe(header: &str, cell: &str) -> String {
     match substance.readings.values().flatten().collect::<Vec<_>>().as_slice() {
         [] => "missing".to_owned(),
         readings => {
-            let columns = readings.iter().map(|reading| describe_reading(reading)).collect::<Vec<_>>();
-            let described: Vec<String> =
-                (0..4).map(|place| joined(columns.iter().map(|columns| columns[place].as_str()))).collect();
-            described.join("\t").trim_end().to_owned()
+            let [mut values, mut units, mut bases, mut others] = <[Vec<String>; 4]>::default();
+            for reading in readings {
+                let [value, unit, basis, conditions] = describe_reading(reading);
+                values.push(value);
+                units.push(unit);
+                bases.push(basis);
+                others.push(conditions);
+            }
+            [values, units, bases, others].map(joined).join("\t").trim_end().to_owned()
         }
     }
 }
 
 /// What several readings have in common once, and what differs with bars between.
-fn joined<'text>(texts: impl Iterator<Item = &'text str>) -> String {
-    let texts: Vec<&str> = texts.collect();
-    let common = texts.iter().all(|text| *text == texts[0]);
-    if common { texts[0].to_owned() } else { texts.join(" | ").trim().to_owned() }
+fn joined(mut texts: Vec<String>) -> String {
+    if texts.windows(2).all(|pair| pair.first() == pair.last()) {
+        texts.truncate(1);
+    }
+    texts.join(" | ").trim().to_owned()
 }
 
 fn describe_reading(reading: &Reading) -> [String; 4] {

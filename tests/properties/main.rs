@@ -3,6 +3,7 @@
 mod cells;
 mod columns;
 mod identity;
+mod probe;
 mod quantity;
 mod sheet;
 mod words;

@@ -7,8 +7,8 @@ use std::sync::LazyLock;
 
 use super::fold::plain_words;
 use lists::{
-    DENIALS, LABELS, MISSING, MISSING_NUMBER, NUMBERED, OTHER_KINDS, REMARK_STARTS, VALUE_WORDS,
-    VALUE_WORDS_WITHIN,
+    DENIALS, LABELS, MISSING, MISSING_NUMBER, NUMBERED, OTHER_KINDS, RATIO_WORDS, REMARK_STARTS, SPANS,
+    TESTS, VALUE_WORDS, VALUE_WORDS_WITHIN,
 };
 
 type Words = LazyLock<BTreeSet<&'static str>>;
@@ -75,6 +75,22 @@ pub(super) fn starts_remark(word: &str) -> bool {
     STARTS.contains(first)
         // `OECD117`, `pH7`: the number is the word's.
         || STARTS.contains(first.trim_end_matches(|character: char| character.is_ascii_digit()))
+}
+
+/// Whether the words before a time end in one for its length: `after 28 d` is no half-life.
+pub(super) fn ends_as_a_span(label: &str) -> bool {
+    let plain = plain_words(label);
+    plain.split(' ').next_back().is_some_and(|word| SPANS.split(' ').any(|span| span == word))
+}
+
+/// Whether a word after a bare number makes it a part of something: `1 in 100`.
+pub(super) fn is_ratio_word(word: &str) -> bool {
+    RATIO_WORDS.split(' ').any(|known| known == plain_words(word))
+}
+
+/// Whether a word after a time makes it the length of a test: `28 d study`.
+pub(super) fn names_a_test(word: &str) -> bool {
+    TESTS.split(' ').any(|known| known == plain_words(word))
 }
 
 /// Whether the words before a number make it the number of a guideline, a pH or the like.

@@ -70,9 +70,9 @@ pub(super) const SPELLINGS: &[(Unit, &str)] = &[
     (Unit::Fahrenheit, "°f f degf fahrenheit gradfahrenheit 华氏度 華氏度"),
     (Unit::GramPerMole, "g/mol da dalton daltons u amu kg/kmol"),
     (Unit::KilogramPerMole, "kg/mol kda kilodalton kilodaltons"),
-    (Unit::PascalCubicMetrePerMole, "pam3/mol pa/(mol/m3) pa/mol/m3 m3pa/mol pa-m3/mol j/mol"),
+    (Unit::PascalCubicMetrePerMole, "pam3/mol pa/(mol/m3) pa/mol/m3 m3pa/mol pa-m3/mol pa.m3/mol j/mol"),
     (Unit::KilopascalCubicMetrePerMole, "kpam3/mol kpa-m3/mol m3kpa/mol"),
-    (Unit::AtmosphereCubicMetrePerMole, "atmm3/mol atm-m3/mol m3atm/mol m3-atm/mol"),
+    (Unit::AtmosphereCubicMetrePerMole, "atmm3/mol atm-m3/mol atm.m3/mol m3atm/mol m3-atm/mol"),
     (Unit::AtmosphereLitrePerMole, "atml/mol latm/mol l-atm/mol atm-l/mol"),
     (
         Unit::Percent,

@@ -55,12 +55,12 @@ pub(super) const VALUE_WORDS_WITHIN: &str = "不溶 可溶 易溶 難溶 难溶 
 /// Words after a bare number that are known to be remarks and no misspelt unit.
 pub(super) const REMARK_STARTS: &[&str] = &[
     "at in for by from as under with oecd eu ec epa iso astm din glp ph ww dw wet dry measured meas exp expt experimental calc",
-    "calculated computed est estimated predicted qsar fish lipid study primary ultimate per method test ref reference read report",
+    "calculated computed est estimated predicted qsar fish lipid study primary ultimate method test ref reference read report",
     "klimisch reliability mean median average approx unpublished literature value value based using see guideline kow koc",
     "bei für fur laut nach mit aus gemessen experimentell berechnet geschatzt berechn fisch studie messwert literatur methode mittelwert",
-    "a chez pour selon par mesure mesuree experimental experimentale calcule calculee estime estimee poisson etude methode valeur moyenne",
-    "en para segun por medido medida calculado calculada estimado estimada pez pescado estudio metodo promedio media valor",
-    "secondo per con misurato misurata sperimentale calcolato calcolata stimato stimata pesce studio metodo valore",
+    "a chez pour selon mesure mesuree experimental experimentale calcule calculee estime estimee poisson etude methode valeur moyenne",
+    "en para segun medido medida calculado calculada estimado estimada pez pescado estudio metodo promedio media valor",
+    "secondo con misurato misurata sperimentale calcolato calcolata stimato stimata pesce studio metodo valore",
     "bij voor volgens met gemeten experimenteel berekend geschat vis studie methode waarde gemiddeld",
 ];
 
@@ -76,7 +76,7 @@ pub(super) const NUMBERED: &str = concat!(
 pub(super) const LABELS: &[&str] = &[
     "log lg log10 logkow logpow logp logd logkoa logkoc logbcf logbaf logbmf logtmf lgkow lgpow lgp kow pow koa koc oc ow k p d kd doc",
     "bcf bcfk bcfss baf bmf tmf dt dt50 degt50 dt50s t1 t 1 2 t50 half life halflife lc lc50 ec ec50 ec10 ic50 erc50 l e c50 c 50 10 noec",
-    "noel pka pka1 pkb mw mm mp bp vp ws sw value values result mean average avg median ca the of at about measured exp experimental",
+    "noel pka pka1 pka2 pka3 pkb mw mm mp bp vp ws sw value values result mean average avg median ca the of at about measured exp experimental",
     "calc calculated estimated predicted est meas solubility water vapour vapor pressure melting point boiling molar mass henry constant",
     "halbwertszeit hwz wert ergebnis mittel mittelwert mittlere gemessen experimentell berechnet geschatzt loslichkeit dampfdruck",
     "schmelzpunkt siedepunkt molmasse sdp smp kp schmp temi demi vie temps valeur resultat moyenne mesure mesuree calcule calculee",
@@ -101,3 +101,18 @@ pub(super) const OTHER_KINDS: &[&str] = &[
     "duration dauer duree duracion durata duur exposure incubation testdauer versuchsdauer",
     "purity reinheit replicates ka",
 ];
+
+/// Words before a time that make it the length of something.
+pub(super) const SPANS: &str = concat!(
+    "after in within for during throughout nach innerhalb wahrend binnen apres en dans pendant sous tras despues durante dopo entro ",
+    "na gedurende"
+);
+
+/// Words between the parts of a ratio.
+pub(super) const RATIO_WORDS: &str = "in of from auf von sur en de su di op van";
+
+/// Words after a time that make it the length of a test.
+pub(super) const TESTS: &str = concat!(
+    "study studie test versuch exposure exposition incubation inkubation duration dauer essai etude ensayo estudio prova studio proef ",
+    "試験 试验 培养"
+);
