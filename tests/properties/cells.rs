@@ -3,9 +3,12 @@
 use std::collections::BTreeMap;
 
 use kowledger::quantity::format_interval;
-use kowledger::substance::{DegradationKind, Reading};
+use kowledger::substance::{
+    DegradationKind, DegradationTest, Property, Reading, RowReader, Substance, UnstatedBasis,
+};
+use kowledger::workbook::{CellContent, StyleId};
 
-use crate::sheet::read_last;
+use crate::sheet::{columns_of, content_row, read_last, text_row};
 
 /// The headings of the table that begin a language.
 const LANGUAGES: [&str; 8] =
@@ -66,7 +69,7 @@ fn unescaped(text: &str) -> String {
     plain
 }
 
-pub fn describe(header: &str, cell: &str) -> String {
+fn describe(header: &str, cell: &str) -> String {
     let substance = match read_last(&[&["CAS", header], &["50-29-3", cell]]) {
         Ok(substance) => substance,
         Err(error) => return error,
@@ -129,4 +132,82 @@ fn conditions(reading: &Reading) -> String {
         conditions.method.as_ref().map(|method| format!("method {method}")),
     ];
     parts.into_iter().flatten().collect::<Vec<_>>().join("; ")
+}
+
+/// A reader of one column, for which the format with this number shows percentages.
+fn read_formatted(header: &str, number: f64, style: u32) -> Result<Substance, String> {
+    let headers = text_row(0, &["CAS", header]);
+    let mut data = content_row(1, &[CellContent::Text("50-29-3".to_owned()), CellContent::Number(number)]);
+    for cell in &mut data.cells {
+        cell.style = Some(StyleId(style));
+    }
+    let columns = columns_of(&[headers, data.clone()])?;
+    let reader = RowReader::new("Sheet".into(), &columns, UnstatedBasis::Unstated);
+    Ok(reader.with_percentages([StyleId(2)]).read(&data))
+}
+
+fn content_of(substance: &Substance) -> Option<f64> {
+    substance.content.as_ref().and_then(|reading| reading.quantity.single())
+}
+
+#[test]
+fn a_number_shown_as_a_percentage_is_read_as_shown_and_any_other_as_it_is() {
+    for (number, style, percent) in
+        [(0.12, 2, 12.0), (0.001, 2, 0.1), (0.07, 2, 7.0), (0.12, 1, 0.12), (12.0, 1, 12.0)]
+    {
+        let substance = read_formatted("Content", number, style).unwrap();
+        assert_eq!(content_of(&substance), Some(percent), "{number} in format {style}");
+    }
+    let degraded = read_formatted("Ready biodegradability", 0.82, 2).unwrap();
+    assert_eq!(degraded.ready.first().map(|ready| ready.value.result), Some(DegradationTest::Ready));
+    assert_eq!(degraded.ready.first().map(|ready| ready.value.reported.as_str()), Some("82 %"));
+    let strange = read_formatted("BCF", 15.0, 2).unwrap();
+    let fault = strange.faults.first().map(ToString::to_string).unwrap_or_default();
+    assert!(fault.starts_with("Sheet!B2: `1500 %` is in %, which does not measure BCF"), "{fault}");
+}
+
+#[test]
+fn contents_and_tonnages_are_converted() {
+    for (header, cell, expected) in [
+        ("Content", "0,5 %", 0.5),
+        ("Content", "500 ppm", 0.05),
+        ("Content (ppm)", "500", 0.05),
+        ("Content", "500 mg/kg", 0.05),
+        ("Content", "5 ‰", 0.5),
+        ("Content", "5 g/kg", 0.5),
+        ("Content", "12 Gew.-%", 12.0),
+        ("Content", "12 % w/w", 12.0),
+        ("Content", "12 % en poids", 12.0),
+        ("Content", "12 % p/p", 12.0),
+        ("Content", "１２％", 12.0),
+        ("Tonnage", "25 t/a", 25.0),
+        ("Tonnage", "25 tonnes/an", 25.0),
+        ("Tonnage", "25 t/año", 25.0),
+        ("Tonnage", "25 吨/年", 25.0),
+        ("Tonnage", "25 トン/年", 25.0),
+        ("Tonnage", "25 tpa", 25.0),
+        ("Tonnage", "2500 kg/a", 2.5),
+        ("Tonnage", "2 kt/a", 2000.0),
+    ] {
+        let substance = read_last(&[&["CAS", header], &["50-29-3", cell]]).unwrap();
+        let reading = substance.content.as_ref().or(substance.tonnage.as_ref());
+        let found = reading.and_then(|reading| reading.quantity.single());
+        let close = found.is_some_and(|found| (found - expected).abs() < 1e-9 * expected);
+        assert!(close, "{header} {cell}: {found:?} {:?}", substance.faults);
+    }
+    let several = read_last(&[&["CAS", "Content"], &["50-29-3", "5 %; 10 %"]]).unwrap();
+    assert_eq!((several.content.is_none(), several.faults.len()), (true, 1));
+}
+
+#[test]
+fn each_value_of_a_list_tells_its_own_part_of_the_cell() {
+    let substance = read_last(&[&["CAS", "log Kow"], &["50-29-3", "4.2 (pH 5); 4,6 (pH 9)"]]).unwrap();
+    let told: Vec<&str> = substance
+        .readings_of(Property::LogKow)
+        .iter()
+        .map(|reading| reading.quantity.reported.as_str())
+        .collect();
+    assert_eq!(told, ["4.2", "4,6"]);
+    let alone = read_last(&[&["CAS", "log Kow"], &["50-29-3", "4.2 (pH 5)"]]).unwrap();
+    assert_eq!(alone.readings_of(Property::LogKow)[0].quantity.reported, "4.2 (pH 5)");
 }

@@ -3,7 +3,6 @@
 mod cells;
 mod columns;
 mod identity;
-mod probe;
 mod quantity;
 mod sheet;
 mod words;
