@@ -94,6 +94,9 @@ fn texts_count_as_numbers_and_cells_with_their_unit_do_not() {
 #[test]
 fn a_number_above_ten_is_no_logarithm() {
     assert!(takes(&columns_of(&sheet("log Koc", &[2.5, 10.0])).unwrap(), Property::Koc));
+    // Alone, a number up to 15 would be taken by its cell; a higher one is faulted there.
+    assert!(!takes(&columns_of(&sheet("log Koc", &[12.0])).unwrap(), Property::Koc));
+    assert!(takes(&columns_of(&sheet("log Koc", &[480.0])).unwrap(), Property::Koc));
     let recognised = columns_of(&sheet("log Koc", &[2.5, 480.0])).unwrap();
     assert!(!takes(&recognised, Property::Koc));
     assert_eq!(
