@@ -10,6 +10,7 @@ mod guard;
 mod look;
 mod not_carried;
 mod package;
+mod percent;
 mod place;
 mod read;
 mod serial;

@@ -60,7 +60,7 @@ pub(super) fn set_styles(sheet: &str, recognised: &mut Recognised, data: &[&Row]
             DecimalStyle::Point => "point",
             DecimalStyle::Comma => "comma",
         };
-        if style == DecimalStyle::Comma || is_shown {
+        if dimension_of(column.field).is_some() && (style == DecimalStyle::Comma || is_shown) {
             let _ = write!(column.reason, "; decimal {word}, {why}");
         }
         if let Some(example) = shown.ambiguous {

@@ -3,7 +3,7 @@
 use super::folding::{composed, header_words, is_sign, shown_words};
 use super::reading::{Brackets, NamesValue, Reading};
 use super::words::ColumnWords;
-use crate::quantity::{Dimension, Unit, parse_unit, parse_unit_of, tidy};
+use crate::quantity::{Dimension, Unit, parse_unit_of, tidy};
 use crate::substance::{Field, Property};
 
 /// The longest text, in characters, that is taken for a header.
@@ -105,7 +105,7 @@ impl Header {
     pub(super) fn strange_unit(&self, dimension: Dimension) -> Option<Unit> {
         self.brackets
             .iter()
-            .filter_map(|bracket| parse_unit(without_preposition(bracket)))
+            .filter_map(|bracket| parse_unit_of(without_preposition(bracket), dimension))
             .find(|unit| unit.dimension() != dimension && *unit != Unit::One)
     }
 

@@ -3,14 +3,11 @@
 use std::collections::BTreeSet;
 
 use super::ColumnOverride;
-use super::choice::dimension_of;
-use super::header::Header;
 use super::header_cell::{HeaderCell, is_group_text};
-use super::reading::Reading;
+use super::lower_row::{Sign, holds_units, reads_as_header};
 use super::second_header::{HeaderWatch, is_number};
-use super::stack::{is_unit, stack};
+use super::stack::stack;
 use super::words::ColumnWords;
-use crate::quantity::{is_missing, parse_unit, tidy};
 use crate::substance::Field;
 use crate::workbook::{Cell, CellContent, Row};
 
@@ -146,52 +143,12 @@ impl<'sheet> Reader<'sheet> {
         if holds_units(lower) {
             return true;
         }
-        let Some(sign) = self.reads_as_header(lower, &before) else {
+        let Some(sign) = reads_as_header(lower, &before, self.words) else {
             return false;
         };
         let together = self.cells(Block { first: block.first, last: block.last + 1 });
         let gained = recognised(&together).checked_sub(recognised(&before));
         gained.is_some_and(|gained| gained > 0 || sign == Sign::Certain)
-    }
-
-    /// Whether a row below names holds words of headers and no data, and how surely.
-    fn reads_as_header(self, row: &Row, above: &[HeaderCell]) -> Option<Sign> {
-        let filled = row.cells.iter().filter(|cell| cell.content != CellContent::Empty);
-        if filled.clone().any(|cell| text_of(cell).is_none() || is_number(&cell.content)) {
-            return None;
-        }
-        let mut sign = Sign::Possible;
-        let (mut understood, mut others) = (0, 0);
-        for (column, text) in texts_of(row) {
-            let field = above.iter().find(|cell| cell.column == column).and_then(HeaderCell::field);
-            match self.kind_below(&text, field)? {
-                Below::Missing => {}
-                Below::Words if field.is_some_and(holds_numbers) => {
-                    understood += 1;
-                    sign = Sign::Certain;
-                }
-                Below::Words => understood += 1,
-                Below::Other => others += 1,
-            }
-        }
-        (understood > others).then_some(sign)
-    }
-
-    /// What a text below the header of a field is; none where it must be data.
-    fn kind_below(self, text: &str, field: Option<Field>) -> Option<Below> {
-        if is_missing(text) {
-            return Some(Below::Missing);
-        }
-        let header = Header::new(text)?;
-        let reading = Reading::new(&header, self.words);
-        let dimension = field.and_then(dimension_of);
-        let is_value = tidy(text).starts_with(|first: char| first.is_ascii_digit())
-            && dimension.is_none_or(|dimension| measures_value(text) == Some(dimension));
-        let is_text_of_field = field.is_some() && dimension.is_none();
-        if is_value || (is_text_of_field && header.field(self.words).is_none() && !is_unit(text)) {
-            return None;
-        }
-        Some(if reading.wholly_known && !reading.covered.is_empty() { Below::Words } else { Below::Other })
     }
 
     /// Rows of groups above the names.
@@ -227,39 +184,6 @@ fn is_title(upper: &Row, lower: &Row) -> bool {
     texts_of(upper).len() < 2 && first(upper) <= first(lower)
 }
 
-/// Whether words in a column of this field are no data.
-fn holds_numbers(field: Field) -> bool {
-    let of_words = matches!(field, Field::ReadyBiodegradability | Field::InherentBiodegradability);
-    dimension_of(field).is_some() && !of_words
-}
-
-/// How surely a row belongs to the header above it.
-#[derive(Debug, Clone, Copy, PartialEq, Eq)]
-enum Sign {
-    /// Words of headers stand below columns of numbers, where data would be numbers.
-    Certain,
-    /// Only if the header is understood better with it.
-    Possible,
-}
-
-/// A text below a header.
-enum Below {
-    /// A word for a missing value.
-    Missing,
-    /// Words that headers are made of.
-    Words,
-    Other,
-}
-
-/// What a number with a unit measures.
-fn measures_value(text: &str) -> Option<crate::quantity::Dimension> {
-    let text = tidy(text);
-    let unit = text.trim_start_matches(|character: char| {
-        character.is_ascii_digit() || matches!(character, '.' | ',' | ' ' | '-' | '±')
-    });
-    parse_unit(unit).map(crate::quantity::Unit::dimension)
-}
-
 fn recognised(cells: &[HeaderCell]) -> usize {
     cells.iter().filter(|cell| cell.field().is_some()).count()
 }
@@ -268,7 +192,7 @@ pub(super) fn texts_of(row: &Row) -> Vec<(u16, String)> {
     row.cells.iter().filter_map(|cell| Some((cell.column, text_of(cell)?))).collect()
 }
 
-fn text_of(cell: &Cell) -> Option<String> {
+pub(super) fn text_of(cell: &Cell) -> Option<String> {
     match &cell.content {
         CellContent::Text(text) if !text.trim().is_empty() => Some(text.trim().to_owned()),
         CellContent::Text(_)
@@ -293,17 +217,4 @@ pub(super) fn is_inventory(cells: &[HeaderCell]) -> bool {
     // A product's name is the substance's where there is no other, see `choice`.
     let named = fields.iter().any(|field| matches!(field, Field::RowId | Field::Name | Field::Product));
     fields.iter().any(|field| field.identifies()) || (named && fields.len() >= 2)
-}
-
-/// Whether a row holds units and little else: text only, at least half of it units.
-fn holds_units(row: &Row) -> bool {
-    let filled = row.cells.iter().filter(|cell| cell.content != CellContent::Empty).count();
-    let texts = texts_of(row);
-    let starts_number = |text: &str| text.starts_with(|first: char| first.is_ascii_digit());
-    if texts.len() < filled || texts.iter().any(|(_, text)| starts_number(text)) {
-        return false;
-    }
-    let real_units = texts.iter().filter(|(_, text)| is_unit(text) && !is_missing(text)).count();
-    let others = texts.iter().filter(|(_, text)| !is_unit(text) && !is_missing(text)).count();
-    real_units > 0 && real_units >= others
 }

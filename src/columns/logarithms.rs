@@ -17,6 +17,9 @@ const LOGARITHMS: std::ops::RangeInclusive<f64> = -1.0..=8.0;
 /// Above this no logarithm of these properties lies.
 const HIGHEST_LOGARITHM: f64 = 10.0;
 
+/// Above this a cell is refused as a logarithm on its own.
+const CELLS_REFUSE_ABOVE: f64 = 15.0;
+
 /// What is wrong with the numbers of a column.
 enum Look {
     /// They look like logarithms, and the header names neither them nor a unit.
@@ -69,7 +72,10 @@ fn look_of(column: &Column, data: &[&Row]) -> Option<Look> {
         .filter_map(|cell| bare_number(&cell.content, column.decimal))
         .collect();
     if column.unit == Some(Unit::LogLitrePerKilogram) {
-        return numbers.into_iter().find(|number| *number > HIGHEST_LOGARITHM).map(Look::TooHigh);
+        // A number alone misleads about no other, and its cell is faulted if it is higher still.
+        let others = numbers.len() > 1;
+        let too_high = numbers.into_iter().find(|number| *number > HIGHEST_LOGARITHM);
+        return too_high.filter(|number| others || *number <= CELLS_REFUSE_ABOVE).map(Look::TooHigh);
     }
     let with_decimals = numbers.iter().filter(|number| number.fract().abs() > 0.0).count();
     let like_logarithms = numbers.len() >= FEWEST_NUMBERS

@@ -49,13 +49,17 @@ impl Recognised {
         if self.repeats_header(&texts) {
             return HeaderAgain::Repeated;
         }
-        if !texts.iter().any(|(column, _)| self.holds_no_words(*column)) {
+        // Most rows of words end here: reading all their texts as headers would take long.
+        let overrides = &self.watch.overrides;
+        let out_of_place =
+            texts.iter().filter(|(column, _)| self.holds_no_words(*column)).any(|(column, text)| {
+                HeaderCell::alone(*column, text.clone(), words, overrides).field().is_some()
+            });
+        if !out_of_place {
             return HeaderAgain::No;
         }
-        let cells = header_cells(texts, words, &self.watch.overrides);
-        let out_of_place =
-            cells.iter().any(|cell| cell.field().is_some() && self.holds_no_words(cell.column));
-        if out_of_place && names_columns(&cells) { HeaderAgain::Other } else { HeaderAgain::No }
+        let cells = header_cells(texts, words, overrides);
+        if names_columns(&cells) { HeaderAgain::Other } else { HeaderAgain::No }
     }
 
     /// Names the first header of another table among these rows in a remark, with what to do.

@@ -87,7 +87,11 @@ fn standard_deviation(property: Property, reading: &Reading, value: f64, relatio
 }
 
 fn log_sd(property: Property, unit: Unit, written: f64, value: f64) -> Option<f64> {
-    if property.is_logarithmic() || unit == Unit::LogLitrePerKilogram {
+    if unit == Unit::Ratio {
+        // `Kow = 50000 ± 5000`: the error is that of the ratio.
+        return Some(written / 10f64.powf(value) / std::f64::consts::LN_10);
+    }
+    if property.is_logarithmic() || matches!(unit, Unit::LogLitrePerKilogram | Unit::LogarithmOfRatio) {
         return Some(written);
     }
     // A standard deviation converts like the value itself, since every unit of these properties is a plain factor.

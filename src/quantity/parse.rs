@@ -8,8 +8,10 @@ mod expression;
 mod fold;
 mod format;
 mod label;
+mod leftover;
 mod number;
 mod qualifier;
+mod range;
 mod segment;
 mod several;
 mod symbols;
@@ -31,6 +33,8 @@ use words::is_missing_number;
 
 /// The longest text, in bytes, in which a quantity is looked for.
 const LONGEST: usize = 2_000;
+/// Exports leave them around texts.
+const QUOTES: &str = "\"“”„«»";
 /// More values than a cell can mean.
 const MOST_VALUES: usize = 20;
 /// Of a value that is written without `log` where its logarithm is asked for, numbers up to this one may be the logarithm
@@ -127,10 +131,12 @@ pub fn parse_quantities(text: &str, read_as: ReadAs) -> Result<Vec<Parsed>, Quan
         return Err(QuantityFault::TooLong);
     }
     let tidied = part_scripts(tidy(text));
-    if is_missing_number(&tidied) {
+    let tidied =
+        tidied.trim_matches(|character: char| QUOTES.contains(character) || character.is_whitespace());
+    if is_missing_number(tidied) {
         return Err(QuantityFault::NoValue);
     }
-    let values = read_all(&tidied, read_as)?;
+    let values = read_all(tidied, read_as)?;
     let several = values.len() > 1;
     let parsed = values.into_iter().map(|value| {
         let reported = if several { &value.written } else { text };

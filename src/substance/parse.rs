@@ -7,6 +7,7 @@ mod cell;
 mod companions;
 mod degradability;
 mod draft;
+mod expected;
 mod identity;
 mod inherent;
 mod kinds;

@@ -2,6 +2,7 @@
 
 use std::borrow::Cow;
 
+use super::percent::has_percent_sign;
 use calamine::{
     Border, BorderStyle, Color, Fill, FillPattern, Font, HorizontalAlignment, NumberFormat, Style,
     TextRotation, UnderlineStyle, VerticalAlignment,
@@ -124,32 +125,13 @@ fn number_format(number: Option<&NumberFormat>) -> (Format, Numbers) {
     }
 }
 
-/// A percent sign in the part of a format for positive numbers, outside quotation marks, shows a percentage. The built-in
-/// formats 9 and 10 are `0%` and `0.00%`.
+/// The built-in formats 9 and 10 are `0%` and `0.00%`.
 fn scale_of(number: Option<&NumberFormat>) -> Scale {
     let Some(number) = number else {
         return Scale::Itself;
     };
     let built_in = number.format_id.is_some_and(|id| id == 9 || id == 10);
     if built_in || has_percent_sign(&number.format_code) { Scale::Percentage } else { Scale::Itself }
-}
-
-fn has_percent_sign(format_code: &str) -> bool {
-    let mut quoted = false;
-    let mut characters = format_code.chars();
-    while let Some(character) = characters.next() {
-        match character {
-            '"' => quoted = !quoted,
-            // The next character is shown as it is, or left as wide a gap.
-            '\\' | '_' | '*' if !quoted => {
-                characters.next();
-            }
-            ';' if !quoted => return false,
-            '%' if !quoted => return true,
-            _ => {}
-        }
-    }
-    false
 }
 
 fn with_font(mut format: Format, font: &Font) -> Format {
@@ -312,20 +294,5 @@ fn translate_pattern(pattern: FillPattern) -> FormatPattern {
         FillPattern::LightGrid => FormatPattern::LightGrid,
         FillPattern::LightTrellis => FormatPattern::LightTrellis,
         _ => FormatPattern::None,
-    }
-}
-
-#[cfg(test)]
-mod tests {
-    use super::has_percent_sign;
-
-    #[test]
-    fn a_percent_sign_counts_where_the_format_shows_numbers_by_it() {
-        for code in ["0%", "0.00%", "0.0 %", "[Red]0%", "#,##0.0%;-0%"] {
-            assert!(has_percent_sign(code), "{code}");
-        }
-        for code in ["0.00", "General", "0\" %\"", "0\\%", "0;0%", ""] {
-            assert!(!has_percent_sign(code), "{code}");
-        }
     }
 }

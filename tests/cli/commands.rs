@@ -196,7 +196,19 @@ fn columns_lines_up_headers_of_several_rows_and_wide_signs() {
     ]);
     let run = place.run(&["columns", "inventory.xlsx"]);
     assert_eq!(run.status, 0);
-    insta::assert_snapshot!(run.said.trim_end(), @"");
+    insta::assert_snapshot!(run.said.trim_end(), @r"
+    Substances: header in rows 1 and 2, read together.
+      A  物質名                   name              named by `物質名`
+      B  CAS番号                  cas-number        named by `cas`
+      C  土壌半減期: 測定         half-life-soil    named by `半減期` and `土壌`; rows 1 and 2 read together; d where a cell names no unit; values are taken as measured; decimal comma, as the sheet's other cells show
+      D  土壌半減期: 推算         half-life-soil    named by `半減期` and `土壌`; rows 1 and 2 read together; d where a cell names no unit; values are taken as calculated; decimal comma, as the sheet's other cells show
+      E  Water solubility [mg/L]  water-solubility  named by `solubility`; rows 1 and 2 read together; mg/L from the header; decimal comma, as the column's other cells show
+      F  BCF: fish                not used          left aside; its numbers look like logarithms
+      G  Half-lfe air             not used          not recognised; nearest field: half-life-air
+      H  Stock                    not used          not recognised
+      Note: Substances: column G (`Half-lfe air`) is not recognised; if it is half-life-air: --column 'Half-lfe air=half-life-air'
+      Note: Substances: column F (`BCF: fish`) is left aside, because its numbers look like logarithms and its header does not say so; write `log BCF` as its header if they are, or say that they are none: --column 'BCF: fish=bcf'
+    ");
 }
 
 #[test]

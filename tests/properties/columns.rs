@@ -33,16 +33,16 @@ fn table() -> impl Iterator<Item = Known> {
 
 /// The column of a header beside others. A SMILES column makes the sheet an inventory and is named by no other header,
 /// but by its own.
-fn column_of(header: &str) -> Option<Column> {
-    let recognised = columns_of(&[text_row(0, &[header, "SMILES", "Supplier", "Name"])]).unwrap();
-    recognised.columns.into_iter().find(|column| column.index == 0)
+fn column_of(header: &str) -> Result<Option<Column>, String> {
+    let recognised = columns_of(&[text_row(0, &[header, "SMILES", "Supplier", "Name"])])?;
+    Ok(recognised.columns.into_iter().find(|column| column.index == 0))
 }
 
 #[test]
 fn every_header_of_the_table_names_its_field_and_unit() {
     let mut wrong = Vec::new();
     for Known { header, field, unit, .. } in table() {
-        let found = column_of(&header);
+        let found = column_of(&header).unwrap();
         let found_field = found.as_ref().map_or("none", |column| column.field.id());
         let found_unit = found.and_then(|column| column.unit).map_or("", Unit::symbol);
         if (found_field, found_unit) != (field, unit) {
@@ -76,7 +76,7 @@ fn said(column: &Column) -> String {
 fn headers_of_the_table_carry_their_basis_and_conditions() {
     let mut wrong = Vec::new();
     for known in table().filter(|known| !known.said.is_empty()) {
-        let found = column_of(&known.header).map(|column| said(&column)).unwrap_or_default();
+        let found = column_of(&known.header).unwrap().map(|column| said(&column)).unwrap_or_default();
         if found != known.said {
             wrong.push(format!("`{}`: expected {}, found {found}", known.header, known.said));
         }
@@ -400,7 +400,7 @@ fn case_accents_brackets_width_and_line_breaks_make_no_difference() {
             forms.extend([bracketed('【', '】').to_lowercase(), header.to_uppercase()]);
         }
         for form in forms {
-            let found = column_of(&form).map_or("none", |column| column.field.id());
+            let found = column_of(&form).unwrap().map_or("none", |column| column.field.id());
             if found != known.field {
                 wrong.push(format!("`{form:?}`: expected {}, found {found}", known.field));
             }

@@ -34,7 +34,7 @@ fn layouts() -> Vec<Layout> {
 fn row(index: usize, line: &str) -> Row {
     let cells = line.split('|').map(str::trim).enumerate().filter(|(_, text)| !text.is_empty());
     let cells = cells.map(|(column, text)| Cell {
-        column: u16::try_from(column).unwrap(),
+        column: u16::try_from(column).unwrap_or(u16::MAX),
         content: match text.parse::<f64>() {
             Ok(number) => CellContent::Number(number),
             Err(_) if text == "." => CellContent::Empty,
@@ -43,7 +43,7 @@ fn row(index: usize, line: &str) -> Row {
         style: None,
         formula: false,
     });
-    Row { index: u32::try_from(index).unwrap(), cells: cells.collect() }
+    Row { index: u32::try_from(index).unwrap_or(u32::MAX), cells: cells.collect() }
 }
 
 /// `header 2`, then the columns as `D half-life-water d`, with basis and conditions where the header says them.

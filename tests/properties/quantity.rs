@@ -2,9 +2,10 @@
 
 use kowledger::quantity::{
     Bound, Comparison, DecimalStyle, Dimension, Interval, Outcome, ReadAs, Scale, Unit, format_interval,
-    format_number, parse_limit, parse_quantity,
+    format_number, parse_limit, parse_quantities, parse_quantity,
 };
 use proptest::prelude::{Just, Strategy, any, prop_assert, prop_assert_eq, prop_oneof, proptest};
+use proptest::sample::select;
 
 const DIMENSIONS: [Dimension; 11] = [
     Dimension::Dimensionless,
@@ -19,6 +20,35 @@ const DIMENSIONS: [Dimension; 11] = [
     Dimension::Tonnage,
     Dimension::MolarEnergy,
 ];
+
+/// A sign, and words that say the same; `#` stands before those that follow the number.
+const QUALIFIERS: [(&str, &str); 5] = [
+    (
+        ">",
+        "greater than|größer als|supérieur à|plus de|mayor que|más de|maggiore di|più di|groter dan|meer dan|大于|大於|超过|#超|#より大きい|#を超える",
+    ),
+    (
+        "≥",
+        "at least|mindestens|au moins|al menos|almeno|ten minste|少なくとも|至少|不小于|#以上|#or more|#ou plus|#o más|#o più|#of meer",
+    ),
+    (
+        "<",
+        "less than|kleiner als|inférieur à|moins de|menor que|menos de|minore di|meno di|kleiner dan|minder dan|小于|低于|#未満|#より小さい",
+    ),
+    (
+        "≤",
+        "at most|höchstens|au plus|como máximo|al massimo|ten hoogste|多くとも|不大于|不超过|#以下|#or less|#ou moins|#o menos|#o meno|#of minder",
+    ),
+    ("", "from|equal to|gleich|égal à|igual a|uguale a|gelijk aan|等于"),
+];
+
+/// What cells are made of.
+const VOCABULARY: &str = concat!(
+    "4.5|4,5|1.234|1,234|10^3|10^4.5|1E-5|×10⁻³|-|–|~|±|<|>|≤|≥|=|:|;|,|/|@|(|)|[|]|%|°C|mg/L|µg/L|d|wk|a|j|J|h|L/kg|Pa|ppm|t/a|log|",
+    "log Kow|Kow|BCF|Koc|DT50|DT90|LC50|pH|OECD 117|and|und|et|y|e|o|of|to|à|a|tot|から|まで|至|と|の間|between|entre|tussen|介于|",
+    "以上|未満|約|左右|日|か月|天|年|毫克/升|not|nicht|不|未測定|n.d.|データなし|measured|calculated|実測値|1998|2000|½|ー|．|５|\n|",
+    "\u{3000}|\u{AD}|\u{200B}|&lt;|*|'|\"|stable|insoluble|no degradation|min|max|ca.|Smith et al."
+);
 
 fn read_as(dimension: Dimension, decimal: DecimalStyle) -> ReadAs {
     ReadAs { dimension, default_unit: dimension.canonical(), decimal, scale: Scale::Linear, molar_mass: None }
@@ -112,6 +142,93 @@ proptest! {
             let written = if ambiguous { text.replace('.', ",") } else { text.clone() };
             let parsed = parse_quantity(&written, read_as(dimension, style));
             prop_assert_eq!(parsed.map(|parsed| parsed.quantity.interval), Ok(interval), "{}", written);
+        }
+    }
+
+    #[test]
+    fn an_interval_in_any_unit_is_read_in_that_unit(interval in interval(), place in 0usize..Unit::ALL.len()) {
+        let unit = Unit::ALL[place];
+        let dimension = unit.dimension();
+        let canonical = interval.map_increasing(|number| unit.to_canonical(number, Some(250.0)).unwrap_or(f64::NAN));
+        // Units without a symbol are set by words; a power of ten may leave every range.
+        if let (Ok(canonical), true) = (canonical, unit == Unit::One || !unit.symbol().is_empty()) {
+            let text = format_interval(interval, unit);
+            for (written, style) in [(text.clone(), DecimalStyle::Point), (text.replace('.', ","), DecimalStyle::Comma)] {
+                let read = ReadAs { molar_mass: Some(250.0), ..read_as(dimension, style) };
+                let parsed = parse_quantity(&written, read).map(|parsed| parsed.quantity);
+                let found = parsed.map(|quantity| (quantity.interval, quantity.unit));
+                prop_assert_eq!(found, Ok((canonical, unit)), "{}", written);
+            }
+        }
+    }
+
+    #[test]
+    fn a_qualifier_in_any_language_is_its_sign(
+        number in 1i32..10_000,
+        place in 0usize..QUALIFIERS.len(),
+        spaced in any::<bool>(),
+    ) {
+        let (sign, words) = QUALIFIERS[place];
+        let expected = parse_quantity(&format!("{sign} {number} d"), read_as(Dimension::Time, DecimalStyle::Point));
+        for word in words.split('|') {
+            let east_asian = !word.is_ascii() && word.chars().all(|letter| letter > '\u{3000}' || letter == '#');
+            let gap = if east_asian && !spaced { "" } else { " " };
+            let text = match word.strip_prefix('#') {
+                Some(after) => format!("{number} d{gap}{after}"),
+                None => format!("{word}{gap}{number} d"),
+            };
+            let found = parse_quantity(&text, read_as(Dimension::Time, DecimalStyle::Point));
+            let interval = |parsed: &Result<kowledger::quantity::Parsed, _>| {
+                parsed.as_ref().map(|parsed| parsed.quantity.interval).map_err(Clone::clone)
+            };
+            prop_assert_eq!(interval(&found), interval(&expected), "{}", text);
+        }
+    }
+
+    #[test]
+    fn values_with_semicolons_between_are_read_in_order(
+        intervals in proptest::collection::vec(interval(), 1..=20),
+        separator in 0usize..3,
+    ) {
+        let texts: Vec<String> = intervals.iter().map(|interval| format_interval(*interval, Unit::Pascal)).collect();
+        let text = texts.join(["; ", "\n", ";"][separator]);
+        if text.len() <= 2_000 {
+            let parsed = parse_quantities(&text, read_as(Dimension::Pressure, DecimalStyle::Point));
+            let found: Result<Vec<Interval>, _> =
+                parsed.map(|values| values.into_iter().map(|parsed| parsed.quantity.interval).collect());
+            prop_assert_eq!(found, Ok(intervals), "{}", text);
+        }
+    }
+
+    #[test]
+    fn a_list_with_a_part_that_is_no_value_gives_none(
+        interval in interval(),
+        wrong in select(vec!["4.5.6", "5 wekks", "1/2", "4.6 1)", "4.6 4.7", "1.2e3.4"]),
+        first in any::<bool>(),
+    ) {
+        let value = format_interval(interval, Unit::Pascal);
+        let text = if first { format!("{wrong}; {value}") } else { format!("{value}; {wrong}") };
+        let parsed = parse_quantities(&text, read_as(Dimension::Pressure, DecimalStyle::Point));
+        prop_assert!(parsed.is_err(), "{text} {parsed:?}");
+    }
+
+    #[test]
+    fn no_mixture_of_known_words_panics(
+        words in proptest::collection::vec(select(VOCABULARY.split('|').collect::<Vec<_>>()), 0..16),
+        spaced in any::<bool>(),
+        logarithm in any::<bool>(),
+    ) {
+        let text = words.join(if spaced { " " } else { "" });
+        let scale = if logarithm { Scale::Logarithm } else { Scale::Linear };
+        for dimension in DIMENSIONS {
+            let read = ReadAs { scale, ..read_as(dimension, DecimalStyle::Point) };
+            if let Ok(values) = parse_quantities(&text, read) {
+                prop_assert!((1..=20).contains(&values.len()), "{text}");
+                for parsed in values {
+                    let interval = parsed.quantity.interval;
+                    prop_assert!([interval.low(), interval.high()].iter().all(|end| end.number().is_none_or(f64::is_finite)));
+                }
+            }
         }
     }
 

@@ -37,6 +37,8 @@ pub(super) struct Expression {
     pub(super) remarks: Vec<String>,
     /// The words before the number; the values after it in a list have them, too.
     pub(super) label: Option<String>,
+    /// Whether `=` or `:` ends words before the number that nobody knows.
+    pub(super) signed: bool,
     /// The part of the text that says this value.
     pub(super) written: String,
 }
@@ -52,6 +54,7 @@ impl Expression {
             approximate: false,
             remarks: Vec::new(),
             label: None,
+            signed: false,
             written: String::new(),
         }
     }

@@ -22,6 +22,19 @@ pub(super) enum Qualifier {
     Between,
 }
 
+impl Qualifier {
+    /// The sign of a qualifier that opens an end.
+    pub(super) fn sign(self) -> Option<&'static str> {
+        match self {
+            Self::Above => Some(">"),
+            Self::AtLeast => Some("≥"),
+            Self::Below => Some("<"),
+            Self::AtMost => Some("≤"),
+            Self::About | Self::Exactly | Self::From | Self::Between => None,
+        }
+    }
+}
+
 /// Longest first where one starts another.
 const SIGNS: &[(&str, Qualifier)] = &[
     (">=", Qualifier::AtLeast),

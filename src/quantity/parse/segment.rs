@@ -3,11 +3,12 @@
 use super::brackets::MARK;
 use super::expression::Expression;
 use super::label::{split_label, unit_by_label};
+use super::leftover::read_leftover;
 use super::number::starts_number;
 use super::qualifier::strip_phrase;
 use super::units::take_unit;
 use super::value::{Opening, read_opening, read_value};
-use super::words::{Lead, lead_of, numbers_something_else, starts_remark};
+use super::words::{Lead, ends_as_a_span, lead_of, numbers_something_else};
 use super::{QuantityFault, ReadAs};
 use crate::quantity::{Dimension, Unit};
 
@@ -27,7 +28,7 @@ pub(super) fn segments(body: &str) -> Vec<Segment<'_>> {
     for (position, byte) in bytes.iter().enumerate() {
         let separates = match byte {
             b';' | b'@' | b'|' => true,
-            b',' => !bytes.get(position + 1).is_some_and(u8::is_ascii_digit),
+            b',' => !is_between_digits(bytes, position),
             _ => false,
         };
         if separates {
@@ -37,6 +38,19 @@ pub(super) fn segments(body: &str) -> Vec<Segment<'_>> {
     }
     parts.push(Segment { text: body.get(start..).unwrap_or_default(), separator });
     parts
+}
+
+/// Whether a comma may belong to a number.
+fn is_between_digits(bytes: &[u8], position: usize) -> bool {
+    let digit = |position: Option<usize>| {
+        position.and_then(|position| bytes.get(position)).is_some_and(u8::is_ascii_digit)
+    };
+    let before = position.checked_sub(1);
+    // `,5` is a half.
+    let begins = before
+        .and_then(|before| bytes.get(before))
+        .is_none_or(|byte| !byte.is_ascii_alphanumeric() && byte.is_ascii());
+    digit(Some(position + 1)) && (digit(before) || begins)
 }
 
 /// What stands before a segment.
@@ -50,6 +64,8 @@ pub(super) enum Before {
     ValueWithUnit,
     /// A value without one.
     BareValue,
+    /// A value behind words with `:` or `=` that nobody knows: `isomer A: 4.2`.
+    Labelled,
 }
 
 /// The values of a segment, each with the length of text up to its end; none for a remark.
@@ -91,13 +107,16 @@ fn leads_a_value(
         return Ok(false);
     }
     let unit = unit_after_number(opening.rest, read_as);
-    let own_unit = unit.is_some_and(|unit| unit.dimension() == read_as.dimension && unit != Unit::One);
+    let own_unit = unit.is_some_and(|unit| unit.dimension() == read_as.dimension);
     let first = before == Before::NoValue;
     if !first && unit.is_some() && !own_unit && (label.is_some() || !opening.label.is_empty()) {
         return Ok(false);
     }
     let not_told_apart = if first { QuantityFault::NoNumber } else { QuantityFault::SeveralValues };
     let is_time = read_as.dimension == Dimension::Time;
+    if is_time && ends_as_a_span(&opening.label) {
+        return Err(not_told_apart);
+    }
     let (words, signed) = match label {
         Some(label) if opening.label.is_empty() => (label, Signed::Yes),
         Some(label) if lead_of(&opening.label) == Lead::Value => (label, Signed::Yes),
@@ -111,7 +130,7 @@ fn leads_a_value(
         (Lead::OtherKind, _) => Ok(false),
         (Lead::ValueWord, _) if !is_time && (own_unit || signed == Signed::Yes) => Ok(true),
         (Lead::Unknown, _) if own_unit => Ok(true),
-        (Lead::Unknown, Signed::Yes) if first => Ok(true),
+        (Lead::Unknown, Signed::Yes) if first || before == Before::Labelled => Ok(true),
         (Lead::Unknown, _)
             if is_year_like(opening.rest) || (!first && is_large_integer(opening.rest, read_as)) =>
         {
@@ -128,10 +147,12 @@ enum Signed {
     No,
 }
 
-fn unit_after_number(text: &str, read_as: ReadAs) -> Option<Unit> {
+/// The unit right after the first number of a text.
+pub(super) fn unit_after_number(text: &str, read_as: ReadAs) -> Option<Unit> {
     let opening = read_opening(text);
     let (_, rest) = super::number::read_number(opening.rest, read_as.decimal).ok().flatten()?;
-    take_unit(rest, read_as.dimension).map(|(unit, _)| unit)
+    // A dash parts a range and names no unit.
+    take_unit(rest, read_as.dimension).map(|(unit, _)| unit).filter(|unit| *unit != Unit::One)
 }
 
 /// Whether a text is a year and nothing else.
@@ -162,7 +183,7 @@ fn stands_alone(text: &str, before: Before, read_as: ReadAs) -> Result<Alone, Qu
             _ if never => Ok(Alone::Remark),
             Before::Remark => Ok(Alone::Remark),
             Before::ValueWithUnit => Err(QuantityFault::SeveralValues),
-            Before::BareValue | Before::NoValue => Ok(Alone::Value),
+            Before::BareValue | Before::NoValue | Before::Labelled => Ok(Alone::Value),
         };
     }
     match unit_after_number(text, read_as) {
@@ -182,8 +203,10 @@ fn read_values(
     let mut values: Vec<(Expression, usize)> = Vec::new();
     let mut opening = opening;
     let mut label = label.map(str::to_owned);
+    let signed = label.as_deref().is_some_and(|label| lead_of(label) == Lead::Unknown);
     loop {
         let (mut expression, rest) = read_value(&opening, read_as)?;
+        expression.signed = signed;
         let own = label.take().unwrap_or_else(|| std::mem::take(&mut opening.label));
         let own = Some(own.trim().to_owned()).filter(|own| !own.is_empty());
         expression.label = own.or_else(|| values.last().and_then(|(before, _)| before.label.clone()));
@@ -197,8 +220,9 @@ fn read_values(
         let start = values.last().map_or(0, |(_, end)| *end);
         if let Some(next) = next_in_list(rest)? {
             check_list(opening.rest, rest, &next, &expression, read_as)?;
-            let end = text.len() - rest.len();
-            expression.written = text.get(start..end).unwrap_or_default().to_owned();
+            // The brackets before the joining word belong to this value; their marks are white space.
+            let end = text.len() - rest.trim_start().len();
+            text.get(start..end).unwrap_or_default().clone_into(&mut expression.written);
             values.push((expression, end));
             if values.len() > super::MOST_VALUES {
                 return Err(QuantityFault::SeveralValues);
@@ -207,14 +231,14 @@ fn read_values(
             continue;
         }
         read_leftover(rest, &mut expression, before, read_as)?;
-        expression.written = text.get(start..).unwrap_or_default().to_owned();
+        text.get(start..).unwrap_or_default().clone_into(&mut expression.written);
         values.push((expression, text.len()));
         return Ok(values);
     }
 }
 
 /// Words between the values of a list; folded.
-const JOINERS: [&str; 21] = [
+pub(super) const JOINERS: [&str; 21] = [
     "and",
     "und",
     "et",
@@ -241,6 +265,11 @@ const JOINERS: [&str; 21] = [
 /// The opening of the value that follows `/`, `and` or the like.
 fn next_in_list(rest: &str) -> Result<Option<Opening<'_>>, QuantityFault> {
     let rest = rest.trim_start();
+    // `1.3 E -5` is a number with spaces in it.
+    let after = rest.trim_start_matches(['e', 'E']).trim_start();
+    if rest.starts_with(['e', 'E']) && after.starts_with(['-', '+']) {
+        return Ok(None);
+    }
     let after = rest
         .strip_prefix(['/', '&'])
         .or_else(|| JOINERS.iter().find_map(|joiner| strip_phrase(rest, joiner)));
@@ -268,8 +297,10 @@ fn check_list(
     read_as: ReadAs,
 ) -> Result<(), QuantityFault> {
     let between = rest.trim_start();
+    let bracketed = rest.len() > between.len()
+        && rest.get(..rest.len() - between.len()).is_some_and(|gap| gap.contains(MARK));
     let first = first.get(..first.len() - rest.len()).unwrap_or_default();
-    if between.starts_with('/') && is_integer(first) && starts_with_integer(next.rest) {
+    if between.starts_with('/') && !bracketed && is_integer(first) && starts_with_integer(next.rest) {
         return Err(QuantityFault::SeveralValues);
     }
     let next_unit = unit_after_number(next.rest, read_as);
@@ -296,56 +327,4 @@ pub(super) fn is_integer(text: &str) -> bool {
 pub(super) fn starts_with_integer(text: &str) -> bool {
     let after = text.trim_start().trim_start_matches(|character: char| character.is_ascii_digit());
     after.len() < text.trim_start().len() && !after.starts_with(['.', ','])
-}
-
-/// What follows the value and its unit: a remark, a misspelt unit, or a second number.
-fn read_leftover(
-    rest: &str,
-    expression: &mut Expression,
-    before: Before,
-    read_as: ReadAs,
-) -> Result<(), QuantityFault> {
-    // Asterisks point to footnotes.
-    let rest = rest
-        .trim_matches(|character: char| character.is_whitespace() || matches!(character, '.' | '*' | '†'));
-    if rest.is_empty() {
-        return Ok(());
-    }
-    let has_digit = |text: &str| text.contains(|character: char| character.is_ascii_digit());
-    if !rest.starts_with(char::is_alphabetic) {
-        return Err(if has_digit(rest) {
-            QuantityFault::SeveralValues
-        } else {
-            QuantityFault::UnknownUnit(rest.to_owned())
-        });
-    }
-    let word = rest.split_whitespace().next().unwrap_or(rest);
-    let known = starts_remark(word);
-    if hides_a_value(rest, read_as) {
-        return Err(QuantityFault::SeveralValues);
-    }
-    let bare = read_as.dimension == Dimension::Dimensionless;
-    let readable = known || (bare && before == Before::NoValue && !has_digit(word));
-    if readable || expression.unit.is_some() {
-        expression.remarks.push(rest.replace(MARK, " "));
-        return Ok(());
-    }
-    Err(if bare { QuantityFault::SeveralValues } else { QuantityFault::UnknownUnit(word.to_owned()) })
-}
-
-/// Whether a remark goes on with another value: `4.2 measured and 4.6 calculated`.
-fn hides_a_value(remark: &str, read_as: ReadAs) -> bool {
-    let words: Vec<(usize, &str)> = remark
-        .split_whitespace()
-        .map(|word| (word.as_ptr() as usize - remark.as_ptr() as usize, word))
-        .collect();
-    words.iter().any(|(start, word)| {
-        let joins = *word == "/" || JOINERS.iter().any(|joiner| strip_phrase(word, joiner) == Some(""));
-        let after = remark.get(start + word.len()..).unwrap_or_default();
-        let opening = read_opening(after);
-        joins && starts_number(opening.rest) && opening.label.is_empty() && {
-            let unit = unit_after_number(opening.rest, read_as);
-            unit.is_none_or(|unit| unit.dimension() == read_as.dimension)
-        }
-    })
 }

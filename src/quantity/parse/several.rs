@@ -7,8 +7,10 @@
 use super::brackets::{Bracket, MARK, Shape, take_brackets};
 use super::expression::Expression;
 use super::number::{read_number, starts_number};
+use super::qualifier::{strip_phrase, take_qualifier};
 use super::segment::{
     Before, Segment, is_integer, is_year_like, read_segment, segments, starts_with_integer, sums_up,
+    unit_after_number,
 };
 use super::units::parse_unit_of;
 use super::value::{read_opening, read_value, take_plus_minus};
@@ -36,6 +38,13 @@ pub(super) fn read_all(text: &str, read_as: ReadAs) -> Result<Vec<Expression>, Q
     if is_missing_number(outside) {
         return Err(QuantityFault::NoValue);
     }
+    // `> water solubility (0.5 mg/L)`, `< LOQ (0.1 mg/L)`: the sign is that of the number.
+    let sign = take_qualifier(outside).and_then(|(qualifier, _)| qualifier.sign());
+    let inside = match sign {
+        Some(_) if !starts_number(&inside) => return Err(fault),
+        Some(sign) => format!("{sign} {inside}"),
+        None => inside,
+    };
     let label = outside.ends_with(['=', ':']);
     match read_body(&inside, brackets, read_as) {
         Ok(mut values) if label || values.iter().all(|value| names_unit_of(value, read_as.dimension)) => {
@@ -69,6 +78,8 @@ struct Found {
     groups: Vec<Group>,
     /// Whether the last thing found was a remark.
     remark_last: bool,
+    /// A time or temperature before the first value, which is wrong if no value follows.
+    wrong: Option<Unit>,
 }
 
 impl Found {
@@ -93,6 +104,7 @@ impl Found {
         match self.groups.last() {
             None => Before::NoValue,
             Some(_) if self.remark_last => Before::Remark,
+            Some(group) if group.value.signed => Before::Labelled,
             Some(group) if group.value.unit.is_some() => Before::ValueWithUnit,
             Some(_) => Before::BareValue,
         }
@@ -103,8 +115,20 @@ fn read_body(body: &str, brackets: Vec<Bracket>, read_as: ReadAs) -> Result<Vec<
     let mut brackets = brackets.into_iter();
     let mut found = Found::default();
     let mut last: Option<Segment<'_>> = None;
-    for segment in segments(body) {
+    let parts = segments(body);
+    let several_parts = parts.len() > 1;
+    for segment in parts {
         let state = found.state();
+        if several_parts && state == Before::NoValue && found.wrong.is_none() {
+            found.wrong = time_or_temperature(segment.text, read_as);
+            if found.wrong.is_some() {
+                found.remark(segment.text);
+                for bracket in brackets.by_ref().take(marks(segment.text)) {
+                    found.remark(&bracket.text);
+                }
+                continue;
+            }
+        }
         let values = read_segment(segment, state, read_as)?;
         if values.is_empty() {
             found.remark(segment.text);
@@ -129,7 +153,7 @@ fn read_body(body: &str, brackets: Vec<Bracket>, read_as: ReadAs) -> Result<Vec<
             found.remark_last = false;
             found.groups.push(Group { value, after: Vec::new() });
             for bracket in brackets.by_ref().take(count) {
-                take_bracket(&mut found, bracket, read_as)?;
+                take_bracket(&mut found, &bracket, read_as)?;
             }
             if found.groups.len() > MOST_VALUES {
                 return Err(QuantityFault::SeveralValues);
@@ -138,6 +162,14 @@ fn read_body(body: &str, brackets: Vec<Bracket>, read_as: ReadAs) -> Result<Vec<
         last = Some(segment);
     }
     settle(found, read_as)
+}
+
+/// `96 h; 1.2 mg/L`: the unit of a duration or temperature that stands before the value.
+fn time_or_temperature(text: &str, read_as: ReadAs) -> Option<Unit> {
+    let opening = read_opening(text);
+    let unit = unit_after_number(opening.rest, read_as).filter(|_| opening.label.is_empty())?;
+    let beside = matches!(unit.dimension(), Dimension::Time | Dimension::Temperature);
+    (beside && unit.dimension() != read_as.dimension).then_some(unit)
 }
 
 fn marks(text: &str) -> usize {
@@ -191,9 +223,24 @@ fn inherit_label(
     Ok(())
 }
 
-/// What a bracket after a value is: its SD, its unit, its range, or a remark.
-fn take_bracket(found: &mut Found, bracket: Bracket, read_as: ReadAs) -> Result<(), QuantityFault> {
-    let Bracket { text, shape } = bracket;
+/// What the parts of a bracket after a value are.
+fn take_bracket(found: &mut Found, bracket: &Bracket, read_as: ReadAs) -> Result<(), QuantityFault> {
+    for part in segments(&bracket.text) {
+        let text = part.text.trim();
+        if !text.is_empty() {
+            take_part_of_bracket(found, text.to_owned(), bracket.shape, read_as)?;
+        }
+    }
+    Ok(())
+}
+
+/// The SD of a value, its unit, its range, or a remark.
+fn take_part_of_bracket(
+    found: &mut Found,
+    text: String,
+    shape: Shape,
+    read_as: ReadAs,
+) -> Result<(), QuantityFault> {
     let Some(group) = found.groups.last_mut() else {
         return Ok(());
     };
@@ -240,7 +287,7 @@ fn value_in_bracket(text: &str, shape: Shape, read_as: ReadAs) -> Result<Option<
         ["range", "spanne", "bereich", "plage", "rango", "intervallo", "bereik", "範囲", "范围"];
     let text = RANGE
         .iter()
-        .find_map(|word| super::qualifier::strip_phrase(text, word))
+        .find_map(|word| strip_phrase(text, word))
         .map_or(text, |rest| rest.trim_start_matches([':', '=', ' ']));
     let opening = read_opening(text);
     if !opening.label.is_empty() || !starts_number(opening.rest) || is_year_like(text) {
@@ -264,7 +311,7 @@ fn value_in_bracket(text: &str, shape: Shape, read_as: ReadAs) -> Result<Option<
 
 /// Units and remarks that count for more than the value they stand beside.
 fn settle(found: Found, read_as: ReadAs) -> Result<Vec<Expression>, QuantityFault> {
-    let Found { before, groups, .. } = found;
+    let Found { before, groups, wrong, .. } = found;
     let several = groups.len() > 1;
     let last = groups.len().saturating_sub(1);
     let only_the_last_has_remarks =
@@ -289,7 +336,7 @@ fn settle(found: Found, read_as: ReadAs) -> Result<Vec<Expression>, QuantityFaul
     let units_differ = values.iter().any(|value| value.unit.is_none())
         && values.iter().any(|value| value.unit.is_some_and(|unit| unit != read_as.default_unit));
     match values.as_slice() {
-        [] => Err(QuantityFault::NoNumber),
+        [] => Err(wrong.map_or(QuantityFault::NoNumber, QuantityFault::WrongDimension)),
         // `12 µg/L; 15` in a column of mg/L: nobody knows what the second is in.
         _ if units_differ => Err(QuantityFault::SeveralValues),
         _ => Ok(values),

@@ -36,7 +36,7 @@ fn push_tidied(plain: &mut String, character: char, next: Option<char>, raised: 
         // Soft hyphen, zero-width spaces and joiners, marks of direction, byte order mark.
         '\u{AD}' | '\u{200B}'..='\u{200F}' | '\u{202A}'..='\u{202E}' | '\u{2060}' | '\u{FEFF}' => {}
         '\u{2010}'..='\u{2015}' | '\u{2212}' | '\u{FE58}' | '\u{FE63}' | '\u{2043}' | '\u{2D7}' => {
-            plain.push('-')
+            plain.push('-');
         }
         // The mark of a long vowel, where it stands for a dash.
         'ー' | 'ｰ'

@@ -60,7 +60,7 @@ pub(super) fn take_unit(text: &str, dimension: Dimension) -> Option<(Unit, &str)
     let text = text.trim_start();
     unit_ends(text).into_iter().rev().find_map(|end| {
         let (word, rest) = text.split_at_checked(end)?;
-        parse_unit_of(word, dimension).map(|unit| (unit, rest))
+        parse_unit_of(word, dimension).filter(|_| !is_inverted(rest)).map(|unit| (unit, rest))
     })
 }
 
@@ -89,6 +89,14 @@ fn unit_ends(text: &str) -> Vec<usize> {
     }
     ends.push(text.len());
     ends
+}
+
+/// `0.02 d-1` is a rate.
+fn is_inverted(rest: &str) -> bool {
+    let rest = rest.strip_prefix('^').unwrap_or(rest);
+    rest.strip_prefix("-1").is_some_and(|after| {
+        !after.starts_with(|next: char| next.is_ascii_digit() || next == '.' || next == ',')
+    })
 }
 
 /// `45 d/60 d`: the stroke parts two values and belongs to no unit.
@@ -197,6 +205,8 @@ mod tests {
             ("日以上", Dimension::Time, Some((Unit::Day, "以上"))),
             ("mg L-1 water", Dimension::Concentration, Some((Unit::MilligramPerLitre, " water"))),
             ("dogs", Dimension::Time, None),
+            ("d-1", Dimension::Time, None),
+            ("d-12 d", Dimension::Time, Some((Unit::Day, "-12 d"))),
         ] {
             assert_eq!(take_unit(text, dimension), taken, "{text}");
         }

@@ -3,6 +3,7 @@
 use super::expression::{End, Expression};
 use super::number::{read_number, read_power, starts_number};
 use super::qualifier::{Qualifier, strip_phrase, take_qualifier, take_qualifier_after};
+use super::range::read_upper_end;
 use super::units::take_unit;
 use super::{QuantityFault, ReadAs, Scale};
 use crate::quantity::{Bound, Dimension, Unit};
@@ -13,15 +14,15 @@ pub(super) struct Opening<'text> {
     /// Words that are no qualifier.
     pub(super) label: String,
     pub(super) qualifier: Qualifier,
-    approximate: bool,
-    frame: Frame,
+    pub(super) approximate: bool,
+    pub(super) frame: Frame,
     /// From the first number on.
     pub(super) rest: &'text str,
 }
 
 /// A word before the number that lets a second end follow.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
-enum Frame {
+pub(super) enum Frame {
     None,
     From,
     Between,
@@ -69,16 +70,13 @@ pub(super) fn read_opening(text: &str) -> Opening<'_> {
 }
 
 /// A number, and its unit where its form says it: a power of ten whose exponent was taken.
-struct Number {
-    value: f64,
-    unit: Option<Unit>,
+pub(super) struct Number {
+    pub(super) value: f64,
+    pub(super) unit: Option<Unit>,
 }
 
 /// Where a logarithm is asked for, `10^4.5` is the logarithm 4.5.
-fn read_measure<'text>(
-    text: &'text str,
-    read_as: ReadAs,
-) -> Result<Option<(Number, &'text str)>, QuantityFault> {
+pub(super) fn read_measure(text: &str, read_as: ReadAs) -> Result<Option<(Number, &str)>, QuantityFault> {
     let power = read_power(text, read_as.decimal).filter(|(_, rest)| !rest.starts_with(is_decimal_sign));
     match (power, read_as.scale) {
         (Some((exponent, rest)), Scale::Logarithm) => {
@@ -160,7 +158,7 @@ fn read_plus_minus<'text>(
     Ok(after)
 }
 
-fn unit_of(rest: &str, read_as: ReadAs) -> (Option<Unit>, &str) {
+pub(super) fn unit_of(rest: &str, read_as: ReadAs) -> (Option<Unit>, &str) {
     // A lone dash after a number parts a range and names no unit.
     match take_unit(rest, read_as.dimension) {
         Some((unit, after)) if unit != Unit::One || !rest.trim_start().starts_with('-') => {
@@ -181,7 +179,18 @@ fn goes_on_with_a_word(rest: &str, opening: &Opening<'_>, read_as: ReadAs) -> bo
         })
     };
     let is_no_unit = read_as.dimension != Dimension::Time;
+    // The accent tells it from the unit.
+    let accented = rest.starts_with(['à', 'À']) && word("a");
+    let of_days = |after: &str| {
+        let unit_word = after.trim_start_matches(|character: char| !character.is_alphabetic());
+        ["d\u{ED}a", "dia", "seman", "mes", "a\u{F1}o", "hora", "giorn", "settiman", "ann", "ore"]
+            .iter()
+            .any(|start| unit_word.starts_with(start))
+    };
+    let romance = word("a") && strip_phrase(rest, "a").is_some_and(of_days);
     word("to")
+        || accented
+        || romance
         || (word("a") && (is_no_unit || opening.frame == Frame::From))
         || (word("y") && (is_no_unit || opening.frame == Frame::Between))
 }
@@ -216,104 +225,6 @@ fn high_bound(qualifier: Qualifier, number: f64) -> Result<Bound, QuantityFault>
             Ok(Bound::Included(number))
         }
         Qualifier::Above | Qualifier::AtLeast => Err(QuantityFault::BadRange),
-    }
-}
-
-struct UpperEnd<'text> {
-    number: f64,
-    unit: Option<Unit>,
-    qualifier: Qualifier,
-    approximate: bool,
-    rest: &'text str,
-}
-
-/// Words between the ends of a range; folded.
-const TO: [&str; 14] =
-    ["to", "bis", "jusqu'a", "hasta", "tot", "fino a", "al", "~", "から", "至", "到", "乃至", "ないし", "a"];
-/// Words between the ends of a range after `between`, or after a qualifier; folded.
-const AND: [&str; 11] = ["and", "und", "et", "y", "e", "en", "と", "和", "与", "與", "及"];
-
-/// `- 4.8 d`, `to < 5`, `and 5` after `between`, or a second qualifier after a first.
-fn read_upper_end<'text>(
-    text: &'text str,
-    opening: &Opening<'_>,
-    read_as: ReadAs,
-) -> Result<Option<UpperEnd<'text>>, QuantityFault> {
-    let text = text.trim_start();
-    let parted = ["...", "..", "-", "~", "÷"]
-        .iter()
-        .find_map(|sign| text.strip_prefix(sign))
-        .or_else(|| TO.iter().find_map(|word| strip_phrase(text, word)));
-    let joined = AND.iter().find_map(|word| strip_phrase(text, word));
-    let opened =
-        opening.frame == Frame::Between || matches!(opening.qualifier, Qualifier::Above | Qualifier::AtLeast);
-    let second_qualifier = opened && text.starts_with(['<', '≤']);
-    let low_end_before = take_qualifier_after(text).filter(|(qualifier, after)| {
-        matches!(qualifier, Qualifier::AtLeast | Qualifier::Above)
-            && starts_number(after.trim_start_matches([' ', ',', '~', '-']))
-    });
-    let after = match (parted, joined) {
-        (Some(after), _) => after,
-        (None, Some(after)) if opened => after,
-        (None, Some(after)) if says_between_at_its_end(after) => after,
-        (None, _) if second_qualifier => text,
-        // `4以上5未満`: a qualifier follows each end.
-        (None, _) if low_end_before.is_some() && opening.qualifier == Qualifier::Exactly => {
-            return read_qualified_ends(text, read_as);
-        }
-        (None, _) => return Ok(None),
-    };
-    let upper = read_opening(after);
-    if !upper.label.is_empty() || !starts_number(upper.rest) {
-        return Ok(None);
-    }
-    let Some((number, rest)) = read_measure(upper.rest, read_as)? else {
-        return Ok(None);
-    };
-    let (unit, rest) = unit_of(rest, read_as);
-    // `4,7 a 25 °C` says where it was measured.
-    let by_a_word = !text.starts_with(['.', '-', '~', '÷', '<', '≤']);
-    if by_a_word && unit.is_some_and(|unit| unit.dimension() != read_as.dimension) {
-        return Ok(None);
-    }
-    let rest = ["まで", "之间", "之間", "の間"]
-        .iter()
-        .find_map(|word| rest.trim_start().strip_prefix(word))
-        .unwrap_or(rest);
-    Ok(Some(UpperEnd {
-        number: number.value,
-        unit: unit.or(number.unit),
-        qualifier: upper.qualifier,
-        approximate: upper.approximate,
-        rest,
-    }))
-}
-
-/// `4.2と4.8の間`.
-fn says_between_at_its_end(text: &str) -> bool {
-    let end = text.trim_end();
-    ["の間", "之间", "之間"].iter().any(|word| end.ends_with(word))
-}
-
-fn read_qualified_ends<'text>(
-    text: &'text str,
-    read_as: ReadAs,
-) -> Result<Option<UpperEnd<'text>>, QuantityFault> {
-    let Some((Qualifier::AtLeast, after)) = take_qualifier_after(text) else {
-        return Err(QuantityFault::SeveralValues);
-    };
-    let after = after.trim_start_matches([' ', ',', '~', '-']);
-    let (number, rest) = read_measure(after, read_as)?.ok_or(QuantityFault::NoNumber)?;
-    let (unit, rest) = unit_of(rest, read_as);
-    match take_qualifier_after(rest) {
-        Some((qualifier @ (Qualifier::Below | Qualifier::AtMost), rest)) => Ok(Some(UpperEnd {
-            number: number.value,
-            unit: unit.or(number.unit),
-            qualifier,
-            approximate: false,
-            rest,
-        })),
-        _ => Err(QuantityFault::SeveralValues),
     }
 }
 

@@ -7,14 +7,14 @@ use std::sync::LazyLock;
 
 use super::fold::plain_words;
 use lists::{
-    DENIALS, LABELS, MISSING, MISSING_NUMBER, NUMBERED, OTHER_KINDS, REMARK_STARTS, VALUE_WORDS,
-    VALUE_WORDS_WITHIN,
+    DENIALS, LABELS, MISSING, MISSING_NUMBER, NUMBERED, OTHER_KINDS, RATIO_WORDS, REMARK_STARTS, SPANS,
+    TESTS, VALUE_WORDS, VALUE_WORDS_WITHIN,
 };
 
 type Words = LazyLock<BTreeSet<&'static str>>;
 
-static MISSING_WORDS: Words = LazyLock::new(|| words_of(MISSING));
-static MISSING_NUMBER_WORDS: Words = LazyLock::new(|| words_of(MISSING_NUMBER));
+static MISSING_PHRASES: LazyLock<BTreeSet<String>> = LazyLock::new(|| phrases_of(MISSING));
+static MISSING_NUMBER_PHRASES: LazyLock<BTreeSet<String>> = LazyLock::new(|| phrases_of(MISSING_NUMBER));
 static VALUES: Words = LazyLock::new(|| words_of(VALUE_WORDS));
 static STARTS: Words = LazyLock::new(|| words_of(REMARK_STARTS));
 static LABEL_WORDS: Words = LazyLock::new(|| words_of(LABELS));
@@ -25,17 +25,26 @@ fn words_of(lines: &[&'static str]) -> BTreeSet<&'static str> {
     lines.iter().flat_map(|line| line.split(' ')).collect()
 }
 
+fn phrases_of(lines: &[&str]) -> BTreeSet<String> {
+    lines.iter().flat_map(|line| line.split('|')).map(joined).collect()
+}
+
+/// The folded words of a text without spaces between.
+fn joined(text: &str) -> String {
+    plain_words(text).split(' ').collect()
+}
+
 /// Whether a text is empty or one of the words for a missing value.
 pub fn is_missing(text: &str) -> bool {
-    is_one_of(text, &MISSING_WORDS)
+    is_one_of(text, &MISSING_PHRASES)
 }
 
 /// Whether a text is empty or stands for a missing value where a number is asked for.
 pub(super) fn is_missing_number(text: &str) -> bool {
-    is_missing(text) || is_one_of(text, &MISSING_NUMBER_WORDS)
+    is_missing(text) || is_one_of(text, &MISSING_NUMBER_PHRASES)
 }
 
-fn is_one_of(text: &str, words: &BTreeSet<&str>) -> bool {
+fn is_one_of(text: &str, phrases: &BTreeSet<String>) -> bool {
     // Long enough for every phrase, in the widest script.
     const LONGEST_PHRASE: usize = 90;
     if text.len() > LONGEST_PHRASE {
@@ -48,8 +57,8 @@ fn is_one_of(text: &str, words: &BTreeSet<&str>) -> bool {
                 || matches!(character, '-' | '–' | '—' | '−' | '?' | '.' | '/' | '_' | '*' | '#' | '(' | ')')
         });
     }
-    let joined: String = plain_words(text).split(' ').collect();
-    joined.is_empty() || words.contains(joined.as_str())
+    let joined = joined(text);
+    joined.is_empty() || phrases.contains(&joined)
 }
 
 /// Whether a text holds a word that stands for a value without a number.
@@ -66,6 +75,22 @@ pub(super) fn starts_remark(word: &str) -> bool {
     STARTS.contains(first)
         // `OECD117`, `pH7`: the number is the word's.
         || STARTS.contains(first.trim_end_matches(|character: char| character.is_ascii_digit()))
+}
+
+/// Whether the words before a time end in one for its length: `after 28 d` is no half-life.
+pub(super) fn ends_as_a_span(label: &str) -> bool {
+    let plain = plain_words(label);
+    plain.split(' ').next_back().is_some_and(|word| SPANS.split(' ').any(|span| span == word))
+}
+
+/// Whether a word after a bare number makes it a part of something: `1 in 100`.
+pub(super) fn is_ratio_word(word: &str) -> bool {
+    RATIO_WORDS.split(' ').any(|known| known == plain_words(word))
+}
+
+/// Whether a word after a time makes it the length of a test: `28 d study`.
+pub(super) fn names_a_test(word: &str) -> bool {
+    TESTS.split(' ').any(|known| known == plain_words(word))
 }
 
 /// Whether the words before a number make it the number of a guideline, a pH or the like.

@@ -1,179 +1,22 @@
 //! One cell as text or as a quantity, with its faults in words of the field.
 
+use std::sync::LazyLock;
+
+use regex::Regex;
+
+use super::pattern::fixed;
 use crate::columns::Column;
 use crate::fault::{CellFaultKind, nearest};
 use crate::quantity::{
-    Bound, Date, Dimension, Quantity, QuantityFault, ReadAs, Scale, Unit, is_missing, parse_quantities,
-    quantity_of_number, tidy, unit_words,
+    Bound, DAYS_PER_MONTH, Date, Dimension, Quantity, QuantityFault, ReadAs, Scale, Unit, is_missing,
+    parse_quantities, quantity_of_number, tidy, unit_words,
 };
 use crate::substance::Property;
 use crate::substance::parse::Said;
+pub(super) use crate::substance::parse::expected::Expected;
+use crate::substance::parse::expected::Sign;
 use crate::substance::parse::remark::{Degraded, folded};
 use crate::workbook::CellContent;
-
-/// What a numeric column promises.
-#[derive(Debug, Clone, Copy)]
-pub(super) struct Expected {
-    what: &'static str,
-    example: &'static str,
-    bound_example: &'static str,
-    dimension: Dimension,
-    sign: Sign,
-    sensible: (f64, f64),
-    /// The property, where it is one.
-    property: Option<Property>,
-}
-
-/// Which numbers a field can have.
-#[derive(Debug, Clone, Copy, PartialEq, Eq)]
-enum Sign {
-    Any,
-    NotNegative,
-    Positive,
-}
-
-impl Expected {
-    pub(super) const TONNAGE: Self = Self {
-        what: "tonnes per year",
-        example: "25 t/a",
-        bound_example: "< 1 t/a",
-        dimension: Dimension::Tonnage,
-        sign: Sign::NotNegative,
-        sensible: (0.0, 1e12),
-        property: None,
-    };
-
-    pub(super) const fn percent(what: &'static str, example: &'static str) -> Self {
-        Self {
-            what,
-            example,
-            bound_example: "< 0.1 %",
-            dimension: Dimension::Percent,
-            sign: Sign::NotNegative,
-            sensible: (0.0, 100.0),
-            property: None,
-        }
-    }
-
-    pub(super) const fn temperature(what: &'static str) -> Self {
-        Self {
-            what,
-            example: "20 °C",
-            bound_example: "< 20 °C",
-            dimension: Dimension::Temperature,
-            sign: Sign::Any,
-            sensible: (-273.15, 1e4),
-            property: None,
-        }
-    }
-
-    /// A bare number between two ends: a pH, a standard deviation.
-    pub(super) const fn bare(what: &'static str, example: &'static str, sensible: (f64, f64)) -> Self {
-        Self {
-            what,
-            example,
-            bound_example: example,
-            dimension: Dimension::Dimensionless,
-            sign: Sign::NotNegative,
-            sensible,
-            property: None,
-        }
-    }
-
-    pub(super) fn property(property: Property) -> Self {
-        let dimension = property.dimension();
-        let (example, bound_example) = examples(dimension);
-        // Far outside what any substance has; catches a Kow where its logarithm belongs, and lost decimal separators.
-        let sensible = match property {
-            Property::LogKow | Property::LogD => (-15.0, 20.0),
-            Property::LogKoa => (-10.0, 30.0),
-            Property::PkaAcid | Property::PkaBase => (-60.0, 60.0),
-            Property::MeltingPoint | Property::BoilingPoint => (-273.15, 1e4),
-            Property::WaterSolubility
-            | Property::VapourPressure
-            | Property::HenryConstant
-            | Property::Koc
-            | Property::Bcf
-            | Property::Baf
-            | Property::Bmf
-            | Property::Tmf
-            | Property::HalfLife(_)
-            | Property::HydrolysisHalfLife
-            | Property::PhotolysisHalfLife
-            | Property::DissipationHalfLife
-            | Property::LongTermToxicity
-            | Property::AcuteToxicity
-            | Property::MolarMass => (0.0, 1e15),
-        };
-        Self {
-            what: property.title(),
-            example,
-            bound_example,
-            dimension,
-            sign: if property.may_be_negative() { Sign::Any } else { Sign::Positive },
-            sensible,
-            property: Some(property),
-        }
-    }
-
-    /// Whether logarithms are expected; a column of log Koc says so by its unit.
-    fn scale(self, default_unit: Unit) -> Scale {
-        let logarithmic = self.property.is_some_and(Property::is_logarithmic);
-        if logarithmic || default_unit == Unit::LogLitrePerKilogram {
-            Scale::Logarithm
-        } else {
-            Scale::Linear
-        }
-    }
-
-    /// How to write the value itself where its logarithm is expected.
-    fn unlogged(self) -> Option<&'static str> {
-        match self.property? {
-            Property::LogKow => Some("Kow = 50000"),
-            Property::LogKoa => Some("Koa = 5E8"),
-            Property::LogD => Some("D = 50000"),
-            Property::Koc => Some("Koc = 1500"),
-            Property::Bcf => Some("BCF = 1500"),
-            Property::Baf => Some("BAF = 1500"),
-            _ => None,
-        }
-    }
-
-    /// How to write the logarithm where the value itself is expected, or where it is not clear which is meant.
-    fn logged(self) -> Option<&'static str> {
-        match self.property? {
-            Property::LogKow => Some("log Kow = 4.5"),
-            Property::LogKoa => Some("log Koa = 8.7"),
-            Property::LogD => Some("log D = 4.5"),
-            Property::Koc => Some("log Koc = 3.2"),
-            Property::Bcf => Some("log BCF = 3.2"),
-            Property::Baf => Some("log BAF = 3.2"),
-            Property::Bmf => Some("log BMF = -0.3"),
-            Property::Tmf => Some("log TMF = -0.3"),
-            _ => None,
-        }
-    }
-
-    fn not_a(self) -> CellFaultKind {
-        CellFaultKind::NotA { what: self.what, example: self.example }
-    }
-}
-
-fn examples(dimension: Dimension) -> (&'static str, &'static str) {
-    match dimension {
-        Dimension::Dimensionless => ("4.5", "> 6"),
-        Dimension::Time => ("40 d", "< 1 d"),
-        Dimension::Concentration => ("0.5 mg/L", "< 0.01 mg/L"),
-        Dimension::VolumePerMass => ("1500 L/kg", "< 10 L/kg"),
-        Dimension::Pressure => ("0.02 Pa", "< 1E-6 Pa"),
-        Dimension::Temperature => ("80 °C", "< 20 °C"),
-        Dimension::MolarMass => ("250 g/mol", "> 1000 g/mol"),
-        Dimension::Henry => ("1.5 Pa m3/mol", "< 0.01 Pa m3/mol"),
-        Dimension::Percent => ("12 %", "< 0.1 %"),
-        Dimension::Tonnage => ("25 t/a", "< 1 t/a"),
-        Dimension::MolarEnergy => ("65 kJ/mol", "< 65 kJ/mol"),
-    }
-}
 
 /// A quantity and what the remarks beside it say.
 pub(super) type Read = (Quantity, Said);
@@ -205,6 +48,7 @@ pub(super) fn read_quantities(
         CellContent::Number(number) => {
             quantity_of_number(*number, read_as).map(|quantity| vec![(quantity, Said::default())])
         }
+        CellContent::Text(text) if speaks_of_other_toxicity(text, expected) => return Err(expected.not_a()),
         CellContent::Text(text) => parse_quantities(text, read_as).map(|values| {
             let said = |remarks: &[String]| Said::in_remarks(remarks);
             values.into_iter().map(|parsed| (parsed.quantity, said(&parsed.remarks))).collect()
@@ -312,12 +156,31 @@ fn check_words(
     if quantity.unit == Unit::Jour && !is_french(&column.header) {
         return Err(CellFaultKind::DaysOrYears);
     }
+    // `2019年` is a date.
+    let days_a_year = 12.0 * DAYS_PER_MONTH;
+    let dates = 1900.0 * days_a_year..2100.0 * days_a_year;
+    if quantity.unit == Unit::Year && quantity.single().is_some_and(|days| dates.contains(&days)) {
+        return Err(expected.not_a());
+    }
     // `28 d (no degradation)` is the length of a test; `> 365 d (stable)` is a half-life.
     let ends = quantity.interval.high() != Bound::Unbounded;
     if expected.dimension == Dimension::Time && said.degraded == Degraded::Said && ends {
         return Err(CellFaultKind::WordsAgainstNumber);
     }
     Ok(())
+}
+
+/// Whether a cell of long-term toxicity names an acute value, or the reverse: `LC50: 0.3 mg/L` is no NOEC.
+fn speaks_of_other_toxicity(text: &str, expected: Expected) -> bool {
+    static ACUTE: LazyLock<Regex> =
+        LazyLock::new(|| fixed(r"\b(?:l|e|er|eb|ey|i)c ?50\b|\bl d ?50\b|\bacute|\bakut"));
+    static LONG_TERM: LazyLock<Regex> =
+        LazyLock::new(|| fixed(r"\b(?:noec|noel|loec|ec ?10|erc ?10)\b|\bchron|\blong term|\blangzeit"));
+    match expected.property {
+        Some(Property::LongTermToxicity) => ACUTE.is_match(&folded(text)),
+        Some(Property::AcuteToxicity) => LONG_TERM.is_match(&folded(text)),
+        _ => false,
+    }
 }
 
 /// Whether a header has a French word that no other language has.

@@ -16,8 +16,8 @@ pub(super) use reliability::in_words as reliability_in_words;
 
 use crate::substance::{Basis, Conditions, DegradationKind, Property};
 use words::{
-    CALCULATED, DISSIPATION, GUIDELINE, HYDROLYSIS, MEASURED, NO_DEGRADATION, NOT_MEASURED, NOT_ULTIMATE,
-    ORGANISM, PHOTOLYSIS, PRIMARY, ULTIMATE, VALUE_NAME,
+    CALCULATED, DISSIPATION, GUIDELINE, HYDROLYSIS, MEASURED, NO_DEGRADATION, NOT_MEASURED,
+    NOT_OF_DEGRADATION, NOT_ULTIMATE, ORGANISM, PHOTOLYSIS, PRIMARY, ULTIMATE, VALUE_NAME,
 };
 
 /// Basis and conditions as far as a text names them.
@@ -97,7 +97,8 @@ impl Said {
         if plain.is_empty() || VALUE_NAME.is_match(&plain) {
             return;
         }
-        if NO_DEGRADATION.is_match(&plain) || says_percentage(part, &plain) {
+        let against = NOT_OF_DEGRADATION.replace_all(&plain, " ");
+        if NO_DEGRADATION.is_match(&against) || says_percentage(part, &plain) {
             self.degraded = Degraded::Said;
         }
         let is_guideline = GUIDELINE.is_match(&plain);
@@ -227,7 +228,8 @@ fn parts(remark: &str) -> Vec<&str> {
     let mut parts = Vec::new();
     let mut start = 0;
     for (position, byte) in bytes.iter().enumerate() {
-        let in_number = bytes.get(position + 1).is_some_and(u8::is_ascii_digit);
+        let digit = |position: usize| bytes.get(position).is_some_and(u8::is_ascii_digit);
+        let in_number = digit(position + 1) && position.checked_sub(1).is_some_and(digit);
         if *byte == b';' || (*byte == b',' && !in_number) {
             parts.push(remark.get(start..position).unwrap_or_default().trim());
             start = position + 1;

@@ -1,5 +1,8 @@
 //! The one form in which spellings of units are compared.
 
+use std::collections::BTreeMap;
+use std::sync::LazyLock;
+
 use crate::quantity::parse::fold::{Plain, unaccented};
 
 /// Words and signs and the one they stand for; whole words of a unit only.
@@ -30,6 +33,10 @@ const SAME: &[(&str, &str)] = &[
     ("µmol", "umol micromol micromole micromoles mikromol 微摩尔"),
     ("/", "per pro je par por al 每 毎"),
 ];
+
+static BY_WORD: LazyLock<BTreeMap<&'static str, &'static str>> = LazyLock::new(|| {
+    SAME.iter().flat_map(|(same, others)| others.split(' ').map(move |other| (other, *same))).collect()
+});
 
 /// What stands for a year below a fraction stroke.
 const YEARS: &str = "a y yr year years annum jahr j an annee ano anno jaar 年 年間";
@@ -86,9 +93,7 @@ fn same_as<'word>(word: &'word str, before: &str) -> &'word str {
     if before.ends_with('/') && YEARS.split(' ').any(|year| year == word) {
         return "a";
     }
-    SAME.iter()
-        .find(|(_, others)| others.split(' ').any(|other| other == word))
-        .map_or(word, |(same, _)| same)
+    BY_WORD.get(word).copied().unwrap_or(word)
 }
 
 /// `mgl-1` is `mg/l`, `pam3mol-1` is `pam3/mol`.

@@ -64,15 +64,15 @@ pub(super) const SPELLINGS: &[(Unit, &str)] = &[
     (Unit::Millipascal, "millipascal 毫帕"),
     (
         Unit::Celsius,
-        "°c c degc °celsius celsius gradc gradcelsius degreescelsius degreec degreesc degresc degresce degrec degrescelsius gradosc gradoscelsius gradic gradicelsius gradenc gradencelsius 摄氏度 攝氏度 セ氏",
+        "°c c degc deg.c °celsius celsius gradc gradcelsius degreescelsius degreec degreesc degresc degresce degrec degrescelsius gradosc gradoscelsius gradic gradicelsius gradenc gradencelsius 摄氏度 攝氏度 セ氏",
     ),
     (Unit::Kelvin, "k kelvin °k 开尔文 ケルビン"),
     (Unit::Fahrenheit, "°f f degf fahrenheit gradfahrenheit 华氏度 華氏度"),
     (Unit::GramPerMole, "g/mol da dalton daltons u amu kg/kmol"),
     (Unit::KilogramPerMole, "kg/mol kda kilodalton kilodaltons"),
-    (Unit::PascalCubicMetrePerMole, "pam3/mol pa/(mol/m3) pa/mol/m3 m3pa/mol pa-m3/mol j/mol"),
+    (Unit::PascalCubicMetrePerMole, "pam3/mol pa/(mol/m3) pa/mol/m3 m3pa/mol pa-m3/mol pa.m3/mol j/mol"),
     (Unit::KilopascalCubicMetrePerMole, "kpam3/mol kpa-m3/mol m3kpa/mol"),
-    (Unit::AtmosphereCubicMetrePerMole, "atmm3/mol atm-m3/mol m3atm/mol m3-atm/mol"),
+    (Unit::AtmosphereCubicMetrePerMole, "atmm3/mol atm-m3/mol atm.m3/mol m3atm/mol m3-atm/mol"),
     (Unit::AtmosphereLitrePerMole, "atml/mol latm/mol l-atm/mol atm-l/mol"),
     (
         Unit::Percent,

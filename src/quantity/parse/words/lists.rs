@@ -1,33 +1,41 @@
 //! The lists behind [`words`](super): each word folded by `plain_words`, in English, German, French, Spanish, Italian,
 //! Dutch, Japanese and Chinese.
 
-/// Words for a missing value in any cell; spaces left out.
+/// Words for a missing value in any cell, parted by `|`; spaces, case and accents make no difference.
 pub(super) const MISSING: &[&str] = &[
-    "nd na nb nv nr ka null nil none tbd tba tbc unknown missing blank empty pending nodata nodataavailable",
-    "datanotavailable notavailable notdetermined nottested notmeasured notreported notapplicable notknown notstated notspecified",
-    "notrelevant novalue",
-    "unbekannt fehlt keine leer offen entfallt nichtbestimmt nichtverfugbar nichtanwendbar nichtbekannt nichtgemessen nichtgepruft",
-    "nichtermittelt nichtvorhanden keineangabe keineangaben keinedaten keinedatenverfugbar keinedatenvorhanden nichtrelevant keinwert",
-    "inconnu inconnue nondetermine nondeterminee nonmesure nonmesuree nondisponible noncommunique nonrenseigne nonrenseignee sansobjet",
-    "nonapplicable nonteste nonconnu aucunedonnee aucunedonneedisponible pasdedonnees pasdedonneesdisponibles donneenondisponible",
-    "donneesnondisponibles donneemanquante manquant vide nonspecifie nonindique pasdevaleur sansdonnees nonconcerne",
-    "desconocido desconocida nodisponible nodeterminado nodeterminada nomedido nomedida noaplicable noaplica noprocede sindatos",
-    "sindatosdisponibles nohaydatos nohaydatosdisponibles datonodisponible datosnodisponibles sininformacion noensayado noindicado",
-    "noespecificado noconocido ninguno ningundato faltante vacio",
-    "sconosciuto sconosciuta ignoto nondeterminato nondeterminata nonmisurato datonondisponible datinondisponibili nondisponibile",
-    "nonapplicabile nessundato nessundatodisponibile nontestato nonnoto nonriportato nonindicato nonspecificato mancante vuoto",
-    "onbekend nietbepaald nietbeschikbaar nietgemeten nietvantoepassing nvt geengegevens geengegevensbeschikbaar geendata nietbekend",
-    "nietgetest nietgerapporteerd nietopgegeven nietvermeld ontbreekt leeg geenwaarde geeninformatie",
-    "ー なし 無し データなし データ無し データがない データはない データなし該当なし 該当なし 該当せず 該当しない 不明 未測定 未試験 未実施 未定 未記入",
-    "未調査 未入手 情報なし 情報無し 測定せず 適用外 対象外 入手不可 非該当 空欄 利用可能なデータなし 知見なし 記載なし データ不足",
-    "无 無 无数据 無數據 无資料 無資料 无资料 暂无 暂无数据 暂无资料 未测定 未測試 未测试 未检测 不适用 不適用 未知 不详 不詳 没有数据 沒有數據",
-    "无可用数据 无相关数据 无信息 未提供 未报告 缺失 待定 待测 空白 无值 未测",
+    "nd|na|nb|nv|nr|ka|null|nil|none|tbd|tba|tbc|unknown|missing|blank|empty|pending|no data|no data available|data not available",
+    "not available|not determined|not tested|not measured|not reported|not applicable|not known|not stated|not specified|not relevant",
+    "no value",
+    "unbekannt|fehlt|keine|leer|offen|entfällt|nicht bestimmt|nicht verfügbar|nicht anwendbar|nicht bekannt|nicht gemessen",
+    "nicht geprüft|nicht ermittelt|nicht vorhanden|keine Angabe|keine Angaben|keine Daten|keine Daten verfügbar|keine Daten vorhanden",
+    "nicht relevant|kein Wert",
+    "inconnu|inconnue|non déterminé|non déterminée|non mesuré|non mesurée|non disponible|non communiqué|non renseigné|non renseignée",
+    "sans objet|non applicable|non testé|non connu|aucune donnée|aucune donnée disponible|pas de données|pas de données disponibles",
+    "donnée non disponible|données non disponibles|donnée manquante|manquant|vide|non spécifié|non indiqué|pas de valeur|sans données",
+    "non concerné",
+    "desconocido|desconocida|no disponible|no determinado|no determinada|no medido|no medida|no aplicable|no aplica|no procede",
+    "sin datos|sin datos disponibles|no hay datos|no hay datos disponibles|dato no disponible|datos no disponibles|sin información",
+    "no ensayado|no indicado|no especificado|no conocido|ninguno|ningún dato|faltante|vacío",
+    "sconosciuto|sconosciuta|ignoto|non determinato|non determinata|non misurato|dato non disponibile|dati non disponibili",
+    "non disponibile|non applicabile|nessun dato|nessun dato disponibile|non testato|non noto|non riportato|non indicato",
+    "non specificato|mancante|vuoto",
+    "onbekend|niet bepaald|niet beschikbaar|niet gemeten|niet van toepassing|nvt|geen gegevens|geen gegevens beschikbaar|geen data",
+    "niet bekend|niet getest|niet gerapporteerd|niet opgegeven|niet vermeld|ontbreekt|leeg|geen waarde",
+    "ー|なし|無し|データなし|データ無し|データがない|データはない|該当なし|該当データなし|該当せず|該当しない|不明|未測定|未試験|未実施|未定",
+    "未記入|未調査|未入手|測定せず|適用外|対象外|入手不可|非該当|空欄|利用可能なデータなし|知見なし|記載なし",
+    "无|無|无数据|無數據|无资料|無資料|暂无|暂无数据|暂无资料|未测定|未測試|未测试|未检测|不适用|不適用|未知|不详|不詳|没有数据|沒有數據",
+    "无可用数据|无相关数据|未提供|未报告|缺失|待定|待测|空白|无值|未测",
 ];
 
 /// Short forms that stand for a missing value where a number is asked for, and may be something else elsewhere (`NC` is a
-/// structure, `SD` a name).
-pub(super) const MISSING_NUMBER: &[&str] =
-    &["so nc ns sd si sr se nm ne nt nq ni nk nds npd dnd nvb nbk nbe np bd x xx xxx ナシ"];
+/// structure, `SD` a name), and words that settle nothing in cells of words.
+pub(super) const MISSING_NUMBER: &[&str] = &[
+    "so|nc|ns|sd|si|sr|se|nm|ne|nt|nq|ni|nk|nds|npd|dnd|nvb|nbk|nbe|np|bd|x|xx|xxx|ナシ",
+    "no information|no information available|data unavailable|unavailable|not found|data lacking|no data found|not analysed",
+    "not analyzed|data gap|nicht zutreffend|nicht angegeben|nicht untersucht|keine Information|keine Informationen",
+    "keine Daten bekannt|unzutreffend|aucune information|geen informatie|nessuna informazione|ningún resultado",
+    "情報なし|情報無し|データ不足|无信息",
+];
 
 /// Words that say something of a value but not how much; any of them may stand within a text.
 pub(super) const VALUE_WORDS: &[&str] = &[
@@ -47,12 +55,12 @@ pub(super) const VALUE_WORDS_WITHIN: &str = "不溶 可溶 易溶 難溶 难溶 
 /// Words after a bare number that are known to be remarks and no misspelt unit.
 pub(super) const REMARK_STARTS: &[&str] = &[
     "at in for by from as under with oecd eu ec epa iso astm din glp ph ww dw wet dry measured meas exp expt experimental calc",
-    "calculated computed est estimated predicted qsar fish lipid study primary ultimate per method test ref reference read report",
+    "calculated computed est estimated predicted qsar fish lipid study primary ultimate method test ref reference read report",
     "klimisch reliability mean median average approx unpublished literature value value based using see guideline kow koc",
     "bei für fur laut nach mit aus gemessen experimentell berechnet geschatzt berechn fisch studie messwert literatur methode mittelwert",
-    "a chez pour selon par mesure mesuree experimental experimentale calcule calculee estime estimee poisson etude methode valeur moyenne",
-    "en para segun por medido medida calculado calculada estimado estimada pez pescado estudio metodo promedio media valor",
-    "secondo per con misurato misurata sperimentale calcolato calcolata stimato stimata pesce studio metodo valore",
+    "a chez pour selon mesure mesuree experimental experimentale calcule calculee estime estimee poisson etude methode valeur moyenne",
+    "en para segun medido medida calculado calculada estimado estimada pez pescado estudio metodo promedio media valor",
+    "secondo con misurato misurata sperimentale calcolato calcolata stimato stimata pesce studio metodo valore",
     "bij voor volgens met gemeten experimenteel berekend geschat vis studie methode waarde gemiddeld",
 ];
 
@@ -68,7 +76,7 @@ pub(super) const NUMBERED: &str = concat!(
 pub(super) const LABELS: &[&str] = &[
     "log lg log10 logkow logpow logp logd logkoa logkoc logbcf logbaf logbmf logtmf lgkow lgpow lgp kow pow koa koc oc ow k p d kd doc",
     "bcf bcfk bcfss baf bmf tmf dt dt50 degt50 dt50s t1 t 1 2 t50 half life halflife lc lc50 ec ec50 ec10 ic50 erc50 l e c50 c 50 10 noec",
-    "noel pka pka1 pkb mw mm mp bp vp ws sw value values result mean average avg median ca the of at about measured exp experimental",
+    "noel pka pka1 pka2 pka3 pkb mw mm mp bp vp ws sw value values result mean average avg median ca the of at about measured exp experimental",
     "calc calculated estimated predicted est meas solubility water vapour vapor pressure melting point boiling molar mass henry constant",
     "halbwertszeit hwz wert ergebnis mittel mittelwert mittlere gemessen experimentell berechnet geschatzt loslichkeit dampfdruck",
     "schmelzpunkt siedepunkt molmasse sdp smp kp schmp temi demi vie temps valeur resultat moyenne mesure mesuree calcule calculee",
@@ -93,3 +101,18 @@ pub(super) const OTHER_KINDS: &[&str] = &[
     "duration dauer duree duracion durata duur exposure incubation testdauer versuchsdauer",
     "purity reinheit replicates ka",
 ];
+
+/// Words before a time that make it the length of something.
+pub(super) const SPANS: &str = concat!(
+    "after in within for during throughout nach innerhalb wahrend binnen apres en dans pendant sous tras despues durante dopo entro ",
+    "na gedurende"
+);
+
+/// Words between the parts of a ratio.
+pub(super) const RATIO_WORDS: &str = "in of from auf von sur en de su di op van";
+
+/// Words after a time that make it the length of a test.
+pub(super) const TESTS: &str = concat!(
+    "study studie test versuch exposure exposition incubation inkubation duration dauer essai etude ensayo estudio prova studio proef ",
+    "試験 试验 培养"
+);

@@ -89,7 +89,7 @@ pub(super) static GUIDELINE: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
         r"\boecd (tg |no |nr |guideline |test |test guideline |method |ligne directrice |richtlinie |richtlijn )?\d{3}[a-z]?\b|\boecd\d{3}[a-z]?\b|",
         r"\b(eu|ec|eg|ue|ce) (test )?(method |methode |metodo )?[abc] \d{1,2}\b|\b(oppts|ocspp) \d{3}\b|\biso \d{4,5}\b|",
-        r"\bastm e ?\d{3,4}\b|\bdin (en )?(iso )?\d{4,5}\b|\bjis [a-z] ?\d{4}\b|\bgb t ?\d{4,5}\b|^[abc] \d{1,2}( [a-f])?$"
+        r"\bastm e ?\d{3,4}\b|\bdin (en )?(iso )?\d{4,5}\b|\bjis [a-z] ?\d{4}\b|\bgb t ?\d{4,5}\b|^[abc] \d{1,2}$|^c 4 [a-f]$"
     ))
 });
 
@@ -159,7 +159,7 @@ pub(super) static ORGANISM: LazyLock<Regex> = LazyLock::new(|| {
             r"poissons?|truites?|carpes?|algues?|daphnies?|crustaces?|moules?|invertebres?|lentilles? d eau",
             r"pez|peces|pescados?|truchas?|carpas?|algas?|dafnias?|crustaceos?|mejillon\w*|invertebrados?",
             r"pesc[ei]|trot[ae]|carp[ae]|alg[ae]|alghe|dafni\w*|crostace\w*|mitili|invertebrat\w*",
-            r"vis|vissen|forel|karper|algen|watervlo\w*|kreeftachtig\w*|mossel\w*|ongewervelden",
+            r"vis|vissen|forel|karper|algen|watervlo\w*|kreeftachtig\w*|mossel\w*|ongewervelden|コイ",
         ],
         &[
             "魚",
@@ -181,7 +181,7 @@ pub(super) static ORGANISM: LazyLock<Regex> = LazyLock::new(|| {
 /// The names of the values themselves say nothing on how they were obtained.
 pub(super) static VALUE_NAME: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
-        r"^((log|lg) ?(k?ow|pow|p|d|koa|koc|bcf|baf|kow|bmf|tmf)|k ?ow|p ?ow|koa|d|p|dt ?50|degt ?50|t ?1 2|t half|bcf|baf|bmf|tmf|k?oc|",
+        r"^((log|lg|log10) ?(k ?ow|p ?ow|k?ow|pow|p|d|koa|koc|bcf|baf|kow|bmf|tmf)|log|lg|log10|logarithm|k ?ow|p ?ow|koa|d|p|pka ?\d?|mean|mittelwert|dt ?50|degt ?50|t ?1 2|t half|bcf|baf|bmf|tmf|k?oc|",
         r"lc ?50|ec ?50|noec|ec ?10|half life|halbwertszeit|hwz|pka|mw|mp|bp|vp|ww|wwt|wet weight|log k ?ow|log p ?ow|value|wert|",
         r"temps de demi vie|demi vie|valeur|vida media|valor|emivita|tempo di dimezzamento|valore|halfwaardetijd|halveringstijd|waarde|",
         r"solubility|loslichkeit|solubilite|solubilidad|solubilita|oplosbaarheid|半減期|半衰期|値|值|溶解度)( value| wert| 値| 值)?$"
@@ -196,5 +196,14 @@ pub(super) static NO_DEGRADATION: LazyLock<Regex> = LazyLock::new(|| {
         r"hidrolis\w*|idrolis\w*|disappear\w*|dissipat\w*|change|anderung|loss)\b|",
         r"\b(?:stable|stabil|stables|estable|stabile|stabiel|persistent\w*|persistant\w*|undegraded|unabgebaut)\b|",
         r"(?:未|不|無|无|没有|难|難)\S{0,2}(?:分解|降解)|(?:分解|降解)\S{0,3}(?:なし|無し|ない|せず|されず|されない)|安定|稳定|穩定"
+    ))
+});
+
+/// Stability that is denied, or of another kind: it does not speak against a half-life.
+pub(super) static NOT_OF_DEGRADATION: LazyLock<Regex> = LazyLock::new(|| {
+    fixed(concat!(
+        r"\b(?:not|non|no|nicht|pas|niet) (?:\w+ )?(?:stab\w*|estable|persist\w*)\b|",
+        r"\b(?:hydrolytically|photolytically|thermally|chemically|hydrolytisch|thermisch|chemisch|to hydrolysis|to light) stab\w*|",
+        r"\bstab\w* (?:to|against|towards|gegen) (?:hydrolysis|hydrolyse|light|licht|heat)\b"
     ))
 });
