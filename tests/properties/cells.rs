@@ -80,15 +80,13 @@ fn describe(header: &str, cell: &str) -> String {
     match substance.readings.values().flatten().collect::<Vec<_>>().as_slice() {
         [] => "missing".to_owned(),
         readings => {
-            let [mut values, mut units, mut bases, mut others] = <[Vec<String>; 4]>::default();
+            let mut columns = <[Vec<String>; 4]>::default();
             for reading in readings {
-                let [value, unit, basis, conditions] = describe_reading(reading);
-                values.push(value);
-                units.push(unit);
-                bases.push(basis);
-                others.push(conditions);
+                for (column, text) in columns.iter_mut().zip(describe_reading(reading)) {
+                    column.push(text);
+                }
             }
-            [values, units, bases, others].map(joined).join("\t").trim_end().to_owned()
+            columns.map(joined).join("\t").trim_end().to_owned()
         }
     }
 }

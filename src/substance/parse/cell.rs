@@ -114,6 +114,9 @@ fn nearest_unit(word: &str, dimension: Dimension) -> Option<&'static str> {
     nearest(&word, unit_words(dimension).filter(|known| known.to_lowercase().chars().next() == first))
 }
 
+/// No partition coefficient is larger.
+const LARGEST_RATIO: f64 = 1e20;
+
 fn check_sense(quantity: &Quantity, expected: Expected, scale: Scale) -> Result<(), CellFaultKind> {
     let what = expected.what;
     let interval = quantity.interval;
@@ -134,8 +137,10 @@ fn check_sense(quantity: &Quantity, expected: Expected, scale: Scale) -> Result<
         return Err(CellFaultKind::Zero { what, example: expected.bound_example });
     }
     if ends.iter().flatten().any(|end| *end < least || *end > most) {
-        let too_high = ends.iter().flatten().any(|end| *end > most);
-        let bare = matches!(quantity.unit, Unit::One | Unit::LogLitrePerKilogram);
+        // What is no value either has no name to be written with.
+        let logged = quantity.unit == Unit::LogLitrePerKilogram;
+        let too_high = ends.iter().flatten().any(|end| *end > most && (logged || *end <= LARGEST_RATIO));
+        let bare = logged || quantity.unit == Unit::One;
         return Err(match expected.unlogged() {
             Some(example) if too_high && bare && scale == Scale::Logarithm => {
                 CellFaultKind::NotALogarithm { what, example }

@@ -173,15 +173,18 @@ pub(super) fn folded(text: &str) -> String {
     plain_words(&part_scripts(tidy(text)))
 }
 
-/// `5 %`, `5 % degradation`: how much was degraded, and not a lipid or carbon content.
+/// `5 %`, `5 % degradation`: how much was degraded in the time beside it. With a time of its own, or of another measure
+/// such as carbon dioxide, it says nothing of that time.
 fn says_percentage(part: &str, plain: &str) -> bool {
     static BARE: LazyLock<Regex> = LazyLock::new(|| fixed(r"^[<>≤≥~=]*\s*(?:ca\.?\s*)?\d+(?:[.,]\d+)?\s*%$"));
     static AMOUNT: LazyLock<Regex> = LazyLock::new(|| {
-        fixed(
-            r"degrad|abbau|abgebaut|afbraak|afgebroken|elimin|removal|remaining|recover|mineral|分解|降解|bod|co2|doc\b",
-        )
+        fixed(r"degrad|abbau|abgebaut|afbraak|afgebroken|elimin|removal|remaining|分解|降解")
     });
-    part.contains('%') && (BARE.is_match(part.trim()) || AMOUNT.is_match(plain))
+    static OWN_TIME: LazyLock<Regex> = LazyLock::new(|| {
+        fixed(r"\d ?(?:d|h|days?|tage?n?|jours?|dias?|giorni|dagen|hours?|weeks?|wk|wochen?|日|天|週|周)")
+    });
+    part.contains('%')
+        && (BARE.is_match(part.trim()) || (AMOUNT.is_match(plain) && !OWN_TIME.is_match(plain)))
 }
 
 fn other_half_life(plain: &str) -> Option<Property> {
