@@ -45,14 +45,16 @@ fn what_no_substance_has_is_no_value() {
         (
             2,
             Put::Text("99"),
-            "C2: `99` is far outside what log Kow can be; check the number, its unit and its decimal separator",
+            "C2: `99` is far outside what log Kow can be as a logarithm; if it is the value itself, write it with its name, \
+             for example `Kow = 50000`",
         ),
         (2, Put::Text("NaN"), "C2: `NaN` is no log Kow; write, for example, `4.5`"),
         (2, Put::Boolean(true), "C2: `TRUE` is no log Kow; write, for example, `4.5`"),
         (
             3,
             Put::Number(-5.0),
-            "D2: `-5` is negative, which BCF cannot be; check the sign or leave the cell empty",
+            "D2: `-5` is negative, which BCF cannot be; if it is a logarithm, write, for example, `log BCF = 3.2`, else \
+             check the sign",
         ),
         (
             4,

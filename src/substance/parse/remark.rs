@@ -181,7 +181,9 @@ fn says_percentage(part: &str, plain: &str) -> bool {
         fixed(r"degrad|abbau|abgebaut|afbraak|afgebroken|elimin|removal|remaining|分解|降解")
     });
     static OWN_TIME: LazyLock<Regex> = LazyLock::new(|| {
-        fixed(r"\d ?(?:d|h|days?|tage?n?|jours?|dias?|giorni|dagen|hours?|weeks?|wk|wochen?|日|天|週|周)")
+        fixed(
+            r"\d ?(?:(?:d|h|days?|tage?n?|jours?|dias?|giorni|dagen|hours?|weeks?|wk|wochen?)\b|日|天|週|周)",
+        )
     });
     part.contains('%')
         && (BARE.is_match(part.trim()) || (AMOUNT.is_match(plain) && !OWN_TIME.is_match(plain)))
