@@ -148,11 +148,11 @@ fn a_row_with_more_fields_than_the_header_is_not_screened() {
     let run = place.run(&["screen", "list.csv", "--date", "2026-12-01"]);
     assert_eq!(run.status, 1, "{}", run.complained);
     let why = "list!D3: `DDT` is field 4 of its row, but the header has 3, so that a separator within a text or number \
-               may have moved the values into wrong columns; the row is not screened: put that text into quotation \
+               may have moved the values into wrong columns, and the row is not screened; put that text into quotation \
                marks, or give the column a header";
     assert!(run.complained.contains(why), "{}", run.complained);
     assert!(run.said.contains("Screened 2 rows on 1 sheet"), "{}", run.said);
-    let left = "1 row was not screened, with more fields than the header; each is among the cells that could not be read.";
+    let left = "1 row was not screened, because of a cell that is told among the faults.";
     assert!(run.said.contains(left), "{}", run.said);
     let text = place.rows_of("list-screened.xlsx", "list").text();
     assert!(text.contains(&format!("not screened: {why}")), "{text}");

@@ -45,6 +45,19 @@ fn examples() -> Vec<(&'static str, CellFaultKind)> {
         ("see section 2", Kind::NoStatement),
         ("Carc.", Kind::ClassWithoutCategory { class: "Carc.".to_owned() }),
         ("H302; 350", Kind::StatementUnread { part: "350".to_owned() }),
+        ("DDT", Kind::BeyondHeader { fields: 4, header: 3 }),
+        ("blend", Kind::NotOneOf { what: "row type", words: "substance, mixture, article" }),
+        ("601-043-00-3", Kind::IndexNumber { what: "CAS number", example: "50-29-3" }),
+        ("Total", Kind::TotalsRow),
+        ("R45", Kind::RiskPhrase { phrase: "R45".to_owned() }),
+        ("Carc. Cat. 2", Kind::OldCategory { class: "Carc. Cat. 2".to_owned() }),
+        ("readily biodegradable: no", Kind::SaysBoth),
+        ("82 % (OECD 306)", Kind::OtherDegradationTest { test: "OECD 306".to_owned() }),
+        ("50000", Kind::NotALogarithm { what: "log Kow", example: "Kow = 50000" }),
+        ("-0.3", Kind::MayBeLogarithm { what: "BCF", example: "log BCF = 3.2" }),
+        ("Kow = 4.5", Kind::LogarithmOrNot { what: "log Kow", example: "log Kow = 4.5" }),
+        ("40 j", Kind::DaysOrYears),
+        ("0.01", Kind::DimensionlessHenry),
     ]
 }
 

@@ -21,6 +21,7 @@ fn the_sheets_are_those_of_the_documentation() {
     assert_eq!(
         names,
         [
+            "Conflicts",
             "Read me",
             "Reasoning",
             "Record",

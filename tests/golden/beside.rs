@@ -7,7 +7,6 @@ use crate::planted::check;
 const COMMON: [&str; 5] = ["fault", "read", "missing", "no-substance", "uncleared"];
 
 #[test]
-#[ignore = "until xls workbooks are read"]
 fn the_supplier_list_in_french_is_screened() {
     let annotated = Annotated::of("supplier-list.xls");
     assert_eq!((annotated.summary.screened, annotated.summary.sheets), (23, (1, 1)));
@@ -19,7 +18,6 @@ fn the_supplier_list_in_french_is_screened() {
 }
 
 #[test]
-#[ignore = "until ods workbooks are read"]
 fn the_stock_list_in_dutch_is_screened() {
     let annotated = Annotated::of("site-stock.ods");
     assert_eq!((annotated.summary.screened, annotated.summary.sheets), (30, (1, 1)));
@@ -34,7 +32,6 @@ fn the_stock_list_in_dutch_is_screened() {
 }
 
 #[test]
-#[ignore = "until csv files are read"]
 fn the_export_in_german_is_screened() {
     let annotated = Annotated::of("erp-export.csv");
     // The row with semicolons that stand without quotes is none of them.

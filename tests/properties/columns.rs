@@ -409,34 +409,13 @@ fn case_accents_brackets_width_and_line_breaks_make_no_difference() {
     assert!(wrong.is_empty(), "{}", wrong.join("\n"));
 }
 
-/// The shortest of three times.
-fn time_of(work: impl Fn()) -> std::time::Duration {
-    let once = |_| {
-        let start = std::time::Instant::now();
-        work();
-        start.elapsed()
-    };
-    (0..3).map(once).min().unwrap_or_default()
-}
-
+/// Work that grew faster than the text would not end here.
 #[test]
-fn a_header_row_of_four_times_as_many_columns_takes_no_more_than_eight_times_as_long() {
-    let row = |columns: usize| {
-        let headers: Vec<String> = table().map(|known| known.header).collect();
-        let texts: Vec<&str> = headers.iter().map(String::as_str).cycle().take(columns).collect();
-        text_row(0, &texts)
-    };
-    let (short, long) = ([row(500)], [row(2000)]);
-    let (short, long) = (time_of(|| drop(columns_of(&short))), time_of(|| drop(columns_of(&long))));
-    assert!(long < short * 8, "{short:?} and {long:?}");
-}
-
-#[test]
-fn a_text_of_any_length_is_looked_at_quickly() {
+fn a_text_of_any_length_is_looked_at_to_its_end_or_not_at_all() {
     for text in ["水".repeat(30_000), "half life ".repeat(3_000), "(".repeat(30_000), "a".repeat(30_000)] {
         let rows = [text_row(0, &["CAS", &text]), text_row(1, &[&text, &text])];
-        let taken = time_of(|| drop(columns_of(&rows)));
-        assert!(taken < std::time::Duration::from_secs(2), "{taken:?}");
+        let recognised = columns_of(&rows).unwrap();
+        assert_eq!(recognised.columns.len(), 1, "a text too long for a header names no field");
     }
 }
 

@@ -32,7 +32,7 @@ fn push_tidied(plain: &mut String, character: char, next: Option<char>, raised: 
     match character {
         '\n' | '\r' => push_line_break(plain),
         // Some programs write a soft hyphen for a minus or a dash: before a digit it is kept, and then makes no number.
-        '\u{AD}' if before_digit && !plain.ends_with([',', '.']) => plain.push(character),
+        '\u{AD}' if before_digit && !plain.ends_with([',', '.', '-']) => plain.push(character),
         // Soft hyphen, zero-width spaces and joiners, marks of direction, byte order mark.
         '\u{AD}' | '\u{200B}'..='\u{200F}' | '\u{202A}'..='\u{202E}' | '\u{2060}' | '\u{FEFF}' => {}
         '\u{2010}'..='\u{2015}' | '\u{2212}' | '\u{FE58}' | '\u{FE63}' | '\u{2043}' | '\u{2D7}' => {
