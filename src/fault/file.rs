@@ -157,7 +157,7 @@ fn sentences_behind(sentences: &[String]) -> String {
     if text.is_empty() { String::new() } else { format!(". {text}") }
 }
 
-/// What a file is, by its content, when it is not an xlsx workbook.
+/// What a file is, by its content, when it holds no inventory.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
 pub enum FileKind {
     /// No content at all.
@@ -200,7 +200,7 @@ impl FileKind {
                 "open it in a spreadsheet program, save it as xlsx and use that file"
             }
             Self::Xml | Self::Pdf | Self::Document | Self::Archive | Self::Unknown | Self::Json => {
-                "name an xlsx workbook with one substance a row"
+                "name a workbook, or a csv, with one substance a row"
             }
         }
     }

@@ -43,73 +43,61 @@ fn difference(line: &[String], recognised: &Recognised) -> Option<String> {
 }
 
 #[test]
-#[ignore = "text files are not read yet"]
 fn of_a_german_export() {
     check("german-erp.csv");
 }
 
 #[test]
-#[ignore = "groups over columns are not known yet"]
 fn of_merged_headers() {
     check("merged-headers.xlsx");
 }
 
 #[test]
-#[ignore = "ods is not read yet"]
 fn of_a_french_list() {
     check("french-list.ods");
 }
 
 #[test]
-#[ignore = "xls is not read yet"]
 fn of_spanish_and_italian_sheets() {
     check("spanish-and-italian.xls");
 }
 
 #[test]
-#[ignore = "headers in Dutch are not known yet"]
 fn of_a_dutch_stock_list() {
     check("dutch-stock.xlsx");
 }
 
 #[test]
-#[ignore = "headers in Japanese are not known yet"]
 fn of_a_japanese_list() {
     check("japanese-list.xlsx");
 }
 
 #[test]
-#[ignore = "text files are not read yet"]
 fn of_a_chinese_list_with_tabs() {
     check("chinese-list.tsv");
 }
 
 #[test]
-#[ignore = "text files are not read yet"]
 fn of_a_chinese_list_with_commas() {
     check("chinese-list.csv");
 }
 
 #[test]
-#[ignore = "groups over columns are not known yet"]
 fn of_a_laboratory_sheet() {
     check("lab-sheet.xlsx");
 }
 
 #[test]
-#[ignore = "xlsb is not read yet"]
 fn of_a_flat_list() {
     check("flat-list.xlsb");
 }
 
 #[test]
-#[ignore = "`Kow [log]` is not known yet"]
 fn of_a_colleagues_sheets() {
     check("colleague.xlsx");
 }
 
 #[test]
-#[ignore = "text files are not read yet"]
 fn of_an_old_data_file() {
     check("old-data.csv");
 }

@@ -134,61 +134,51 @@ fn libreoffice_xlsm() {
 }
 
 #[test]
-#[ignore = "errors are written as their text"]
 fn errors_stay_errors() {
     check("openpyxl.xlsx", Types::All);
 }
 
 #[test]
-#[ignore = "xls is not read yet"]
 fn xlwt_xls() {
     check("xlwt.xls", Types::AllButErrors);
 }
 
 #[test]
-#[ignore = "xls is not read yet"]
 fn libreoffice_xls() {
     check("libreoffice.xls", Types::AllButErrors);
 }
 
 #[test]
-#[ignore = "xls is not read yet"]
 fn sheetjs_xls() {
     check("sheetjs.xls", Types::AllButErrors);
 }
 
 #[test]
-#[ignore = "xlsb is not read yet"]
 fn sheetjs_xlsb() {
     check("sheetjs.xlsb", Types::AllButErrors);
 }
 
 #[test]
-#[ignore = "xlsb is not read yet"]
 fn pyxlsbwriter_xlsb() {
     check("pyxlsbwriter.xlsb", Types::AllButErrors);
 }
 
 #[test]
-#[ignore = "ods is not read yet"]
 fn libreoffice_ods() {
     check("libreoffice.ods", Types::AllButErrors);
 }
 
 #[test]
-#[ignore = "ods is not read yet"]
 fn odfpy_ods() {
     check("odfpy.ods", Types::AllButErrors);
 }
 
 #[test]
-#[ignore = "text files are not read yet"]
 fn libreoffice_csv() {
     check("libreoffice.csv", Types::Texts);
 }
 
 #[test]
-#[ignore = "text files are not read yet"]
 fn pandas_csv() {
     check("pandas.csv", Types::Texts);
 }

@@ -107,7 +107,6 @@ fn cells_of(path: &Path) -> (Cells, Vec<u16>) {
 }
 
 #[test]
-#[ignore = "text files are not read yet"]
 fn a_german_export() {
     check("german-erp.csv");
 }
@@ -118,37 +117,31 @@ fn merged_headers() {
 }
 
 #[test]
-#[ignore = "ods is not read yet"]
 fn a_french_list() {
     check("french-list.ods");
 }
 
 #[test]
-#[ignore = "xls is not read yet"]
 fn spanish_and_italian_sheets() {
     check("spanish-and-italian.xls");
 }
 
 #[test]
-#[ignore = "words for no value in Dutch are not known yet"]
 fn a_dutch_stock_list() {
     check("dutch-stock.xlsx");
 }
 
 #[test]
-#[ignore = "headers in Japanese are not known yet"]
 fn a_japanese_list() {
     check("japanese-list.xlsx");
 }
 
 #[test]
-#[ignore = "text files are not read yet"]
 fn a_chinese_list_with_tabs() {
     check("chinese-list.tsv");
 }
 
 #[test]
-#[ignore = "text files are not read yet"]
 fn a_chinese_list_with_commas() {
     check("chinese-list.csv");
 }
@@ -159,19 +152,16 @@ fn a_laboratory_sheet() {
 }
 
 #[test]
-#[ignore = "xlsb is not read yet"]
 fn a_flat_list() {
     check("flat-list.xlsb");
 }
 
 #[test]
-#[ignore = "a row of a group and a note below the table are screened"]
 fn a_colleagues_sheets() {
     check("colleague.xlsx");
 }
 
 #[test]
-#[ignore = "text files are not read yet"]
 fn an_old_data_file() {
     check("old-data.csv");
 }
