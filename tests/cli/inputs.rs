@@ -15,7 +15,7 @@ fn a_missing_file_and_a_folder_are_told_apart() {
 #[test]
 fn a_file_of_another_kind_is_named_as_what_it_is_and_what_to_do() {
     let save = "open it in a spreadsheet program, save it as xlsx and use that file";
-    let other = "name an xlsx workbook with one substance a row";
+    let other = "name a workbook, or a csv, with one substance a row";
     let written: [(&[u8], String); 4] = [
         (b"", "the file is empty; check that the export or the download was finished".to_owned()),
         (b"{\"cas\": \"50-29-3\"}\n", format!("this is a JSON file, not a table; {other}")),

@@ -77,11 +77,11 @@ fn a_file_of_another_kind_is_named_as_what_it_is() {
         ),
         (
             refusal("a.csv", text(b"[{\"cas\": \"50-00-0\"}]")),
-            "this is a JSON file, not a table; name an xlsx workbook with one substance a row".to_owned(),
+            "this is a JSON file, not a table; name a workbook, or a csv, with one substance a row".to_owned(),
         ),
         (
             refusal("a.csv", text(b"\x00\x01\x02\x03binary\xFF\xFE\x10\x11")),
-            "this is not a workbook; name an xlsx workbook with one substance a row".to_owned(),
+            "this is not a workbook; name a workbook, or a csv, with one substance a row".to_owned(),
         ),
         (
             refusal("a.xlsx", |path| hostile::write_compound_file(path, "EncryptedPackage")),
@@ -98,12 +98,12 @@ fn a_file_of_another_kind_is_named_as_what_it_is() {
         ),
         (
             refusal("a.xlsx", hostile::write_text_document),
-            "this is a text document or a presentation, not a workbook; name an xlsx workbook with one substance a row"
+            "this is a text document or a presentation, not a workbook; name a workbook, or a csv, with one substance a row"
                 .to_owned(),
         ),
         (
             refusal("a.ods", hostile::write_open_document),
-            "this is a text document or a presentation, not a workbook; name an xlsx workbook with one substance a row"
+            "this is a text document or a presentation, not a workbook; name a workbook, or a csv, with one substance a row"
                 .to_owned(),
         ),
         (
@@ -115,11 +115,11 @@ fn a_file_of_another_kind_is_named_as_what_it_is() {
         ),
         (
             refusal("a.zip", |path| hostile::write_zip(path, &[("readme.txt", b"hello")])),
-            "this is an archive without a workbook in it; name an xlsx workbook with one substance a row".to_owned(),
+            "this is an archive without a workbook in it; name a workbook, or a csv, with one substance a row".to_owned(),
         ),
         (
             refusal("a.xlsx", text(b"%PDF-1.7")),
-            "this is a PDF, not a workbook; name an xlsx workbook with one substance a row".to_owned(),
+            "this is a PDF, not a workbook; name a workbook, or a csv, with one substance a row".to_owned(),
         ),
     ] {
         assert_eq!(said, remedy);

@@ -378,7 +378,7 @@ fn a_hostile_or_broken_workbook_ends_in_a_sentence() {
     );
     assert_eq!(
         document.err().unwrap(),
-        "this is a text document or a presentation, not a workbook; name an xlsx workbook with one substance a row"
+        "this is a text document or a presentation, not a workbook; name a workbook, or a csv, with one substance a row"
     );
 }
 
