@@ -79,6 +79,17 @@ impl Draft {
         }
     }
 
+    /// Takes a cell that shows its number in thousands; where a number is asked for, either may be meant.
+    pub(super) fn take_scaled(&mut self, column: &Column, cell: &Cell, shown: String) {
+        let names = [Field::RowId, Field::Name, Field::CasNumber, Field::EcNumber];
+        if names.contains(&column.field) {
+            return self.take(column, cell);
+        }
+        let (sheet, row) = (Arc::clone(&self.substance.sheet), self.substance.row);
+        let place = CellRef { sheet, row, column: column.index };
+        self.fault(&cell.content, place, CellFaultKind::ShownInThousands { shown });
+    }
+
     fn fault(&mut self, content: &CellContent, cell: CellRef, kind: CellFaultKind) {
         let found = if kind == CellFaultKind::FormulaWithoutResult {
             "=…".to_owned()
