@@ -134,7 +134,6 @@ fn libreoffice_xlsm() {
 }
 
 #[test]
-#[ignore = "errors are written as their text"]
 fn errors_stay_errors() {
     check("openpyxl.xlsx", Types::All);
 }

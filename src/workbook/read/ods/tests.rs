@@ -166,7 +166,7 @@ fn the_survey_of_what_libreoffice_wrote_knows_columns_and_what_is_not_carried() 
              2026-12-31, and percentages as percentages.",
             "Sheet `Stock`, not carried over: 1 hidden row (shown in the output), 1 merged range, notes or comments.",
             "Sheet `Stock`: 5 formulas are written as the last stored result.",
-            "Sheet `Stock`: 2 error values are written as text.",
+            "Sheet `Stock`: 2 error values are written as an error again where xlsx knows it, else as text.",
         ]
     );
 }
