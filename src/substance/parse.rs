@@ -6,6 +6,7 @@
 mod cell;
 mod companions;
 mod degradability;
+mod doubt;
 mod draft;
 mod expected;
 mod identity;

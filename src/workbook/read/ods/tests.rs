@@ -105,7 +105,7 @@ fn what_libreoffice_wrote_is_read_as_it_was_typed() {
         for (row, kind, value, shown, formula) in [
             (1, "number", CellContent::Number(4.25), None, false),
             (2, "percentage", CellContent::Number(0.125), shown_as("0.0%"), false),
-            (3, "currency", CellContent::Number(12.5), None, false),
+            (3, "currency", CellContent::Number(12.5), shown_as("0.00\" €\""), false),
             // 1 February 2026 is 46,054 days after 30 December 1899.
             (4, "date", CellContent::DateTime(46_054.0), shown_as("yyyy-mm-dd"), false),
             (5, "date and time", CellContent::DateTime(46_054.75), shown_as("yyyy-mm-dd hh:mm:ss"), false),
