@@ -13,7 +13,7 @@ pub use chance::{chance_beyond, normal_cumulative};
 pub use date::Date;
 pub use interval::{Bound, Comparison, Interval, IntervalError, Outcome};
 pub use parse::{
-    DecimalStyle, Parsed, QuantityFault, ReadAs, Scale, format_interval, format_number, is_missing,
+    DecimalStyle, LetterA, Parsed, QuantityFault, ReadAs, Scale, format_interval, format_number, is_missing,
     parse_limit, parse_quantities, parse_quantity, parse_unit, parse_unit_of, part_scripts, plain_words,
     quantity_of_number, tidy, unit_words,
 };

@@ -225,6 +225,11 @@ pub enum CellFaultKind {
     DaysOrYears,
     /// Henry's law constant without a unit, which stands for a ratio of concentrations.
     DimensionlessHenry,
+    /// A number that its cell shows divided by thousands, without a word that says so.
+    ShownInThousands {
+        /// The number as shown.
+        shown: String,
+    },
 }
 
 impl CellFault {

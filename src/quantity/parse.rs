@@ -61,6 +61,16 @@ pub enum Scale {
     Logarithm,
 }
 
+/// What a bare `a` between two numbers of time is; alone it is always a year.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
+pub enum LetterA {
+    /// A year, or nobody knows.
+    #[default]
+    Year,
+    /// `to`, as in Spanish, Italian and Portuguese: `50 a 120`.
+    To,
+}
+
 /// What a text is expected to hold.
 #[derive(Debug, Clone, Copy, PartialEq)]
 pub struct ReadAs {
@@ -74,6 +84,8 @@ pub struct ReadAs {
     pub scale: Scale,
     /// Molar mass, g/mol, for molar concentrations.
     pub molar_mass: Option<f64>,
+    /// What a bare `a` between two times is.
+    pub letter_a: LetterA,
 }
 
 /// What a text held.

@@ -9,7 +9,7 @@ use crate::report::{AddedColumns, RECORD_MARK, RECORD_SHEET, ReasoningMode, adde
 use crate::rules::RuleSet;
 use crate::run::{ReasoningChoice, ScreenSettings};
 use crate::substance::RowReader;
-use crate::workbook::{Appearance, CellContent, Inventory, Row, StyleId, Visibility, open_inventory};
+use crate::workbook::{CellContent, Inventory, Row, Visibility, open_inventory};
 
 /// Rows at the top of a sheet in which a header is looked for and decimal styles are sampled.
 const ROWS_LOOKED_AT: usize = 200;
@@ -108,7 +108,7 @@ impl Plan {
         let mut lines = 0;
         let lines_a_row: usize = rules.rulebooks.iter().map(|rulebook| rulebook.criteria.len()).sum();
         let surveys = inventory.sheets().to_vec();
-        let percentages = formats_of_percentages(inventory.appearances());
+        let formats: Vec<_> = inventory.number_formats().collect();
         for (index, survey) in surveys.iter().enumerate() {
             let wanted =
                 settings.sheets.is_empty() || settings.sheets.iter().any(|name| **name == *survey.name);
@@ -129,7 +129,7 @@ impl Plan {
                         let first_added = survey.used_columns;
                         refuse_overwide(&survey.name, first_added, added.headers.len())?;
                         let reader = RowReader::new(survey.name.clone(), &recognised, settings.unstated)
-                            .with_percentages(percentages.iter().copied());
+                            .with_number_formats(formats.iter().cloned());
                         let header_fields = fields_of_header(inventory, recognised.header_row);
                         sheet.screened =
                             Some(Screened { recognised, reader, added, first_added, header_fields });
@@ -203,12 +203,6 @@ fn headers(first_rows: &[Row], header_row: u32) -> Vec<String> {
             | CellContent::Error(_) => None,
         })
         .collect()
-}
-
-/// The cell formats that show numbers as percentages.
-fn formats_of_percentages(appearances: &[Appearance]) -> Vec<StyleId> {
-    let shown = (0..).zip(appearances).filter(|(_, appearance)| appearance.shows_percentages());
-    shown.map(|(index, _)| StyleId(index)).collect()
 }
 
 fn refuse_unknown_sheets(inventory: &Inventory, settings: &ScreenSettings) -> Result<(), Refusal> {

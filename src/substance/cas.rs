@@ -26,7 +26,8 @@ impl CasNumber {
     /// From the right, the check digit left out, the digits are multiplied by 1, 2, 3, ... and added; the sum modulo
     /// 10 is the check digit (published rule of the registry).
     pub fn from_digits(digits: u64) -> Result<Self, CasError> {
-        if !(10_000..10_000_000_000).contains(&digits) {
+        // The registry begins at 50-00-0; nines alone, like zeros, stand for no number.
+        if !(50_000..9_999_999_990).contains(&digits) {
             return Err(CasError::Form);
         }
         let expected = check_digit(digits / 10);
@@ -86,6 +87,14 @@ mod tests {
     #[test]
     fn a_wrong_check_digit_is_refused_with_the_right_one() {
         assert_eq!(CasNumber::parse("50-29-4"), Err(CasError::CheckDigit { expected: 3 }));
+    }
+
+    #[test]
+    fn the_first_number_of_the_registry_is_read_and_placeholders_are_not() {
+        assert!(CasNumber::parse("50-00-0").is_ok());
+        for text in ["49-99-7", "10-00-4", "00-00-0", "000-00-0", "0000000-00-0", "9999999-99-5"] {
+            assert_eq!(CasNumber::parse(text), Err(CasError::Form), "{text}");
+        }
     }
 
     #[test]

@@ -18,7 +18,8 @@ pub enum EcError {
         /// The digit that would fit.
         expected: u8,
     },
-    /// The first six characters leave a remainder of 10, for which no digit exists.
+    /// The first six characters leave a remainder of 10, for which no digit exists, or the first one is 0 or 1, with
+    /// which no number begins.
     #[error("no EC number starts with these six characters")]
     NoSuchNumber,
 }
@@ -40,6 +41,9 @@ impl EcNumber {
         let mut sum = 0;
         for (factor, byte) in (1u32..).zip(body.bytes()) {
             sum += factor * character_value(byte).ok_or(EcError::Form)?;
+        }
+        if body.starts_with(['0', '1']) {
+            return Err(EcError::NoSuchNumber);
         }
         let found = check.parse::<u32>().map_err(|_| EcError::Form)?;
         let expected = sum % 11;
@@ -99,6 +103,14 @@ mod tests {
         assert!(EcNumber::parse("400-001-1").is_ok());
         // 2 + 2 + 0 + 0 + 0 + 6 x 1 = 10.
         assert_eq!(EcNumber::parse("210-001-1"), Err(EcError::NoSuchNumber));
+    }
+
+    #[test]
+    fn no_number_begins_with_zero_or_one_whatever_its_check_digit() {
+        for text in ["000-000-0", "123-456-3"] {
+            assert_eq!(EcNumber::parse(text), Err(EcError::NoSuchNumber), "{text}");
+        }
+        assert!(EcNumber::parse("200-001-8").is_ok());
     }
 
     #[test]

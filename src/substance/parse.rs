@@ -6,6 +6,7 @@
 mod cell;
 mod companions;
 mod degradability;
+mod doubt;
 mod draft;
 mod expected;
 mod identity;
@@ -16,15 +17,16 @@ mod remark;
 mod statements;
 mod totals;
 
-use std::collections::BTreeSet;
+use std::collections::BTreeMap;
 use std::sync::Arc;
 
 pub(crate) use remark::Said;
 
 use crate::columns::{Column, Recognised};
 use crate::fault::{CellFault, CellFaultKind};
+use crate::quantity::DecimalStyle;
 use crate::substance::{Basis, Field, Property, Substance};
-use crate::workbook::{Cell, CellContent, CellRef, Row, StyleId};
+use crate::workbook::{Cell, CellContent, CellRef, NumberFormat, Row, ShownNumber, StyleId};
 use draft::Draft;
 
 /// What a value without a word on how it was obtained counts as (`--unstated`).
@@ -56,7 +58,7 @@ pub struct RowReader {
     /// Molar mass first, because molar concentrations need it.
     columns: Vec<Column>,
     unstated: UnstatedBasis,
-    percentages: BTreeSet<StyleId>,
+    formats: BTreeMap<StyleId, NumberFormat>,
 }
 
 impl RowReader {
@@ -64,13 +66,14 @@ impl RowReader {
     pub fn new(sheet: Arc<str>, columns: &Recognised, unstated: UnstatedBasis) -> Self {
         let mut columns = columns.columns.clone();
         columns.sort_by_key(|column| column.field != Field::Property(Property::MolarMass));
-        Self { sheet, columns, unstated, percentages: BTreeSet::new() }
+        Self { sheet, columns, unstated, formats: BTreeMap::new() }
     }
 
-    /// The same reader, which knows the cell formats that show numbers as percentages: 0.12 as `12 %`.
+    /// The same reader, which knows the cell formats that show more of a number than its digits: 0.12 as `12 %`, 4 as
+    /// `4 weeks`.
     #[must_use]
-    pub fn with_percentages(mut self, formats: impl IntoIterator<Item = StyleId>) -> Self {
-        self.percentages = formats.into_iter().collect();
+    pub fn with_number_formats(mut self, formats: impl IntoIterator<Item = (StyleId, NumberFormat)>) -> Self {
+        self.formats = formats.into_iter().collect();
         self
     }
 
@@ -86,57 +89,50 @@ impl RowReader {
         let mut draft = Draft::new(Arc::clone(&self.sheet), row.index);
         for column in &self.columns {
             if let Some(cell) = row.cell(column.index) {
-                match self.as_percentage(cell) {
-                    Some(shown) => draft.take(column, &shown),
-                    None => draft.take(column, cell),
+                match self.as_shown(cell) {
+                    Shown::AsStored => draft.take(column, cell),
+                    Shown::As(content) => {
+                        // Whatever the column writes, the number has a decimal point.
+                        let column = Column { decimal: DecimalStyle::Point, ..column.clone() };
+                        draft.take(&column, &Cell { content, ..cell.clone() });
+                    }
+                    Shown::Scaled(shown) => draft.take_scaled(column, cell, shown),
                 }
             }
         }
         draft.finish(self.unstated)
     }
 
-    /// A number that the sheet shows as a percentage, with what it shows as its text.
-    fn as_percentage(&self, cell: &Cell) -> Option<Cell> {
-        let shown = cell.style.is_some_and(|style| self.percentages.contains(&style));
+    /// The cell as its number format shows it.
+    fn as_shown(&self, cell: &Cell) -> Shown {
+        let Some(format) = cell.style.and_then(|style| self.formats.get(&style)) else {
+            return Shown::AsStored;
+        };
         match &cell.content {
-            CellContent::Number(number) if shown => {
-                Some(Cell { content: CellContent::Text(percentage_of(*number)), ..cell.clone() })
-            }
-            _ => None,
+            CellContent::Number(number) => match format.show(*number) {
+                ShownNumber::AsItIs => Shown::AsStored,
+                ShownNumber::Text(text) => Shown::As(CellContent::Text(text)),
+                ShownNumber::Nothing => Shown::As(CellContent::Text(String::new())),
+                ShownNumber::Scaled(shown) => Shown::Scaled(shown),
+            },
+            CellContent::Text(text) => match format.show_text(text) {
+                Some(text) => Shown::As(CellContent::Text(text)),
+                None => Shown::AsStored,
+            },
+            CellContent::Empty
+            | CellContent::Boolean(_)
+            | CellContent::DateTime(_)
+            | CellContent::Error(_) => Shown::AsStored,
         }
     }
 }
 
-/// A hundred times a number with its sign, every digit kept: 0.07 is `7 %`.
-fn percentage_of(number: f64) -> String {
-    let scientific = format!("{number:e}");
-    let moved = scientific.split_once('e').and_then(|(digits, power)| {
-        let power = power.parse::<i32>().ok()? + 2;
-        format!("{digits}e{power}").parse::<f64>().ok()
-    });
-    let text = moved.unwrap_or(number * 100.0).to_string();
-    // Three decimals could be read as thousands.
-    let three = text.rsplit_once('.').is_some_and(|(_, decimals)| decimals.len() == 3);
-    if three { format!("{text}0 %") } else { format!("{text} %") }
-}
-
-#[cfg(test)]
-mod tests {
-    use super::percentage_of;
-
-    #[test]
-    fn a_number_shown_as_a_percentage_keeps_its_digits() {
-        for (number, text) in [
-            (0.12, "12 %"),
-            (0.07, "7 %"),
-            (0.001, "0.1 %"),
-            (1.0, "100 %"),
-            (0.0, "0 %"),
-            (-0.05, "-5 %"),
-            (0.123_45, "12.3450 %"),
-            (1e-7, "0.00001 %"),
-        ] {
-            assert_eq!(percentage_of(number), text);
-        }
-    }
+/// What a cell shows beside what it stores.
+enum Shown {
+    /// The same.
+    AsStored,
+    /// Something else.
+    As(CellContent),
+    /// Its number in thousands, without a word that says so.
+    Scaled(String),
 }

@@ -2,10 +2,10 @@
 
 use std::borrow::Cow;
 
-use super::percent::has_percent_sign;
+use super::number_format::NumberFormat;
 use calamine::{
-    Border, BorderStyle, Color, Fill, FillPattern, Font, HorizontalAlignment, NumberFormat, Style,
-    TextRotation, UnderlineStyle, VerticalAlignment,
+    Border, BorderStyle, Color, Fill, FillPattern, Font, HorizontalAlignment, Style, TextRotation,
+    UnderlineStyle, VerticalAlignment,
 };
 use rust_xlsxwriter::{Format, FormatAlign, FormatBorder, FormatPattern, FormatUnderline};
 
@@ -17,16 +17,7 @@ pub struct Appearance {
     format: Format,
     numbers: Numbers,
     lines: Lines,
-    scale: Scale,
-}
-
-/// What a number is shown as.
-#[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
-enum Scale {
-    #[default]
-    Itself,
-    /// A hundred times the number, and a percent sign.
-    Percentage,
+    shown: Option<NumberFormat>,
 }
 
 /// Whether a text runs over several lines.
@@ -59,9 +50,9 @@ impl Appearance {
         }
     }
 
-    /// Whether it shows a number such as 0.12 as `12 %`.
-    pub fn shows_percentages(&self) -> bool {
-        self.scale == Scale::Percentage
+    /// What it shows of a number, where that is more than digits.
+    pub fn number_format(&self) -> Option<&NumberFormat> {
+        self.shown.as_ref()
     }
 
     /// Whether its text runs over several lines.
@@ -79,7 +70,7 @@ impl Appearance {
         Self {
             format: Format::new().set_num_format(code),
             numbers: Numbers::Formatted,
-            scale: if has_percent_sign(code) { Scale::Percentage } else { Scale::Itself },
+            shown: NumberFormat::of_code(code),
             lines: Lines::One,
         }
     }
@@ -106,13 +97,13 @@ impl From<&Style> for Appearance {
             format = with_alignment(format, alignment);
         }
         let wraps = style.alignment.as_ref().is_some_and(|alignment| alignment.wrap_text);
-        let scale = scale_of(style.number_format.as_ref());
-        Self { format, numbers, lines: if wraps { Lines::Wrapped } else { Lines::One }, scale }
+        let shown = style.number_format.as_ref().and_then(shown_by);
+        Self { format, numbers, lines: if wraps { Lines::Wrapped } else { Lines::One }, shown }
     }
 }
 
 /// Built-in formats keep their number: spreadsheet programs show some of them by the user's region.
-fn number_format(number: Option<&NumberFormat>) -> (Format, Numbers) {
+fn number_format(number: Option<&calamine::NumberFormat>) -> (Format, Numbers) {
     let format = Format::new();
     let Some(number) = number else {
         return (format, Numbers::AsTyped);
@@ -125,13 +116,13 @@ fn number_format(number: Option<&NumberFormat>) -> (Format, Numbers) {
     }
 }
 
-/// The built-in formats 9 and 10 are `0%` and `0.00%`.
-fn scale_of(number: Option<&NumberFormat>) -> Scale {
-    let Some(number) = number else {
-        return Scale::Itself;
-    };
-    let built_in = number.format_id.is_some_and(|id| id == 9 || id == 10);
-    if built_in || has_percent_sign(&number.format_code) { Scale::Percentage } else { Scale::Itself }
+/// Of the built-in formats, 9 and 10 show percentages, and 41 to 44 show a zero as a dash.
+fn shown_by(number: &calamine::NumberFormat) -> Option<NumberFormat> {
+    match number.format_id {
+        Some(9 | 10) => NumberFormat::of_code("0%"),
+        Some(41..=44) => NumberFormat::of_code("0;-0;\"-\""),
+        Some(_) | None => NumberFormat::of_code(&number.format_code),
+    }
 }
 
 fn with_font(mut format: Format, font: &Font) -> Format {

@@ -21,8 +21,9 @@ use sha2::{Digest, Sha256};
 use crate::fault::{FileFault, FileKind, SheetFault};
 
 use super::appearance::Appearance;
-use super::content::Row;
+use super::content::{Row, StyleId};
 use super::guard::{self, Container};
+use super::number_format::NumberFormat;
 use super::package::{Limits, Package};
 use super::survey::SheetSurvey;
 
@@ -98,9 +99,15 @@ impl Inventory {
         &self.sheets
     }
 
-    /// The cell formats; a cell's [`StyleId`](super::StyleId) is an index into them.
+    /// The cell formats; a cell's [`StyleId`] is an index into them.
     pub fn appearances(&self) -> &[Appearance] {
         &self.appearances
+    }
+
+    /// The cell formats that show more of a number than its digits.
+    pub fn number_formats(&self) -> impl Iterator<Item = (StyleId, NumberFormat)> {
+        let shown = (0..).map(StyleId).zip(&self.appearances);
+        shown.filter_map(|(style, look)| Some((style, look.number_format()?.clone())))
     }
 
     /// How the file was read where it does not say so itself, in sentences: its encoding and separator.

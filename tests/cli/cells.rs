@@ -103,7 +103,7 @@ fn error_values_that_become_text_are_told() {
     let mut rows = rows_with_a_fault();
     rows[1][3] = Put::Formula("=NA()", "#N/A");
     let run = Place::with_rows(rows).screen(&[]);
-    assert!(run.said.contains("Sheet `Substances`: 1 error value is written as text."), "{}", run.said);
+    assert!(run.said.contains("Sheet `Substances`: 1 error value is written as an error again where xlsx knows it, else as text."), "{}", run.said);
 }
 
 #[test]

@@ -32,7 +32,8 @@ fn check(file: &str) {
         let Some(recognised) = &sheet.recognised else {
             continue;
         };
-        let reader = RowReader::new(sheet.name.as_str().into(), recognised, UnstatedBasis::Unstated);
+        let reader = RowReader::new(sheet.name.as_str().into(), recognised, UnstatedBasis::Unstated)
+            .with_number_formats(inventory.number_formats());
         let mut substances = BTreeMap::new();
         let visit = |row| {
             let substance = reader.read(&row);

@@ -6,7 +6,7 @@ use kowledger::quantity::format_interval;
 use kowledger::substance::{
     DegradationKind, DegradationTest, Property, Reading, RowReader, Substance, UnstatedBasis,
 };
-use kowledger::workbook::{CellContent, StyleId};
+use kowledger::workbook::{CellContent, NumberFormat, StyleId};
 
 use crate::sheet::{columns_of, content_row, read_last, text_row};
 
@@ -141,7 +141,8 @@ fn read_formatted(header: &str, number: f64, style: u32) -> Result<Substance, St
     }
     let columns = columns_of(&[headers, data.clone()])?;
     let reader = RowReader::new("Sheet".into(), &columns, UnstatedBasis::Unstated);
-    Ok(reader.with_percentages([StyleId(2)]).read(&data))
+    let percent = NumberFormat::of_code("0.0%").ok_or("no format")?;
+    Ok(reader.with_number_formats([(StyleId(2), percent)]).read(&data))
 }
 
 fn content_of(substance: &Substance) -> Option<f64> {

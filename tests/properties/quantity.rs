@@ -1,8 +1,8 @@
 //! What holds for every text and every interval.
 
 use kowledger::quantity::{
-    Bound, Comparison, DecimalStyle, Dimension, Interval, Outcome, ReadAs, Scale, Unit, format_interval,
-    format_number, parse_limit, parse_quantities, parse_quantity,
+    Bound, Comparison, DecimalStyle, Dimension, Interval, LetterA, Outcome, ReadAs, Scale, Unit,
+    format_interval, format_number, parse_limit, parse_quantities, parse_quantity,
 };
 use proptest::prelude::{Just, Strategy, any, prop_assert, prop_assert_eq, prop_oneof, proptest};
 use proptest::sample::select;
@@ -51,7 +51,14 @@ const VOCABULARY: &str = concat!(
 );
 
 fn read_as(dimension: Dimension, decimal: DecimalStyle) -> ReadAs {
-    ReadAs { dimension, default_unit: dimension.canonical(), decimal, scale: Scale::Linear, molar_mass: None }
+    ReadAs {
+        dimension,
+        default_unit: dimension.canonical(),
+        decimal,
+        scale: Scale::Linear,
+        molar_mass: None,
+        letter_a: LetterA::Year,
+    }
 }
 
 /// Numbers with at most four digits, as they are written in cells.

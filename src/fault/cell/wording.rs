@@ -266,6 +266,11 @@ impl CellFaultKind {
                 "has no unit, and as a ratio of concentrations it depends on a temperature that is not certain",
                 "write it in Pa m3/mol, for example `1.5 Pa m3/mol`",
             ),
+            Self::ShownInThousands { shown } => say(
+                "shown in thousands",
+                format!("is shown as {shown} by the format of its cell, and either number may be meant"),
+                "give the cell a format that shows the number in full, or write the number with its unit",
+            ),
         }
     }
 }

@@ -5,7 +5,7 @@ use super::number::{read_number, read_power, starts_number};
 use super::qualifier::{Qualifier, strip_phrase, take_qualifier, take_qualifier_after};
 use super::range::read_upper_end;
 use super::units::take_unit;
-use super::{QuantityFault, ReadAs, Scale};
+use super::{LetterA, QuantityFault, ReadAs, Scale};
 use crate::quantity::{Bound, Dimension, Unit};
 
 /// What stands before the first number of a text.
@@ -191,7 +191,7 @@ fn goes_on_with_a_word(rest: &str, opening: &Opening<'_>, read_as: ReadAs) -> bo
     word("to")
         || accented
         || romance
-        || (word("a") && (is_no_unit || opening.frame == Frame::From))
+        || (word("a") && (is_no_unit || opening.frame == Frame::From || read_as.letter_a == LetterA::To))
         || (word("y") && (is_no_unit || opening.frame == Frame::Between))
 }
 

@@ -8,11 +8,12 @@ use super::pattern::fixed;
 use crate::columns::Column;
 use crate::fault::{CellFaultKind, nearest};
 use crate::quantity::{
-    Bound, DAYS_PER_MONTH, Date, Dimension, Quantity, QuantityFault, ReadAs, Scale, Unit, is_missing,
-    parse_quantities, quantity_of_number, tidy, unit_words,
+    Bound, DAYS_PER_MONTH, Date, Dimension, LetterA, Quantity, QuantityFault, ReadAs, Scale, Unit,
+    is_missing, parse_quantities, quantity_of_number, tidy, unit_words,
 };
 use crate::substance::Property;
 use crate::substance::parse::Said;
+use crate::substance::parse::doubt::said_in;
 pub(super) use crate::substance::parse::expected::Expected;
 use crate::substance::parse::expected::Sign;
 use crate::substance::parse::remark::{Degraded, folded};
@@ -43,15 +44,15 @@ pub(super) fn read_quantities(
     let default_unit = column.unit.unwrap_or_else(|| expected.dimension.canonical());
     let scale = expected.scale(default_unit);
     let dimension = expected.dimension;
-    let read_as = ReadAs { dimension, default_unit, decimal: column.decimal, scale, molar_mass };
+    let letter_a = if names_to_as_a(&column.header) { LetterA::To } else { LetterA::Year };
+    let read_as = ReadAs { dimension, default_unit, decimal: column.decimal, scale, molar_mass, letter_a };
     let read: Result<Vec<Read>, QuantityFault> = match content {
         CellContent::Number(number) => {
             quantity_of_number(*number, read_as).map(|quantity| vec![(quantity, Said::default())])
         }
         CellContent::Text(text) if speaks_of_other_toxicity(text, expected) => return Err(expected.not_a()),
         CellContent::Text(text) => parse_quantities(text, read_as).map(|values| {
-            let said = |remarks: &[String]| Said::in_remarks(remarks);
-            values.into_iter().map(|parsed| (parsed.quantity, said(&parsed.remarks))).collect()
+            values.into_iter().map(|parsed| (parsed.quantity, said_in(&parsed.remarks))).collect()
         }),
         CellContent::DateTime(_) => return Err(CellFaultKind::BecameDate { what: expected.what }),
         CellContent::Boolean(_) => return Err(expected.not_a()),
@@ -195,6 +196,15 @@ fn is_french(header: &str) -> bool {
         "duree", "marine",
     ];
     folded(header).split(' ').any(|word| FRENCH.contains(&word))
+}
+
+/// Whether a header is in a language in which `a` between numbers is `to`: it has a word that only those have.
+fn names_to_as_a(header: &str) -> bool {
+    const SPANISH_ITALIAN_PORTUGUESE: [&str; 16] = [
+        "vida", "semivida", "suelo", "suelos", "agua", "aguas", "dias", "tiempo", "dulce", "emivita",
+        "semivita", "suolo", "suoli", "acqua", "acque", "giorni",
+    ];
+    folded(header).split(' ').any(|word| SPANISH_ITALIAN_PORTUGUESE.contains(&word))
 }
 
 /// The cell as a user would read it; nothing for an empty cell.

@@ -4,6 +4,7 @@ use std::sync::Arc;
 
 use super::cell::{self, Expected};
 use super::companions::{self, Companions};
+use super::doubt::Doubt;
 use super::identity::{self, IdentityCells};
 use super::remark::{self, Said};
 use super::{UnstatedBasis, degradability, inherent, kinds, statements};
@@ -77,6 +78,17 @@ impl Draft {
             }
             self.fault(&cell.content, place, kind);
         }
+    }
+
+    /// Takes a cell that shows its number in thousands; where a number is asked for, either may be meant.
+    pub(super) fn take_scaled(&mut self, column: &Column, cell: &Cell, shown: String) {
+        let names = [Field::RowId, Field::Name, Field::CasNumber, Field::EcNumber];
+        if names.contains(&column.field) {
+            return self.take(column, cell);
+        }
+        let (sheet, row) = (Arc::clone(&self.substance.sheet), self.substance.row);
+        let place = CellRef { sheet, row, column: column.index };
+        self.fault(&cell.content, place, CellFaultKind::ShownInThousands { shown });
     }
 
     fn fault(&mut self, content: &CellContent, cell: CellRef, kind: CellFaultKind) {
@@ -344,18 +356,23 @@ fn cited<T>(value: Option<T>, cell: CellRef) -> Option<Cited<T>> {
 }
 
 fn waiting<T>(column: &Column, value: T, said: Said, cell: &CellRef) -> Waiting<T> {
-    let header = Said { basis: column.basis, conditions: column.conditions.clone(), ..Said::default() };
+    let doubt = Doubt::of(&column.header);
+    let header =
+        Said { basis: column.basis, conditions: column.conditions.clone(), doubt, ..Said::default() };
     Waiting { value, said, header, cell: cell.clone() }
 }
 
 /// The cell's own word first; then calculated if anything beside it says so, because an estimate is never shown as
-/// measured.
+/// measured. Nor is what anyone doubts.
 fn basis_of(cell: &Said, header: &Said, beside: &[&Said], unstated: UnstatedBasis) -> Basis {
     let others = || beside.iter().map(|said| said.basis).chain([header.basis]).flatten();
-    cell.basis
+    let basis = cell
+        .basis
         .or_else(|| others().find(|basis| *basis == Basis::Calculated))
         .or_else(|| others().next())
-        .unwrap_or_else(|| unstated.basis())
+        .unwrap_or_else(|| unstated.basis());
+    let doubted = beside.iter().chain([&cell, &header]).any(|said| said.doubt == Doubt::Voiced);
+    if doubted && basis == Basis::Measured { Basis::Unstated } else { basis }
 }
 
 fn reading(value: Waiting<Quantity>, beside: &[&Said], unstated: UnstatedBasis) -> Reading {

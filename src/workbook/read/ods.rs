@@ -1,7 +1,8 @@
 //! Workbooks of the OpenDocument format, in their container or as one XML file.
 //!
 //! The workbook is one XML text; it is walked through once to survey it and again for each sheet that is streamed, so
-//! that nothing but a row at a time is held. Cell formats are not read, save how dates, times and percentages are shown.
+//! that nothing but a row at a time is held. Cell formats are not read, save how dates, times, percentages and words around
+//! numbers are shown.
 
 mod looks;
 mod not_carried;
@@ -12,6 +13,7 @@ mod tests;
 mod text;
 mod value;
 mod walk;
+mod words;
 
 use std::fs::File;
 use std::ops::ControlFlow;
@@ -24,6 +26,7 @@ use crate::fault::{FileFault, FileKind};
 use crate::workbook::content::{Cell, Row};
 use crate::workbook::package::{Found as Part, Limits, Package, read_flat_xml};
 use crate::workbook::survey::SheetSurvey;
+use looks::Looks;
 use survey::Surveyor;
 use walk::{Found, StoredRow, Walk, Wanted};
 
@@ -33,6 +36,7 @@ const CONTENT: &str = "content.xml";
 /// A file of this kind, opened.
 pub(super) struct Book {
     xml: Xml,
+    looks: Looks,
 }
 
 /// Where the XML of the workbook comes from.
@@ -65,7 +69,7 @@ fn survey_book(path: &Path, mut xml: Xml, parts: Vec<String>) -> Result<Opened, 
         Ok(ControlFlow::Continue(()))
     })?;
     let damaged = |what: &str| FileFault::Damaged { path: shown.clone(), what: what.to_owned() };
-    let Some((sheets, book)) = surveyor.into_sheets() else {
+    let Some((sheets, book, looks)) = surveyor.into_sheets() else {
         return Err(FileFault::AnotherKind { path: shown, found: FileKind::Document });
     };
     if sheets.is_empty() {
@@ -78,7 +82,8 @@ fn survey_book(path: &Path, mut xml: Xml, parts: Vec<String>) -> Result<Opened, 
         }
     }
     let not_carried = not_carried::sentences(parts, &book, &sheets);
-    Ok(Opened { source: Source::Ods(Book { xml }), sheets, appearances: looks::appearances(), not_carried })
+    let appearances = looks.appearances();
+    Ok(Opened { source: Source::Ods(Book { xml, looks }), sheets, appearances, not_carried })
 }
 
 impl Book {
@@ -92,7 +97,7 @@ impl Book {
         if survey.used_columns == 0 {
             return Ok(());
         }
-        let mut walk = Walk::new(Wanted::Only(sheet));
+        let mut walk = Walk::new(Wanted::Only(sheet), self.looks.clone());
         let outcome = self.xml.read(|event| {
             let found = walk.visit(event).map_err(|fault| FileFault::Sheet { path: String::new(), fault })?;
             Ok(match found {

@@ -97,7 +97,7 @@ impl super::SheetSurvey {
         }
         if self.error_values > 0 {
             sentences.push(format!(
-                "Sheet `{}`: {} written as text.",
+                "Sheet `{}`: {} written as an error again where xlsx knows it, else as text.",
                 self.name,
                 count(self.error_values, "error value is", "error values are")
             ));

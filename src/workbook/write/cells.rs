@@ -2,7 +2,7 @@
 
 use std::borrow::Cow;
 
-use rust_xlsxwriter::{Note, Url, Worksheet, XlsxError};
+use rust_xlsxwriter::{Format, Formula, Note, Url, Worksheet, XlsxError};
 
 use crate::fault::FileFault;
 use crate::workbook::appearance::{Appearance, Lines};
@@ -184,6 +184,9 @@ fn write_cell(
     match (&cell.content, format) {
         (CellContent::Empty, None) => sheet,
         (CellContent::Empty, Some(format)) => sheet.write_blank(row, column, format)?,
+        (CellContent::Error(name), format) if is_error_value(name) => {
+            write_error(sheet, row, column, name, format)?
+        }
         (CellContent::Text(text) | CellContent::Error(text), Some(format)) => {
             sheet.write_string_with_format(row, column, shortened(text), format)?
         }
@@ -211,6 +214,28 @@ fn write_cell(
         (CellContent::Boolean(boolean), None) => sheet.write_boolean(row, column, *boolean)?,
     };
     Ok(())
+}
+
+/// The errors that a cell can hold as such (ECMA-376 part 1, 18.18.11, and what programs added since); others are text.
+fn is_error_value(name: &str) -> bool {
+    const VALUES: [&str; 8] =
+        ["#DIV/0!", "#N/A", "#NAME?", "#NULL!", "#NUM!", "#REF!", "#VALUE!", "#GETTING_DATA"];
+    VALUES.contains(&name)
+}
+
+/// The writing library has no errors but as results: the formula of the error itself has it as its result.
+fn write_error<'sheet>(
+    sheet: &'sheet mut Worksheet,
+    row: u32,
+    column: u16,
+    name: &str,
+    format: Option<&Format>,
+) -> Result<&'sheet mut Worksheet, XlsxError> {
+    let formula = Formula::new(format!("={name}")).set_result(name);
+    match format {
+        Some(format) => sheet.write_formula_with_format(row, column, formula, format),
+        None => sheet.write_formula(row, column, formula),
+    }
 }
 
 fn url(target: Target<'_>) -> Url {

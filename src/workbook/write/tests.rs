@@ -457,7 +457,7 @@ fn a_date_without_a_format_of_its_own_is_still_shown_and_read_as_a_date() {
     let contents: Vec<_> = row.cells.into_iter().map(|cell| cell.content).collect();
     assert_eq!(
         contents,
-        [CellContent::DateTime(46_000.0), CellContent::Text("#N/A".to_owned()), CellContent::Boolean(false),]
+        [CellContent::DateTime(46_000.0), CellContent::Error("#N/A".to_owned()), CellContent::Boolean(false),]
     );
     assert!(open_inventory(&path).unwrap().sheets()[0].column_widths[0].hidden);
 }
@@ -488,5 +488,60 @@ fn a_row_is_as_high_as_its_wrapped_texts_need() {
         r#"<row r="3" ht="30" customHeight="1">"#,
     ] {
         assert!(xml.contains(head), "{xml} lacks {head}");
+    }
+}
+
+#[test]
+fn errors_that_xlsx_knows_stay_errors_and_others_become_text() {
+    let (_folder, path) = place("out.xlsx");
+    let (mut book, sheet) = begin_with_sheet(&path);
+    let known = ["#DIV/0!", "#N/A", "#NAME?", "#NULL!", "#NUM!", "#REF!", "#VALUE!", "#GETTING_DATA"];
+    for (row, name) in (0..).zip(known.into_iter().chain(["#SPILL!", "Err:502", "#NV"])) {
+        let content = CellContent::Error(name.to_owned());
+        let cells = vec![Cell { column: 0, content, style: None, formula: true }];
+        book.write_row(sheet, &Row { index: row, cells }).unwrap();
+    }
+    book.finish().unwrap();
+    let contents: Vec<_> = rows_of(&path, 0).into_iter().map(|mut row| row.cells.remove(0).content).collect();
+    let mut expected: Vec<_> = known.iter().map(|name| CellContent::Error((*name).to_owned())).collect();
+    expected.extend(["#SPILL!", "Err:502", "#NV"].map(|name| CellContent::Text(name.to_owned())));
+    assert_eq!(contents, expected);
+}
+
+#[test]
+fn a_number_shown_with_words_keeps_its_number_and_its_format() {
+    let (folder, path) = place("out.xlsx");
+    let from = folder.path().join("inventory.xlsx");
+    let codes = ["0\" weken\"", "\"<\"0.0", "0;-0;\"n.d.\"", "[<1]\"< 1 d\";0\" d\"", "0.0%", "0,\"k\""];
+    let mut inventory = Workbook::new();
+    let sheet = inventory.add_worksheet();
+    for (row, code) in (0..).zip(codes) {
+        sheet.write_number_with_format(row, 0, 4.25, &Format::new().set_num_format(code)).unwrap();
+    }
+    inventory.save(&from).unwrap();
+    let mut inventory = open_inventory(&from).unwrap();
+    let rows = inventory.first_rows(0, 10).unwrap();
+    let mut book =
+        AnnotatedWorkbook::create(&path, &[&from], Overwrite::Refuse, day(), inventory.appearances())
+            .unwrap();
+    let sheet = book.add_sheet("Substances", Visibility::Visible).unwrap();
+    for row in &rows {
+        book.write_row(sheet, row).unwrap();
+    }
+    book.finish().unwrap();
+    let mut written = open_inventory(&path).unwrap();
+    let again = written.first_rows(0, 10).unwrap();
+    let formats = |inventory: &crate::workbook::Inventory, rows: &[Row]| -> Vec<_> {
+        let known: std::collections::BTreeMap<_, _> = inventory.number_formats().collect();
+        rows.iter().map(|row| known.get(&row.cells[0].style.unwrap()).cloned()).collect()
+    };
+    assert_eq!(formats(&written, &again), formats(&inventory, &rows));
+    assert!(formats(&written, &again).iter().all(Option::is_some));
+    for (row, code) in again.iter().zip(codes) {
+        assert_eq!(row.cells[0].content, CellContent::Number(4.25), "{code}");
+        assert!(
+            part(&path, "xl/styles.xml").contains(&code.replace('"', "&quot;").replace('<', "&lt;")),
+            "{code}"
+        );
     }
 }

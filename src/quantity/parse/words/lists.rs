@@ -35,6 +35,8 @@ pub(super) const MISSING_NUMBER: &[&str] = &[
     "not analyzed|data gap|nicht zutreffend|nicht angegeben|nicht untersucht|keine Information|keine Informationen",
     "keine Daten bekannt|unzutreffend|aucune information|geen informatie|nessuna informazione|ningún resultado",
     "情報なし|情報無し|データ不足|无信息",
+    "not measurable|not determinable|nicht messbar|nicht bestimmbar|non mesurable|non déterminable|no medible|non misurabile",
+    "non determinabile|niet meetbaar|測定不能|測定不可|測定できず|測定不可能|测定不能|无法测定|無法測定|无法测量|不能测定",
 ];
 
 /// Words that say something of a value but not how much; any of them may stand within a text.

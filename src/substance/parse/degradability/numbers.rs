@@ -8,7 +8,9 @@ use std::sync::LazyLock;
 use regex::{Captures, Regex};
 
 use super::window::without_window_as_written;
-use crate::quantity::{DecimalStyle, Dimension, Interval, ReadAs, Scale, Unit, parse_quantity, plain_words};
+use crate::quantity::{
+    DecimalStyle, Dimension, Interval, LetterA, ReadAs, Scale, Unit, parse_quantity, plain_words,
+};
 use crate::substance::parse::pattern::fixed;
 
 /// Days of a month, to tell a test of some months from one of 28 days.
@@ -90,6 +92,7 @@ const fn percent(decimal: DecimalStyle) -> ReadAs {
         decimal,
         scale: Scale::Linear,
         molar_mass: None,
+        letter_a: LetterA::Year,
     }
 }
 

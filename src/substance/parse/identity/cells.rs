@@ -47,7 +47,7 @@ pub(super) fn read_cas(content: &CellContent) -> Result<CasCell, CellFaultKind> 
         let date = Date::from_serial(*serial).ok_or(CellFaultKind::DateIsNoCas)?;
         return from_dates(&dates_in(&date.to_string()).unwrap_or_default());
     }
-    let Some(text) = cell::value_text(content) else {
+    let Some(text) = cell::value_text(content).filter(|text| !is_placeholder(text)) else {
         return Ok(CasCell::Missing);
     };
     if let Some(dates) = dates_in(&text) {
@@ -73,6 +73,11 @@ pub(super) fn read_cas(content: &CellContent) -> Result<CasCell, CellFaultKind> 
             (_, None) => read_cas_digits(&bare_digits(&text, [2..=10, 2..=2, 1..=1]).ok_or(not_a)?),
         },
     }
+}
+
+/// `000-000-0`, `0-00-0`: zeros in the form of a number, where there is none.
+fn is_placeholder(text: &str) -> bool {
+    text.contains('0') && text.contains('-') && text.bytes().all(|byte| matches!(byte, b'0' | b'-' | b' '))
 }
 
 fn cas_from_digits(digits: &str) -> Result<CasNumber, CasError> {
@@ -123,7 +128,7 @@ pub(super) fn read_ec(content: &CellContent) -> Result<EcCell, CellFaultKind> {
     if matches!(content, CellContent::DateTime(_)) {
         return Err(not_a);
     }
-    let Some(text) = cell::value_text(content) else {
+    let Some(text) = cell::value_text(content).filter(|text| !is_placeholder(text)) else {
         return Ok(EcCell::Missing);
     };
     let numbers = numbers_in(&text);

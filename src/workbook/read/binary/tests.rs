@@ -161,7 +161,7 @@ fn what_an_xls_has_besides_cells_is_carried_or_named() {
             "Workbook, not carried over: 1 chart.",
             "Sheet `Computed`, not carried over: 1 merged range, 1 link, notes or comments.",
             "Sheet `Computed`: 7 formulas are written as the last stored result.",
-            "Sheet `Computed`: 1 error value is written as text.",
+            "Sheet `Computed`: 1 error value is written as an error again where xlsx knows it, else as text.",
         ]
     );
 }

@@ -8,6 +8,7 @@ use crate::fault::SheetFault;
 use crate::workbook::content::CellContent;
 use crate::workbook::survey::{ColumnLayout, Extras, SheetSurvey, Visibility, clip_widths};
 
+use super::looks::Looks;
 use super::styles::Styles;
 use super::walk::{BookExtras, Found, StoredRow, Walk, Wanted};
 
@@ -23,7 +24,7 @@ pub(super) struct Surveyor {
 
 impl Surveyor {
     pub(super) fn new() -> Self {
-        Self { walk: Walk::new(Wanted::All), styles: Styles::default(), sheets: Vec::new() }
+        Self { walk: Walk::new(Wanted::All, Looks::default()), styles: Styles::default(), sheets: Vec::new() }
     }
 
     /// Takes the next event of the workbook's XML.
@@ -48,9 +49,9 @@ impl Surveyor {
         Ok(())
     }
 
-    /// The sheets, and what the workbook has besides; none if it is no workbook.
-    pub(super) fn into_sheets(self) -> Option<(Vec<SheetSurvey>, BookExtras)> {
-        self.walk.found_book.then_some((self.sheets, self.walk.book))
+    /// The sheets, what the workbook has besides, and its looks; none if it is no workbook.
+    pub(super) fn into_sheets(self) -> Option<(Vec<SheetSurvey>, BookExtras, Looks)> {
+        self.walk.found_book.then_some((self.sheets, self.walk.book, self.walk.looks))
     }
 
     fn begin_sheet(&mut self, name: &str, style: &str) -> Result<(), SheetFault> {

@@ -105,7 +105,7 @@ fn what_libreoffice_wrote_is_read_as_it_was_typed() {
         for (row, kind, value, shown, formula) in [
             (1, "number", CellContent::Number(4.25), None, false),
             (2, "percentage", CellContent::Number(0.125), shown_as("0.0%"), false),
-            (3, "currency", CellContent::Number(12.5), None, false),
+            (3, "currency", CellContent::Number(12.5), shown_as("0.00\" €\""), false),
             // 1 February 2026 is 46,054 days after 30 December 1899.
             (4, "date", CellContent::DateTime(46_054.0), shown_as("yyyy-mm-dd"), false),
             (5, "date and time", CellContent::DateTime(46_054.75), shown_as("yyyy-mm-dd hh:mm:ss"), false),
@@ -166,7 +166,7 @@ fn the_survey_of_what_libreoffice_wrote_knows_columns_and_what_is_not_carried() 
              2026-12-31, and percentages as percentages.",
             "Sheet `Stock`, not carried over: 1 hidden row (shown in the output), 1 merged range, notes or comments.",
             "Sheet `Stock`: 5 formulas are written as the last stored result.",
-            "Sheet `Stock`: 2 error values are written as text.",
+            "Sheet `Stock`: 2 error values are written as an error again where xlsx knows it, else as text.",
         ]
     );
 }

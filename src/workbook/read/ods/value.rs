@@ -6,7 +6,8 @@ use quick_xml::events::BytesStart;
 use crate::workbook::content::{CellContent, StyleId};
 use crate::workbook::serial::serial_of;
 
-use super::looks;
+use super::looks::{self, Looks};
+use super::words::format_of;
 
 /// What a cell's tag says.
 #[derive(Debug, Default)]
@@ -59,7 +60,11 @@ impl Stored {
     }
 
     /// The content and how it is to be shown, or in words what cannot be.
-    pub(super) fn content(self, shown: Option<String>) -> Result<(CellContent, Option<StyleId>), String> {
+    pub(super) fn content(
+        self,
+        shown: Option<String>,
+        looks: &mut Looks,
+    ) -> Result<(CellContent, Option<StyleId>), String> {
         if self.error {
             return Ok((CellContent::Error(shown.unwrap_or_else(|| "#VALUE!".to_owned())), None));
         }
@@ -76,7 +81,7 @@ impl Stored {
         };
         let shown = shown.unwrap_or_default();
         match self.kind.as_deref().unwrap_or_default() {
-            "float" | "currency" => Ok((number(&value)?, None)),
+            "float" | "currency" => Ok(with_words(number(&value)?, shown, looks)),
             // A content of 12 % is stored as 0.12. The look says that it is shown as a percentage.
             "percentage" => Ok((number(&value)?, Some(looks::percentage(&shown)))),
             "date" => Ok(date(value)),
@@ -118,6 +123,18 @@ fn number(value: &str) -> Result<CellContent, String> {
     let number: f64 = value.trim().parse().map_err(|_| format!("`{value}`, said to be a number"))?;
     // A number no spreadsheet can show is kept as the text it was.
     Ok(if number.is_finite() { CellContent::Number(number) } else { CellContent::Text(value.to_owned()) })
+}
+
+/// A number, and the look that shows the words around it.
+fn with_words(content: CellContent, shown: String, looks: &mut Looks) -> (CellContent, Option<StyleId>) {
+    let CellContent::Number(number) = content else {
+        return (content, None);
+    };
+    match format_of(&shown, number).map(|code| looks.of_code(code)) {
+        None => (content, None),
+        Some(Some(look)) => (content, Some(look)),
+        Some(None) => (CellContent::Text(shown), None),
+    }
 }
 
 /// A date before March 1900 has no serial number that programs agree on, and stays text.

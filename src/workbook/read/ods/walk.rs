@@ -12,6 +12,7 @@ use crate::workbook::content::{CellContent, StyleId};
 use crate::workbook::place::{CellRef, LAST_COLUMN, LAST_ROW};
 use crate::workbook::survey::Extras;
 
+use super::looks::Looks;
 use cell::CellDraft;
 
 /// The most bytes of text in one row; a row of an inventory has some thousand.
@@ -105,10 +106,12 @@ pub(super) struct Walk {
     pub(super) book: BookExtras,
     /// Whether a workbook was there at all.
     pub(super) found_book: bool,
+    /// The looks found so far.
+    pub(super) looks: Looks,
 }
 
 impl Walk {
-    pub(super) fn new(wanted: Wanted) -> Self {
+    pub(super) fn new(wanted: Wanted, looks: Looks) -> Self {
         Self {
             wanted,
             place: Place::Before,
@@ -126,6 +129,7 @@ impl Walk {
             extras: Extras::default(),
             book: BookExtras::default(),
             found_book: false,
+            looks,
         }
     }
 

@@ -87,7 +87,8 @@ impl Walk {
         let times = self.times(stored.repeated.take())?;
         let bytes = text.len();
         let formula = stored.formula;
-        let (content, look) = stored.content(text.into_text()).map_err(|what| self.unreadable(what))?;
+        let (content, look) =
+            stored.content(text.into_text(), &mut self.looks).map_err(|what| self.unreadable(what))?;
         if content != CellContent::Empty || formula {
             self.book.mixed_texts += u64::from(fonts == Fonts::Several);
             let last = self.next_column.saturating_add(times).saturating_sub(1);
