@@ -6,7 +6,7 @@ use regex::Regex;
 
 use super::cell::{self, Expected};
 use super::pattern::fixed;
-use super::remark::{Said, basis_in, folded, reliability_in_words};
+use super::remark::{Said, basis_said, folded, reliability_in_words};
 use crate::columns::Column;
 use crate::fault::CellFaultKind;
 use crate::substance::{Basis, Compartment, Property, Reading};
@@ -93,7 +93,8 @@ impl Companions {
         let bare = plain.len() <= 4 && plain.starts_with(|first: char| first.is_ascii_digit());
         let plain = if bare { format!("oecd {plain}") } else { plain };
         let mut said = said_by_method(&text);
-        said.basis = basis_in(&plain).or_else(|| STUDY_WORD.is_match(&plain).then_some(Basis::Measured));
+        let study = || STUDY_WORD.is_match(&plain).then_some(Basis::Measured);
+        said.basis = basis_said(&text, &plain).or_else(study);
         let number = TEST_NUMBER.captures(&plain).and_then(|found| Some(found.get(1)?.as_str().to_owned()));
         self.guidelines.push(Speaking { about, value: Guideline { said, number } });
     }
