@@ -8,9 +8,9 @@ use super::doubled::{
 use super::header_cell::{HeaderCell, Meaning};
 use super::header_row::Found;
 use super::hints::hint;
-use super::taken::{column_of, is_companion};
 use super::one_line;
 use super::overrides::option_for;
+use super::taken::{column_of, is_companion};
 use super::words::ColumnWords;
 use super::{Column, Recognised};
 use crate::quantity::Dimension;

@@ -27,6 +27,8 @@ pub(super) fn may_be_doubled(field: Field) -> bool {
             Field::Property(_)
                 | Field::Reliability
                 | Field::Guideline
+                | Field::Reference
+                | Field::LogKowMethod
                 | Field::HalfLifeTemperature
                 | Field::HazardStatements
                 | Field::ReadyBiodegradability

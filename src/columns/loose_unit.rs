@@ -92,7 +92,8 @@ fn is_strange_ratio(part: &str) -> bool {
     const LONGEST: usize = 12;
     let is_ratio = part.split_once('/').is_some_and(|(amount, rest)| {
         let amount = amount.trim().to_lowercase();
-        AMOUNTS.split(' ').any(|known| known == amount) && (1..=LONGEST).contains(&rest.trim().chars().count())
+        AMOUNTS.split(' ').any(|known| known == amount)
+            && (1..=LONGEST).contains(&rest.trim().chars().count())
     });
     is_ratio && parse_unit(part).is_none()
 }
@@ -103,7 +104,8 @@ fn lengths(end: usize) -> impl Iterator<Item = usize> {
 
 /// The words of a header, parted by spaces, underscores, hyphens and the like.
 fn pieces(plain: &str) -> Vec<&str> {
-    let parts = |character: char| character.is_whitespace() || matches!(character, '_' | '-' | '.' | ',' | ';' | ':');
+    let parts =
+        |character: char| character.is_whitespace() || matches!(character, '_' | '-' | '.' | ',' | ';' | ':');
     plain.split(parts).filter(|piece| !piece.is_empty()).collect()
 }
 
@@ -129,9 +131,10 @@ fn is_plain_unit(run: &[&str]) -> bool {
 fn unit_of(run: &[&str], dimension: Dimension) -> Option<Unit> {
     let measures = |unit: &Unit| unit.dimension() == dimension;
     let spaced = run.join(" ");
-    let strokes = run.split_last().filter(|(_, before)| !before.is_empty()).into_iter().flat_map(|(last, before)| {
-        [format!("{}/{last}", before.join(" ")), format!("{}{last}", before.concat())]
-    });
+    let strokes =
+        run.split_last().filter(|(_, before)| !before.is_empty()).into_iter().flat_map(|(last, before)| {
+            [format!("{}/{last}", before.join(" ")), format!("{}{last}", before.concat())]
+        });
     std::iter::once(spaced)
         .chain(strokes)
         .filter(|text| !is_doubtful(text, dimension) && !is_second(text))

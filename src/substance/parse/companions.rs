@@ -39,7 +39,7 @@ struct Guideline {
 /// The companion columns of a row.
 #[derive(Debug, Clone, PartialEq, Default)]
 pub(super) struct Companions {
-    method: Option<Said>,
+    methods: Vec<Said>,
     pub(super) log_kow_sd: Option<f64>,
     pub(super) log_kow_temperature: Option<f64>,
     pub(super) log_kow_ph: Option<f64>,
@@ -54,7 +54,7 @@ impl Companions {
     /// Takes a cell of the column on how the log Kow was obtained.
     pub(super) fn take_method(&mut self, content: &CellContent) {
         if let Some(text) = cell::value_text(content) {
-            self.method = Some(said_by_method(&text));
+            self.methods.push(said_by_method(&text));
         }
     }
 
@@ -99,10 +99,33 @@ impl Companions {
         self.guidelines.push(Speaking { about, value: Guideline { said, number } });
     }
 
+    /// Takes a cell of a column of references: `QSAR` lowers the basis of the value it stands beside, and `exp` alone tells
+    /// it. Titles of journals hold such words, too, so nothing longer makes a value measured.
+    pub(super) fn take_reference(&mut self, about: Option<Property>, content: &CellContent) {
+        const MOST_WORDS_OF_ROW: usize = 3;
+        let Some(text) = cell::value_text(content) else {
+            return;
+        };
+        let plain = folded(&text);
+        let words = plain.split(' ').count();
+        let is_told = match (basis_said(&text, &plain), about) {
+            (None, _) => false,
+            (Some(Basis::Measured), about) => about.is_some() && words == 1,
+            (Some(Basis::Unstated | Basis::Calculated | Basis::Estimated), Some(_)) => true,
+            (Some(Basis::Unstated | Basis::Calculated | Basis::Estimated), None) => {
+                words <= MOST_WORDS_OF_ROW
+            }
+        };
+        if is_told {
+            let said = Said { basis: basis_said(&text, &plain), ..Said::default() };
+            self.guidelines.push(Speaking { about, value: Guideline { said, number: None } });
+        }
+    }
+
     /// What method and guideline columns say of a property; `properties` are those the row has values of.
     pub(super) fn of_property(&self, property: Property, properties: &[Property]) -> Vec<&Said> {
         let only_one = properties.iter().all(|other| *other == property);
-        let method = self.method.iter().filter(|_| property == Property::LogKow);
+        let method = self.methods.iter().filter(|_| property == Property::LogKow);
         let guidelines = self.guidelines.iter().filter(|guideline| {
             let number = guideline.value.number.as_deref().and_then(tested_by);
             match (number, guideline.about) {
