@@ -1,7 +1,7 @@
 //! One header: its words, its brackets, and the field they name.
 
 use super::folding::{composed, header_words, is_sign, shown_words};
-use super::loose_unit::{doubtful_unit, is_doubtful, is_second, loose_unit};
+use super::loose_unit::{doubtful_unit, is_doubtful, is_second, loose_unit, several_units};
 use super::reading::{Brackets, NamesValue, Reading};
 use super::words::ColumnWords;
 use crate::quantity::{Dimension, Unit, parse_unit_of, tidy};
@@ -81,6 +81,9 @@ impl Header {
         let measures = |unit: &Unit| unit.dimension() == dimension;
         if dimension == Dimension::VolumePerMass && self.names_logarithm() {
             return Some(Unit::LogLitrePerKilogram);
+        }
+        if several_units(&self.brackets, dimension).is_some() {
+            return None;
         }
         let in_brackets = self
             .brackets

@@ -39,7 +39,7 @@ pub(super) fn doubtful_unit(plain: &str, brackets: &[String], dimension: Dimensi
     let bracket_parts = brackets.iter().flat_map(|bracket| bracket.split([',', ';']));
     let in_brackets =
         bracket_parts.map(str::trim).find(|part| is_doubtful(part, dimension) || is_strange_ratio(part));
-    if let Some(found) = in_brackets {
+    if let Some(found) = in_brackets.or_else(|| several_units(brackets, dimension).map(String::as_str)) {
         return Some(found.to_owned());
     }
     let (last, before) = pieces.split_last()?;
@@ -50,6 +50,7 @@ pub(super) fn doubtful_unit(plain: &str, brackets: &[String], dimension: Dimensi
         return Some((*found).to_owned());
     }
     let joined_pressure = dimension == Dimension::Pressure
+        && !matches!(*last, "mPa" | "MPa")
         && camel_parts(last).len() > 1
         && last.to_lowercase().ends_with("mpa");
     let is_identifier = plain.contains('_') && !plain.contains(char::is_whitespace);
@@ -60,6 +61,36 @@ pub(super) fn doubtful_unit(plain: &str, brackets: &[String], dimension: Dimensi
             && parse_unit(last).is_some_and(|unit| unit != Unit::One && unit.dimension() != dimension)
     };
     (joined_pressure || of_another()).then(|| (*last).to_owned())
+}
+
+/// The bracket with which several units of the same kind are named, such as `(d or wk)`: which of them a number has is not
+/// said.
+pub(super) fn several_units(brackets: &[String], dimension: Dimension) -> Option<&String> {
+    let mut known = None;
+    brackets.iter().find(|bracket| {
+        let units = units_in(bracket, dimension);
+        known = known.or(units.first().copied());
+        units.iter().any(|unit| known != Some(*unit))
+    })
+}
+
+/// The units between commas, strokes and words for `or`.
+fn units_in(bracket: &str, dimension: Dimension) -> Vec<Unit> {
+    const OR: [&str; 7] = [" or ", " oder ", " ou ", " o ", " of ", " OR ", " ODER "];
+    let unit = |text: &str| {
+        let text = Some(text.trim()).filter(|text| !is_doubtful(text, dimension))?;
+        parse_unit_of(text, dimension).filter(|unit| unit.dimension() == dimension)
+    };
+    if let Some(unit) = unit(bracket) {
+        return vec![unit];
+    }
+    let parted = OR.iter().fold(bracket.to_owned(), |text, or| text.replace(or, ";"));
+    let parts = parted.split([',', ';', '|']);
+    let units = parts.flat_map(|part| match unit(part) {
+        Some(unit) => vec![unit],
+        None => part.split('/').filter_map(unit).collect(),
+    });
+    units.collect()
 }
 
 /// What may be a unit and something else: a minimum, a month, a metre.
@@ -219,5 +250,8 @@ mod tests {
         assert_eq!(in_brackets("min", Dimension::Time).as_deref(), Some("min"));
         assert_eq!(in_brackets("oz/gal", Dimension::Concentration).as_deref(), Some("oz/gal"));
         assert_eq!(in_brackets("mg/L", Dimension::Concentration), None);
+        assert_eq!(in_brackets("days/weeks", Dimension::Time).as_deref(), Some("days/weeks"));
+        assert_eq!(in_brackets("d or wk", Dimension::Time).as_deref(), Some("d or wk"));
+        assert_eq!(in_brackets("d, days", Dimension::Time), None);
     }
 }
