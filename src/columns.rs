@@ -12,6 +12,7 @@ mod header_cell;
 mod header_row;
 mod hints;
 mod logarithms;
+mod loose_unit;
 mod lower_row;
 mod misspelt;
 mod overrides;

@@ -8,6 +8,8 @@ use super::doubled::{
 use super::header_cell::{HeaderCell, Meaning};
 use super::header_row::Found;
 use super::hints::hint;
+use super::one_line;
+use super::overrides::option_for;
 use super::taken::{column_of, is_companion};
 use super::words::ColumnWords;
 use super::{Column, Recognised};
@@ -41,6 +43,12 @@ pub(super) fn choose(sheet: &str, found: Found, words: &ColumnWords) -> Recognis
             unknown.push((cell.column, cell.text));
             continue;
         };
+        if let Some(word) = dimension_of(field).and_then(|dimension| cell.doubtful_unit(dimension)) {
+            remarks.push(doubtful_unit_remark(sheet, field, &cell, &word));
+            not_taken.insert(cell.column, format!("left aside; `{word}` may be a unit or not"));
+            unknown.push((cell.column, cell.text));
+            continue;
+        }
         match taken.get(&field) {
             Some((first, first_text)) if !may_be_doubled(field) => {
                 remarks.push(doubled_remark(sheet, field, (*first, first_text), &cell));
@@ -81,6 +89,17 @@ fn other_header_remark(sheet: &str, row: u32, taken: u32) -> String {
          each table a sheet of its own",
         row + 1,
         taken + 1
+    )
+}
+
+fn doubtful_unit_remark(sheet: &str, field: Field, cell: &HeaderCell, word: &str) -> String {
+    let symbol = dimension_of(field).map_or("", |dimension| dimension.canonical().symbol());
+    format!(
+        "{sheet}: column {} (`{}`) is left aside, because `{word}` may be a unit and may mean something else; write the \
+         unit in brackets, such as `({symbol})`, or say that its numbers are in {symbol} where a cell names no unit: {}",
+        column_letters(cell.column),
+        one_line(&cell.text),
+        option_for(sheet, cell.column, &cell.text, field.id())
     )
 }
 

@@ -4,7 +4,7 @@ use std::collections::BTreeSet;
 
 use super::header_cell::HeaderCell;
 use super::one_line;
-use super::overrides::place_of;
+use super::overrides::{option_for, place_of};
 use crate::substance::Field;
 use crate::workbook::column_letters;
 
@@ -27,6 +27,8 @@ pub(super) fn may_be_doubled(field: Field) -> bool {
             Field::Property(_)
                 | Field::Reliability
                 | Field::Guideline
+                | Field::Reference
+                | Field::LogKowMethod
                 | Field::HalfLifeTemperature
                 | Field::HazardStatements
                 | Field::ReadyBiodegradability
@@ -39,8 +41,9 @@ pub(super) fn both_read_remark(sheet: &str, field: Field, first: (u16, &str), se
         let (first, second) = (place_of(sheet, first.0), place_of(sheet, second.column));
         format!("to take one alone: --column '{first}=ignore' or --column '{second}=ignore'")
     } else {
-        let (first, second) = (one_line(first.1), one_line(&second.text));
-        format!("to take one alone: --column '{first}=ignore' or --column '{second}=ignore'")
+        let first = option_for(sheet, first.0, first.1, "ignore");
+        let second = option_for(sheet, second.column, &second.text, "ignore");
+        format!("to take one alone: {first} or {second}")
     };
     format!(
         "{sheet}: columns {} (`{}`) and {} (`{}`) both name {}; both are read, and a row in which they differ is not \
@@ -58,7 +61,9 @@ pub(super) fn doubled_remark(sheet: &str, field: Field, first: (u16, &str), seco
     let way_out = if first.1 == second.text {
         format!("to take the other: --column '{}=ignore'", place_of(sheet, first.0))
     } else {
-        format!("to take the other: --column '{}=ignore' --column '{}={id}'", first.1, second.text)
+        let first = option_for(sheet, first.0, first.1, "ignore");
+        let second = option_for(sheet, second.column, &second.text, id);
+        format!("to take the other: {first} {second}")
     };
     format!(
         "{sheet}: columns {} (`{}`) and {} (`{}`) both name {id}; {} is taken; {way_out}",

@@ -1,6 +1,7 @@
 //! One header: its words, its brackets, and the field they name.
 
 use super::folding::{composed, header_words, is_sign, shown_words};
+use super::loose_unit::{doubtful_unit, is_doubtful, is_second, loose_unit, several_units};
 use super::reading::{Brackets, NamesValue, Reading};
 use super::words::ColumnWords;
 use crate::quantity::{Dimension, Unit, parse_unit_of, tidy};
@@ -36,6 +37,8 @@ impl Header {
             return None;
         }
         let whole = tidy(&composed(text)).replace("(E)C", "C").replace("(e)c", "c");
+        // Alone it is short for `number`; elsewhere `n` stands for much else.
+        let whole = if whole.eq_ignore_ascii_case("n.") { "No".to_owned() } else { whole };
         let (plain, brackets) = part_brackets(&whole);
         let (plain, brackets) = if header_words(&plain).is_empty() {
             (brackets.join(" "), Vec::new())
@@ -79,10 +82,14 @@ impl Header {
         if dimension == Dimension::VolumePerMass && self.names_logarithm() {
             return Some(Unit::LogLitrePerKilogram);
         }
+        if several_units(&self.brackets, dimension).is_some() {
+            return None;
+        }
         let in_brackets = self
             .brackets
             .iter()
             .flat_map(|bracket| bracket.split([',', ';']).chain([bracket.as_str()]))
+            .filter(|part| !is_doubtful(part.trim(), dimension))
             .filter_map(|part| parse_unit_of(without_preposition(part), dimension));
         let after_signs = self.plain.rfind(is_sign).and_then(|place| {
             self.plain
@@ -96,9 +103,19 @@ impl Header {
         let after_signs = after_signs.and_then(|end| parse_unit_of(without_preposition(end), dimension));
         let at_end = (1..=words.len().min(4)).rev().filter_map(|length| {
             let end = words.get(words.len() - length..)?.join(" ");
+            if is_doubtful(&end, dimension) || is_second(&end) {
+                return None;
+            }
             parse_unit_of(without_preposition(end.trim_start_matches([',', '/', '-', ' '])), dimension)
         });
-        in_brackets.chain(after_signs).chain(at_end).find(measures)
+        let found = in_brackets.chain(after_signs).chain(at_end).find(measures);
+        found.or_else(|| loose_unit(&self.plain, dimension))
+    }
+
+    /// Words that may be a unit and may mean something else, where the header names no other.
+    pub(super) fn doubtful_unit(&self, dimension: Dimension) -> Option<String> {
+        let is_asked = dimension != Dimension::Dimensionless && self.unit(dimension).is_none();
+        is_asked.then(|| doubtful_unit(&self.plain, &self.brackets, dimension))?
     }
 
     /// A unit in brackets that does not measure what the column holds.

@@ -114,6 +114,15 @@ impl HeaderCell {
             || self.names.iter().any(|name| told.is_for(name))
     }
 
+    /// Words that may be a unit and may mean something else, where no other unit is named.
+    pub(super) fn doubtful_unit(&self, dimension: Dimension) -> Option<String> {
+        if !matches!(self.meaning, Meaning::Named(_)) || self.unit(dimension).is_some() {
+            return None;
+        }
+        let parts = self.parts.iter().chain(self.header.as_ref().filter(|_| self.parts.is_empty()));
+        parts.into_iter().find_map(|part| part.doubtful_unit(dimension))
+    }
+
     /// A unit in brackets that does not measure what the column holds.
     pub(super) fn strange_unit(&self, dimension: Dimension) -> Option<Unit> {
         self.parts.first().or(self.header.as_ref())?.strange_unit(dimension)

@@ -4,6 +4,7 @@ use super::header::Header;
 use super::header_cell::{HeaderCell, Meaning};
 use super::misspelt::nearly_named;
 use super::one_line;
+use super::overrides::option_for;
 use super::reading::Reading;
 use super::words::ColumnWords;
 use crate::substance::Field;
@@ -35,7 +36,7 @@ pub(super) fn hint(sheet: &str, cell: &HeaderCell, words: &ColumnWords) -> Hint 
         return Hint::default();
     };
     let place = format!("{sheet}: column {} (`{}`)", column_letters(cell.column), one_line(&cell.text));
-    let told = |field: &str| format!("--column '{}={field}'", one_line(&cell.text));
+    let told = |field: &str| option_for(sheet, cell.column, &cell.text, field);
     if let Meaning::NotInGroup(field) = cell.meaning {
         let id = field.id();
         return Hint {

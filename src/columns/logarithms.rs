@@ -5,6 +5,7 @@
 
 use std::collections::BTreeSet;
 
+use super::overrides::option_for;
 use super::{Column, Recognised, one_line};
 use crate::quantity::{DecimalStyle, Unit, format_number, tidy};
 use crate::substance::{Field, Property};
@@ -108,10 +109,11 @@ fn remark(sheet: &str, column: &Column, look: &Look) -> String {
     let (id, header) = (column.field.id(), one_line(&column.header));
     let title = column.field.property().map_or(id, Property::title);
     let place = format!("{sheet}: column {} (`{header}`)", column_letters(column.index));
+    let option = option_for(sheet, column.index, &column.header, id);
     match look {
         Look::Logarithms => format!(
             "{place} is left aside, because its numbers look like logarithms and its header does not say so; write \
-             `log {title}` as its header if they are, or say that they are none: --column '{header}={id}'"
+             `log {title}` as its header if they are, or say that they are none: {option}"
         ),
         Look::SmallNumbers => format!(
             "{place} holds numbers that look like logarithms; they are read in {}, as the header says; write `log \
@@ -120,8 +122,7 @@ fn remark(sheet: &str, column: &Column, look: &Look) -> String {
         ),
         Look::TooHigh(number) => format!(
             "{place} is left aside, because it holds {}, which is too high for a logarithm; write `{title} (L/kg)` as its \
-             header if its numbers are no logarithms, or correct the number, or say that they are: --column \
-             '{header}={id}'",
+             header if its numbers are no logarithms, or correct the number, or say that they are: {option}",
             format_number(*number)
         ),
     }

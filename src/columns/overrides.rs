@@ -1,6 +1,7 @@
 //! What the user says of a column: `--column 'Header=field'`.
 
 use super::folding::header_words;
+use super::one_line;
 use super::words::unknown_field;
 use crate::substance::Field;
 use crate::workbook::column_letters;
@@ -86,10 +87,21 @@ fn column_of_letters(letters: &str) -> Option<u16> {
     u16::try_from(number.checked_sub(1)?).ok()
 }
 
-/// A column of a sheet as `--column` takes it.
+/// A column of a sheet as `--column` takes it between quotation marks: with the sheet, unless its name holds one.
 pub(super) fn place_of(sheet: &str, column: u16) -> String {
     let letters = column_letters(column);
-    format!("{sheet}!{letters}:{letters}")
+    if sheet.contains('\'') { format!("{letters}:{letters}") } else { format!("{sheet}!{letters}:{letters}") }
+}
+
+/// What the user may write to say what a column holds. A header with an apostrophe ends a text in quotation marks, so such
+/// a column is named by its letter.
+pub(super) fn option_for(sheet: &str, column: u16, header: &str, field: &str) -> String {
+    let header = one_line(header);
+    if header.contains('\'') {
+        format!("--column '{}={field}'", place_of(sheet, column))
+    } else {
+        format!("--column '{header}={field}'")
+    }
 }
 
 #[cfg(test)]

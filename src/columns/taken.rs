@@ -57,7 +57,7 @@ pub(super) fn column_of(
 
 /// Fields that speak of another column's value and may name it.
 pub(super) fn is_companion(field: Field) -> bool {
-    matches!(field, Field::Reliability | Field::Guideline | Field::HalfLifeTemperature)
+    matches!(field, Field::Reliability | Field::Guideline | Field::Reference | Field::HalfLifeTemperature)
 }
 
 fn shown_unit(dimension: Dimension) -> &'static str {

@@ -133,7 +133,7 @@ fn sheet_rows(sheet: &SheetFacts) -> Vec<Vec<Entry>> {
         let why = format!("{left}; they stand below the header of another table in row {}", header + 1);
         rows.push(pair("Rows not screened", why));
     }
-    rows.push(pair("Header in row", (recognised.header_row + 1).to_string()));
+    rows.push(header_entry(recognised.header_top + 1, recognised.header_row + 1));
     for column in &recognised.columns {
         let unit = match (column.unit, column.field.default_unit()) {
             (Some(unit), _) if unit.symbol().is_empty() => String::new(),
@@ -149,10 +149,20 @@ fn sheet_rows(sheet: &SheetFacts) -> Vec<Vec<Entry>> {
         ));
     }
     rows.extend(recognised.unknown.iter().map(|(index, header)| {
-        pair(&format!("{} {header}", column_letters(*index)), "not recognised; carried along only".to_owned())
+        let why = recognised.not_taken.get(index).map_or("not recognised", String::as_str);
+        pair(&format!("{} {header}", column_letters(*index)), format!("{why}; carried along only"))
     }));
     rows.extend(recognised.remarks.iter().map(|remark| pair("Remark", remark.clone())));
     rows
+}
+
+/// The row of the header, or those read together.
+fn header_entry(top: u32, lowest: u32) -> Vec<Entry> {
+    match lowest.saturating_sub(top) {
+        0 => pair("Header in row", lowest.to_string()),
+        1 => pair("Header in rows", format!("{top} and {lowest}, read together")),
+        _ => pair("Header in rows", format!("{top} to {lowest}, read together")),
+    }
 }
 
 fn fault_rows(facts: &RunFacts) -> Vec<Vec<Entry>> {

@@ -52,11 +52,13 @@ pub(crate) fn unrecognised(plan: &Plan) -> Vec<String> {
             let unknown = screened.recognised.unknown.iter();
             let headers: Vec<String> = unknown
                 .map(|(column, header)| {
-                    format!("{} `{}`", column_letters(*column), header.replace('\n', " "))
+                    let why = screened.recognised.not_taken.get(column);
+                    let why = why.map(|why| format!(" ({why})")).unwrap_or_default();
+                    format!("{} `{}`{why}", column_letters(*column), header.replace('\n', " "))
                 })
                 .collect();
             format!(
-                "{}: not recognised and not used: {}; `--column 'Header=field'` says what a column holds",
+                "{}: not used: {}; `--column 'Header=field'` says what a column holds",
                 sheet.name,
                 headers.join(", ")
             )

@@ -172,7 +172,9 @@ fn a_header_with_one_misspelt_word_is_told_the_nearest_field() {
         // Some are near enough to be taken at once.
         let recognised = columns_of(&[text_row(0, &["CAS", header])]).unwrap();
         let taken = recognised.columns.get(1).map(|column| column.field.id());
-        let way_out = format!("is not recognised; if it is {field}: --column '{header}={field}'");
+        // An apostrophe would end the text in quotation marks.
+        let named = if header.contains('\'') { "Sheet!B:B" } else { header };
+        let way_out = format!("is not recognised; if it is {field}: --column '{named}={field}'");
         let hinted = recognised.remarks.iter().any(|remark| remark.contains(&way_out));
         assert!(taken == Some(field) || hinted, "{header}: {taken:?} {:?}", recognised.remarks);
     }
@@ -210,4 +212,39 @@ fn a_header_that_resembles_none_is_not_remarked_on() {
     ] {
         assert_eq!(remark_on(header), Ok(None), "{header}");
     }
+}
+
+#[test]
+fn a_column_whose_unit_is_not_certain_is_left_aside_until_the_user_names_it() {
+    for (header, unit) in [
+        ("DT50 soil min", "`min`"),
+        ("dt50_soil_m", "`m`"),
+        ("DT50 soil (days/weeks)", "`days/weeks`"),
+        ("dt50_soil_c", "`c`"),
+    ] {
+        let recognised = columns_of(&[text_row(0, &["CAS", header])]).unwrap();
+        assert_eq!(recognised.columns.len(), 1, "{header}");
+        let expected = format!(
+            "Sheet: column B (`{header}`) is left aside, because {unit} may be a unit and may mean something else; write \
+             the unit in brackets, such as `(d)`, or say that its numbers are in d where a cell names no unit: --column \
+             '{header}=half-life-soil'"
+        );
+        assert_eq!(recognised.remarks, [expected], "{header}");
+        assert_eq!(recognised.not_taken.get(&1), Some(&format!("left aside; {unit} may be a unit or not")));
+        let told = ColumnOverride::parse(&format!("{header}=half-life-soil")).unwrap();
+        let rows = [text_row(0, &["CAS", header]), text_row(1, &["50-29-3", "30"])];
+        let recognised = recognise("Sheet", &rows, words().unwrap(), &[told]).unwrap();
+        assert_eq!(recognised.columns.get(1).map(|column| column.unit), Some(None), "{header}");
+    }
+}
+
+#[test]
+fn a_column_whose_header_has_an_apostrophe_is_named_by_its_letter() {
+    let header = "Demi-vie dans l'eau et le sol";
+    let recognised = columns_of(&[text_row(0, &["CAS", header])]).unwrap();
+    let remark = recognised.remarks.first().unwrap();
+    assert!(remark.ends_with(": --column 'Sheet!B:B=half-life-soil'"), "{remark}");
+    assert!(
+        ColumnOverride::parse("Sheet!B:B=half-life-soil").is_ok_and(|told| recognised.has_column_of(&told))
+    );
 }

@@ -6,6 +6,7 @@ mod doubtful_columns;
 mod header_rows;
 mod identity;
 mod quantity;
+mod references;
 mod sheet;
 mod spellings;
 mod tables;

@@ -7,7 +7,7 @@ use regex::Regex;
 use super::cell::{self, Expected};
 use super::doubt::Doubt;
 use super::pattern::fixed;
-use super::remark::{Said, basis_in, folded, reliability_in_words};
+use super::remark::{Said, basis_said, folded, reliability_in_words};
 use crate::columns::Column;
 use crate::fault::CellFaultKind;
 use crate::substance::{Basis, Compartment, Property, Reading};
@@ -40,7 +40,7 @@ struct Guideline {
 /// The companion columns of a row.
 #[derive(Debug, Clone, PartialEq, Default)]
 pub(super) struct Companions {
-    method: Option<Said>,
+    methods: Vec<Said>,
     pub(super) log_kow_sd: Option<f64>,
     pub(super) log_kow_temperature: Option<f64>,
     pub(super) log_kow_ph: Option<f64>,
@@ -55,7 +55,7 @@ impl Companions {
     /// Takes a cell of the column on how the log Kow was obtained.
     pub(super) fn take_method(&mut self, content: &CellContent) {
         if let Some(text) = cell::value_text(content) {
-            self.method = Some(said_by_method(&text));
+            self.methods.push(said_by_method(&text));
         }
     }
 
@@ -94,15 +94,39 @@ impl Companions {
         let bare = plain.len() <= 4 && plain.starts_with(|first: char| first.is_ascii_digit());
         let plain = if bare { format!("oecd {plain}") } else { plain };
         let mut said = said_by_method(&text);
-        said.basis = basis_in(&plain).or_else(|| STUDY_WORD.is_match(&plain).then_some(Basis::Measured));
+        let study = || STUDY_WORD.is_match(&plain).then_some(Basis::Measured);
+        said.basis = basis_said(&text, &plain).or_else(study);
         let number = TEST_NUMBER.captures(&plain).and_then(|found| Some(found.get(1)?.as_str().to_owned()));
         self.guidelines.push(Speaking { about, value: Guideline { said, number } });
+    }
+
+    /// Takes a cell of a column of references: `QSAR` lowers the basis of the value it stands beside, and `exp` alone tells
+    /// it. Titles of journals hold such words, too, so nothing longer makes a value measured.
+    pub(super) fn take_reference(&mut self, about: Option<Property>, content: &CellContent) {
+        const MOST_WORDS_OF_ROW: usize = 3;
+        let Some(text) = cell::value_text(content) else {
+            return;
+        };
+        let plain = folded(&text);
+        let words = plain.split(' ').count();
+        let is_told = match (basis_said(&text, &plain), about) {
+            (None, _) => false,
+            (Some(Basis::Measured), about) => about.is_some() && words == 1,
+            (Some(Basis::Unstated | Basis::Calculated | Basis::Estimated), Some(_)) => true,
+            (Some(Basis::Unstated | Basis::Calculated | Basis::Estimated), None) => {
+                words <= MOST_WORDS_OF_ROW
+            }
+        };
+        if is_told {
+            let said = Said { basis: basis_said(&text, &plain), ..Said::default() };
+            self.guidelines.push(Speaking { about, value: Guideline { said, number: None } });
+        }
     }
 
     /// What method and guideline columns say of a property; `properties` are those the row has values of.
     pub(super) fn of_property(&self, property: Property, properties: &[Property]) -> Vec<&Said> {
         let only_one = properties.iter().all(|other| *other == property);
-        let method = self.method.iter().filter(|_| property == Property::LogKow);
+        let method = self.methods.iter().filter(|_| property == Property::LogKow);
         let guidelines = self.guidelines.iter().filter(|guideline| {
             let number = guideline.value.number.as_deref().and_then(tested_by);
             match (number, guideline.about) {

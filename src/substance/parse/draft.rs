@@ -143,8 +143,11 @@ impl Draft {
             Field::InherentBiodegradability => self.take_inherent(column, content, &cell)?,
             Field::HazardStatements => self.take_statements(content, cell)?,
             Field::Content | Field::Tonnage => self.take_amount(column, content, &cell)?,
-            Field::Reference
-            | Field::Year
+            Field::Reference => {
+                self.companions.take_reference(column.about, content);
+                self.carry_text(column.field, content, cell);
+            }
+            Field::Year
             | Field::Product
             | Field::Supplier
             | Field::Use

@@ -17,8 +17,8 @@ pub(super) use reliability::in_words as reliability_in_words;
 
 use crate::substance::{Basis, Conditions, DegradationKind, Property};
 use words::{
-    CALCULATED, DISSIPATION, GUIDELINE, HYDROLYSIS, MEASURED, NO_DEGRADATION, NOT_MEASURED,
-    NOT_OF_DEGRADATION, NOT_ULTIMATE, ORGANISM, PHOTOLYSIS, PRIMARY, ULTIMATE, VALUE_NAME,
+    CALCULATED, DISSIPATION, DOUBT, GUIDELINE, HYDROLYSIS, MEASURED, MEASURED_OR_CALCULATED, NO_DEGRADATION,
+    NOT_MEASURED, NOT_OF_DEGRADATION, NOT_ULTIMATE, ORGANISM, PHOTOLYSIS, PRIMARY, ULTIMATE, VALUE_NAME,
 };
 
 /// Basis and conditions as far as a text names them.
@@ -106,12 +106,11 @@ impl Said {
         }
         let is_guideline = GUIDELINE.is_match(&plain);
         self.other_half_life = self.other_half_life.or_else(|| other_half_life(&plain));
-        let basis = basis_in(&plain);
-        if basis.is_some() && self.basis != Some(Basis::Calculated) {
-            self.basis = basis;
-        }
-        let understood =
-            self.read_conditions(part, &plain) || (basis.is_some() && plain.split(' ').count() == 1);
+        let basis = basis_said(part, &plain);
+        self.basis = weaker(self.basis, basis);
+        // `measured?` is kept as written.
+        let is_certain = matches!(basis, Some(Basis::Measured | Basis::Calculated));
+        let understood = self.read_conditions(part, &plain) || (is_certain && plain.split(' ').count() == 1);
         if is_guideline || !understood {
             let method = self.conditions.method.get_or_insert_default();
             if !method.is_empty() {
@@ -199,6 +198,35 @@ fn other_half_life(plain: &str) -> Option<Property> {
         Some(Property::PhotolysisHalfLife)
     } else {
         DISSIPATION.is_match(plain).then_some(Property::DissipationHalfLife)
+    }
+}
+
+/// The basis that claims less: of a doubt and a word for measuring in the same remark, the doubt counts.
+pub(super) fn weaker(one: Option<Basis>, other: Option<Basis>) -> Option<Basis> {
+    let claims = |basis: Basis| match basis {
+        Basis::Calculated | Basis::Estimated => 0,
+        Basis::Unstated => 1,
+        Basis::Measured => 2,
+    };
+    one.into_iter().chain(other).min_by_key(|basis| claims(*basis))
+}
+
+/// How a text says that a value was obtained: `measured?` and `measured or calculated` leave that open, whatever values
+/// without a word count as.
+pub(super) fn basis_said(written: &str, plain: &str) -> Option<Basis> {
+    static STROKES: LazyLock<Regex> = LazyLock::new(|| fixed(r"[/|&+,;、・／]"));
+    let basis = basis_in(plain)?;
+    let is_asked = written.contains(['?', '？']) || DOUBT.is_match(plain);
+    let names_both = || {
+        let with_words = STROKES.replace_all(written, " or ");
+        MEASURED.is_match(plain)
+            && CALCULATED.is_match(plain)
+            && MEASURED_OR_CALCULATED.is_match(&folded(&with_words))
+    };
+    match basis {
+        Basis::Measured if is_asked => Some(Basis::Unstated),
+        Basis::Calculated if names_both() => Some(Basis::Unstated),
+        Basis::Measured | Basis::Unstated | Basis::Calculated | Basis::Estimated => Some(basis),
     }
 }
 

@@ -14,44 +14,42 @@ fn words(whole: &[&str], within: &[&str]) -> Regex {
     fixed_by_parts(&format!(r"\b(?:{})\b|{}", whole.join("|"), within.join("|")))
 }
 
+const CALCULATED_WORDS: &[&str] = &[
+    r"calc|calcd|calculat\w+|comput\w+|predict\w*|estimat\w*|est|qsars?|qspr|model|models|modell\w*|modeling|in silico",
+    r"read across|simul\w*|regression\w*|group contribution\w*|theor\w*|expected|presum\w*|probabl\w*|likely",
+    r"expert (?:judge?ment|opinion|estimate)|extrapol\w*|interpol\w*|assum\w+|default|worst case|analogues?",
+    r"berechn\w*|rechnerisch\w*|kalkul\w*|(?:ab)?geschatzt\w*|(?:ab)?geschaetzt\w*|(?:ab)?schatz\w*|vorhergesagt\w*",
+    r"vorhersag\w*|angenommen\w*|vermut\w*|voraussichtlich\w*|analogie\w*|expertenurteil",
+    r"calcul\w*|estim\w*|predit\w*|prediction\w*|modelis\w*|modeles?|suppose\w*|presume\w*|lecture croisee|par defaut",
+    r"predich\w*|previst\w*|modelad\w*|modelos?|teoric\w*|supuest\w*|presunt\w*|lectura cruzada|por defecto",
+    r"calcol\w*|stim\w*|predett\w*|modellat\w*|modell[oi]|presunt\w*|predefinit\w*",
+    r"berekend\w*|berekening\w*|geschat\w*|schatting\w*|voorspel\w*|gemodelleerd\w*|aangenomen|verondersteld\w*",
+];
+const CALCULATED_PARTS: &[&str] = &[
+    "計算",
+    "推定",
+    "推算",
+    "予測",
+    "概算",
+    "類推",
+    "外挿",
+    "モデル",
+    "计算",
+    "估算",
+    "估计",
+    "估計",
+    "预测",
+    "預測",
+    "推测",
+    "模型",
+    "类推",
+    "外推",
+    "理论",
+    "默认",
+];
+
 /// Said to be calculated, predicted, or taken from something else.
-pub(super) static CALCULATED: LazyLock<Regex> = LazyLock::new(|| {
-    words(
-        &[
-            r"calc|calcd|calculat\w+|comput\w+|predict\w*|estimat\w*|est|qsars?|qspr|model|models|modell\w*|modeling|in silico",
-            r"read across|simul\w*|regression\w*|group contribution\w*|theor\w*|expected|presum\w*|probabl\w*|likely",
-            r"expert (?:judge?ment|opinion|estimate)|extrapol\w*|interpol\w*|assum\w+|default|worst case|analogues?",
-            r"berechn\w*|rechnerisch\w*|kalkul\w*|(?:ab)?geschatzt\w*|(?:ab)?geschaetzt\w*|(?:ab)?schatz\w*|vorhergesagt\w*",
-            r"vorhersag\w*|angenommen\w*|vermut\w*|voraussichtlich\w*|analogie\w*|expertenurteil",
-            r"calcul\w*|estim\w*|predit\w*|prediction\w*|modelis\w*|modeles?|suppose\w*|presume\w*|lecture croisee|par defaut",
-            r"predich\w*|previst\w*|modelad\w*|modelos?|teoric\w*|supuest\w*|presunt\w*|lectura cruzada|por defecto",
-            r"calcol\w*|stim\w*|predett\w*|modellat\w*|modell[oi]|presunt\w*|predefinit\w*",
-            r"berekend\w*|berekening\w*|geschat\w*|schatting\w*|voorspel\w*|gemodelleerd\w*|aangenomen|verondersteld\w*",
-        ],
-        &[
-            "計算",
-            "推定",
-            "推算",
-            "予測",
-            "概算",
-            "類推",
-            "外挿",
-            "モデル",
-            "计算",
-            "估算",
-            "估计",
-            "估計",
-            "预测",
-            "預測",
-            "推测",
-            "模型",
-            "类推",
-            "外推",
-            "理论",
-            "默认",
-        ],
-    )
-});
+pub(super) static CALCULATED: LazyLock<Regex> = LazyLock::new(|| words(CALCULATED_WORDS, CALCULATED_PARTS));
 
 const MEASURED_WORDS: &[&str] = &[
     r"measured|measurement|meas|experiment\w*|exp|expt|exptl|glp|study|studie|versuch|gemessen\w*|messwert\w*|messung\w*",
@@ -64,6 +62,61 @@ const MEASURED_PARTS: &[&str] =
 
 /// Said to be measured, by a word that may be denied.
 pub(super) static MEASURED: LazyLock<Regex> = LazyLock::new(|| words(MEASURED_WORDS, MEASURED_PARTS));
+
+/// Doubt whether a value was measured, besides a question mark.
+pub(super) static DOUBT: LazyLock<Regex> = LazyLock::new(|| {
+    words(
+        &[
+            r"maybe|perhaps|possibl[ey]|unsure|uncertain|unclear|doubtful|questionable|unconfirmed|unverified|tbc|tbd|to be (?:confirmed|checked|verified)",
+            r"vielleicht|evtl|eventuell|moglicherweise|wahrscheinlich|unsicher|unklar|fraglich|unbestatigt|ungepruft|zu (?:prufen|klaren|bestatigen)",
+            r"peut etre|possiblement|probablement|incertain\w*|douteu\w*|a (?:verifier|confirmer)|quizas?|tal vez|acaso|dudos\w*|incierto|por (?:confirmar|verificar)",
+            r"forse|dubbi\w*|incert\w*|da (?:verificare|confermare)|misschien|mogelijk\w*|waarschijnlijk|onzeker|onduidelijk|twijfelachtig|te (?:bevestigen|controleren)",
+        ],
+        &[
+            "不明",
+            "不確か",
+            "要確認",
+            "未確認",
+            "おそらく",
+            "恐らく",
+            "たぶん",
+            "多分",
+            "かも",
+            "可能",
+            "也许",
+            "也許",
+            "大概",
+            "待确认",
+            "待確認",
+            "待核实",
+            "存疑",
+            "不确定",
+            "不確定",
+        ],
+    )
+});
+
+/// Words for measuring and for calculating side by side, joined by a word for `or` or `and`.
+pub(super) static MEASURED_OR_CALCULATED: LazyLock<Regex> = LazyLock::new(|| {
+    const JOINED: &str =
+        "(?: (?:values? |werte? )?(?:or|and|oder|und|ou|et|o|u|y|e|of|en|bzw|resp|vs)){1,2} ";
+    const JOINED_SIGNS: &str =
+        "値?(?:值)? ?(?:or ?|及び|および|または|又は|もしくは|と|か|或者?|和|及|与|與)+ ?";
+    let (measured, calculated) = (MEASURED_WORDS.join("|"), CALCULATED_WORDS.join("|"));
+    let (measured_parts, calculated_parts) = (MEASURED_PARTS.join("|"), CALCULATED_PARTS.join("|"));
+    fixed_by_parts(&format!(
+        concat!(
+            r"\b(?:{m}){j}(?:{c})\b|\b(?:{c}){j}(?:{m})\b|",
+            r"(?:{mp}){js}(?:{cp})|(?:{cp}){js}(?:{mp})"
+        ),
+        m = measured,
+        c = calculated,
+        j = JOINED,
+        mp = measured_parts,
+        cp = calculated_parts,
+        js = JOINED_SIGNS
+    ))
+});
 
 /// A denial before a word for measuring, or after it.
 pub(super) static NOT_MEASURED: LazyLock<Regex> = LazyLock::new(|| {
