@@ -22,5 +22,5 @@ pub use content::{Cell, CellContent, Row, StyleId};
 pub use look::{Look, Shade};
 pub use place::{CellRef, column_letters};
 pub use read::{Inventory, fingerprint_of_text, open_inventory};
-pub use survey::{ColumnLayout, SheetSurvey, Visibility};
+pub use survey::{ColumnLayout, SheetSurvey, Visibility, WideMerges};
 pub use write::{AnnotatedWorkbook, Overwrite, SheetId, Target, Value, free_sheet_name};

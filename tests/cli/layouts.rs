@@ -143,7 +143,7 @@ fn rows_below_the_header_of_another_table_are_not_screened_at_any_depth() {
             format!(
                 "Substances!A{header}: `Name` begins the header of another table, whose columns may hold other \
                  things, so the rows from here on are not screened; put that table on a sheet of its own\n1 cell could \
-                 not be read or used: 1 header of another table. The rows were screened with what remains; the sheet \
+                 not be read or used: 1 header of another table. The sheet \
                  `Conflicts` says cell by cell what to do.\nSubstances: 2 rows were not screened, below the header of \
                  another table in row {header}.\n"
             )

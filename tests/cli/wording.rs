@@ -45,6 +45,9 @@ fn examples() -> Vec<(&'static str, CellFaultKind)> {
         ("see section 2", Kind::NoStatement),
         ("Carc.", Kind::ClassWithoutCategory { class: "Carc.".to_owned() }),
         ("H302; 350", Kind::StatementUnread { part: "350".to_owned() }),
+        ("Solvents", Kind::HeadingRow),
+        ("* mean of two determinations", Kind::NoteRow),
+        ("Page 2 of 5", Kind::PageLabelRow),
     ]
 }
 

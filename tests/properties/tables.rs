@@ -193,15 +193,26 @@ fn every_cell_on_inherent_biodegradability_of_the_table_is_read_as_written_there
     });
 }
 
+/// What a row is taken for that is no substance; `substance` for one.
+fn kind_of_row(cells: &[&str]) -> Result<&'static str, String> {
+    let headers = ["Item no.", "Name", "CAS", "log Kow", "Tonnes per year"];
+    let contents: Vec<CellContent> = cells.iter().map(|cell| content(cell)).collect();
+    let rows = [text_row(0, &headers), content_row(1, &contents)];
+    let reader = RowReader::new("Sheet".into(), &columns_of(&rows)?, UnstatedBasis::Unstated);
+    let told = rows.last().and_then(|row| reader.no_substance(row));
+    Ok(told.map_or("substance", |fault| fault.kind.wording().title))
+}
+
 #[test]
 fn every_row_of_totals_of_the_table_is_told_from_substances() {
     check(include_str!("../fixtures/totals.tsv"), 5, 60, |cells| {
-        let headers = ["Item no.", "Name", "CAS", "log Kow", "Tonnes per year"];
-        let contents: Vec<CellContent> = cells.iter().map(|cell| content(cell)).collect();
-        let rows = [text_row(0, &headers), content_row(1, &contents)];
-        let columns = columns_of(&rows)?;
-        let reader = RowReader::new("Sheet".into(), &columns, UnstatedBasis::Unstated);
-        let totals = rows.last().and_then(|row| reader.totals_row(row));
-        Ok((if totals.is_some() { "total" } else { "substance" }.to_owned(), String::new()))
+        Ok((kind_of_row(cells)?.to_owned(), String::new()))
+    });
+}
+
+#[test]
+fn notes_headings_and_page_numbers_of_the_table_are_told_from_substances() {
+    check(include_str!("../fixtures/no_substance.tsv"), 5, 180, |cells| {
+        Ok((kind_of_row(cells)?.to_owned(), String::new()))
     });
 }

@@ -266,6 +266,21 @@ impl CellFaultKind {
                 "has no unit, and as a ratio of concentrations it depends on a temperature that is not certain",
                 "write it in Pa m3/mol, for example `1.5 Pa m3/mol`",
             ),
+            Self::HeadingRow => say(
+                "heading",
+                "stands alone in its row as a heading does, so the row was not screened",
+                "if it is a substance, give it a CAS number",
+            ),
+            Self::NoteRow => say(
+                "note",
+                "reads as a note and no substance, so the row was not screened",
+                "if it is a substance, give it a CAS number",
+            ),
+            Self::PageLabelRow => say(
+                "page label",
+                "is the number of a printed page, so the row was not screened",
+                "if it is a substance, give it a CAS number",
+            ),
         }
     }
 }
