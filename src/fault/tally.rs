@@ -205,7 +205,9 @@ mod tests {
             CellFault { kind: CellFaultKind::BeyondHeader { fields: 4, header: 3 }, ..fault(1, 3, "x") };
         let last = |faults: &[CellFault]| {
             let mut tally = FaultTally::default();
-            faults.iter().for_each(|fault| tally.add(fault));
+            for fault in faults {
+                tally.add(fault);
+            }
             tally.lines(20, "Conflicts").pop().unwrap_or_default()
         };
         let end = "the sheet `Conflicts` says cell by cell what to do.";

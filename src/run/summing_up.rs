@@ -32,7 +32,7 @@ pub(crate) fn how_read(inventory: &Inventory, left_aside: usize, asides: Option<
     let mut sentences = inventory.how_read().to_vec();
     if left_aside > 0 {
         sentences.push(format!(
-            "{} not screened, because of a cell that is told among the faults.",
+            "{} not screened, with more fields than the header; each is among the cells that could not be read.",
             count(left_aside, "row was", "rows were")
         ));
     }
