@@ -25,7 +25,7 @@ static LABEL: LazyLock<Regex> = LazyLock::new(|| {
         r"disclaimer|date|printed|printed on|last update|last updated|status|open|to ?do|",
         r"anmerkung|anmerkungen|bemerkung|bemerkungen|hinweis|hinweise|fussnote|fussnoten|quelle|quellen|legende|",
         r"abkurzungen|stand|datum|gedruckt|gedruckt am|offen|noch offen|",
-        r"remarque|remarques|nota bene|nb|n b|legende|abreviations|date d edition|en attente|",
+        r"remarque|remarques|nota bene|n b|legende|abreviations|date d edition|en attente|",
         r"notas?|observacion|observaciones|fuentes?|leyenda|abreviaturas|fecha|pendientes?|",
         r"osservazioni|osservazione|fonti|fonte|legenda|abbreviazioni|data|in sospeso|",
         r"opmerking|opmerkingen|toelichting|voetnoot|bron|bronnen|afkortingen|",
@@ -37,7 +37,7 @@ static LABEL: LazyLock<Regex> = LazyLock::new(|| {
 /// Words for notes that make a row one when they are all it says; `fonte` alone is cast iron.
 static HEAD_OF_NOTES: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
-        r"^(?:notes?|foot ?notes?|remarks?|abbreviations|legend|anmerkung|anmerkungen|bemerkungen|hinweise|fussnoten|legende|",
+        r"^(?:notes?|foot ?notes?|remarks?|abbreviations|anmerkung|anmerkungen|bemerkungen|hinweise|fussnoten|legende|",
         r"abkurzungen|remarque|remarques|notas?|observaciones|leyenda|abreviaturas|osservazioni|legenda|opmerking|",
         r"opmerkingen|toelichting|voetnoten|afkortingen|注|註|注記|備考|凡例|备注|備註|注释|说明)(?: ?\d{1,2})?$"
     ))
@@ -46,7 +46,7 @@ static HEAD_OF_NOTES: LazyLock<Regex> = LazyLock::new(|| {
 /// A numbered note without a colon: `Note 2.`, `注1）`.
 static NUMBERED: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
-        r"(?i)^[(（\[]?(?:(?:foot)?note|anmerkung|fu(?:ß|ss)note|remarque|nota|opmerking|voetnoot|注記|備考|备注|備註|[注註※])",
+        r"(?i)^[(（\[]?(?:(?:foot)?note|anmerkung|fu(?:ß|ss)note|remarque|nota|opmerking|voetnoot|注記|備考|备注|備註|[注註])",
         r"\s?[0-9０-９]{1,2}\s?(?:[.)）、\]]|\p{Pd}\s)\s*\S"
     ))
 });
@@ -58,36 +58,46 @@ static MARK: LazyLock<Regex> = LazyLock::new(|| {
     )
 });
 
-/// Words that say something, as no name does, anywhere in a text of folded words between spaces.
+/// Words that say something, as no name does, anywhere in a text of folded words between spaces. Words of a name may
+/// not be among them: `origin`, `average` and `unknown composition` stand in names.
 static SAYS: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
         r" (?:is|are|was|were|see|unless|please|values?|data|determinations?|reported|refers|indicates|denotes|means|",
         r"according to|based on|(?:mean|average) of|confidential business|",
         r"siehe|ist|sind|wurde|wurden|wird|werden|gemass|laut|mittelwert|werte?|daten|angaben?|sofern|bitte|lieferant|",
         r"lieferanten|",
-        r"voir|sont|selon|valeurs?|donnees|moyenne|sauf|fournisseurs?|",
-        r"vease|segun|valor|valores|datos|media de|promedio|salvo|proveedor|proveedores|",
+        r"voir|sont|selon|valeurs?|donnees|sauf|fournisseurs?|",
+        r"vease|segun|valor|valores|datos|salvo|proveedor|proveedores|",
         r"vedi|secondo|valore|valori|dati|sono|fornitore|",
-        r"zie|volgens|waarden?|gegevens|gemiddelde|tenzij|zijn|wordt|worden|leverancier) "
+        r"zie|volgens|waarden?|gegevens|tenzij|zijn|wordt|worden|leverancier) "
     ))
 });
 
-/// Words that no name begins with; further on in a name they may stand, as in `lead compounds, calculated as Pb`.
+/// Words that no name begins with; further on in a name they may stand, as in `lead compounds, calculated as Pb`. Left out
+/// are `non`, `no`, `per` and `para`, with which names begin: `non-ionic`, `No. 2 fuel oil`, `para-xylene`.
 static BEGINS: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
         r"^ (?:not|only|if|for|from|at|mean|average|measured|calculated|estimated|determined|assumed|",
         r"nicht|nur|bei|nach|fur|gemessen|berechnet|geschatzt|bestimmt|",
-        r"pour|chez|seulement|mesure|mesuree?s?|calcule|calculee?s?|estime|estimee?s?|determine|determinee?s?|",
-        r"solo|solamente|para|ver|no|medid[oa]s?|calculad[oa]s?|estimad[oa]s?|determinad[oa]s?|",
-        r"per|non|misurat[oaie]|calcolat[oaie]|stimat[oaie]|determinat[oaie]|",
-        r"alleen|voor|bij|niet|gemeten|berekend|geschat|bepaald) "
+        r"pour|chez|seulement|moyenne|mesure|mesuree?s?|calcule|calculee?s?|estime|estimee?s?|determine|determinee?s?|",
+        r"solamente|ver|media|promedio|medid[oa]s?|calculad[oa]s?|estimad[oa]s?|determinad[oa]s?|",
+        r"misurat[oaie]|calcolat[oaie]|stimat[oaie]|determinat[oaie]|",
+        r"alleen|voor|bij|niet|gemiddelde|gemeten|berekend|geschat|bepaald) "
     ))
 });
 
 /// Phrases of Japanese and Chinese notes.
 static SAYS_IN_SIGNS: LazyLock<Regex> = LazyLock::new(|| {
+    fixed(concat!(
+        r"[。]|です|ます|ください|参照|參照|場合|平均値|測定|推定|文献値|平均值|计算值|测定|估算|参见|參見|请|請|数据|數據|",
+        r"根据|根據|表示|供应商|供應商"
+    ))
+});
+
+/// What an abbreviation for a missing value is explained by.
+static EXPLAINS: LazyLock<Regex> = LazyLock::new(|| {
     fixed(
-        r"[。]|です|ます|ください|参照|參照|場合|平均値|測定|推定|文献値|计算值|測定値|平均值|测定|估算|参见|參見|请|請|数据|數據|根据|根據|表示|来源|來源|供应商|不明",
+        r" (?:not|no|non|none|nicht|keine?|ohne|sans|pas|aucune?|sin|senza|nessun|geen|niet|below|unter) |[不无無未]|なし",
     )
 });
 
@@ -103,9 +113,9 @@ static END_OF_LIST: LazyLock<Regex> = LazyLock::new(|| {
 /// The number of a page, in folded words.
 static PAGE: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
-        r"^(?:(?:page|pages|pag|seite|blatt|pagina|hoja|folio|blad|feuille|foglio)",
+        r"^(?:(?:page|pages|pag|seite|blatt|pagina|hoja|blad|feuille|foglio)",
         r" ?\d{1,5}(?: ?(?:of|von|de|sur|di|van) ?\d{1,5}| \d{1,5})?|",
-        r"(?:ペーシ|ページ|頁|页|第) ?\d{1,5}(?: ?(?:ページ|頁|页))?(?: ?(?:全|共|总|of)? ?\d{1,5} ?(?:ページ|頁|页)?)?|",
+        r"(?:(?:ペーシ|ページ|頁|页) ?\d{1,5}|第 ?\d{1,5} ?(?:ページ|頁|页))(?: ?(?:全|共|总|of)? ?\d{1,5} ?(?:ページ|頁|页)?)?|",
         r"\d{1,5} (?:\d{1,5} ?)?(?:ページ|頁|页)|\d{1,5}(?:ページ|頁|页))$"
     ))
 });
@@ -133,7 +143,8 @@ fn is_labelled(text: &str) -> bool {
         .split_once([':', '：'])
         .is_some_and(|(label, _)| short(label) && LABEL.is_match(&plain_words(label)));
     let explained = text.split_once('=').is_some_and(|(word, rest)| {
-        !word.trim().is_empty() && is_missing(word.trim()) && !rest.trim().is_empty()
+        let word = word.trim();
+        !word.is_empty() && is_missing(word) && EXPLAINS.is_match(&format!(" {} ", plain_words(rest)))
     });
     let alone = || {
         let words = plain_words(text);
@@ -142,7 +153,10 @@ fn is_labelled(text: &str) -> bool {
     labelled || explained || (short(text) && alone())
 }
 
+/// Whether a text behind a mark is a note. Words are parted by spaces alone: `at-risk` does not begin with `at`.
 fn follows_mark(rest: &str) -> bool {
-    let words = format!(" {} ", plain_words(rest));
+    let words: String = rest
+        .split_whitespace()
+        .fold(" ".to_owned(), |words, word| words + &plain_words(word).replace(' ', "-") + " ");
     is_labelled(rest) || SAYS.is_match(&words) || BEGINS.is_match(&words) || SAYS_IN_SIGNS.is_match(rest)
 }
