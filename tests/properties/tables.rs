@@ -6,7 +6,7 @@ use kowledger::quantity::{Date, format_number};
 use kowledger::substance::{
     Completeness, DegradationTest, Identity, RowReader, RowType, Substance, SubstanceType, UnstatedBasis,
 };
-use kowledger::workbook::CellContent;
+use kowledger::workbook::{CellContent, WideMerges};
 
 use crate::sheet::{columns_of, content_row, read_last_row, text_row};
 
@@ -241,4 +241,34 @@ fn no_name_of_the_example_is_taken_for_a_note_whatever_mark_stands_before_it() {
     }
     assert!(tried > 2000, "{tried}");
     assert!(wrong.is_empty(), "{wrong:#?}");
+}
+
+#[test]
+fn a_text_merged_across_columns_that_hold_different_things_is_a_heading() {
+    // The names stand across two columns throughout, as the header does.
+    let headers = text_row(0, &["Item no.", "Name", "", "CAS", "log Kow", "Tonnes per year"]);
+    let columns =
+        columns_of(&[headers, text_row(1, &["7", "Phenol", "", "108-95-2", "1.46", "12"])]).unwrap();
+    for (cells, merged, title) in [
+        (["Solvents", "", "", "", "", ""], Some((0, 5)), Some("heading")),
+        (["Solvents", "", "", "", "", ""], Some((0, 1)), Some("heading")),
+        (["", "Solvents", "", "", "", ""], Some((1, 3)), Some("heading")),
+        (["", "", "", "Solvents", "", ""], Some((3, 4)), Some("heading")),
+        (["Solvents", "", "", "", "", ""], None, None),
+        (["", "Rosin ester", "", "", "", ""], Some((1, 2)), None),
+        (["", "Rosin ester", "", "", "", ""], Some((0, 5)), None),
+        (["8", "Rosin ester", "", "", "", ""], Some((1, 3)), None),
+        (["", "Rosin ester", "", "", "", "12"], Some((1, 4)), None),
+        (["", "", "", "108-95-2", "", ""], Some((3, 5)), None),
+        (["", "", "", "108952", "", ""], Some((3, 5)), None),
+        (["", "", "", "", "soon", ""], Some((4, 5)), None),
+    ] {
+        let mut merges = WideMerges::default();
+        if let Some((first, last)) = merged {
+            merges.note(1, first, last);
+        }
+        let reader = RowReader::new("Sheet".into(), &columns, UnstatedBasis::Unstated).with_merges(merges);
+        let told = reader.no_substance(&text_row(1, &cells)).map(|fault| fault.kind.wording().title);
+        assert_eq!(told, title, "{cells:?} {merged:?}");
+    }
 }

@@ -15,11 +15,12 @@ use crate::fault::CellFaultKind;
 use crate::substance::Field;
 use crate::workbook::{Cell, CellContent, Row, WideMerges};
 
-/// Something that is or may be meant as a CAS number, an EC number, an `InChI` or its key.
+/// Something that is or may be meant as a CAS number, with or without its hyphens, an EC number, an `InChI` or its key.
 static NUMBER: LazyLock<Regex> = LazyLock::new(|| {
-    fixed(
-        r"(?i)\d{2,7}\s?\p{Pd}\s?\d{2}\s?\p{Pd}\s?\d|\d{3}\s?\p{Pd}\s?\d{3}\s?\p{Pd}\s?\d|inchi|[a-z]{14}-[a-z]{10}-[a-z]",
-    )
+    fixed(concat!(
+        r"(?i)\d{2,7}\s?\p{Pd}\s?\d{2}\s?\p{Pd}\s?\d|\d{3}\s?\p{Pd}\s?\d{3}\s?\p{Pd}\s?\d|\d{5}|",
+        r"inchi|[a-z]{14}-[a-z]{10}-[a-z]"
+    ))
 });
 
 /// The cell that says that the row holds no substance: its column, its text and what it is.
