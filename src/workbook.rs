@@ -23,5 +23,5 @@ pub use look::{Look, Shade};
 pub use number_format::{NumberFormat, ShownNumber};
 pub use place::{CellRef, column_letters};
 pub use read::{Inventory, fingerprint_of_text, open_inventory};
-pub use survey::{ColumnLayout, SheetSurvey, Visibility};
+pub use survey::{ColumnLayout, SheetSurvey, Visibility, WideMerges};
 pub use write::{AnnotatedWorkbook, Overwrite, SheetId, Target, Value, free_sheet_name};

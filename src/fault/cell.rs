@@ -230,6 +230,24 @@ pub enum CellFaultKind {
         /// The number as shown.
         shown: String,
     },
+    /// A heading above a group of rows.
+    HeadingRow,
+    /// A note or footnote among the rows.
+    NoteRow,
+    /// The number of a printed page among the rows.
+    PageLabelRow,
+}
+
+impl CellFaultKind {
+    /// Whether it tells that a row holds no substance, where no cell is wrong.
+    pub fn tells_no_substance(&self) -> bool {
+        matches!(self, Self::TotalsRow | Self::HeadingRow | Self::NoteRow | Self::PageLabelRow)
+    }
+
+    /// Whether rows are not screened because of it.
+    pub(super) fn stops_screening(&self) -> bool {
+        self.tells_no_substance() || matches!(self, Self::SecondHeader | Self::BeyondHeader { .. })
+    }
 }
 
 impl CellFault {

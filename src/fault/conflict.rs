@@ -208,6 +208,10 @@ pub struct ConflictCounts {
     pub cells_listed: usize,
     /// Rows left aside below the header of another table.
     pub rows_left: usize,
+    /// Rows that hold no substance, such as totals and headings.
+    pub rows_aside: usize,
+    /// Those of them that are listed.
+    pub rows_aside_listed: usize,
     /// Remarks on columns.
     pub columns: usize,
     /// CAS and EC numbers that stand on more than one row.
@@ -229,6 +233,9 @@ impl ConflictCounts {
         }
         if self.rows_left > 0 {
             found.push(format!("{} not screened", count(self.rows_left, "row was", "rows were")));
+        }
+        if self.rows_aside > 0 {
+            found.push(format!("{} no substance", count(self.rows_aside, "row holds", "rows hold")));
         }
         if self.columns > 0 {
             found.push(format!("{} in doubt", count(self.columns, "column is", "columns are")));
@@ -270,6 +277,12 @@ impl ConflictCounts {
             lines.push(format!(
                 "Only the first {} of the {} cells are listed; each of the others stands in the Cautions cell of its row.",
                 self.cells_listed, self.cells
+            ));
+        }
+        if self.rows_aside > self.rows_aside_listed {
+            lines.push(format!(
+                "Only the first {} of the {} rows without a substance are listed; each of the others says so itself.",
+                self.rows_aside_listed, self.rows_aside
             ));
         }
         if self.rows > self.rows_listed {

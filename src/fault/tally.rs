@@ -12,9 +12,13 @@ const GATHERED: usize = 100;
 #[derive(Debug, Clone, PartialEq, Default)]
 pub struct FaultTally {
     total: usize,
+    /// Those of them because of which rows were not screened.
+    stopping: usize,
     kinds: BTreeMap<&'static str, usize>,
     gathered: Vec<Gathered>,
     known: BTreeMap<Alike, usize>,
+    /// Rows without a substance, by what they hold.
+    asides: BTreeMap<&'static str, usize>,
 }
 
 /// A fault and how many more cells of its column hold the same.
@@ -28,10 +32,15 @@ struct Gathered {
 type Alike = (Arc<str>, u16, &'static str, String);
 
 impl FaultTally {
-    /// Counts a fault. Faults come in the order of the sheets' rows.
+    /// Counts a fault, or a row without a substance apart. Faults come in the order of the sheets' rows.
     pub fn add(&mut self, fault: &CellFault) {
         let title = fault.kind.wording().title;
+        if fault.kind.tells_no_substance() {
+            *self.asides.entry(title).or_default() += 1;
+            return;
+        }
         self.total += 1;
+        self.stopping += usize::from(fault.kind.stops_screening());
         *self.kinds.entry(title).or_default() += 1;
         let alike = (Arc::clone(&fault.cell.sheet), fault.cell.column, title, fault.shown().into_owned());
         let known = self.known.get(&alike).copied();
@@ -46,6 +55,28 @@ impl FaultTally {
     /// How many cells had a fault.
     pub fn total(&self) -> usize {
         self.total
+    }
+
+    /// How many rows held no substance.
+    pub fn asides(&self) -> usize {
+        self.asides.values().sum()
+    }
+
+    /// How many rows held no substance and what they hold, in a sentence; none where every row holds one.
+    pub fn told_asides(&self, sheet: &str) -> Option<String> {
+        let mut asides: Vec<(&str, usize)> =
+            self.asides.iter().map(|(title, rows)| (*title, *rows)).collect();
+        asides.sort_by_key(|(_, rows)| std::cmp::Reverse(*rows));
+        let parts: Vec<String> =
+            asides.iter().map(|(title, rows)| count(*rows, title, &format!("{title}s"))).collect();
+        (!parts.is_empty()).then(|| {
+            format!(
+                "{} no substance and {} not screened: {}; each says so in its row, and the sheet `{sheet}` lists them.",
+                count(self.asides(), "row holds", "rows hold"),
+                if self.asides() == 1 { "was" } else { "were" },
+                parts.join(", ")
+            )
+        })
     }
 
     /// How many cells had a fault of each kind, the most frequent first.
@@ -66,8 +97,13 @@ impl FaultTally {
         }
         if self.total > 0 {
             lines.push(format!(
-                "{}. The rows were screened with what remains; the sheet `{sheet}` says cell by cell what to do.",
-                self.total_by_kind()
+                "{}. {}he sheet `{sheet}` says cell by cell what to do.",
+                self.total_by_kind(),
+                match self.stopping {
+                    0 => "The rows were screened with what remains; t",
+                    stopping if stopping == self.total => "T",
+                    _ => "The other rows were screened with what remains; t",
+                }
             ));
         }
         lines
@@ -145,5 +181,48 @@ mod tests {
         let lines = tally.lines(20, "Conflicts");
         assert_eq!(lines.len(), 22);
         assert_eq!(lines[20], "... and 981 more", "the last cell is one of the first twenty");
+    }
+
+    #[test]
+    fn rows_without_a_substance_are_no_faults_and_are_told_apart() {
+        let mut tally = FaultTally::default();
+        let of = |kind, row| CellFault { kind, ..fault(row, 0, "Total") };
+        tally.add(&of(CellFaultKind::TotalsRow, 1));
+        let told = "1 row holds no substance and was not screened: 1 total; each says so in its row, and the sheet \
+                    `Conflicts` lists them.";
+        assert_eq!(tally.told_asides("Conflicts").as_deref(), Some(told));
+        (2..5).for_each(|row| tally.add(&of(CellFaultKind::HeadingRow, row)));
+        let told = "4 rows hold no substance and were not screened: 3 headings, 1 total; each says so in its row, and \
+                    the sheet `Conflicts` lists them.";
+        assert_eq!(tally.told_asides("Conflicts").as_deref(), Some(told));
+        assert_eq!((tally.total(), tally.asides(), tally.lines(20, "Conflicts").len()), (0, 4, 0));
+        assert_eq!(FaultTally::default().told_asides("Conflicts"), None);
+    }
+
+    #[test]
+    fn what_is_said_of_the_rows_holds_for_those_that_were_not_screened() {
+        let beyond =
+            CellFault { kind: CellFaultKind::BeyondHeader { fields: 4, header: 3 }, ..fault(1, 3, "x") };
+        let last = |faults: &[CellFault]| {
+            let mut tally = FaultTally::default();
+            for fault in faults {
+                tally.add(fault);
+            }
+            tally.lines(20, "Conflicts").pop().unwrap_or_default()
+        };
+        let end = "the sheet `Conflicts` says cell by cell what to do.";
+        assert!(
+            last(&[fault(1, 2, "x")])
+                .ends_with(&format!(". The rows were screened with what remains; {end}"))
+        );
+        let both = last(&[fault(1, 2, "x"), beyond.clone()]);
+        assert!(
+            both.ends_with(&format!(". The other rows were screened with what remains; {end}")),
+            "{both}"
+        );
+        assert!(
+            last(&[beyond])
+                .ends_with("row with too many fields. The sheet `Conflicts` says cell by cell what to do.")
+        );
     }
 }

@@ -89,9 +89,10 @@ impl Conflicts {
         &self.tally
     }
 
-    /// The faults with their wording, the first of them.
+    /// The faults with their wording, the first of them; rows without a substance are none.
     pub(crate) fn into_faults(self) -> Vec<CellFault> {
-        self.cells.into_iter().map(|line| line.fault).collect()
+        let faults = self.cells.into_iter().map(|line| line.fault);
+        faults.filter(|fault| !fault.kind.tells_no_substance()).collect()
     }
 
     /// Writes the sheet; its name in the output, and what it counts.
@@ -130,10 +131,13 @@ impl Conflicts {
         };
         let numbers = groups.iter().filter(of_numbers).count();
         let rows = groups.iter().map(Group::len).sum::<usize>();
+        let aside_listed = self.cells.iter().filter(|line| line.fault.kind.tells_no_substance()).count();
         ConflictCounts {
             cells: self.tally.total(),
-            cells_listed: self.cells.len(),
+            cells_listed: self.cells.len() - aside_listed,
             rows_left: written.unscreened.iter().flatten().map(|(_, left)| left).sum(),
+            rows_aside: self.tally.asides(),
+            rows_aside_listed: aside_listed,
             columns: written.recognised().map(|(_, recognised)| recognised.remarks.len()).sum(),
             numbers,
             names: groups.len() - numbers,

@@ -67,7 +67,7 @@ pub(crate) fn judge_row(
     };
     let outcome = match place {
         RowPlace::InTable if holds_data(&row, screened) => {
-            match beyond_header(&row, sheet, screened).or_else(|| screened.reader.totals_row(&row)) {
+            match beyond_header(&row, sheet, screened).or_else(|| screened.reader.no_substance(&row)) {
                 Some(fault) => Outcome::LeftAside(fault),
                 None => Outcome::Screened(Box::new(screen_row(&row, screened, reasoning, judge))),
             }

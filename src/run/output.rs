@@ -31,7 +31,7 @@ pub(crate) struct Output {
     screened: Vec<usize>,
     /// For each sheet, the row of another table's header and how many rows were left aside below it.
     unscreened: Vec<Option<(u32, usize)>>,
-    /// Rows that hold no substance, or whose values may stand in wrong columns.
+    /// Rows whose values may stand in wrong columns.
     left_aside: usize,
     headlines: Vec<(BTreeMap<Verdict, usize>, usize)>,
     reached: Vec<bool>,
@@ -124,7 +124,7 @@ impl Output {
                 self.conflicts.take_faults(sheet.index, vec![fault], None);
             }
             Outcome::LeftAside(fault) => {
-                self.left_aside += 1;
+                self.left_aside += usize::from(!fault.kind.tells_no_substance());
                 let why = unscreened_entries(added, &fault.to_string());
                 self.write_added(id, index, screened.first_added, &why)?;
                 self.conflicts.take_faults(sheet.index, vec![fault], None);
@@ -263,7 +263,11 @@ impl Output {
                     copied_because: sheet.copied_because.clone(),
                 })
                 .collect(),
-            how_read: how_read(inventory, self.left_aside),
+            how_read: how_read(
+                inventory,
+                self.left_aside,
+                self.conflicts.tally().told_asides(conflicts_sheet),
+            ),
             not_carried: inventory.not_carried().to_vec(),
             reasoning: match plan.reasoning {
                 ReasoningMode::All => "a line for every row, rulebook and criterion".to_owned(),

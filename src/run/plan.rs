@@ -129,7 +129,8 @@ impl Plan {
                         let first_added = survey.used_columns;
                         refuse_overwide(&survey.name, first_added, added.headers.len())?;
                         let reader = RowReader::new(survey.name.clone(), &recognised, settings.unstated)
-                            .with_number_formats(formats.iter().cloned());
+                            .with_number_formats(formats.iter().cloned())
+                            .with_merges(survey.merges.clone());
                         let header_fields = fields_of_header(inventory, recognised.header_row);
                         sheet.screened =
                             Some(Screened { recognised, reader, added, first_added, header_fields });

@@ -28,14 +28,15 @@ pub(crate) fn options(settings: &ScreenSettings) -> Vec<(&'static str, String)> 
 }
 
 /// How a file without cells of its own was read, and which rows were left aside.
-pub(crate) fn how_read(inventory: &Inventory, left_aside: usize) -> Vec<String> {
+pub(crate) fn how_read(inventory: &Inventory, left_aside: usize, asides: Option<String>) -> Vec<String> {
     let mut sentences = inventory.how_read().to_vec();
     if left_aside > 0 {
         sentences.push(format!(
-            "{} not screened, because of a cell that is told among the faults.",
+            "{} not screened, with more fields than the header; each is among the cells that could not be read.",
             count(left_aside, "row was", "rows were")
         ));
     }
+    sentences.extend(asides);
     sentences
 }
 

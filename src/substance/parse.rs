@@ -12,6 +12,8 @@ mod expected;
 mod identity;
 mod inherent;
 mod kinds;
+mod no_substance;
+mod notes;
 mod pattern;
 mod remark;
 mod statements;
@@ -23,10 +25,10 @@ use std::sync::Arc;
 pub(crate) use remark::Said;
 
 use crate::columns::{Column, Recognised};
-use crate::fault::{CellFault, CellFaultKind};
+use crate::fault::CellFault;
 use crate::quantity::DecimalStyle;
 use crate::substance::{Basis, Field, Property, Substance};
-use crate::workbook::{Cell, CellContent, CellRef, NumberFormat, Row, ShownNumber, StyleId};
+use crate::workbook::{Cell, CellContent, CellRef, NumberFormat, Row, ShownNumber, StyleId, WideMerges};
 use draft::Draft;
 
 /// What a value without a word on how it was obtained counts as (`--unstated`).
@@ -59,6 +61,7 @@ pub struct RowReader {
     columns: Vec<Column>,
     unstated: UnstatedBasis,
     formats: BTreeMap<StyleId, NumberFormat>,
+    merges: WideMerges,
 }
 
 impl RowReader {
@@ -66,7 +69,7 @@ impl RowReader {
     pub fn new(sheet: Arc<str>, columns: &Recognised, unstated: UnstatedBasis) -> Self {
         let mut columns = columns.columns.clone();
         columns.sort_by_key(|column| column.field != Field::Property(Property::MolarMass));
-        Self { sheet, columns, unstated, formats: BTreeMap::new() }
+        Self { sheet, columns, unstated, formats: BTreeMap::new(), merges: WideMerges::default() }
     }
 
     /// The same reader, which knows the cell formats that show more of a number than its digits: 0.12 as `12 %`, 4 as
@@ -77,11 +80,19 @@ impl RowReader {
         self
     }
 
-    /// The cell that says that the row holds a total and no substance, as a fault; `None` for a row of a substance.
-    pub fn totals_row(&self, row: &Row) -> Option<CellFault> {
-        let (column, found) = totals::totals_label(&self.columns, row)?;
+    /// The same reader, which knows the merged ranges of the sheet.
+    #[must_use]
+    pub fn with_merges(mut self, merges: WideMerges) -> Self {
+        self.merges = merges;
+        self
+    }
+
+    /// The cell that says that the row holds no substance but a total, a heading, a note or the number of a page, as a
+    /// fault; `None` for a row of a substance.
+    pub fn no_substance(&self, row: &Row) -> Option<CellFault> {
+        let (column, found, kind) = no_substance::label(&self.columns, row, &self.merges)?;
         let cell = CellRef { sheet: Arc::clone(&self.sheet), row: row.index, column };
-        Some(CellFault { cell, found, kind: CellFaultKind::TotalsRow })
+        Some(CellFault { cell, found, kind })
     }
 
     /// What the row says of its substance.

@@ -2,6 +2,7 @@
 //! reading library does not give (widths, hidden columns, which cells are formulas, what cannot be carried over).
 
 mod cells;
+mod merges;
 mod tail;
 mod value;
 
@@ -17,6 +18,7 @@ use super::contents::SheetEntry;
 use super::package::{Found, Package, attribute};
 use super::place::{LAST_COLUMN, parse_reference};
 use cells::CellCheck;
+pub use merges::WideMerges;
 pub(super) use tail::Extras;
 
 /// Whether a sheet's tab is shown.
@@ -65,6 +67,8 @@ pub struct SheetSurvey {
     pub formulas_without_result: usize,
     /// Rows and columns that stay in place when the user scrolls.
     pub frozen: Option<(u32, u16)>,
+    /// The merged ranges across two or more columns.
+    pub merges: WideMerges,
     /// Where the formulas stand: by column, runs of rows.
     pub(super) formula_runs: BTreeMap<u16, Vec<(u32, u32)>>,
     /// Error values the reading library does not know, in the order of the sheet.
@@ -118,6 +122,7 @@ pub(super) fn survey_sheet(
         error_values: 0,
         formulas_without_result: 0,
         frozen: None,
+        merges: WideMerges::default(),
         formula_runs: BTreeMap::new(),
         unknown_errors: Vec::new(),
         extras: Extras::default(),
@@ -227,8 +232,20 @@ fn read_tail(event: &Event<'_>, survey: &mut SheetSurvey) -> Result<(), SheetFau
     if name.as_ref() == "sheetData" {
         return Err(whole(survey, "stores its rows in two places"));
     }
+    if name.as_ref() == "mergeCell" {
+        note_merge(element, survey);
+    }
     survey.extras.note(name.as_ref());
     Ok(())
+}
+
+/// A range that cannot be read is none: nothing but the look of the sheet hangs on it.
+fn note_merge(element: &BytesStart<'_>, survey: &mut SheetSurvey) {
+    let range = attribute(element, "ref").unwrap_or_default();
+    let ends = range.split_once(':').map(|(first, last)| (parse_reference(first), parse_reference(last)));
+    if let Some((Some((row, first)), Some((_, last)))) = ends {
+        survey.merges.note(row, first, last);
+    }
 }
 
 /// Widths beyond the last used column would fall on the columns that are added there.

@@ -21,27 +21,6 @@ fn doubled_columns_are_told_with_the_way_out_which_works() {
 }
 
 #[test]
-fn a_row_of_totals_is_copied_told_once_and_not_screened() {
-    let place = Place::with_rows(vec![
-        texts(&["Name", "CAS", "log Kow", "BCF (L/kg)", "Tonnes per year"]),
-        texts(&["Phenol", "108-95-2", "1.46", "17", "12"]),
-        texts(&["Total petroleum hydrocarbons", "", "", "", "3"]),
-        texts(&["Total", "", "", "", "15"]),
-    ]);
-    let run = place.screen(&[]);
-    assert_eq!(run.status, 1);
-    let told = "Substances!A4: `Total` says that the row holds a total, so it was not screened; if it is a substance, \
-                give it a CAS number";
-    assert_eq!(run.complained.matches(told).count(), 1, "{}", run.complained);
-    let written = place.screened("Substances");
-    assert_eq!(written.under(1, "REACH B", 2), "screens out");
-    assert_eq!(written.under(1, "REACH B", 3), "no data");
-    assert_eq!(written.under(1, "REACH B", 4), "");
-    assert_eq!(written.under(1, "Tonnes per year", 4), "15");
-    assert!(written.under(1, "Cautions", 4).contains(told), "{}", written.text());
-}
-
-#[test]
 fn quiet_still_tells_remarks_on_columns() {
     let rows = vec![texts(&["Name", "Name (old)", "CAS"]), texts(&["Phenol", "DDT", "50-29-3"])];
     let run = Place::with_rows(rows).screen(&["--quiet"]);
@@ -143,7 +122,7 @@ fn rows_below_the_header_of_another_table_are_not_screened_at_any_depth() {
             format!(
                 "Substances!A{header}: `Name` begins the header of another table, whose columns may hold other \
                  things, so the rows from here on are not screened; put that table on a sheet of its own\n1 cell could \
-                 not be read or used: 1 header of another table. The rows were screened with what remains; the sheet \
+                 not be read or used: 1 header of another table. The sheet \
                  `Conflicts` says cell by cell what to do.\nSubstances: 2 rows were not screened, below the header of \
                  another table in row {header}.\n"
             )

@@ -21,6 +21,7 @@ mod conflicts;
 mod inputs;
 mod kinds;
 mod layouts;
+mod no_substance;
 mod outputs;
 mod place;
 mod wording;

@@ -6,7 +6,7 @@ use kowledger::quantity::{Date, format_number};
 use kowledger::substance::{
     Completeness, DegradationTest, Identity, RowReader, RowType, Substance, SubstanceType, UnstatedBasis,
 };
-use kowledger::workbook::CellContent;
+use kowledger::workbook::{CellContent, WideMerges};
 
 use crate::sheet::{columns_of, content_row, read_last_row, text_row};
 
@@ -193,15 +193,82 @@ fn every_cell_on_inherent_biodegradability_of_the_table_is_read_as_written_there
     });
 }
 
+/// A reader of rows with an item number, name, CAS number, log Kow and tonnage.
+fn reader_of_stock() -> Result<RowReader, String> {
+    let headers = text_row(0, &["Item no.", "Name", "CAS", "log Kow", "Tonnes per year"]);
+    let columns = columns_of(&[headers, text_row(1, &["7", "Phenol", "108-95-2", "1.46", "12"])])?;
+    Ok(RowReader::new("Sheet".into(), &columns, UnstatedBasis::Unstated))
+}
+
+/// What a row is taken for that is no substance; `substance` for one.
+fn kind_of_row(reader: &RowReader, cells: &[&str]) -> &'static str {
+    let contents: Vec<CellContent> = cells.iter().map(|cell| content(cell)).collect();
+    let told = reader.no_substance(&content_row(1, &contents));
+    told.map_or("substance", |fault| fault.kind.wording().title)
+}
+
+fn check_kinds_of_rows(table: &str, least: usize) {
+    let reader = reader_of_stock().unwrap_or_else(|error| panic!("{error}"));
+    check(table, 5, least, |cells| Ok((kind_of_row(&reader, cells).to_owned(), String::new())));
+}
+
 #[test]
 fn every_row_of_totals_of_the_table_is_told_from_substances() {
-    check(include_str!("../fixtures/totals.tsv"), 5, 60, |cells| {
-        let headers = ["Item no.", "Name", "CAS", "log Kow", "Tonnes per year"];
-        let contents: Vec<CellContent> = cells.iter().map(|cell| content(cell)).collect();
-        let rows = [text_row(0, &headers), content_row(1, &contents)];
-        let columns = columns_of(&rows)?;
-        let reader = RowReader::new("Sheet".into(), &columns, UnstatedBasis::Unstated);
-        let totals = rows.last().and_then(|row| reader.totals_row(row));
-        Ok((if totals.is_some() { "total" } else { "substance" }.to_owned(), String::new()))
-    });
+    check_kinds_of_rows(include_str!("../fixtures/totals.tsv"), 60);
+}
+
+#[test]
+fn notes_headings_and_page_numbers_of_the_table_are_told_from_substances() {
+    check_kinds_of_rows(include_str!("../fixtures/no_substance.tsv"), 220);
+}
+
+#[test]
+fn no_name_of_the_example_is_taken_for_a_note_whatever_mark_stands_before_it() {
+    let reader = reader_of_stock().unwrap_or_else(|error| panic!("{error}"));
+    let names = include_str!("../fixtures/inventory.tsv").lines().skip(1);
+    let names = names.filter_map(|line| line.split('\t').nth(4)).filter(|name| !["", "Total"].contains(name));
+    let mut wrong = Vec::new();
+    let mut tried = 0;
+    for name in names {
+        for mark in ["", "* ", "*", "** ", "† ", "‡", "§ ", "※", "¹ ", "1) ", "(2) ", "[3] ", "a) ", "(b) "]
+        {
+            tried += 1;
+            let marked = format!("{mark}{name}");
+            if kind_of_row(&reader, &["", &marked, "", "", ""]) != "substance" {
+                wrong.push(marked);
+            }
+        }
+    }
+    assert!(tried > 2000, "{tried}");
+    assert!(wrong.is_empty(), "{wrong:#?}");
+}
+
+#[test]
+fn a_text_merged_across_columns_that_hold_different_things_is_a_heading() {
+    // The names stand across two columns throughout, as the header does.
+    let headers = text_row(0, &["Item no.", "Name", "", "CAS", "log Kow", "Tonnes per year"]);
+    let columns =
+        columns_of(&[headers, text_row(1, &["7", "Phenol", "", "108-95-2", "1.46", "12"])]).unwrap();
+    for (cells, merged, title) in [
+        (["Solvents", "", "", "", "", ""], Some((0, 5)), Some("heading")),
+        (["Solvents", "", "", "", "", ""], Some((0, 1)), Some("heading")),
+        (["", "Solvents", "", "", "", ""], Some((1, 3)), Some("heading")),
+        (["", "", "", "Solvents", "", ""], Some((3, 4)), Some("heading")),
+        (["Solvents", "", "", "", "", ""], None, None),
+        (["", "Rosin ester", "", "", "", ""], Some((1, 2)), None),
+        (["", "Rosin ester", "", "", "", ""], Some((0, 5)), None),
+        (["8", "Rosin ester", "", "", "", ""], Some((1, 3)), None),
+        (["", "Rosin ester", "", "", "", "12"], Some((1, 4)), None),
+        (["", "", "", "108-95-2", "", ""], Some((3, 5)), None),
+        (["", "", "", "108952", "", ""], Some((3, 5)), None),
+        (["", "", "", "", "soon", ""], Some((4, 5)), None),
+    ] {
+        let mut merges = WideMerges::default();
+        if let Some((first, last)) = merged {
+            merges.note(1, first, last);
+        }
+        let reader = RowReader::new("Sheet".into(), &columns, UnstatedBasis::Unstated).with_merges(merges);
+        let told = reader.no_substance(&text_row(1, &cells)).map(|fault| fault.kind.wording().title);
+        assert_eq!(told, title, "{cells:?} {merged:?}");
+    }
 }

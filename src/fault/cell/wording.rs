@@ -271,6 +271,21 @@ impl CellFaultKind {
                 format!("is shown as {shown} by the format of its cell, and either number may be meant"),
                 "give the cell a format that shows the number in full, or write the number with its unit",
             ),
+            Self::HeadingRow => say(
+                "heading",
+                "stands alone in its row as a heading does, so the row was not screened",
+                "if it is a substance, give it a CAS number",
+            ),
+            Self::NoteRow => say(
+                "note",
+                "reads as a note and no substance, so the row was not screened",
+                "if it is a substance, give it a CAS number",
+            ),
+            Self::PageLabelRow => say(
+                "page label",
+                "is the number of a printed page, so the row was not screened",
+                "if it is a substance, give it a CAS number",
+            ),
         }
     }
 }

@@ -12,7 +12,7 @@ pub(super) mod texts;
 
 use std::collections::BTreeMap;
 
-use crate::workbook::survey::{Extras, SheetSurvey, Visibility};
+use crate::workbook::survey::{Extras, SheetSurvey, Visibility, WideMerges};
 
 /// A cell as its record holds it.
 #[derive(Debug, Clone, PartialEq)]
@@ -87,6 +87,7 @@ pub(super) fn empty_survey(name: &str, visibility: Visibility) -> SheetSurvey {
         error_values: 0,
         formulas_without_result: 0,
         frozen: None,
+        merges: WideMerges::default(),
         formula_runs: BTreeMap::new(),
         unknown_errors: Vec::new(),
         extras: Extras::default(),

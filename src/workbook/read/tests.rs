@@ -359,7 +359,7 @@ fn the_survey_knows_widths_formulas_and_what_is_not_carried() {
              <row r="2" hidden="1"><c r="A2"><f>2+2</f></c><c r="C2"><v>7</v></c></row>
              <row r="4"><c r="A4"><f>3+3</f><v>6</v></c><c r="F4" s="0"/></row>
            </sheetData>
-           <mergeCells><mergeCell ref="A1:B1"/></mergeCells><hyperlinks><hyperlink ref="A1"/><hyperlink ref="B1"/></hyperlinks>"#,
+           <mergeCells><mergeCell ref="A1:B1"/><mergeCell ref="A4:A5"/><mergeCell ref="nonsense"/></mergeCells><hyperlinks><hyperlink ref="A1"/><hyperlink ref="B1"/></hyperlinks>"#,
     )
     .part("xl/vbaProject.bin", "x")
     .part("xl/charts/chart1.xml", "x")
@@ -373,6 +373,10 @@ fn the_survey_knows_widths_formulas_and_what_is_not_carried() {
     assert_eq!((survey.used_columns, survey.last_row), (3, 3));
     assert_eq!((survey.formulas, survey.formulas_without_result), (3, 1));
     assert_eq!(survey.frozen, Some((2, 1)));
+    assert_eq!(
+        [(0, 0), (0, 1), (3, 0)].map(|(row, column)| survey.merges.last_column(row, column)),
+        [Some(1), None, None]
+    );
     let widths: Vec<_> = survey
         .column_widths
         .iter()
@@ -383,7 +387,7 @@ fn the_survey_knows_widths_formulas_and_what_is_not_carried() {
         inventory.not_carried(),
         [
             "Workbook, not carried over: 1 macro project, 1 chart.",
-            "Sheet `Substances`, not carried over: 1 hidden row (shown in the output), 1 merged range, 2 links.",
+            "Sheet `Substances`, not carried over: 1 hidden row (shown in the output), 3 merged ranges, 2 links.",
             "Sheet `Substances`: 3 formulas are written as the last stored result.",
             "Sheet `Substances`: 1 formula has no stored result and read as empty; open and save the workbook in a \
              spreadsheet program to fill them.",

@@ -147,6 +147,7 @@ fn what_an_xls_has_besides_cells_is_carried_or_named() {
     let inventory = fixture("kinds-of-cells.xls");
     let layout = &inventory.sheets()[1];
     assert_eq!(layout.frozen, Some((2, 1)));
+    assert_eq!([layout.merges.last_column(0, 3), layout.merges.last_column(0, 4)], [Some(5), None]);
     let widths: Vec<_> =
         layout.column_widths.iter().map(|layout| (layout.first, layout.last, layout.hidden)).collect();
     assert_eq!(widths, [(0, 0, false), (2, 2, true)]);

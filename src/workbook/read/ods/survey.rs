@@ -6,7 +6,7 @@ use quick_xml::events::Event;
 
 use crate::fault::SheetFault;
 use crate::workbook::content::CellContent;
-use crate::workbook::survey::{ColumnLayout, Extras, SheetSurvey, Visibility, clip_widths};
+use crate::workbook::survey::{ColumnLayout, Extras, SheetSurvey, Visibility, WideMerges, clip_widths};
 
 use super::looks::Looks;
 use super::styles::Styles;
@@ -72,6 +72,7 @@ impl Surveyor {
             error_values: 0,
             formulas_without_result: 0,
             frozen: None,
+            merges: WideMerges::default(),
             formula_runs: BTreeMap::new(),
             unknown_errors: Vec::new(),
             extras: Extras::default(),
@@ -89,6 +90,10 @@ impl Surveyor {
         for cell in &row.cells {
             let cells = rows.saturating_mul(usize::from(cell.repeated));
             survey.used_columns = survey.used_columns.max(cell.column.saturating_add(cell.repeated));
+            if cell.wide > 1 {
+                let last = cell.column.saturating_add(cell.wide - 1);
+                survey.merges.note(row.index, cell.column, last);
+            }
             if cell.formula {
                 survey.formulas += cells;
             }

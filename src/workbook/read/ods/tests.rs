@@ -147,6 +147,7 @@ fn the_survey_of_what_libreoffice_wrote_knows_columns_and_what_is_not_carried() 
     let inventory = open_inventory(&fixture("libreoffice.ods")).unwrap();
     let survey = &inventory.sheets()[0];
     assert_eq!((survey.used_columns, survey.last_row), (7, 39));
+    assert_eq!([survey.merges.last_column(39, 0), survey.merges.last_column(39, 3)], [Some(2), None]);
     assert_eq!((survey.formulas, survey.formulas_without_result, survey.error_values), (5, 0, 2));
     let hidden: Vec<_> = survey
         .column_widths

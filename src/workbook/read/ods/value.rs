@@ -25,6 +25,8 @@ pub(super) struct Stored {
     /// How many columns in a row hold the same.
     pub(super) repeated: Option<String>,
     pub(super) spans: bool,
+    /// How many columns a merged range that begins here is wide.
+    pub(super) columns: Option<u16>,
 }
 
 impl Stored {
@@ -50,9 +52,12 @@ impl Stored {
                     stored.truth = truth(&value()?);
                 }
                 "table:number-columns-repeated" => stored.repeated = Some(value()?),
-                "table:number-columns-spanned" | "table:number-rows-spanned" => {
-                    stored.spans |= value()? != "1";
+                "table:number-columns-spanned" => {
+                    let columns = value()?;
+                    stored.spans |= columns != "1";
+                    stored.columns = columns.parse().ok();
                 }
+                "table:number-rows-spanned" => stored.spans |= value()? != "1",
                 _ => {}
             }
         }

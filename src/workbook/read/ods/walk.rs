@@ -50,6 +50,8 @@ pub(super) struct StoredCell {
     pub(super) column: u16,
     /// How many cells in a row are the same.
     pub(super) repeated: u16,
+    /// How many columns the cell is wide: more than one where a merged range begins.
+    pub(super) wide: u16,
     pub(super) content: CellContent,
     pub(super) look: Option<StyleId>,
     pub(super) formula: bool,

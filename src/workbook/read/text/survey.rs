@@ -5,7 +5,7 @@ use std::path::Path;
 
 use crate::fault::LinesFault;
 use crate::workbook::place::{CellRef, LAST_ROW};
-use crate::workbook::survey::{Extras, SheetSurvey, Visibility};
+use crate::workbook::survey::{Extras, SheetSurvey, Visibility, WideMerges};
 use crate::workbook::write::free_sheet_name;
 
 use super::dialect::Dialect;
@@ -86,6 +86,7 @@ impl Surveyor {
             error_values: 0,
             formulas_without_result: 0,
             frozen: None,
+            merges: WideMerges::default(),
             formula_runs: BTreeMap::new(),
             unknown_errors: Vec::new(),
             extras: Extras::default(),

@@ -98,7 +98,7 @@ impl Pass {
                 self.pane = short(data, 2).zip(short(data, 0)).map(|(rows, columns)| (rows.into(), columns));
             }
             0x0081 if short(data, 0).unwrap_or(0) & 0x10 != 0 => self.purpose = Purpose::Dialog,
-            0x00E5 => (0..short(data, 0).unwrap_or(0)).for_each(|_| extras.note("mergeCell")),
+            0x00E5 => self.note_merges(data),
             0x01B8 => extras.note("hyperlink"),
             0x009D => extras.note("autoFilter"),
             0x01B0 => extras.note("conditionalFormatting"),
@@ -111,6 +111,17 @@ impl Pass {
             _ => {}
         }
         Ok(())
+    }
+
+    /// Each range has its first and last row, then its first and last column.
+    fn note_merges(&mut self, data: &[u8]) {
+        for range in 0..short(data, 0).unwrap_or(0) {
+            self.survey.extras.note("mergeCell");
+            let at = |number: usize| short(data, 2 + usize::from(range) * 8 + number * 2);
+            if let (Some(row), Some(first), Some(last)) = (at(0), at(2), at(3)) {
+                self.survey.merges.note(row.into(), first, last);
+            }
+        }
     }
 
     fn note_cells(&mut self, record: &Record<'_>) -> Result<(), SheetFault> {

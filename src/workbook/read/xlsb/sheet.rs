@@ -122,7 +122,10 @@ fn read_data(
 fn read_tail(kind: u16, data: &[u8], survey: &mut SheetSurvey) -> Result<(), SheetFault> {
     let element = match kind {
         0x0091 => return Err(whole(survey, "stores its rows in two places")),
-        0x00B0 => "mergeCell",
+        0x00B0 => {
+            note_merge(data, survey);
+            "mergeCell"
+        }
         0x01EE => "hyperlink",
         0x00A1 => "autoFilter",
         0x01CD => "conditionalFormatting",
@@ -137,4 +140,12 @@ fn read_tail(kind: u16, data: &[u8], survey: &mut SheetSurvey) -> Result<(), She
     };
     survey.extras.note(element);
     Ok(())
+}
+
+/// A range has its first and last row, then its first and last column.
+fn note_merge(data: &[u8], survey: &mut SheetSurvey) {
+    let column = |at| long(data, at).and_then(|column| u16::try_from(column).ok());
+    if let (Some(row), Some(first), Some(last)) = (long(data, 0), column(8), column(12)) {
+        survey.merges.note(row, first, last);
+    }
 }

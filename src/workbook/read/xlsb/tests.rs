@@ -338,3 +338,20 @@ fn no_damage_makes_the_reader_panic_or_misorder_cells() {
     }
     assert!(opened > 50, "only {opened} of the damaged workbooks were still readable");
 }
+
+#[test]
+fn merged_ranges_are_known_by_their_first_cell_if_they_are_wide() {
+    let cells = [wide_row(0), wide_number(0, 1.0)].concat();
+    let parts = xlsb_parts(&cells, 0);
+    let (name, sheet) = parts.iter().find(|(name, _)| name.contains("sheets/")).unwrap().clone();
+    let ranges = [
+        wide_record(0x00B0, &longs(&[0, 0, 0, 3], &[])),
+        wide_record(0x00B0, &longs(&[4, 6, 2, 3], &[])),
+        wide_record(0x00B0, &longs(&[8, 9, 2, 2], &[])),
+        wide_record(0x00B0, &longs(&[8], &[])),
+    ];
+    let (_folder, inventory) = opened(&with_part(parts, name, [sheet, ranges.concat()].concat()));
+    let merges = &inventory.sheets()[0].merges;
+    let places = [(0, 0), (4, 2), (5, 2), (8, 2)];
+    assert_eq!(places.map(|(row, column)| merges.last_column(row, column)), [Some(3), Some(3), None, None]);
+}

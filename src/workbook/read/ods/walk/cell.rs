@@ -86,7 +86,7 @@ impl Walk {
         let CellDraft { mut stored, text, fonts } = std::mem::take(&mut self.cell);
         let times = self.times(stored.repeated.take())?;
         let bytes = text.len();
-        let formula = stored.formula;
+        let (formula, wide) = (stored.formula, stored.columns.unwrap_or(1));
         let (content, look) =
             stored.content(text.into_text(), &mut self.looks).map_err(|what| self.unreadable(what))?;
         if content != CellContent::Empty || formula {
@@ -103,6 +103,7 @@ impl Walk {
             self.row.cells.push(StoredCell {
                 column: u16::try_from(self.next_column).unwrap_or(LAST_COLUMN),
                 repeated: u16::try_from(times).unwrap_or(1),
+                wide,
                 content,
                 look,
                 formula,
