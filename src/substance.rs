@@ -97,6 +97,8 @@ pub struct Conditions {
     pub degradation: DegradationKind,
     /// Year of the study or its publication.
     pub year: Option<u16>,
+    /// A doubt about the value, as written: `?`, `unsicher`.
+    pub doubt: Option<String>,
 }
 
 /// A numeric value of the row.

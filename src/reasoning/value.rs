@@ -76,6 +76,9 @@ pub(crate) fn value_phrase(told: Told, used: &Used) -> String {
     if evidence.unit.is_rescaled() {
         beside.push(format!("written as {}", as_written(evidence)));
     }
+    if let Some(doubt) = &evidence.conditions.doubt {
+        beside.push(format!("doubted where it stands: `{doubt}`"));
+    }
     match used.adjustment {
         Some(Adjustment::HalfLifeTemperature { from, to, factor }) => beside.push(format!(
             "tested at {} °C; {} at {} °C, {factor:.2} times that",

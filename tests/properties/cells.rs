@@ -128,6 +128,7 @@ fn conditions(reading: &Reading) -> String {
         conditions.year.map(|year| format!("year {year}")),
         conditions.organism.as_ref().map(|organism| format!("organism {organism}")),
         conditions.method.as_ref().map(|method| format!("method {method}")),
+        conditions.doubt.as_ref().map(|doubt| format!("doubt {doubt}")),
     ];
     parts.into_iter().flatten().collect::<Vec<_>>().join("; ")
 }

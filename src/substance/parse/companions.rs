@@ -5,7 +5,7 @@ use std::sync::LazyLock;
 use regex::Regex;
 
 use super::cell::{self, Expected};
-use super::doubt::Doubt;
+use super::doubt::doubt_in;
 use super::pattern::fixed;
 use super::remark::{Said, basis_said, folded, reliability_in_words};
 use crate::columns::Column;
@@ -210,7 +210,7 @@ pub(super) fn single(
 
 fn said_by_method(text: &str) -> Said {
     let mut said = Said::in_remarks(&[text.to_owned()]);
-    said.doubt = Doubt::of(text);
+    said.conditions.doubt = doubt_in(text);
     said.conditions.method = Some(text.to_owned());
     said
 }

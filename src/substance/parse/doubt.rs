@@ -7,16 +7,6 @@ use regex::Regex;
 use super::pattern::fixed;
 use super::remark::{Said, folded};
 
-/// Whether words doubt a value.
-#[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
-pub(crate) enum Doubt {
-    /// They do not.
-    #[default]
-    None,
-    /// They do.
-    Voiced,
-}
-
 // In the eight languages, folded.
 static DOUBTFUL: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
@@ -28,25 +18,15 @@ static DOUBTFUL: LazyLock<Regex> = LazyLock::new(|| {
     ))
 });
 
-impl Doubt {
-    /// What a text says of it.
-    pub(super) fn of(text: &str) -> Self {
-        let doubts = text.contains(['?', '？']) || DOUBTFUL.is_match(&folded(text));
-        if doubts { Self::Voiced } else { Self::None }
-    }
+/// A text that doubts a value, as written.
+pub(super) fn doubt_in(text: &str) -> Option<String> {
+    let doubts = text.contains(['?', '？']) || DOUBTFUL.is_match(&folded(text));
+    doubts.then(|| text.trim().to_owned())
 }
 
-/// What the remarks of a cell say, with the doubt they voice; a lone question mark is kept as it is written.
+/// What the remarks of a cell say, with the doubt they voice.
 pub(super) fn said_in(remarks: &[String]) -> Said {
     let mut said = Said::in_remarks(remarks);
-    for remark in remarks.iter().filter(|remark| Doubt::of(remark) == Doubt::Voiced) {
-        said.doubt = Doubt::Voiced;
-        let method = said.conditions.method.get_or_insert_default();
-        if !method.contains(remark.trim()) {
-            let separator = if method.is_empty() { "" } else { "; " };
-            method.push_str(separator);
-            method.push_str(remark.trim());
-        }
-    }
+    said.conditions.doubt = remarks.iter().find_map(|remark| doubt_in(remark));
     said
 }

@@ -4,7 +4,7 @@ use std::sync::Arc;
 
 use super::cell::{self, Expected};
 use super::companions::{self, Companions};
-use super::doubt::Doubt;
+use super::doubt::doubt_in;
 use super::identity::{self, IdentityCells};
 use super::remark::{self, Said};
 use super::{UnstatedBasis, degradability, inherent, kinds, statements};
@@ -359,9 +359,9 @@ fn cited<T>(value: Option<T>, cell: CellRef) -> Option<Cited<T>> {
 }
 
 fn waiting<T>(column: &Column, value: T, said: Said, cell: &CellRef) -> Waiting<T> {
-    let doubt = Doubt::of(&column.header);
-    let header =
-        Said { basis: column.basis, conditions: column.conditions.clone(), doubt, ..Said::default() };
+    let mut conditions = column.conditions.clone();
+    conditions.doubt = doubt_in(&column.header);
+    let header = Said { basis: column.basis, conditions, ..Said::default() };
     Waiting { value, said, header, cell: cell.clone() }
 }
 
@@ -374,7 +374,9 @@ fn basis_of(cell: &Said, header: &Said, beside: &[&Said], unstated: UnstatedBasi
         .or_else(|| others().find(|basis| *basis == Basis::Calculated))
         .or_else(|| others().next())
         .unwrap_or_else(|| unstated.basis());
-    let doubted = beside.iter().chain([&cell, &header]).any(|said| said.doubt == Doubt::Voiced);
+    // What the cell says of itself, nothing beside it doubts.
+    let beside = beside.iter().chain([&header]).filter(|_| cell.basis.is_none());
+    let doubted = beside.chain([&cell]).any(|said| said.conditions.doubt.is_some());
     if doubted && basis == Basis::Measured { Basis::Unstated } else { basis }
 }
 
@@ -385,5 +387,9 @@ fn reading(value: Waiting<Quantity>, beside: &[&Said], unstated: UnstatedBasis) 
         remark::fill_conditions(&mut conditions, &said.conditions);
     }
     remark::fill_conditions(&mut conditions, &value.header.conditions);
+    if value.said.basis.is_none() {
+        let doubts = beside.iter().chain([&&value.header]).find_map(|said| said.conditions.doubt.clone());
+        conditions.doubt = conditions.doubt.or(doubts);
+    }
     Reading { quantity: value.value, basis, conditions, cell: value.cell }
 }

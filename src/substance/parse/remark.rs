@@ -10,7 +10,6 @@ use std::sync::LazyLock;
 
 use regex::Regex;
 
-use super::doubt::Doubt;
 use super::pattern::fixed;
 use crate::quantity::{Unit, part_scripts, plain_words, tidy};
 pub(super) use reliability::in_words as reliability_in_words;
@@ -32,8 +31,6 @@ pub(crate) struct Said {
     pub(crate) other_half_life: Option<Property>,
     /// Whether a remark says that nothing was degraded, or how much.
     pub(crate) degraded: Degraded,
-    /// Whether the words doubt the value.
-    pub(crate) doubt: Doubt,
 }
 
 /// What remarks say of how much was degraded.

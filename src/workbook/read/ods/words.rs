@@ -5,7 +5,7 @@
 pub(super) fn format_of(shown: &str, number: f64) -> Option<String> {
     let shown = shown.trim();
     if !shown.contains(is_word) {
-        return None;
+        return in_thousands(shown, number);
     }
     let found = number_within(shown).and_then(|found| {
         let decimals = found.decimals_as(number, rounding_of(shown))?;
@@ -20,6 +20,19 @@ pub(super) fn format_of(shown: &str, number: f64) -> Option<String> {
     }
     let places = if decimals == 0 { "0".to_owned() } else { format!("0.{}", "0".repeat(decimals)) };
     Some(format!("{}{places}{}", quoted(before), quoted(after)))
+}
+
+/// The format of a number that is shown divided by thousands.
+fn in_thousands(shown: &str, number: f64) -> Option<String> {
+    let found = number_within(shown)?;
+    if found.decimals_as(number, Rounding::Allowed).is_some() {
+        return None;
+    }
+    [(1e3, "0,"), (1e6, "0,,")]
+        .into_iter()
+        .find(|(scale, _)| found.decimals_as(number / scale, Rounding::Allowed).is_some())
+        .map(|(_, code)| code.to_owned())
+        .filter(|_| number.abs() >= 1e3)
 }
 
 /// Signs that numbers, groups, fractions and times are written with are no words, nor is the `###` of a narrow column.
@@ -130,6 +143,9 @@ mod tests {
             ("1.234,5", 1234.5, None),
             ("1,2E+03", 1200.0, None),
             ("2 1/2", 2.5, None),
+            ("50", 50_000.0, Some("0,")),
+            ("1,5", 1_500_000.0, Some("0,,")),
+            ("50.000", 50_000.0, None),
             ("###", 4.0, None),
             ("", 4.0, None),
         ] {
