@@ -374,7 +374,9 @@ fn basis_of(cell: &Said, header: &Said, beside: &[&Said], unstated: UnstatedBasi
         .or_else(|| others().find(|basis| *basis == Basis::Calculated))
         .or_else(|| others().next())
         .unwrap_or_else(|| unstated.basis());
-    let doubted = beside.iter().chain([&cell, &header]).any(|said| said.doubt == Doubt::Voiced);
+    // A doubt in the header is none of a cell that says itself how its value was obtained.
+    let of_header = cell.basis.is_none() && header.doubt == Doubt::Voiced;
+    let doubted = of_header || beside.iter().chain([&cell]).any(|said| said.doubt == Doubt::Voiced);
     if doubted && basis == Basis::Measured { Basis::Unstated } else { basis }
 }
 
