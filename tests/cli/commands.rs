@@ -244,3 +244,23 @@ fn a_reader_that_goes_away_makes_nobody_panic() {
         assert_eq!(output.status.code(), Some(0));
     }
 }
+
+#[test]
+fn the_record_and_the_summing_up_say_which_rows_are_the_header_and_why_a_column_is_not_used() {
+    let place = Place::with_rows(vec![
+        texts(&["Name", "CAS No.", "Half-life soil", "DT50 water", "Colour"]),
+        texts(&["", "", "weeks", "min", ""]),
+        texts(&["DDT", "50-29-3", "300", "150", "white"]),
+    ]);
+    let run = place.screen(&[]);
+    let not_used = "D `DT50 water [min]` (left aside; `min` may be a unit or not), E `Colour`";
+    assert!(run.said.contains(not_used), "{}", run.said);
+    let record = place.screened("Run record").text();
+    for told in [
+        "Header in rows|1 and 2, read together",
+        "D DT50 water [min]|left aside; `min` may be a unit or not; carried along only",
+        "E Colour|not recognised; carried along only",
+    ] {
+        assert!(record.contains(told), "{record}");
+    }
+}

@@ -58,6 +58,7 @@ fn examples() -> Vec<(&'static str, CellFaultKind)> {
         ("Kow = 4.5", Kind::LogarithmOrNot { what: "log Kow", example: "log Kow = 4.5" }),
         ("40 j", Kind::DaysOrYears),
         ("0.01", Kind::DimensionlessHenry),
+        ("1.234 k", Kind::ShownInThousands { shown: "1.234".to_owned() }),
         ("Solvents", Kind::HeadingRow),
         ("* mean of two determinations", Kind::NoteRow),
         ("Page 2 of 5", Kind::PageLabelRow),

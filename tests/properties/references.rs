@@ -6,7 +6,7 @@ use crate::sheet::read_last;
 
 /// The basis of the first value of a property in a row of three columns.
 fn basis_beside(header: &str, source_header: &str, source: &str, property: Property) -> Option<Basis> {
-    let substance = read_last(&[&["CAS", header, source_header], &["50-29-3", "4.5", source]]).unwrap();
+    let substance = read_last(&[&["CAS", header, source_header], &["50-29-3", "4.5", source]]).ok()?;
     substance.readings.get(&property).and_then(|readings| readings.first()).map(|reading| reading.basis)
 }
 
