@@ -70,7 +70,6 @@ impl NumberFormat {
         let rest = numeric.get(1..).unwrap_or_default();
         let Some(condition) = &first.condition else {
             let chosen = match rest {
-                [] => (first, Chosen::Plainly),
                 [negative, ..] if number < 0.0 && negative.condition.is_none() => {
                     (negative, Chosen::AsNegative)
                 }
@@ -78,7 +77,7 @@ impl NumberFormat {
                 [second, ..] if second.condition.as_ref().is_some_and(|own| own.holds(number)) => {
                     (second, Chosen::Plainly)
                 }
-                [_] | [_, _, ..] => (first, Chosen::Plainly),
+                [] | [_] | [_, _, ..] => (first, Chosen::Plainly),
             };
             return Some(chosen);
         };
@@ -140,12 +139,11 @@ fn show_in(section: &Section, number: f64, chosen: Chosen) -> ShownNumber {
             _ => ShownNumber::Scaled(shifted(number, section.shift())),
         };
     }
-    let shown = match digits {
-        Some(digits) => format!("{prefix}{digits}{suffix}"),
-        None => {
-            let inner = if is_word(&inner) { format!(" {}", inner.trim()) } else { String::new() };
-            format!("{prefix}{}{inner}{suffix}", shifted(number, section.shift()))
-        }
+    let shown = if let Some(digits) = digits {
+        format!("{prefix}{digits}{suffix}")
+    } else {
+        let inner = if is_word(&inner) { format!(" {}", inner.trim()) } else { String::new() };
+        format!("{prefix}{}{inner}{suffix}", shifted(number, section.shift()))
     };
     ShownNumber::Text(shown.trim().to_owned())
 }

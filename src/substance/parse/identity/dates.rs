@@ -50,6 +50,10 @@ pub(super) fn dates_in(text: &str) -> Option<Vec<Parts>> {
     }
     if let Some(found) = YEAR_LAST.captures(text) {
         let part = |group| found.get(group).map_or("", |part: regex::Match<'_>| part.as_str());
+        // With hyphens and a short year it is rather a CAS number that was mistyped.
+        if part(2) == "-" && part(4).len() < 4 {
+            return None;
+        }
         let day_first = dated(part(4), part(3), part(1));
         let month_first = dated(part(4), part(1), part(3)).filter(|_| part(2) != ".");
         let dates: Vec<Parts> = [day_first, month_first].into_iter().flatten().collect();
