@@ -34,10 +34,22 @@ pub(crate) struct SheetPlan {
     pub(crate) index: usize,
     /// Its name.
     pub(crate) name: Arc<str>,
+    /// Whether its tab is shown.
+    pub(crate) visibility: Visibility,
     /// How it is screened; none where it is only copied.
     pub(crate) screened: Option<Screened>,
     /// Why it is only copied.
     pub(crate) copied_because: String,
+}
+
+impl SheetPlan {
+    /// Whether its tab is not shown.
+    pub(crate) fn hidden(&self) -> bool {
+        match self.visibility {
+            Visibility::Visible => false,
+            Visibility::Hidden | Visibility::VeryHidden => true,
+        }
+    }
 }
 
 /// How a sheet is screened.
@@ -115,6 +127,7 @@ impl Plan {
             let mut sheet = SheetPlan {
                 index,
                 name: survey.name.clone(),
+                visibility: survey.visibility,
                 screened: None,
                 copied_because: "not among the sheets named with --sheet".to_owned(),
             };

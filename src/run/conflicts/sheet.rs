@@ -2,6 +2,7 @@
 
 use std::sync::Arc;
 
+use super::columns::headers_of;
 use super::{About, Item, Written};
 use crate::fault::{Conflict, ConflictCounts, Refusal, Wording};
 use crate::report::{CONFLICT_COLUMNS, ConflictLine, Entry, RowName, conflict_entries};
@@ -68,7 +69,15 @@ impl<'run> ConflictsSheet<'run> {
                 let wording = Wording { wrong: format!("`{found}` {}", wording.wrong), ..wording };
                 self.write(&cell, line.row.as_deref(), header, &found, &wording)
             }
-            About::Sheet(conflict) => self.write(&cell, None, "", "", &conflict.wording()),
+            About::Sheet(conflict) => {
+                let header = match conflict {
+                    Conflict::Columns { .. } | Conflict::Unused { .. } => {
+                        self.header_of(item.sheet, item.column)
+                    }
+                    Conflict::RowsLeftAside { .. } | Conflict::Header { .. } | Conflict::Shared(_) => "",
+                };
+                self.write(&cell, None, header, "", &conflict.wording())
+            }
         }
     }
 
@@ -110,12 +119,8 @@ impl<'run> ConflictsSheet<'run> {
 
     fn header_of(&self, sheet: usize, column: u16) -> &'run str {
         let screened = self.plans.get(sheet).and_then(|plan| plan.screened.as_ref());
-        let known = screened.and_then(|screened| {
-            let recognised = &screened.recognised;
-            let columns = recognised.columns.iter().map(|known| (known.index, known.header.as_str()));
-            let unknown = recognised.unknown.iter().map(|(index, header)| (*index, header.as_str()));
-            columns.chain(unknown).find(|(index, _)| *index == column)
-        });
+        let known = screened
+            .and_then(|screened| headers_of(&screened.recognised).find(|(index, _)| *index == column));
         known.map_or("", |(_, header)| header)
     }
 }
