@@ -12,6 +12,7 @@ mod sheets;
 mod standing;
 mod summing_up;
 mod tables;
+mod widths;
 
 use std::collections::BTreeMap;
 use std::path::PathBuf;

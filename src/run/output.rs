@@ -61,6 +61,9 @@ impl Output {
             for layout in &survey.column_widths {
                 workbook.set_columns(id, *layout)?;
             }
+            for (column, width) in &sheet.widths {
+                workbook.set_column_width(id, *column, *column, *width)?;
+            }
             lay_out_added(&mut workbook, id, sheet)?;
             sheets.push(id);
         }
@@ -98,7 +101,11 @@ impl Output {
             return Ok(());
         };
         let index = row.row.index;
-        self.workbook.write_row(id, &row.row)?;
+        if sheet.wraps(index) {
+            self.workbook.write_wrapped_row(id, &row.row)?;
+        } else {
+            self.workbook.write_row(id, &row.row)?;
+        }
         let Some(screened) = &sheet.screened else {
             return Ok(());
         };

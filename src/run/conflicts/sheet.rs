@@ -55,6 +55,7 @@ impl<'run> ConflictsSheet<'run> {
         let header = CONFLICT_COLUMNS.map(|(header, _)| Entry::text(header, Look::Header));
         write_line(self.workbook, &mut self.writer, &header)?;
         self.workbook.freeze(self.writer.sheet, self.writer.next_row, 0)?;
+        self.workbook.print_across(self.writer.sheet, Some(self.header_row))?;
         Ok(())
     }
 
