@@ -112,7 +112,7 @@ impl Conflict {
             Self::Columns { remark } => Wording {
                 title: "doubtful column",
                 wrong: remark.clone(),
-                remedy: "check that the right column was read; the Run record says what each was taken for"
+                remedy: "check the column and how it was read; the Run record says what each column was taken for"
                     .to_owned(),
             },
             Self::Shared(shared) => shared.wording(),

@@ -7,6 +7,7 @@ use crate::reasoning::sentence::sentence;
 use crate::reasoning::value::{evidence_of, limit_phrase, origin_phrase};
 use crate::reasoning::{Book, Told, verdict_text};
 use crate::rules::{Checked, Criterion, Test};
+use crate::substance::DegradationTest;
 
 /// What the Reasoning sheet says of one criterion.
 #[derive(Debug, Clone, PartialEq, Default)]
@@ -91,7 +92,8 @@ fn fill_answer(line: &mut Line, told: Told, answer: &Answer) {
     let (value, basis, cell) = match answer {
         Answer::Ready(index) => {
             let Some(entry) = told.substance.ready.get(*index) else { return };
-            (entry.value.reported.clone(), entry.value.basis.word(), &entry.cell)
+            let value = with_meaning(&entry.value.reported, entry.value.result);
+            (value, entry.value.basis.word(), &entry.cell)
         }
         Answer::Inherent(index) => {
             let Some(entry) = told.substance.inherent.get(*index) else { return };
@@ -111,6 +113,19 @@ fn fill_answer(line: &mut Line, told: Told, answer: &Answer) {
     line.value = value;
     basis.clone_into(&mut line.basis);
     line.origin = cell.to_string();
+}
+
+/// What a cell says of ready biodegradability, and what it was taken for if it says so in other words.
+fn with_meaning(reported: &str, result: DegradationTest) -> String {
+    let meaning = match result {
+        DegradationTest::Ready => "readily biodegradable",
+        DegradationTest::NotReady => "not readily biodegradable",
+        DegradationTest::Open => "not clear",
+    };
+    if reported.trim().eq_ignore_ascii_case(meaning) {
+        return meaning.to_owned();
+    }
+    format!("{meaning}: `{}`", reported.trim())
 }
 
 fn source(test: &Test) -> String {
@@ -167,4 +182,23 @@ fn cautions(told: Told, judged: &CriterionJudgement) -> String {
         }
     }
     ids.join(", ")
+}
+
+#[cfg(test)]
+mod tests {
+    use super::with_meaning;
+    use crate::substance::DegradationTest;
+
+    #[test]
+    fn a_word_of_another_language_stands_beside_what_it_was_taken_for() {
+        let table = [
+            ("Readily biodegradable ", DegradationTest::Ready, "readily biodegradable"),
+            ("ja (90,4 %, 28 d)", DegradationTest::Ready, "readily biodegradable: `ja (90,4 %, 28 d)`"),
+            ("nein", DegradationTest::NotReady, "not readily biodegradable: `nein`"),
+            ("65 %", DegradationTest::Open, "not clear: `65 %`"),
+        ];
+        for (reported, result, expected) in table {
+            assert_eq!(with_meaning(reported, result), expected);
+        }
+    }
 }

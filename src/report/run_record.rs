@@ -163,8 +163,8 @@ fn column_rows(recognised: &Recognised) -> Vec<Vec<Entry>> {
         (column.index, column.header.as_str(), format!("{}; {}", column.field.id(), column.reason))
     });
     let unknown = recognised.unknown.iter().map(|(index, header)| {
-        let why = recognised.not_taken.get(index).map_or("not recognised", String::as_str);
-        (*index, header.as_str(), format!("not used: {why}; carried along only"))
+        let why = recognised.not_taken.get(index).map_or("header not recognised", String::as_str);
+        (*index, header.as_str(), format!("not used, only carried along: {why}"))
     });
     let mut columns: Vec<(u16, &str, String)> = known.chain(unknown).collect();
     columns.sort_by_key(|(index, ..)| *index);

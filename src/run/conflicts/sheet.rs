@@ -38,6 +38,7 @@ impl<'run> ConflictsSheet<'run> {
         for (column, (_, width)) in (0u16..).zip(CONFLICT_COLUMNS) {
             workbook.set_column_width(sheet, column, column, width)?;
         }
+        workbook.print_across(sheet, None)?;
         let mut writer = SheetWriter { name: NAME, sheet, next_row: 0, part: 1 };
         for line in counts.heading() {
             write_line(workbook, &mut writer, &[Entry::text(line, Look::Text)])?;
