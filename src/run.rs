@@ -12,6 +12,7 @@ mod sheets;
 mod standing;
 mod summing_up;
 mod tables;
+mod widths;
 
 use std::collections::BTreeMap;
 use std::path::PathBuf;
@@ -91,6 +92,12 @@ pub struct Summary {
     pub unrecognised: Vec<String>,
     /// How the file was read where it does not say so itself, such as its encoding.
     pub how_read: Vec<String>,
+    /// Which rows were left aside, in sentences.
+    pub rows_aside: Vec<String>,
+    /// Hidden sheets that were screened, a sentence each.
+    pub hidden: Vec<String>,
+    /// Sheets with a header and no row to screen, a sentence each.
+    pub without_rows: Vec<String>,
     /// What could not be carried over.
     pub not_carried: Vec<String>,
     /// Cells that could not be read, the first of them.

@@ -23,6 +23,22 @@ pub enum Conflict {
     },
     /// A row that shares its number or name with other rows.
     Shared(Shared),
+    /// A remark on the header of a sheet that is about no single column.
+    Header {
+        /// The remark.
+        remark: String,
+    },
+    /// A column that holds data and is not used.
+    Unused {
+        /// Its letters.
+        letters: String,
+        /// Its header; none where it has none.
+        header: Option<String>,
+        /// How many screened rows hold something in it.
+        rows: usize,
+        /// Why it is not used, if there is more to say than that its header is not recognised.
+        why: Option<String>,
+    },
 }
 
 /// What rows share, and in what they differ.
@@ -96,12 +112,40 @@ impl Conflict {
             Self::Columns { remark } => Wording {
                 title: "doubtful column",
                 wrong: remark.clone(),
-                remedy: "check that the right column was read; the Run record says what each was taken for"
+                remedy: "check the column and how it was read; the Run record says what each column was taken for"
                     .to_owned(),
             },
             Self::Shared(shared) => shared.wording(),
+            Self::Header { remark } => Wording {
+                title: "doubtful header",
+                wrong: remark.clone(),
+                remedy: "check that the right row was read as the header; the Run record names it".to_owned(),
+            },
+            Self::Unused { letters, header, rows, why } => Wording {
+                title: "column not used",
+                wrong: unused(letters, header.as_deref(), *rows, why.as_deref()),
+                remedy: match header {
+                    Some(_) => {
+                        "nothing, if it holds nothing to screen with; otherwise say what it holds with `--column \
+                         'Header=field'`"
+                    }
+                    None => "nothing, if it holds nothing to screen with; otherwise give it a header",
+                }
+                .to_owned(),
+            },
         }
     }
+}
+
+/// `column AB is carried along only: its header is not recognised; 12 screened rows hold something in it`.
+fn unused(letters: &str, header: Option<&str>, rows: usize, why: Option<&str>) -> String {
+    let why = match (header, why) {
+        (_, Some(why)) => why,
+        (Some(_), None) => "its header is not recognised",
+        (None, None) => "it has no header",
+    };
+    let rows = count(rows, "screened row holds", "screened rows hold");
+    format!("column {letters} is carried along only: {why}; {rows} something in it")
 }
 
 impl Shared {
@@ -212,8 +256,10 @@ pub struct ConflictCounts {
     pub rows_aside: usize,
     /// Those of them that are listed.
     pub rows_aside_listed: usize,
-    /// Remarks on columns.
+    /// Remarks on columns and headers.
     pub columns: usize,
+    /// Columns that hold data and are not used.
+    pub unused: usize,
     /// CAS and EC numbers that stand on more than one row.
     pub numbers: usize,
     /// Names that stand on more than one row without one number that all of these share.
@@ -238,12 +284,21 @@ impl ConflictCounts {
             found.push(format!("{} no substance", count(self.rows_aside, "row holds", "rows hold")));
         }
         if self.columns > 0 {
-            found.push(format!("{} in doubt", count(self.columns, "column is", "columns are")));
+            found.push(format!(
+                "{} in doubt",
+                count(self.columns, "column or header is", "columns or headers are")
+            ));
+        }
+        if self.unused > 0 {
+            found.push(format!(
+                "{} not used",
+                count(self.unused, "column with data is", "columns with data are")
+            ));
         }
         found.extend(self.repeated());
         if found.is_empty() {
             return vec![
-                "Nothing to list: every cell could be read, no row was left aside, no column is in doubt, and no CAS \
+                "Nothing to list: every cell could be read, no row was left aside, no column is in doubt or left unused, and no CAS \
                  number, EC number or name stands on more than one row."
                     .to_owned(),
             ];

@@ -1,12 +1,13 @@
 //! One criterion in words: a line of the Reasoning sheet.
 
-use crate::judge::{CriterionJudgement, Decision, StepState, TestJudgement, Used};
+use crate::judge::{Answer, CriterionJudgement, Decision, StepState, TestJudgement, Used};
 use crate::quantity::format_interval;
 use crate::reasoning::row::deciding_phrase;
 use crate::reasoning::sentence::sentence;
 use crate::reasoning::value::{evidence_of, limit_phrase, origin_phrase};
 use crate::reasoning::{Book, Told, verdict_text};
 use crate::rules::{Checked, Criterion, Test};
+use crate::substance::DegradationTest;
 
 /// What the Reasoning sheet says of one criterion.
 #[derive(Debug, Clone, PartialEq, Default)]
@@ -53,8 +54,10 @@ pub fn criterion_line(book: Book, criterion: &Criterion, judged: &CriterionJudge
     if let Some((test, came_out)) = shown_test(criterion, judged) {
         line.limit = limit_phrase(test);
         line.source = source(test);
-        if let Some(used) = came_out.used.first() {
-            fill_value(&mut line, book.told, used);
+        match (&came_out.answer, came_out.used.first()) {
+            (Some(answer), _) => fill_answer(&mut line, book.told, answer),
+            (None, Some(used)) => fill_value(&mut line, book.told, used),
+            (None, None) => {}
         }
     } else if let Some(rated) = &judged.rated {
         fill_value(&mut line, book.told, rated);
@@ -82,6 +85,47 @@ fn fill_value(line: &mut Line, told: Told, used: &Used) {
         };
         line.origin = origin_phrase(told, evidence);
     }
+}
+
+/// What a cell says in words, and where it stands.
+fn fill_answer(line: &mut Line, told: Told, answer: &Answer) {
+    let (value, basis, cell) = match answer {
+        Answer::Ready(index) => {
+            let Some(entry) = told.substance.ready.get(*index) else { return };
+            let value = with_meaning(&entry.value.reported, entry.value.result);
+            (value, entry.value.basis.word(), &entry.cell)
+        }
+        Answer::Inherent(index) => {
+            let Some(entry) = told.substance.inherent.get(*index) else { return };
+            (entry.value.reported.clone(), entry.value.basis.word(), &entry.cell)
+        }
+        Answer::Statement(code) => {
+            let Some(statements) = &told.substance.hazard_statements else { return };
+            (code.clone(), "", &statements.cell)
+        }
+        Answer::NoStatement => {
+            let Some(statements) = &told.substance.hazard_statements else { return };
+            let codes: Vec<&str> = statements.value.codes().collect();
+            let codes = if codes.is_empty() { "no hazard statement".to_owned() } else { codes.join(", ") };
+            (codes, "", &statements.cell)
+        }
+    };
+    line.value = value;
+    basis.clone_into(&mut line.basis);
+    line.origin = cell.to_string();
+}
+
+/// What a cell says of ready biodegradability, and what it was taken for if it says so in other words.
+fn with_meaning(reported: &str, result: DegradationTest) -> String {
+    let meaning = match result {
+        DegradationTest::Ready => "readily biodegradable",
+        DegradationTest::NotReady => "not readily biodegradable",
+        DegradationTest::Open => "not clear",
+    };
+    if reported.trim().eq_ignore_ascii_case(meaning) {
+        return meaning.to_owned();
+    }
+    format!("{meaning}: `{}`", reported.trim())
 }
 
 fn source(test: &Test) -> String {
@@ -112,14 +156,17 @@ fn shown_test<'run>(
 ) -> Option<(&'run Test, &'run TestJudgement)> {
     let step = shown_step(judged)?;
     let (rule, came_out) = (criterion.steps.get(step)?, judged.steps.get(step)?);
-    let with_value = came_out.tests.iter().position(|test| !test.used.is_empty() || test.answer.is_some());
+    let has_value = |test: &TestJudgement| !test.used.is_empty() || test.answer.is_some();
+    let with_value = came_out.tests.iter().position(has_value);
+    let deciding =
+        || came_out.by.iter().copied().find(|place| came_out.tests.get(*place).is_some_and(has_value));
     let chosen = match came_out.state {
         StepState::Partial => with_value.or(came_out.by.first().copied()),
         StepState::Fired
         | StepState::Clear
         | StepState::Undecided
         | StepState::Empty
-        | StepState::Skipped => came_out.by.first().copied(),
+        | StepState::Skipped => deciding().or(came_out.by.first().copied()),
     }?;
     Some((rule.tests.get(chosen)?, came_out.tests.get(chosen)?))
 }
@@ -135,4 +182,23 @@ fn cautions(told: Told, judged: &CriterionJudgement) -> String {
         }
     }
     ids.join(", ")
+}
+
+#[cfg(test)]
+mod tests {
+    use super::with_meaning;
+    use crate::substance::DegradationTest;
+
+    #[test]
+    fn a_word_of_another_language_stands_beside_what_it_was_taken_for() {
+        let table = [
+            ("Readily biodegradable ", DegradationTest::Ready, "readily biodegradable"),
+            ("ja (90,4 %, 28 d)", DegradationTest::Ready, "readily biodegradable: `ja (90,4 %, 28 d)`"),
+            ("nein", DegradationTest::NotReady, "not readily biodegradable: `nein`"),
+            ("65 %", DegradationTest::Open, "not clear: `65 %`"),
+        ];
+        for (reported, result, expected) in table {
+            assert_eq!(with_meaning(reported, result), expected);
+        }
+    }
 }

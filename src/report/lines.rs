@@ -27,7 +27,7 @@ pub const REASONING_COLUMNS: [(&str, f64); 19] = [
     ("Rulebook", 12.0),
     ("Criterion", 17.0),
     ("Verdict", 24.0),
-    ("Value", 12.0),
+    ("Value", 16.0),
     ("Unit", 8.0),
     ("SD (log units)", 9.0),
     ("Basis", 14.0),
@@ -69,7 +69,7 @@ pub fn reasoning_entries(told: Told, mode: ReasoningMode) -> Vec<Vec<Entry>> {
                 Entry::text(line.verdict, Look::Verdict(shade(judged.verdict))),
                 match line.number {
                     Some(number) => Entry::number(Some(as_shown(number)), Look::Number),
-                    None => Entry::text(line.value, Look::Text),
+                    None => Entry::text(line.value, Look::Wrapped),
                 },
                 Entry::text(line.unit, Look::Text),
                 Entry::number(line.sd, Look::TwoDecimals),

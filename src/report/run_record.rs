@@ -24,6 +24,8 @@ pub struct RunFacts {
     pub sheets: Vec<SheetFacts>,
     /// How the file was read where it does not say so itself, in sentences.
     pub how_read: Vec<String>,
+    /// Which rows were left aside, in sentences.
+    pub rows_aside: Vec<String>,
     /// What could not be carried over.
     pub not_carried: Vec<String>,
     /// Which lines the Reasoning sheet holds, in words.
@@ -41,6 +43,8 @@ pub struct RunFacts {
 pub struct SheetFacts {
     /// Its name.
     pub name: String,
+    /// Its tab is not shown.
+    pub hidden: bool,
     /// Rows that were screened.
     pub screened: usize,
     /// The row of another table's header, counted from 0, and how many rows were left aside below it.
@@ -59,6 +63,7 @@ pub fn run_record_table(facts: &RunFacts, rules: &RuleSet) -> Table {
     rows.push(pair("Inventory", facts.inventory.clone()));
     rows.push(pair("SHA-256 of the inventory", facts.fingerprint.clone()));
     rows.extend(facts.how_read.iter().map(|text| pair("How it was read", text.clone())));
+    rows.extend(facts.rows_aside.iter().map(|text| pair("Rows left aside", text.clone())));
     rows.extend(facts.options.iter().map(|(name, value)| pair(name, value.clone())));
     rows.push(pair("Reasoning sheet", facts.reasoning.clone()));
     rows.push(pair(
@@ -116,44 +121,60 @@ fn error_rows(rules: &RuleSet) -> Vec<Vec<Entry>> {
     rows.extend(rules.relations.default_sds.iter().map(|line| {
         let bases: Vec<&str> = line.bases.iter().map(|basis| basis.word()).collect();
         let above = line.above.map_or(String::new(), |above| format!(" above {}", format_number(above)));
-        let name = format!("{}{above} {}", line.property, bases.join(", "));
-        pair(name.trim(), format!("{} ({})", format_number(line.sd), line.source))
+        let property = if line.property == "any" { "any other" } else { line.property.as_str() };
+        let bases = if bases.is_empty() { String::new() } else { format!(", {}", bases.join(" or ")) };
+        pair(&format!("{property}{above}{bases}"), format!("{} ({})", format_number(line.sd), line.source))
     }));
     rows
 }
 
 fn sheet_rows(sheet: &SheetFacts) -> Vec<Vec<Entry>> {
     let mut rows = vec![title(&format!("Sheet: {}", sheet.name))];
+    if sheet.hidden {
+        let done = if sheet.recognised.is_some() { "screened" } else { "copied" };
+        rows.push(pair(
+            "Hidden",
+            format!("The sheet is hidden in the inventory; it was {done} and is hidden here."),
+        ));
+    }
     let Some(recognised) = &sheet.recognised else {
         rows.push(pair("Copied only", sheet.copied_because.clone()));
         return rows;
     };
-    rows.push(pair("Rows screened", sheet.screened.to_string()));
+    let none = if sheet.screened == 0 { "; no row below the header holds a substance" } else { "" };
+    rows.push(pair("Rows screened", format!("{}{none}", sheet.screened)));
     if let Some((header, left)) = sheet.unscreened {
         let why = format!("{left}; they stand below the header of another table in row {}", header + 1);
         rows.push(pair("Rows not screened", why));
     }
     rows.push(header_entry(recognised.header_top + 1, recognised.header_row + 1));
-    for column in &recognised.columns {
-        let unit = match (column.unit, column.field.default_unit()) {
-            (Some(unit), _) if unit.symbol().is_empty() => String::new(),
-            (Some(unit), _) => format!("; unit of the header: {}", unit.symbol()),
-            (None, Some(unit)) if !unit.symbol().is_empty() => {
-                format!("; {} where a cell names no unit", unit.symbol())
-            }
-            (None, Some(_) | None) => String::new(),
-        };
-        rows.push(pair(
-            &format!("{} {}", column_letters(column.index), column.header),
-            format!("{}{unit}; {}", column.field.id(), column.reason),
-        ));
-    }
-    rows.extend(recognised.unknown.iter().map(|(index, header)| {
-        let why = recognised.not_taken.get(index).map_or("not recognised", String::as_str);
-        pair(&format!("{} {header}", column_letters(*index)), format!("{why}; carried along only"))
+    rows.extend(column_rows(recognised));
+    rows.extend(recognised.remarks.iter().map(|remark| {
+        let remark =
+            remark.strip_prefix(&sheet.name).and_then(|rest| rest.strip_prefix(": ")).unwrap_or(remark);
+        pair("To look at", remark.to_owned())
     }));
-    rows.extend(recognised.remarks.iter().map(|remark| pair("Remark", remark.clone())));
     rows
+}
+
+/// The columns in the order of the sheet, used or not.
+fn column_rows(recognised: &Recognised) -> Vec<Vec<Entry>> {
+    let known = recognised.columns.iter().map(|column| {
+        (column.index, column.header.as_str(), format!("{}; {}", column.field.id(), column.reason))
+    });
+    let unknown = recognised.unknown.iter().map(|(index, header)| {
+        let why = recognised.not_taken.get(index).map_or("header not recognised", String::as_str);
+        (*index, header.as_str(), format!("not used, only carried along: {why}"))
+    });
+    let mut columns: Vec<(u16, &str, String)> = known.chain(unknown).collect();
+    columns.sort_by_key(|(index, ..)| *index);
+    columns
+        .into_iter()
+        .map(|(index, header, said)| {
+            let header = header.split_whitespace().collect::<Vec<_>>().join(" ");
+            pair(&format!("{} {header}", column_letters(index)), said)
+        })
+        .collect()
 }
 
 /// The row of the header, or those read together.

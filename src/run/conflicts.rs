@@ -1,5 +1,6 @@
 //! Collects what the Conflicts sheet lists, and writes it when all rows are done.
 
+mod columns;
 mod sheet;
 
 use std::sync::Arc;
@@ -11,7 +12,8 @@ use crate::rules::RuleSet;
 use crate::run::plan::SheetPlan;
 use crate::run::register::{Group, Register};
 use crate::run::standing::Standing;
-use crate::workbook::{AnnotatedWorkbook, SheetId};
+use crate::workbook::{AnnotatedWorkbook, Row, SheetId};
+use columns::{FilledColumns, columns_apart};
 use sheet::ConflictsSheet;
 
 /// Cells that are listed; the others are counted by kind and stand in the Cautions cell of their row.
@@ -27,6 +29,8 @@ pub(crate) struct Conflicts {
     cells: Vec<CellLine>,
     tally: FaultTally,
     register: Register,
+    /// For each sheet.
+    filled: Vec<FilledColumns>,
 }
 
 #[derive(Debug)]
@@ -62,7 +66,8 @@ pub(crate) struct Written<'run> {
 impl Conflicts {
     /// Nothing yet, for sheets of these names.
     pub(crate) fn new(sheets: Vec<Arc<str>>) -> Self {
-        Self { cells: Vec::new(), tally: FaultTally::default(), register: Register::new(sheets) }
+        let filled = vec![FilledColumns::default(); sheets.len()];
+        Self { cells: Vec::new(), tally: FaultTally::default(), register: Register::new(sheets), filled }
     }
 
     /// Takes the faults of a row, which `row` names if it was screened.
@@ -76,6 +81,13 @@ impl Conflicts {
                 fault.found.shrink_to_fit();
                 self.cells.push(CellLine { sheet, fault, row: row.cloned() });
             }
+        }
+    }
+
+    /// Notes which columns of a screened row hold something.
+    pub(crate) fn take_cells(&mut self, sheet: usize, row: &Row) {
+        if let Some(filled) = self.filled.get_mut(sheet) {
+            filled.take(row);
         }
     }
 
@@ -102,14 +114,15 @@ impl Conflicts {
         written: Written,
     ) -> Result<(String, ConflictCounts), Refusal> {
         let groups = self.register.groups();
-        let counts = self.counts(written, &groups);
+        let apart = self.columns_apart(written);
+        let counts = self.counts(written, &groups, &apart);
         let mut sheet = ConflictsSheet::begin(workbook, written, &counts)?;
         let name = sheet.name();
         if counts == ConflictCounts::default() {
             return Ok((name, counts));
         }
         sheet.write_header()?;
-        for item in self.in_order(written) {
+        for item in self.in_order(written, apart) {
             sheet.write_item(&item)?;
         }
         let rulebooks: Vec<String> = written.rules.rulebooks.iter().map(|book| book.short.clone()).collect();
@@ -124,13 +137,15 @@ impl Conflicts {
         Ok((name, counts))
     }
 
-    fn counts(&self, written: Written, groups: &[Group]) -> ConflictCounts {
+    fn counts(&self, written: Written, groups: &[Group], apart: &[Item]) -> ConflictCounts {
         let of_numbers = |group: &&Group| match group.by() {
             SharedBy::Cas | SharedBy::Ec => true,
             SharedBy::Name => false,
         };
         let numbers = groups.iter().filter(of_numbers).count();
         let rows = groups.iter().map(Group::len).sum::<usize>();
+        let unused =
+            apart.iter().filter(|item| matches!(item.about, About::Sheet(Conflict::Unused { .. }))).count();
         let aside_listed = self.cells.iter().filter(|line| line.fault.kind.tells_no_substance()).count();
         ConflictCounts {
             cells: self.tally.total(),
@@ -138,7 +153,8 @@ impl Conflicts {
             rows_left: written.unscreened.iter().flatten().map(|(_, left)| left).sum(),
             rows_aside: self.tally.asides(),
             rows_aside_listed: aside_listed,
-            columns: written.recognised().map(|(_, recognised)| recognised.remarks.len()).sum(),
+            columns: apart.len() - unused,
+            unused,
             numbers,
             names: groups.len() - numbers,
             rows,
@@ -146,19 +162,27 @@ impl Conflicts {
         }
     }
 
-    /// What is about one place of the inventory, in its order.
-    fn in_order<'run>(&'run self, written: Written<'run>) -> Vec<Item<'run>> {
-        let mut items: Vec<Item> = Vec::new();
+    /// Doubtful headers and columns, and columns that are not used.
+    fn columns_apart<'run>(&self, written: Written) -> Vec<Item<'run>> {
+        let mut items = Vec::new();
         for (sheet, recognised) in written.recognised() {
-            items.extend(recognised.remarks.iter().map(|remark| {
-                // The remark names its sheet, which stands in the line already.
-                let name = written.plans.get(sheet).map_or("", |plan| &*plan.name);
-                let remark =
-                    remark.strip_prefix(name).and_then(|rest| rest.strip_prefix(": ")).unwrap_or(remark);
-                let conflict = Conflict::Columns { remark: remark.to_owned() };
-                Item { sheet, row: recognised.header_row, column: 0, about: About::Sheet(conflict) }
+            let name = written.plans.get(sheet).map_or("", |plan| &*plan.name);
+            let filled = self.filled.get(sheet).cloned().unwrap_or_default();
+            items.extend(columns_apart(name, recognised, &filled).into_iter().map(|(column, conflict)| {
+                Item {
+                    sheet,
+                    row: recognised.header_row,
+                    column: column.unwrap_or(0),
+                    about: About::Sheet(conflict),
+                }
             }));
         }
+        items
+    }
+
+    /// What is about one place of the inventory, in its order.
+    fn in_order<'run>(&'run self, written: Written<'run>, apart: Vec<Item<'run>>) -> Vec<Item<'run>> {
+        let mut items = apart;
         items.extend(self.cells.iter().map(|line| Item {
             sheet: line.sheet,
             row: line.fault.cell.row,

@@ -15,7 +15,9 @@ use crate::run::plan::{Plan, SheetPlan};
 use crate::run::sheets::{
     SheetWriter, lay_out_added, new_reasoning_sheet, span, write_entry, write_line, write_table,
 };
-use crate::run::summing_up::{column_remarks, how_read, options, unreached, unrecognised};
+use crate::run::summing_up::{
+    column_remarks, hidden, options, rows_aside, unreached, unrecognised, without_rows,
+};
 use crate::run::{ScreenSettings, Summary};
 use crate::workbook::{AnnotatedWorkbook, Inventory, Look, SheetId, Value, Visibility, fingerprint_of_text};
 
@@ -59,6 +61,9 @@ impl Output {
             for layout in &survey.column_widths {
                 workbook.set_columns(id, *layout)?;
             }
+            for (column, width) in &sheet.widths {
+                workbook.set_column_width(id, *column, *column, *width)?;
+            }
             lay_out_added(&mut workbook, id, sheet)?;
             sheets.push(id);
         }
@@ -96,7 +101,11 @@ impl Output {
             return Ok(());
         };
         let index = row.row.index;
-        self.workbook.write_row(id, &row.row)?;
+        if sheet.wraps(index) {
+            self.workbook.write_wrapped_row(id, &row.row)?;
+        } else {
+            self.workbook.write_row(id, &row.row)?;
+        }
         let Some(screened) = &sheet.screened else {
             return Ok(());
         };
@@ -106,6 +115,9 @@ impl Output {
             }
         }
         let added = &screened.added;
+        if let Outcome::Screened(_) = &row.outcome {
+            self.conflicts.take_cells(sheet.index, &row.row);
+        }
         match row.outcome {
             Outcome::Copied => {}
             Outcome::Screened(row) => {
@@ -224,6 +236,9 @@ impl Output {
             column_remarks: column_remarks(plan),
             unrecognised: unrecognised(plan),
             how_read: facts.how_read,
+            rows_aside: facts.rows_aside,
+            hidden: hidden(plan),
+            without_rows: without_rows(plan, &self.screened),
             not_carried: facts.not_carried,
             tally: self.conflicts.tally().clone(),
             faults: self.conflicts.into_faults(),
@@ -257,17 +272,15 @@ impl Output {
                 .zip(self.screened.iter().zip(&self.unscreened))
                 .map(|(sheet, (screened, unscreened))| SheetFacts {
                     name: sheet.name.to_string(),
+                    hidden: sheet.hidden(),
                     screened: *screened,
                     unscreened: *unscreened,
                     recognised: sheet.screened.as_ref().map(|screened| screened.recognised.clone()),
                     copied_because: sheet.copied_because.clone(),
                 })
                 .collect(),
-            how_read: how_read(
-                inventory,
-                self.left_aside,
-                self.conflicts.tally().told_asides(conflicts_sheet),
-            ),
+            how_read: inventory.how_read().to_vec(),
+            rows_aside: rows_aside(self.left_aside, self.conflicts.tally().told_asides(conflicts_sheet)),
             not_carried: inventory.not_carried().to_vec(),
             reasoning: match plan.reasoning {
                 ReasoningMode::All => "a line for every row, rulebook and criterion".to_owned(),

@@ -7,6 +7,7 @@ use crate::columns::{ColumnOverride, ColumnWords, Recognised, recognise};
 use crate::fault::{FileFault, Refusal, nearest};
 use crate::report::{AddedColumns, RECORD_MARK, RECORD_SHEET, ReasoningMode, added_columns};
 use crate::rules::RuleSet;
+use crate::run::widths::fitted_widths;
 use crate::run::{ReasoningChoice, ScreenSettings};
 use crate::substance::RowReader;
 use crate::workbook::{CellContent, Inventory, Row, Visibility, open_inventory};
@@ -34,10 +35,31 @@ pub(crate) struct SheetPlan {
     pub(crate) index: usize,
     /// Its name.
     pub(crate) name: Arc<str>,
+    /// Whether its tab is shown.
+    pub(crate) visibility: Visibility,
+    /// Widths of its columns, in characters, where the file gives none.
+    pub(crate) widths: Vec<(u16, f64)>,
     /// How it is screened; none where it is only copied.
     pub(crate) screened: Option<Screened>,
     /// Why it is only copied.
     pub(crate) copied_because: String,
+}
+
+impl SheetPlan {
+    /// Whether a row is of a header whose texts are broken over lines, because the widths are ours.
+    pub(crate) fn wraps(&self, row: u32) -> bool {
+        let header = self.screened.as_ref().map(|screened| &screened.recognised);
+        !self.widths.is_empty()
+            && header.is_some_and(|header| (header.header_top..=header.header_row).contains(&row))
+    }
+
+    /// Whether its tab is not shown.
+    pub(crate) fn hidden(&self) -> bool {
+        match self.visibility {
+            Visibility::Visible => false,
+            Visibility::Hidden | Visibility::VeryHidden => true,
+        }
+    }
 }
 
 /// How a sheet is screened.
@@ -115,6 +137,8 @@ impl Plan {
             let mut sheet = SheetPlan {
                 index,
                 name: survey.name.clone(),
+                visibility: survey.visibility,
+                widths: Vec::new(),
                 screened: None,
                 copied_because: "not among the sheets named with --sheet".to_owned(),
             };
@@ -140,6 +164,10 @@ impl Plan {
                     }
                     None => NO_HEADER.clone_into(&mut sheet.copied_because),
                 }
+            }
+            if inventory.gives_no_widths(index) {
+                let recognised = sheet.screened.as_ref().map(|screened| &screened.recognised);
+                sheet.widths = fitted_widths(&inventory.first_rows(index, ROWS_LOOKED_AT)?, recognised);
             }
             sheets.push(sheet);
         }

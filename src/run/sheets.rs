@@ -51,6 +51,7 @@ pub(crate) fn new_reasoning_sheet(
         workbook.write(sheet, 0, column, &Value::Text(header), Look::Header)?;
     }
     workbook.freeze(sheet, 1, 0)?;
+    workbook.print_across(sheet, Some(0))?;
     Ok(SheetWriter { name, sheet, next_row: 1, part })
 }
 
@@ -71,6 +72,7 @@ pub(crate) fn write_table(workbook: &mut AnnotatedWorkbook, table: &Table) -> Re
     for (column, width) in (0u16..).zip(&table.widths) {
         workbook.set_column_width(sheet, column, column, *width)?;
     }
+    workbook.print_across(sheet, table.frozen_rows.checked_sub(1))?;
     if table.frozen_rows > 0 {
         workbook.freeze(sheet, table.frozen_rows, 0)?;
     }

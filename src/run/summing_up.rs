@@ -7,7 +7,7 @@ use crate::rules::{RuleSet, Weight};
 use crate::run::ScreenSettings;
 use crate::run::plan::Plan;
 use crate::substance::UnstatedBasis;
-use crate::workbook::{Inventory, column_letters};
+use crate::workbook::column_letters;
 
 pub(crate) fn options(settings: &ScreenSettings) -> Vec<(&'static str, String)> {
     let mut options = Vec::new();
@@ -27,9 +27,31 @@ pub(crate) fn options(settings: &ScreenSettings) -> Vec<(&'static str, String)> 
     options
 }
 
-/// How a file without cells of its own was read, and which rows were left aside.
-pub(crate) fn how_read(inventory: &Inventory, left_aside: usize, asides: Option<String>) -> Vec<String> {
-    let mut sentences = inventory.how_read().to_vec();
+/// Hidden sheets that were screened, a sentence each.
+pub(crate) fn hidden(plan: &Plan) -> Vec<String> {
+    let hidden = plan.sheets.iter().filter(|sheet| sheet.hidden() && sheet.screened.is_some());
+    hidden.map(|sheet| format!("Sheet `{}` is hidden and was screened.", sheet.name)).collect()
+}
+
+/// Sheets with a header and no row to screen, a sentence each.
+pub(crate) fn without_rows(plan: &Plan, screened: &[usize]) -> Vec<String> {
+    let sheets = plan.sheets.iter().zip(screened).filter(|(_, rows)| **rows == 0);
+    sheets
+        .filter_map(|(sheet, _)| {
+            let header = sheet.screened.as_ref()?.recognised.header_row + 1;
+            Some(format!(
+                "{}: nothing was screened: the header in row {header} was recognised, but no row below it holds a \
+                 substance; if there should be one, check that the file is complete and that the header stands above the \
+                 data",
+                sheet.name
+            ))
+        })
+        .collect()
+}
+
+/// Which rows were left aside, in sentences.
+pub(crate) fn rows_aside(left_aside: usize, asides: Option<String>) -> Vec<String> {
+    let mut sentences = Vec::new();
     if left_aside > 0 {
         sentences.push(format!(
             "{} not screened, with more fields than the header; each is among the cells that could not be read.",

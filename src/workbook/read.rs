@@ -89,6 +89,19 @@ fn open_within(path: &Path, limits: Limits) -> Result<Inventory, FileFault> {
 }
 
 impl Inventory {
+    /// Whether the file says nothing of how wide the columns of a sheet are, as text files do not, and sheets of an
+    /// OpenDocument file that another program than a spreadsheet's wrote. A workbook of another kind has a usual width.
+    pub fn gives_no_widths(&self, sheet: usize) -> bool {
+        match self.source {
+            Source::Text(_) => true,
+            Source::Ods(_) => self
+                .sheets
+                .get(sheet)
+                .is_some_and(|survey| survey.column_widths.iter().all(|layout| layout.width.is_none())),
+            Source::Xlsx(_) | Source::Xlsb(_) | Source::Xls(_) => false,
+        }
+    }
+
     /// The path as given.
     pub fn path(&self) -> &str {
         &self.path

@@ -264,3 +264,24 @@ fn the_record_and_the_summing_up_say_which_rows_are_the_header_and_why_a_column_
         assert!(record.contains(told), "{record}");
     }
 }
+
+#[test]
+fn a_line_of_the_reasoning_names_the_words_it_relies_on_and_their_cell() {
+    let place = Place::with_rows(vec![
+        texts(&["Name", "CAS", "Ready biodegradability", "Hazard statements"]),
+        texts(&["Phenol", "108-95-2", "readily biodegradable", "H341, H373"]),
+        texts(&["DDT", "50-29-3", "not readily biodegradable", "H301"]),
+        texts(&["Toluene", "108-88-3", "", ""]),
+    ]);
+    assert_eq!(place.screen(&["--rulebook", "eu-reach-pbt"]).status, 0);
+    let rows = place.screened("Reasoning").0;
+    let line = |row: &str, criterion: &str| {
+        let found = rows.iter().find(|line| line[1].to_string() == row && line[5].to_string() == criterion);
+        [7, 10, 11].map(|column| found.unwrap()[column].to_string())
+    };
+    assert_eq!(line("2", "P"), ["readily biodegradable", "unstated", "Substances!C2"]);
+    assert_eq!(line("2", "T"), ["H373", "", "Substances!D2"]);
+    assert_eq!(line("3", "P"), ["not readily biodegradable", "unstated", "Substances!C3"]);
+    assert_eq!(line("3", "T"), ["H301", "", "Substances!D3"]);
+    assert_eq!(line("4", "P"), ["", "", ""]);
+}

@@ -75,8 +75,8 @@ fn where_there_is_nothing_to_list_the_sheet_says_what_was_looked_for() {
     assert!(!run.said.contains("Conflicts"), "{}", run.said);
     assert_eq!(
         place.screened("Conflicts").text(),
-        "Nothing to list: every cell could be read, no row was left aside, no column is in doubt, and no CAS number, \
-         EC number or name stands on more than one row."
+        "Nothing to list: every cell could be read, no row was left aside, no column is in doubt or left unused, and \
+         no CAS number, EC number or name stands on more than one row."
     );
     assert!(place.screened("Run record").text().contains("Cells that could not be read or used: 0|"));
 }
@@ -375,7 +375,7 @@ fn doubtful_columns_and_rows_left_aside_are_listed_in_the_place_they_have() {
     assert_eq!(
         kinds,
         [
-            ("A1", "doubtful column"),
+            ("B1", "doubtful column"),
             ("D2", "not a value of its column"),
             ("A4", "header of another table"),
             ("A5", "rows not screened")
@@ -389,8 +389,55 @@ fn doubtful_columns_and_rows_left_aside_are_listed_in_the_place_they_have() {
     assert_eq!(lines[3][3], "2 rows were not screened, below the header of another table in row 4.");
     assert_eq!(
         listed(&place.screened("Conflicts")).0[0],
-        "2 cells could not be read or used; 2 rows were not screened; 1 column is in doubt."
+        "2 cells could not be read or used; 2 rows were not screened; 1 column or header is in doubt."
     );
+}
+
+#[test]
+fn a_column_with_data_that_is_not_used_is_listed_and_one_without_is_not() {
+    let place = Place::with_rows(vec![
+        texts(&["Name", "CAS", "Shelf", "Colour", "", "log Kow"]),
+        texts(&["Phenol", "108-95-2", "7", "", "x", "1.46"]),
+        texts(&["DDT", "50-29-3", "8", "  ", "", "6.91"]),
+    ]);
+    assert_eq!(place.screen(&[]).status, 0);
+    let (head, lines) = listed(&place.screened("Conflicts"));
+    assert_eq!(head[0], "2 columns with data are not used.");
+    let told: Vec<[&str; 5]> =
+        lines.iter().map(|line| [1, 5, 6, 8, 9].map(|column| line[column].as_str())).collect();
+    assert_eq!(
+        told,
+        [
+            [
+                "C1",
+                "Shelf",
+                "column not used",
+                "Column C is carried along only: its header is not recognised; 2 screened rows hold something in it.",
+                "Nothing, if it holds nothing to screen with; otherwise say what it holds with `--column \
+                 'Header=field'`."
+            ],
+            [
+                "E1",
+                "",
+                "column not used",
+                "Column E is carried along only: it has no header; 1 screened row holds something in it.",
+                "Nothing, if it holds nothing to screen with; otherwise give it a header."
+            ]
+        ]
+    );
+}
+
+#[test]
+fn a_doubtful_column_leads_to_its_header_and_names_it() {
+    let place = Place::with_rows(vec![
+        texts(&["Name", "CAS", "log Kow", "Koc (L/kg)"]),
+        texts(&["Phenol", "108-95-2", "1.46", "1.500"]),
+    ]);
+    assert_eq!(place.screen(&[]).status, 0);
+    let lines = lines_of(&place);
+    let told: Vec<[&str; 3]> =
+        lines.iter().map(|line| [1, 5, 6].map(|column| line[column].as_str())).collect();
+    assert_eq!(told, [["D1", "Koc (L/kg)", "doubtful column"]]);
 }
 
 #[test]

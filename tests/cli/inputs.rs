@@ -112,6 +112,35 @@ fn a_header_alone_and_a_header_above_nothing_screen_no_row() {
         let place = Place::with_rows(rows);
         let run = place.screen(&[]);
         assert_eq!(run.status, 0, "{}", run.complained);
+        assert_eq!(
+            run.complained,
+            "Substances: nothing was screened: the header in row 1 was recognised, but no row below it holds a \
+             substance; if there should be one, check that the file is complete and that the header stands above the \
+             data\n"
+        );
+        let record = place.screened("Run record").text();
+        assert!(record.contains("Rows screened|0; no row below the header holds a substance"), "{record}");
         assert!(run.said.starts_with("Screened 0 rows on 1 sheet; 0 other sheets copied."), "{}", run.said);
     }
+}
+
+#[test]
+fn a_hidden_sheet_that_is_screened_is_said_to_be_hidden_and_a_visible_one_is_not() {
+    let place = Place::new();
+    let mut book = rust_xlsxwriter::Workbook::new();
+    for name in ["Shown", "Old"] {
+        let sheet = book.add_worksheet();
+        sheet.set_name(name).unwrap().set_hidden(name == "Old");
+        sheet.write_row(0, 0, ["Name", "CAS"]).unwrap();
+        sheet.write_row(1, 0, ["Phenol", "108-95-2"]).unwrap();
+    }
+    book.save(place.path("inventory.xlsx")).unwrap();
+    let run = place.screen(&[]);
+    assert!(run.said.contains("\nSheet `Old` is hidden and was screened.\n"), "{}", run.said);
+    assert!(!run.said.contains("`Shown` is hidden"), "{}", run.said);
+    let record = place.screened("Run record").text();
+    let told =
+        "Sheet: Old|\nHidden|The sheet is hidden in the inventory; it was screened and is hidden here.";
+    assert!(record.contains(told), "{record}");
+    assert_eq!(record.matches("\nHidden|").count(), 1, "{record}");
 }

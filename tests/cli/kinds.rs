@@ -152,7 +152,8 @@ fn a_row_with_more_fields_than_the_header_is_not_screened() {
                marks, or give the column a header";
     assert!(run.complained.contains(why), "{}", run.complained);
     assert!(run.said.contains("Screened 2 rows on 1 sheet"), "{}", run.said);
-    let left = "1 row was not screened, with more fields than the header; each is among the cells that could not be read.";
+    let left = "1 row was not screened, with more fields than the header; each is among the cells that could not \
+                be read.";
     assert!(run.said.contains(left), "{}", run.said);
     let text = place.rows_of("list-screened.xlsx", "list").text();
     assert!(text.contains(&format!("not screened: {why}")), "{text}");
@@ -193,4 +194,29 @@ fn control_characters_of_an_export_do_not_break_the_output() {
     let Rows(rows) = place.rows_of("list-screened.xlsx", "list");
     assert_eq!(rows[20][0], Data::String("67-56-1".to_owned()));
     assert_eq!(place.run(&["columns", "list-screened.xlsx"]).status, 0);
+}
+
+/// A sheet of a workbook, as stored.
+fn xml_of(place: &Place, file: &str, sheet: usize) -> String {
+    let file = std::fs::File::open(place.path(file)).unwrap();
+    let part = format!("xl/worksheets/sheet{sheet}.xml");
+    std::io::read_to_string(zip::ZipArchive::new(file).unwrap().by_name(&part).unwrap()).unwrap()
+}
+
+#[test]
+fn columns_of_a_text_file_are_as_wide_as_their_cells_and_our_sheets_print_one_page_wide() {
+    let place = Place::new();
+    let content = "Name;CAS No.;log Kow\n1,1,1-trichloro-2,2-bis(4-chlorophenyl)ethane;50-29-3;6,91\n";
+    std::fs::write(place.path("list.csv"), content).unwrap();
+    assert_eq!(place.run(&["screen", "list.csv"]).status, 0);
+    let list = xml_of(&place, "list-screened.xlsx", 1);
+    for width in ["<col min=\"1\" max=\"1\" width=\"40", "<col min=\"2\" max=\"2\" width=\"9"] {
+        assert!(list.contains(width), "{width} in {}", &list[..900]);
+    }
+    assert!(!list.contains("fitToWidth") && !list.contains("fitToHeight"));
+    for sheet in [2, 4, 5, 6] {
+        let xml = xml_of(&place, "list-screened.xlsx", sheet);
+        let fits = xml.contains("<pageSetUpPr fitToPage=\"1\"/>") && xml.contains("fitToHeight=\"0\"");
+        assert!(fits && xml.contains("orientation=\"landscape\""), "sheet {sheet}");
+    }
 }

@@ -52,15 +52,17 @@ impl Console {
             }
             format!("  {short}: {}", parts.join(", "))
         }));
-        lines.extend(remarks);
+        lines.extend(summary.hidden.iter().cloned());
         lines.extend(summary.how_read.iter().cloned());
-        if !summary.unreached.is_empty() {
-            lines.push(format!("No row had a value for: {}.", summary.unreached.join("; ")));
-        }
+        lines.extend(summary.rows_aside.iter().cloned());
+        lines.extend(remarks);
         let repeated = summary.conflicts.repeated();
         if !repeated.is_empty() {
             let sheet = &summary.conflicts_sheet;
             lines.push(format!("{}; the sheet `{sheet}` says where they differ.", repeated.join("; ")));
+        }
+        if !summary.unreached.is_empty() {
+            lines.push(format!("No row had a value for: {}.", summary.unreached.join("; ")));
         }
         lines.extend(summary.not_carried.iter().cloned());
         lines.push(format!("Written: {}", summary.output.display()));
@@ -80,6 +82,7 @@ fn show_faults(summary: &Summary) {
             count(*left, "row was", "rows were")
         )
     }));
+    lines.extend(summary.without_rows.iter().cloned());
     print_error(&lines);
 }
 

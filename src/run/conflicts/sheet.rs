@@ -2,6 +2,7 @@
 
 use std::sync::Arc;
 
+use super::columns::headers_of;
 use super::{About, Item, Written};
 use crate::fault::{Conflict, ConflictCounts, Refusal, Wording};
 use crate::report::{CONFLICT_COLUMNS, ConflictLine, Entry, RowName, conflict_entries};
@@ -37,6 +38,7 @@ impl<'run> ConflictsSheet<'run> {
         for (column, (_, width)) in (0u16..).zip(CONFLICT_COLUMNS) {
             workbook.set_column_width(sheet, column, column, width)?;
         }
+        workbook.print_across(sheet, None)?;
         let mut writer = SheetWriter { name: NAME, sheet, next_row: 0, part: 1 };
         for line in counts.heading() {
             write_line(workbook, &mut writer, &[Entry::text(line, Look::Text)])?;
@@ -54,6 +56,7 @@ impl<'run> ConflictsSheet<'run> {
         let header = CONFLICT_COLUMNS.map(|(header, _)| Entry::text(header, Look::Header));
         write_line(self.workbook, &mut self.writer, &header)?;
         self.workbook.freeze(self.writer.sheet, self.writer.next_row, 0)?;
+        self.workbook.print_across(self.writer.sheet, Some(self.header_row))?;
         Ok(())
     }
 
@@ -68,7 +71,15 @@ impl<'run> ConflictsSheet<'run> {
                 let wording = Wording { wrong: format!("`{found}` {}", wording.wrong), ..wording };
                 self.write(&cell, line.row.as_deref(), header, &found, &wording)
             }
-            About::Sheet(conflict) => self.write(&cell, None, "", "", &conflict.wording()),
+            About::Sheet(conflict) => {
+                let header = match conflict {
+                    Conflict::Columns { .. } | Conflict::Unused { .. } => {
+                        self.header_of(item.sheet, item.column)
+                    }
+                    Conflict::RowsLeftAside { .. } | Conflict::Header { .. } | Conflict::Shared(_) => "",
+                };
+                self.write(&cell, None, header, "", &conflict.wording())
+            }
         }
     }
 
@@ -110,12 +121,8 @@ impl<'run> ConflictsSheet<'run> {
 
     fn header_of(&self, sheet: usize, column: u16) -> &'run str {
         let screened = self.plans.get(sheet).and_then(|plan| plan.screened.as_ref());
-        let known = screened.and_then(|screened| {
-            let recognised = &screened.recognised;
-            let columns = recognised.columns.iter().map(|known| (known.index, known.header.as_str()));
-            let unknown = recognised.unknown.iter().map(|(index, header)| (*index, header.as_str()));
-            columns.chain(unknown).find(|(index, _)| *index == column)
-        });
+        let known = screened
+            .and_then(|screened| headers_of(&screened.recognised).find(|(index, _)| *index == column));
         known.map_or("", |(_, header)| header)
     }
 }

@@ -74,6 +74,23 @@ impl AnnotatedWorkbook {
         })
     }
 
+    /// Writes a row of the inventory as [`AnnotatedWorkbook::write_row`] does, its texts broken over lines.
+    pub fn write_wrapped_row(&mut self, sheet: SheetId, row: &Row) -> Result<(), FileFault> {
+        self.write_row(sheet, row)?;
+        for cell in &row.cells {
+            let CellContent::Text(text) = &cell.content else { continue };
+            self.guarded(|this| {
+                let usual = appearance_of(&this.appearances, cell).map(|look| look.format().clone());
+                let format = usual.unwrap_or_default().set_text_wrap();
+                let worksheet = this.book.worksheet_from_index(sheet.0)?;
+                worksheet.write_string_with_format(row.index, cell.column, shortened(text), &format)?;
+                Ok(())
+            })?;
+            self.fit_row(sheet, row.index, cell.column, text)?;
+        }
+        Ok(())
+    }
+
     /// Writes one of our own cells.
     pub fn write(
         &mut self,

@@ -51,6 +51,19 @@ impl AnnotatedWorkbook {
         })
     }
 
+    /// Prints a sheet across, one page wide, with its first rows up to the header on every page.
+    pub fn print_across(&mut self, sheet: SheetId, header_row: Option<u32>) -> Result<(), FileFault> {
+        self.on_sheet(sheet, |sheet| {
+            sheet.set_landscape();
+            // As many pages high as it takes.
+            sheet.set_print_fit_to_pages(1, 0);
+            if let Some(row) = header_row {
+                sheet.set_repeat_rows(row, row)?;
+            }
+            Ok(())
+        })
+    }
+
     /// Gives the rows below a header their filter buttons.
     pub fn filter(
         &mut self,
