@@ -61,6 +61,10 @@ fn examples() -> Vec<(&'static str, CellFaultKind)> {
         ("Solvents", Kind::HeadingRow),
         ("* mean of two determinations", Kind::NoteRow),
         ("Page 2 of 5", Kind::PageLabelRow),
+        ("10 d (plasma)", Kind::SpeaksOfOther { found: "a body".to_owned(), what }),
+        ("log D 1.2 (pH 7)", Kind::SpeaksOfOther { found: "log d".to_owned(), what: "log Kow" }),
+        ("10 d (hydrolysis)", Kind::CountsAs { other: "hydrolysis half-life", what }),
+        ("9999", Kind::Placeholder { what: "BCF" }),
     ]
 }
 
