@@ -58,6 +58,7 @@ fn examples() -> Vec<(&'static str, CellFaultKind)> {
         ("Kow = 4.5", Kind::LogarithmOrNot { what: "log Kow", example: "log Kow = 4.5" }),
         ("40 j", Kind::DaysOrYears),
         ("0.01", Kind::DimensionlessHenry),
+        ("1500000", Kind::ShownInThousands { shown: "1500".to_owned() }),
         ("Solvents", Kind::HeadingRow),
         ("* mean of two determinations", Kind::NoteRow),
         ("Page 2 of 5", Kind::PageLabelRow),
