@@ -7,8 +7,9 @@ use std::sync::LazyLock;
 
 use regex::Regex;
 
-use super::pattern::fixed;
+use super::pattern::{fixed, fixed_by_parts};
 use super::remark::folded;
+use crate::quantity::Dimension;
 use crate::substance::{Compartment, Property};
 
 /// What in the text of a cell speaks against its column, as far as words can tell.
@@ -18,11 +19,14 @@ pub(super) fn named_against(property: Property, header: &str, text: &str) -> Opt
     }
     let plain = folded(text);
     let found = match property {
-        Property::LogKow => first(&plain, &[&LOG_D, &LOG_KOA, &KOC]).or_else(|| ionised(&plain)),
+        Property::LogKow => {
+            first(&plain, &[&LOG_D, &LOG_KOA, &KOC, &BCF, &BAF, &BMF]).or_else(|| ionised(&plain))
+        }
         Property::LogKoa => first(&plain, &[&LOG_D, &KOC]),
         Property::LogD => first(&plain, &[&LOG_KOA, &KOC]),
         Property::Bcf => first(&plain, &[&BAF, &BMF, &BSAF, &TMF, &TERRESTRIAL, &PLANT, &DRY_WEIGHT]),
         Property::Baf => first(&plain, &[&BCF, &BMF, &BSAF, &TMF, &TERRESTRIAL, &DRY_WEIGHT]),
+        Property::Koc => first(&plain, &[&LOG_KOA, &BCF, &BAF]),
         Property::Bmf => first(&plain, &[&BCF, &BAF, &BSAF, &TMF]),
         Property::Tmf => first(&plain, &[&BCF, &BAF, &BSAF, &BMF]),
         Property::LongTermToxicity => first(&plain, &[&TERRESTRIAL, &ROUTE])
@@ -37,13 +41,15 @@ pub(super) fn named_against(property: Property, header: &str, text: &str) -> Opt
         | Property::HenryConstant
         | Property::PkaAcid
         | Property::PkaBase
-        | Property::Koc
         | Property::HydrolysisHalfLife
         | Property::PhotolysisHalfLife
         | Property::DissipationHalfLife
         | Property::MolarMass => None,
     };
-    found.map(str::to_owned)
+    // `> water solubility (0.5 mg/L)`: with a sign before it, the name is that of a bound.
+    let is_bound = text.trim_start().starts_with(['<', '>', '≤', '≥', '＜', '＞']);
+    let lead = || if is_bound { None } else { named_first(property, &plain) };
+    found.or_else(lead).map(str::to_owned)
 }
 
 /// Whether remarks beside a value that is no logarithm say that it is one, or give a logarithm that does not fit it.
@@ -91,6 +97,49 @@ static BMF: LazyLock<Regex> = LazyLock::new(|| {
 });
 static BSAF: LazyLock<Regex> = LazyLock::new(|| fixed(r"\b(?:log ?|lg ?)?bsaf\b|\bbiota sediment\b"));
 static TMF: LazyLock<Regex> = LazyLock::new(|| fixed(r"\b(?:log ?|lg ?)?tmf\b|\btrophic magnif\w*"));
+
+/// The name of another value at the beginning, or as the only words behind a number: `log Kow 3` in a column of BCF.
+fn named_first(property: Property, plain: &str) -> Option<&str> {
+    static NAMES: LazyLock<Vec<(fn(Property) -> bool, Regex)>> = LazyLock::new(|| {
+        let names: [(fn(Property) -> bool, &str); 9] = [
+            (
+                |property| property == Property::LogKow,
+                r"(?:log10|log|lg) ?p|(?:(?:log10|log|lg) ?)?(?:k ?ow|p ?ow)",
+            ),
+            (|property| matches!(property, Property::PkaAcid | Property::PkaBase), r"pk[ab]\d?"),
+            (|property| property == Property::Koc, r"(?:(?:log|lg) ?)?k ?oc"),
+            (|property| matches!(property, Property::Bcf | Property::Baf), r"(?:(?:log|lg) ?)?(?:bcf|baf)"),
+            (
+                |property| property.dimension() == Dimension::Time,
+                r"dt ?50|degt ?50|half ?life|t ?1 2|halbwertszeit|hwz|demi vie|vida media|emivita|halfwaardetijd|半減期|半衰期",
+            ),
+            (
+                |property| property == Property::WaterSolubility,
+                r"(?:water )?solubility|(?:wasser)?loslichkeit|solubilite|solubilidad|solubilita|oplosbaarheid|ws|溶解度",
+            ),
+            (
+                |property| property == Property::VapourPressure,
+                r"vp|vapou?r pressure|dampfdruck|蒸気圧|蒸气压",
+            ),
+            (
+                |property| matches!(property, Property::LongTermToxicity | Property::AcuteToxicity),
+                r"noec|noel|loec|e[rbcy]?c ?(?:10|20|50)|l[cd] ?50|ic ?50",
+            ),
+            (
+                |property| {
+                    matches!(property, Property::MeltingPoint | Property::BoilingPoint | Property::MolarMass)
+                },
+                r"mp|bp|mw|smp|sdp|kp|schmp|melting point|boiling point|schmelzpunkt|siedepunkt|molar mass|molmasse|molecular weight",
+            ),
+        ];
+        let pattern = |names: &str| {
+            format!(r"^(?:measured |exp |calc )?(?:{names})\b|^[\d ]+(?:l kg |mg l )?(?:{names})$")
+        };
+        names.into_iter().map(|(own, names)| (own, fixed_by_parts(&pattern(names)))).collect()
+    });
+    let others = NAMES.iter().filter(|(own, _)| !own(property));
+    others.filter_map(|(_, names)| names.find(plain)).map(|found| found.as_str().trim()).next()
+}
 
 /// Animals of the land, whatever the route.
 static TERRESTRIAL: LazyLock<Regex> = LazyLock::new(|| {
