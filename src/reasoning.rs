@@ -3,6 +3,7 @@
 //!
 //! It receives a [`Judgement`](crate::judge::Judgement) and compares nothing.
 
+mod absence;
 mod criterion;
 mod designation;
 mod row;

@@ -236,6 +236,25 @@ pub enum CellFaultKind {
     NoteRow,
     /// The number of a printed page among the rows.
     PageLabelRow,
+    /// Words of a cell name another quantity, organism or medium than its column asks for.
+    SpeaksOfOther {
+        /// What they name, for example `log d`.
+        found: String,
+        /// The field's title.
+        what: &'static str,
+    },
+    /// A value that its words make one of another field, where it only supports.
+    CountsAs {
+        /// The title of the field it counts as.
+        other: &'static str,
+        /// The title of the field of the column.
+        what: &'static str,
+    },
+    /// A number that exports write for a missing value.
+    Placeholder {
+        /// The field's title.
+        what: &'static str,
+    },
 }
 
 impl CellFaultKind {

@@ -4,6 +4,7 @@ use crate::judge::{
     Carries, Closeness, CriterionJudgement, Deciding, Decision, StepJudgement, StepState, TestJudgement,
     Verdict,
 };
+use crate::reasoning::absence::absence;
 use crate::reasoning::designation::out_of_scope;
 use crate::reasoning::stops::stops_phrase;
 use crate::reasoning::value::{listed, telling_tests, test_clause, titles, value_phrase};
@@ -158,17 +159,12 @@ fn passed_over(told: Told, criterion: &Criterion, judged: &CriterionJudgement, e
     // What a sentence before has told to be missing need not be told again.
     let absent: Vec<String> =
         titles(absent.into_iter()).into_iter().filter(|title| !said.contains(title)).collect();
-    if !absent.is_empty() {
-        sentences.push(format!(
-            "The inventory holds no {}, which does not mean that there is none",
-            alternatives(&absent)
-        ));
-    }
+    sentences.extend(absence(told, absent));
     sentences
 }
 
 /// `a`, `a or b`, `a, b or c`.
-fn alternatives(parts: &[String]) -> String {
+pub(super) fn alternatives(parts: &[String]) -> String {
     match parts {
         [first @ .., last] if !first.is_empty() => format!("{} or {last}", first.join(", ")),
         _ => listed(parts),

@@ -3,6 +3,7 @@
 //! What a cell says of itself counts first, then the columns that speak of it (method, guideline, temperature,
 //! reliability), then its header. Whatever cannot be read becomes a fault; the rest of the row stands.
 
+mod against;
 mod cell;
 mod companions;
 mod degradability;

@@ -58,10 +58,14 @@ fn examples() -> Vec<(&'static str, CellFaultKind)> {
         ("Kow = 4.5", Kind::LogarithmOrNot { what: "log Kow", example: "log Kow = 4.5" }),
         ("40 j", Kind::DaysOrYears),
         ("0.01", Kind::DimensionlessHenry),
-        ("1.234 k", Kind::ShownInThousands { shown: "1.234".to_owned() }),
+        ("1500000", Kind::ShownInThousands { shown: "1500".to_owned() }),
         ("Solvents", Kind::HeadingRow),
         ("* mean of two determinations", Kind::NoteRow),
         ("Page 2 of 5", Kind::PageLabelRow),
+        ("10 d (plasma)", Kind::SpeaksOfOther { found: "a body".to_owned(), what }),
+        ("log D 1.2 (pH 7)", Kind::SpeaksOfOther { found: "log d".to_owned(), what: "log Kow" }),
+        ("10 d (hydrolysis)", Kind::CountsAs { other: "hydrolysis half-life", what }),
+        ("9999", Kind::Placeholder { what: "BCF" }),
     ]
 }
 

@@ -227,6 +227,24 @@ fn a_ready_test_that_is_not_reliable_decides_nothing() {
     assert_eq!(verdict_of(&cells, "REACH", "P"), NoData);
 }
 
+#[test]
+fn values_that_are_not_reliable_are_not_told_as_missing() {
+    let sentence = |reliability: &str| {
+        let cells = [("BCF", "300"), ("Reliability", reliability)];
+        read(&cells).judged().sentence("REACH", "B")
+    };
+    let told = "Of BCF the inventory holds only values of reliability 3 or 4, which do not decide";
+    assert!(sentence("4").contains(told), "{}", sentence("4"));
+    assert!(!sentence("2").contains(told), "{}", sentence("2"));
+}
+
+#[test]
+fn an_open_value_beside_a_measured_one_in_its_cell_keeps_it_from_clearing() {
+    let verdict = |bcf: &str| verdict_of(&[("BCF", bcf)], "REACH", "B");
+    assert_eq!(verdict("300 (measured)"), NotFulfilled);
+    assert!(!cleared(verdict("300 (measured); 9000")));
+}
+
 // Half-lives
 
 #[test]

@@ -286,6 +286,21 @@ impl CellFaultKind {
                 "is the number of a printed page, so the row was not screened",
                 "if it is a substance, give it a CAS number",
             ),
+            Self::SpeaksOfOther { found, what } => say(
+                "speaks of something else",
+                format!("speaks of `{found}` and was not read as {what}"),
+                "put that value in a column of its own, and write here only what the header says",
+            ),
+            Self::CountsAs { other, what } => say(
+                "counts as another value",
+                format!("counts as {other}, which supports only, and does not stand for {what}"),
+                format!("if it is the {what}, take that word out, else put it in a column of its own"),
+            ),
+            Self::Placeholder { what } => say(
+                "looks like a placeholder",
+                format!("looks like a number that stands for a missing value and was not read as {what}"),
+                "leave the cell empty if there is no value, or write `(measured)` behind the number if it is one",
+            ),
         }
     }
 }

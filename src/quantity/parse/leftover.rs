@@ -6,7 +6,7 @@ use super::number::starts_number;
 use super::qualifier::strip_phrase;
 use super::segment::{Before, JOINERS, unit_after_number};
 use super::value::read_opening;
-use super::words::{is_ratio_word, names_a_test, starts_remark};
+use super::words::{is_ratio_word, names_a_test, reads_as_remark, starts_remark};
 use super::{QuantityFault, ReadAs};
 use crate::quantity::Dimension;
 
@@ -54,12 +54,25 @@ pub(super) fn read_leftover(
         return Err(QuantityFault::SeveralValues);
     }
     let bare = read_as.dimension == Dimension::Dimensionless;
-    let readable = known || (bare && before == Before::NoValue && !has_digit(word));
+    let readable = known || (bare && before == Before::NoValue && !has_digit(word) && reads_as_remark(rest));
     if readable || expression.unit.is_some() {
         expression.remarks.push(rest.replace(MARK, " "));
         return Ok(());
     }
-    Err(if bare { QuantityFault::SeveralValues } else { QuantityFault::UnknownUnit(word.to_owned()) })
+    let unknown = !bare || (before == Before::NoValue && !has_digit(rest));
+    Err(if unknown {
+        QuantityFault::UnknownUnit(unknown_unit(rest, word))
+    } else {
+        QuantityFault::SeveralValues
+    })
+}
+
+/// The word in a message, with what belongs to it: `mg x/L` and no `mg`.
+fn unknown_unit(rest: &str, word: &str) -> String {
+    const LONGEST_SHOWN: usize = 20;
+    let whole = rest.split([',', ';', '|', MARK]).next().unwrap_or(rest).trim();
+    let fits = whole.contains('/') && !word.contains('/') && whole.chars().count() <= LONGEST_SHOWN;
+    if fits { whole.to_owned() } else { word.to_owned() }
 }
 
 /// Whether a remark goes on with another value: `4.2 measured and 4.6 calculated`.

@@ -60,8 +60,22 @@ pub(super) fn take_unit(text: &str, dimension: Dimension) -> Option<(Unit, &str)
     let text = text.trim_start();
     unit_ends(text).into_iter().rev().find_map(|end| {
         let (word, rest) = text.split_at_checked(end)?;
-        parse_unit_of(word, dimension).filter(|_| !is_inverted(rest)).map(|unit| (unit, rest))
+        let of_active_substance = || parse_unit_of(&without_active_substance(word)?, dimension);
+        parse_unit_of(word, dimension)
+            .or_else(of_active_substance)
+            .filter(|_| !is_inverted(rest))
+            .map(|unit| (unit, rest))
     })
+}
+
+/// `mg a.s./L` is milligrams of active substance per litre.
+fn without_active_substance(word: &str) -> Option<String> {
+    const ACTIVE: [&str; 11] =
+        ["a.s.", "a.i.", "i.a.", "w.s.", "s.a.", "m.a.", "p.a.", "as", "ai", "ws", "test item"];
+    let (mass, volume) = word.split_once('/')?;
+    let mass = mass.trim_end().to_lowercase();
+    let mass = ACTIVE.iter().find_map(|active| mass.strip_suffix(active))?.strip_suffix(' ')?;
+    Some(format!("{}/{volume}", mass.trim_end()))
 }
 
 /// Where a unit could end: before a space, a bracket, a separator, after an East Asian letter, or at the end of the text.

@@ -5,7 +5,7 @@ mod lists;
 use std::collections::BTreeSet;
 use std::sync::LazyLock;
 
-use super::fold::plain_words;
+use super::fold::{is_east_asian, plain_words};
 use lists::{
     DENIALS, LABELS, MISSING, MISSING_NUMBER, NUMBERED, OTHER_KINDS, RATIO_WORDS, REMARK_STARTS, SPANS,
     TESTS, VALUE_WORDS, VALUE_WORDS_WITHIN,
@@ -75,6 +75,21 @@ pub(super) fn starts_remark(word: &str) -> bool {
     STARTS.contains(first)
         // `OECD117`, `pH7`: the number is the word's.
         || STARTS.contains(first.trim_end_matches(|character: char| character.is_ascii_digit()))
+}
+
+/// Whether words after a bare number without a dimension are those of a remark: one of them is known, they are in a script
+/// without spaces, or they end in the year of a reference.
+pub(super) fn reads_as_remark(text: &str) -> bool {
+    const MONTHS: &str = "jan feb mar apr may jun jul aug sep oct nov dec mai okt dez juin mei";
+    let plain = plain_words(text);
+    let first = plain.split(' ').next().unwrap_or_default();
+    let short = first.char_indices().nth(3).map_or(first, |(end, _)| first.get(..end).unwrap_or_default());
+    let is_month = MONTHS.split(' ').any(|month| month == first || (month == short && first.len() > 4));
+    let last = plain.split(' ').next_back().unwrap_or_default();
+    let year = last.len() == 4 && last.parse().is_ok_and(|year: u32| (1900..2100).contains(&year));
+    plain.contains(is_east_asian)
+        || plain.split(' ').any(|word| starts_remark(word) || LABEL_WORDS.contains(word))
+        || (year && !is_month && plain.contains(' '))
 }
 
 /// Whether the words before a time end in one for its length: `after 28 d` is no half-life.

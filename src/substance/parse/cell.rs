@@ -4,19 +4,20 @@ use std::sync::LazyLock;
 
 use regex::Regex;
 
+use super::against::{named_against, names_log_kow, says_logarithm};
 use super::pattern::fixed;
 use crate::columns::Column;
 use crate::fault::{CellFaultKind, nearest};
 use crate::quantity::{
-    Bound, DAYS_PER_MONTH, Date, Dimension, LetterA, Quantity, QuantityFault, ReadAs, Scale, Unit,
+    Bound, DAYS_PER_MONTH, Date, Dimension, LetterA, Parsed, Quantity, QuantityFault, ReadAs, Scale, Unit,
     is_missing, parse_quantities, quantity_of_number, tidy, unit_words,
 };
-use crate::substance::Property;
 use crate::substance::parse::Said;
 use crate::substance::parse::doubt::said_in;
 pub(super) use crate::substance::parse::expected::Expected;
 use crate::substance::parse::expected::Sign;
 use crate::substance::parse::remark::{Degraded, folded};
+use crate::substance::{Basis, Property};
 use crate::workbook::CellContent;
 
 /// A quantity and what the remarks beside it say.
@@ -51,9 +52,16 @@ pub(super) fn read_quantities(
             quantity_of_number(*number, read_as).map(|quantity| vec![(quantity, Said::default())])
         }
         CellContent::Text(text) if speaks_of_other_toxicity(text, expected) => return Err(expected.not_a()),
-        CellContent::Text(text) => parse_quantities(text, read_as).map(|values| {
-            values.into_iter().map(|parsed| (parsed.quantity, said_in(&parsed.remarks))).collect()
-        }),
+        CellContent::Text(text) => match parse_quantities(text, read_as) {
+            Ok(values) => {
+                if let Some(found) = named_against_of(text, column, expected) {
+                    return Err(CellFaultKind::SpeaksOfOther { found, what: expected.what });
+                }
+                check_logarithms(&values, expected)?;
+                Ok(of_equal_rank(values.into_iter().map(|parsed| read_of(parsed, expected)).collect()))
+            }
+            Err(fault) => Err(fault),
+        },
         CellContent::DateTime(_) => return Err(CellFaultKind::BecameDate { what: expected.what }),
         CellContent::Boolean(_) => return Err(expected.not_a()),
         CellContent::Empty => return Ok(Vec::new()),
@@ -74,6 +82,48 @@ pub(super) fn read_quantities(
         }
         Err(fault) => Err(word_fault(fault, expected, scale)),
     }
+}
+
+fn named_against_of(text: &str, column: &Column, expected: Expected) -> Option<String> {
+    expected.property.and_then(|property| named_against(property, &column.header, text))
+}
+
+/// `2.5 (log BCF)` is a logarithm or no logarithm, `100 (log BCF 4)` neither.
+fn check_logarithms(values: &[Parsed], expected: Expected) -> Result<(), CellFaultKind> {
+    let Some(example) = expected.logged() else {
+        return Ok(());
+    };
+    let linear = |parsed: &&Parsed| {
+        matches!(parsed.quantity.unit, Unit::LitrePerKilogram | Unit::LitrePerGram | Unit::One)
+    };
+    let is_logarithmic = expected.property.is_some_and(Property::is_logarithmic);
+    let doubtful =
+        values.iter().filter(linear).any(|parsed| says_logarithm(&parsed.remarks, parsed.quantity.single()));
+    if doubtful && !is_logarithmic {
+        return Err(CellFaultKind::LogarithmOrNot { what: expected.what, example });
+    }
+    Ok(())
+}
+
+/// A log Kow that was measured does not make another value measured.
+fn read_of(parsed: Parsed, expected: Expected) -> Read {
+    let mut said = said_in(&parsed.remarks);
+    let of_other = expected.property != Some(Property::LogKow) && names_log_kow(&parsed.remarks);
+    if of_other && said.basis == Some(Basis::Measured) {
+        said.basis = Some(Basis::Unstated);
+    }
+    (parsed.quantity, said)
+}
+
+/// A value said to be measured outranks none in the same cell of which nothing is said: `300 (measured); 9000`.
+fn of_equal_rank(mut values: Vec<Read>) -> Vec<Read> {
+    let is_open = |(_, said): &Read| matches!(said.basis, None | Some(Basis::Unstated));
+    if values.iter().any(is_open) {
+        for (_, said) in values.iter_mut().filter(|(_, said)| said.basis == Some(Basis::Measured)) {
+            said.basis = None;
+        }
+    }
+    values
 }
 
 fn word_fault(fault: QuantityFault, expected: Expected, scale: Scale) -> CellFaultKind {
@@ -163,6 +213,9 @@ fn check_words(
         return Err(CellFaultKind::DaysOrYears);
     }
     // `2019年` is a date.
+    if said.basis != Some(Basis::Measured) && is_placeholder(&quantity.reported, expected) {
+        return Err(CellFaultKind::Placeholder { what: expected.what });
+    }
     let days_a_year = 12.0 * DAYS_PER_MONTH;
     let dates = 1900.0 * days_a_year..2100.0 * days_a_year;
     if quantity.unit == Unit::Year && quantity.single().is_some_and(|days| dates.contains(&days)) {
@@ -174,6 +227,18 @@ fn check_words(
         return Err(CellFaultKind::WordsAgainstNumber);
     }
     Ok(())
+}
+
+/// Numbers that stand for a missing value in exports, where nothing but a unit follows.
+fn is_placeholder(reported: &str, expected: Expected) -> bool {
+    let reported = reported.replace('\u{2212}', "-");
+    let number = reported.trim().split(' ').next().unwrap_or_default();
+    let number = number.strip_suffix(".0").unwrap_or(number);
+    match expected.property {
+        None | Some(Property::MeltingPoint | Property::BoilingPoint | Property::MolarMass) => false,
+        Some(property) if property.is_logarithmic() => matches!(number, "-9" | "-9.9" | "-9.99" | "-9.0"),
+        Some(_) => matches!(number, "999" | "9999" | "99999" | "999999"),
+    }
 }
 
 /// Whether a cell of long-term toxicity names an acute value, or the reverse: `LC50: 0.3 mg/L` is no NOEC.

@@ -33,6 +33,21 @@ enum AnyValue {
     Inherent(Waiting<inherent::InherentCell>),
 }
 
+impl AnyValue {
+    /// Whether it is a logarithm of exactly zero that is not said to be measured.
+    fn is_zero_logarithm(&self) -> bool {
+        match self {
+            Self::Property(Property::LogKow | Property::LogD | Property::LogKoa, waiting) => {
+                let is_zero = waiting.value.single().is_some_and(|number| number.abs() < f64::MIN_POSITIVE);
+                is_zero && waiting.said.basis != Some(Basis::Measured)
+            }
+            Self::Property(..) | Self::Tonnage(_) | Self::Content(_) | Self::Ready(_) | Self::Inherent(_) => {
+                false
+            }
+        }
+    }
+}
+
 /// A row on its way to a [`Substance`].
 pub(super) struct Draft {
     substance: Substance,
@@ -296,7 +311,7 @@ impl Draft {
                 }
             })
             .collect();
-        for value in values {
+        for value in self.without_placeholders(values) {
             self.settle(value, &properties, unstated);
         }
         if self.statements == Completeness::Incomplete
@@ -308,6 +323,22 @@ impl Draft {
         self.substance
     }
 
+    /// A log Kow of exactly zero in a row whose other zeros were refused stands for a missing value as they do.
+    fn without_placeholders(&mut self, values: Vec<AnyValue>) -> Vec<AnyValue> {
+        let is_zero = |fault: &CellFault| matches!(fault.kind, CellFaultKind::Zero { .. });
+        if !self.substance.faults.iter().any(is_zero) {
+            return values;
+        }
+        let (doubted, kept): (Vec<_>, Vec<_>) = values.into_iter().partition(AnyValue::is_zero_logarithm);
+        for value in doubted {
+            if let AnyValue::Property(property, Waiting { value, cell, .. }) = value {
+                let kind = CellFaultKind::Placeholder { what: property.title() };
+                self.substance.faults.push(CellFault { cell, found: value.reported, kind });
+            }
+        }
+        kept
+    }
+
     fn settle(&mut self, value: AnyValue, properties: &[Property], unstated: UnstatedBasis) {
         let substance = &mut self.substance;
         match value {
@@ -315,6 +346,9 @@ impl Draft {
                 let property = match (property, value.said.other_half_life) {
                     // In air, light and hydroxyl radicals are how a substance degrades.
                     (Property::HalfLife(compartment), Some(other)) if compartment != Compartment::Air => {
+                        let kind = CellFaultKind::CountsAs { other: other.title(), what: property.title() };
+                        let found = value.value.reported.clone();
+                        substance.faults.push(CellFault { cell: value.cell.clone(), found, kind });
                         other
                     }
                     (property, _) => property,

@@ -17,7 +17,8 @@ pub(super) use reliability::in_words as reliability_in_words;
 use crate::substance::{Basis, Conditions, DegradationKind, Property};
 use words::{
     CALCULATED, DISSIPATION, DOUBT, GUIDELINE, HYDROLYSIS, MEASURED, MEASURED_OR_CALCULATED, NO_DEGRADATION,
-    NOT_MEASURED, NOT_OF_DEGRADATION, NOT_ULTIMATE, ORGANISM, PHOTOLYSIS, PRIMARY, ULTIMATE, VALUE_NAME,
+    NOT_MEASURED, NOT_OF_DEGRADATION, NOT_ULTIMATE, ORGANISM, PHOTOLYSIS, PLANNED, PRIMARY, ULTIMATE,
+    VALUE_NAME,
 };
 
 /// Basis and conditions as far as a text names them.
@@ -102,7 +103,7 @@ impl Said {
             self.degraded = Degraded::Said;
         }
         let is_guideline = GUIDELINE.is_match(&plain);
-        self.other_half_life = self.other_half_life.or_else(|| other_half_life(&plain));
+        self.other_half_life = self.other_half_life.or_else(|| other_half_life(&against));
         let basis = basis_said(part, &plain);
         self.basis = weaker(self.basis, basis);
         // `measured?` is kept as written.
@@ -221,7 +222,7 @@ pub(super) fn basis_said(written: &str, plain: &str) -> Option<Basis> {
             && MEASURED_OR_CALCULATED.is_match(&folded(&with_words))
     };
     match basis {
-        Basis::Measured if is_asked => Some(Basis::Unstated),
+        Basis::Measured if is_asked || PLANNED.is_match(plain) => Some(Basis::Unstated),
         Basis::Calculated if names_both() => Some(Basis::Unstated),
         Basis::Measured | Basis::Unstated | Basis::Calculated | Basis::Estimated => Some(basis),
     }

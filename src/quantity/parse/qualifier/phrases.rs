@@ -11,7 +11,7 @@ pub(super) const BEFORE: &[(Qualifier, &[&str])] = &[
         &[
             "greater than or equal to|more than or equal to|larger than or equal to|higher than or equal to|equal to or greater than",
             "not less than|no less than|not below|not lower than|no lower than|not under|at least|minimum|minimum of|min.|min",
-            "größer oder gleich|groesser oder gleich|größer gleich|groesser gleich|mindestens|wenigstens|ab|nicht weniger als",
+            "größer oder gleich|groesser oder gleich|größer gleich|groesser gleich|mindestens|mind.|wenigstens|ab|nicht weniger als",
             "nicht unter|nicht kleiner als|nicht kleiner",
             "supérieur ou égal à|supérieure ou égale à|supérieur ou égal|plus grand ou égal à|au moins|au minimum|pas moins de|à partir de",
             "non inférieur à|pas inférieur à|minimum de",

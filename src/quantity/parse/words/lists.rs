@@ -63,6 +63,7 @@ pub(super) const REMARK_STARTS: &[&str] = &[
     "a chez pour selon mesure mesuree experimental experimentale calcule calculee estime estimee poisson etude methode valeur moyenne",
     "en para segun medido medida calculado calculada estimado estimada pez pescado estudio metodo promedio media valor",
     "secondo con misurato misurata sperimentale calcolato calcolata stimato stimata pesce studio metodo valore",
+    "not non no nicht niet pas ohne without sans sin senza zonder neutral wood buffer",
     "bij voor volgens met gemeten experimenteel berekend geschat vis studie methode waarde gemiddeld",
 ];
 

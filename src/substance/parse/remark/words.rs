@@ -17,6 +17,8 @@ fn words(whole: &[&str], within: &[&str]) -> Regex {
 const CALCULATED_WORDS: &[&str] = &[
     r"calc|calcd|calculat\w+|comput\w+|predict\w*|estimat\w*|est|qsars?|qspr|model|models|modell\w*|modeling|in silico",
     r"read across|simul\w*|regression\w*|group contribution\w*|theor\w*|expected|presum\w*|probabl\w*|likely",
+    r"analogon|analoga|analog|analogs|analog(?:stoff|substanz|verbindung)\w*|strukturanalog\w*|analog[oa]s?|analogh[ie]|analoog|analoge|surrogat\w*",
+    r"(?:similar|related|source) (?:substances?|compounds?|chemicals?)|ahnliche\w* (?:stoff|substanz|verbindung)\w*|substances? similaires?",
     r"expert (?:judge?ment|opinion|estimate)|extrapol\w*|interpol\w*|assum\w+|default|worst case|analogues?",
     r"berechn\w*|rechnerisch\w*|kalkul\w*|(?:ab)?geschatzt\w*|(?:ab)?geschaetzt\w*|(?:ab)?schatz\w*|vorhergesagt\w*",
     r"vorhersag\w*|angenommen\w*|vermut\w*|voraussichtlich\w*|analogie\w*|expertenurteil",
@@ -43,6 +45,8 @@ const CALCULATED_PARTS: &[&str] = &[
     "推测",
     "模型",
     "类推",
+    "類似物質",
+    "类似物",
     "外推",
     "理论",
     "默认",
@@ -92,6 +96,49 @@ pub(super) static DOUBT: LazyLock<Regex> = LazyLock::new(|| {
             "存疑",
             "不确定",
             "不確定",
+        ],
+    )
+});
+
+/// A measurement or test that is still to come, is wanted, or was left out, and one that is only like another.
+pub(super) static PLANNED: LazyLock<Regex> = LazyLock::new(|| {
+    words(
+        &[
+            r"to be|will be|should be|shall be|must be|yet to|planned|planning|pending|missing|lacking|requested|required|needed|ongoing|on going",
+            r"waived|waiver|waiving|in progress|under ?way|outstanding|ordered|commissioned|scheduled|proposed|proposal|intended|awaited|awaiting",
+            r"(?:not|never) (?:yet )?(?:performed|conducted|done|carried out|started|completed|available)|postponed|cancelled|similar to|in preparation",
+            r"geplant\w*|ausstehend\w*|steht (?:noch )?aus|beauftragt\w*|angefordert\w*|erforderlich\w*|fehlt|fehlend\w*|lauft|laufend\w*",
+            r"vorgesehen\w*|soll|muss|zu messen|messen|in arbeit|in auftrag|noch offen|nicht durchgefuhrt\w*|verzicht\w*|beantragt\w*",
+            r"prevue?s?|a mesurer|a faire|a realiser|a effectuer|a determiner|en attente|en cours|manquante?s?|demandee?s?|planifiee?s?|requise?s?",
+            r"non (?:realise|effectue|mene)\w*|sera|dispense|planificad[oa]s?|previst[oaie]s?|pendientes?|por medir|a medir|en curso|falta\w*",
+            r"solicitad[oa]s?|requerid[oa]s?|sera medid[oa]|no realizad[oa]s?|pianificat[oaie]|programmat[oaie]|da misurare|da eseguire|in corso",
+            r"mancant[ei]|richiest[oaie]|in attesa|non eseguit[oaie]|sara|gepland\w*|te meten|lopende?|loopt|ontbreekt|ontbrekend\w*|aangevraagd\w*",
+            r"in behandeling|in uitvoering|niet uitgevoerd\w*|vereist\w*|wordt|moet",
+        ],
+        &[
+            "予定",
+            "計画",
+            "待ち",
+            "実施中",
+            "試験中",
+            "測定中",
+            "申請中",
+            "免除",
+            "未実施",
+            "必要",
+            "计划",
+            "計劃",
+            "待测",
+            "待測",
+            "待定",
+            "进行中",
+            "進行中",
+            "拟",
+            "预定",
+            "豁免",
+            "需要",
+            "未进行",
+            "将",
         ],
     )
 });
