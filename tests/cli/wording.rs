@@ -61,6 +61,8 @@ fn examples() -> Vec<(&'static str, CellFaultKind)> {
         ("Solvents", Kind::HeadingRow),
         ("* mean of two determinations", Kind::NoteRow),
         ("Page 2 of 5", Kind::PageLabelRow),
+        ("not 67-64-1", Kind::NumberOfAnother { what: "CAS number", word: "not".to_owned() }),
+        ("mg/L", Kind::UnitsRow),
     ]
 }
 

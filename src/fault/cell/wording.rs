@@ -286,6 +286,18 @@ impl CellFaultKind {
                 "is the number of a printed page, so the row was not screened",
                 "if it is a substance, give it a CAS number",
             ),
+            Self::NumberOfAnother { what, word } => say(
+                "number of another substance",
+                format!("says `{word}` beside a {what}, so the row is not identified by it")
+                    .replace("a EC", "an EC"),
+                "write the number of the substance of this row alone, for example `50-29-3`, and the rest elsewhere",
+            ),
+            Self::UnitsRow => say(
+                "row of units",
+                "begins a row of units without a substance, which was not screened; the rows below it may be in those \
+                 units and were read in the units of the header",
+                "write the unit into each header or beside each value",
+            ),
         }
     }
 }

@@ -2,7 +2,7 @@
 
 use super::dates::{cas_of_dates, dates_in};
 use super::numbers::{bare_digits, numbers_in};
-use super::words::{Absent, absence, says_mixture};
+use super::words::{Absent, absence, says_mixture, word_of_another};
 use super::{CAS_NUMBER, EC_NUMBER};
 use crate::fault::CellFaultKind;
 use crate::quantity::Date;
@@ -42,6 +42,31 @@ pub(super) enum EcCell {
 
 /// What a cell of a CAS column holds.
 pub(super) fn read_cas(content: &CellContent) -> Result<CasCell, CellFaultKind> {
+    let read = read_cas_number(content)?;
+    match read {
+        CasCell::Missing | CasCell::Mixture => Ok(read),
+        CasCell::Number(..) | CasCell::Misplaced(_) => refuse_of_another(content, CAS_NUMBER).map(|()| read),
+    }
+}
+
+/// What a cell of an EC column holds.
+pub(super) fn read_ec(content: &CellContent) -> Result<EcCell, CellFaultKind> {
+    let read = read_ec_number(content)?;
+    match read {
+        EcCell::Missing | EcCell::Mixture => Ok(read),
+        EcCell::Number(..) | EcCell::Misplaced(_) => refuse_of_another(content, EC_NUMBER).map(|()| read),
+    }
+}
+
+/// A number beside words by which it belongs to another substance, or perhaps does.
+fn refuse_of_another(content: &CellContent, what: &'static str) -> Result<(), CellFaultKind> {
+    match cell::value_text(content).as_deref().and_then(word_of_another) {
+        Some(word) => Err(CellFaultKind::NumberOfAnother { what, word }),
+        None => Ok(()),
+    }
+}
+
+fn read_cas_number(content: &CellContent) -> Result<CasCell, CellFaultKind> {
     let not_a = CellFaultKind::NotA { what: CAS_NUMBER, example: CAS_EXAMPLE };
     if let CellContent::DateTime(serial) = content {
         let date = Date::from_serial(*serial).ok_or(CellFaultKind::DateIsNoCas)?;
@@ -122,8 +147,7 @@ fn from_dates(dates: &[(String, u32, u32)]) -> Result<CasCell, CellFaultKind> {
     Ok(CasCell::Number(number, Written::AsDate))
 }
 
-/// What a cell of an EC column holds.
-pub(super) fn read_ec(content: &CellContent) -> Result<EcCell, CellFaultKind> {
+fn read_ec_number(content: &CellContent) -> Result<EcCell, CellFaultKind> {
     let not_a = CellFaultKind::NotA { what: EC_NUMBER, example: EC_EXAMPLE };
     if matches!(content, CellContent::DateTime(_)) {
         return Err(not_a);
