@@ -75,7 +75,7 @@ fn read_cas_number(content: &CellContent) -> Result<CasCell, CellFaultKind> {
     let Some(text) = cell::value_text(content).filter(|text| !is_placeholder(text)) else {
         return Ok(CasCell::Missing);
     };
-    if let Some(dates) = dates_in(&text) {
+    if let Some(dates) = dates_in(&text).filter(|_| !is_of_one_digit(&text)) {
         return from_dates(&dates);
     }
     let numbers = numbers_in(&text);
@@ -103,6 +103,12 @@ fn read_cas_number(content: &CellContent) -> Result<CasCell, CellFaultKind> {
 /// `000-000-0`, `0-00-0`: zeros in the form of a number, where there is none.
 fn is_placeholder(text: &str) -> bool {
     text.contains('0') && text.contains('-') && text.bytes().all(|byte| matches!(byte, b'0' | b'-' | b' '))
+}
+
+/// `1-11-11`: one digit throughout fills the cell where there is no number, and is no date.
+fn is_of_one_digit(text: &str) -> bool {
+    let mut digits = text.bytes().filter(u8::is_ascii_digit);
+    digits.next().is_some_and(|first| digits.all(|digit| digit == first))
 }
 
 fn cas_from_digits(digits: &str) -> Result<CasNumber, CasError> {
