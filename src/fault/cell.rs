@@ -255,12 +255,24 @@ pub enum CellFaultKind {
         /// The field's title.
         what: &'static str,
     },
+    /// A CAS or EC number beside a word by which it belongs to another substance.
+    NumberOfAnother {
+        /// `CAS number` or `EC number`.
+        what: &'static str,
+        /// The word, folded.
+        word: String,
+    },
+    /// A row of units among the rows.
+    UnitsRow,
 }
 
 impl CellFaultKind {
     /// Whether it tells that a row holds no substance, where no cell is wrong.
     pub fn tells_no_substance(&self) -> bool {
-        matches!(self, Self::TotalsRow | Self::HeadingRow | Self::NoteRow | Self::PageLabelRow)
+        matches!(
+            self,
+            Self::TotalsRow | Self::HeadingRow | Self::NoteRow | Self::PageLabelRow | Self::UnitsRow
+        )
     }
 
     /// Whether rows are not screened because of it.

@@ -97,7 +97,7 @@ fn designation_why(book: Book, index: usize) -> String {
     let doubt = match book.told.substance.identity {
         Identity::Identified => "",
         Identity::NameAlone | Identity::RepairedDate | Identity::BareNumber | Identity::NotIdentified => {
-            "Which substance it is is not sure, so nothing clears it; "
+            "The row may mean another substance, so nothing clears it; "
         }
     };
     let unseen = match (book.rulebook.strongest, judged.verdict) {

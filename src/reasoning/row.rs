@@ -45,7 +45,7 @@ pub fn cautions_text(told: Told) -> String {
         })
         .collect();
     if sentences.is_empty() {
-        return "none raised by type, name, formula or data; the structure was not looked at".to_owned();
+        return "none raised; looked at were the words of the name and the type, the formula (inorganic or not) and the data, not the structure".to_owned();
     }
     sentences.join("; ")
 }

@@ -45,6 +45,8 @@ pub struct Triggers {
     pub ionisable: bool,
     /// The single values of log Kow in the row lie further apart than this, log units.
     pub log_kow_spread: Option<f64>,
+    /// The row holds neither a name that the patterns could match nor a type that tells more than `organic`.
+    pub nothing_to_look_at: bool,
 }
 
 /// What a caution keeps from clearing.
@@ -70,6 +72,7 @@ impl Caution {
             .or_else(|| triggers.formula_reason(substance))
             .or_else(|| triggers.ionisation_reason(substance))
             .or_else(|| triggers.spread_reason(substance))
+            .or_else(|| triggers.nothing_reason(substance))
     }
 
     fn stated_type(&self, substance: &Substance) -> Option<String> {
@@ -117,6 +120,18 @@ impl Triggers {
         (highest - lowest > allowed).then(|| format!("the row gives log Kow from {low} to {high}"))
     }
 
+    fn nothing_reason(&self, substance: &Substance) -> Option<String> {
+        let types = substance.substance_type.iter().map(|cited| &cited.value).chain(&substance.further_types);
+        let tells = types.into_iter().any(|kind| *kind != SubstanceType::Organic);
+        let formula = substance.formula.as_ref().is_some_and(|cited| is_inorganic(&cited.value));
+        let name = substance.name.as_ref().map(|cited| cited.value.as_str());
+        if !self.nothing_to_look_at || tells || formula || name.is_some_and(is_in_latin_letters) {
+            return None;
+        }
+        let reason = name.map_or("it has no name", |_| "its name is not in Latin letters");
+        Some(reason.to_owned())
+    }
+
     /// A pKa at which more than 10 % is ionised somewhere in the range of pH.
     fn ionisation_reason(&self, substance: &Substance) -> Option<String> {
         if !self.ionisable {
@@ -125,6 +140,18 @@ impl Triggers {
         let (property, reading) = substance.ionising_pka()?;
         Some(format!("the {} is {}", property.title(), reading.quantity.reported))
     }
+}
+
+/// Two Latin letters or more in a row, and as many as of other scripts: `DDT`, `α-Pinene`, `PFOSカリウム`.
+fn is_in_latin_letters(name: &str) -> bool {
+    let is_latin = |letter: &char| {
+        letter.is_alphabetic() && (*letter < '\u{250}' || ('\u{1E00}'..'\u{1F00}').contains(letter))
+    };
+    let latin = name.chars().filter(is_latin).count();
+    let letters = name.chars().filter(|letter| letter.is_alphabetic()).count();
+    let side_by_side =
+        name.chars().zip(name.chars().skip(1)).any(|(one, next)| is_latin(&one) && is_latin(&next));
+    side_by_side && 2 * latin >= letters
 }
 
 fn row_reason(substance: &Substance) -> String {

@@ -19,6 +19,7 @@ mod pattern;
 mod remark;
 mod statements;
 mod totals;
+mod units;
 
 use std::collections::BTreeMap;
 use std::sync::Arc;

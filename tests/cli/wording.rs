@@ -66,6 +66,8 @@ fn examples() -> Vec<(&'static str, CellFaultKind)> {
         ("log D 1.2 (pH 7)", Kind::SpeaksOfOther { found: "log d".to_owned(), what: "log Kow" }),
         ("10 d (hydrolysis)", Kind::CountsAs { other: "hydrolysis half-life", what }),
         ("9999", Kind::Placeholder { what: "BCF" }),
+        ("not 67-64-1", Kind::NumberOfAnother { what: "CAS number", word: "not".to_owned() }),
+        ("mg/L", Kind::UnitsRow),
     ]
 }
 

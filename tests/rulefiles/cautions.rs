@@ -211,6 +211,55 @@ const NAMES: &[(&str, &[&str])] = &[
     ("Benzoesäure", &["ionisable"]),
     ("Acetic acid ethyl ester", &[]),
     ("Acetic anhydride", &[]),
+    // Other languages.
+    ("Oxyde de tributylétain", &["organometallic"]),
+    ("Chlorure de tributylétain", &["organometallic"]),
+    ("Óxido de tributilestaño", &["organometallic"]),
+    ("Ossido di tributilstagno", &["organometallic"]),
+    ("Dimetilmercurio", &["organometallic"]),
+    ("Paraffines chlorées", &["uvcb"]),
+    ("Parafinas cloradas", &["uvcb"]),
+    ("Paraffine clorurate", &["uvcb"]),
+    ("Gechloreerde paraffinen", &["uvcb"]),
+    ("Huile minérale", &["uvcb"]),
+    ("Acide perfluorooctanoïque", &["perfluoroalkyl", "ionisable"]),
+    ("Ácido perfluorooctanoico", &["perfluoroalkyl", "ionisable"]),
+    ("Perfluoroctaanzuur", &["perfluoroalkyl", "ionisable"]),
+    ("Nonylphénol éthoxylé", &["surfactant"]),
+    ("Nonilfenol etoxilado", &["surfactant"]),
+    ("Nonilfenolo etossilato", &["surfactant"]),
+    ("Geëthoxyleerd nonylfenol", &["surfactant"]),
+    ("Dioxyde de titane", &["inorganic"]),
+    ("Dióxido de titanio", &["inorganic"]),
+    ("Biossido di titanio", &["inorganic"]),
+    ("Titaandioxide", &["inorganic"]),
+    ("Oxyde de zinc", &["inorganic"]),
+    ("Polietilenglicol", &["polymer"]),
+    ("Polyéthylène glycol", &["polymer"]),
+    ("Toluène", &[]),
+    ("Tolueno", &[]),
+    ("2-Éthoxyéthanol", &[]),
+    ("Méthoxychlore", &[]),
+    ("Carbonate de diméthyle", &[]),
+    ("Sulfate de diméthyle", &[]),
+    ("Cloruro de metilo", &[]),
+    ("Chlorure de vinyle", &[]),
+    // Names without Latin letters are looked at only as far as a few words go.
+    ("塩化トリブチルスズ", &["organometallic", "nothing-to-look-at"]),
+    ("三丁基氯化锡", &["organometallic", "nothing-to-look-at"]),
+    ("塩素化パラフィン", &["uvcb", "nothing-to-look-at"]),
+    ("氯化石蜡", &["uvcb", "nothing-to-look-at"]),
+    ("ペルフルオロオクタン酸", &["perfluoroalkyl", "ionisable", "nothing-to-look-at"]),
+    ("全氟辛酸", &["perfluoroalkyl", "ionisable", "nothing-to-look-at"]),
+    ("全氟辛烷磺酸", &["perfluoroalkyl", "permanent-charge", "ionisable", "nothing-to-look-at"]),
+    ("ノニルフェノールエトキシレート", &["surfactant", "nothing-to-look-at"]),
+    ("壬基酚乙氧基化物", &["surfactant", "nothing-to-look-at"]),
+    ("二酸化チタン", &["inorganic", "nothing-to-look-at"]),
+    ("二氧化钛", &["inorganic", "nothing-to-look-at"]),
+    ("聚乙二醇", &["polymer", "nothing-to-look-at"]),
+    ("塩化ビニル", &["nothing-to-look-at"]),
+    ("トルエン", &["nothing-to-look-at"]),
+    ("甲苯", &["nothing-to-look-at"]),
 ];
 
 #[test]
@@ -336,7 +385,8 @@ fn cautions_stop_what_the_published_practice_says() {
         ("ionisable", subjects(&[Koc, LogD])),
         ("identity-by-name-alone", everything.clone()),
         ("identity-by-repaired-date", everything.clone()),
-        ("not-identified", everything),
+        ("not-identified", everything.clone()),
+        ("nothing-to-look-at", everything),
     ];
     let cautions = cautions();
     for (id, stopped) in expected {
@@ -349,5 +399,40 @@ fn cautions_stop_what_the_published_practice_says() {
         let at_most_screening = ["organometallic", "surfactant", "permanent-charge"].contains(&id);
         let log_kow = Subject::Property(LogKow);
         assert_eq!(caution.at_most_screening.contains(&log_kow), at_most_screening, "{id}");
+    }
+}
+
+#[test]
+fn a_row_that_names_its_substance_by_number_alone_says_that_nothing_was_looked_at() {
+    let cautions = cautions();
+    assert_eq!(raised(&cautions, &substance()), ["nothing-to-look-at"]);
+    for (name, expected) in [
+        ("4711", vec!["nothing-to-look-at"]),
+        ("A-12", vec!["nothing-to-look-at"]),
+        ("толуол", vec!["nothing-to-look-at"]),
+        ("トルエン A", vec!["nothing-to-look-at"]),
+        ("DDT", vec![]),
+        ("α-Pinene", vec![]),
+        ("Toluol（トルエン）", vec![]),
+    ] {
+        assert_eq!(raised(&cautions, &named(name)), expected, "{name}");
+    }
+}
+
+#[test]
+fn a_telling_type_or_an_inorganic_formula_is_something_to_look_at_and_others_are_not() {
+    let cautions = cautions();
+    for (kind, expected) in [
+        (SubstanceType::Organic, vec!["nothing-to-look-at"]),
+        (SubstanceType::Surfactant, vec!["surfactant"]),
+    ] {
+        let mut substance = substance();
+        substance.substance_type = Some(cited(kind));
+        assert_eq!(raised(&cautions, &substance), expected, "{kind:?}");
+    }
+    for (formula, expected) in [("NaCl", vec!["inorganic"]), ("C8HF15O2", vec!["nothing-to-look-at"])] {
+        let mut substance = substance();
+        substance.formula = Some(cited(formula.to_owned()));
+        assert_eq!(raised(&cautions, &substance), expected, "{formula}");
     }
 }

@@ -301,6 +301,18 @@ impl CellFaultKind {
                 format!("looks like a number that stands for a missing value and was not read as {what}"),
                 "leave the cell empty if there is no value, or write `(measured)` behind the number if it is one",
             ),
+            Self::NumberOfAnother { what, word } => say(
+                "number of another substance",
+                format!("says `{word}` beside a {what}, so the row is not identified by it")
+                    .replace("a EC", "an EC"),
+                "write the number of the substance of this row alone, for example `50-29-3`, and the rest elsewhere",
+            ),
+            Self::UnitsRow => say(
+                "row of units",
+                "begins a row of units without a substance, which was not screened; the rows below it may be in those \
+                 units and were read in the units of the header",
+                "write the unit into each header or beside each value",
+            ),
         }
     }
 }

@@ -22,8 +22,16 @@ const IDENTITIES: [(&str, Identity); 4] = [
     ("not-identified", Identity::NotIdentified),
     ("bare-number", Identity::BareNumber),
 ];
-const TRIGGER_KEYS: [&str; 7] =
-    ["substance-types", "row-types", "identities", "name-patterns", "formula", "ionisable", "log-kow-spread"];
+const TRIGGER_KEYS: [&str; 8] = [
+    "substance-types",
+    "row-types",
+    "identities",
+    "name-patterns",
+    "formula",
+    "ionisable",
+    "log-kow-spread",
+    "nothing-to-look-at",
+];
 
 /// The checked cautions of a file, in order.
 pub(crate) fn read_cautions(source: &RuleSource) -> Result<Vec<Caution>, RuleFaults> {
@@ -82,6 +90,7 @@ fn read_triggers(section: &Section<'_>) -> Triggers {
         inorganic_formula: formula.is_some(),
         ionisable: section.flag("ionisable"),
         log_kow_spread: read_spread(section),
+        nothing_to_look_at: section.flag("nothing-to-look-at"),
     }
 }
 

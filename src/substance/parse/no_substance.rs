@@ -10,6 +10,7 @@ use regex::Regex;
 use super::notes::{Aside, aside_of};
 use super::pattern::fixed;
 use super::totals::totals_label;
+use super::units::units_label;
 use crate::columns::Column;
 use crate::fault::CellFaultKind;
 use crate::substance::Field;
@@ -31,6 +32,9 @@ pub(super) fn label(
 ) -> Option<(u16, String, CellFaultKind)> {
     if let Some((column, found)) = totals_label(columns, row) {
         return Some((column, found, CellFaultKind::TotalsRow));
+    }
+    if let Some((column, found)) = units_label(columns, row) {
+        return Some((column, found, CellFaultKind::UnitsRow));
     }
     let filled = row.cells.iter().filter(|cell| is_filled(cell));
     let texts: Vec<(u16, &str)> =
@@ -113,7 +117,7 @@ fn may_hold_asides(field: Field) -> bool {
     }
 }
 
-fn is_filled(cell: &Cell) -> bool {
+pub(super) fn is_filled(cell: &Cell) -> bool {
     match &cell.content {
         CellContent::Empty => cell.formula,
         CellContent::Text(text) => !text.trim().is_empty(),

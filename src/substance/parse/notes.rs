@@ -21,7 +21,8 @@ pub(super) enum Aside {
 /// Words before a colon that make what follows a note, in folded words.
 static LABEL: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
-        r"^(?:\d{1,2} ?)?(?:notes?|foot ?notes?|remarks?|comments?|sources?|references?|legend|key|abbreviations?|",
+        r"^(?:\d{1,2} ?)?(?:tables?|tabellen?|tableau|tabla|tabella|tabel|tab|annex|annexe|anhang|anlage|appendix|anexo|",
+        r"allegato|bijlage|表|附表|別表|notes?|foot ?notes?|remarks?|comments?|sources?|references?|legend|key|abbreviations?|",
         r"disclaimer|date|printed|printed on|last update|last updated|status|open|to ?do|",
         r"anmerkung|anmerkungen|bemerkung|bemerkungen|hinweis|hinweise|fussnote|fussnoten|quelle|quellen|legende|",
         r"abkurzungen|stand|datum|gedruckt|gedruckt am|offen|noch offen|",
@@ -46,7 +47,7 @@ static HEAD_OF_NOTES: LazyLock<Regex> = LazyLock::new(|| {
 /// A numbered note without a colon: `Note 2.`, `注1）`.
 static NUMBERED: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
-        r"(?i)^[(（\[]?(?:(?:foot)?note|anmerkung|fu(?:ß|ss)note|remarque|nota|opmerking|voetnoot|注記|備考|备注|備註|[注註])",
+        r"(?i)^[(（\[]?(?:(?:foot)?note|table|tabelle|tableau|tabla|tabella|tabel|表|anmerkung|fu(?:ß|ss)note|remarque|nota|opmerking|voetnoot|注記|備考|备注|備註|[注註])",
         r"\s?[0-9０-９]{1,2}\s?(?:[.)）、\]]|\p{Pd}\s)\s*\S"
     ))
 });

@@ -24,9 +24,30 @@ static TOTAL: LazyLock<Regex> = LazyLock::new(|| {
         r"(?: (?:generale?s?|complessivo|total|totale|amount|amounts|quantity|quantities|tonnages?|tonnes?|tons|t|kg|mass|menge|",
         r"mengen|tonnen|masse|quantite|cantidad|quantita|hoeveelheid|toneladas|tonnellate|ton|a|per|pro|par|por|al|year|jahr|an|",
         r"ano|anno|jaar|of|all|aller|alle|der|des|de|tous|toutes|todas|las|los|les|delle|di|tutte|le|van|rows?|substances?|",
-        r"stoffe|sustancias|sostanze|stoffen|items?|entries|zeilen|positionen|in|\d{1,7}))*$"
+        r"stoffe|sustancias|sostanze|stoffen|items?|entries|zeilen|positionen|in|吨|噸|公斤|千克|トン|物质|物質|",
+        r"\d{1,7} ?(?:种|種|项|項|件|個|个|品目|种物质|種物質|物質|物质|種類|吨|噸|トン)?))*$"
     ))
 });
+
+/// How many there are, in folded words: `11 substances`, `11 种`.
+static COUNT: LazyLock<Regex> = LazyLock::new(|| {
+    fixed(concat!(
+        r"^(?:n )?\d{1,6} ?(?:substances?|rows?|items?|entries|chemicals|products?|stoffe?|zeilen|positionen|eintrage|artikel|",
+        r"produits?|lignes?|articles?|sustancias?|filas?|lineas?|productos?|sostanz[ae]|righe|voci|prodotti|stoffen|rijen|",
+        r"regels|producten|种|種|项|項|件|個|个|行|品目|种物质|種物質|物質|物质|種類|个物质|項目)$"
+    ))
+});
+
+fn is_count(content: &CellContent) -> bool {
+    match content {
+        CellContent::Text(text) => text.len() <= 60 && COUNT.is_match(&plain_words(text)),
+        CellContent::Empty
+        | CellContent::Number(_)
+        | CellContent::Boolean(_)
+        | CellContent::DateTime(_)
+        | CellContent::Error(_) => false,
+    }
+}
 
 /// Whether a text is the label of a total.
 fn is_label(content: &CellContent) -> bool {
@@ -43,7 +64,9 @@ fn is_label(content: &CellContent) -> bool {
 
 /// The cell that says that the row holds a total: its column and its text.
 pub(super) fn totals_label(columns: &[Column], row: &Row) -> Option<(u16, String)> {
-    let filled = |column: &&Column| row.cell(column.index).is_some_and(|cell| says_something(&cell.content));
+    let filled = |column: &&Column| {
+        row.cell(column.index).is_some_and(|cell| says_something(&cell.content) && !is_count(&cell.content))
+    };
     // Numbers and structures first: most rows have one, and are told by it without a look at their texts.
     let identifying = columns.iter().filter(|column| column.field.identifies());
     let others = columns.iter().filter(|column| !column.field.identifies());

@@ -2,7 +2,7 @@
 
 use super::dates::{cas_of_dates, dates_in};
 use super::numbers::{bare_digits, numbers_in};
-use super::words::{Absent, absence, says_mixture};
+use super::words::{Absent, absence, says_mixture, word_of_another};
 use super::{CAS_NUMBER, EC_NUMBER};
 use crate::fault::CellFaultKind;
 use crate::quantity::Date;
@@ -42,6 +42,31 @@ pub(super) enum EcCell {
 
 /// What a cell of a CAS column holds.
 pub(super) fn read_cas(content: &CellContent) -> Result<CasCell, CellFaultKind> {
+    let read = read_cas_number(content)?;
+    match read {
+        CasCell::Missing | CasCell::Mixture => Ok(read),
+        CasCell::Number(..) | CasCell::Misplaced(_) => refuse_of_another(content, CAS_NUMBER).map(|()| read),
+    }
+}
+
+/// What a cell of an EC column holds.
+pub(super) fn read_ec(content: &CellContent) -> Result<EcCell, CellFaultKind> {
+    let read = read_ec_number(content)?;
+    match read {
+        EcCell::Missing | EcCell::Mixture => Ok(read),
+        EcCell::Number(..) | EcCell::Misplaced(_) => refuse_of_another(content, EC_NUMBER).map(|()| read),
+    }
+}
+
+/// A number beside words by which it belongs to another substance, or perhaps does.
+fn refuse_of_another(content: &CellContent, what: &'static str) -> Result<(), CellFaultKind> {
+    match cell::value_text(content).as_deref().and_then(word_of_another) {
+        Some(word) => Err(CellFaultKind::NumberOfAnother { what, word }),
+        None => Ok(()),
+    }
+}
+
+fn read_cas_number(content: &CellContent) -> Result<CasCell, CellFaultKind> {
     let not_a = CellFaultKind::NotA { what: CAS_NUMBER, example: CAS_EXAMPLE };
     if let CellContent::DateTime(serial) = content {
         let date = Date::from_serial(*serial).ok_or(CellFaultKind::DateIsNoCas)?;
@@ -50,7 +75,7 @@ pub(super) fn read_cas(content: &CellContent) -> Result<CasCell, CellFaultKind> 
     let Some(text) = cell::value_text(content).filter(|text| !is_placeholder(text)) else {
         return Ok(CasCell::Missing);
     };
-    if let Some(dates) = dates_in(&text) {
+    if let Some(dates) = dates_in(&text).filter(|_| !is_of_one_digit(&text)) {
         return from_dates(&dates);
     }
     let numbers = numbers_in(&text);
@@ -78,6 +103,12 @@ pub(super) fn read_cas(content: &CellContent) -> Result<CasCell, CellFaultKind> 
 /// `000-000-0`, `0-00-0`: zeros in the form of a number, where there is none.
 fn is_placeholder(text: &str) -> bool {
     text.contains('0') && text.contains('-') && text.bytes().all(|byte| matches!(byte, b'0' | b'-' | b' '))
+}
+
+/// `1-11-11`: one digit throughout fills the cell where there is no number, and is no date.
+fn is_of_one_digit(text: &str) -> bool {
+    let mut digits = text.bytes().filter(u8::is_ascii_digit);
+    digits.next().is_some_and(|first| digits.all(|digit| digit == first))
 }
 
 fn cas_from_digits(digits: &str) -> Result<CasNumber, CasError> {
@@ -122,8 +153,7 @@ fn from_dates(dates: &[(String, u32, u32)]) -> Result<CasCell, CellFaultKind> {
     Ok(CasCell::Number(number, Written::AsDate))
 }
 
-/// What a cell of an EC column holds.
-pub(super) fn read_ec(content: &CellContent) -> Result<EcCell, CellFaultKind> {
+fn read_ec_number(content: &CellContent) -> Result<EcCell, CellFaultKind> {
     let not_a = CellFaultKind::NotA { what: EC_NUMBER, example: EC_EXAMPLE };
     if matches!(content, CellContent::DateTime(_)) {
         return Err(not_a);

@@ -46,6 +46,36 @@ static SEVERAL_ALONE: LazyLock<Regex> = LazyLock::new(|| {
 /// A mixture of isomers may have a number of its own.
 static ISOMERS: LazyLock<Regex> = LazyLock::new(|| fixed(r"isom[eèé]r|異性体|异构"));
 
+/// Words by which the number beside them is that of another substance, or perhaps of none, in folded words. `No.` and
+/// `non` are left out: `CAS No.`, `non-ionic`.
+static OF_ANOTHER: LazyLock<Regex> = LazyLock::new(|| {
+    fixed(concat!(
+        r"\b(not|similar\w*|resembl\w*|analog\w*|homolog\w*|related|cf|compare|read across|surrogate|close to|",
+        r"see|replac\w*|substitut\w*|supersed\w*|instead|formerly|former|previous\w*|deleted|obsolete|old|",
+        r"impurit\w*|contain(?:s|ed|ing)?|salts? of|esters? of|derivatives?|derived|precursor|probabl[ye]|perhaps|maybe|",
+        r"possibly|presumabl[ye]|unsure|uncertain|tentative|",
+        r"nicht|kein\w*|ahnlich\w*|verwandt\w*|vgl|vergleiche|siehe|ersetzt|ersatz\w*|statt|fruher\w*|ehemals|ehem|",
+        r"vormals|alte?|verunreinigung\w*|enthalt\w*|salze? (?:von|der|des)|derivate?|vermutlich|wahrscheinlich|evtl|",
+        r"eventuell|vielleicht|unsicher|",
+        r"pas|similaires?|apparente|voir|remplac\w*|ancien\w*|impuretes?|contient|contenant|sels? d[eu]|derives? d[eu]|",
+        r"probablement|peut etre|no es|parecid[oa]|vease|ver|reemplaz\w*|sustitu\w*|anterior\w*|antigu[oa]|impurezas?|",
+        r"contiene|sal(?:es)? de|derivad[oa]|quizas?|tal vez|non e|simil[ei]|vedi|sostitu\w*|precedente\w*|ex|",
+        r"sal[ei] d\w+|derivat[oi]|forse|probabil\w*|niet|geen|vergelijkbaar|gelijkaardig|soortgelijk|zie|vervang\w*|",
+        r"voorheen|vroeger|onzuiverhe\w*|verontreiniging\w*|bevat|zout van|waarschijnlijk|misschien)\b|",
+        r"(類似|類縁|関連|参照|代替|代わり|不純物|含[有むま]?|旧|以前|ではない|でない|誘導体|おそらく|类似|相似|同系|参见|见|",
+        r"替代|取代|杂质|雜質|包含|原|曾用|不是|并非|非|衍生|可能|疑似)"
+    ))
+});
+
+/// What says of the number in a text that it is that of another substance: `not 67-64-1`, `salt of 67-64-1`, `67-64-1?`.
+pub(super) fn word_of_another(text: &str) -> Option<String> {
+    if text.contains(['?', '？']) {
+        return Some("?".to_owned());
+    }
+    let plain = plain_words(text);
+    OF_ANOTHER.find(&plain).map(|found| found.as_str().to_owned())
+}
+
 /// What a cell without a single digit says; `None` where it is something else, such as a name.
 pub(super) fn absence(text: &str) -> Option<Absent> {
     let plain = plain_words(text);

@@ -17,12 +17,21 @@ static FURTHER_CODE: LazyLock<Regex> = LazyLock::new(|| fixed(r"\d{3}"));
 /// Lists of precautionary statements, `P305+351+338`, which say nothing of hazards.
 static PRECAUTION: LazyLock<Regex> =
     LazyLock::new(|| fixed(r"(?-u:\b)P\s*-?\s*\d{3}(?:\s*[+/]\s*P?\s*\d{3})*"));
-/// A code that is denied or doubted is none: `not H350`, `H350?`.
+/// A code that is denied or doubted is none: `not H350`, `suspicion of H351`, `H350?`, `H350: no`, `H300-series`.
 static DOUBTED: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
-        r"((?-u:\b)(?:not|no|non|without|kein\w*|nicht|ohne|pas|sans|aucun\w*|sin|senza|nessun\w*|geen|niet|zonder)",
-        r"(?: (?:as|als|classified|eingestuft|clas\w*|ingedeeld|de|con|come|como|mit|with)){0,3}|不是|非)",
-        r" ?(?-u:\b)(?:EUH|H)\s?-?\s?\d{3}[A-Z]{0,2}(?-u:\b)|(?-u:\b)(?:EUH|H)\s?-?\s?\d{3}[A-Z]{0,2} ?\?"
+        r"((?-u:\b)(?:not|no|non|without|kein\w*|nicht|ohne|pas|sans|aucun\w*|sin|senza|nessun\w*|geen|niet|zonder|",
+        r"verdacht|suspected|suspicion|suspect[eé]?|possibl[ey]|probabl[ey]|perhaps|maybe|evtl\.?|eventuell|vielleicht|",
+        r"möglich\w*|vermutlich|soupçon\w*|sospech\w*|sospett\w*|verdenking|vermoed\w*|mogelijk)",
+        r"(?: (?:as|als|classified|eingestuft|clas\w*|ingedeeld|de|con|come|como|mit|with|for|für|auf|of|pour|por|per|voor|",
+        r"di|van|op)){0,3}|不是|非|疑い：?|疑似)",
+        r" ?(?-u:\b)(?:EUH|H)\s?-?\s?\d{3}[A-Z]{0,2}(?-u:\b)|(?-u:\b)(?:EUH|H)\s?-?\s?\d{3}[A-Z]{0,2} ?\?|",
+        r"(?-u:\b)(?:EUH|H)\s?-?\s?\d{3} ?-? ?(?:series|serie|série|reihe|er|ff|xx)(?-u:\b)|",
+        r"(?-u:\b)(?:EUH|H)\s?-?\s?\d{3}[A-Z]{0,2} ?[:=：(–-]? ?(?:",
+        r"no|nein|non|nee|none|not|nicht|keine?|pas|niet|entfällt|trifft nicht zu|nicht zutreffend|nicht eingestuft|",
+        r"not applicable|not classified|does not apply|no data|keine daten|non applicable|non classé|ne s'applique pas|",
+        r"no aplica|no clasificado|non applicabile|non classificato|niet van toepassing|niet ingedeeld|n\.? ?[av]\.? ?t?\.?|n/a|",
+        r"否|无|無|なし|該当しない|不适用|不適用|いいえ) ?(?:$|[,;.)|\n])"
     ))
 });
 
@@ -60,7 +69,7 @@ pub(super) fn codes_in(text: &str) -> (Vec<String>, String) {
 
 /// What is denied or doubted in the rest of a text.
 pub(super) fn doubted(rest: &str) -> Option<&str> {
-    DOUBTED.find(rest).map(|found| found.as_str().trim())
+    DOUBTED.find(rest).map(|found| found.as_str().trim().trim_end_matches([',', ';', '.', '|']))
 }
 
 fn without_codes(text: &str, codes: &mut Vec<String>) -> String {

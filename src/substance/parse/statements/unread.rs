@@ -23,8 +23,12 @@ static CMR: LazyLock<Regex> = LazyLock::new(|| fixed(r"(?:^|[^A-Z0-9])(CMR)(?:[^
 /// The list goes on in a place that is not known.
 static AND_SO_ON: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
-        r"\b(etc|usw|u\. ?a|and others|and more|und weitere|et autres|entre otros|y otros|e altri|ecc|enz|en andere)\b|",
-        r"(\.\.\.)|(など|等)"
+        r"\b(etc|usw|u\. ?a|u\. ?v\. ?m|i\. ?a|others|and more|inter alia|incomplete|partial|partly|series|for example|e\. ?g|",
+        r"preliminary|provisional|draft|excerpt|weitere[nrs]?|andere|unter anderem|unvollständig|teilweise|auszug|auszugsweise|",
+        r"vorläufig|reihe|gruppe|z\. ?b|zum beispiel|autres|incompl[eè]te?|incomplet[oa]|par exemple|p\. ?ex|provisoire|",
+        r"entre otr[oa]s|y otr[oa]s|otr[oa]s|por ejemplo|p\. ?ej|provisionale?|altri|tra l'altro|ad esempio|ecc|enz|e\. ?a|",
+        r"onder andere|o\. ?a|onvolledig|bijvoorbeeld|bijv|voorlopig|enzovoort|et cetera|etcetera)\b|",
+        r"(\.\.\.|…)|(など|等|その他|不完全|不完整|及其他|系列|例えば|例如)"
     ))
 });
 
