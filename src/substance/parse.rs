@@ -22,6 +22,7 @@ mod totals;
 use std::collections::BTreeMap;
 use std::sync::Arc;
 
+pub(crate) use degradability::names_ready_test;
 pub(crate) use remark::Said;
 
 use crate::columns::{Column, Recognised};

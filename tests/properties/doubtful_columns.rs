@@ -209,6 +209,16 @@ fn a_header_that_resembles_none_is_not_remarked_on() {
         "P flag",
         "LD50 oral rat",
         "Purity",
+        "DT90",
+        "log Kaw",
+        "Kom",
+        "BSAF",
+        "NOAEL",
+        "EC20",
+        "log Poa",
+        "c50",
+        "Last reviewed",
+        "HWZ im Blut",
     ] {
         assert_eq!(remark_on(header), Ok(None), "{header}");
     }
@@ -247,4 +257,36 @@ fn a_column_whose_header_has_an_apostrophe_is_named_by_its_letter() {
     assert!(
         ColumnOverride::parse("Sheet!B:B=half-life-soil").is_ok_and(|told| recognised.has_column_of(&told))
     );
+}
+
+#[test]
+fn a_header_of_a_limit_a_count_or_former_values_is_told_with_the_way_out() {
+    for header in ["BCF > 2000", "BCF limit", "BCF n", "BCF old", "BCF class", "Δ BCF"] {
+        let remark = remark_on(header).unwrap();
+        let expected = format!(
+            "Sheet: column B (`{header}`) speaks of a limit, a class, a count, a difference or former values, so it is left \
+             aside; if it holds values of bcf: --column '{header}=bcf'"
+        );
+        assert_eq!(remark, Some(expected));
+    }
+}
+
+#[test]
+fn a_unit_that_is_not_understood_is_told_with_the_way_out() {
+    for (header, unit) in [
+        ("NOEC (?g/L)", "`?g/L`"),
+        ("NOEC (10^-3 mg/L)", "`10^-3 mg/L`"),
+        ("NOEC (mg/kg dw)", "`mg/kg dw`"),
+        ("BCF (x1000)", "`x1000`"),
+        ("DT50 soil (log d)", "`log d`"),
+        ("log DT50 soil", "`log`"),
+        ("Half life soil 1/d", "`1/d`"),
+        ("BCF (L/kg lipid)", "lipid"),
+    ] {
+        let remark = remark_on(header).unwrap();
+        let is_told = |remark: &String| {
+            remark.contains("left aside") && remark.contains(unit) && remark.contains("--column '")
+        };
+        assert!(remark.as_ref().is_some_and(is_told), "{header}: {remark:?}");
+    }
 }
