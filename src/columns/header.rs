@@ -168,7 +168,7 @@ impl Header {
         self.brackets
             .iter()
             .filter_map(|bracket| parse_unit_of(without_preposition(bracket), dimension))
-            .find(|unit| unit.dimension() != dimension && *unit != Unit::One)
+            .find(|unit| unit.dimension() != dimension && !matches!(unit, Unit::One | Unit::Minute))
     }
 
     /// The same with another word at a place.

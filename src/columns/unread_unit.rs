@@ -144,7 +144,11 @@ pub(super) fn unread(plain: &str, brackets: &[String], dimension: Dimension) -> 
     in_brackets.or_else(in_words).map(str::to_owned)
 }
 
+/// Of what is no time, `min` is the minimum.
 fn measures_another(text: &str, dimension: Dimension) -> bool {
+    if text.trim_end_matches('.').eq_ignore_ascii_case("min") {
+        return false;
+    }
     parse_unit_of(text, dimension).is_some_and(|unit| unit != Unit::One && unit.dimension() != dimension)
 }
 
