@@ -21,6 +21,7 @@ mod reading;
 mod second_header;
 mod stack;
 mod taken;
+mod unread_unit;
 mod words;
 
 use std::collections::{BTreeMap, BTreeSet};
@@ -55,8 +56,19 @@ pub struct Column {
     pub about: Option<Property>,
     /// Decimal point or comma, from the header's column or the sheet.
     pub decimal: DecimalStyle,
+    /// Of a column on ready biodegradability, whether its header says that it is the ready one.
+    pub readiness: Readiness,
     /// Why it was taken for this field, in words.
     pub reason: String,
+}
+
+/// Whether a header says that the biodegradability below it is that of a ready test.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub enum Readiness {
+    /// It does, or the user says so, or the column holds something else.
+    Said,
+    /// It speaks of biodegradability in general: a cell counts as ready only where it says so itself.
+    NotSaid,
 }
 
 /// The header of a sheet and what its columns hold.

@@ -21,8 +21,8 @@ pub use ec::{EcError, EcNumber};
 pub use field::Field;
 pub use hazard::{Completeness, HazardStatements};
 pub use kind::{RowType, SubstanceType};
-pub(crate) use parse::Said;
 pub use parse::{RowReader, UnstatedBasis};
+pub(crate) use parse::{Said, names_ready_test};
 pub use property::{Compartment, Property};
 
 use crate::fault::CellFault;

@@ -3,6 +3,7 @@
 use super::folding::{composed, header_words, is_sign, shown_words};
 use super::loose_unit::{doubtful_unit, is_doubtful, is_second, loose_unit, several_units};
 use super::reading::{Brackets, NamesValue, Reading};
+use super::unread_unit::{self, without_active_substance};
 use super::words::ColumnWords;
 use crate::quantity::{Dimension, Unit, parse_unit_of, tidy};
 use crate::substance::{Field, Property};
@@ -36,7 +37,10 @@ impl Header {
         if text.chars().count() > LONGEST_HEADER {
             return None;
         }
-        let whole = tidy(&composed(text)).replace("(E)C", "C").replace("(e)c", "c");
+        // A line break within a header is a space.
+        let one_line = composed(text).split_whitespace().collect::<Vec<_>>().join(" ");
+        let whole = tidy(&one_line).replace("(E)C", "C").replace("(e)c", "c");
+        let whole = without_active_substance(&whole);
         // Alone it is short for `number`; elsewhere `n` stands for much else.
         let whole = if whole.eq_ignore_ascii_case("n.") { "No".to_owned() } else { whole };
         let (plain, brackets) = part_brackets(&whole);
@@ -109,13 +113,54 @@ impl Header {
             parse_unit_of(without_preposition(end.trim_start_matches([',', '/', '-', ' '])), dimension)
         });
         let found = in_brackets.chain(after_signs).chain(at_end).find(measures);
-        found.or_else(|| loose_unit(&self.plain, dimension))
+        found
+            .or_else(|| unread_unit::unit_after_stroke(&self.plain, dimension))
+            .or_else(|| loose_unit(&self.plain, dimension))
+    }
+
+    /// What changes the numbers of a column in a way that is not read: a power of ten, a logarithm.
+    pub(super) fn unread_scale(&self, dimension: Dimension) -> Option<String> {
+        let scale = unread_unit::scale(&self.plain, &self.brackets, dimension);
+        let is_of_numbers = matches!(
+            dimension,
+            Dimension::Time
+                | Dimension::Concentration
+                | Dimension::Pressure
+                | Dimension::Henry
+                | Dimension::MolarMass
+                | Dimension::Tonnage
+        );
+        scale.or_else(|| (is_of_numbers && self.names_logarithm()).then(|| "log".to_owned()))
+    }
+
+    /// `BCF n`, `BCF (n)`: how many values there are.
+    pub(super) fn counts_values(&self) -> bool {
+        let at_end = self.words.len() > 1 && self.words.last().is_some_and(|word| word == "n");
+        at_end || self.brackets.iter().any(|bracket| bracket.trim().eq_ignore_ascii_case("n"))
+    }
+
+    /// `Δ log Kow`.
+    pub(super) fn has_sign_of_difference(&self) -> bool {
+        self.plain.contains(['Δ', 'δ', '∆'])
+    }
+
+    /// `BCF > 2000`: whether a value is above a limit, not the value.
+    pub(super) fn compares_with_limit(&self) -> bool {
+        unread_unit::compares(&self.plain)
+            || self.brackets.iter().any(|bracket| {
+                let is_number = |character: char| "<>≤≥= .,0123456789".contains(character);
+                bracket.chars().all(is_number) && unread_unit::compares(bracket)
+            })
     }
 
     /// Words that may be a unit and may mean something else, where the header names no other.
     pub(super) fn doubtful_unit(&self, dimension: Dimension) -> Option<String> {
         let is_asked = dimension != Dimension::Dimensionless && self.unit(dimension).is_none();
-        is_asked.then(|| doubtful_unit(&self.plain, &self.brackets, dimension))?
+        if !is_asked {
+            return None;
+        }
+        doubtful_unit(&self.plain, &self.brackets, dimension)
+            .or_else(|| unread_unit::unread(&self.plain, &self.brackets, dimension))
     }
 
     /// A unit in brackets that does not measure what the column holds.
@@ -123,7 +168,7 @@ impl Header {
         self.brackets
             .iter()
             .filter_map(|bracket| parse_unit_of(without_preposition(bracket), dimension))
-            .find(|unit| unit.dimension() != dimension && *unit != Unit::One)
+            .find(|unit| unit.dimension() != dimension && !matches!(unit, Unit::One | Unit::Minute))
     }
 
     /// The same with another word at a place.

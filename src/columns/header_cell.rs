@@ -116,11 +116,17 @@ impl HeaderCell {
 
     /// Words that may be a unit and may mean something else, where no other unit is named.
     pub(super) fn doubtful_unit(&self, dimension: Dimension) -> Option<String> {
-        if !matches!(self.meaning, Meaning::Named(_)) || self.unit(dimension).is_some() {
+        if !matches!(self.meaning, Meaning::Named(_)) {
             return None;
         }
-        let parts = self.parts.iter().chain(self.header.as_ref().filter(|_| self.parts.is_empty()));
-        parts.into_iter().find_map(|part| part.doubtful_unit(dimension))
+        let parts = || self.parts.iter().chain(self.header.as_ref().filter(|_| self.parts.is_empty()));
+        if let Some(scale) = parts().find_map(|part| part.unread_scale(dimension)) {
+            return Some(scale);
+        }
+        if self.unit(dimension).is_some() {
+            return None;
+        }
+        parts().find_map(|part| part.doubtful_unit(dimension))
     }
 
     /// A unit in brackets that does not measure what the column holds.

@@ -7,7 +7,7 @@ use super::one_line;
 use super::overrides::option_for;
 use super::reading::Reading;
 use super::words::ColumnWords;
-use crate::substance::Field;
+use crate::substance::{Field, Property};
 use crate::workbook::column_letters;
 
 /// What is said of a column that is not taken.
@@ -47,6 +47,17 @@ pub(super) fn hint(sheet: &str, cell: &HeaderCell, words: &ColumnWords) -> Hint 
             short: Some("left aside because of the row above".to_owned()),
         };
     }
+    if let Some(property) = beside_a_value(header, words) {
+        let id = property.id();
+        return Hint {
+            remark: Some(format!(
+                "{place} speaks of a limit, a class, a count, a difference or former values, so it is left aside; if it \
+                 holds values of {id}: {}",
+                told(id)
+            )),
+            short: Some(format!("left aside; names no value of {id}")),
+        };
+    }
     let nearly = nearly_named(header, words);
     if let Some(doubt) = doubt(header, words).filter(|_| nearly.is_none()) {
         let fields: Vec<String> = doubt.fields.iter().map(|field| told(field)).collect();
@@ -64,6 +75,13 @@ pub(super) fn hint(sheet: &str, cell: &HeaderCell, words: &ColumnWords) -> Hint 
     }
 }
 
+/// The property whose limit, class, count or former value a header names.
+fn beside_a_value(header: &Header, words: &ColumnWords) -> Option<Property> {
+    let reading = Reading::new(header, words);
+    let speaks = reading.is_beside_the_value && reading.main.is_disjoint(&words.never);
+    speaks.then(|| header.property_beside(words))?
+}
+
 fn doubt(header: &Header, words: &ColumnWords) -> Option<Doubt> {
     let reading = Reading::new(header, words);
     let speaks_of =
@@ -75,6 +93,9 @@ fn doubt(header: &Header, words: &ColumnWords) -> Option<Doubt> {
     if speaks_of("pka") {
         let why = "does not say whether its pKa is of an acid or a base";
         return doubt(why, "acid or base not said", &["pka-acid", "pka-base"]);
+    }
+    if speaks_of("half-life") && speaks_of("body") {
+        return None;
     }
     if speaks_of("half-life") {
         return Some(half_life_doubt(speaks_of));

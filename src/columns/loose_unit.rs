@@ -37,8 +37,7 @@ pub(super) fn loose_unit(plain: &str, dimension: Dimension) -> Option<Unit> {
 pub(super) fn doubtful_unit(plain: &str, brackets: &[String], dimension: Dimension) -> Option<String> {
     let pieces = pieces(plain);
     let bracket_parts = brackets.iter().flat_map(|bracket| bracket.split([',', ';']));
-    let in_brackets =
-        bracket_parts.map(str::trim).find(|part| is_doubtful(part, dimension) || is_strange_ratio(part));
+    let in_brackets = bracket_parts.map(str::trim).find(|part| is_doubtful(part, dimension));
     if let Some(found) = in_brackets.or_else(|| several_units(brackets, dimension).map(String::as_str)) {
         return Some(found.to_owned());
     }
@@ -115,18 +114,6 @@ pub(super) fn is_doubtful(word: &str, dimension: Dimension) -> bool {
 /// Short words for seconds.
 pub(super) fn is_second(word: &str) -> bool {
     matches!(word.to_lowercase().as_str(), "s" | "sec")
-}
-
-/// `oz/gal`: an amount by something, and no unit that is known.
-fn is_strange_ratio(part: &str) -> bool {
-    const AMOUNTS: &str = "pg ng µg ug mcg mg g gr kg t oz lb lbs mol mmol umol l ml m3 pa hpa kpa atm bar";
-    const LONGEST: usize = 12;
-    let is_ratio = part.split_once('/').is_some_and(|(amount, rest)| {
-        let amount = amount.trim().to_lowercase();
-        AMOUNTS.split(' ').any(|known| known == amount)
-            && (1..=LONGEST).contains(&rest.trim().chars().count())
-    });
-    is_ratio && parse_unit(part).is_none()
 }
 
 fn lengths(end: usize) -> impl Iterator<Item = usize> {
@@ -248,7 +235,6 @@ mod tests {
         }
         let in_brackets = |bracket: &str, dimension| doubtful_unit("Value", &[bracket.to_owned()], dimension);
         assert_eq!(in_brackets("min", Dimension::Time).as_deref(), Some("min"));
-        assert_eq!(in_brackets("oz/gal", Dimension::Concentration).as_deref(), Some("oz/gal"));
         assert_eq!(in_brackets("mg/L", Dimension::Concentration), None);
         assert_eq!(in_brackets("days/weeks", Dimension::Time).as_deref(), Some("days/weeks"));
         assert_eq!(in_brackets("d or wk", Dimension::Time).as_deref(), Some("d or wk"));

@@ -74,6 +74,9 @@ fn corrected(word: &str, part: KnownPart, is_known: bool) -> Option<(usize, Stri
     ends.chain(starts).min()
 }
 
+/// The length, in letters, up to which a word is one of the short ones that stand for quantities.
+const LONGEST_SHORT_WORD: usize = 5;
+
 /// How many letters differ, if only so few that the words may be the same.
 fn close(word: &str, known: &str) -> Option<usize> {
     let most = match known.len() {
@@ -81,12 +84,26 @@ fn close(word: &str, known: &str) -> Option<usize> {
         8..=13 => 2,
         _ => 3,
     };
-    // The first letter is seldom wrong, and of a long word either the first or the last is right.
-    let (word_letters, known_letters) = (word.as_bytes(), known.as_bytes());
-    let same_start = word_letters.first() == known_letters.first();
-    let same_end = word_letters.last() == known_letters.last();
-    let may_be = same_start || (known.len() > 5 && same_end);
-    if word == known || !may_be || word.len().abs_diff(known.len()) > most {
+    // The first letter is seldom wrong, and digits tell one quantity from another: `EC10`, `EC20`.
+    let same_start = word.as_bytes().first() == known.as_bytes().first();
+    let digits = |text: &str| -> String { text.chars().filter(char::is_ascii_digit).collect() };
+    if word == known
+        || !same_start
+        || digits(word) != digits(known)
+        || word.len().abs_diff(known.len()) > most
+    {
+        return None;
+    }
+    // Another letter in a short word makes another quantity: `Koa`, `Kow`, `Kom`.
+    let letters = |text: &str| {
+        let mut letters: Vec<u8> = text.bytes().collect();
+        letters.sort_unstable();
+        letters
+    };
+    let is_short = known.len() <= LONGEST_SHORT_WORD && word.len() <= LONGEST_SHORT_WORD;
+    let is_swapped = letters(word) == letters(known);
+    let lacks_one = known.len() > 3 && digits(known).is_empty() && word.len() + 1 == known.len();
+    if is_short && !is_swapped && !lacks_one {
         return None;
     }
     let edits = edits(word, known);

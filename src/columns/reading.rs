@@ -28,6 +28,8 @@ pub(super) struct Reading {
     /// Whether every word is known or a number.
     pub(super) wholly_known: bool,
     pub(super) value: NamesValue,
+    /// Whether it speaks of a limit, a count, a class or a former value of what it names.
+    pub(super) is_beside_the_value: bool,
     spans: Vec<Span>,
     bracket_spans: Vec<Span>,
 }
@@ -63,6 +65,16 @@ impl Reading {
             add_companion(bracket, known, &mut main, &mut value);
         }
         everywhere.extend(&main);
+        let is_class =
+            |span: &Span| known.concepts.get(span.concept).is_some_and(|concept| concept.id == "type");
+        let is_beside_the_value = !everywhere.is_disjoint(&known.never_a_value)
+            || spans.iter().any(is_class)
+            || header.counts_values()
+            || header.compares_with_limit()
+            || header.has_sign_of_difference();
+        if is_beside_the_value {
+            value = NamesValue::No;
+        }
         let is_unknown = |place: &usize, word: &str| {
             !covered.contains(place) && !word.chars().all(|digit| digit.is_ascii_digit())
         };
@@ -73,7 +85,17 @@ impl Reading {
             words().filter(|(place, _)| covered.contains(place)).map(|(_, word)| word.len()).sum();
         let mostly_unknown = unknown > 0 && unknown >= understood;
         let wholly_known = unknown == 0;
-        Self { main, everywhere, covered, mostly_unknown, wholly_known, value, spans, bracket_spans }
+        Self {
+            main,
+            everywhere,
+            covered,
+            mostly_unknown,
+            wholly_known,
+            value,
+            is_beside_the_value,
+            spans,
+            bracket_spans,
+        }
     }
 
     pub(super) fn fits(&self, rule: &FieldRule, brackets: Brackets, value: NamesValue) -> bool {

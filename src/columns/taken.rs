@@ -3,10 +3,12 @@
 use std::fmt::Write as _;
 
 use super::header_cell::{HeaderCell, Meaning, UnitFrom};
+use super::overrides::option_for;
 use super::words::ColumnWords;
-use super::{Column, choice::dimension_of, one_line};
+use super::{Column, Readiness, choice::dimension_of, one_line};
 use crate::quantity::{DecimalStyle, Dimension, Unit, format_number, tidy};
-use crate::substance::{Conditions, DegradationKind, Field, Said};
+use crate::substance::{Basis, Conditions, DegradationKind, Field, Said, names_ready_test};
+use crate::workbook::column_letters;
 
 /// The column of a header that names a field, and what is to be said of its unit.
 pub(super) fn column_of(
@@ -32,24 +34,32 @@ pub(super) fn column_of(
     let has_conditions =
         matches!(field, Field::Property(_) | Field::ReadyBiodegradability | Field::InherentBiodegradability);
     let said = if has_conditions { Said::in_header(&tidy(&cell.text)) } else { Said::default() };
+    let basis = said.basis.or_else(|| names_estimate(&cell).then_some(Basis::Calculated));
     let about = is_companion(field).then(|| cell.header.as_ref()?.property_beside(words)).flatten();
     let mut reason = reason(&cell, unit, dimension);
-    if let Some(basis) = said.basis {
+    if let Some(basis) = basis {
         let _ = write!(reason, "; values are taken as {}", basis.word());
     }
     let conditions = conditions_in_words(&said.conditions);
     if !conditions.is_empty() {
         let _ = write!(reason, "; for all values: {}", conditions.join(", "));
     }
+    let readiness = readiness(&cell, field, words);
+    let remark =
+        remark.or_else(|| (readiness == Readiness::NotSaid).then(|| not_said_ready_remark(sheet, &cell)));
+    if readiness == Readiness::NotSaid {
+        reason.push_str("; ready only where a cell says so");
+    }
     let column = Column {
         index: cell.column,
         header: cell.text,
         field,
         unit: unit.map(|(unit, _)| unit),
-        basis: said.basis,
+        basis,
         conditions: said.conditions,
         about,
         decimal: DecimalStyle::Point,
+        readiness,
         reason,
     };
     (column, remark)
@@ -58,6 +68,38 @@ pub(super) fn column_of(
 /// Fields that speak of another column's value and may name it.
 pub(super) fn is_companion(field: Field) -> bool {
     matches!(field, Field::Reliability | Field::Guideline | Field::Reference | Field::HalfLifeTemperature)
+}
+
+/// Whether a header of ready biodegradability has a word for ready or names the tests of it.
+fn readiness(cell: &HeaderCell, field: Field, words: &ColumnWords) -> Readiness {
+    let is_told = matches!(cell.meaning, Meaning::Told(_));
+    if field != Field::ReadyBiodegradability || is_told {
+        return Readiness::Said;
+    }
+    let says_so = cell.header.as_ref().is_some_and(|header| header.speaks_of("ready", words));
+    if says_so || names_ready_test(&cell.text) { Readiness::Said } else { Readiness::NotSaid }
+}
+
+fn not_said_ready_remark(sheet: &str, cell: &HeaderCell) -> String {
+    format!(
+        "{sheet}: column {} (`{}`) does not say whether its biodegradability is the ready one, so a cell counts as ready \
+         only where it says so or names OECD 301 or 310; if all its cells are of ready biodegradability: {}",
+        column_letters(cell.column),
+        one_line(&cell.text),
+        option_for(sheet, cell.column, &cell.text, Field::ReadyBiodegradability.id())
+    )
+}
+
+/// `ClogP`, `Pred. BCF`: names of estimates.
+fn names_estimate(cell: &HeaderCell) -> bool {
+    matches!(cell.field(), Some(Field::Property(_)))
+        && cell.header.as_ref().is_some_and(|header| {
+            header
+                .words
+                .iter()
+                .chain(&header.bracket_words)
+                .any(|word| word == "pred" || word.starts_with("clog") || word.starts_with("xlog"))
+        })
 }
 
 fn shown_unit(dimension: Dimension) -> &'static str {

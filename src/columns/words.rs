@@ -15,6 +15,7 @@ pub struct ColumnWords {
     pub(super) rules: Vec<FieldRule>,
     pub(super) never: ConceptSet,
     pub(super) not_a_value: ConceptSet,
+    pub(super) never_a_value: ConceptSet,
     pub(super) conditions: ConceptSet,
     pub(super) index: PhraseIndex,
 }
@@ -44,6 +45,8 @@ struct File {
     never: Vec<String>,
     #[serde(default)]
     not_a_value: Vec<String>,
+    #[serde(default)]
+    never_a_value: Vec<String>,
     #[serde(default)]
     conditions: Vec<String>,
     concept: Vec<FileConcept>,
@@ -104,6 +107,7 @@ impl ColumnWords {
             rules,
             never: set(&file.never)?,
             not_a_value: set(&file.not_a_value)?,
+            never_a_value: set(&file.never_a_value)?,
             conditions: set(&file.conditions)?,
             concepts,
             index,

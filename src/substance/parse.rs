@@ -24,6 +24,7 @@ mod units;
 use std::collections::BTreeMap;
 use std::sync::Arc;
 
+pub(crate) use degradability::names_ready_test;
 pub(crate) use remark::Said;
 
 use crate::columns::{Column, Recognised};

@@ -319,13 +319,16 @@ fn a_header_that_nearly_names_a_field_is_pointed_out() {
 }
 
 #[test]
-fn a_unit_that_does_not_fit_is_said_and_not_used() {
+fn a_column_with_a_unit_that_does_not_fit_is_left_aside_and_told() {
     let recognised = columns_of(&[text_row(0, &["CAS", "BCF (mg/L)"])]).unwrap();
-    assert_eq!(recognised.columns[1].unit, None);
-    assert!(
-        recognised.remarks[0].contains("numbers without a unit are read in L/kg"),
-        "{:?}",
-        recognised.remarks
+    assert_eq!(recognised.columns.len(), 1);
+    assert_eq!(
+        recognised.remarks,
+        [
+            "Sheet: column B (`BCF (mg/L)`) is left aside, because `mg/L` may be a unit and may mean something else; write \
+             the unit in brackets, such as `(L/kg)`, or say that its numbers are in L/kg where a cell names no unit: \
+             --column 'BCF (mg/L)=bcf'"
+        ]
     );
 }
 

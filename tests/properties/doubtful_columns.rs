@@ -1,10 +1,10 @@
 //! Columns that are left aside or remarked on, because what their header says is not certain.
 
 use kowledger::columns::{ColumnOverride, Recognised, recognise};
-use kowledger::substance::{Field, Property};
+use kowledger::substance::{DegradationTest, Field, Property};
 use kowledger::workbook::{CellContent, Row};
 
-use crate::sheet::{columns_of, content_row, text_row, words};
+use crate::sheet::{columns_of, content_row, read_last, text_row, words};
 
 /// A sheet of one column beside a CAS number.
 fn sheet(header: &str, values: &[f64]) -> Vec<Row> {
@@ -209,6 +209,16 @@ fn a_header_that_resembles_none_is_not_remarked_on() {
         "P flag",
         "LD50 oral rat",
         "Purity",
+        "DT90",
+        "log Kaw",
+        "Kom",
+        "BSAF",
+        "NOAEL",
+        "EC20",
+        "log Poa",
+        "c50",
+        "Last reviewed",
+        "HWZ im Blut",
     ] {
         assert_eq!(remark_on(header), Ok(None), "{header}");
     }
@@ -247,4 +257,109 @@ fn a_column_whose_header_has_an_apostrophe_is_named_by_its_letter() {
     assert!(
         ColumnOverride::parse("Sheet!B:B=half-life-soil").is_ok_and(|told| recognised.has_column_of(&told))
     );
+}
+
+#[test]
+fn a_header_of_a_limit_a_count_or_former_values_is_told_with_the_way_out() {
+    for header in ["BCF > 2000", "BCF limit", "BCF n", "BCF old", "BCF class", "Δ BCF"] {
+        let remark = remark_on(header).unwrap();
+        let expected = format!(
+            "Sheet: column B (`{header}`) speaks of a limit, a class, a count, a difference or former values, so it is left \
+             aside; if it holds values of bcf: --column '{header}=bcf'"
+        );
+        assert_eq!(remark, Some(expected));
+    }
+}
+
+#[test]
+fn a_unit_that_is_not_understood_is_told_with_the_way_out() {
+    for (header, unit) in [
+        ("NOEC (?g/L)", "`?g/L`"),
+        ("NOEC (10^-3 mg/L)", "`10^-3 mg/L`"),
+        ("NOEC (mg/kg dw)", "`mg/kg dw`"),
+        ("BCF (x1000)", "`x1000`"),
+        ("DT50 soil (log d)", "`log d`"),
+        ("log DT50 soil", "`log`"),
+        ("Half life soil 1/d", "`1/d`"),
+        ("BCF (L/kg lipid)", "lipid"),
+    ] {
+        let remark = remark_on(header).unwrap();
+        let is_told = |remark: &String| {
+            remark.contains("left aside") && remark.contains(unit) && remark.contains("--column '")
+        };
+        assert!(remark.as_ref().is_some_and(is_told), "{header}: {remark:?}");
+    }
+}
+
+#[test]
+fn below_a_header_of_biodegradability_in_general_only_a_cell_that_says_ready_counts_as_ready() {
+    use DegradationTest::{NotReady, Open, Ready};
+    let result = |header: &str, cell: &str| {
+        let substance = read_last(&[&["CAS", header], &["108-88-3", cell]]).unwrap();
+        substance.ready.first().map(|cited| cited.value.result)
+    };
+    for header in [
+        "Biodegradability",
+        "Biodegradable",
+        "Biodegradability (%)",
+        "Biologische Abbaubarkeit",
+        "Biodégradabilité",
+        "Biodegradabilidad",
+        "Biodegradabilità",
+        "Biologische afbreekbaarheid",
+        "生分解性",
+        "降解性",
+    ] {
+        for (cell, expected) in [
+            ("yes", Open),
+            ("95 % (28 d)", Open),
+            ("95", Open),
+            ("readily biodegradable", Ready),
+            ("92 %, 28 d, OECD 301B", Ready),
+            ("no", NotReady),
+            ("5 % (28 d)", NotReady),
+        ] {
+            assert_eq!(result(header, cell), Some(expected), "{header}: {cell}");
+        }
+        let remark = remark_on(header).unwrap();
+        let way_out = format!("--column '{header}=ready-biodegradability'");
+        assert!(remark.is_some_and(|remark| remark.ends_with(&way_out)), "{header}");
+    }
+    for header in
+        ["Ready biodegradability", "Biodegradability (OECD 301)", "leicht biologisch abbaubar", "良分解性"]
+    {
+        assert_eq!((result(header, "yes"), remark_on(header)), (Some(Ready), Ok(None)), "{header}");
+    }
+}
+
+#[test]
+fn several_readings_of_a_property_are_all_read_and_its_method_is_none() {
+    let fields = |rows: &[Row]| -> Vec<String> {
+        let recognised = columns_of(rows).unwrap();
+        recognised.columns.iter().map(|column| format!("{} {}", column.index, column.field.id())).collect()
+    };
+    for (first, second) in
+        [("min", "max"), ("von", "bis"), ("lowest", "highest"), ("study 1", "study 2"), ("最小", "最大")]
+    {
+        let rows = [
+            text_row(0, &["CAS", "BCF", ""]),
+            text_row(1, &["", first, second]),
+            text_row(2, &["108-88-3", "13", "90"]),
+        ];
+        assert_eq!(fields(&rows), ["0 cas-number", "1 bcf", "2 bcf"], "{first} {second}");
+    }
+    for method in ["metodo", "method", "Methode", "方法"] {
+        let rows = [
+            text_row(0, &["CAS", "BCF", ""]),
+            text_row(1, &["", "value", method]),
+            text_row(2, &["108-88-3", "13", "OECD 305"]),
+        ];
+        assert!(!fields(&rows).contains(&"2 bcf".to_owned()), "{method}");
+    }
+    let rows = [
+        text_row(0, &["CAS", "log Kow", ""]),
+        text_row(1, &["", "value", "fonte"]),
+        text_row(2, &["108-88-3", "2.7", "Rossi 1998"]),
+    ];
+    assert!(!fields(&rows).contains(&"2 log-kow".to_owned()));
 }

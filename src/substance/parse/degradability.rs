@@ -10,13 +10,15 @@ mod words;
 
 use super::cell::value_text;
 use super::remark::Said;
+use crate::columns::Readiness;
 use crate::fault::CellFaultKind;
 use crate::quantity::{Comparison, DecimalStyle, Interval, Outcome};
 use crate::substance::{Basis, DegradationTest, ReadyBiodegradability};
 use crate::workbook::CellContent;
 use numbers::{Measure, measure_in};
 pub(super) use numbers::{bare_number, days_in, percentages};
-use words::{OtherTest, Words, is_doubtful, other_test, words_of};
+pub(crate) use words::names_ready_test;
+use words::{OtherTest, Words, is_doubtful, other_test, says_ready, words_of};
 pub(super) use words::{says_inherent, says_ready_or_not};
 
 /// Pass level for dissolved organic carbon and for an unnamed measure, %.
@@ -34,6 +36,18 @@ pub(super) struct ReadyCell {
 }
 
 impl ReadyCell {
+    /// Below a header that does not say `ready`, a pass counts only where the cell says that it is one of a ready test.
+    pub(super) fn below(mut self, readiness: Readiness) -> Self {
+        let is_open = readiness == Readiness::NotSaid
+            && self.result == DegradationTest::Ready
+            && !says_ready(&self.reported)
+            && !names_ready_test(&self.reported);
+        if is_open {
+            self.result = DegradationTest::Open;
+        }
+        self
+    }
+
     pub(super) fn known_by(self, basis: Basis, reliability: Option<u8>) -> ReadyBiodegradability {
         ReadyBiodegradability { result: self.result, basis, reliability, reported: self.reported }
     }

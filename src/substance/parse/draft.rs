@@ -269,6 +269,7 @@ impl Draft {
         if let Some(kind) = fault {
             self.fault(content, place.clone(), kind);
         }
+        let ready = ready.below(column.readiness);
         self.values.push(AnyValue::Ready(waiting(column, ready, said, place)));
         Ok(())
     }

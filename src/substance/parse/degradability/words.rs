@@ -56,6 +56,20 @@ static POSITIVE: LazyLock<Regex> = LazyLock::new(|| {
         r"[易良]生?分解|易(?:于|於|被)?生物(?:降解|分解)|容易(?:被)?生物(?:降解|分解)|(?:快速|迅速)生物(?:降解|分解)|通过测试"
     ))
 });
+/// Ready, by name: `passed` and `yes` may be said of any test.
+static READY: LazyLock<Regex> = LazyLock::new(|| {
+    fixed(concat!(
+        r"\b(readily|ready|leicht\w*|facilement|facil|facilmente|prontamente|rapidamente|rapidement|gemakkelijk)\b|",
+        r"[易良]生?分解|易(?:于|於|被)?生物(?:降解|分解)|容易(?:被)?生物(?:降解|分解)|(?:快速|迅速)生物(?:降解|分解)|易降解"
+    ))
+});
+/// The tests of ready biodegradability.
+static READY_TEST: LazyLock<Regex> = LazyLock::new(|| {
+    fixed(concat!(
+        r"\b(?:oecd|ocde|ocse|oeso) ?(?:tg |no |nr |test |guideline |guidelines )*(?:301|310) ?[a-f]?\b|",
+        r"\b301[a-f]\b"
+    ))
+});
 /// A whole part that answers.
 static YES: LazyLock<Regex> = LazyLock::new(|| {
     fixed(concat!(
@@ -113,6 +127,16 @@ fn folded(text: &str) -> String {
     let text = text.replace(" - ", " ; ");
     let parts = text.split(|character: char| CUTS.contains(character)).map(plain_words);
     parts.filter(|part| !part.is_empty()).collect::<Vec<_>>().join(" ¦ ")
+}
+
+/// Whether a text has a word for ready.
+pub(super) fn says_ready(text: &str) -> bool {
+    READY.is_match(&folded(text))
+}
+
+/// Whether a text names a test of ready biodegradability, such as OECD 301B.
+pub(crate) fn names_ready_test(text: &str) -> bool {
+    READY_TEST.is_match(&folded(text))
 }
 
 /// What the words of a cell say.
