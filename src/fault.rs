@@ -4,13 +4,15 @@
 
 mod cell;
 mod conflict;
+mod conflict_counts;
 mod file;
 mod lines;
 mod rule;
 mod tally;
 
 pub use cell::{CellFault, CellFaultKind, Wording};
-pub use conflict::{Agreement, Conflict, ConflictCounts, Contrast, Shared, SharedBy};
+pub use conflict::{Agreement, Conflict, Contrast, Shared, SharedBy};
+pub use conflict_counts::ConflictCounts;
 pub use file::{FileFault, FileKind, SheetFault};
 pub use lines::LinesFault;
 pub use rule::{Drawing, OwnerKind, RuleFault, RuleFaults, RuleMistake, unknown_rulebook};
