@@ -115,7 +115,10 @@ fn is_scaled(text: &str) -> bool {
     });
     power.is_some_and(|rest| {
         let after = rest.get(digits(rest)..).unwrap_or_default();
-        after.len() < rest.len() && (after.is_empty() || parse_unit(after).is_some())
+        // `10-20 %` is a range.
+        after.len() < rest.len()
+            && !after.starts_with('%')
+            && (after.is_empty() || parse_unit(after).is_some())
     })
 }
 
