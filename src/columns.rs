@@ -55,8 +55,20 @@ pub struct Column {
     pub about: Option<Property>,
     /// Decimal point or comma, from the header's column or the sheet.
     pub decimal: DecimalStyle,
+    /// Whether anything shows that style.
+    pub separator: Separator,
     /// Why it was taken for this field, in words.
     pub reason: String,
+}
+
+/// Whether the cells of a sheet show what a separator before exactly three digits is: in `2.500` it may be for decimals
+/// or for thousands.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub enum Separator {
+    /// Another cell of the column or the sheet shows it.
+    Shown,
+    /// No cell shows it.
+    NotShown,
 }
 
 /// The header of a sheet and what its columns hold.

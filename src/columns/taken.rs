@@ -4,7 +4,7 @@ use std::fmt::Write as _;
 
 use super::header_cell::{HeaderCell, Meaning, UnitFrom};
 use super::words::ColumnWords;
-use super::{Column, choice::dimension_of, one_line};
+use super::{Column, Separator, choice::dimension_of, one_line};
 use crate::quantity::{DecimalStyle, Dimension, Unit, format_number, tidy};
 use crate::substance::{Conditions, DegradationKind, Field, Said};
 
@@ -50,6 +50,7 @@ pub(super) fn column_of(
         conditions: said.conditions,
         about,
         decimal: DecimalStyle::Point,
+        separator: Separator::Shown,
         reason,
     };
     (column, remark)

@@ -236,6 +236,13 @@ pub enum CellFaultKind {
     NoteRow,
     /// The number of a printed page among the rows.
     PageLabelRow,
+    /// A separator before exactly three digits, and no cell that shows what it is.
+    ThousandsOrDecimals {
+        /// The number with decimals.
+        with_decimals: String,
+        /// The number with thousands.
+        with_thousands: String,
+    },
 }
 
 impl CellFaultKind {

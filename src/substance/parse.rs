@@ -17,6 +17,7 @@ mod notes;
 mod pattern;
 mod remark;
 mod statements;
+mod thousands;
 mod totals;
 
 use std::collections::BTreeMap;
@@ -24,12 +25,13 @@ use std::sync::Arc;
 
 pub(crate) use remark::Said;
 
-use crate::columns::{Column, Recognised};
+use crate::columns::{Column, Recognised, Separator};
 use crate::fault::CellFault;
 use crate::quantity::DecimalStyle;
 use crate::substance::{Basis, Field, Property, Substance};
 use crate::workbook::{Cell, CellContent, CellRef, NumberFormat, Row, ShownNumber, StyleId, WideMerges};
 use draft::Draft;
+use thousands::Thousands;
 
 /// What a value without a word on how it was obtained counts as (`--unstated`).
 #[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
@@ -101,11 +103,15 @@ impl RowReader {
         for column in &self.columns {
             if let Some(cell) = row.cell(column.index) {
                 match self.as_shown(cell) {
-                    Shown::AsStored => draft.take(column, cell),
+                    Shown::AsStored => take(&mut draft, column, cell),
                     Shown::As(content) => {
+                        let mut column = column.clone();
                         // Whatever the column writes, the number has a decimal point.
-                        let column = Column { decimal: DecimalStyle::Point, ..column.clone() };
-                        draft.take(&column, &Cell { content, ..cell.clone() });
+                        if matches!(cell.content, CellContent::Number(_)) {
+                            column.decimal = DecimalStyle::Point;
+                            column.separator = Separator::Shown;
+                        }
+                        take(&mut draft, &column, &Cell { content, ..cell.clone() });
                     }
                     Shown::Scaled(shown) => draft.take_scaled(column, cell, shown),
                 }
@@ -135,6 +141,15 @@ impl RowReader {
             | CellContent::DateTime(_)
             | CellContent::Error(_) => Shown::AsStored,
         }
+    }
+}
+
+/// Takes a cell, unless its separators may be for decimals or for thousands.
+fn take(draft: &mut Draft, column: &Column, cell: &Cell) {
+    match thousands::of(column, &cell.content) {
+        Thousands::AsTheColumn => draft.take(column, cell),
+        Thousands::DecimalsOnly(decimal) => draft.take(&Column { decimal, ..column.clone() }, cell),
+        Thousands::Doubtful(kind) => draft.refuse(column, cell, kind),
     }
 }
 

@@ -61,6 +61,11 @@ fn examples() -> Vec<(&'static str, CellFaultKind)> {
         ("Solvents", Kind::HeadingRow),
         ("* mean of two determinations", Kind::NoteRow),
         ("Page 2 of 5", Kind::PageLabelRow),
+        (
+            "2.500",
+            Kind::ThousandsOrDecimals { with_decimals: "2.5".to_owned(), with_thousands: "2500".to_owned() },
+        ),
+        ("2500", Kind::ShownInThousands { shown: "2.5".to_owned() }),
     ]
 }
 

@@ -244,8 +244,8 @@ fn numbers_that_could_group_thousands_are_remarked_on() {
     assert_eq!(
         remarks(&["1.500"]),
         [
-            "Sheet: column B holds numbers such as `1.500`, which could group thousands; they are read with a decimal \
-          point, because no cell shows which"
+            "Sheet: column B holds numbers such as `1.500`, which could group thousands; they are not read where \
+          both make sense, because no cell shows which"
         ]
     );
     assert!(remarks(&["1.500", "12,5"])[0].ends_with("decimal comma, as the column's other cells show"));

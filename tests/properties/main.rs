@@ -10,6 +10,7 @@ mod references;
 mod sheet;
 mod spellings;
 mod tables;
+mod thousands;
 mod words;
 
 /// The same cases in every run, so that a change is to blame for a failure; `PROPTEST_RNG_SEED` and `PROPTEST_CASES`

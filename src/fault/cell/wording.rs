@@ -286,6 +286,11 @@ impl CellFaultKind {
                 "is the number of a printed page, so the row was not screened",
                 "if it is a substance, give it a CAS number",
             ),
+            Self::ThousandsOrDecimals { with_decimals, with_thousands } => say(
+                "thousands or decimals",
+                format!("may be {with_decimals} or {with_thousands}, and no other cell shows which"),
+                "write it without a separator for thousands",
+            ),
         }
     }
 }
