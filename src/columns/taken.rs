@@ -2,9 +2,10 @@
 
 use std::fmt::Write as _;
 
+use super::beside::stands_beside;
 use super::header_cell::{HeaderCell, Meaning, UnitFrom};
 use super::words::ColumnWords;
-use super::{Column, Separator, choice::dimension_of, one_line};
+use super::{Beside, Column, Separator, choice::dimension_of, one_line};
 use crate::quantity::{DecimalStyle, Dimension, Unit, format_number, tidy};
 use crate::substance::{Conditions, DegradationKind, Field, Said};
 
@@ -32,7 +33,9 @@ pub(super) fn column_of(
     let has_conditions =
         matches!(field, Field::Property(_) | Field::ReadyBiodegradability | Field::InherentBiodegradability);
     let said = if has_conditions { Said::in_header(&tidy(&cell.text)) } else { Said::default() };
-    let about = is_companion(field).then(|| cell.header.as_ref()?.property_beside(words)).flatten();
+    let about = (is_companion(field) || stands_beside(field))
+        .then(|| cell.header.as_ref()?.property_beside(words))
+        .flatten();
     let mut reason = reason(&cell, unit, dimension);
     if let Some(basis) = said.basis {
         let _ = write!(reason, "; values are taken as {}", basis.word());
@@ -51,6 +54,7 @@ pub(super) fn column_of(
         about,
         decimal: DecimalStyle::Point,
         separator: Separator::Shown,
+        beside: Beside::default(),
         reason,
     };
     (column, remark)

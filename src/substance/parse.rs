@@ -3,6 +3,7 @@
 //! What a cell says of itself counts first, then the columns that speak of it (method, guideline, temperature,
 //! reliability), then its header. Whatever cannot be read becomes a fault; the rest of the row stands.
 
+mod beside;
 mod cell;
 mod companions;
 mod degradability;
@@ -103,7 +104,7 @@ impl RowReader {
         for column in &self.columns {
             if let Some(cell) = row.cell(column.index) {
                 match self.as_shown(cell) {
-                    Shown::AsStored => take(&mut draft, column, cell),
+                    Shown::AsStored => take(&mut draft, column, cell, row),
                     Shown::As(content) => {
                         let mut column = column.clone();
                         // Whatever the column writes, the number has a decimal point.
@@ -111,7 +112,7 @@ impl RowReader {
                             column.decimal = DecimalStyle::Point;
                             column.separator = Separator::Shown;
                         }
-                        take(&mut draft, &column, &Cell { content, ..cell.clone() });
+                        take(&mut draft, &column, &Cell { content, ..cell.clone() }, row);
                     }
                     Shown::Scaled(shown) => draft.take_scaled(column, cell, shown),
                 }
@@ -144,8 +145,21 @@ impl RowReader {
     }
 }
 
-/// Takes a cell, unless its separators may be for decimals or for thousands.
-fn take(draft: &mut Draft, column: &Column, cell: &Cell) {
+/// Takes a cell with its unit and sign, where other columns hold them, unless its separators may be for decimals or for
+/// thousands.
+fn take(draft: &mut Draft, column: &Column, cell: &Cell, row: &Row) {
+    let completed = match beside::complete(column, &cell.content, row) {
+        Ok(completed) => completed,
+        Err(kind) => return draft.refuse(column, cell, kind),
+    };
+    let with_content;
+    let (column, cell) = match &completed {
+        None => (column, cell),
+        Some((column, content)) => {
+            with_content = Cell { content: content.clone(), ..cell.clone() };
+            (column, &with_content)
+        }
+    };
     match thousands::of(column, &cell.content) {
         Thousands::AsTheColumn => draft.take(column, cell),
         Thousands::DecimalsOnly(decimal) => draft.take(&Column { decimal, ..column.clone() }, cell),

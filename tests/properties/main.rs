@@ -1,5 +1,6 @@
 //! What holds for every text, number and header, and tables of cells and headers that read as documentation.
 
+mod beside;
 mod cells;
 mod columns;
 mod doubtful_columns;

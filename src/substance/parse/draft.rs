@@ -164,6 +164,8 @@ impl Draft {
             | Field::AssessorReason
             | Field::Assessor
             | Field::AssessedOn => self.carry_text(column.field, content, cell),
+            // Read with the value they belong to.
+            Field::UnitOfValue | Field::QualifierOfValue => {}
         }
         Ok(())
     }
