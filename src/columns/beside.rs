@@ -59,7 +59,9 @@ fn field_of(cell: &HeaderCell, words: &ColumnWords) -> Option<(Field, String)> {
     let kinds = [(Field::UnitOfValue, "unit-beside"), (Field::QualifierOfValue, "qualifier-beside")];
     let (field, concept) = kinds.into_iter().find_map(|(field, concept)| {
         let concept = words.concept(concept)?;
-        reading.main.contains(&concept).then_some((field, concept))
+        // `NOEC (unit)`: a bracket of little else.
+        let in_bracket = header.bracket_words.len() <= 2 && reading.everywhere.contains(&concept);
+        (in_bracket || reading.main.contains(&concept)).then_some((field, concept))
     })?;
     let fits = words
         .rules

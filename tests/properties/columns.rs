@@ -98,7 +98,10 @@ fn every_field_is_named_in_all_eight_languages() {
     for language in LANGUAGES {
         let named: BTreeSet<&str> =
             table().filter(|known| known.language == language).map(|known| known.field).collect();
-        let missing: Vec<&str> = Field::all().map(Field::id).filter(|id| !named.contains(id)).collect();
+        // Columns beside a value are in a table of their own, in the tests of `beside`.
+        let beside = ["unit-of-value", "qualifier-of-value"];
+        let others = Field::all().map(Field::id).filter(|id| !beside.contains(id));
+        let missing: Vec<&str> = others.filter(|id| !named.contains(id)).collect();
         assert!(missing.is_empty(), "{language}: {missing:?}");
     }
 }
