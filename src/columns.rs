@@ -3,6 +3,7 @@
 //! Found from `rules/columns.toml` by field words plus compartment and qualifier words. It reads headers and the first
 //! rows of a sheet only and changes no cell.
 
+mod beside;
 mod choice;
 mod decimals;
 mod doubled;
@@ -16,6 +17,7 @@ mod loose_unit;
 mod lower_row;
 mod misspelt;
 mod overrides;
+mod owners;
 mod phrase;
 mod reading;
 mod second_header;
@@ -26,13 +28,14 @@ mod words;
 
 use std::collections::{BTreeMap, BTreeSet};
 
+pub use beside::{Beside, sign_of};
 pub use overrides::ColumnOverride;
 pub use second_header::HeaderAgain;
 use second_header::HeaderWatch;
 pub(crate) use second_header::second_header_fault;
 pub use words::{BUILT_IN_COLUMN_WORDS, ColumnWords};
 
-use crate::quantity::{DecimalStyle, Unit};
+use crate::quantity::{DecimalStyle, Dimension, Unit};
 use crate::substance::{Basis, Conditions, Field, Property};
 use crate::workbook::Row;
 
@@ -58,6 +61,10 @@ pub struct Column {
     pub decimal: DecimalStyle,
     /// Of a column on ready biodegradability, whether its header says that it is the ready one.
     pub readiness: Readiness,
+    /// Whether anything shows that style.
+    pub separator: Separator,
+    /// The columns that hold the unit or the sign of its values.
+    pub beside: Beside,
     /// Why it was taken for this field, in words.
     pub reason: String,
 }
@@ -69,6 +76,23 @@ pub enum Readiness {
     Said,
     /// It speaks of biodegradability in general: a cell counts as ready only where it says so itself.
     NotSaid,
+}
+
+impl Column {
+    /// What its numbers measure, where it holds numbers.
+    pub fn dimension(&self) -> Option<Dimension> {
+        choice::dimension_of(self.field)
+    }
+}
+
+/// Whether the cells of a sheet show what a separator before exactly three digits is: in `2.500` it may be for decimals
+/// or for thousands.
+#[derive(Debug, Clone, Copy, PartialEq, Eq)]
+pub enum Separator {
+    /// Another cell of the column or the sheet shows it.
+    Shown,
+    /// No cell shows it.
+    NotShown,
 }
 
 /// The header of a sheet and what its columns hold.
@@ -140,6 +164,7 @@ pub fn recognise(
         .filter(|row| row.index > header_row)
         .take_while(|row| recognised.header_again(row, words) != HeaderAgain::Other)
         .collect();
+    owners::settle(sheet, &mut recognised, &data);
     decimals::set_styles(sheet, &mut recognised, &data);
     logarithms::leave_doubtful_aside(sheet, &mut recognised, &data, &told);
     Some(recognised)

@@ -2,6 +2,7 @@
 
 use std::collections::{BTreeMap, BTreeSet};
 
+use super::beside::mark;
 use super::doubled::{
     both_read_remark, doubled_fields, doubled_remark, is_number_of_registry, may_be_doubled,
 };
@@ -22,6 +23,7 @@ pub(super) fn choose(sheet: &str, found: Found, words: &ColumnWords) -> Recognis
     let mut cells = found.cells;
     let mut remarks: Vec<String> =
         found.others_above.iter().map(|row| other_header_remark(sheet, *row, found.row)).collect();
+    cells.iter_mut().for_each(|cell| mark(cell, words));
     let names = cells.iter().flat_map(HeaderCell::names).cloned().collect();
     take_product_name(&mut cells, words);
     let doubled = doubled_fields(&cells);
@@ -192,7 +194,9 @@ pub(super) fn dimension_of(field: Field) -> Option<Dimension> {
         | Field::AssessorVerdict
         | Field::AssessorReason
         | Field::Assessor
-        | Field::AssessedOn => None,
+        | Field::AssessedOn
+        | Field::UnitOfValue
+        | Field::QualifierOfValue => None,
     }
 }
 

@@ -6,7 +6,7 @@ use std::sync::LazyLock;
 use regex::Regex;
 
 use super::choice::dimension_of;
-use super::{Column, Recognised};
+use super::{Column, Recognised, Separator};
 use crate::quantity::{DecimalStyle, tidy};
 use crate::workbook::{CellContent, Row, column_letters};
 
@@ -40,7 +40,7 @@ impl Shown {
 }
 
 /// Sets each column's style: what its own text cells show, else what the sheet's show, else the point. Numbers that
-/// could be read both ways are remarked on.
+/// could be read both ways are remarked on; where nothing shows the style, cells that hold one are not read.
 pub(super) fn set_styles(sheet: &str, recognised: &mut Recognised, data: &[&Row]) {
     let own: Vec<Shown> = recognised.columns.iter().map(|column| shown_by(column, data)).collect();
     let whole = Shown {
@@ -56,6 +56,10 @@ pub(super) fn set_styles(sheet: &str, recognised: &mut Recognised, data: &[&Row]
             (None, None) => (DecimalStyle::Point, "because no cell shows which"),
         };
         column.decimal = style;
+        column.separator = match shown.style().or_else(|| whole.style()) {
+            Some(_) => Separator::Shown,
+            None => Separator::NotShown,
+        };
         let word = match style {
             DecimalStyle::Point => "point",
             DecimalStyle::Comma => "comma",
@@ -64,9 +68,12 @@ pub(super) fn set_styles(sheet: &str, recognised: &mut Recognised, data: &[&Row]
             let _ = write!(column.reason, "; decimal {word}, {why}");
         }
         if let Some(example) = shown.ambiguous {
+            let what_is_done = match column.separator {
+                Separator::Shown => format!("they are read with a decimal {word}, {why}"),
+                Separator::NotShown => format!("they are not read where both make sense, {why}"),
+            };
             recognised.remarks.push(format!(
-                "{sheet}: column {} holds numbers such as `{example}`, which could group thousands; they are read with \
-                 a decimal {word}, {why}",
+                "{sheet}: column {} holds numbers such as `{example}`, which could group thousands; {what_is_done}",
                 column_letters(column.index)
             ));
         }

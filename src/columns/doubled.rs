@@ -33,6 +33,8 @@ pub(super) fn may_be_doubled(field: Field) -> bool {
                 | Field::HazardStatements
                 | Field::ReadyBiodegradability
                 | Field::InherentBiodegradability
+                | Field::UnitOfValue
+                | Field::QualifierOfValue
         )
 }
 

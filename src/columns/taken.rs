@@ -2,10 +2,11 @@
 
 use std::fmt::Write as _;
 
+use super::beside::stands_beside;
 use super::header_cell::{HeaderCell, Meaning, UnitFrom};
 use super::overrides::option_for;
 use super::words::ColumnWords;
-use super::{Column, Readiness, choice::dimension_of, one_line};
+use super::{Beside, Column, Readiness, Separator, choice::dimension_of, one_line};
 use crate::quantity::{DecimalStyle, Dimension, Unit, format_number, tidy};
 use crate::substance::{Basis, Conditions, DegradationKind, Field, Said, names_ready_test};
 use crate::workbook::column_letters;
@@ -35,7 +36,9 @@ pub(super) fn column_of(
         matches!(field, Field::Property(_) | Field::ReadyBiodegradability | Field::InherentBiodegradability);
     let said = if has_conditions { Said::in_header(&tidy(&cell.text)) } else { Said::default() };
     let basis = said.basis.or_else(|| names_estimate(&cell).then_some(Basis::Calculated));
-    let about = is_companion(field).then(|| cell.header.as_ref()?.property_beside(words)).flatten();
+    let about = (is_companion(field) || stands_beside(field))
+        .then(|| cell.header.as_ref()?.property_beside(words))
+        .flatten();
     let mut reason = reason(&cell, unit, dimension);
     if let Some(basis) = basis {
         let _ = write!(reason, "; values are taken as {}", basis.word());
@@ -60,6 +63,8 @@ pub(super) fn column_of(
         about,
         decimal: DecimalStyle::Point,
         readiness,
+        separator: Separator::Shown,
+        beside: Beside::default(),
         reason,
     };
     (column, remark)

@@ -264,6 +264,30 @@ pub enum CellFaultKind {
     },
     /// A row of units among the rows.
     UnitsRow,
+    /// A separator before exactly three digits, and no cell that shows what it is.
+    ThousandsOrDecimals {
+        /// The number with decimals.
+        with_decimals: String,
+        /// The number with thousands.
+        with_thousands: String,
+    },
+    /// A value whose column of units holds what is no unit of it.
+    UnitBeside {
+        /// What that column holds.
+        unit: String,
+    },
+    /// A value whose column of units holds another unit than its header names.
+    UnitsDiffer {
+        /// What that column holds.
+        unit: String,
+        /// What the header names.
+        header: Unit,
+    },
+    /// A value that cannot be read with what its column of signs holds.
+    SignBeside {
+        /// What that column holds.
+        sign: String,
+    },
 }
 
 impl CellFaultKind {

@@ -78,11 +78,15 @@ pub enum Field {
     Assessor,
     /// The day of the assessment.
     AssessedOn,
+    /// The unit of the values in another column.
+    UnitOfValue,
+    /// The sign before the values in another column: `>`, `<`, `ca.`.
+    QualifierOfValue,
 }
 
 impl Field {
     /// The fields that hold no numeric property.
-    const OTHERS: [Self; 35] = [
+    const OTHERS: [Self; 37] = [
         Self::RowId,
         Self::RowType,
         Self::Name,
@@ -118,6 +122,8 @@ impl Field {
         Self::AssessorReason,
         Self::Assessor,
         Self::AssessedOn,
+        Self::UnitOfValue,
+        Self::QualifierOfValue,
     ];
 
     /// Every field.
@@ -164,6 +170,8 @@ impl Field {
             Self::AssessorReason => "assessor-reason",
             Self::Assessor => "assessor",
             Self::AssessedOn => "assessed-on",
+            Self::UnitOfValue => "unit-of-value",
+            Self::QualifierOfValue => "qualifier-of-value",
         }
     }
 

@@ -4,6 +4,7 @@
 //! reliability), then its header. Whatever cannot be read becomes a fault; the rest of the row stands.
 
 mod against;
+mod beside;
 mod cell;
 mod companions;
 mod degradability;
@@ -18,6 +19,7 @@ mod notes;
 mod pattern;
 mod remark;
 mod statements;
+mod thousands;
 mod totals;
 mod units;
 
@@ -27,12 +29,13 @@ use std::sync::Arc;
 pub(crate) use degradability::names_ready_test;
 pub(crate) use remark::Said;
 
-use crate::columns::{Column, Recognised};
+use crate::columns::{Column, Recognised, Separator};
 use crate::fault::CellFault;
 use crate::quantity::DecimalStyle;
 use crate::substance::{Basis, Field, Property, Substance};
 use crate::workbook::{Cell, CellContent, CellRef, NumberFormat, Row, ShownNumber, StyleId, WideMerges};
 use draft::Draft;
+use thousands::Thousands;
 
 /// What a value without a word on how it was obtained counts as (`--unstated`).
 #[derive(Debug, Clone, Copy, PartialEq, Eq, Default)]
@@ -104,11 +107,15 @@ impl RowReader {
         for column in &self.columns {
             if let Some(cell) = row.cell(column.index) {
                 match self.as_shown(cell) {
-                    Shown::AsStored => draft.take(column, cell),
+                    Shown::AsStored => take(&mut draft, column, cell, row),
                     Shown::As(content) => {
+                        let mut column = column.clone();
                         // Whatever the column writes, the number has a decimal point.
-                        let column = Column { decimal: DecimalStyle::Point, ..column.clone() };
-                        draft.take(&column, &Cell { content, ..cell.clone() });
+                        if matches!(cell.content, CellContent::Number(_)) {
+                            column.decimal = DecimalStyle::Point;
+                            column.separator = Separator::Shown;
+                        }
+                        take(&mut draft, &column, &Cell { content, ..cell.clone() }, row);
                     }
                     Shown::Scaled(shown) => draft.take_scaled(column, cell, shown),
                 }
@@ -138,6 +145,28 @@ impl RowReader {
             | CellContent::DateTime(_)
             | CellContent::Error(_) => Shown::AsStored,
         }
+    }
+}
+
+/// Takes a cell with its unit and sign, where other columns hold them, unless its separators may be for decimals or for
+/// thousands.
+fn take(draft: &mut Draft, column: &Column, cell: &Cell, row: &Row) {
+    let completed = match beside::complete(column, &cell.content, row) {
+        Ok(completed) => completed,
+        Err(kind) => return draft.refuse(column, cell, kind),
+    };
+    let with_content;
+    let (column, cell) = match &completed {
+        None => (column, cell),
+        Some((column, content)) => {
+            with_content = Cell { content: content.clone(), ..cell.clone() };
+            (column, &with_content)
+        }
+    };
+    match thousands::of(column, &cell.content) {
+        Thousands::AsTheColumn => draft.take(column, cell),
+        Thousands::DecimalsOnly(decimal) => draft.take(&Column { decimal, ..column.clone() }, cell),
+        Thousands::Doubtful(kind) => draft.refuse(column, cell, kind),
     }
 }
 

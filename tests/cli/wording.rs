@@ -68,6 +68,14 @@ fn examples() -> Vec<(&'static str, CellFaultKind)> {
         ("9999", Kind::Placeholder { what: "BCF" }),
         ("not 67-64-1", Kind::NumberOfAnother { what: "CAS number", word: "not".to_owned() }),
         ("mg/L", Kind::UnitsRow),
+        (
+            "2.500",
+            Kind::ThousandsOrDecimals { with_decimals: "2.5".to_owned(), with_thousands: "2500".to_owned() },
+        ),
+        ("0.69", Kind::UnitBeside { unit: "mg/kg".to_owned() }),
+        ("0.69", Kind::UnitsDiffer { unit: "µg/L".to_owned(), header: Unit::MilligramPerLitre }),
+        ("100", Kind::SignBeside { sign: "see note".to_owned() }),
+        ("2500", Kind::ShownInThousands { shown: "2.5".to_owned() }),
     ]
 }
 

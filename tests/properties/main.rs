@@ -1,5 +1,6 @@
 //! What holds for every text, number and header, and tables of cells and headers that read as documentation.
 
+mod beside;
 mod cells;
 mod columns;
 mod doubtful_columns;
@@ -10,6 +11,7 @@ mod references;
 mod sheet;
 mod spellings;
 mod tables;
+mod thousands;
 mod words;
 
 /// The same cases in every run, so that a change is to blame for a failure; `PROPTEST_RNG_SEED` and `PROPTEST_CASES`

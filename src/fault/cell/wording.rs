@@ -313,6 +313,36 @@ impl CellFaultKind {
                  units and were read in the units of the header",
                 "write the unit into each header or beside each value",
             ),
+            Self::ThousandsOrDecimals { with_decimals, with_thousands } => say(
+                "thousands or decimals",
+                format!("may be {with_decimals} or {with_thousands}, and no other cell shows which"),
+                "write it without a separator for thousands",
+            ),
+            Self::UnitBeside { unit } => say(
+                "unit beside not read",
+                format!(
+                    "cannot be read with `{}`, which stands in the column of its unit",
+                    super::shown(unit)
+                ),
+                "write the value with its unit in its own cell",
+            ),
+            Self::UnitsDiffer { unit, header } => say(
+                "two units",
+                format!(
+                    "has `{}` in the column of its unit, but its header names {}",
+                    super::shown(unit),
+                    header.symbol()
+                ),
+                "write the value with its unit in its own cell",
+            ),
+            Self::SignBeside { sign } => say(
+                "sign beside not read",
+                format!(
+                    "cannot be read with `{}`, which stands in the column of its sign",
+                    super::shown(sign)
+                ),
+                "write the sign before the value in its own cell, for example `> 100`",
+            ),
         }
     }
 }

@@ -106,6 +106,12 @@ impl Draft {
         self.fault(&cell.content, place, CellFaultKind::ShownInThousands { shown });
     }
 
+    /// Takes a cell for which something else than its own content tells that it cannot be read.
+    pub(super) fn refuse(&mut self, column: &Column, cell: &Cell, kind: CellFaultKind) {
+        let (sheet, row) = (Arc::clone(&self.substance.sheet), self.substance.row);
+        self.fault(&cell.content, CellRef { sheet, row, column: column.index }, kind);
+    }
+
     fn fault(&mut self, content: &CellContent, cell: CellRef, kind: CellFaultKind) {
         let found = if kind == CellFaultKind::FormulaWithoutResult {
             "=…".to_owned()
@@ -173,6 +179,8 @@ impl Draft {
             | Field::AssessorReason
             | Field::Assessor
             | Field::AssessedOn => self.carry_text(column.field, content, cell),
+            // Read with the value they belong to.
+            Field::UnitOfValue | Field::QualifierOfValue => {}
         }
         Ok(())
     }

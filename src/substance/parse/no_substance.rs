@@ -93,6 +93,8 @@ fn may_hold_asides(field: Field) -> bool {
         | Field::Year
         | Field::AssessorVerdict
         | Field::AssessedOn
+        | Field::UnitOfValue
+        | Field::QualifierOfValue
         | Field::RowType
         | Field::Smiles
         | Field::InchiKey

@@ -84,7 +84,9 @@ pub(super) fn totals_label(columns: &[Column], row: &Row) -> Option<(u16, String
         | Field::AssessorVerdict
         | Field::AssessorReason
         | Field::Assessor
-        | Field::AssessedOn => false,
+        | Field::AssessedOn
+        | Field::UnitOfValue
+        | Field::QualifierOfValue => false,
         Field::RowType
         | Field::CasNumber
         | Field::EcNumber
