@@ -23,7 +23,9 @@ pub(super) fn choose(sheet: &str, found: Found, words: &ColumnWords) -> Recognis
     let mut cells = found.cells;
     let mut remarks: Vec<String> =
         found.others_above.iter().map(|row| other_header_remark(sheet, *row, found.row)).collect();
-    cells.iter_mut().for_each(|cell| mark(cell, words));
+    for cell in &mut cells {
+        mark(cell, words);
+    }
     let names = cells.iter().flat_map(HeaderCell::names).cloned().collect();
     take_product_name(&mut cells, words);
     let doubled = doubled_fields(&cells);

@@ -1,5 +1,7 @@
 //! Values whose unit or sign stands in a column of its own.
 
+#![expect(clippy::expect_used, reason = "a helper that cannot go on stops the test that asks for it")]
+
 use kowledger::columns::Recognised;
 use kowledger::fault::CellFaultKind;
 use kowledger::quantity::{Interval, Unit, format_interval};
@@ -15,7 +17,7 @@ fn read(headers: &[&str], cells: &[&str]) -> Substance {
     let (headers, cells) = (with("CAS", headers), with("50-29-3", cells));
     let headers: Vec<&str> = headers.iter().map(String::as_str).collect();
     let cells: Vec<&str> = cells.iter().map(String::as_str).collect();
-    read_last(&[&headers, &cells]).unwrap()
+    read_last(&[&headers, &cells]).expect("a sheet that is recognised")
 }
 
 fn shown(interval: Interval) -> String {
@@ -35,7 +37,7 @@ fn values(substance: &Substance) -> Vec<String> {
 fn columns(headers: &[&str], cells: &[&str]) -> Recognised {
     let rows: Vec<Row> =
         [headers, cells].iter().enumerate().map(|(row, cells)| text_row(row, cells)).collect();
-    columns_of(&rows).unwrap()
+    columns_of(&rows).expect("a sheet that is recognised")
 }
 
 #[test]

@@ -1,5 +1,7 @@
 //! Separators before exactly three digits: read where a cell shows what they are or one reading alone makes sense.
 
+#![expect(clippy::expect_used, reason = "a helper that cannot go on stops the test that asks for it")]
+
 use kowledger::fault::CellFaultKind;
 use kowledger::substance::Property;
 
@@ -11,7 +13,7 @@ fn last_of(header: &str, cells: &[&str]) -> Result<Option<f64>, CellFaultKind> {
     let rows: Vec<[&str; 2]> = cells.iter().map(|cell| ["50-29-3", *cell]).collect();
     let rows: Vec<&[&str]> =
         std::iter::once(header_row.as_slice()).chain(rows.iter().map(<[&str; 2]>::as_slice)).collect();
-    let substance = read_last(&rows).unwrap();
+    let substance = read_last(&rows).expect("a sheet that is recognised");
     match substance.faults.into_iter().next() {
         Some(fault) => Err(fault.kind),
         None => {

@@ -98,10 +98,13 @@ static BMF: LazyLock<Regex> = LazyLock::new(|| {
 static BSAF: LazyLock<Regex> = LazyLock::new(|| fixed(r"\b(?:log ?|lg ?)?bsaf\b|\bbiota sediment\b"));
 static TMF: LazyLock<Regex> = LazyLock::new(|| fixed(r"\b(?:log ?|lg ?)?tmf\b|\btrophic magnif\w*"));
 
+/// Whose name a pattern is.
+type IsNamed = fn(Property) -> bool;
+
 /// The name of another value at the beginning, or as the only words behind a number: `log Kow 3` in a column of BCF.
 fn named_first(property: Property, plain: &str) -> Option<&str> {
-    static NAMES: LazyLock<Vec<(fn(Property) -> bool, Regex)>> = LazyLock::new(|| {
-        let names: [(fn(Property) -> bool, &str); 9] = [
+    static NAMES: LazyLock<Vec<(IsNamed, Regex)>> = LazyLock::new(|| {
+        let names: [(IsNamed, &str); 9] = [
             (
                 |property| property == Property::LogKow,
                 r"(?:log10|log|lg) ?p|(?:(?:log10|log|lg) ?)?(?:k ?ow|p ?ow)",
