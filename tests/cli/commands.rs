@@ -276,7 +276,8 @@ fn a_line_of_the_reasoning_names_the_words_it_relies_on_and_their_cell() {
     assert_eq!(place.screen(&["--rulebook", "eu-reach-pbt"]).status, 0);
     let rows = place.screened("Reasoning").0;
     let line = |row: &str, criterion: &str| {
-        let found = rows.iter().find(|line| line[1] == *row && line[5] == *criterion);
+        let texts = |line: &[calamine::Data]| [1, 5].map(|column| line[column].to_string());
+        let found = rows.iter().find(|line| texts(line) == [row, criterion]);
         [7, 10, 11].map(|column| found.unwrap()[column].to_string())
     };
     assert_eq!(line("2", "P"), ["readily biodegradable", "unstated", "Substances!C2"]);
