@@ -109,13 +109,13 @@ impl Companions {
         };
         let plain = folded(&text);
         let words = plain.split(' ').count();
+        if about.is_none() && words > MOST_WORDS_OF_ROW {
+            return;
+        }
         let is_told = match (basis_said(&text, &plain), about) {
             (None, _) => false,
             (Some(Basis::Measured), about) => about.is_some() && words == 1,
-            (Some(Basis::Unstated | Basis::Calculated | Basis::Estimated), Some(_)) => true,
-            (Some(Basis::Unstated | Basis::Calculated | Basis::Estimated), None) => {
-                words <= MOST_WORDS_OF_ROW
-            }
+            (Some(Basis::Unstated | Basis::Calculated | Basis::Estimated), _) => true,
         };
         if is_told {
             let said = Said { basis: basis_said(&text, &plain), ..Said::default() };
