@@ -75,7 +75,7 @@ pub(crate) fn judge_row(
         RowPlace::SecondHeader => {
             second_header_fault(&sheet.name, &row).map_or(Outcome::Copied, Outcome::SecondHeader)
         }
-        RowPlace::BelowSecondHeader(header) if row.cells.iter().any(is_filled) => {
+        RowPlace::BelowSecondHeader(header) if row.cells.iter().any(Cell::is_filled) => {
             Outcome::BelowSecondHeader(header)
         }
         RowPlace::InTable | RowPlace::RepeatedHeader | RowPlace::BelowSecondHeader(_) => Outcome::Copied,
@@ -85,13 +85,13 @@ pub(crate) fn judge_row(
 
 fn holds_data(row: &Row, screened: &Screened) -> bool {
     row.index >= screened.recognised.first_data_row
-        && screened.recognised.columns.iter().filter_map(|column| row.cell(column.index)).any(is_filled)
+        && screened.recognised.columns.iter().filter_map(|column| row.cell(column.index)).any(Cell::is_filled)
 }
 
 /// The first filled field to the right of the header's last one.
 fn beyond_header(row: &Row, sheet: &SheetPlan, screened: &Screened) -> Option<CellFault> {
     let header = screened.header_fields?;
-    let cell = row.cells.iter().find(|cell| usize::from(cell.column) >= header && is_filled(cell))?;
+    let cell = row.cells.iter().find(|cell| usize::from(cell.column) >= header && cell.is_filled())?;
     let found = match &cell.content {
         CellContent::Text(text) | CellContent::Error(text) => text.clone(),
         CellContent::Empty | CellContent::Number(_) | CellContent::Boolean(_) | CellContent::DateTime(_) => {
@@ -121,17 +121,6 @@ fn screen_row(row: &Row, screened: &Screened, reasoning: ReasoningMode, judge: &
         standing: Standing::of(told),
     };
     Added { faults: substance.faults, ..added }
-}
-
-fn is_filled(cell: &Cell) -> bool {
-    match &cell.content {
-        CellContent::Empty => cell.formula,
-        CellContent::Text(text) => !text.trim().is_empty(),
-        CellContent::Number(_)
-        | CellContent::Boolean(_)
-        | CellContent::DateTime(_)
-        | CellContent::Error(_) => true,
-    }
 }
 
 /// Which tests found a value, in the order of the rule set; a criterion that took no steps reached none of its tests.

@@ -34,6 +34,20 @@ pub struct Cell {
     pub formula: bool,
 }
 
+impl Cell {
+    /// Whether anything stands in it: a formula without a result does, blanks alone do not.
+    pub fn is_filled(&self) -> bool {
+        match &self.content {
+            CellContent::Empty => self.formula,
+            CellContent::Text(text) => !text.trim().is_empty(),
+            CellContent::Number(_)
+            | CellContent::Boolean(_)
+            | CellContent::DateTime(_)
+            | CellContent::Error(_) => true,
+        }
+    }
+}
+
 /// One row of a sheet, its cells in order of column, each column once.
 #[derive(Debug, Clone, PartialEq)]
 pub struct Row {

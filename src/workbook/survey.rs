@@ -87,6 +87,25 @@ pub(super) struct UnknownError {
 }
 
 impl SheetSurvey {
+    /// What is known of a sheet before its cells are looked at.
+    pub(super) fn unread(name: &str, visibility: Visibility) -> Self {
+        Self {
+            name: name.into(),
+            visibility,
+            column_widths: Vec::new(),
+            used_columns: 0,
+            last_row: 0,
+            formulas: 0,
+            error_values: 0,
+            formulas_without_result: 0,
+            frozen: None,
+            merges: WideMerges::default(),
+            formula_runs: BTreeMap::new(),
+            unknown_errors: Vec::new(),
+            extras: Extras::default(),
+        }
+    }
+
     /// Whether a cell is a formula.
     pub(super) fn is_formula(&self, row: u32, column: u16) -> bool {
         self.formula_runs.get(&column).is_some_and(|runs| {
@@ -112,21 +131,7 @@ pub(super) fn survey_sheet(
     entry: &SheetEntry,
     shared_texts: u64,
 ) -> Result<SheetSurvey, FileFault> {
-    let mut survey = SheetSurvey {
-        name: entry.name.as_str().into(),
-        visibility: entry.visibility,
-        column_widths: Vec::new(),
-        used_columns: 0,
-        last_row: 0,
-        formulas: 0,
-        error_values: 0,
-        formulas_without_result: 0,
-        frozen: None,
-        merges: WideMerges::default(),
-        formula_runs: BTreeMap::new(),
-        unknown_errors: Vec::new(),
-        extras: Extras::default(),
-    };
+    let mut survey = SheetSurvey::unread(&entry.name, entry.visibility);
     let path = package.path.clone();
     let mut check = CellCheck::new(entry.name.as_str().into(), shared_texts);
     let mut place = Place::Head;

@@ -36,7 +36,7 @@ pub(super) fn label(
     if let Some((column, found)) = units_label(columns, row) {
         return Some((column, found, CellFaultKind::UnitsRow));
     }
-    let filled = row.cells.iter().filter(|cell| is_filled(cell));
+    let filled = row.cells.iter().filter(|cell| cell.is_filled());
     let texts: Vec<(u16, &str)> =
         filled.map(|cell| Some((cell.column, lone_text(columns, cell)?))).collect::<Option<_>>()?;
     let (column, text) = texts.first().copied()?;
@@ -116,16 +116,5 @@ fn may_hold_asides(field: Field) -> bool {
         | Field::SubstituteFor
         | Field::ConstituentOf
         | Field::TransformsTo => false,
-    }
-}
-
-pub(super) fn is_filled(cell: &Cell) -> bool {
-    match &cell.content {
-        CellContent::Empty => cell.formula,
-        CellContent::Text(text) => !text.trim().is_empty(),
-        CellContent::Number(_)
-        | CellContent::Boolean(_)
-        | CellContent::DateTime(_)
-        | CellContent::Error(_) => true,
     }
 }

@@ -4,7 +4,6 @@ use std::sync::LazyLock;
 
 use regex::Regex;
 
-use super::no_substance::is_filled;
 use super::pattern::fixed;
 use crate::columns::Column;
 use crate::quantity::{parse_unit, plain_words, tidy};
@@ -19,7 +18,7 @@ static LABEL: LazyLock<Regex> = LazyLock::new(|| {
 /// The first unit of a row of units: its column and its text.
 pub(super) fn units_label(columns: &[Column], row: &Row) -> Option<(u16, String)> {
     let mut first = None;
-    for cell in row.cells.iter().filter(|cell| is_filled(cell)) {
+    for cell in row.cells.iter().filter(|cell| cell.is_filled()) {
         match part_of(columns, cell)? {
             Part::Unit(text) => {
                 first.get_or_insert((cell.column, text));

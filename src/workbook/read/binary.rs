@@ -10,9 +10,7 @@ pub(super) mod rows;
 mod tests;
 pub(super) mod texts;
 
-use std::collections::BTreeMap;
-
-use crate::workbook::survey::{Extras, SheetSurvey, Visibility, WideMerges};
+use crate::workbook::survey::SheetSurvey;
 
 /// A cell as its record holds it.
 #[derive(Debug, Clone, PartialEq)]
@@ -72,24 +70,5 @@ impl Stored {
             survey.used_columns = survey.used_columns.max(self.column + 1);
             survey.last_row = survey.last_row.max(self.row);
         }
-    }
-}
-
-/// What is known of a sheet before its cells are looked at.
-pub(super) fn empty_survey(name: &str, visibility: Visibility) -> SheetSurvey {
-    SheetSurvey {
-        name: name.into(),
-        visibility,
-        column_widths: Vec::new(),
-        used_columns: 0,
-        last_row: 0,
-        formulas: 0,
-        error_values: 0,
-        formulas_without_result: 0,
-        frozen: None,
-        merges: WideMerges::default(),
-        formula_runs: BTreeMap::new(),
-        unknown_errors: Vec::new(),
-        extras: Extras::default(),
     }
 }

@@ -1,12 +1,10 @@
 //! The one pass over a workbook that tells what each sheet holds, before any sheet is streamed.
 
-use std::collections::BTreeMap;
-
 use quick_xml::events::Event;
 
 use crate::fault::SheetFault;
 use crate::workbook::content::CellContent;
-use crate::workbook::survey::{ColumnLayout, Extras, SheetSurvey, Visibility, WideMerges, clip_widths};
+use crate::workbook::survey::{ColumnLayout, Extras, SheetSurvey, Visibility, clip_widths};
 
 use super::looks::Looks;
 use super::styles::Styles;
@@ -62,21 +60,8 @@ impl Surveyor {
             });
         }
         let hidden = self.styles.hides(style);
-        self.sheets.push(SheetSurvey {
-            name: name.into(),
-            visibility: if hidden { Visibility::Hidden } else { Visibility::Visible },
-            column_widths: Vec::new(),
-            used_columns: 0,
-            last_row: 0,
-            formulas: 0,
-            error_values: 0,
-            formulas_without_result: 0,
-            frozen: None,
-            merges: WideMerges::default(),
-            formula_runs: BTreeMap::new(),
-            unknown_errors: Vec::new(),
-            extras: Extras::default(),
-        });
+        let visibility = if hidden { Visibility::Hidden } else { Visibility::Visible };
+        self.sheets.push(SheetSurvey::unread(name, visibility));
         Ok(())
     }
 

@@ -5,7 +5,7 @@ use std::path::Path;
 
 use crate::fault::LinesFault;
 use crate::workbook::place::{CellRef, LAST_ROW};
-use crate::workbook::survey::{Extras, SheetSurvey, Visibility, WideMerges};
+use crate::workbook::survey::{SheetSurvey, Visibility};
 use crate::workbook::write::free_sheet_name;
 
 use super::dialect::Dialect;
@@ -76,21 +76,7 @@ pub(super) struct Surveyor {
 impl Surveyor {
     pub(super) fn new(path: &Path, dialect: Dialect) -> Self {
         let stem = path.file_stem().map(|stem| stem.to_string_lossy().into_owned()).unwrap_or_default();
-        let sheet = SheetSurvey {
-            name: free_sheet_name(stem.trim(), []).into(),
-            visibility: Visibility::Visible,
-            column_widths: Vec::new(),
-            used_columns: 0,
-            last_row: 0,
-            formulas: 0,
-            error_values: 0,
-            formulas_without_result: 0,
-            frozen: None,
-            merges: WideMerges::default(),
-            formula_runs: BTreeMap::new(),
-            unknown_errors: Vec::new(),
-            extras: Extras::default(),
-        };
+        let sheet = SheetSurvey::unread(&free_sheet_name(stem.trim(), []), Visibility::Visible);
         let surveyed = Surveyed {
             sheet,
             first_fields: BTreeMap::new(),

@@ -6,7 +6,6 @@ use super::records::{Record, Records};
 use crate::fault::SheetFault;
 use crate::workbook::place::CellRef;
 use crate::workbook::read::binary::bytes::{byte, short};
-use crate::workbook::read::binary::empty_survey;
 use crate::workbook::survey::{ColumnLayout, SheetSurvey, Visibility, clip_widths};
 
 /// The cells of a sheet: 65,536 rows of 256 columns.
@@ -49,7 +48,7 @@ pub(super) fn survey_sheet(
     visibility: Visibility,
 ) -> Result<Sheet, SheetFault> {
     let mut pass = Pass {
-        survey: empty_survey(name, visibility),
+        survey: SheetSurvey::unread(name, visibility),
         cells: Vec::new(),
         purpose: Purpose::Cells,
         parts: Vec::new(),

@@ -9,7 +9,6 @@ use crate::workbook::contents::SheetEntry;
 use crate::workbook::package::Package;
 use crate::workbook::place::LAST_COLUMN;
 use crate::workbook::read::binary::bytes::{byte, long, real, short};
-use crate::workbook::read::binary::empty_survey;
 use crate::workbook::read::binary::texts::SharedTexts;
 use crate::workbook::survey::{ColumnLayout, SheetSurvey, clip_widths};
 
@@ -28,7 +27,7 @@ pub(super) fn survey_sheet(
     texts: &SharedTexts,
     mixed_texts: &mut u64,
 ) -> Result<SheetSurvey, FileFault> {
-    let mut survey = empty_survey(&entry.name, entry.visibility);
+    let mut survey = SheetSurvey::unread(&entry.name, entry.visibility);
     let mut cells = Cells::new(survey.name.clone(), texts);
     let mut place = Place::Head;
     let mut wrong = None;
